@@ -32,9 +32,10 @@ public final class DilutionFit {
         this.wavelengths = List.copyOf(wavelengths);
         for (Extinction e : wavelengths)
             if (!(e.cm2PerG() > 0))
-                throw new Refusal("The dilution series of " + series.ingredient() + " at " + Figures.number(e.wavelengthNm())
-                        + " nm gives an extinction of " + Figures.number(e.cm2PerG())
-                        + " cm2/g: readings do not fall with concentration. Check which column is which.");
+                throw new Refusal(
+                        "The dilution series of " + series.ingredient() + " at " + Figures.number(e.wavelengthNm())
+                                + " nm gives an extinction of " + Figures.number(e.cm2PerG())
+                                + " cm2/g: readings do not fall with concentration. Check which column is which.");
         double mean = meanPairCovariance();
         double squares = 0;
         for (Extinction e : wavelengths) squares += e.relativeU() * e.relativeU();

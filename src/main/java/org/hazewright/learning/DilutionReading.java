@@ -12,12 +12,7 @@ import org.hazewright.optics.Refusal;
  * @param u standard uncertainty of {@code value}, in its unit
  */
 public record DilutionReading(
-        double concentrationGPerMl,
-        double pathMm,
-        double wavelengthNm,
-        Signal signal,
-        double value,
-        OptionalDouble u) {
+        double concentrationGPerMl, double pathMm, double wavelengthNm, Signal signal, double value, OptionalDouble u) {
 
     /** What the instrument shows. */
     public enum Signal {
@@ -29,10 +24,12 @@ public record DilutionReading(
         Refusal.notNegative("Concentration of a dilution in g/mL", concentrationGPerMl);
         Refusal.positive("Path length of a cell in mm", pathMm);
         Refusal.positive("Wavelength in nm", wavelengthNm);
-        String where = " at " + Figures.number(concentrationGPerMl) + " g/mL and " + Figures.number(wavelengthNm) + " nm";
+        String where =
+                " at " + Figures.number(concentrationGPerMl) + " g/mL and " + Figures.number(wavelengthNm) + " nm";
         if (signal == Signal.TRANSMISSION && !(value > 0 && value <= 1.5))
-            throw new Refusal("The transmission T/T0" + where + " is " + value + "; it must lie above 0 and at most 1.5"
-                    + " (a share of the diluent's, not per cent). A dilution that lets nothing through needs a shorter cell.");
+            throw new Refusal(
+                    "The transmission T/T0" + where + " is " + value + "; it must lie above 0 and at most 1.5"
+                            + " (a share of the diluent's, not per cent). A dilution that lets nothing through needs a shorter cell.");
         if (signal == Signal.ABSORBANCE && !(value >= -0.2 && value <= 6))
             throw new Refusal("The absorbance" + where + " is " + value + "; it must lie between -0.2 and 6.");
         u.ifPresent(v -> Refusal.positive("Standard uncertainty of the reading" + where, v));

@@ -58,7 +58,8 @@ public record DilutionSeries(
         double depth = albedo * r.opticalDepth();
         if (depth <= SCATTERING_DEPTH_REFUSED) return;
         double smaller = SCATTERING_DEPTH_WARNED / depth;
-        throw new Refusal("The dilution of " + ingredient + " at " + Figures.number(r.concentrationGPerMl()) + " g/mL in a cell of "
+        throw new Refusal("The dilution of " + ingredient + " at " + Figures.number(r.concentrationGPerMl())
+                + " g/mL in a cell of "
                 + Figures.number(r.pathMm()) + " mm has a scattering depth of " + Figures.number(depth) + " at "
                 + Figures.number(r.wavelengthNm()) + " nm; above " + Figures.number(SCATTERING_DEPTH_REFUSED)
                 + " scattered light drowns the beam. Take a cell of at most " + Figures.number(r.pathMm() * smaller)
@@ -70,25 +71,30 @@ public record DilutionSeries(
     public DilutionFit fit() {
         Map<Double, List<DilutionReading>> byWavelength = new TreeMap<>();
         for (DilutionReading r : readings)
-            byWavelength.computeIfAbsent(r.wavelengthNm(), nm -> new ArrayList<>()).add(r);
+            byWavelength
+                    .computeIfAbsent(r.wavelengthNm(), nm -> new ArrayList<>())
+                    .add(r);
         List<Extinction> fitted = new ArrayList<>();
         byWavelength.forEach((nm, list) -> fitted.add(fit(nm, list)));
         return new DilutionFit(this, fitted);
     }
 
     private Extinction fit(double nm, List<DilutionReading> list) {
-        double[] c = list.stream().mapToDouble(DilutionReading::concentrationGPerMl).toArray();
-        double[] mu = list.stream().mapToDouble(DilutionReading::extinctionPerCm).toArray();
+        double[] c =
+                list.stream().mapToDouble(DilutionReading::concentrationGPerMl).toArray();
+        double[] mu =
+                list.stream().mapToDouble(DilutionReading::extinctionPerCm).toArray();
         boolean stated = list.get(0).u().isPresent();
-        double[] u = list.stream().mapToDouble(r -> r.uExtinctionPerCm().orElse(1)).toArray();
+        double[] u =
+                list.stream().mapToDouble(r -> r.uExtinctionPerCm().orElse(1)).toArray();
         double[] w = java.util.Arrays.stream(u).map(v -> 1 / (v * v)).toArray();
         try {
             StraightLine line = stated ? StraightLine.fit(c, mu, u) : StraightLine.fit(c, mu);
             Optional<Linearity> linearity = Linearity.of(c, mu, w);
             return new Extinction(nm, list, line, linearity, albedo);
         } catch (Refusal refusal) {
-            throw new Refusal("The dilution series of " + ingredient + " at " + Figures.number(nm) + " nm cannot be fitted. "
-                    + refusal.getMessage());
+            throw new Refusal("The dilution series of " + ingredient + " at " + Figures.number(nm)
+                    + " nm cannot be fitted. " + refusal.getMessage());
         }
     }
 }

@@ -16,10 +16,15 @@ final class DilutionWarnings {
     static List<String> of(DilutionFit fit) {
         List<String> out = new ArrayList<>();
         List<Extinction> all = fit.wavelengths();
-        gather(out, all, true, e -> e.line().scattersMoreThanStated(), Comparator.comparingDouble(e -> e.line()
-                .residualScale()), e -> "readings scatter more than their stated uncertainties, up to "
-                + Figures.number(e.line().residualScale())
-                + " times; the uncertainty of the result was enlarged by that");
+        gather(
+                out,
+                all,
+                true,
+                e -> e.line().scattersMoreThanStated(),
+                Comparator.comparingDouble(e -> e.line().residualScale()),
+                e -> "readings scatter more than their stated uncertainties, up to "
+                        + Figures.number(e.line().residualScale())
+                        + " times; the uncertainty of the result was enlarged by that");
         gather(
                 out,
                 all,
@@ -103,9 +108,10 @@ final class DilutionWarnings {
                 double change = p.slopeWithout() / e.line().slope() - 1;
                 largestChange.merge(p.x(), change, (a, b) -> Math.abs(a) >= Math.abs(b) ? a : b);
             }
-        at.forEach((c, list) -> out.add("The dilution of " + Figures.number(c) + " g/mL lies off the line of the others at "
-                + where(list, all) + "; it was kept. Without it the extinction would change by up to "
-                + Figures.percent(largestChange.get(c)) + "."));
+        at.forEach((c, list) ->
+                out.add("The dilution of " + Figures.number(c) + " g/mL lies off the line of the others at "
+                        + where(list, all) + "; it was kept. Without it the extinction would change by up to "
+                        + Figures.percent(largestChange.get(c)) + "."));
     }
 
     private static String where(List<Extinction> hits, List<Extinction> all) {

@@ -16,6 +16,7 @@ import org.hazewright.optics.Refusal;
  *
  * @param first date of the first update, {@code last} of the last
  * @param move relative change of the figure between them, and {@code uMove} the standard uncertainty that a steady lot would have for it
+ * @param oneWay whether the common direction makes up more than half of Σ z²: a drift rather than jumps
  * @param pJumps probability of such steps from a steady lot, and {@code pTrend} of such a trend
  */
 public record Drift(
@@ -25,6 +26,7 @@ public record Drift(
         int steps,
         double move,
         double uMove,
+        boolean oneWay,
         double pJumps,
         double pTrend) {
 
@@ -48,8 +50,8 @@ public record Drift(
             Estimate before = estimates.get(k - 1);
             Estimate now = estimates.get(k);
             if (now.on().isBefore(before.on()))
-                throw new Refusal("Updates of " + factor.words() + " are not in order: " + now.on() + " comes after " + before.on()
-                        + ".");
+                throw new Refusal("Updates of " + factor.words() + " are not in order: " + now.on() + " comes after "
+                        + before.on() + ".");
             // A file keeps few digits: a hair more is the same, and a step is known no better than a thousandth of u.
             if (now.u() > before.u() * 1.001)
                 throw new Refusal("The uncertainty of " + factor.words() + " grows from " + Figures.number(before.u())
@@ -71,6 +73,7 @@ public record Drift(
                 z.size(),
                 last.factor() / first.factor() - 1,
                 Math.sqrt(Math.max(0, first.u() * first.u() - last.u() * last.u())) / first.factor(),
+                trend * trend > squares / 2,
                 z.isEmpty() ? 1 : StraightLine.upperTail(squares, z.size()),
                 2 * new NormalDistribution(null, 0, 1).cumulativeProbability(-Math.abs(trend)));
     }
@@ -80,11 +83,12 @@ public record Drift(
     }
 
     public String sentence() {
-        String moved = Figures.percent(Math.abs(move)) + (move < 0 ? " down" : " up") + " from " + first + " to " + last + " in "
+        String moved = Figures.percent(Math.abs(move)) + (move < 0 ? " down" : " up") + " from " + first + " to " + last
+                + " in "
                 + steps + (steps == 1 ? " step" : " steps") + ", where a steady lot would move by about "
                 + Figures.percent(uMove);
         if (!drifting()) return factor.words() + " is steady: " + moved + ".";
-        return factor.words() + (pTrend <= pJumps ? " drifts: " : " jumps about: ") + moved + " (probability "
+        return factor.words() + (oneWay ? " drifts: " : " jumps about: ") + moved + " (probability "
                 + Figures.probability(Math.min(pJumps, pTrend)) + "). Measure the bottle again or take a fresh one.";
     }
 }

@@ -26,8 +26,6 @@ public record Factor(Kind kind, String name, Quantity quantity) {
 
     /** For a sentence: "ink-demo absorption", "the µa scale of time-resolved fit". */
     public String words() {
-        return kind == Kind.INGREDIENT
-                ? name + " " + quantity.word()
-                : "the " + quantity.sign() + " scale of " + name;
+        return kind == Kind.INGREDIENT ? name + " " + quantity.word() : "the " + quantity.sign() + " scale of " + name;
     }
 }

@@ -37,7 +37,8 @@ public final class Factors {
             if (covariance[i].length != n)
                 throw new Refusal("Row " + (i + 1) + " of a covariance of " + n + " factors has " + covariance[i].length
                         + " entries.");
-            if (!Double.isFinite(mean[i])) throw new Refusal("The factor of " + factors.get(i).words() + " is " + mean[i] + ".");
+            if (!Double.isFinite(mean[i]))
+                throw new Refusal("The factor of " + factors.get(i).words() + " is " + mean[i] + ".");
             this.covariance[i] = covariance[i].clone();
         }
         refuseImpossible();

@@ -22,7 +22,10 @@ final class Figures {
     static String percent(double share) {
         if (!Double.isFinite(share)) return share + " %";
         if (share == 0) return "0 %";
-        return new BigDecimal(100 * share).round(new MathContext(2)).stripTrailingZeros().toPlainString() + " %";
+        return new BigDecimal(100 * share)
+                        .round(new MathContext(2))
+                        .stripTrailingZeros()
+                        .toPlainString() + " %";
     }
 
     /** A probability, two significant digits, with what lies under 1e-9 said so. */

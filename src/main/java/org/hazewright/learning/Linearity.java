@@ -40,7 +40,8 @@ public record Linearity(double f, int degreesOfFreedom, double pValue, double be
             sxy += weights[i] * d * (y[i] - my);
             sxxx += weights[i] * d * d * d;
         }
-        // q = d² − (Σwd²/Σw) − (Σwd³/Σwd²) d is orthogonal to 1 and d under the weights, so its coefficient stands alone.
+        // q = d² − (Σwd²/Σw) − (Σwd³/Σwd²) d is orthogonal to 1 and d under the weights, so its coefficient stands
+        // alone.
         double sqq = 0;
         double sqr = 0;
         double rss = 0;

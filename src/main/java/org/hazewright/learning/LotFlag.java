@@ -17,9 +17,13 @@ public record LotFlag(Kind kind, String sentence) {
     /** Flags of a lot on a day; {@code drifts} may hold those of other lots too. An ingredient that is no lot has no date. */
     public static List<LotFlag> of(Ingredient ingredient, LocalDate day, List<Drift> drifts) {
         List<LotFlag> flags = new ArrayList<>();
-        ingredient.lot().filter(l -> l.expiredOn(day)).ifPresent(l -> flags.add(new LotFlag(
-                Kind.EXPIRED,
-                ingredient.id() + " (lot " + l.number() + ") is past its date of " + l.expires().orElseThrow() + ".")));
+        ingredient
+                .lot()
+                .filter(l -> l.expiredOn(day))
+                .ifPresent(l -> flags.add(new LotFlag(
+                        Kind.EXPIRED,
+                        ingredient.id() + " (lot " + l.number() + ") is past its date of "
+                                + l.expires().orElseThrow() + ".")));
         for (Drift d : drifts)
             if (d.drifting()
                     && d.factor().kind() == Factor.Kind.INGREDIENT

@@ -23,7 +23,8 @@ public record MeasuredBatch(
         making = List.copyOf(making);
         values = List.copyOf(values);
         if (values.isEmpty())
-            throw new Refusal("The batch " + name + " has no measured values; give µa or µs' at one wavelength or more.");
+            throw new Refusal(
+                    "The batch " + name + " has no measured values; give µa or µs' at one wavelength or more.");
         int points = wavelengths(values).length;
         for (Cause c : making)
             if (c.muaPerCm().length != points || c.muspPerCm().length != points)

@@ -11,6 +11,9 @@ public record MeasuredValue(Quantity quantity, double wavelengthNm, double perCm
         Refusal.positive("Wavelength in nm", wavelengthNm);
         String what = "Measured " + quantity.sign() + " at " + Figures.number(wavelengthNm) + " nm in 1/cm";
         if (!Double.isFinite(perCm)) throw new Refusal(what + " is " + perCm + "; it must be a number.");
-        Refusal.positive("Standard uncertainty of " + what.substring(0, 1).toLowerCase(java.util.Locale.ROOT) + what.substring(1), uPerCm);
+        Refusal.positive(
+                "Standard uncertainty of " + what.substring(0, 1).toLowerCase(java.util.Locale.ROOT)
+                        + what.substring(1),
+                uPerCm);
     }
 }

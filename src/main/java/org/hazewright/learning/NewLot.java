@@ -20,7 +20,8 @@ public record NewLot(String id, Lot lot, Source source) {
     public Ingredient absorber(Ingredient parent, DilutionFit fit, double g) {
         Uncertainty fitted = fit.uncertainty();
         // Scattering of its own model was not measured here and keeps its uncertainty.
-        boolean onlyExtinction = fit.series().albedo() > 0 && parent.scattering().isEmpty();
+        boolean onlyExtinction =
+                fit.series().albedo() > 0 && parent.scattering().isEmpty();
         Uncertainty u = onlyExtinction
                 ? fitted
                 : new Uncertainty(fitted.absorption(), parent.uncertainty().scattering());
@@ -30,7 +31,8 @@ public record NewLot(String id, Lot lot, Source source) {
     /** Of a scatterer: its magnitude multiplied by measured over modelled; the shape stays the model's. */
     public Ingredient scatterer(Ingredient parent, DilutionFit.Magnitude magnitude) {
         Scattering model = parent.scattering()
-                .orElseThrow(() -> new Refusal(parent.id() + " has no scattering model whose magnitude could be measured."));
+                .orElseThrow(
+                        () -> new Refusal(parent.id() + " has no scattering model whose magnitude could be measured."));
         Uncertainty u = new Uncertainty(parent.uncertainty().absorption(), magnitude.u() / magnitude.ratio());
         return made(parent, u, parent.absorption(), Optional.of(model.scaled(magnitude.ratio())));
     }
@@ -53,7 +55,8 @@ public record NewLot(String id, Lot lot, Source source) {
 
     /** Particles that absorb by their own index have no figure that a lot could multiply. */
     private static void refuseOwnAbsorption(Ingredient parent, double factor) {
-        if (!(parent.scattering().orElse(null) instanceof Scattering.MieParticles mie) || Math.abs(factor - 1) < 1e-12) return;
+        if (!(parent.scattering().orElse(null) instanceof Scattering.MieParticles mie) || Math.abs(factor - 1) < 1e-12)
+            return;
         var index = mie.particle().index();
         for (int i = 0; i <= 8; i++) {
             double nm = index.fromNm() + (index.toNm() - index.fromNm()) * i / 8;

@@ -88,7 +88,8 @@ public record StraightLine(
         double my = 0;
         for (int i = 0; i < n; i++) {
             if (!Double.isFinite(x[i]) || !Double.isFinite(y[i]))
-                throw new Refusal("A point of a straight-line fit is (" + x[i] + ", " + y[i] + "); both must be finite.");
+                throw new Refusal(
+                        "A point of a straight-line fit is (" + x[i] + ", " + y[i] + "); both must be finite.");
             sw += w[i];
             mx += w[i] * x[i];
             my += w[i] * y[i];
@@ -105,7 +106,8 @@ public record StraightLine(
             spread = Math.max(spread, Math.abs(x[i] - x[0]));
         }
         if (!(spread > 0))
-            throw new Refusal("All points of a straight-line fit have the same x = " + x[0] + "; take at least 2 different.");
+            throw new Refusal(
+                    "All points of a straight-line fit have the same x = " + x[0] + "; take at least 2 different.");
         double slope = sxy / sxx;
         double[] r = new double[n];
         double chi2 = 0;
@@ -137,7 +139,16 @@ public record StraightLine(
     }
 
     private static FitPoint point(
-            double x, double y, double r, double w, double d, double sw, double sxx, double chi2, double slope, int n,
+            double x,
+            double y,
+            double r,
+            double w,
+            double d,
+            double sw,
+            double sxx,
+            double chi2,
+            double slope,
+            int n,
             boolean exact) {
         double leverage = w * (1 / sw + d * d / sxx);
         double free = 1 - leverage;

@@ -31,7 +31,8 @@ class DilutionSeriesTest {
     void transmissionAndAbsorbanceSayTheSame() {
         // A = 1 is T = 0.1; in a cell of 5 mm both are µt = ln 10/0.5 cm.
         DilutionReading t = new DilutionReading(1e-4, 5, 700, Signal.TRANSMISSION, 0.1, OptionalDouble.of(0.001));
-        DilutionReading a = new DilutionReading(1e-4, 5, 700, Signal.ABSORBANCE, 1, OptionalDouble.of(0.01 / Math.log(10)));
+        DilutionReading a =
+                new DilutionReading(1e-4, 5, 700, Signal.ABSORBANCE, 1, OptionalDouble.of(0.01 / Math.log(10)));
         assertEquals(2 * Math.log(10), t.extinctionPerCm(), 1e-14);
         assertEquals(t.extinctionPerCm(), a.extinctionPerCm(), 1e-14);
         assertEquals(0.02, t.uExtinctionPerCm().orElseThrow(), 1e-15); // (0.001/0.1)/0.5 cm
@@ -41,7 +42,8 @@ class DilutionSeriesTest {
 
     @Test
     void massFractionsBecomeGramsPerMillilitre() {
-        assertEquals(0.5 / (0.25 + 0.5), DilutionReading.gPerMl(0.5, 2, 1), 1e-15); // 1 g in 0.5 g / 2 + 0.5 g / 1 doubled
+        assertEquals(
+                0.5 / (0.25 + 0.5), DilutionReading.gPerMl(0.5, 2, 1), 1e-15); // 1 g in 0.5 g / 2 + 0.5 g / 1 doubled
         assertEquals(1.3, DilutionReading.gPerMl(1, 1.3, 1), 1e-15);
         assertEquals(0, DilutionReading.gPerMl(0, 1.3, 1));
     }
@@ -127,9 +129,7 @@ class DilutionSeriesTest {
             saidShared += fit.shared() * fit.shared() / runs;
             saidOwn += fit.own() * fit.own() / runs;
         }
-        return new double[] {
-            Math.sqrt(Math.max(0, shared)), Math.sqrt(own), Math.sqrt(saidShared), Math.sqrt(saidOwn)
-        };
+        return new double[] {Math.sqrt(Math.max(0, shared)), Math.sqrt(own), Math.sqrt(saidShared), Math.sqrt(saidOwn)};
     }
 
     @Test
@@ -146,8 +146,9 @@ class DilutionSeriesTest {
             assertTrue(e.bends());
             assertTrue(e.linearity().orElseThrow().bend() < 0);
         }
-        assertTrue(fit.warnings().stream().anyMatch(w -> w.startsWith("At all wavelengths the line bends")), fit.warnings()
-                .toString());
+        assertTrue(
+                fit.warnings().stream().anyMatch(w -> w.startsWith("At all wavelengths the line bends")),
+                fit.warnings().toString());
     }
 
     @Test

@@ -31,7 +31,9 @@ class StraightLineTest {
             StraightLine line = StraightLine.fit(X, y);
             if (Math.abs(line.slope() - 3) <= line.coverageFactor() * line.uSlope()) slope++;
             if (Math.abs(line.intercept() - 0.5) <= line.coverageFactor() * line.uIntercept()) intercept++;
-            if (Linearity.of(X, y, new double[] {1, 1, 1, 1, 1, 1}).orElseThrow().curved()) bends++;
+            if (Linearity.of(X, y, new double[] {1, 1, 1, 1, 1, 1})
+                    .orElseThrow()
+                    .curved()) bends++;
             if (line.points().stream().anyMatch(StraightLine.FitPoint::outlier)) anyOutlier++;
         }
         assertEquals(0.95, slope / (double) RUNS, THREE_SIGMA);
@@ -56,7 +58,8 @@ class StraightLineTest {
             if (line.scattersMoreThanStated()) enlarged++;
         }
         assertEquals(0.05, enlarged / (double) RUNS, THREE_SIGMA);
-        // The slope's error does not depend on χ²; the one in twenty that is enlarged covers nearly always: 0.95 · 0.95 + 0.05.
+        // The slope's error does not depend on χ²; the one in twenty that is enlarged covers nearly always: 0.95 · 0.95
+        // + 0.05.
         assertEquals(0.9525, covered / (double) RUNS, THREE_SIGMA);
     }
 
@@ -67,7 +70,8 @@ class StraightLineTest {
         int covered = 0;
         for (int run = 0; run < RUNS; run++) {
             double[] y = new double[X.length];
-            for (int i = 0; i < y.length; i++) y[i] = 3 * X[i] + 0.5 * random.nextGaussian(); // ten times what is stated
+            for (int i = 0; i < y.length; i++)
+                y[i] = 3 * X[i] + 0.5 * random.nextGaussian(); // ten times what is stated
             StraightLine line = StraightLine.fit(X, y, stated);
             if (Math.abs(line.slope() - 3) <= line.coverageFactor() * line.uSlope()) covered++;
         }
@@ -91,7 +95,9 @@ class StraightLineTest {
         assertEquals(2, line.slope(), 1e-14);
         assertEquals(1, line.intercept(), 1e-14);
         assertFalse(line.points().stream().anyMatch(StraightLine.FitPoint::outlier));
-        assertFalse(Linearity.of(X, y, new double[] {1, 1, 1, 1, 1, 1}).orElseThrow().curved());
+        assertFalse(Linearity.of(X, y, new double[] {1, 1, 1, 1, 1, 1})
+                .orElseThrow()
+                .curved());
     }
 
     @Test
@@ -109,7 +115,8 @@ class StraightLineTest {
         assertThrows(Refusal.class, () -> StraightLine.fit(new double[] {1, 1, 1}, new double[] {1, 2, 3}));
         assertThrows(Refusal.class, () -> StraightLine.fit(X, X, new double[] {1, 1, 1, 0, 1, 1}));
         assertThrows(Refusal.class, () -> StraightLine.fit(X, new double[] {1, 2, 3, 4, Double.NaN, 5}));
-        assertTrue(Linearity.of(new double[] {0, 1, 2}, new double[] {0, 1, 3}, new double[] {1, 1, 1}).isEmpty());
+        assertTrue(Linearity.of(new double[] {0, 1, 2}, new double[] {0, 1, 3}, new double[] {1, 1, 1})
+                .isEmpty());
         assertTrue(Linearity.of(new double[] {0, 0, 1, 1}, new double[] {0, 1, 3, 2}, new double[] {1, 1, 1, 1})
                 .isEmpty());
     }

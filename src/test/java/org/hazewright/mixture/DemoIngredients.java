@@ -35,16 +35,15 @@ public final class DemoIngredients {
                 "ink extinction",
                 new double[] {680, 692.5, 705, 717.5, 730, 742.5, 755, 767.5, 780, 792.5, 805, 817.5, 830, 842.5},
                 new double[] {
-                    7300.7, 7104.9, 6960.7, 6797.2, 6538.3, 6200.0, 6264.5, 6176.5, 6182.6, 6090.6, 6126.2, 5911.4, 5624.1,
-                    5388.6
+                    7300.7, 7104.9, 6960.7, 6797.2, 6538.3, 6200.0, 6264.5, 6176.5, 6182.6, 6090.6, 6126.2, 5911.4,
+                    5624.1, 5388.6
                 });
     }
 
     public static Ingredient water(double uAbsorption) {
-        Spectrum mua = new Spectrum(
-                "water absorption",
-                new double[] {600, 680, 740, 780, 830, 900},
-                new double[] {0.0022, 0.0047, 0.0260, 0.0236, 0.0299, 0.0679});
+        Spectrum mua = new Spectrum("water absorption", new double[] {600, 680, 740, 780, 830, 900}, new double[] {
+            0.0022, 0.0047, 0.0260, 0.0236, 0.0299, 0.0679
+        });
         return of(
                 "water",
                 Part.BASE,
@@ -138,6 +137,7 @@ public final class DemoIngredients {
 
     /** Items weighed one by one, no stock. */
     public static Recipe recipe(double uG, Item... items) {
-        return new Recipe("demo", items[items.length - 1].ingredient(), 22, uG, Optional.empty(), List.of(), List.of(items));
+        return new Recipe(
+                "demo", items[items.length - 1].ingredient(), 22, uG, Optional.empty(), List.of(), List.of(items));
     }
 }
