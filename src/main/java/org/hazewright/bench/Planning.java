@@ -12,8 +12,7 @@ import org.hazewright.shelf.Ingredient;
 
 /**
  * The choice among ways of dosing: begin with the most precise way for every ingredient, then take simpler ways, simplest first,
- * for as long as the score stays alike; last, where the balance's digits are coarse beside the grams, move single grams by a digit
- * while that lowers the score.
+ * for as long as the score stays alike; last, move single doses by a few of the balance's last digits while that lowers the score.
  *
  * <p>Scores are alike within {@value #ALIKE} of one squared tolerance half-width, or half a per cent of the score: less than the
  * figures it is made of are known to.
@@ -26,7 +25,10 @@ final class Planning {
     private static final int CALLS = 39;
 
     /** A last digit beyond this share of the grams is worth moving. */
-    private static final double COARSE = 5e-4;
+    private static final double COARSE = 2e-5;
+
+    /** Most last digits that a dose is moved from its plain rounding. */
+    private static final int MOST_STEPS = 3;
 
     private final Contents contents;
     private final Balance balance;
@@ -130,7 +132,7 @@ final class Planning {
     /** Moves one dose in one direction for as long as that helps; the score it ends with. */
     private double slide(List<Dose> chosen, int[] steps, int k, int direction, double score) {
         double best = score;
-        while (judged < CALLS) {
+        while (judged < CALLS && Math.abs(steps[k] + direction) <= MOST_STEPS) {
             steps[k] += direction;
             double g = balance.rounded(chosen.get(k).weighedG()) + steps[k] * balance.readabilityG();
             Optional<Recipe> recipe =

@@ -36,7 +36,9 @@ public record StockPlan(
      * The plan of least score for these contents; among plans that score alike the one of fewest weighings, then the one that
      * leaves least over.
      *
-     * @param judge the score of a recipe, J of the search; smaller is better. Asked fewer than 40 times.
+     * @param judge the score of a recipe, J of the search; smaller is better. It must hold what the search held: when a recipe
+     *     can be inside every tolerance, one outside must score worse than any inside, or rounding may step over an edge. Asked
+     *     fewer than 40 times.
      */
     public static StockPlan of(Contents contents, Balance balance, ToDoubleFunction<Recipe> judge) {
         return new Planning(contents, balance, judge).plan();
