@@ -6,8 +6,8 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import java.util.concurrent.Callable;
-import org.hazewright.files.CsvTable;
 import org.hazewright.files.SizeTable;
+import org.hazewright.files.SphereTable;
 import org.hazewright.optics.ConstantIndex;
 import org.hazewright.optics.Crowding;
 import org.hazewright.optics.Efficiencies;
@@ -125,12 +125,12 @@ final class ParticlesCommand implements Callable<Integer> {
     }
 
     private void tableOfSpheres(PrintWriter out) {
-        CsvTable rows = CsvTable.read(table, List.of("size_parameter", "index", "absorption_index"));
-        double[] x = rows.column("size_parameter");
-        double[] n = rows.column("index");
-        double[] k = rows.column("absorption_index");
+        SphereTable rows = SphereTable.read(table);
+        double[] x = rows.sizeParameter();
+        double[] n = rows.index();
+        double[] k = rows.absorptionIndex();
         out.println("size_parameter,index,absorption_index,q_ext,q_sca,g");
-        for (int i = 0; i < x.length; i++) {
+        for (int i = 0; i < rows.rows(); i++) {
             Efficiencies e = Mie.sphere(x[i], n[i], k[i]);
             out.println(String.join(
                     ",",

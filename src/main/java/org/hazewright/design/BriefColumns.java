@@ -8,6 +8,7 @@ import java.util.Map;
 import org.hazewright.brief.Brief;
 import org.hazewright.brief.Point;
 import org.hazewright.brief.SearchLimits;
+import org.hazewright.mixture.Coefficients;
 import org.hazewright.mixture.MassSpecific;
 import org.hazewright.mixture.Mixture;
 import org.hazewright.optics.Crowding;
@@ -21,7 +22,7 @@ import org.hazewright.shelf.Shelf;
  *
  * <p>What is added displaces base: with the base's own µ_b and the candidate's density ρ_i, a_ij = κ_ij − µ_bj/ρ_i (cm²/g), and the
  * residual to fill is t_j − µ_bj. κ depends on the host index and, with crowding, on the concentration; the columns are right at
- * one state of the mixture, and {@link FixedPoint} moves that state to the answer.
+ * one state of the mixture; {@link FixedPoint} moves that state to the answer, with slopes of the full model in place of a_ij.
  */
 final class BriefColumns {
     private final Brief brief;
@@ -100,18 +101,71 @@ final class BriefColumns {
         double[] host = hostIndex(alone);
         List<double[]> kappas = new ArrayList<>();
         for (Ingredient i : candidates.ingredients) kappas.add(kappaAlone(i, host, base));
-        return problem(candidates.ingredients, kappas, base, 1);
+        List<double[]> slopes = new ArrayList<>();
+        double[] residual = new double[base.length];
+        for (int j = 0; j < base.length; j++) residual[j] = points.get(j).wantedPerCm() - base[j];
+        for (int k = 0; k < kappas.size(); k++) slopes.add(displaced(candidates.ingredients.get(k), kappas.get(k), base));
+        return problem(candidates.ingredients, kappas, slopes, residual, 1);
     }
 
     /**
-     * The problem over some candidates at a state of the mixture. Tolerances are narrowed to {@code edge} times themselves as
-     * limits, and left as they are in the score.
+     * The problem over some candidates, straightened at a state of the mixture: µ_j(c) ≈ µ_j(c₀) + Σ_i a_ij (c_i − c₀_i) with the
+     * slopes a_ij of the full model. Tolerances are narrowed to {@code edge} times themselves as limits, and left as they are in
+     * the score.
      */
-    SetProblem at(Mixture state, List<Ingredient> members, double edge) {
+    SetProblem tangent(Map<Ingredient, Double> at, List<Ingredient> members, double edge) {
+        Mixture state = mixture(at, 1);
         double[] host = hostIndex(state);
+        double[] here = values(state);
+        double[] base = baseValues(state);
+        double[] residual = new double[here.length];
+        for (int j = 0; j < here.length; j++) residual[j] = points.get(j).wantedPerCm() - here[j];
         List<double[]> kappas = new ArrayList<>();
-        for (Ingredient i : members) kappas.add(kappa(i, host, state.crowdFraction(i)));
-        return problem(members, kappas, baseValues(state), edge);
+        List<double[]> slopes = new ArrayList<>();
+        for (Ingredient i : members) {
+            double[] kappa = kappa(i, host, state.crowdFraction(i));
+            double[] slope = movesOthers(i, at) ? slope(i, at, here) : displaced(i, kappa, base);
+            for (int j = 0; j < here.length; j++) residual[j] += slope[j] * at.get(i);
+            kappas.add(kappa);
+            slopes.add(slope);
+        }
+        return problem(members, kappas, slopes, residual, edge);
+    }
+
+    /** Whether an ingredient changes what the others do: by crowding, or by enough volume to move the host index. */
+    private static boolean movesOthers(Ingredient i, Map<Ingredient, Double> at) {
+        boolean crowds = i.scattering().orElse(null) instanceof Scattering.MieParticles m
+                && !(m.crowding() instanceof Crowding.None);
+        return crowds || at.get(i) / i.densityGPerMl() > 0.005;
+    }
+
+    /** Slope of the full model along one ingredient, by a forward difference of a part in ten thousand. */
+    private double[] slope(Ingredient i, Map<Ingredient, Double> at, double[] here) {
+        double step = Math.max(1e-4 * at.get(i), 1e-6);
+        Map<Ingredient, Double> moved = new LinkedHashMap<>(at);
+        moved.merge(i, step, Double::sum);
+        double[] there = values(mixture(moved, 1));
+        double[] slope = new double[here.length];
+        for (int j = 0; j < here.length; j++) slope[j] = (there[j] - here[j]) / step;
+        return slope;
+    }
+
+    private double[] displaced(Ingredient i, double[] kappa, double[] base) {
+        double[] slope = new double[base.length];
+        for (int j = 0; j < base.length; j++) slope[j] = kappa[j] - base[j] / i.densityGPerMl();
+        return slope;
+    }
+
+    /** The full model at the wanted points, 1/cm. */
+    double[] values(Mixture mixture) {
+        Map<Double, Coefficients> known = new HashMap<>();
+        double[] values = new double[points.size()];
+        for (int j = 0; j < values.length; j++) {
+            Point p = points.get(j);
+            Coefficients at = known.computeIfAbsent(p.wavelengthNm(), mixture::at);
+            values[j] = p.quantity() == Point.Quantity.MUA ? at.muaPerCm() : at.muspPerCm();
+        }
+        return values;
     }
 
     private double[] kappaAlone(Ingredient i, double[] host, double[] base) {
@@ -149,31 +203,29 @@ final class BriefColumns {
         return upper;
     }
 
-    private SetProblem problem(List<Ingredient> members, List<double[]> kappas, double[] base, double edge) {
+    private SetProblem problem(
+            List<Ingredient> members, List<double[]> kappas, List<double[]> slopes, double[] residual, double edge) {
         List<SetProblem.Point> rows = new ArrayList<>();
-        for (int j = 0; j < base.length; j++) {
+        for (int j = 0; j < residual.length; j++) {
             Point p = points.get(j);
-            rows.add(new SetProblem.Point(
-                    p.wantedPerCm() - base[j], p.tolerancePerCm() * edge, p.weight() * edge * edge));
+            rows.add(new SetProblem.Point(residual[j], p.tolerancePerCm() * edge, p.weight() * edge * edge));
         }
         double uG = brief.balance().standardUncertaintyG();
         List<SetProblem.Candidate> columns = new ArrayList<>();
         for (int k = 0; k < members.size(); k++) {
             Ingredient i = members.get(k);
             double[] kappa = kappas.get(k);
-            double[] effect = new double[base.length];
             double unknown = 0;
             double weighing = 0;
-            for (int j = 0; j < base.length; j++) {
+            for (int j = 0; j < residual.length; j++) {
                 Point p = points.get(j);
-                effect[j] = kappa[j] - base[j] / i.densityGPerMl();
                 double u = kappa[j] * Frozen.uncertaintyOf(i, p) / p.tolerancePerCm();
                 double w = kappa[j] * uG / brief.volumeMl() / p.tolerancePerCm();
                 unknown += p.weight() * u * u;
                 weighing += p.weight() * w * w;
             }
             columns.add(new SetProblem.Candidate(
-                    effect, unknown, weighing, upper(i), 1 / i.densityGPerMl(), group(i)));
+                    slopes.get(k), unknown, weighing, upper(i), 1 / i.densityGPerMl(), group(i)));
         }
         SearchLimits limits = brief.limits();
         double leastBase = Math.max(candidates.base.leastShare(), limits.leastBaseShare());

@@ -139,7 +139,7 @@ public final class BriefReader {
                 avoid,
                 t.whole("max_absorbers", 0, 8, 2),
                 t.whole("max_scatterers", 0, 8, 1),
-                t.whole("max_modifiers", 0, 8, 1),
+                t.whole("max_modifiers", 0, 8, 0),
                 t.within("least_base_share", 0, 1, 0));
     }
 
