@@ -7,7 +7,6 @@ import java.util.Collection;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Set;
-import java.util.regex.Pattern;
 import org.hazewright.optics.Spectrum;
 import org.hazewright.shelf.Nearest;
 
@@ -18,7 +17,6 @@ import org.hazewright.shelf.Nearest;
  * commas are refused with the word for what to change, never guessed at.
  */
 final class CsvTable {
-    private static final Pattern NUMBER = Pattern.compile("[+-]?(\\d+\\.?\\d*|\\.\\d+)([eE][+-]?\\d+)?");
     private static final int MOST_ROWS = 200_000;
     private static final int MOST_COLUMNS = 64;
 
@@ -165,7 +163,7 @@ final class CsvTable {
             String name = raw.strip();
             if (name.isEmpty())
                 throw new FileRefusal(path, line, column, "A column has no name; the header row names every column.");
-            if (NUMBER.matcher(name).matches())
+            if (isNumber(name))
                 throw new FileRefusal(
                         path,
                         line,
@@ -216,7 +214,7 @@ final class CsvTable {
         if (cell.isEmpty())
             throw new FileRefusal(
                     path, line, start, name + " is empty in this row; write a number, or delete the row.");
-        if (!NUMBER.matcher(cell).matches())
+        if (!isNumber(cell))
             throw new FileRefusal(
                     path,
                     line,
@@ -227,6 +225,30 @@ final class CsvTable {
         if (!Double.isFinite(value))
             throw new FileRefusal(path, line, start, name + " is " + cell + ", which is too large a number.");
         return value;
+    }
+
+    /** Sign, digits with a point somewhere, exponent: what both people and spreadsheets write, and nothing else that Java reads. */
+    private static boolean isNumber(String s) {
+        int i = sign(s, 0);
+        int whole = digits(s, i);
+        int end = whole;
+        if (end < s.length() && s.charAt(end) == '.') end = digits(s, end + 1);
+        if (end - i < 1 || end - i == 1 && whole == i) return false; // no digit at all, or a point alone
+        if (end < s.length() && (s.charAt(end) == 'e' || s.charAt(end) == 'E')) {
+            int from = sign(s, end + 1);
+            end = digits(s, from);
+            if (end == from) return false;
+        }
+        return end == s.length();
+    }
+
+    private static int sign(String s, int i) {
+        return i < s.length() && (s.charAt(i) == '+' || s.charAt(i) == '-') ? i + 1 : i;
+    }
+
+    private static int digits(String s, int i) {
+        while (i < s.length() && s.charAt(i) >= '0' && s.charAt(i) <= '9') i++;
+        return i;
     }
 
     /** The rows, in the order of the file, each with its cells in the order of the header. */
