@@ -3,7 +3,6 @@ package org.hazewright.files;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.Arrays;
-import java.util.Collection;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Set;
@@ -16,7 +15,7 @@ import org.hazewright.shelf.Nearest;
  * <p>At least one row, at most 200 000 rows and 64 columns; every cell a finite number. Files with semicolons, tabs or decimal
  * commas are refused with the word for what to change, never guessed at.
  */
-final class CsvTable {
+public final class CsvTable {
     private static final int MOST_ROWS = 200_000;
     private static final int MOST_COLUMNS = 64;
 
@@ -43,27 +42,35 @@ final class CsvTable {
             throw new FileRefusal(path, headerLine, 1, "The table has a header and no rows of numbers below it.");
     }
 
-    static CsvTable read(Path file) {
+    public static CsvTable read(Path file) {
         return new CsvTable(TextFile.read(file));
+    }
+
+    /** A table that has these columns, in any order, and no others. */
+    public static CsvTable read(Path file, List<String> columns) {
+        CsvTable table = read(file);
+        table.refuseUnknown(columns.toArray(new String[0]));
+        for (String name : columns) if (!table.has(name)) throw table.missing(name);
+        return table;
     }
 
     static CsvTable of(TextFile file) {
         return new CsvTable(file);
     }
 
-    String path() {
+    public String path() {
         return path;
     }
 
-    List<String> header() {
+    public List<String> header() {
         return List.copyOf(header);
     }
 
-    boolean has(String column) {
+    public boolean has(String column) {
         return header.contains(column);
     }
 
-    int rows() {
+    public int rows() {
         return rows.size();
     }
 
@@ -76,7 +83,7 @@ final class CsvTable {
     }
 
     /** The numbers of a column, from top to bottom. */
-    double[] column(String name) {
+    public double[] column(String name) {
         int i = header.indexOf(name);
         if (i < 0) throw missing(name);
         return rows.stream().mapToDouble(row -> row[i]).toArray();
@@ -249,10 +256,5 @@ final class CsvTable {
     private static int digits(String s, int i) {
         while (i < s.length() && s.charAt(i) >= '0' && s.charAt(i) <= '9') i++;
         return i;
-    }
-
-    /** The rows, in the order of the file, each with its cells in the order of the header. */
-    Collection<double[]> all() {
-        return List.copyOf(rows);
     }
 }

@@ -60,7 +60,9 @@ public final class ShelfReader {
         return readLenient(folder).orFirstRefusal();
     }
 
+    /** {@code folder} null is the shelf of the program. */
     public static Lenient readLenient(Path folder) {
+        if (folder == null) return inShipped(root -> new ShelfReader(new ShelfFolder(root, SHIPPED)).readAll());
         return new ShelfReader(new ShelfFolder(folder, folder.toString())).readAll();
     }
 
