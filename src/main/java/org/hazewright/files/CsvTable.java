@@ -3,11 +3,9 @@ package org.hazewright.files;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.Arrays;
-import java.util.Collection;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Set;
-import java.util.regex.Pattern;
 import org.hazewright.optics.Spectrum;
 import org.hazewright.shelf.Nearest;
 
@@ -17,8 +15,7 @@ import org.hazewright.shelf.Nearest;
  * <p>At least one row, at most 200 000 rows and 64 columns; every cell a finite number. Files with semicolons, tabs or decimal
  * commas are refused with the word for what to change, never guessed at.
  */
-final class CsvTable {
-    private static final Pattern NUMBER = Pattern.compile("[+-]?(\\d+\\.?\\d*|\\.\\d+)([eE][+-]?\\d+)?");
+public final class CsvTable {
     private static final int MOST_ROWS = 200_000;
     private static final int MOST_COLUMNS = 64;
 
@@ -45,27 +42,35 @@ final class CsvTable {
             throw new FileRefusal(path, headerLine, 1, "The table has a header and no rows of numbers below it.");
     }
 
-    static CsvTable read(Path file) {
+    public static CsvTable read(Path file) {
         return new CsvTable(TextFile.read(file));
+    }
+
+    /** A table that has these columns, in any order, and no others. */
+    public static CsvTable read(Path file, List<String> columns) {
+        CsvTable table = read(file);
+        table.refuseUnknown(columns.toArray(new String[0]));
+        for (String name : columns) if (!table.has(name)) throw table.missing(name);
+        return table;
     }
 
     static CsvTable of(TextFile file) {
         return new CsvTable(file);
     }
 
-    String path() {
+    public String path() {
         return path;
     }
 
-    List<String> header() {
+    public List<String> header() {
         return List.copyOf(header);
     }
 
-    boolean has(String column) {
+    public boolean has(String column) {
         return header.contains(column);
     }
 
-    int rows() {
+    public int rows() {
         return rows.size();
     }
 
@@ -78,7 +83,7 @@ final class CsvTable {
     }
 
     /** The numbers of a column, from top to bottom. */
-    double[] column(String name) {
+    public double[] column(String name) {
         int i = header.indexOf(name);
         if (i < 0) throw missing(name);
         return rows.stream().mapToDouble(row -> row[i]).toArray();
@@ -165,7 +170,7 @@ final class CsvTable {
             String name = raw.strip();
             if (name.isEmpty())
                 throw new FileRefusal(path, line, column, "A column has no name; the header row names every column.");
-            if (NUMBER.matcher(name).matches())
+            if (isNumber(name))
                 throw new FileRefusal(
                         path,
                         line,
@@ -216,7 +221,7 @@ final class CsvTable {
         if (cell.isEmpty())
             throw new FileRefusal(
                     path, line, start, name + " is empty in this row; write a number, or delete the row.");
-        if (!NUMBER.matcher(cell).matches())
+        if (!isNumber(cell))
             throw new FileRefusal(
                     path,
                     line,
@@ -229,8 +234,27 @@ final class CsvTable {
         return value;
     }
 
-    /** The rows, in the order of the file, each with its cells in the order of the header. */
-    Collection<double[]> all() {
-        return List.copyOf(rows);
+    /** Sign, digits with a point somewhere, exponent: what both people and spreadsheets write, and nothing else that Java reads. */
+    private static boolean isNumber(String s) {
+        int i = sign(s, 0);
+        int whole = digits(s, i);
+        int end = whole;
+        if (end < s.length() && s.charAt(end) == '.') end = digits(s, end + 1);
+        if (end - i < 1 || end - i == 1 && whole == i) return false; // no digit at all, or a point alone
+        if (end < s.length() && (s.charAt(end) == 'e' || s.charAt(end) == 'E')) {
+            int from = sign(s, end + 1);
+            end = digits(s, from);
+            if (end == from) return false;
+        }
+        return end == s.length();
+    }
+
+    private static int sign(String s, int i) {
+        return i < s.length() && (s.charAt(i) == '+' || s.charAt(i) == '-') ? i + 1 : i;
+    }
+
+    private static int digits(String s, int i) {
+        while (i < s.length() && s.charAt(i) >= '0' && s.charAt(i) <= '9') i++;
+        return i;
     }
 }

@@ -11,7 +11,6 @@ import java.util.stream.Collectors;
 import org.hazewright.mixture.Item;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.mixture.Stock;
-import org.hazewright.optics.Refusal;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Part;
 import org.hazewright.shelf.Shelf;
@@ -197,11 +196,5 @@ public final class RecipeReader {
                         && i.lot().get().number().equals(number.get()))
                 .findFirst()
                 .orElse(named);
-    }
-
-    /** For callers that hold the text and not a file. */
-    static Recipe parse(String shown, String text, Shelf shelf) throws Refusal {
-        return new RecipeReader(TomlPage.of(new TextFile(shown, text, "")), shelf, shown.endsWith(".batch.toml"))
-                .recipe();
     }
 }

@@ -3,12 +3,14 @@ package org.hazewright.files;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.InvalidPathException;
+import java.nio.file.LinkOption;
 import java.nio.file.NoSuchFileException;
 import java.nio.file.Path;
 import java.util.ArrayList;
-import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.concurrent.ConcurrentHashMap;
+import java.util.function.Supplier;
 import java.util.stream.Stream;
 import org.hazewright.shelf.Nearest;
 
@@ -20,10 +22,12 @@ import org.hazewright.shelf.Nearest;
  */
 final class ShelfFolder {
     private static final int MOST_FILES = 5000;
+    private static final int MOST_AHEAD = 500;
 
     private final Path root;
     private final String shown;
-    private final Map<Path, CsvTable> tables = new HashMap<>();
+    private final Path realRoot;
+    private final Map<Path, Attempt<CsvTable>> tables = new ConcurrentHashMap<>();
 
     /** {@code shown} is how messages name the folder. */
     ShelfFolder(Path root, String shown) {
@@ -34,10 +38,49 @@ final class ShelfFolder {
             throw whole.refusal("There is no such folder; name the folder that holds the ingredient files.");
         if (!Files.isDirectory(root))
             throw whole.refusal("This is a file and not a folder; name the folder that holds the ingredient files.");
+        try {
+            realRoot = root.toRealPath();
+        } catch (IOException e) {
+            throw whole.refusal("The folder cannot be reached (" + e.getMessage() + ").");
+        }
     }
 
     String shown() {
         return shown;
+    }
+
+    /**
+     * The pages of TOML files, read on all cores, in the order given; meanwhile the tables of {@code spectra/} are read ahead, and
+     * one that is broken counts only when a file asks for it.
+     */
+    List<Attempt<TomlPage>> pages(List<TextFileName> files) {
+        List<Supplier<Attempt<TomlPage>>> reading = new ArrayList<>();
+        for (TextFileName f : files)
+            reading.add(() -> Attempt.of(() -> TomlPage.of(TextFile.read(f.file(), f.shown()))));
+        for (Path table : tablesAhead())
+            reading.add(() -> {
+                tables.computeIfAbsent(table, file -> attempt(file, "spectra/" + file.getFileName()));
+                return null;
+            });
+        return reading.parallelStream().map(Supplier::get).toList().subList(0, files.size());
+    }
+
+    private List<Path> tablesAhead() {
+        Path folder = realRoot.resolve("spectra");
+        if (!Files.isDirectory(folder, LinkOption.NOFOLLOW_LINKS)) return List.of();
+        try (Stream<Path> entries = Files.list(folder)) {
+            return entries.filter(p -> p.getFileName().toString().endsWith(".csv"))
+                    .filter(p -> Files.isRegularFile(p, LinkOption.NOFOLLOW_LINKS))
+                    .limit(MOST_AHEAD)
+                    .toList();
+        } catch (IOException e) {
+            return List.of(); // whoever asks for a table gets its own message
+        }
+    }
+
+    private Attempt<CsvTable> attempt(Path file, String path) {
+        return Attempt.of(
+                () -> CsvTable.of(TextFile.read(file, shown + separator() + path.replace("/", separator()))));
     }
 
     /** The TOML files of a folder in it ("" for itself), by name; none when there is no such folder. */
@@ -78,12 +121,7 @@ final class ShelfFolder {
     /** The table at a path that a file gives at {@code from}. */
     CsvTable table(String path, Place from) {
         Path file = inside(path, from);
-        CsvTable known = tables.get(file);
-        if (known == null) {
-            known = CsvTable.of(TextFile.read(file, shown + separator() + path.replace("/", separator())));
-            tables.put(file, known);
-        }
-        return known;
+        return tables.computeIfAbsent(file, f -> attempt(f, path)).get();
     }
 
     private Path inside(String path, Place from) {
@@ -105,7 +143,7 @@ final class ShelfFolder {
         Path real;
         try {
             real = file.toRealPath();
-            if (!real.startsWith(root.toRealPath()))
+            if (!real.startsWith(realRoot))
                 throw from.refusal("The table \"" + path + "\" is a link that leads out of the shelf's folder." + rule);
         } catch (NoSuchFileException e) {
             throw from.refusal("There is no table \"" + path + "\" in the shelf's folder." + perhaps(file));

@@ -8,11 +8,13 @@ import java.nio.file.FileSystems;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
 import java.util.TreeMap;
+import java.util.TreeSet;
 import java.util.function.Function;
 import org.hazewright.shelf.BlendPart;
 import org.hazewright.shelf.Ingredient;
@@ -58,7 +60,9 @@ public final class ShelfReader {
         return readLenient(folder).orFirstRefusal();
     }
 
+    /** {@code folder} null is the shelf of the program. */
     public static Lenient readLenient(Path folder) {
+        if (folder == null) return inShipped(root -> new ShelfReader(new ShelfFolder(root, SHIPPED)).readAll());
         return new ShelfReader(new ShelfFolder(folder, folder.toString())).readAll();
     }
 
@@ -86,25 +90,32 @@ public final class ShelfReader {
     }
 
     private Lenient readAll() {
-        for (ShelfFolder.TextFileName file : folder.tomlFiles("materials")) {
-            if (!attempt(() -> materials.add(
-                    MaterialReader.read(TomlPage.of(TextFile.read(file.file(), file.shown())), file.id(), folder))))
-                materials.addBroken(file.id());
-        }
+        List<ShelfFolder.TextFileName> materialFiles = folder.tomlFiles("materials");
         List<ShelfFolder.TextFileName> files = folder.tomlFiles("");
         if (files.isEmpty())
             throw Place.whole(folder.shown())
                     .refusal("The folder holds no ingredient files (<id>.toml); name the folder of a shelf.");
-        for (ShelfFolder.TextFileName file : files)
-            attempt(() -> pages.put(file.id(), TomlPage.of(TextFile.read(file.file(), file.shown()))));
-        Set<String> known = new java.util.TreeSet<>();
-        files.forEach(f -> known.add(f.id()));
+        List<ShelfFolder.TextFileName> all = new ArrayList<>(materialFiles);
+        all.addAll(files);
+        List<Attempt<TomlPage>> read = folder.pages(all);
+        for (int i = 0; i < materialFiles.size(); i++) {
+            String id = materialFiles.get(i).id();
+            Attempt<TomlPage> page = read.get(i);
+            if (!attempt(() -> materials.add(MaterialReader.read(page.get(), id, folder)))) materials.addBroken(id);
+        }
+        Set<String> known = new TreeSet<>();
+        for (int i = 0; i < files.size(); i++) {
+            String id = files.get(i).id();
+            Attempt<TomlPage> page = read.get(materialFiles.size() + i);
+            known.add(id);
+            attempt(() -> pages.put(id, page.get()));
+        }
         pages.forEach((id, page) -> attempt(() -> {
             TomlPage whole = page.has("lot_of") ? overParent(id, page, known) : page;
             ingredients.put(id, new IngredientReader(whole, id, folder, materials).read());
         }));
         keepSoundBlends(known);
-        refusals.sort(java.util.Comparator.comparing(FileRefusal::path).thenComparing(FileRefusal::line));
+        refusals.sort(Comparator.comparing(FileRefusal::path).thenComparing(FileRefusal::line));
         return new Lenient(new Shelf(folder.shown(), ingredients.values(), materials.all()), refusals);
     }
 
@@ -140,7 +151,7 @@ public final class ShelfReader {
         if (parent.has("blend"))
             throw lot.refusal("lot_of", "\"" + of + "\" is a blend, which has no lots; its parts have.");
         Map<String, String> replacing = new LinkedHashMap<>(Map.of("scattering", "model", "absorption", "table"));
-        Set<String> merged = new java.util.TreeSet<>(MERGED_IN_LOTS);
+        Set<String> merged = new TreeSet<>(MERGED_IN_LOTS);
         replacing.forEach((table, key) -> {
             if (lot.table(table).map(t -> t.has(key)).orElse(false)) merged.remove(table);
         });

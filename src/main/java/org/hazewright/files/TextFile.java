@@ -22,7 +22,7 @@ import org.hazewright.shelf.Nearest;
  *
  * <p>{@code path} is how messages name it. Missing files, folders, devices, pipes, other encodings and larger files are refused.
  */
-record TextFile(String path, String text, String sha256) {
+record TextFile(String path, String text, byte[] bytes) {
     static final int MOST_BYTES = 4_000_000;
 
     static TextFile read(Path file) {
@@ -35,7 +35,7 @@ record TextFile(String path, String text, String sha256) {
         if (bytes.length > MOST_BYTES)
             throw whole.refusal(
                     "The file is larger than 4 MB; a text file of this kind is far smaller. Was the right file named?");
-        return new TextFile(shown, decoded(bytes, shown), sha256(bytes));
+        return new TextFile(shown, decoded(bytes, shown), bytes);
     }
 
     private static byte[] bytes(Path file, Place whole) {
@@ -94,7 +94,8 @@ record TextFile(String path, String text, String sha256) {
         }
     }
 
-    private static String sha256(byte[] bytes) {
+    /** Of the file's bytes, in lower-case hexadecimal. */
+    String sha256() {
         try {
             return HexFormat.of().formatHex(MessageDigest.getInstance("SHA-256").digest(bytes));
         } catch (NoSuchAlgorithmException e) {

@@ -34,9 +34,9 @@ public final class TissueSpectra {
                 spectrum(folder, "spectra/soybean-oil-absorption.csv", "mua_per_cm"));
     }
 
-    /** {@link #read} of a folder when first asked for. */
+    /** {@link #read} of a folder, or with null {@link #shipped}, when first asked for. */
     public static Supplier<Tissue.Spectra> of(Path folder) {
-        return () -> read(folder);
+        return () -> folder == null ? shipped() : read(folder);
     }
 
     private static Spectrum spectrum(ShelfFolder folder, String path, String column) {
