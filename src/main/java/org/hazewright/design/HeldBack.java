@@ -70,7 +70,7 @@ final class HeldBack {
         for (int j = 1; j < points.size(); j++)
             if (Math.abs(best.misses()[j]) > Math.abs(best.misses()[worst])) worst = j;
         double miss = best.misses()[worst];
-        if (Math.abs(miss) < 0.1) return;
+        if (Math.abs(miss) < 0.3) return;
         sentences.add("The largest planned miss is " + name(points.get(worst)) + ": " + widths(Math.abs(miss))
                 + " of its half-width too " + (miss > 0 ? "high." : "low."));
         for (SetProblem.Group group : SetProblem.Group.values()) {
