@@ -9,6 +9,7 @@ import java.util.Locale;
 import java.util.Set;
 import org.hazewright.bench.Answer;
 import org.hazewright.bench.Leftover;
+import org.hazewright.bench.Warning;
 import org.hazewright.brief.Balance;
 import org.hazewright.brief.Brief;
 import org.hazewright.mixture.Cause;
@@ -33,7 +34,7 @@ final class DesignText {
         this.balance = answer.brief().balance();
     }
 
-    void print(List<String> warnings) {
+    void print(List<Warning> warnings) {
         Brief brief = answer.brief();
         out.println(brief.title());
         out.println(answer.recipe().base().name() + ", " + Figures.plain(brief.batchMl()) + " mL"
@@ -49,7 +50,7 @@ final class DesignText {
         causes();
         section("What holds it back", answer.limits());
         alternatives();
-        section("Mind", warnings);
+        section("Mind", mind(warnings));
         out.println();
         out.printf(
                 Locale.ROOT,
@@ -63,18 +64,18 @@ final class DesignText {
     /** The one sentence that matters. */
     static String verdict(Answer answer) {
         String chance = times(answer.chance());
-        if (answer.meets()) return "Lands inside every tolerance " + chance + " times in 100.";
+        if (answer.meets()) return "Lands inside every tolerance " + chance + " in 100.";
         return "Misses: no recipe from this shelf meets every tolerance; this is the closest. Its worst miss is "
-                + Figures.significant(answer.worstMiss(), 2) + " half-widths, and "
-                + Figures.significant(answer.bestPossibleWorstMiss(), 2) + " is the best possible.";
+                + Figures.significant(answer.worstMiss(), 3) + " half-widths, and "
+                + Figures.significant(answer.bestPossibleWorstMiss(), 3) + " is the best possible.";
     }
 
     /** A share as a count in 100: never 100 for what is not certain, nor 0 for what is possible. */
     static String times(double share) {
         long count = Math.round(100 * share);
-        if (count == 100 && share < 1) return "more than 99";
-        if (count == 0 && share > 0) return "less than 1";
-        return Long.toString(count);
+        if (count == 100 && share < 1) return "more than 99 times";
+        if (count == 0 && share > 0) return "less than 1 time";
+        return count + (count == 1 ? " time" : " times");
     }
 
     private void stocks() {
@@ -196,6 +197,12 @@ final class DesignText {
         out.println();
         out.println(title);
         for (String s : sentences) for (String line : wrapped(s)) out.println("  " + line);
+    }
+
+    private List<String> mind(List<Warning> warnings) {
+        List<String> sentences = new ArrayList<>(answer.notes());
+        warnings.forEach(w -> sentences.add(w.text()));
+        return sentences;
     }
 
     private static List<String> wrapped(String sentence) {
