@@ -130,7 +130,7 @@ final class IngredientsCommand implements Callable<Integer> {
 
         private static boolean covers(Ingredient i, double nm) {
             try {
-                MassSpecific.of(i, nm, 22, 1.33, 0);
+                MassSpecific.requireFigures(i, nm, 22);
                 return true;
             } catch (Refusal outside) {
                 return false;

@@ -142,7 +142,7 @@ final class PredictCommand implements Callable<Integer> {
                     .mapToDouble(k -> 50.0 * k)
                     .filter(x -> {
                         try {
-                            mixture.at(x);
+                            mixture.requireFigures(x);
                             return true;
                         } catch (Refusal outside) {
                             return false;

@@ -108,10 +108,7 @@ final class Candidates {
     /** Why an ingredient cannot be computed at a wavelength that is wanted; null when it can. */
     private static String gap(Ingredient i, double[] wavelengthsNm, double temperatureC) {
         try {
-            for (double nm : wavelengthsNm) {
-                MassSpecific.of(i, nm, temperatureC, 1.33, 0);
-                i.index().ifPresent(m -> m.index().at(nm, temperatureC));
-            }
+            for (double nm : wavelengthsNm) MassSpecific.requireFigures(i, nm, temperatureC);
             return null;
         } catch (Refusal refusal) {
             return refusal.getMessage();

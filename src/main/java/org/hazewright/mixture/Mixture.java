@@ -91,6 +91,11 @@ public final class Mixture {
         return volumesMl.get(i) / volumeMl * MassSpecific.particleShare(i);
     }
 
+    /** Refuses a wavelength in nm that some ingredient's figures do not reach. */
+    public void requireFigures(double nm) {
+        for (Ingredient i : massesG.keySet()) MassSpecific.requireFigures(i, nm, temperatureC);
+    }
+
     /** The coefficients at a wavelength in nm; a {@link Refusal} names the ingredient whose figures do not reach there. */
     public Coefficients at(double nm) {
         double host = hostIndex(nm);
