@@ -9,6 +9,7 @@ import org.hazewright.shelf.Family;
 import org.hazewright.shelf.Form;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Making;
+import org.hazewright.shelf.Part;
 
 /** Liquid and gel: mixed in one vessel, with a gel heated and cooled into its window before anything sensitive goes in. */
 final class PouredSteps {
@@ -37,14 +38,13 @@ final class PouredSteps {
 
     private void vessel() {
         String fill = Grams.plain(mixture.volumeMl()) + " mL";
-        double whole = mixture.massG();
-        if (whole < list.balance.capacityG())
-            list.say(BASE, "Weigh a clean, dry vessel that holds well over " + fill + ", with its lid and stirrer, write its mass"
-                    + " down and tare.");
+        if (list.heavy())
+            list.say(BASE, "Take a clean, dry vessel that holds well over " + fill + ". " + list.portions());
         else
-            list.say(BASE, "Take a clean, dry vessel that holds well over " + fill + ". Filled it is too heavy for this balance ("
-                    + Grams.plain(list.balance.capacityG())
-                    + " g): weigh each portion in a cup, pour it over, weigh the emptied cup, and top up what stuck to it.");
+            list.say(
+                    BASE,
+                    "Weigh a clean, dry vessel that holds well over " + fill
+                            + ", with its lid and stirrer, write its mass" + " down and tare.");
         list.withBaseWords();
     }
 
@@ -79,15 +79,16 @@ final class PouredSteps {
 
     /** Preservatives and other modifiers that heat does not harm dissolve in the cold liquid. */
     private static boolean early(Ingredient i) {
-        return i.part() == org.hazewright.shelf.Part.MODIFIER
+        return i.part() == Part.MODIFIER
                 && i.making().addBelowC().isEmpty()
                 && !i.making().addLast();
     }
 
     private void heat() {
-        boolean heavy = mixture.massG() >= list.balance.capacityG();
-        String balance = heavy ? " on a balance that can carry it" : "";
-        list.say(BASE, "Weigh the vessel with all that is in it, lid and stirrer" + balance + ", and write the mass down.");
+        String balance = list.heavy() ? " on a balance that can carry it" : "";
+        list.say(
+                BASE,
+                "Weigh the vessel with lid, stirrer and all that is in it" + balance + ", and write the mass down.");
         OptionalDouble melt = list.facts.meltC();
         list.say(
                 BASE,
@@ -96,7 +97,9 @@ final class PouredSteps {
                 OptionalDouble.empty(),
                 Cautions.HOT);
         coolIntoWindow();
-        list.say(BASE, "Weigh the vessel again and give back the water that it lost, warm, until the mass is the one written down.");
+        list.say(
+                BASE,
+                "Weigh the vessel again and give back the water that it lost, warm, until the mass is the one written down.");
     }
 
     private void coolIntoWindow() {
@@ -111,13 +114,18 @@ final class PouredSteps {
                             + (above.isPresent() ? ", but keep it above " + celsius(above) : "") + ".",
                     below,
                     OptionalDouble.empty());
-        else
+        else {
+            OptionalDouble hold = OptionalDouble.of(Math.max(
+                    above.getAsDouble(), list.facts.ofBase(Making::pourC).orElse(0)));
             list.say(
                     BASE,
-                    "Let it cool to " + celsius(above) + " while stirring slowly, and no further: it thickens below.",
-                    above,
+                    "Let it cool to " + celsius(hold) + " while stirring slowly, and no further: it thickens below "
+                            + celsius(above) + ".",
+                    hold,
                     OptionalDouble.empty(),
-                    "What is added now would be better off below " + celsius(below) + ": add it slowly, a little at a time.");
+                    "What is added now would be better off below " + celsius(below)
+                            + ": add it slowly, a little at a time.");
+        }
     }
 
     private void add(int place) {
@@ -125,7 +133,7 @@ final class PouredSteps {
         Ingredient i = w.ingredient();
         OptionalDouble stir = i.making().stirMin();
         if (w.from().isPresent()) {
-            list.say(ADD, "Shake stock " + w.label() + " just before drawing.");
+            list.say(ADD, StockSteps.shake(w.label(), i));
             list.weigh(ADD, w, "into the vessel.");
         } else if (i.form() == Form.POWDER && i.making().sonicateMin().isPresent()) {
             OptionalDouble min = i.making().sonicateMin();
@@ -139,7 +147,7 @@ final class PouredSteps {
                     min,
                     Cautions.ULTRASOUND);
         } else {
-            if (i.part() != org.hazewright.shelf.Part.MODIFIER) StockSteps.rouseBottle(list, i);
+            if (i.part() != Part.MODIFIER) StockSteps.rouseBottle(list, i);
             list.weigh(
                     ADD,
                     w,
@@ -150,15 +158,22 @@ final class PouredSteps {
         list.say(
                 ADD,
                 length + ", without drawing in air"
-                        + (i.settles() ? untilSet ? ", and go on stirring until pouring: it settles" : ", and go on stirring: it settles" : "")
+                        + (i.settles()
+                                ? untilSet
+                                        ? ", and go on stirring until pouring: it settles"
+                                        : ", and go on stirring: it settles"
+                                : "")
                         + ".",
                 OptionalDouble.empty(),
                 stir);
     }
 
     private void finish() {
-        if (mixture.massG() < list.balance.capacityG())
-            list.say(FINISH, "Check: all together should weigh " + Grams.plain(mixture.massG()) + " g more than the empty vessel.");
+        if (!list.heavy())
+            list.say(
+                    FINISH,
+                    "Check: all together should weigh " + Grams.plain(mixture.massG())
+                            + " g more than the empty vessel.");
         if (list.facts.degas()) list.say(FINISH, "Let the bubbles rise, or degas, before pouring.");
         if (list.recipe.base().family() == Family.LIQUID && !heated) {
             list.say(
@@ -166,6 +181,7 @@ final class PouredSteps {
                     list.facts.settles()
                             ? "Keep stirring until and while it is measured; cover it against dust and drying."
                             : "Cover it against dust and drying, and stir again before it is measured.");
+            label();
             return;
         }
         OptionalDouble pour = list.facts.ofBase(Making::pourC);
@@ -184,7 +200,11 @@ final class PouredSteps {
                             + (hours.isPresent() ? " for " + Grams.plain(hours.getAsDouble()) + " h" : "") + ".",
                     set,
                     hours.isPresent() ? OptionalDouble.of(60 * hours.getAsDouble()) : OptionalDouble.empty());
-        list.say(FINISH, "Label it: recipe, date, name.");
+        label();
+    }
+
+    private void label() {
+        list.say(FINISH, "Label it: recipe, date, name, and that it is for phantoms only.");
     }
 
     static String celsius(OptionalDouble c) {
