@@ -1,7 +1,6 @@
 package org.hazewright.bench;
 
 import java.util.LinkedHashMap;
-import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -56,9 +55,11 @@ final class CuredSteps {
                 Cautions.HARDENER);
         list.withBaseWords();
         if (mixture.massG() >= list.balance.capacityG())
-            list.say(BASE, "Filled, the cup is too heavy for this balance (" + Grams.plain(list.balance.capacityG())
-                    + " g): weigh each portion in a cup of its own, scrape it over, weigh the emptied cup, and top up what"
-                    + " stuck to it.");
+            list.say(
+                    BASE,
+                    "Filled, the cup is too heavy for this balance (" + Grams.plain(list.balance.capacityG())
+                            + " g): weigh each portion in a cup of its own, scrape it over, weigh the emptied cup, and top up what"
+                            + " stuck to it.");
     }
 
     private void into(int place) {
@@ -102,7 +103,8 @@ final class CuredSteps {
         if (warmed && hardener.isPresent())
             list.say(
                     ADD,
-                    "Let the mix cool to " + Grams.plain(list.recipe.temperatureC()) + " °C: warm, it would cure too fast.",
+                    "Let the mix cool to " + Grams.plain(list.recipe.temperatureC())
+                            + " °C: warm, it would cure too fast.",
                     OptionalDouble.of(list.recipe.temperatureC()),
                     OptionalDouble.empty());
         if (list.facts.degas() && hardener.isPresent())
@@ -117,8 +119,8 @@ final class CuredSteps {
         list.say(
                 ADD,
                 (potLife.isPresent()
-                                ? "Note the time: pouring must be done within " + StepList.minutes(potLife.getAsDouble())
-                                        + " (pot life). "
+                                ? "Note the time: pouring must be done within "
+                                        + StepList.minutes(potLife.getAsDouble()) + " (pot life). "
                                 : "Note the time: it cures from now on. ")
                         + "Stir slowly, scraping wall and bottom"
                         + (stir.isPresent() ? ", for " + StepList.minutes(stir.getAsDouble()) : "") + ".",
@@ -132,7 +134,8 @@ final class CuredSteps {
         double hard = 0;
         for (var entry : mixture.massesG().entrySet()) {
             if (entry.getKey().equals(last)) hard += entry.getValue();
-            else if (MakingFacts.isBase(list.recipe, org.hazewright.mixture.Item.neat(entry.getKey(), entry.getValue())))
+            else if (MakingFacts.isBase(
+                    list.recipe, org.hazewright.mixture.Item.neat(entry.getKey(), entry.getValue())))
                 rest += entry.getValue();
         }
         return "Base to hardener is 100 : " + Grams.plain(100 * hard / rest) + " by mass"
@@ -141,7 +144,9 @@ final class CuredSteps {
 
     private void finish() {
         if (list.facts.degas())
-            list.say(FINISH, "Degas until the foam has collapsed and no bubbles rise, letting air in three or four times.");
+            list.say(
+                    FINISH,
+                    "Degas until the foam has collapsed and no bubbles rise, letting air in three or four times.");
         list.say(
                 FINISH,
                 "Pour slowly, in a thin stream, down the wall of the mould"
@@ -152,7 +157,8 @@ final class CuredSteps {
             list.say(
                     FINISH,
                     "Let it cure" + (at.isPresent() ? " at " + PouredSteps.celsius(at) : "")
-                            + (hours.isPresent() ? " for " + Grams.plain(hours.getAsDouble()) + " h" : "") + ", level and covered.",
+                            + (hours.isPresent() ? " for " + Grams.plain(hours.getAsDouble()) + " h" : "")
+                            + ", level and covered.",
                     at,
                     hours.isPresent() ? OptionalDouble.of(60 * hours.getAsDouble()) : OptionalDouble.empty());
         list.say(FINISH, "Label it: recipe, date, name.");

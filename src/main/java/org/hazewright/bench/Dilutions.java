@@ -9,7 +9,6 @@ import java.util.Set;
 import org.hazewright.brief.Balance;
 import org.hazewright.mixture.Stock;
 import org.hazewright.shelf.Family;
-import org.hazewright.shelf.Form;
 import org.hazewright.shelf.Ingredient;
 
 /**
@@ -93,9 +92,8 @@ final class Dilutions {
                     contents.inHand().stream()
                             .filter(s -> s.id().equals(from))
                             .findFirst()
-                            .orElseThrow(() -> new org.hazewright.optics.Refusal(
-                                    "The stock in hand " + last.id() + " is diluted from \"" + from
-                                            + "\", which is not among the stocks in hand.")));
+                            .orElseThrow(() -> new org.hazewright.optics.Refusal("The stock in hand " + last.id()
+                                    + " is diluted from \"" + from + "\", which is not among the stocks in hand.")));
         }
         return chain;
     }
@@ -125,8 +123,7 @@ final class Dilutions {
     /** Grams to put into a stock of this ratio so that {@code drawnG} can be drawn from it; round numbers, smallest first. */
     private List<Double> roundGrams(int ratio, double drawnG) {
         List<Double> grams = new ArrayList<>();
-        double least = Math.max(
-                leastLoadG(), Math.max(LEAST_STOCK_G, SPARE * drawnG) / ratio * (1 - 1e-9));
+        double least = Math.max(leastLoadG(), Math.max(LEAST_STOCK_G, SPARE * drawnG) / ratio * (1 - 1e-9));
         for (int decade = -3; decade <= 2; decade++)
             for (int figure : new int[] {1, 2, 5}) {
                 double g = balance.rounded(figure * Math.pow(10, decade));
@@ -148,8 +145,7 @@ final class Dilutions {
 
     private static Stock stock(
             Ingredient i, Ingredient diluent, int ratio, double g, long total, Optional<String> from) {
-        return new Stock(
-                i.id() + "-1-" + total, i, WeighingOrder.lotOf(i), g, diluent, decimal(g * (ratio - 1)), from);
+        return new Stock(i.id() + "-1-" + total, i, WeighingOrder.lotOf(i), g, diluent, decimal(g * (ratio - 1)), from);
     }
 
     /** Takes the noise of binary fractions off a product of round numbers. */

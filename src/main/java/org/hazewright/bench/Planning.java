@@ -58,8 +58,14 @@ final class Planning {
         score = simplify(chosen, ways, score, steps);
         score = settle(chosen, steps, score);
         Recipe recipe = assembly.recipe(chosen, steps).orElseThrow();
-        return new StockPlan(recipe, score, weighings(recipe, chosen), leftovers(recipe, chosen), inHand(chosen),
-                notes(chosen), judged);
+        return new StockPlan(
+                recipe,
+                score,
+                weighings(recipe, chosen),
+                leftovers(recipe, chosen),
+                inHand(chosen),
+                notes(chosen),
+                judged);
     }
 
     private double score(Recipe recipe) {
@@ -149,7 +155,8 @@ final class Planning {
 
     private int weighings(Recipe recipe, List<Dose> chosen) {
         List<String> inHand = inHand(chosen);
-        int count = recipe.items().stream().mapToInt(i -> balance.loads(i.massG())).sum();
+        int count =
+                recipe.items().stream().mapToInt(i -> balance.loads(i.massG())).sum();
         for (Stock s : recipe.stocks())
             if (!inHand.contains(s.id())) count += balance.loads(s.ingredientG()) + balance.loads(s.diluentG());
         return count;
@@ -186,7 +193,8 @@ final class Planning {
                         + Grams.small(balance.smallestLoadG()) + ", and " + why + "; " + end);
             }
             if (!d.isNeat() && Dilutions.settlesInStock(d.ingredient(), contents.base()))
-                notes.add(name + " settles: its stock is a suspension. Shake it and draw at once, each time; a larger batch"
+                notes.add(name
+                        + " settles: its stock is a suspension. Shake it and draw at once, each time; a larger batch"
                         + " would let it be weighed neat.");
         }
         return notes;

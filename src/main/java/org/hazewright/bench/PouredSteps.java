@@ -39,12 +39,17 @@ final class PouredSteps {
         String fill = Grams.plain(mixture.volumeMl()) + " mL";
         double whole = mixture.massG();
         if (whole < list.balance.capacityG())
-            list.say(BASE, "Weigh a clean, dry vessel that holds well over " + fill + ", with its lid and stirrer, write its mass"
-                    + " down and tare.");
+            list.say(
+                    BASE,
+                    "Weigh a clean, dry vessel that holds well over " + fill
+                            + ", with its lid and stirrer, write its mass" + " down and tare.");
         else
-            list.say(BASE, "Take a clean, dry vessel that holds well over " + fill + ". Filled it is too heavy for this balance ("
-                    + Grams.plain(list.balance.capacityG())
-                    + " g): weigh each portion in a cup, pour it over, weigh the emptied cup, and top up what stuck to it.");
+            list.say(
+                    BASE,
+                    "Take a clean, dry vessel that holds well over " + fill
+                            + ". Filled it is too heavy for this balance ("
+                            + Grams.plain(list.balance.capacityG())
+                            + " g): weigh each portion in a cup, pour it over, weigh the emptied cup, and top up what stuck to it.");
         list.withBaseWords();
     }
 
@@ -87,7 +92,9 @@ final class PouredSteps {
     private void heat() {
         boolean heavy = mixture.massG() >= list.balance.capacityG();
         String balance = heavy ? " on a balance that can carry it" : "";
-        list.say(BASE, "Weigh the vessel with all that is in it, lid and stirrer" + balance + ", and write the mass down.");
+        list.say(
+                BASE,
+                "Weigh the vessel with all that is in it, lid and stirrer" + balance + ", and write the mass down.");
         OptionalDouble melt = list.facts.meltC();
         list.say(
                 BASE,
@@ -96,7 +103,9 @@ final class PouredSteps {
                 OptionalDouble.empty(),
                 Cautions.HOT);
         coolIntoWindow();
-        list.say(BASE, "Weigh the vessel again and give back the water that it lost, warm, until the mass is the one written down.");
+        list.say(
+                BASE,
+                "Weigh the vessel again and give back the water that it lost, warm, until the mass is the one written down.");
     }
 
     private void coolIntoWindow() {
@@ -117,7 +126,8 @@ final class PouredSteps {
                     "Let it cool to " + celsius(above) + " while stirring slowly, and no further: it thickens below.",
                     above,
                     OptionalDouble.empty(),
-                    "What is added now would be better off below " + celsius(below) + ": add it slowly, a little at a time.");
+                    "What is added now would be better off below " + celsius(below)
+                            + ": add it slowly, a little at a time.");
     }
 
     private void add(int place) {
@@ -150,7 +160,11 @@ final class PouredSteps {
         list.say(
                 ADD,
                 length + ", without drawing in air"
-                        + (i.settles() ? untilSet ? ", and go on stirring until pouring: it settles" : ", and go on stirring: it settles" : "")
+                        + (i.settles()
+                                ? untilSet
+                                        ? ", and go on stirring until pouring: it settles"
+                                        : ", and go on stirring: it settles"
+                                : "")
                         + ".",
                 OptionalDouble.empty(),
                 stir);
@@ -158,7 +172,10 @@ final class PouredSteps {
 
     private void finish() {
         if (mixture.massG() < list.balance.capacityG())
-            list.say(FINISH, "Check: all together should weigh " + Grams.plain(mixture.massG()) + " g more than the empty vessel.");
+            list.say(
+                    FINISH,
+                    "Check: all together should weigh " + Grams.plain(mixture.massG())
+                            + " g more than the empty vessel.");
         if (list.facts.degas()) list.say(FINISH, "Let the bubbles rise, or degas, before pouring.");
         if (list.recipe.base().family() == Family.LIQUID && !heated) {
             list.say(

@@ -74,7 +74,10 @@ final class StepList {
                 temperatureC,
                 minutes,
                 List.of(),
-                List.of(cautions).stream().map(StepList::sentence).filter(said::add).toList()));
+                List.of(cautions).stream()
+                        .map(StepList::sentence)
+                        .filter(said::add)
+                        .toList()));
     }
 
     /**
@@ -118,8 +121,16 @@ final class StepList {
         recipe.base().handling().stream().filter(said::add).forEach(handling::add);
         recipe.base().cautions().stream().filter(said::add).forEach(cautions::add);
         steps.add(new Step(
-                last.stage(), last.text(), last.weighing(), last.loadsG(), last.allowed(), last.volumeMl(),
-                last.temperatureC(), last.minutes(), handling, cautions));
+                last.stage(),
+                last.text(),
+                last.weighing(),
+                last.loadsG(),
+                last.allowed(),
+                last.volumeMl(),
+                last.temperatureC(),
+                last.minutes(),
+                handling,
+                cautions));
     }
 
     private static String sentence(String text) {

@@ -20,17 +20,25 @@ final class StockSteps {
         for (int k = 0; k < list.recipe.stocks().size(); k++) {
             Stock s = list.recipe.stocks().get(k);
             if (inHand.contains(s.id())) {
-                list.say(Step.Stage.STOCKS, "Fetch stock " + s.id() + ", which is made already, and "
-                        + rouse(s.ingredient()) + ".");
+                list.say(
+                        Step.Stage.STOCKS,
+                        "Fetch stock " + s.id() + ", which is made already, and " + rouse(s.ingredient()) + ".");
                 continue;
             }
             if (s.from().isPresent())
-                list.say(Step.Stage.STOCKS, upper(rouse(s.ingredient())) + " in stock " + s.from().get() + ".");
+                list.say(
+                        Step.Stage.STOCKS,
+                        upper(rouse(s.ingredient())) + " in stock " + s.from().get() + ".");
             else if (roused.add(s.ingredient())) rouseBottle(list, s.ingredient());
             boolean cured = WeighingOrder.castAndCured(list.recipe.base());
-            String bottle = cured ? "into a clean cup labelled " + s.id() + "." : "into a clean bottle labelled " + s.id() + ".";
+            String bottle = cured
+                    ? "into a clean cup labelled " + s.id() + "."
+                    : "into a clean bottle labelled " + s.id() + ".";
             list.weigh(Step.Stage.STOCKS, weighings.get(2 * k), bottle);
-            list.weigh(Step.Stage.STOCKS, weighings.get(2 * k + 1), cured ? "to it, in the cup." : "to it, into the bottle.");
+            list.weigh(
+                    Step.Stage.STOCKS,
+                    weighings.get(2 * k + 1),
+                    cured ? "to it, in the cup." : "to it, into the bottle.");
             mix(list, s, cured);
         }
     }

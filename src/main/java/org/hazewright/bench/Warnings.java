@@ -101,7 +101,8 @@ public final class Warnings {
             warnings.add(new Warning(
                     Warning.Kind.EXPIRED,
                     List.of(i.id()),
-                    i.name() + ", lot " + lot.number() + ", expired on " + lot.expires().orElseThrow()
+                    i.name() + ", lot " + lot.number() + ", expired on "
+                            + lot.expires().orElseThrow()
                             + ". Use a fresh one, or measure it again before relying on its figures."));
         }
     }
@@ -114,12 +115,14 @@ public final class Warnings {
         for (Ingredient i : facts.added())
             i.making().addBelowC().ifPresent(limit -> {
                 if (limit < least)
-                    warnings.add(new Warning(
-                            Warning.Kind.TEMPERATURE,
-                            List.of(i.id(), recipe.base().id()),
-                            i.name() + " should go in below " + Grams.plain(limit) + " °C, but " + recipe.base().name()
-                                    + " thickens below " + Grams.plain(least)
-                                    + " °C. Add it as cool as the gel allows, quickly, and check the phantom for streaks."));
+                    warnings.add(
+                            new Warning(
+                                    Warning.Kind.TEMPERATURE,
+                                    List.of(i.id(), recipe.base().id()),
+                                    i.name() + " should go in below " + Grams.plain(limit) + " °C, but "
+                                            + recipe.base().name()
+                                            + " thickens below " + Grams.plain(least)
+                                            + " °C. Add it as cool as the gel allows, quickly, and check the phantom for streaks."));
             });
     }
 
@@ -129,11 +132,12 @@ public final class Warnings {
             warnings.add(new Warning(
                     Warning.Kind.SETTLING,
                     List.of(i.id()),
-                    i.name() + " settles: " + switch (recipe.base().family()) {
-                        case LIQUID -> "stir without pause, and again before every measurement.";
-                        case GEL -> "stir until the gel is about to set, then cool it quickly.";
-                        case SILICONE, RESIN -> "stir until pouring and turn the mould while it thickens.";
-                    }));
+                    i.name() + " settles: "
+                            + switch (recipe.base().family()) {
+                                case LIQUID -> "stir without pause, and again before every measurement.";
+                                case GEL -> "stir until the gel is about to set, then cool it quickly.";
+                                case SILICONE, RESIN -> "stir until pouring and turn the mould while it thickens.";
+                            }));
     }
 
     private void hazards() {
@@ -142,10 +146,7 @@ public final class Warnings {
         hazard("Blood", Warnings::ofBlood, Cautions.BLOOD);
         hazard("Isocyanate", Warnings::holdsIsocyanate, Cautions.ISOCYANATE);
         if (WeighingOrder.castAndCured(recipe.base()))
-            hazard(
-                    "Uncured parts",
-                    i -> i.equals(recipe.base()) || isPartOf(recipe.base(), i),
-                    Cautions.HARDENER);
+            hazard("Uncured parts", i -> i.equals(recipe.base()) || isPartOf(recipe.base(), i), Cautions.HARDENER);
         if (new MakingFacts(recipe).meltC().isPresent()) hazard("Heating", recipe.base()::equals, Cautions.HOT);
     }
 
@@ -157,7 +158,8 @@ public final class Warnings {
     static boolean holdsIsocyanate(Ingredient i) {
         return i.id().toLowerCase(Locale.ROOT).contains("isocyanate")
                 || i.name().toLowerCase(Locale.ROOT).contains("isocyanate")
-                || i.cautions().stream().anyMatch(c -> c.toLowerCase(Locale.ROOT).contains("isocyanate"));
+                || i.cautions().stream()
+                        .anyMatch(c -> c.toLowerCase(Locale.ROOT).contains("isocyanate"));
     }
 
     private void hazard(String what, Predicate<Ingredient> whom, String text) {
@@ -170,7 +172,8 @@ public final class Warnings {
             warnings.add(new Warning(
                     Warning.Kind.HAZARD,
                     ids(named),
-                    what + " (" + named.stream().map(Ingredient::name).collect(Collectors.joining("; ")) + "): " + text));
+                    what + " (" + named.stream().map(Ingredient::name).collect(Collectors.joining("; ")) + "): "
+                            + text));
     }
 
     private static List<String> ids(List<Ingredient> ingredients) {

@@ -39,8 +39,8 @@ final class HeldBack {
     }
 
     private void cannotMeet(List<String> sentences) {
-        sentences.add("No recipe from this shelf meets every tolerance: the best possible worst miss is " + widths(possible)
-                + " half-widths.");
+        sentences.add("No recipe from this shelf meets every tolerance: the best possible worst miss is "
+                + widths(possible) + " half-widths.");
         floors(sentences);
         LeastWorstMiss least = searched.result().leastWorstMiss();
         List<Integer> pulling = pulling(least);
@@ -50,17 +50,19 @@ final class HeldBack {
             for (int j : pulling) (least.pointWeight()[j] > 0 ? high : low).add(name(points.get(j)));
             sentences.add(
                     high.isEmpty() || low.isEmpty()
-                            ? join(high.isEmpty() ? low : high) + (high.isEmpty() ? " come out too low together." : " come out too high together.")
+                            ? join(high.isEmpty() ? low : high)
+                                    + (high.isEmpty() ? " come out too low together." : " come out too high together.")
                             : "These targets conflict: " + join(high) + (high.size() > 1 ? " come" : " comes")
-                                    + " out too high while " + join(low) + (low.size() > 1 ? " come" : " comes") + " out too low.");
+                                    + " out too high while " + join(low) + (low.size() > 1 ? " come" : " comes")
+                                    + " out too low.");
         }
         relaxations(sentences, least);
         for (int j : pulling) {
             if (points.size() < 2) break;
             double without = worst(withoutPoint(j));
             if (without < possible - WORTH && (without <= 1 || without < 0.7 * possible))
-                sentences.add("Without the target " + name(points.get(j)) + " the worst miss would be " + widths(without)
-                        + " half-widths.");
+                sentences.add("Without the target " + name(points.get(j)) + " the worst miss would be "
+                        + widths(without) + " half-widths.");
         }
     }
 
@@ -80,7 +82,8 @@ final class HeldBack {
             double now = best.score().total();
             if (found.score() < 0.9 * now && found.worstMiss() < best.worstMiss() - WORTH)
                 sentences.add("With " + ordinal(searched.problem().limits().most(group) + 1) + " " + word(group) + " ("
-                        + names(found.members()) + ") the worst planned miss falls from " + widths(best.worstMiss()) + " to "
+                        + names(found.members()) + ") the worst planned miss falls from " + widths(best.worstMiss())
+                        + " to "
                         + widths(found.worstMiss()) + ".");
         }
     }
@@ -92,7 +95,8 @@ final class HeldBack {
             double base = p.wantedPerCm() - searched.problem().points().get(j).residual();
             if (base <= p.wantedPerCm() + p.tolerancePerCm()) continue;
             sentences.add("The base alone already " + (p.quantity() == Point.Quantity.MUA ? "absorbs " : "scatters ")
-                    + Figures.significant(base, 3) + " /cm at " + Figures.plain(p.wavelengthNm()) + " nm, above the target "
+                    + Figures.significant(base, 3) + " /cm at " + Figures.plain(p.wavelengthNm())
+                    + " nm, above the target "
                     + Figures.significant(p.wantedPerCm(), 3) + ".");
         }
     }
@@ -111,14 +115,16 @@ final class HeldBack {
             Ingredient i = searched.candidates().ingredients.get(k);
             double with = worst(withoutUpper(k));
             if (i.maxGPerMl().isPresent() && with < possible - WORTH)
-                sentences.add("More " + i.id() + " than its limit of " + Figures.significant(i.maxGPerMl().getAsDouble(), 3)
-                        + " g/mL would bring the worst miss from " + widths(possible) + " to " + widths(with) + ".");
+                sentences.add("More " + i.id() + " than its limit of "
+                        + Figures.significant(i.maxGPerMl().getAsDouble(), 3) + " g/mL would bring the worst miss from "
+                        + widths(possible) + " to " + widths(with) + ".");
         }
         if (least.volumeWeight() > 1e-9 && searched.problem().limits().addedVolume() < 1) {
             double with = worst(withVolume());
             if (with < possible - WORTH)
                 sentences.add("With less base than its least share of "
-                        + Figures.significant(100 * (1 - searched.problem().limits().addedVolume()), 3)
+                        + Figures.significant(
+                                100 * (1 - searched.problem().limits().addedVolume()), 3)
                         + " % the worst miss falls from " + widths(possible) + " to " + widths(with) + ".");
         }
     }
@@ -154,7 +160,12 @@ final class HeldBack {
         columns.set(
                 k,
                 new SetProblem.Candidate(
-                        c.effect(), c.ingredientTerm(), c.weighingTerm(), Double.POSITIVE_INFINITY, c.specificVolume(), c.group()));
+                        c.effect(),
+                        c.ingredientTerm(),
+                        c.weighingTerm(),
+                        Double.POSITIVE_INFINITY,
+                        c.specificVolume(),
+                        c.group()));
         return new SetProblem(p.points(), columns, p.limits());
     }
 
@@ -208,7 +219,9 @@ final class HeldBack {
     }
 
     private static String ordinal(int n) {
-        String[] words = {"", "a first", "a second", "a third", "a fourth", "a fifth", "a sixth", "a seventh", "an eighth"};
+        String[] words = {
+            "", "a first", "a second", "a third", "a fourth", "a fifth", "a sixth", "a seventh", "an eighth"
+        };
         return n < words.length ? words[n] : "a " + n + "th";
     }
 }
