@@ -4,6 +4,7 @@ import java.util.LinkedHashMap;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import org.hazewright.mixture.Item;
 import org.hazewright.mixture.Mixture;
 import org.hazewright.shelf.Form;
 import org.hazewright.shelf.Ingredient;
@@ -24,7 +25,7 @@ final class CuredSteps {
         this.mixture = Mixture.of(list.recipe);
         Map<Ingredient, Double> parts = new LinkedHashMap<>();
         mixture.massesG().forEach((i, g) -> {
-            if (MakingFacts.isBase(list.recipe, org.hazewright.mixture.Item.neat(i, g))) parts.put(i, g);
+            if (MakingFacts.isBase(list.recipe, Item.neat(i, g))) parts.put(i, g);
         });
         this.hardener = WeighingOrder.hardenerOf(list.recipe.base(), parts);
     }
@@ -54,12 +55,7 @@ final class CuredSteps {
                         + ". Weigh everything in it by difference; nothing so thick can be pipetted.",
                 Cautions.HARDENER);
         list.withBaseWords();
-        if (mixture.massG() >= list.balance.capacityG())
-            list.say(
-                    BASE,
-                    "Filled, the cup is too heavy for this balance (" + Grams.plain(list.balance.capacityG())
-                            + " g): weigh each portion in a cup of its own, scrape it over, weigh the emptied cup, and top up what"
-                            + " stuck to it.");
+        if (list.heavy()) list.say(BASE, list.portions());
     }
 
     private void into(int place) {
@@ -134,8 +130,7 @@ final class CuredSteps {
         double hard = 0;
         for (var entry : mixture.massesG().entrySet()) {
             if (entry.getKey().equals(last)) hard += entry.getValue();
-            else if (MakingFacts.isBase(
-                    list.recipe, org.hazewright.mixture.Item.neat(entry.getKey(), entry.getValue())))
+            else if (MakingFacts.isBase(list.recipe, Item.neat(entry.getKey(), entry.getValue())))
                 rest += entry.getValue();
         }
         return "Base to hardener is 100 : " + Grams.plain(100 * hard / rest) + " by mass"
@@ -161,6 +156,6 @@ final class CuredSteps {
                             + ", level and covered.",
                     at,
                     hours.isPresent() ? OptionalDouble.of(60 * hours.getAsDouble()) : OptionalDouble.empty());
-        list.say(FINISH, "Label it: recipe, date, name.");
+        list.say(FINISH, "Label it: recipe, date, name, and that it is for phantoms only.");
     }
 }

@@ -14,12 +14,16 @@ import org.hazewright.shelf.Ingredient;
  * The choice among ways of dosing: begin with the most precise way for every ingredient, then take simpler ways, simplest first,
  * for as long as the score stays alike; last, move single doses by a few of the balance's last digits while that lowers the score.
  *
- * <p>Scores are alike within {@value #ALIKE} of one squared tolerance half-width, or half a per cent of the score: less than the
- * figures it is made of are known to.
+ * <p>A simpler way of dosing one ingredient counts as alike when it adds no more than {@value #ALIKE} squared half-widths of
+ * tolerance, or half a per cent of the score, whichever is more: under a twentieth of a half-width in quadrature, which no
+ * measurement of the finished phantom can show.
  */
 final class Planning {
-    private static final double ALIKE = 2e-3;
-    private static final double ALIKE_RELATIVE = 5e-3;
+    private static final double ALIKE = 0.002;
+    private static final double ALIKE_RELATIVE = 0.005;
+
+    /** A last digit is moved for no less, in squared half-widths: grams that do next to nothing stay as they are. */
+    private static final double WORTH_A_DIGIT = 1e-4;
 
     /** Most calls of the judge. */
     private static final int CALLS = 39;
@@ -94,7 +98,7 @@ final class Planning {
     }
 
     private double simplify(List<Dose> chosen, List<List<Dose>> ways, double best, int[] steps) {
-        double limit = best + Math.max(ALIKE, ALIKE_RELATIVE * Math.abs(best));
+        double allowance = Math.max(ALIKE, ALIKE_RELATIVE * Math.abs(best));
         double score = best;
         Comparator<Dose> simplest =
                 Comparator.<Dose>comparingInt(d -> d.weighings(balance)).thenComparingDouble(Dose::leftG);
@@ -105,7 +109,7 @@ final class Planning {
                 chosen.set(k, way);
                 Optional<Recipe> recipe = assembly.recipe(chosen, steps);
                 double s = recipe.isPresent() ? score(recipe.get()) : Double.POSITIVE_INFINITY;
-                if (s <= limit) {
+                if (s <= score + allowance) {
                     score = s;
                     break;
                 }
@@ -144,7 +148,7 @@ final class Planning {
             Optional<Recipe> recipe =
                     Dilutions.weighable(g, balance) ? assembly.recipe(chosen, steps) : Optional.empty();
             double s = recipe.isPresent() ? score(recipe.get()) : Double.POSITIVE_INFINITY;
-            if (!(s < best * (1 - 1e-6))) {
+            if (!(s < best - WORTH_A_DIGIT)) {
                 steps[k] -= direction;
                 break;
             }

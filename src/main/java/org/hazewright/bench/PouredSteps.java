@@ -9,6 +9,7 @@ import org.hazewright.shelf.Family;
 import org.hazewright.shelf.Form;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Making;
+import org.hazewright.shelf.Part;
 
 /** Liquid and gel: mixed in one vessel, with a gel heated and cooled into its window before anything sensitive goes in. */
 final class PouredSteps {
@@ -37,19 +38,13 @@ final class PouredSteps {
 
     private void vessel() {
         String fill = Grams.plain(mixture.volumeMl()) + " mL";
-        double whole = mixture.massG();
-        if (whole < list.balance.capacityG())
+        if (list.heavy())
+            list.say(BASE, "Take a clean, dry vessel that holds well over " + fill + ". " + list.portions());
+        else
             list.say(
                     BASE,
                     "Weigh a clean, dry vessel that holds well over " + fill
                             + ", with its lid and stirrer, write its mass" + " down and tare.");
-        else
-            list.say(
-                    BASE,
-                    "Take a clean, dry vessel that holds well over " + fill
-                            + ". Filled it is too heavy for this balance ("
-                            + Grams.plain(list.balance.capacityG())
-                            + " g): weigh each portion in a cup, pour it over, weigh the emptied cup, and top up what stuck to it.");
         list.withBaseWords();
     }
 
@@ -84,17 +79,16 @@ final class PouredSteps {
 
     /** Preservatives and other modifiers that heat does not harm dissolve in the cold liquid. */
     private static boolean early(Ingredient i) {
-        return i.part() == org.hazewright.shelf.Part.MODIFIER
+        return i.part() == Part.MODIFIER
                 && i.making().addBelowC().isEmpty()
                 && !i.making().addLast();
     }
 
     private void heat() {
-        boolean heavy = mixture.massG() >= list.balance.capacityG();
-        String balance = heavy ? " on a balance that can carry it" : "";
+        String balance = list.heavy() ? " on a balance that can carry it" : "";
         list.say(
                 BASE,
-                "Weigh the vessel with all that is in it, lid and stirrer" + balance + ", and write the mass down.");
+                "Weigh the vessel with lid, stirrer and all that is in it" + balance + ", and write the mass down.");
         OptionalDouble melt = list.facts.meltC();
         list.say(
                 BASE,
@@ -120,14 +114,18 @@ final class PouredSteps {
                             + (above.isPresent() ? ", but keep it above " + celsius(above) : "") + ".",
                     below,
                     OptionalDouble.empty());
-        else
+        else {
+            OptionalDouble hold = OptionalDouble.of(Math.max(
+                    above.getAsDouble(), list.facts.ofBase(Making::pourC).orElse(0)));
             list.say(
                     BASE,
-                    "Let it cool to " + celsius(above) + " while stirring slowly, and no further: it thickens below.",
-                    above,
+                    "Let it cool to " + celsius(hold) + " while stirring slowly, and no further: it thickens below "
+                            + celsius(above) + ".",
+                    hold,
                     OptionalDouble.empty(),
                     "What is added now would be better off below " + celsius(below)
                             + ": add it slowly, a little at a time.");
+        }
     }
 
     private void add(int place) {
@@ -135,7 +133,7 @@ final class PouredSteps {
         Ingredient i = w.ingredient();
         OptionalDouble stir = i.making().stirMin();
         if (w.from().isPresent()) {
-            list.say(ADD, "Shake stock " + w.label() + " just before drawing.");
+            list.say(ADD, StockSteps.shake(w.label(), i));
             list.weigh(ADD, w, "into the vessel.");
         } else if (i.form() == Form.POWDER && i.making().sonicateMin().isPresent()) {
             OptionalDouble min = i.making().sonicateMin();
@@ -149,7 +147,7 @@ final class PouredSteps {
                     min,
                     Cautions.ULTRASOUND);
         } else {
-            if (i.part() != org.hazewright.shelf.Part.MODIFIER) StockSteps.rouseBottle(list, i);
+            if (i.part() != Part.MODIFIER) StockSteps.rouseBottle(list, i);
             list.weigh(
                     ADD,
                     w,
@@ -171,7 +169,7 @@ final class PouredSteps {
     }
 
     private void finish() {
-        if (mixture.massG() < list.balance.capacityG())
+        if (!list.heavy())
             list.say(
                     FINISH,
                     "Check: all together should weigh " + Grams.plain(mixture.massG())
@@ -183,6 +181,7 @@ final class PouredSteps {
                     list.facts.settles()
                             ? "Keep stirring until and while it is measured; cover it against dust and drying."
                             : "Cover it against dust and drying, and stir again before it is measured.");
+            label();
             return;
         }
         OptionalDouble pour = list.facts.ofBase(Making::pourC);
@@ -201,7 +200,11 @@ final class PouredSteps {
                             + (hours.isPresent() ? " for " + Grams.plain(hours.getAsDouble()) + " h" : "") + ".",
                     set,
                     hours.isPresent() ? OptionalDouble.of(60 * hours.getAsDouble()) : OptionalDouble.empty());
-        list.say(FINISH, "Label it: recipe, date, name.");
+        label();
+    }
+
+    private void label() {
+        list.say(FINISH, "Label it: recipe, date, name, and that it is for phantoms only.");
     }
 
     static String celsius(OptionalDouble c) {

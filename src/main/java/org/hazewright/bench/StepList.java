@@ -8,9 +8,9 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.Set;
-import java.util.stream.Collectors;
 import org.hazewright.brief.Balance;
 import org.hazewright.mixture.Item;
+import org.hazewright.mixture.Mixture;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.shelf.Form;
 import org.hazewright.shelf.Ingredient;
@@ -46,12 +46,19 @@ final class StepList {
         return Weighing.of(recipe).get(2 * recipe.stocks().size() + item);
     }
 
-    /** Where each item stands that is a part of the base, or, with {@code false}, each that is not. */
-    List<Integer> places(boolean ofBase) {
-        List<Integer> places = new ArrayList<>();
-        for (int k = 0; k < recipe.items().size(); k++)
-            if (MakingFacts.isBase(recipe, recipe.items().get(k)) == ofBase) places.add(k);
-        return places;
+    /**
+     * Whether vessel and fill together are too much for the balance; a vessel weighs up to two thirds of what it holds (common
+     * practice).
+     */
+    boolean heavy() {
+        return Mixture.of(recipe).massG() > 0.6 * balance.capacityG();
+    }
+
+    /** What to do when it is. */
+    String portions() {
+        return "Filled, it is too heavy for this balance (" + Grams.plain(balance.capacityG())
+                + " g): weigh each portion in a cup of its own, empty it into the vessel, weigh the cup again, and top up what stuck"
+                + " to it.";
     }
 
     Item item(int place) {
@@ -80,16 +87,21 @@ final class StepList {
                         .toList()));
     }
 
-    /**
-     * A step that weighs: {@code "Weigh " + grams and name + end}, e.g. end "into the vessel.". Handling and cautions of the
-     * ingredient come with it the first time that it is met.
-     */
+    /** {@link #weigh(Step.Stage, String, Weighing, String)} with "Weigh". */
     void weigh(Step.Stage stage, Weighing w, String end) {
+        weigh(stage, "Weigh", w, end);
+    }
+
+    /**
+     * A step that weighs: verb, grams and name, end, as in "Weigh", 1.410 g of Carbon ink, "into the vessel.". Handling and
+     * cautions of the ingredient come with it the first time that it is met.
+     */
+    void weigh(Step.Stage stage, String verb, Weighing w, String end) {
         List<Double> loads = Grams.loads(w.massG(), balance);
-        String text = "Weigh " + Grams.shown(w.massG(), balance) + " of " + named(w) + " " + end;
+        String text = verb + " " + Grams.shown(w.massG(), balance) + " of " + named(w) + " " + end;
         if (loads.size() > 1)
-            text += " It takes " + loads.size() + " loads: "
-                    + loads.stream().map(g -> Grams.shown(g, balance)).collect(Collectors.joining(", ")) + ".";
+            text += " It takes " + loads.size() + " loads of about " + Grams.plain(Math.rint(loads.get(0)))
+                    + " g: write each down, and end with the one that completes the sum.";
         Ingredient i = w.ingredient();
         boolean liquid = w.from().isEmpty() && i.form() == Form.LIQUID;
         List<String> handling = new ArrayList<>();

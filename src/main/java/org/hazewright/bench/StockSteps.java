@@ -20,35 +20,26 @@ final class StockSteps {
         for (int k = 0; k < list.recipe.stocks().size(); k++) {
             Stock s = list.recipe.stocks().get(k);
             if (inHand.contains(s.id())) {
-                list.say(
-                        Step.Stage.STOCKS,
-                        "Fetch stock " + s.id() + ", which is made already, and " + rouse(s.ingredient()) + ".");
+                list.say(Step.Stage.STOCKS, "Fetch stock " + s.id() + ", which is made already.");
                 continue;
             }
-            if (s.from().isPresent())
-                list.say(
-                        Step.Stage.STOCKS,
-                        upper(rouse(s.ingredient())) + " in stock " + s.from().get() + ".");
+            if (s.from().isPresent()) list.say(Step.Stage.STOCKS, shake(s.from().get(), s.ingredient()));
             else if (roused.add(s.ingredient())) rouseBottle(list, s.ingredient());
             boolean cured = WeighingOrder.castAndCured(list.recipe.base());
             String bottle = cured
                     ? "into a clean cup labelled " + s.id() + "."
                     : "into a clean bottle labelled " + s.id() + ".";
             list.weigh(Step.Stage.STOCKS, weighings.get(2 * k), bottle);
-            list.weigh(
-                    Step.Stage.STOCKS,
-                    weighings.get(2 * k + 1),
-                    cured ? "to it, in the cup." : "to it, into the bottle.");
+            list.weigh(Step.Stage.STOCKS, "Add", weighings.get(2 * k + 1), "to it.");
             mix(list, s, cured);
         }
     }
 
-    private static String upper(String s) {
-        return Character.toUpperCase(s.charAt(0)) + s.substring(1);
-    }
-
-    private static String rouse(Ingredient i) {
-        return i.settles() ? "shake it hard: it settles" : "shake it";
+    /** Before a stock is drawn from. */
+    static String shake(String stock, Ingredient i) {
+        return i.settles()
+                ? "Shake stock " + stock + " hard and draw from it at once: it settles."
+                : "Shake stock " + stock + " just before drawing from it.";
     }
 
     /** An ink or a suspension is stirred up in its own bottle; a powder is not. */

@@ -2,11 +2,14 @@ package org.hazewright.cli;
 
 import java.io.PrintWriter;
 import java.nio.file.Path;
+import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.concurrent.Callable;
 import org.hazewright.bench.Answer;
 import org.hazewright.bench.Answering;
+import org.hazewright.bench.Warning;
+import org.hazewright.bench.Warnings;
 import org.hazewright.brief.Brief;
 import org.hazewright.files.BriefReader;
 import org.hazewright.files.RecipeWriter;
@@ -54,7 +57,7 @@ final class DesignCommand implements Callable<Integer> {
         Shelf shelf = shared.shelf();
         Brief wanted = BriefReader.read(brief, shared.tissueSpectra());
         Answer answer = Answering.to(wanted, shelf, alternatives);
-        List<String> warnings = List.of();
+        List<Warning> warnings = Warnings.of(answer.recipe(), LocalDate.now());
         Path folder = out != null ? out : brief.toAbsolutePath().getParent();
         List<Path> written = write(answer, folder);
         if (shared.json) DesignJson.of(answer).print(text);

@@ -44,8 +44,7 @@ final class BriefColumns {
     /** The mixture of base and amounts in g per mL, as {@code volumeMl} of it. */
     Mixture mixture(Map<Ingredient, Double> concentrationGPerMl, double volumeMl) {
         double added = 0;
-        for (var c : concentrationGPerMl.entrySet())
-            added += c.getValue() / c.getKey().densityGPerMl();
+        for (var c : concentrationGPerMl.entrySet()) added += c.getValue() / c.getKey().densityGPerMl();
         double baseG = baseDensity * Math.max(0, 1 - added) * volumeMl;
         Map<Ingredient, Double> masses = new LinkedHashMap<>();
         candidates.baseParts.forEach((part, share) -> masses.put(part, share * baseG));
@@ -105,9 +104,16 @@ final class BriefColumns {
         List<double[]> slopes = new ArrayList<>();
         double[] residual = new double[base.length];
         for (int j = 0; j < base.length; j++) residual[j] = points.get(j).wantedPerCm() - base[j];
-        for (int k = 0; k < kappas.size(); k++)
-            slopes.add(displaced(candidates.ingredients.get(k), kappas.get(k), base));
-        return problem(candidates.ingredients, kappas, slopes, residual, 1);
+        for (int k = 0; k < kappas.size(); k++) slopes.add(displaced(candidates.ingredients.get(k), kappas.get(k), base));
+        SearchLimits l = brief.limits();
+        SetProblem.Limits limits = new SetProblem.Limits(
+                l.maxAbsorbers(),
+                l.maxScatterers(),
+                l.maxModifiers(),
+                l.maxAbsorbers() + l.maxScatterers() + l.maxModifiers(),
+                addedVolume(),
+                exclusive(candidates.ingredients));
+        return problem(candidates.ingredients, kappas, slopes, residual, 1, limits);
     }
 
     /**
@@ -131,7 +137,9 @@ final class BriefColumns {
             kappas.add(kappa);
             slopes.add(slope);
         }
-        return problem(members, kappas, slopes, residual, edge);
+        int count = members.size(); // the set is chosen: only amounts are limited here
+        SetProblem.Limits free = new SetProblem.Limits(count, count, count, count, addedVolume(), List.of());
+        return problem(members, kappas, slopes, residual, edge, free);
     }
 
     /** Whether an ingredient changes what the others do: by crowding, or by enough volume to move the host index. */
@@ -200,14 +208,18 @@ final class BriefColumns {
     /** Most of an ingredient in g/mL: its own limit, and where its crowding model ends. */
     private static double upper(Ingredient i) {
         double upper = i.maxGPerMl().orElse(Double.POSITIVE_INFINITY);
-        if (i.scattering().orElse(null) instanceof Scattering.MieParticles mie
-                && !(mie.crowding() instanceof Crowding.None))
+        if (i.scattering().orElse(null) instanceof Scattering.MieParticles mie && !(mie.crowding() instanceof Crowding.None))
             upper = Math.min(upper, 0.999 * crowdLimit(mie) * i.densityGPerMl() / mie.volumeFraction());
         return upper;
     }
 
     private SetProblem problem(
-            List<Ingredient> members, List<double[]> kappas, List<double[]> slopes, double[] residual, double edge) {
+            List<Ingredient> members,
+            List<double[]> kappas,
+            List<double[]> slopes,
+            double[] residual,
+            double edge,
+            SetProblem.Limits limits) {
         List<SetProblem.Point> rows = new ArrayList<>();
         for (int j = 0; j < residual.length; j++) {
             Point p = points.get(j);
@@ -230,18 +242,12 @@ final class BriefColumns {
             columns.add(new SetProblem.Candidate(
                     slopes.get(k), unknown, weighing, upper(i), 1 / i.densityGPerMl(), group(i)));
         }
-        SearchLimits limits = brief.limits();
-        double leastBase = Math.max(candidates.base.leastShare(), limits.leastBaseShare());
-        return new SetProblem(
-                rows,
-                columns,
-                new SetProblem.Limits(
-                        limits.maxAbsorbers(),
-                        limits.maxScatterers(),
-                        limits.maxModifiers(),
-                        limits.maxAbsorbers() + limits.maxScatterers() + limits.maxModifiers(),
-                        1 - leastBase,
-                        exclusive(members)));
+        return new SetProblem(rows, columns, limits);
+    }
+
+    /** Share of the volume that what is added may take. */
+    private double addedVolume() {
+        return 1 - Math.max(candidates.base.leastShare(), brief.limits().leastBaseShare());
     }
 
     private static SetProblem.Group group(Ingredient i) {

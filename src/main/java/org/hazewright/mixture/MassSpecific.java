@@ -1,10 +1,8 @@
 package org.hazewright.mixture;
 
-import java.util.Optional;
 import org.hazewright.optics.Crowding;
 import org.hazewright.optics.Index;
 import org.hazewright.optics.ParticleOptics;
-import org.hazewright.optics.Refusal;
 import org.hazewright.shelf.Absorption;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Scattering;
@@ -59,24 +57,18 @@ public record MassSpecific(double kappaA, double kappaMus, double kappaMusp) {
         return new MassSpecific(kappaA, kappaMus, kappaMusp);
     }
 
-    /** Why an ingredient has no figures at a wavelength in nm and a temperature in °C; empty when it has. */
-    public static Optional<String> gap(Ingredient i, double nm, double temperatureC) {
-        try {
-            i.absorption().ifPresent(a -> a.kappaCm2PerG(nm));
-            i.index().ifPresent(m -> m.index().at(nm, temperatureC));
-            i.scattering().ifPresent(s -> {
-                if (s instanceof Scattering.MieParticles mie)
-                    mie.particle().index().at(nm, temperatureC);
-                else if (s instanceof Scattering.PowerLaw law) law.muspCm2PerG(nm);
-                else if (s instanceof Scattering.Tabulated table) {
-                    table.muspCm2PerG(nm);
-                    table.gAt(nm);
-                }
-            });
-            return Optional.empty();
-        } catch (Refusal refusal) {
-            return Optional.of(refusal.getMessage());
-        }
+    /** Refuses a wavelength in nm that an ingredient's figures do not reach, naming the table and its range. */
+    public static void requireFigures(Ingredient i, double nm, double temperatureC) {
+        i.absorption().ifPresent(a -> a.table().at(nm));
+        i.index().ifPresent(m -> m.index().at(nm, temperatureC));
+        i.scattering().ifPresent(s -> {
+            if (s instanceof Scattering.MieParticles mie) mie.particle().index().at(nm, temperatureC);
+            else if (s instanceof Scattering.PowerLaw law) law.muspCm2PerG(nm);
+            else if (s instanceof Scattering.Tabulated table) {
+                table.muspCm2PerG(nm);
+                table.gAt(nm);
+            }
+        });
     }
 
     /** Share of an ingredient's volume that is Mie particles; 0 without. */

@@ -4,7 +4,6 @@ import java.util.Arrays;
 import java.util.Collections;
 import java.util.LinkedHashMap;
 import java.util.Map;
-import java.util.Optional;
 import java.util.function.BiConsumer;
 import org.hazewright.optics.Refusal;
 import org.hazewright.shelf.Ingredient;
@@ -50,11 +49,13 @@ public final class Sweep {
     public static Sweep within(Mixture mixture, double[] wavelengthsNm, BiConsumer<Double, String> gap) {
         double[] reached = Arrays.stream(wavelengthsNm)
                 .filter(nm -> {
-                    Optional<String> why = mixture.massesG().keySet().stream()
-                            .flatMap(i -> MassSpecific.gap(i, nm, mixture.temperatureC()).stream())
-                            .findFirst();
-                    why.ifPresent(words -> gap.accept(nm, words));
-                    return why.isEmpty();
+                    try {
+                        mixture.massesG().keySet().forEach(i -> MassSpecific.requireFigures(i, nm, mixture.temperatureC()));
+                        return true;
+                    } catch (Refusal refusal) {
+                        gap.accept(nm, refusal.getMessage());
+                        return false;
+                    }
                 })
                 .toArray();
         return of(mixture, reached);
