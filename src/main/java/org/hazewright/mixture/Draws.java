@@ -26,16 +26,25 @@ public final class Draws {
     }
 
     public static Draws of(Recipe recipe, double[] wavelengthsNm, double capacityG, int count, long seed) {
+        return of(new Unknowns(recipe, wavelengthsNm, capacityG), count, seed);
+    }
+
+    /** With coefficients as in a mixture that holds the same ingredients, at its wavelengths. */
+    public static Draws of(Recipe recipe, Sweep sweep, double capacityG, int count, long seed) {
+        return of(new Unknowns(recipe, sweep, capacityG), count, seed);
+    }
+
+    private static Draws of(Unknowns x, int count, long seed) {
         if (count < 100 || count > 10_000_000)
             throw new Refusal("A Monte Carlo of " + count + " draws is asked for; it must be 100 to 10 000 000.");
-        Unknowns x = new Unknowns(recipe, wavelengthsNm, capacityG);
-        double[][] values = new double[2 * wavelengthsNm.length][count];
+        int wavelengths = x.wavelengthsNm.length;
+        double[][] values = new double[2 * wavelengths][count];
         int blocks = (count + BLOCK - 1) / BLOCK;
         IntStream.range(0, blocks)
                 .parallel()
                 .forEach(b -> new Block(x, new SplittableRandom(seed * 0x9E3779B97F4A7C15L + b))
                         .fill(values, b * BLOCK, Math.min(count, (b + 1) * BLOCK)));
-        return new Draws(count, wavelengthsNm.length, values);
+        return new Draws(count, wavelengths, values);
     }
 
     /** One block's work space and its draws. */
@@ -118,8 +127,7 @@ public final class Draws {
     public double[] interval95(boolean scattering, int wavelength) {
         double[] sorted = of(scattering, wavelength).clone();
         Arrays.sort(sorted);
-        return new double[] {
-            sorted[(int) Math.floor(0.025 * (count - 1))], sorted[(int) Math.ceil(0.975 * (count - 1))]
+        return new double[] {sorted[(int) Math.floor(0.025 * (count - 1))], sorted[(int) Math.ceil(0.975 * (count - 1))]
         };
     }
 
@@ -131,8 +139,7 @@ public final class Draws {
         int inside = 0;
         for (int draw = 0; draw < count; draw++) {
             boolean ok = true;
-            for (int p = 0; p < low.length && ok; p++)
-                ok = !(values[p][draw] < low[p]) && !(values[p][draw] > high[p]);
+            for (int p = 0; p < low.length && ok; p++) ok = !(values[p][draw] < low[p]) && !(values[p][draw] > high[p]);
             if (ok) inside++;
         }
         return (double) inside / count;
