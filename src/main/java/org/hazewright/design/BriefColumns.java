@@ -44,7 +44,8 @@ final class BriefColumns {
     /** The mixture of base and amounts in g per mL, as {@code volumeMl} of it. */
     Mixture mixture(Map<Ingredient, Double> concentrationGPerMl, double volumeMl) {
         double added = 0;
-        for (var c : concentrationGPerMl.entrySet()) added += c.getValue() / c.getKey().densityGPerMl();
+        for (var c : concentrationGPerMl.entrySet())
+            added += c.getValue() / c.getKey().densityGPerMl();
         double baseG = baseDensity * Math.max(0, 1 - added) * volumeMl;
         Map<Ingredient, Double> masses = new LinkedHashMap<>();
         candidates.baseParts.forEach((part, share) -> masses.put(part, share * baseG));
@@ -104,7 +105,8 @@ final class BriefColumns {
         List<double[]> slopes = new ArrayList<>();
         double[] residual = new double[base.length];
         for (int j = 0; j < base.length; j++) residual[j] = points.get(j).wantedPerCm() - base[j];
-        for (int k = 0; k < kappas.size(); k++) slopes.add(displaced(candidates.ingredients.get(k), kappas.get(k), base));
+        for (int k = 0; k < kappas.size(); k++)
+            slopes.add(displaced(candidates.ingredients.get(k), kappas.get(k), base));
         SearchLimits l = brief.limits();
         SetProblem.Limits limits = new SetProblem.Limits(
                 l.maxAbsorbers(),
@@ -208,7 +210,8 @@ final class BriefColumns {
     /** Most of an ingredient in g/mL: its own limit, and where its crowding model ends. */
     private static double upper(Ingredient i) {
         double upper = i.maxGPerMl().orElse(Double.POSITIVE_INFINITY);
-        if (i.scattering().orElse(null) instanceof Scattering.MieParticles mie && !(mie.crowding() instanceof Crowding.None))
+        if (i.scattering().orElse(null) instanceof Scattering.MieParticles mie
+                && !(mie.crowding() instanceof Crowding.None))
             upper = Math.min(upper, 0.999 * crowdLimit(mie) * i.densityGPerMl() / mie.volumeFraction());
         return upper;
     }

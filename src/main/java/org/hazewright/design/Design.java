@@ -80,12 +80,12 @@ public final class Design {
                 .thenComparing(o -> String.join(",", new java.util.TreeSet<>(o.ids()))));
         for (Searched s : searched) if (s.candidates.base.equals(options.get(0).base())) leading = s;
         List<String> limits = new HeldBack(brief, leading, options.get(0), bestPossible).sentences();
-        long admissible = searched.stream().mapToLong(s -> s.result.admissible()).sum();
+        long admissible =
+                searched.stream().mapToLong(s -> s.result.admissible()).sum();
         long solved = searched.stream().mapToLong(s -> s.result.solved()).sum();
         long cut = searched.stream().mapToLong(s -> s.result.cut()).sum();
         boolean proven = searched.stream().allMatch(s -> s.result.proven());
-        return new Finding(
-                brief, shelf, options, bestPossible, limits, leftOut, admissible, solved, cut, proven);
+        return new Finding(brief, shelf, options, bestPossible, limits, leftOut, admissible, solved, cut, proven);
     }
 
     /** The same option again with every tolerance narrowed to {@code edge} of itself: room for rounding. */
@@ -100,8 +100,7 @@ public final class Design {
         BriefColumns columns = new BriefColumns(brief, shelf, candidates);
         SetProblem problem = columns.everything();
         double bases = brief.bases().size();
-        SetResult result = new SetSearch(problem)
-                .run(FINALISTS, stop, p -> progress.accept((done + share(p)) / bases));
+        SetResult result = new SetSearch(problem).run(FINALISTS, stop, p -> progress.accept((done + share(p)) / bases));
         return new Searched(candidates, columns, problem, result);
     }
 

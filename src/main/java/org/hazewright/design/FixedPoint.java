@@ -117,7 +117,8 @@ final class FixedPoint {
     /** Signed misses of the full model. */
     private double[] misses(Mixture mixture) {
         double[] values = columns.values(mixture);
-        for (int j = 0; j < values.length; j++) values[j] = columns.points().get(j).miss(values[j]);
+        for (int j = 0; j < values.length; j++)
+            values[j] = columns.points().get(j).miss(values[j]);
         return values;
     }
 
