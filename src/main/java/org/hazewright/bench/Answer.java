@@ -21,6 +21,7 @@ import org.hazewright.shelf.Ingredient;
  * @param chance share of Monte Carlo draws with every target inside its tolerance
  * @param budget first-order uncertainty by cause at the brief's wavelengths
  * @param limits plain sentences: what holds it back and what relaxing it would buy
+ * @param notes what a person should know of the choice of stocks
  * @param leftOut ingredients of the shelf that could not take part, and why
  */
 public record Answer(
@@ -37,7 +38,8 @@ public record Answer(
         List<String> limits,
         List<Alternative> alternatives,
         Map<String, String> leftOut,
-        SearchCount search) {
+        SearchCount search,
+        List<String> notes) {
 
     /** One wanted number and what is predicted for it, 1/cm: value, standard uncertainty, 95 % interval, miss in half-widths. */
     public record Predicted(Point point, double perCm, double uPerCm, double lowPerCm, double highPerCm, double miss) {

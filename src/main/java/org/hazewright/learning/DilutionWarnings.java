@@ -116,10 +116,8 @@ final class DilutionWarnings {
 
     private static String where(List<Extinction> hits, List<Extinction> all) {
         if (hits.size() == all.size() && all.size() > 1) return "all wavelengths";
-        String list = hits.stream()
-                .limit(4)
-                .map(e -> Figures.plain(e.wavelengthNm()))
-                .collect(Collectors.joining(", "));
+        String list =
+                hits.stream().limit(4).map(e -> Figures.plain(e.wavelengthNm())).collect(Collectors.joining(", "));
         if (hits.size() > 4) return hits.size() + " of " + all.size() + " wavelengths (" + list + ", …)";
         return list + " nm";
     }

@@ -28,17 +28,26 @@ public final class Draws {
     }
 
     public static Draws of(Recipe recipe, double[] wavelengthsNm, double capacityG, int count, long seed) {
+        return of(new Unknowns(recipe, wavelengthsNm, capacityG), count, seed);
+    }
+
+    /** With coefficients as in a mixture that holds the same ingredients, at its wavelengths. */
+    public static Draws of(Recipe recipe, Sweep sweep, double capacityG, int count, long seed) {
+        return of(new Unknowns(recipe, sweep, capacityG), count, seed);
+    }
+
+    private static Draws of(Unknowns x, int count, long seed) {
         if (count < 100 || count > 10_000_000)
             throw new Refusal("A Monte Carlo of " + count + " draws is asked for; it must be 100 to 10 000 000.");
-        Unknowns x = new Unknowns(recipe, wavelengthsNm, capacityG);
-        double[][] values = new double[2 * wavelengthsNm.length][count];
+        int wavelengths = x.wavelengthsNm.length;
+        double[][] values = new double[2 * wavelengths][count];
         SplittableRandom root = new SplittableRandom(seed);
         SplittableRandom[] generators = new SplittableRandom[(count + BLOCK - 1) / BLOCK];
         for (int b = 0; b < generators.length; b++) generators[b] = root.split();
         IntStream.range(0, generators.length)
                 .parallel()
                 .forEach(b -> new Block(x, generators[b]).fill(values, b * BLOCK, Math.min(count, (b + 1) * BLOCK)));
-        return new Draws(count, wavelengthsNm.length, values);
+        return new Draws(count, wavelengths, values);
     }
 
     /** One block's work space and its draws. */

@@ -42,8 +42,9 @@ public final class Mie {
 
     static void refuseOutsideDomain(double x, double n, double k) {
         if (!(x >= X_MIN && x <= X_MAX))
-            throw new Refusal("Size parameter x = πD n/λ is " + x + "; a sphere can be computed for x from 0.0001 to 20000."
-                    + " Check diameter and wavelength: both are in nm.");
+            throw new Refusal(
+                    "Size parameter x = πD n/λ is " + x + "; a sphere can be computed for x from 0.0001 to 20000."
+                            + " Check diameter and wavelength: both are in nm.");
         if (!(n >= N_MIN && n <= N_MAX))
             throw new Refusal("Refractive index of the sphere relative to its host is " + n
                     + "; it must lie between 0.2 and 10.");

@@ -52,7 +52,8 @@ public record Population(SizeDistribution sizes) {
             return new ParticleOptics(dilute.musPerCm() * factor, dilute.muspPerCm() * factor, dilute.muaPerCm());
         }
         HardSpheres spheres = key.c instanceof Crowding.PercusYevick ? new HardSpheres(key.phi) : null;
-        if (sizes instanceof SizeDistribution.Single s) return average(List.of(new double[] {s.diameterNm(), 1}), key, spheres);
+        if (sizes instanceof SizeDistribution.Single s)
+            return average(List.of(new double[] {s.diameterNm(), 1}), key, spheres);
         ParticleOptics before = null;
         for (int n = 32; n <= 1 << 16; n *= 2) {
             ParticleOptics now = average(nodes(n), key, spheres);
@@ -109,7 +110,10 @@ public record Population(SizeDistribution sizes) {
                 musp += area * e.qSca() * (1 - e.g());
             } else {
                 for (double[] p : gauss(2 * mie.orders() + 32)) {
-                    double phase = 2 * Math.PI * mie.phaseFunction(p[0]) * p[1]
+                    double phase = 2
+                            * Math.PI
+                            * mie.phaseFunction(p[0])
+                            * p[1]
                             * spheres.structureFactor(4 * x * Math.sqrt((1 - p[0]) / 2));
                     mus += area * e.qSca() * phase;
                     musp += area * e.qSca() * phase * (1 - p[0]);
