@@ -72,7 +72,7 @@ public final class Answering {
     }
 
     private Answer answer(int alternatives) {
-        Finding finding = design.find();
+        Finding finding = design.find(alternatives == 0);
         List<Planned> planned = new ArrayList<>();
         double best = Double.POSITIVE_INFINITY;
         for (Option option : finding.options()) {

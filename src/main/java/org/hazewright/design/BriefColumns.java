@@ -119,29 +119,39 @@ final class BriefColumns {
     }
 
     /**
-     * The problem over some candidates, straightened at a state of the mixture: µ_j(c) ≈ µ_j(c₀) + Σ_i a_ij (c_i − c₀_i) with the
-     * slopes a_ij of the full model. Tolerances are narrowed to {@code edge} times themselves as limits, and left as they are in
-     * the score.
+     * The problem over some candidates, straightened at a state of the mixture: µ_j(c) ≈ µ_j(c₀) + Σ_i a_ij (c_i − c₀_i) with given
+     * slopes a_ij. Tolerances are narrowed to {@code edge} times themselves as limits, and left as they are in the score.
      */
-    SetProblem tangent(Map<Ingredient, Double> at, List<Ingredient> members, double edge) {
+    SetProblem tangent(Map<Ingredient, Double> at, List<Ingredient> members, List<double[]> slopes, double edge) {
         Mixture state = mixture(at, 1);
         double[] host = hostIndex(state);
         double[] here = values(state);
-        double[] base = baseValues(state);
         double[] residual = new double[here.length];
         for (int j = 0; j < here.length; j++) residual[j] = points.get(j).wantedPerCm() - here[j];
         List<double[]> kappas = new ArrayList<>();
-        List<double[]> slopes = new ArrayList<>();
-        for (Ingredient i : members) {
-            double[] kappa = kappa(i, host, state.crowdFraction(i));
-            double[] slope = movesOthers(i, at) ? slope(i, at, here) : displaced(i, kappa, base);
-            for (int j = 0; j < here.length; j++) residual[j] += slope[j] * at.get(i);
-            kappas.add(kappa);
-            slopes.add(slope);
+        for (int k = 0; k < members.size(); k++) {
+            Ingredient i = members.get(k);
+            kappas.add(kappa(i, host, state.crowdFraction(i)));
+            for (int j = 0; j < here.length; j++) residual[j] += slopes.get(k)[j] * at.get(i);
         }
         int count = members.size(); // the set is chosen: only amounts are limited here
         SetProblem.Limits free = new SetProblem.Limits(count, count, count, count, addedVolume(), List.of());
         return problem(members, kappas, slopes, residual, edge, free);
+    }
+
+    /** Slopes ∂µ_j/∂c_i of the full model at a state, cm²/g, base displacement included. */
+    List<double[]> slopes(Map<Ingredient, Double> at, List<Ingredient> members) {
+        Mixture state = mixture(at, 1);
+        double[] host = hostIndex(state);
+        double[] here = values(state);
+        double[] base = baseValues(state);
+        List<double[]> slopes = new ArrayList<>();
+        for (Ingredient i : members)
+            slopes.add(
+                    movesOthers(i, at)
+                            ? slope(i, at, here)
+                            : displaced(i, kappa(i, host, state.crowdFraction(i)), base));
+        return slopes;
     }
 
     /** Whether an ingredient changes what the others do: by crowding, or by enough volume to move the host index. */
