@@ -37,7 +37,12 @@ final class DistanceModels {
                 : 1;
         List<Integer> wanted = new ArrayList<>();
         for (int i = 0; i < n; i++) {
-            outside[i] = DiffusionRange.outside(medium, setUp.distancesMm().get(i), setUp.thicknessMm(), inTime);
+            outside[i] = DiffusionRange.outside(
+                    medium,
+                    setUp.distancesMm().get(i),
+                    setUp.thicknessMm(),
+                    inTime,
+                    setUp.convention().form());
             boolean packets = setUp.model() == SetUp.ModelChoice.PACKETS
                     || (setUp.model() == SetUp.ModelChoice.AUTO && outside[i] != null);
             if (packets) wanted.add(i);
