@@ -66,8 +66,9 @@ final class Assembly {
             double stockG = brought.getOrDefault(i, 0.0);
             if (stockG > MOST_LIQUID_FROM_STOCKS * whole) return Optional.empty();
             double g = balance.rounded(whole - stockG + extra.getOrDefault(i, 0.0));
-            if (g > 0) entries.add(new WeighingOrder.Entry<>(
-                    new Item(i, Optional.empty(), WeighingOrder.lotOf(i), g), i, true, g));
+            if (g > 0)
+                entries.add(new WeighingOrder.Entry<>(
+                        new Item(i, Optional.empty(), WeighingOrder.lotOf(i), g), i, true, g));
         }
         return Optional.of(new Recipe(
                 contents.title(),
@@ -108,7 +109,10 @@ final class Assembly {
     Recipe require(List<Dose> doses) {
         return recipe(doses, new int[doses.size()])
                 .orElseThrow(() -> new Refusal("The stocks for \"" + contents.title() + "\" bring more "
-                        + contents.shelf().liquidOf(contents.base()).map(Ingredient::name).orElse("liquid")
+                        + contents.shelf()
+                                .liquidOf(contents.base())
+                                .map(Ingredient::name)
+                                .orElse("liquid")
                         + " than the base can spare; make a larger batch or use a finer balance."));
     }
 }

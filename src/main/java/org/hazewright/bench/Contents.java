@@ -42,8 +42,9 @@ public record Contents(
             added += c / i.densityGPerMl();
         }
         if (!(added < 1))
-            throw new Refusal("What is added takes " + Grams.plain(100 * added) + " % of the volume, which leaves no room for "
-                    + base.name() + "; ask for less, or take a more concentrated ingredient.");
+            throw new Refusal(
+                    "What is added takes " + Grams.plain(100 * added) + " % of the volume, which leaves no room for "
+                            + base.name() + "; ask for less, or take a more concentrated ingredient.");
         concentrationGPerMl = Collections.unmodifiableMap(present);
         inHand = List.copyOf(inHand);
     }

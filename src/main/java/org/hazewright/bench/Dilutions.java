@@ -6,10 +6,11 @@ import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Optional;
 import java.util.Set;
+import java.util.stream.DoubleStream;
+import java.util.stream.IntStream;
 import org.hazewright.brief.Balance;
 import org.hazewright.mixture.Stock;
 import org.hazewright.shelf.Family;
-import org.hazewright.shelf.Form;
 import org.hazewright.shelf.Ingredient;
 
 /**
@@ -34,16 +35,25 @@ final class Dilutions {
     private final Contents contents;
     private final Balance balance;
     private final Optional<Ingredient> liquid;
+    private final double[] roundGrams; // 1, 2, 5 times powers of ten that the balance can show and trust, ascending
 
     Dilutions(Contents contents, Balance balance) {
         this.contents = contents;
         this.balance = balance;
         this.liquid = contents.shelf().liquidOf(contents.base());
+        double least = Math.max(balance.smallestLoadG(), 20 * balance.readabilityG()) * (1 - 1e-9);
+        this.roundGrams = IntStream.rangeClosed(-3, 2)
+                .boxed()
+                .flatMapToDouble(decade -> DoubleStream.of(1, 2, 5).map(f -> balance.rounded(f * Math.pow(10, decade))))
+                .filter(g -> g >= least)
+                .distinct()
+                .toArray();
     }
 
     /** Whether the amount can be weighed as it is: at or above the smallest load, and not rounded to nothing. */
     static boolean weighable(double massG, Balance balance) {
-        return balance.rounded(massG) >= balance.smallestLoadG() && balance.rounded(massG) > 0;
+        double shown = balance.rounded(massG);
+        return shown >= balance.smallestLoadG() && shown > 0;
     }
 
     /**
@@ -93,9 +103,8 @@ final class Dilutions {
                     contents.inHand().stream()
                             .filter(s -> s.id().equals(from))
                             .findFirst()
-                            .orElseThrow(() -> new org.hazewright.optics.Refusal(
-                                    "The stock in hand " + last.id() + " is diluted from \"" + from
-                                            + "\", which is not among the stocks in hand.")));
+                            .orElseThrow(() -> new org.hazewright.optics.Refusal("The stock in hand " + last.id()
+                                    + " is diluted from \"" + from + "\", which is not among the stocks in hand.")));
         }
         return chain;
     }
@@ -125,18 +134,9 @@ final class Dilutions {
     /** Grams to put into a stock of this ratio so that {@code drawnG} can be drawn from it; round numbers, smallest first. */
     private List<Double> roundGrams(int ratio, double drawnG) {
         List<Double> grams = new ArrayList<>();
-        double least = Math.max(
-                leastLoadG(), Math.max(LEAST_STOCK_G, SPARE * drawnG) / ratio * (1 - 1e-9));
-        for (int decade = -3; decade <= 2; decade++)
-            for (int figure : new int[] {1, 2, 5}) {
-                double g = balance.rounded(figure * Math.pow(10, decade));
-                if (g >= least && g * ratio <= MOST_STOCK_G) grams.add(g);
-            }
+        double least = Math.max(LEAST_STOCK_G, SPARE * drawnG) / ratio * (1 - 1e-9);
+        for (double g : roundGrams) if (g >= least && g * ratio <= MOST_STOCK_G) grams.add(g);
         return grams;
-    }
-
-    private double leastLoadG() {
-        return Math.max(balance.smallestLoadG(), 20 * balance.readabilityG());
     }
 
     private void add(List<Dose> doses, Dose dose) {
@@ -148,8 +148,7 @@ final class Dilutions {
 
     private static Stock stock(
             Ingredient i, Ingredient diluent, int ratio, double g, long total, Optional<String> from) {
-        return new Stock(
-                i.id() + "-1-" + total, i, WeighingOrder.lotOf(i), g, diluent, decimal(g * (ratio - 1)), from);
+        return new Stock(i.id() + "-1-" + total, i, WeighingOrder.lotOf(i), g, diluent, decimal(g * (ratio - 1)), from);
     }
 
     /** Takes the noise of binary fractions off a product of round numbers. */
@@ -159,7 +158,7 @@ final class Dilutions {
 
     /**
      * At most three: the most precise, and those with the fewest weighings and then the least left over among all within twice
-     * and five times its uncertainty.
+     * and five times its uncertainty, or within 0.1 and 0.4 %, whichever is more.
      */
     private List<Dose> worthJudging(List<Dose> fresh) {
         if (fresh.isEmpty()) return fresh;
@@ -173,9 +172,9 @@ final class Dilutions {
         double u = finest.relativeUncertainty(balance);
         Set<Dose> worth = new LinkedHashSet<>();
         worth.add(finest);
-        for (int factor : new int[] {2, 5})
+        for (double within : new double[] {Math.max(2 * u, 0.001), Math.max(5 * u, 0.004)})
             worth.add(fresh.stream()
-                    .filter(d -> d.relativeUncertainty(balance) <= factor * u)
+                    .filter(d -> d.relativeUncertainty(balance) <= within)
                     .min(simplest)
                     .orElseThrow());
         return List.copyOf(worth);

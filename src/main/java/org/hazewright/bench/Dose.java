@@ -39,8 +39,7 @@ record Dose(Ingredient ingredient, double massG, List<Stock> chain, boolean inHa
     /** Loads on the balance that this way takes, those of stocks that must be made first included. */
     int weighings(Balance balance) {
         int count = balance.loads(weighedG());
-        if (!inHand)
-            for (Stock s : chain) count += balance.loads(s.ingredientG()) + balance.loads(s.diluentG());
+        if (!inHand) for (Stock s : chain) count += balance.loads(s.ingredientG()) + balance.loads(s.diluentG());
         return count;
     }
 

@@ -14,12 +14,21 @@ import org.hazewright.shelf.Ingredient;
  * The choice among ways of dosing: begin with the most precise way for every ingredient, then take simpler ways, simplest first,
  * for as long as the score stays alike; last, move single doses by a few of the balance's last digits while that lowers the score.
  *
- * <p>Scores are alike within {@value #ALIKE} of one squared tolerance half-width, or half a per cent of the score: less than the
- * figures it is made of are known to.
+ * <p>A simpler way of dosing one ingredient counts as alike when it adds no more than {@value #ALIKE} squared half-widths of
+ * tolerance, or half a per cent of the score, whichever is more: under a twentieth of a half-width in quadrature, which no
+ * measurement of the finished phantom can show. A weighing is worth a person's minutes when it gains {@value #WEIGHING_GAINS}
+ * squared half-widths, or one per cent of the score; a way that saves weighings may add as much for each.
  */
 final class Planning {
-    private static final double ALIKE = 2e-3;
-    private static final double ALIKE_RELATIVE = 5e-3;
+    private static final double ALIKE = 0.002;
+    private static final double ALIKE_RELATIVE = 0.005;
+    private static final double WEIGHING_GAINS = 0.01;
+    private static final double WEIGHING_GAINS_RELATIVE = 0.01;
+
+    /** A last digit is moved for no less, in squared half-widths or as a share: grams that do next to nothing stay as they are. */
+    private static final double WORTH_A_DIGIT = 1e-4;
+
+    private static final double WORTH_A_DIGIT_RELATIVE = 5e-4;
 
     /** Most calls of the judge. */
     private static final int CALLS = 39;
@@ -58,8 +67,14 @@ final class Planning {
         score = simplify(chosen, ways, score, steps);
         score = settle(chosen, steps, score);
         Recipe recipe = assembly.recipe(chosen, steps).orElseThrow();
-        return new StockPlan(recipe, score, weighings(recipe, chosen), leftovers(recipe, chosen), inHand(chosen),
-                notes(chosen), judged);
+        return new StockPlan(
+                recipe,
+                score,
+                weighings(recipe, chosen),
+                leftovers(recipe, chosen),
+                inHand(chosen),
+                notes(chosen),
+                judged);
     }
 
     private double score(Recipe recipe) {
@@ -88,7 +103,8 @@ final class Planning {
     }
 
     private double simplify(List<Dose> chosen, List<List<Dose>> ways, double best, int[] steps) {
-        double limit = best + Math.max(ALIKE, ALIKE_RELATIVE * Math.abs(best));
+        double alike = Math.max(ALIKE, ALIKE_RELATIVE * Math.abs(best));
+        double gains = Math.max(WEIGHING_GAINS, WEIGHING_GAINS_RELATIVE * Math.abs(best));
         double score = best;
         Comparator<Dose> simplest =
                 Comparator.<Dose>comparingInt(d -> d.weighings(balance)).thenComparingDouble(Dose::leftG);
@@ -99,7 +115,8 @@ final class Planning {
                 chosen.set(k, way);
                 Optional<Recipe> recipe = assembly.recipe(chosen, steps);
                 double s = recipe.isPresent() ? score(recipe.get()) : Double.POSITIVE_INFINITY;
-                if (s <= limit) {
+                int saved = Math.max(0, precise.weighings(balance) - way.weighings(balance));
+                if (s <= score + alike + saved * gains) {
                     score = s;
                     break;
                 }
@@ -138,7 +155,7 @@ final class Planning {
             Optional<Recipe> recipe =
                     Dilutions.weighable(g, balance) ? assembly.recipe(chosen, steps) : Optional.empty();
             double s = recipe.isPresent() ? score(recipe.get()) : Double.POSITIVE_INFINITY;
-            if (!(s < best * (1 - 1e-6))) {
+            if (!(s < best - Math.max(WORTH_A_DIGIT, WORTH_A_DIGIT_RELATIVE * Math.abs(best)))) {
                 steps[k] -= direction;
                 break;
             }
@@ -149,7 +166,8 @@ final class Planning {
 
     private int weighings(Recipe recipe, List<Dose> chosen) {
         List<String> inHand = inHand(chosen);
-        int count = recipe.items().stream().mapToInt(i -> balance.loads(i.massG())).sum();
+        int count =
+                recipe.items().stream().mapToInt(i -> balance.loads(i.massG())).sum();
         for (Stock s : recipe.stocks())
             if (!inHand.contains(s.id())) count += balance.loads(s.ingredientG()) + balance.loads(s.diluentG());
         return count;
@@ -186,7 +204,8 @@ final class Planning {
                         + Grams.small(balance.smallestLoadG()) + ", and " + why + "; " + end);
             }
             if (!d.isNeat() && Dilutions.settlesInStock(d.ingredient(), contents.base()))
-                notes.add(name + " settles: its stock is a suspension. Shake it and draw at once, each time; a larger batch"
+                notes.add(name
+                        + " settles: its stock is a suspension. Shake it and draw at once, each time; a larger batch"
                         + " would let it be weighed neat.");
         }
         return notes;

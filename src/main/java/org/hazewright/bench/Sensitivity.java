@@ -39,7 +39,10 @@ public record Sensitivity(Weighing weighing, double lowG, double highG, List<Eff
 
     /** The largest move of any target for one per cent more, in half-widths. */
     public double worstPerPercentMiss() {
-        return effects.stream().mapToDouble(e -> Math.abs(e.perPercentMiss())).max().orElse(0);
+        return effects.stream()
+                .mapToDouble(e -> Math.abs(e.perPercentMiss()))
+                .max()
+                .orElse(0);
     }
 
     /** One for every mass of the recipe, in the order of {@link Weighing#of}. */
@@ -74,7 +77,8 @@ public record Sensitivity(Weighing weighing, double lowG, double highG, List<Eff
         Map<Double, Coefficients> at = new LinkedHashMap<>();
         for (int j = 0; j < points.size(); j++) {
             Point p = points.get(j);
-            for (Coefficients.Share share : at.computeIfAbsent(p.wavelengthNm(), mixture::at).shares()) {
+            for (Coefficients.Share share :
+                    at.computeIfAbsent(p.wavelengthNm(), mixture::at).shares()) {
                 double c = mixture.concentrationGPerMl(share.ingredient());
                 double mu = p.quantity() == Point.Quantity.MUA ? share.muaPerCm() : share.muspPerCm();
                 kappa.get(share.ingredient())[j] = c > 0 ? mu / c : 0;
@@ -83,8 +87,7 @@ public record Sensitivity(Weighing weighing, double lowG, double highG, List<Eff
         return kappa;
     }
 
-    private static double[] moved(
-            Recipe recipe, Weighing w, double byG, Map<Ingredient, double[]> kappa, int points) {
+    private static double[] moved(Recipe recipe, Weighing w, double byG, Map<Ingredient, double[]> kappa, int points) {
         return values(w.changed(recipe, w.massG() + byG).massesG(), kappa, points);
     }
 
@@ -108,7 +111,12 @@ public record Sensitivity(Weighing weighing, double lowG, double highG, List<Eff
 
     /** The allowed grams of one weighing. */
     private record Band(
-            Recipe recipe, Weighing w, Balance balance, List<Point> points, Map<Ingredient, double[]> kappa, double[] mu) {
+            Recipe recipe,
+            Weighing w,
+            Balance balance,
+            List<Point> points,
+            Map<Ingredient, double[]> kappa,
+            double[] mu) {
 
         double[] grams() {
             double[] t = allowed();
@@ -132,7 +140,8 @@ public record Sensitivity(Weighing weighing, double lowG, double highG, List<Eff
                     && w.from().isEmpty()
                     && (w.ingredient().equals(recipe.base())
                             || recipe.base().blend().stream()
-                                    .anyMatch(p -> p.ingredient().equals(w.ingredient().id())));
+                                    .anyMatch(p ->
+                                            p.ingredient().equals(w.ingredient().id())));
         }
 
         /** Ends of the interval of t around its plan in which every target allows it. */
@@ -167,7 +176,9 @@ public record Sensitivity(Weighing weighing, double lowG, double highG, List<Eff
         private double tOf(double massG) {
             if (w.role() == Weighing.Role.ITEM) return massG;
             double partnerG = partnerG();
-            return w.role() == Weighing.Role.STOCK_SUBSTANCE ? massG / (massG + partnerG) : partnerG / (massG + partnerG);
+            return w.role() == Weighing.Role.STOCK_SUBSTANCE
+                    ? massG / (massG + partnerG)
+                    : partnerG / (massG + partnerG);
         }
 
         private double massOf(double t) {

@@ -52,8 +52,11 @@ public record Weighing(
         List<Stock> stocks = new ArrayList<>(recipe.stocks());
         List<Item> items = new ArrayList<>(recipe.items());
         switch (role) {
-            case STOCK_SUBSTANCE -> stocks.set(place, with(stocks.get(place), otherG, stocks.get(place).diluentG()));
-            case STOCK_DILUENT -> stocks.set(place, with(stocks.get(place), stocks.get(place).ingredientG(), otherG));
+            case STOCK_SUBSTANCE ->
+                stocks.set(
+                        place, with(stocks.get(place), otherG, stocks.get(place).diluentG()));
+            case STOCK_DILUENT ->
+                stocks.set(place, with(stocks.get(place), stocks.get(place).ingredientG(), otherG));
             case ITEM -> {
                 Item i = items.get(place);
                 items.set(place, new Item(i.ingredient(), i.stock(), i.lot(), otherG));

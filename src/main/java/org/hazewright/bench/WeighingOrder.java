@@ -55,13 +55,13 @@ final class WeighingOrder {
                 .map(Map.Entry::getKey);
         return entries.stream()
                 .sorted(Comparator.<Entry<T>>comparingInt(e -> rank(e, base, first, hardener))
-                        .thenComparing(Comparator.<Entry<T>>comparingDouble(Entry::massG).reversed()))
+                        .thenComparing(Comparator.<Entry<T>>comparingDouble(Entry::massG)
+                                .reversed()))
                 .map(Entry::what)
                 .toList();
     }
 
-    private static int rank(
-            Entry<?> e, Ingredient base, Optional<Ingredient> first, Optional<Ingredient> hardener) {
+    private static int rank(Entry<?> e, Ingredient base, Optional<Ingredient> first, Optional<Ingredient> hardener) {
         boolean cast = castAndCured(base);
         if (e.ofBase()) {
             if (hardener.isPresent() && hardener.get().equals(e.ingredient())) return 90;

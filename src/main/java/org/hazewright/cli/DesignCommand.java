@@ -2,19 +2,18 @@ package org.hazewright.cli;
 
 import java.io.PrintWriter;
 import java.nio.file.Path;
+import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.concurrent.Callable;
 import org.hazewright.bench.Answer;
 import org.hazewright.bench.Answering;
-import org.hazewright.bench.Step;
-import org.hazewright.bench.Steps;
+import org.hazewright.bench.Warning;
 import org.hazewright.bench.Warnings;
 import org.hazewright.brief.Brief;
 import org.hazewright.files.BriefReader;
 import org.hazewright.files.RecipeWriter;
 import org.hazewright.files.SafeFile;
-import org.hazewright.sheet.RecipeSheet;
 import org.hazewright.shelf.Shelf;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
@@ -58,10 +57,9 @@ final class DesignCommand implements Callable<Integer> {
         Shelf shelf = shared.shelf();
         Brief wanted = BriefReader.read(brief, shared.tissueSpectra());
         Answer answer = Answering.to(wanted, shelf, alternatives);
-        List<Step> steps = Steps.of(answer);
-        List<String> warnings = Warnings.of(answer);
+        List<Warning> warnings = Warnings.of(answer.recipe(), LocalDate.now());
         Path folder = out != null ? out : brief.toAbsolutePath().getParent();
-        List<Path> written = write(answer, steps, warnings, folder);
+        List<Path> written = write(answer, folder);
         if (shared.json) DesignJson.of(answer).print(text);
         else {
             new DesignText(answer, shared.units, text).print(warnings);
@@ -70,15 +68,12 @@ final class DesignCommand implements Callable<Integer> {
         return answer.meets() ? Hazewright.DONE : Hazewright.MISSES;
     }
 
-    private static List<Path> write(Answer answer, List<Step> steps, List<String> warnings, Path folder) {
+    private static List<Path> write(Answer answer, Path folder) {
         String name = answer.brief().name();
         List<Path> written = new ArrayList<>();
         Path recipe = folder.resolve(name + ".recipe.toml");
         RecipeWriter.write(recipe, answer.recipe(), SafeFile.Overwrite.KEEP_PREVIOUS);
         written.add(recipe);
-        Path sheet = folder.resolve(name + ".xlsx");
-        SafeFile.write(sheet, RecipeSheet.of(answer, steps, warnings), SafeFile.Overwrite.KEEP_PREVIOUS);
-        written.add(sheet);
         return written;
     }
 }

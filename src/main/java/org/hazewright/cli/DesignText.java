@@ -9,6 +9,7 @@ import java.util.Locale;
 import java.util.Set;
 import org.hazewright.bench.Answer;
 import org.hazewright.bench.Leftover;
+import org.hazewright.bench.Warning;
 import org.hazewright.brief.Balance;
 import org.hazewright.brief.Brief;
 import org.hazewright.mixture.Cause;
@@ -33,12 +34,13 @@ final class DesignText {
         this.balance = answer.brief().balance();
     }
 
-    void print(List<String> warnings) {
+    void print(List<Warning> warnings) {
         Brief brief = answer.brief();
         out.println(brief.title());
         out.println(answer.recipe().base().name() + ", " + Figures.plain(brief.batchMl()) + " mL"
                 + (brief.overage() > 0
-                        ? " + " + Figures.plain(100 * brief.overage()) + " % = " + Figures.significant(brief.volumeMl(), 5) + " mL"
+                        ? " + " + Figures.plain(100 * brief.overage()) + " % = "
+                                + Figures.significant(brief.volumeMl(), 5) + " mL"
                         : "")
                 + ", at " + Figures.plain(brief.temperatureC()) + " °C");
         out.println();
@@ -49,7 +51,7 @@ final class DesignText {
         causes();
         section("What holds it back", answer.limits());
         alternatives();
-        section("Mind", warnings);
+        section("Mind", mind(warnings));
         out.println();
         out.printf(
                 Locale.ROOT,
@@ -63,18 +65,18 @@ final class DesignText {
     /** The one sentence that matters. */
     static String verdict(Answer answer) {
         String chance = times(answer.chance());
-        if (answer.meets()) return "Lands inside every tolerance " + chance + " times in 100.";
+        if (answer.meets()) return "Lands inside every tolerance " + chance + " in 100.";
         return "Misses: no recipe from this shelf meets every tolerance; this is the closest. Its worst miss is "
-                + Figures.significant(answer.worstMiss(), 2) + " half-widths, and "
-                + Figures.significant(answer.bestPossibleWorstMiss(), 2) + " is the best possible.";
+                + Figures.significant(answer.worstMiss(), 3) + " half-widths, and "
+                + Figures.significant(answer.bestPossibleWorstMiss(), 3) + " is the best possible.";
     }
 
     /** A share as a count in 100: never 100 for what is not certain, nor 0 for what is possible. */
     static String times(double share) {
         long count = Math.round(100 * share);
-        if (count == 100 && share < 1) return "more than 99";
-        if (count == 0 && share > 0) return "less than 1";
-        return Long.toString(count);
+        if (count == 100 && share < 1) return "more than 99 times";
+        if (count == 0 && share > 0) return "less than 1 time";
+        return count + (count == 1 ? " time" : " times");
     }
 
     private void stocks() {
@@ -115,7 +117,11 @@ final class DesignText {
             if (item.stock().isPresent()) notes.add(i.name());
             table.row(Integer.toString(++n), item.label(), grams(item.massG()), String.join(", ", notes));
         }
-        table.row("", "together", grams(answer.mixture().massG()), Figures.significant(answer.mixture().volumeMl(), 5) + " mL");
+        table.row(
+                "",
+                "together",
+                grams(answer.mixture().massG()),
+                Figures.significant(answer.mixture().volumeMl(), 5) + " mL");
         table.print(out);
     }
 
@@ -127,7 +133,8 @@ final class DesignText {
         for (Answer.Predicted p : answer.predicted()) {
             double u = units.of(p.uPerCm());
             int decimals = Math.max(
-                    Figures.decimalsFor(u), Figures.decimalsFor(units.of(p.point().tolerancePerCm())));
+                    Figures.decimalsFor(u),
+                    Figures.decimalsFor(units.of(p.point().tolerancePerCm())));
             table.row(
                     Figures.plain(p.point().wavelengthNm()),
                     p.point().quantity().sign(),
@@ -136,7 +143,9 @@ final class DesignText {
                     Figures.fixed(units.of(p.perCm()), decimals),
                     Figures.fixed(u, decimals),
                     LandingGauge.of(p.miss()),
-                    (p.miss() < 0 ? "−" : "+") + Figures.fixed(Math.abs(p.miss()), 2) + (p.inside() ? "" : "  OUTSIDE"));
+                    (p.miss() < 0 ? "−" : "+")
+                            + Figures.fixed(Math.abs(p.miss()), 2)
+                            + (p.inside() ? "" : "  OUTSIDE"));
         }
         table.print(out);
         out.println("  miss: in half-widths of the tolerance; u: standard uncertainty (k = 1)");
@@ -182,11 +191,7 @@ final class DesignText {
         for (Answer.Alternative a : answer.alternatives()) {
             Set<String> what = new LinkedHashSet<>();
             a.recipe().items().forEach(i -> what.add(i.label()));
-            table.row(
-                    a.why(),
-                    times(a.chance()) + " in 100",
-                    a.weighings() + " weighings",
-                    String.join(", ", what));
+            table.row(a.why(), times(a.chance()) + " in 100", a.weighings() + " weighings", String.join(", ", what));
         }
         table.print(out);
     }
@@ -196,6 +201,12 @@ final class DesignText {
         out.println();
         out.println(title);
         for (String s : sentences) for (String line : wrapped(s)) out.println("  " + line);
+    }
+
+    private List<String> mind(List<Warning> warnings) {
+        List<String> sentences = new ArrayList<>(answer.notes());
+        warnings.forEach(w -> sentences.add(w.text()));
+        return sentences;
     }
 
     private static List<String> wrapped(String sentence) {

@@ -6,8 +6,8 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import java.util.concurrent.Callable;
-import org.hazewright.files.CsvTable;
 import org.hazewright.files.SizeTable;
+import org.hazewright.files.SphereTable;
 import org.hazewright.optics.ConstantIndex;
 import org.hazewright.optics.Crowding;
 import org.hazewright.optics.Efficiencies;
@@ -57,7 +57,10 @@ final class ParticlesCommand implements Callable<Integer> {
             description = "Number median diameter and geometric standard deviation.")
     private double[] lognormal;
 
-    @Option(names = "--sizes", paramLabel = "FILE.csv", description = "Sizing table: from_nm, to_nm, weight (by number).")
+    @Option(
+            names = "--sizes",
+            paramLabel = "FILE.csv",
+            description = "Sizing table: from_nm, to_nm, weight (by number).")
     private Path sizes;
 
     @Option(names = "--at", paramLabel = "NM", split = ",", description = "Wavelengths in nm, with commas between.")
@@ -81,13 +84,18 @@ final class ParticlesCommand implements Callable<Integer> {
     @Option(names = "--size-parameter", paramLabel = "X", description = "One sphere: x = π D n_host/λ.")
     private Double sizeParameter;
 
-    @Option(names = "--index", paramLabel = "N[,K]", split = ",", description = "Its index relative to the host, n + ik.")
+    @Option(
+            names = "--index",
+            paramLabel = "N[,K]",
+            split = ",",
+            description = "Its index relative to the host, n + ik.")
     private double[] index;
 
     @Option(
             names = "--table",
             paramLabel = "FILE.csv",
-            description = "Many spheres: size_parameter, index, absorption_index; prints the same with q_ext, q_sca, g.")
+            description =
+                    "Many spheres: size_parameter, index, absorption_index; prints the same with q_ext, q_sca, g.")
     private Path table;
 
     @Override
@@ -125,12 +133,12 @@ final class ParticlesCommand implements Callable<Integer> {
     }
 
     private void tableOfSpheres(PrintWriter out) {
-        CsvTable rows = CsvTable.read(table, List.of("size_parameter", "index", "absorption_index"));
-        double[] x = rows.column("size_parameter");
-        double[] n = rows.column("index");
-        double[] k = rows.column("absorption_index");
+        SphereTable rows = SphereTable.read(table);
+        double[] x = rows.sizeParameter();
+        double[] n = rows.index();
+        double[] k = rows.absorptionIndex();
         out.println("size_parameter,index,absorption_index,q_ext,q_sca,g");
-        for (int i = 0; i < x.length; i++) {
+        for (int i = 0; i < rows.rows(); i++) {
             Efficiencies e = Mie.sphere(x[i], n[i], k[i]);
             out.println(String.join(
                     ",",
@@ -164,8 +172,8 @@ final class ParticlesCommand implements Callable<Integer> {
         for (double nm : at) {
             Refusal.positive("--at wavelength in nm", nm);
             double n = around.at(nm, temperatureC).n();
-            ParticleOptics p = population.perVolumeFraction(
-                    particle.at(nm, temperatureC), n, nm, volumeFraction, model);
+            ParticleOptics p =
+                    population.perVolumeFraction(particle.at(nm, temperatureC), n, nm, volumeFraction, model);
             double mus = p.musPerCm() * volumeFraction;
             double musp = p.muspPerCm() * volumeFraction;
             double mua = p.muaPerCm() * volumeFraction;
@@ -204,7 +212,8 @@ final class ParticlesCommand implements Callable<Integer> {
 
     private SizeDistribution distribution() {
         int given = (diameterNm != null ? 1 : 0) + (lognormal != null ? 1 : 0) + (sizes != null ? 1 : 0);
-        if (given != 1) throw new Refusal("Give the size once: --diameter-nm D, --lognormal-nm MEDIAN,GSD or --sizes FILE.csv.");
+        if (given != 1)
+            throw new Refusal("Give the size once: --diameter-nm D, --lognormal-nm MEDIAN,GSD or --sizes FILE.csv.");
         if (diameterNm != null) return new SizeDistribution.Single(diameterNm);
         if (sizes != null) return SizeTable.read(sizes);
         if (lognormal.length != 2)

@@ -8,6 +8,7 @@ import java.util.Map;
 import org.hazewright.brief.Brief;
 import org.hazewright.brief.Point;
 import org.hazewright.brief.SearchLimits;
+import org.hazewright.mixture.Coefficients;
 import org.hazewright.mixture.MassSpecific;
 import org.hazewright.mixture.Mixture;
 import org.hazewright.optics.Crowding;
@@ -21,7 +22,7 @@ import org.hazewright.shelf.Shelf;
  *
  * <p>What is added displaces base: with the base's own µ_b and the candidate's density ρ_i, a_ij = κ_ij − µ_bj/ρ_i (cm²/g), and the
  * residual to fill is t_j − µ_bj. κ depends on the host index and, with crowding, on the concentration; the columns are right at
- * one state of the mixture, and {@link FixedPoint} moves that state to the answer.
+ * one state of the mixture; {@link FixedPoint} moves that state to the answer, with slopes of the full model in place of a_ij.
  */
 final class BriefColumns {
     private final Brief brief;
@@ -43,7 +44,8 @@ final class BriefColumns {
     /** The mixture of base and amounts in g per mL, as {@code volumeMl} of it. */
     Mixture mixture(Map<Ingredient, Double> concentrationGPerMl, double volumeMl) {
         double added = 0;
-        for (var c : concentrationGPerMl.entrySet()) added += c.getValue() / c.getKey().densityGPerMl();
+        for (var c : concentrationGPerMl.entrySet())
+            added += c.getValue() / c.getKey().densityGPerMl();
         double baseG = baseDensity * Math.max(0, 1 - added) * volumeMl;
         Map<Ingredient, Double> masses = new LinkedHashMap<>();
         candidates.baseParts.forEach((part, share) -> masses.put(part, share * baseG));
@@ -100,18 +102,92 @@ final class BriefColumns {
         double[] host = hostIndex(alone);
         List<double[]> kappas = new ArrayList<>();
         for (Ingredient i : candidates.ingredients) kappas.add(kappaAlone(i, host, base));
-        return problem(candidates.ingredients, kappas, base, 1);
+        List<double[]> slopes = new ArrayList<>();
+        double[] residual = new double[base.length];
+        for (int j = 0; j < base.length; j++) residual[j] = points.get(j).wantedPerCm() - base[j];
+        for (int k = 0; k < kappas.size(); k++)
+            slopes.add(displaced(candidates.ingredients.get(k), kappas.get(k), base));
+        SearchLimits l = brief.limits();
+        SetProblem.Limits limits = new SetProblem.Limits(
+                l.maxAbsorbers(),
+                l.maxScatterers(),
+                l.maxModifiers(),
+                l.maxAbsorbers() + l.maxScatterers() + l.maxModifiers(),
+                addedVolume(),
+                exclusive(candidates.ingredients));
+        return problem(candidates.ingredients, kappas, slopes, residual, 1, limits);
     }
 
     /**
-     * The problem over some candidates at a state of the mixture. Tolerances are narrowed to {@code edge} times themselves as
-     * limits, and left as they are in the score.
+     * The problem over some candidates, straightened at a state of the mixture: µ_j(c) ≈ µ_j(c₀) + Σ_i a_ij (c_i − c₀_i) with given
+     * slopes a_ij. Tolerances are narrowed to {@code edge} times themselves as limits, and left as they are in the score.
      */
-    SetProblem at(Mixture state, List<Ingredient> members, double edge) {
+    SetProblem tangent(Map<Ingredient, Double> at, List<Ingredient> members, List<double[]> slopes, double edge) {
+        Mixture state = mixture(at, 1);
         double[] host = hostIndex(state);
+        double[] here = values(state);
+        double[] residual = new double[here.length];
+        for (int j = 0; j < here.length; j++) residual[j] = points.get(j).wantedPerCm() - here[j];
         List<double[]> kappas = new ArrayList<>();
-        for (Ingredient i : members) kappas.add(kappa(i, host, state.crowdFraction(i)));
-        return problem(members, kappas, baseValues(state), edge);
+        for (int k = 0; k < members.size(); k++) {
+            Ingredient i = members.get(k);
+            kappas.add(kappa(i, host, state.crowdFraction(i)));
+            for (int j = 0; j < here.length; j++) residual[j] += slopes.get(k)[j] * at.get(i);
+        }
+        int count = members.size(); // the set is chosen: only amounts are limited here
+        SetProblem.Limits free = new SetProblem.Limits(count, count, count, count, addedVolume(), List.of());
+        return problem(members, kappas, slopes, residual, edge, free);
+    }
+
+    /** Slopes ∂µ_j/∂c_i of the full model at a state, cm²/g, base displacement included. */
+    List<double[]> slopes(Map<Ingredient, Double> at, List<Ingredient> members) {
+        Mixture state = mixture(at, 1);
+        double[] host = hostIndex(state);
+        double[] here = values(state);
+        double[] base = baseValues(state);
+        List<double[]> slopes = new ArrayList<>();
+        for (Ingredient i : members)
+            slopes.add(
+                    movesOthers(i, at)
+                            ? slope(i, at, here)
+                            : displaced(i, kappa(i, host, state.crowdFraction(i)), base));
+        return slopes;
+    }
+
+    /** Whether an ingredient changes what the others do: by crowding, or by enough volume to move the host index. */
+    private static boolean movesOthers(Ingredient i, Map<Ingredient, Double> at) {
+        boolean crowds = i.scattering().orElse(null) instanceof Scattering.MieParticles m
+                && !(m.crowding() instanceof Crowding.None);
+        return crowds || at.get(i) / i.densityGPerMl() > 0.005;
+    }
+
+    /** Slope of the full model along one ingredient, by a forward difference of a part in ten thousand. */
+    private double[] slope(Ingredient i, Map<Ingredient, Double> at, double[] here) {
+        double step = Math.max(1e-4 * at.get(i), 1e-6);
+        Map<Ingredient, Double> moved = new LinkedHashMap<>(at);
+        moved.merge(i, step, Double::sum);
+        double[] there = values(mixture(moved, 1));
+        double[] slope = new double[here.length];
+        for (int j = 0; j < here.length; j++) slope[j] = (there[j] - here[j]) / step;
+        return slope;
+    }
+
+    private double[] displaced(Ingredient i, double[] kappa, double[] base) {
+        double[] slope = new double[base.length];
+        for (int j = 0; j < base.length; j++) slope[j] = kappa[j] - base[j] / i.densityGPerMl();
+        return slope;
+    }
+
+    /** The full model at the wanted points, 1/cm. */
+    double[] values(Mixture mixture) {
+        Map<Double, Coefficients> known = new HashMap<>();
+        double[] values = new double[points.size()];
+        for (int j = 0; j < values.length; j++) {
+            Point p = points.get(j);
+            Coefficients at = known.computeIfAbsent(p.wavelengthNm(), mixture::at);
+            values[j] = p.quantity() == Point.Quantity.MUA ? at.muaPerCm() : at.muspPerCm();
+        }
+        return values;
     }
 
     private double[] kappaAlone(Ingredient i, double[] host, double[] base) {
@@ -144,49 +220,47 @@ final class BriefColumns {
     /** Most of an ingredient in g/mL: its own limit, and where its crowding model ends. */
     private static double upper(Ingredient i) {
         double upper = i.maxGPerMl().orElse(Double.POSITIVE_INFINITY);
-        if (i.scattering().orElse(null) instanceof Scattering.MieParticles mie && !(mie.crowding() instanceof Crowding.None))
+        if (i.scattering().orElse(null) instanceof Scattering.MieParticles mie
+                && !(mie.crowding() instanceof Crowding.None))
             upper = Math.min(upper, 0.999 * crowdLimit(mie) * i.densityGPerMl() / mie.volumeFraction());
         return upper;
     }
 
-    private SetProblem problem(List<Ingredient> members, List<double[]> kappas, double[] base, double edge) {
+    private SetProblem problem(
+            List<Ingredient> members,
+            List<double[]> kappas,
+            List<double[]> slopes,
+            double[] residual,
+            double edge,
+            SetProblem.Limits limits) {
         List<SetProblem.Point> rows = new ArrayList<>();
-        for (int j = 0; j < base.length; j++) {
+        for (int j = 0; j < residual.length; j++) {
             Point p = points.get(j);
-            rows.add(new SetProblem.Point(
-                    p.wantedPerCm() - base[j], p.tolerancePerCm() * edge, p.weight() * edge * edge));
+            rows.add(new SetProblem.Point(residual[j], p.tolerancePerCm() * edge, p.weight() * edge * edge));
         }
         double uG = brief.balance().standardUncertaintyG();
         List<SetProblem.Candidate> columns = new ArrayList<>();
         for (int k = 0; k < members.size(); k++) {
             Ingredient i = members.get(k);
             double[] kappa = kappas.get(k);
-            double[] effect = new double[base.length];
             double unknown = 0;
             double weighing = 0;
-            for (int j = 0; j < base.length; j++) {
+            for (int j = 0; j < residual.length; j++) {
                 Point p = points.get(j);
-                effect[j] = kappa[j] - base[j] / i.densityGPerMl();
                 double u = kappa[j] * Frozen.uncertaintyOf(i, p) / p.tolerancePerCm();
                 double w = kappa[j] * uG / brief.volumeMl() / p.tolerancePerCm();
                 unknown += p.weight() * u * u;
                 weighing += p.weight() * w * w;
             }
             columns.add(new SetProblem.Candidate(
-                    effect, unknown, weighing, upper(i), 1 / i.densityGPerMl(), group(i)));
+                    slopes.get(k), unknown, weighing, upper(i), 1 / i.densityGPerMl(), group(i)));
         }
-        SearchLimits limits = brief.limits();
-        double leastBase = Math.max(candidates.base.leastShare(), limits.leastBaseShare());
-        return new SetProblem(
-                rows,
-                columns,
-                new SetProblem.Limits(
-                        limits.maxAbsorbers(),
-                        limits.maxScatterers(),
-                        limits.maxModifiers(),
-                        limits.maxAbsorbers() + limits.maxScatterers() + limits.maxModifiers(),
-                        1 - leastBase,
-                        exclusive(members)));
+        return new SetProblem(rows, columns, limits);
+    }
+
+    /** Share of the volume that what is added may take. */
+    private double addedVolume() {
+        return 1 - Math.max(candidates.base.leastShare(), brief.limits().leastBaseShare());
     }
 
     private static SetProblem.Group group(Ingredient i) {

@@ -6,8 +6,6 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import org.hazewright.brief.Brief;
-import org.hazewright.brief.Point;
-import org.hazewright.mixture.Coefficients;
 import org.hazewright.mixture.Mixture;
 import org.hazewright.shelf.Ingredient;
 
@@ -15,13 +13,19 @@ import org.hazewright.shelf.Ingredient;
  * The best amounts of one set on the full model: the convex programme is solved with coefficients of the current mixture, and the
  * mixture moved to its answer, until neither changes.
  *
- * <p>Crowding and host index change by a few per cent between no particles and the answer, so each round shrinks the error some ten
- * times; rounds end at a relative change of 1e-10, or after {@value #ROUNDS}. The misses reported are those of {@link
- * Mixture} itself.
+ * <p>Each round straightens the full model at the present amounts, crowding and host index included, and solves the convex
+ * programme there (Gauss–Newton with limits), so a round squares the error where crowding bends the model by a few per cent. When a
+ * step turns back on the one before, strides are halved. Rounds end at a relative change of 1e-9, or after {@value #ROUNDS}. The
+ * misses reported are those of {@link Mixture} itself.
  */
 final class FixedPoint {
     private static final int ROUNDS = 40;
-    private static final double SETTLED = 1e-10;
+    private static final double SETTLED = 1e-9;
+
+    /** Slopes are taken anew after a step above {@code FAR}, and once when the answer is {@code NEAR}; between they serve. */
+    private static final double FAR = 0.02;
+
+    private static final double NEAR = 1e-4;
 
     private final Brief brief;
     private final BriefColumns columns;
@@ -61,23 +65,44 @@ final class FixedPoint {
         List<Ingredient> members = new ArrayList<>(start.keySet());
         Map<Ingredient, Double> now = new LinkedHashMap<>(start);
         SetProblem problem = null;
-        double[] amounts = new double[members.size()];
+        double stride = 1;
+        double[] before = null;
+        List<double[]> slopes = columns.slopes(now, members);
+        boolean near = false;
         for (int round = 0; round < ROUNDS; round++) {
-            problem = columns.at(columns.mixture(now, 1), members, edge);
+            problem = columns.tangent(now, members, slopes, edge);
             Optional<double[]> next = rule.amounts(problem);
             if (next.isEmpty()) return Optional.empty();
-            amounts = next.get();
+            double[] amounts = next.get();
+            double[] step = new double[amounts.length];
             double change = 0;
-            double size = 0;
-            for (int k = 0; k < members.size(); k++) {
-                double before = now.get(members.get(k));
-                change = Math.max(change, Math.abs(amounts[k] - before) / Math.max(Math.abs(amounts[k]), 1e-12));
-                size = Math.max(size, amounts[k]);
-                now.put(members.get(k), amounts[k]);
+            for (int k = 0; k < amounts.length; k++) {
+                step[k] = amounts[k] - now.get(members.get(k));
+                change = Math.max(change, Math.abs(step[k]) / Math.max(amounts[k], 1e-9));
             }
-            if (change <= SETTLED || size == 0) break;
+            if (before != null && turnsBack(step, before)) stride = Math.max(0.1, stride / 2);
+            before = step;
+            for (int k = 0; k < amounts.length; k++)
+                now.merge(members.get(k), stride == 1 || change <= SETTLED ? step[k] : stride * step[k], Double::sum);
+            if (change <= SETTLED) break;
+            boolean arriving = change <= NEAR && !near;
+            near |= arriving;
+            if (arriving || change > FAR) slopes = columns.slopes(now, members);
         }
+        double[] amounts = members.stream().mapToDouble(now::get).toArray();
         return Optional.of(option(now, members, amounts, problem));
+    }
+
+    /** Whether a step goes back more than half of the one before: the straightened model overshoots, and strides are halved. */
+    private static boolean turnsBack(double[] step, double[] before) {
+        double along = 0;
+        double size = 0;
+        for (int k = 0; k < step.length; k++) {
+            double scale = 1 / Math.max(1e-24, before[k] * before[k]);
+            along += step[k] * before[k] * scale;
+            size += 1;
+        }
+        return along < -0.5 * size;
     }
 
     private Option option(Map<Ingredient, Double> now, List<Ingredient> members, double[] amounts, SetProblem problem) {
@@ -101,14 +126,10 @@ final class FixedPoint {
 
     /** Signed misses of the full model. */
     private double[] misses(Mixture mixture) {
-        Map<Double, Coefficients> known = new LinkedHashMap<>();
-        double[] misses = new double[columns.points().size()];
-        for (int j = 0; j < misses.length; j++) {
-            Point p = columns.points().get(j);
-            Coefficients at = known.computeIfAbsent(p.wavelengthNm(), mixture::at);
-            misses[j] = p.miss(p.quantity() == Point.Quantity.MUA ? at.muaPerCm() : at.muspPerCm());
-        }
-        return misses;
+        double[] values = columns.values(mixture);
+        for (int j = 0; j < values.length; j++)
+            values[j] = columns.points().get(j).miss(values[j]);
+        return values;
     }
 
     private static int[] all(SetProblem problem) {

@@ -125,7 +125,7 @@ public final class BriefReader {
     }
 
     private static SearchLimits limits(Optional<TomlPage> shelf) {
-        if (shelf.isEmpty()) return new SearchLimits(List.of(), List.of(), 2, 1, 1, 0);
+        if (shelf.isEmpty()) return SearchLimits.USUAL;
         TomlPage t = shelf.get();
         t.refuseUnknown("use", "avoid", "max_absorbers", "max_scatterers", "max_modifiers", "least_base_share");
         List<String> use = t.texts("use");
@@ -137,9 +137,9 @@ public final class BriefReader {
         return new SearchLimits(
                 use,
                 avoid,
-                t.whole("max_absorbers", 0, 8, 2),
-                t.whole("max_scatterers", 0, 8, 1),
-                t.whole("max_modifiers", 0, 8, 1),
+                t.whole("max_absorbers", 0, 8, SearchLimits.USUAL.maxAbsorbers()),
+                t.whole("max_scatterers", 0, 8, SearchLimits.USUAL.maxScatterers()),
+                t.whole("max_modifiers", 0, 8, SearchLimits.USUAL.maxModifiers()),
                 t.within("least_base_share", 0, 1, 0));
     }
 

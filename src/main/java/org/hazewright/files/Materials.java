@@ -40,7 +40,8 @@ final class Materials {
                     from.path(),
                     from.line(),
                     from.column(),
-                    "The file of the material \"" + id + "\" is refused, so it cannot be used here. Mend that file first.",
+                    "The file of the material \"" + id
+                            + "\" is refused, so it cannot be used here. Mend that file first.",
                     broken.get(id));
         throw from.refusal("There is no material \"" + id + "\"; a file materials/" + id + ".toml is needed."
                 + Nearest.to(id, good.keySet())

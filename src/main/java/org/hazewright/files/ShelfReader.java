@@ -158,7 +158,9 @@ public final class ShelfReader {
             List<TomlPage> parts = pages.get(blend.id()).tables("blend");
             attempt(() -> {
                         for (int i = 0; i < parts.size(); i++)
-                            requireSound(blend.blend().get(i).ingredient(), parts.get(i).at("ingredient"));
+                            requireSound(
+                                    blend.blend().get(i).ingredient(),
+                                    parts.get(i).at("ingredient"));
                     })
                     .ifPresent(refusal -> ingredients.remove(blend.id()));
         }
@@ -177,7 +179,8 @@ public final class ShelfReader {
                     from.path(),
                     from.line(),
                     from.column(),
-                    "The file of the ingredient \"" + id + "\" is refused, so " + who + " cannot be used. Mend that file first.",
+                    "The file of the ingredient \"" + id + "\" is refused, so " + who
+                            + " cannot be used. Mend that file first.",
                     broken.get(id));
         if (!ingredients.containsKey(id))
             throw from.refusal("There is no ingredient \"" + id + "\" on this shelf for " + who + "."

@@ -57,6 +57,20 @@ public record MassSpecific(double kappaA, double kappaMus, double kappaMusp) {
         return new MassSpecific(kappaA, kappaMus, kappaMusp);
     }
 
+    /** Refuses a wavelength in nm that an ingredient's figures do not reach, naming the table and its range. */
+    public static void requireFigures(Ingredient i, double nm, double temperatureC) {
+        i.absorption().ifPresent(a -> a.table().at(nm));
+        i.index().ifPresent(m -> m.index().at(nm, temperatureC));
+        i.scattering().ifPresent(s -> {
+            if (s instanceof Scattering.MieParticles mie) mie.particle().index().at(nm, temperatureC);
+            else if (s instanceof Scattering.PowerLaw law) law.muspCm2PerG(nm);
+            else if (s instanceof Scattering.Tabulated table) {
+                table.muspCm2PerG(nm);
+                table.gAt(nm);
+            }
+        });
+    }
+
     /** Share of an ingredient's volume that is Mie particles; 0 without. */
     public static double particleShare(Ingredient i) {
         return i.scattering()

@@ -23,7 +23,8 @@ class CsvTableTest {
     @Test
     void readsColumnsByNameAroundCommentsAndBlankLines() {
         CsvTable table = CsvTable.read(Marked.write(
-                folder.resolve("t.csv"), "# unit: nm, 1/cm\n\n wavelength_nm , mua_per_cm\r\n# more\n400, 1e-3\r\n 500 ,+.5\n600,-2.\n"));
+                folder.resolve("t.csv"),
+                "# unit: nm, 1/cm\n\n wavelength_nm , mua_per_cm\r\n# more\n400, 1e-3\r\n 500 ,+.5\n600,-2.\n"));
         assertEquals(List.of("wavelength_nm", "mua_per_cm"), table.header());
         assertEquals(3, table.rows());
         assertArrayEquals(new double[] {400, 500, 600}, table.column("wavelength_nm"));
@@ -63,7 +64,10 @@ class CsvTableTest {
                 kind("▶400,2\n410,3\n", NOTHING, "first row holds the number 400"),
                 kind("▶" + "a,".repeat(70) + "b\n", NOTHING, "71 columns; at most 64"),
                 kind("▶a,b\n1,2\n", t -> t.column("c"), "The column c is missing", "a, b"),
-                kind("▶wavelenght_nm,b\n1,2\n", t -> t.column("wavelength_nm"), "Perhaps wavelenght_nm is to be renamed"),
+                kind(
+                        "▶wavelenght_nm,b\n1,2\n",
+                        t -> t.column("wavelength_nm"),
+                        "Perhaps wavelenght_nm is to be renamed"),
                 kind("▶a,mua_per_mm\n1,2\n", t -> t.refuseUnknown("a", "mua_per_cm"), "Perhaps mua_per_cm is meant"),
                 kind("▶a,b\n1,2\n", t -> t.oneOf("c", "d"), "none of the columns c, d"),
                 kind("▶a,b\n1,2\n", t -> t.oneOf("a", "b"), "2 of the columns a, b", "exactly one"),
@@ -91,14 +95,16 @@ class CsvTableTest {
     @Test
     void askedForColumnsMustAllBeThere() {
         Path file = folder.resolve("t.csv");
-        Marked.of("▶a,b\n1,2\n").refusedAs(file, () -> CsvTable.read(file, List.of("a", "b", "c")), "column c is missing");
+        Marked.of("▶a,b\n1,2\n")
+                .refusedAs(file, () -> CsvTable.read(file, List.of("a", "b", "c")), "column c is missing");
         Marked.of("▶a,b\n1,2\n").refusedAs(file, () -> CsvTable.read(file, List.of("a")), "column b is not known");
     }
 
     @Test
     void moreThan200000RowsAreRefused() {
         Path file = folder.resolve("t.csv");
-        Marked.of("a\n" + "1\n".repeat(200_000) + "▶1\n").refusedAs(file, () -> CsvTable.read(file), "more than 200000 rows");
+        Marked.of("a\n" + "1\n".repeat(200_000) + "▶1\n")
+                .refusedAs(file, () -> CsvTable.read(file), "more than 200000 rows");
     }
 
     private static Arguments kind(String text, Consumer<CsvTable> asking, String... words) {

@@ -55,7 +55,8 @@ record Marked(String text, int line, int column) {
                 () -> assertTrue(refusal.getMessage().startsWith(start), "begins with " + start),
                 () -> {
                     for (String word : words)
-                        assertTrue(refusal.getMessage().contains(word), "says \"" + word + "\": " + refusal.getMessage());
+                        assertTrue(
+                                refusal.getMessage().contains(word), "says \"" + word + "\": " + refusal.getMessage());
                 });
     }
 }

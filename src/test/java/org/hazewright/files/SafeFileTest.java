@@ -109,14 +109,22 @@ class SafeFileTest {
     @Test
     void whatTheSystemSaysIsSaidPlainly() {
         Path file = folder.resolve("a.toml");
-        assertTrue(SafeFile.plain(file, new FileSystemException("a", null, "No space left on device")).contains("the disk is full"));
-        assertTrue(SafeFile.plain(file, new IOException("No space left on device")).contains("the disk is full"));
-        assertTrue(SafeFile.plain(file, new FileSystemException("a", null, "Disk quota exceeded")).contains("the disk is full"));
-        assertTrue(SafeFile.plain(file, new FileSystemException("a", null, "Read-only file system")).contains("read-only"));
+        assertTrue(SafeFile.plain(file, new FileSystemException("a", null, "No space left on device"))
+                .contains("the disk is full"));
+        assertTrue(
+                SafeFile.plain(file, new IOException("No space left on device")).contains("the disk is full"));
+        assertTrue(SafeFile.plain(file, new FileSystemException("a", null, "Disk quota exceeded"))
+                .contains("the disk is full"));
+        assertTrue(SafeFile.plain(file, new FileSystemException("a", null, "Read-only file system"))
+                .contains("read-only"));
         assertTrue(SafeFile.plain(file, new ReadOnlyFileSystemException()).contains("read-only"));
         assertTrue(SafeFile.plain(file, new AccessDeniedException("a")).contains("does not let you write"));
         assertTrue(SafeFile.plain(
-                        file, new FileSystemException("a", null, "The process cannot access the file because it is being used by another process"))
+                        file,
+                        new FileSystemException(
+                                "a",
+                                null,
+                                "The process cannot access the file because it is being used by another process"))
                 .contains("another program has it open"));
     }
 
@@ -127,7 +135,8 @@ class SafeFileTest {
         Random random = new Random(20260301);
         for (int round = 0; round < 6; round++) {
             Process writer = new ProcessBuilder(
-                            Path.of(System.getProperty("java.home"), "bin", "java").toString(),
+                            Path.of(System.getProperty("java.home"), "bin", "java")
+                                    .toString(),
                             "-cp",
                             System.getProperty("java.class.path"),
                             KilledWriter.class.getName(),
@@ -173,7 +182,8 @@ class SafeFileTest {
     }
 
     private static String failure(Path file, Overwrite policy) {
-        return assertThrows(WriteFailure.class, () -> SafeFile.write(file, "x", policy)).getMessage();
+        return assertThrows(WriteFailure.class, () -> SafeFile.write(file, "x", policy))
+                .getMessage();
     }
 
     private static List<String> names(Path of) throws IOException {

@@ -53,7 +53,8 @@ class ShelfReaderTest {
         assertTrue(ink.settles());
         assertEquals(List.of("Shake."), ink.handling());
         assertEquals(List.of("Stains."), ink.cautions());
-        assertEquals(List.of(new Conflict("salt", "flocks", false), new Conflict("acid", "gas", true)), ink.conflicts());
+        assertEquals(
+                List.of(new Conflict("salt", "flocks", false), new Conflict("acid", "gas", true)), ink.conflicts());
         assertEquals(new Source(Source.Basis.INVENTED, "Made up. Not a bottle."), ink.source());
         assertEquals(new Uncertainty(0.02, 0.2, 0.5), ink.uncertainty());
         // 12000 /cm over 1.02 g/mL, 85 % of it absorbed
@@ -70,8 +71,8 @@ class ShelfReaderTest {
     @Test
     void particlesArriveWithTheirMaterialSizesAndCrowding() {
         Ingredient emulsion = ShelfReader.read(folder).require("emulsion");
-        Scattering.MieParticles mie =
-                assertInstanceOf(Scattering.MieParticles.class, emulsion.scattering().get());
+        Scattering.MieParticles mie = assertInstanceOf(
+                Scattering.MieParticles.class, emulsion.scattering().get());
         assertEquals("oil", mie.particle().id());
         assertEquals(0.22, mie.volumeFraction());
         assertEquals(new Crowding.PercusYevick(), mie.crowding());
@@ -85,8 +86,7 @@ class ShelfReaderTest {
     void aBlendHasItsPartsAndNothingOfItsOwn() {
         Shelf shelf = ShelfReader.read(folder);
         Ingredient gel = shelf.require("gelatin-10");
-        assertEquals(
-                List.of(new BlendPart("water", 0.9), new BlendPart("gelatin-powder", 0.1)), gel.blend());
+        assertEquals(List.of(new BlendPart("water", 0.9), new BlendPart("gelatin-powder", 0.1)), gel.blend());
         assertEquals(Optional.empty(), gel.absorption());
         assertEquals(Optional.empty(), gel.index());
         assertEquals(1 / (0.9 / 0.998 + 0.1 / 1.35), shelf.densityGPerMl(gel), 1e-12);
@@ -109,7 +109,11 @@ class ShelfReaderTest {
                 assertInstanceOf(Scattering.MieParticles.class, lot.scattering().get());
         assertEquals(1.04, mie.magnitude());
         assertEquals(0.22, mie.volumeFraction());
-        assertEquals(1, ((Scattering.MieParticles) shelf.require("emulsion").scattering().get()).magnitude());
+        assertEquals(
+                1,
+                ((Scattering.MieParticles)
+                                shelf.require("emulsion").scattering().get())
+                        .magnitude());
     }
 
     @Test
@@ -132,7 +136,9 @@ class ShelfReaderTest {
         Ingredient lot = ShelfReader.read(folder).require("emulsion-L08");
         assertEquals("My emulsion", lot.name());
         assertEquals(0.99, lot.densityGPerMl());
-        assertEquals(new Scattering.PowerLaw(210, 800, 1.2, 0.7, 400, 1100, 1), lot.scattering().get());
+        assertEquals(
+                new Scattering.PowerLaw(210, 800, 1.2, 0.7, 400, 1100, 1),
+                lot.scattering().get());
         assertEquals(new Uncertainty(0, 0.03), lot.uncertainty());
     }
 
@@ -149,14 +155,17 @@ class ShelfReaderTest {
 
     @Test
     void withoutAnIndexABaseIsTakenForWhatItsFamilyUsuallyIs() throws IOException {
-        assertEquals("water", ShelfReader.read(folder).require("water").index().get().id());
+        assertEquals(
+                "water", ShelfReader.read(folder).require("water").index().get().id());
         Files.delete(folder.resolve("materials/water.toml"));
         Files.delete(folder.resolve("emulsion.toml"));
         Files.delete(folder.resolve("emulsion-L07.toml"));
         for (String family : List.of("liquid", "silicone", "resin")) {
-            Marked.write(folder.resolve("my-base.toml"), SmallShelf.WATER
-                    .replace("id = \"water\"", "id = \"my-base\"")
-                    .replace("\"liquid\"\nform", "\"" + family + "\"\nform"));
+            Marked.write(
+                    folder.resolve("my-base.toml"),
+                    SmallShelf.WATER
+                            .replace("id = \"water\"", "id = \"my-base\"")
+                            .replace("\"liquid\"\nform", "\"" + family + "\"\nform"));
             double n = ShelfReader.read(folder)
                     .require("my-base")
                     .index()
@@ -200,11 +209,13 @@ class ShelfReaderTest {
                 List.of("ink", "water"),
                 read.shelf().ingredients().stream().map(Ingredient::id).toList());
         assertEquals(4, read.refusals().size());
-        assertTrue(read.refusals().stream().anyMatch(r -> r.path().endsWith("gelatin-10.toml")
-                && r.getMessage().contains("Mend that file first")));
-        assertTrue(read.refusals().stream().anyMatch(r -> r.path().endsWith("emulsion-L07.toml")
-                && r.line() == 3
-                && r.getMessage().contains("Mend that file first")));
+        assertTrue(read.refusals().stream()
+                .anyMatch(r ->
+                        r.path().endsWith("gelatin-10.toml") && r.getMessage().contains("Mend that file first")));
+        assertTrue(read.refusals().stream()
+                .anyMatch(r -> r.path().endsWith("emulsion-L07.toml")
+                        && r.line() == 3
+                        && r.getMessage().contains("Mend that file first")));
     }
 
     @Test
@@ -230,7 +241,9 @@ class ShelfReaderTest {
         assertTrue(read.shelf().find("water").isPresent());
         assertEquals(
                 read.shelf().ingredients().stream().map(Ingredient::id).toList(),
-                ShelfReader.readShipped().ingredients().stream().map(Ingredient::id).toList());
+                ShelfReader.readShipped().ingredients().stream()
+                        .map(Ingredient::id)
+                        .toList());
     }
 
     @Test
@@ -238,8 +251,10 @@ class ShelfReaderTest {
         Path jar = folder.resolve("program.jar");
         try (var zip = new java.util.zip.ZipOutputStream(Files.newOutputStream(jar));
                 var files = Files.walk(folder)) {
-            for (Path file : files.filter(f -> !f.equals(jar) && Files.isRegularFile(f)).toList()) {
-                zip.putNextEntry(new java.util.zip.ZipEntry("shelf/" + folder.relativize(file).toString().replace('\\', '/')));
+            for (Path file :
+                    files.filter(f -> !f.equals(jar) && Files.isRegularFile(f)).toList()) {
+                zip.putNextEntry(new java.util.zip.ZipEntry(
+                        "shelf/" + folder.relativize(file).toString().replace('\\', '/')));
                 zip.write(Files.readAllBytes(file));
             }
         }
@@ -261,8 +276,7 @@ class ShelfReaderTest {
                     "../" + folder.getFileName() + "/spectra/ink.csv",
                     "spectra/../../x.csv",
                     "..",
-                    "C:/x.csv"))
-                ink("▶table = \"" + path + "\"", "lies outside the shelf's folder", "stays inside it");
+                    "C:/x.csv")) ink("▶table = \"" + path + "\"", "lies outside the shelf's folder", "stays inside it");
             ink("▶table = \"spectra\\\\ink.csv\"", "use / between folders");
             ink("▶table = \"spectra\"", "is a folder");
             ink("▶table = \"spectra/inc.csv\"", "There is no table", "Perhaps ink.csv is meant");

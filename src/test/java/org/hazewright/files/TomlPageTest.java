@@ -62,7 +62,8 @@ class TomlPageTest {
         assertEquals(1, page.requireTable("inline").number("a"));
         assertEquals(2, page.requireTable("table").number("b"));
         assertEquals(4, page.tables("rows").get(1).number("c"));
-        assertEquals(new Place(page.at().path(), 16, 1), page.tables("rows").get(1).at("c"));
+        assertEquals(
+                new Place(page.at().path(), 16, 1), page.tables("rows").get(1).at("c"));
     }
 
     @Test
@@ -96,7 +97,10 @@ class TomlPageTest {
                 kind("▶b = 1.5", p -> p.whole("b", 0, 8, 2), "whole number between 0 and 8"),
                 kind("▶b = 9", p -> p.whole("b", 0, 8, 2), "whole number between 0 and 8"),
                 kind("▶a = 1", p -> p.number("b"), "The key b is missing; it must be a number."),
-                kind("a = 1\n▶[t.u]\n", p -> p.requireTable("t").requireTable("u").text("v"), "The key v in [t.u] is missing"),
+                kind(
+                        "a = 1\n▶[t.u]\n",
+                        p -> p.requireTable("t").requireTable("u").text("v"),
+                        "The key v in [t.u] is missing"),
                 kind("▶b = 3", p -> p.text("b"), "b is 3; it must be text in double quotes."),
                 kind("▶b = [1]", p -> p.text("b"), "b is a list"),
                 kind("▶b = 1979-05-27", p -> p.text("b"), "the date or time 1979-05-27"),
@@ -110,18 +114,30 @@ class TomlPageTest {
                 kind("▶b = \"yes\"", p -> p.flag("b", false), "true or false, without quotes"),
                 kind("▶b = \"2026-03-01\"", p -> p.date("b"), "a date without quotes: 2026-03-01"),
                 kind("▶b = \"scaterer\"", p -> p.word("b", Part.class), "Perhaps \"scatterer\" is meant"),
-                kind("b = [\"base\", ▶\"zzzzzzz\"]", p -> p.words("b", Part.class), "base, absorber, scatterer, modifier"),
+                kind(
+                        "b = [\"base\", ▶\"zzzzzzz\"]",
+                        p -> p.words("b", Part.class),
+                        "base, absorber, scatterer, modifier"),
                 kind("▶b = \"mei\"", p -> p.oneOf("b", "mie", "power"), "Perhaps \"mie\" is meant"),
                 kind("▶b = 1", p -> p.table("b"), "a line [b]"),
                 kind("▶a = 1", p -> p.requireTable("b"), "The table [b] is missing"),
                 kind("▶b = 1", p -> p.tables("b"), "a line [[b]]"),
                 kind("b = [▶1]", p -> p.tables("b"), "holds 1"),
-                kind("mass_g = 1\n▶mas_g = 2", p -> p.refuseUnknown("mass_g"), "mas_g is not known. Perhaps mass_g is meant."),
-                kind("[t]\n▶qqqqqqqqqqq = 2", p -> p.requireTable("t").refuseUnknown("b", "a"), "in [t] is not known. Known here: a, b."),
+                kind(
+                        "mass_g = 1\n▶mas_g = 2",
+                        p -> p.refuseUnknown("mass_g"),
+                        "mas_g is not known. Perhaps mass_g is meant."),
+                kind(
+                        "[t]\n▶qqqqqqqqqqq = 2",
+                        p -> p.requireTable("t").refuseUnknown("b", "a"),
+                        "in [t] is not known. Known here: a, b."),
                 kind("▶a = 1", TomlPage::requireFormat, "format is missing", "format = 1"),
                 kind("▶format = 2", TomlPage::requireFormat, "format is 2", "format = 1"),
                 kind("▶format = \"1\"", TomlPage::requireFormat, "format is the text \"1\""),
-                kind("▶b = 1", p -> p.holding("b", () -> Refusal.within("x", 3, 0, 1)), "x is 3.0; it must lie between 0.0 and 1.0."));
+                kind(
+                        "▶b = 1",
+                        p -> p.holding("b", () -> Refusal.within("x", 3, 0, 1)),
+                        "x is 3.0; it must lie between 0.0 and 1.0."));
     }
 
     @ParameterizedTest
@@ -157,7 +173,9 @@ class TomlPageTest {
     @Test
     void deepNestingIsRefusedAndDoesNotOverflow() {
         for (String deep : new String[] {
-            "a = " + "[".repeat(20_000) + "]".repeat(20_000), "a" + ".a".repeat(20_000) + " = 1", "a = " + "{b=".repeat(20_000)
+            "a = " + "[".repeat(20_000) + "]".repeat(20_000),
+            "a" + ".a".repeat(20_000) + " = 1",
+            "a = " + "{b=".repeat(20_000)
         }) {
             Path file = Marked.write(folder.resolve("page.toml"), deep);
             assertThrows(FileRefusal.class, () -> TomlPage.read(file));
@@ -173,7 +191,8 @@ class TomlPageTest {
 
     @Test
     void aPageLaidOverAnotherKeepsThePlaceOfEachKey() {
-        TomlPage below = TomlPage.read(Marked.write(folder.resolve("below.toml"), "a = 1\nb = 2\n[m]\nx = 1\ny = 2\n[r]\nz = 1\n"));
+        TomlPage below = TomlPage.read(
+                Marked.write(folder.resolve("below.toml"), "a = 1\nb = 2\n[m]\nx = 1\ny = 2\n[r]\nz = 1\n"));
         TomlPage top = TomlPage.read(Marked.write(folder.resolve("top.toml"), "\nb = 3\n[m]\ny = 5\n[r]\nw = 1\n"));
         TomlPage both = top.over(below, Set.of("m"));
         assertEquals(1, both.number("a"));
