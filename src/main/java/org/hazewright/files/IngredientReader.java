@@ -133,7 +133,9 @@ final class IngredientReader {
     private List<BlendPart> blend(Part part) {
         if (!page.has("blend")) return List.of();
         if (part != Part.BASE)
-            throw page.refusal("blend", "Only a base can be a blend, and here part = \"" + part.word() + "\". Take the blend out.");
+            throw page.refusal(
+                    "blend",
+                    "Only a base can be a blend, and here part = \"" + part.word() + "\". Take the blend out.");
         for (String own : new String[] {"density_g_per_ml", "absorption", "scattering", "index"})
             if (page.has(own))
                 throw page.refusal(

@@ -54,7 +54,7 @@ class BriefReaderTest {
         assertEquals(250, brief.volumeMl());
         assertEquals(22, brief.temperatureC());
         assertEquals(Balance.USUAL, brief.balance());
-        assertEquals(new SearchLimits(List.of(), List.of(), 2, 1, 1, 0), brief.limits());
+        assertEquals(new SearchLimits(List.of(), List.of(), 2, 1, 0, 0), brief.limits());
         assertEquals(Optional.empty(), brief.tissue());
         assertEquals(
                 List.of(new Target(690, OptionalDouble.of(0.1), OptionalDouble.of(9), 0.05 * 0.1, 0.05 * 9, 1)),
@@ -148,8 +148,8 @@ class BriefReaderTest {
             """;
 
     /** Flat spectra, so that the composition's absorption is one sum that can be done by hand. */
-    private static final Supplier<Tissue.Spectra> FLAT = () ->
-            new Tissue.Spectra(flat("oxy", 1000), flat("deoxy", 2000), flat("water", 0.02), flat("fat", 0.1));
+    private static final Supplier<Tissue.Spectra> FLAT =
+            () -> new Tissue.Spectra(flat("oxy", 1000), flat("deoxy", 2000), flat("water", 0.02), flat("fat", 0.1));
 
     private static Spectrum flat(String name, double value) {
         return new Spectrum(name, new double[] {650, 900}, new double[] {value, value});
@@ -187,14 +187,22 @@ class BriefReaderTest {
 
     @Test
     void theSpectraOfTheProgramGiveATissueItsTargets() {
-        Path file = Marked.write(folder.resolve("arm.brief.toml"), TISSUE.replace("0.60", "1").replace("0.20", "0")
-                .replace("haemoglobin_umol_per_l = 60", "haemoglobin_umol_per_l = 0"));
+        Path file = Marked.write(
+                folder.resolve("arm.brief.toml"),
+                TISSUE.replace("0.60", "1")
+                        .replace("0.20", "0")
+                        .replace("haemoglobin_umol_per_l = 60", "haemoglobin_umol_per_l = 0"));
         Brief brief = BriefReader.read(file, TissueSpectra.of(null));
         // Water alone, Kou et al., Appl. Opt. 32, 3531 (1993): 0.0288 per cm at 760 nm within 5 % (from memory)
         assertEquals(0.0288, brief.targets().get(1).muaPerCm().getAsDouble(), 0.05 * 0.0288);
-        Path blood = Marked.write(folder.resolve("blood.brief.toml"), TISSUE.replace("water_fraction = 0.60", "water_fraction = 0")
-                .replace("fat_fraction = 0.20", "fat_fraction = 0").replace("0.70", "1").replace("760, ", ""));
-        // Gratzer's and Kollias' compilation: oxyhaemoglobin 276 per cm per mol/L at 690 nm, 974 at 830 nm, base 10, tetramer
+        Path blood = Marked.write(
+                folder.resolve("blood.brief.toml"),
+                TISSUE.replace("water_fraction = 0.60", "water_fraction = 0")
+                        .replace("fat_fraction = 0.20", "fat_fraction = 0")
+                        .replace("0.70", "1")
+                        .replace("760, ", ""));
+        // Gratzer's and Kollias' compilation: oxyhaemoglobin 276 per cm per mol/L at 690 nm, 974 at 830 nm, base 10,
+        // tetramer
         List<Target> targets = BriefReader.read(blood, TissueSpectra.of(null)).targets();
         assertEquals(Math.log(10) * 60e-6 * 276, targets.get(0).muaPerCm().getAsDouble(), 1e-9);
         assertEquals(Math.log(10) * 60e-6 * 974, targets.get(1).muaPerCm().getAsDouble(), 1e-9);
@@ -204,50 +212,101 @@ class BriefReaderTest {
         return Stream.of(
                 of(SHORT, "batch_ml", "▶batch_m", "Perhaps batch_ml is meant"),
                 of(SHORT, "batch_ml = 250", "▶batch_ml = 0", "above 0"),
-                of(SHORT, "format = 1\nbase = \"water\"\nbatch_ml = 250", "▶format = 1\nbase = \"water\"", "how much to make"),
-                of(SHORT, "batch_ml = 250", "▶batch_ml = 250\n[[mould]]\nshape = \"box\"\nlength_mm = 1\nwidth_mm = 1\nheight_mm = 1",
+                of(
+                        SHORT,
+                        "format = 1\nbase = \"water\"\nbatch_ml = 250",
+                        "▶format = 1\nbase = \"water\"",
+                        "how much to make"),
+                of(
+                        SHORT,
+                        "batch_ml = 250",
+                        "▶batch_ml = 250\n[[mould]]\nshape = \"box\"\nlength_mm = 1\nwidth_mm = 1\nheight_mm = 1",
                         "keep one"),
                 of(SHORT, "batch_ml = 250", "[[mould]]\n▶shape = \"ball\"", "box, cylinder"),
-                of(SHORT, "batch_ml = 250", "[[mould]]\nshape = \"cylinder\"\n▶length_mm = 20\nheight_mm = 1", "The key length_mm"),
-                of(SHORT, "batch_ml = 250", "[[mould]]\nshape = \"box\"\n▶length_mm = -2\nwidth_mm = 1\nheight_mm = 1", "above 0"),
-                of(SHORT, "batch_ml = 250", "[[mould]]\nshape = \"cylinder\"\ndiameter_mm = 2\nheight_mm = 1\n▶count = 0.5", "whole number"),
+                of(
+                        SHORT,
+                        "batch_ml = 250",
+                        "[[mould]]\nshape = \"cylinder\"\n▶length_mm = 20\nheight_mm = 1",
+                        "The key length_mm"),
+                of(
+                        SHORT,
+                        "batch_ml = 250",
+                        "[[mould]]\nshape = \"box\"\n▶length_mm = -2\nwidth_mm = 1\nheight_mm = 1",
+                        "above 0"),
+                of(
+                        SHORT,
+                        "batch_ml = 250",
+                        "[[mould]]\nshape = \"cylinder\"\ndiameter_mm = 2\nheight_mm = 1\n▶count = 0.5",
+                        "whole number"),
                 of(SHORT, "base = \"water\"", "▶base = []", "at least one entry"),
                 of(SHORT, "base = \"water\"", "base = [▶3]", "holds 3"),
                 of(SHORT, "batch_ml = 250", "batch_ml = 250\n▶overage = 5", "between 0 and 2"),
                 of(SHORT, "batch_ml = 250", "batch_ml = 250\n▶temperature_c = 295", "between 0 and 100"),
-                of(SHORT, "[[target]]\nwavelength_nm = 690\nmua_per_cm = 0.1\nmusp_per_cm = 9.0", "", "no targets", "[[target]]", "[tissue]"),
-                of(SHORT, "mua_per_cm = 0.1\nmusp_per_cm = 9.0", "", "wants neither mua_per_cm nor musp_per_cm").at(5, 1),
+                of(
+                        SHORT,
+                        "[[target]]\nwavelength_nm = 690\nmua_per_cm = 0.1\nmusp_per_cm = 9.0",
+                        "",
+                        "no targets",
+                        "[[target]]",
+                        "[tissue]"),
+                of(SHORT, "mua_per_cm = 0.1\nmusp_per_cm = 9.0", "", "wants neither mua_per_cm nor musp_per_cm")
+                        .at(5, 1),
                 of(SHORT, "mua_per_cm = 0.1", "▶mua_per_cm = -0.1", "0 or above"),
                 of(SHORT, "mua_per_cm = 0.1", "▶mua_per_cm = inf", "finite"),
                 of(SHORT, "mua_per_cm = 0.1", "▶mua_per_cm = 0", "give mua_tolerance_per_cm"),
                 of(SHORT, "musp_per_cm = 9.0", "▶musp_per_cm = 0", "give musp_tolerance_per_cm"),
                 of(SHORT, "mua_per_cm = 0.1", "mua_per_cm = 0.1\n▶mua_tolerance = 5", "a share: 0.05 is 5 %"),
-                of(SHORT, "mua_per_cm = 0.1", "mua_per_cm = 0.1\nmua_tolerance = 0.1\n▶mua_tolerance_per_cm = 0.1", "keep one"),
+                of(
+                        SHORT,
+                        "mua_per_cm = 0.1",
+                        "mua_per_cm = 0.1\nmua_tolerance = 0.1\n▶mua_tolerance_per_cm = 0.1",
+                        "keep one"),
                 of(SHORT, "mua_per_cm = 0.1", "▶mua_tolerance = 0.1", "without mua_per_cm"),
                 of(SHORT, "mua_per_cm = 0.1", "mua_per_cm = 0.1\n▶weight = 0", "above 0"),
                 of(SHORT, "mua_per_cm = 0.1", "▶mua_per_mm = 0.1", "Perhaps mua_per_cm is meant"),
                 of(SHORT, "wavelength_nm = 690", "▶wavelength_nm = 0.69", "between 100 and 20000"),
-                of(SHORT, "[[target]]", "[[target]]\nwavelength_nm = 690\nmua_per_cm = 1\n[[target]]",
-                        "A target at 690 nm stands at line 6 already").at(9, 1),
+                of(
+                                SHORT,
+                                "[[target]]",
+                                "[[target]]\nwavelength_nm = 690\nmua_per_cm = 1\n[[target]]",
+                                "A target at 690 nm stands at line 6 already")
+                        .at(9, 1),
                 of(SHORT, "[[target]]", "[tolerance]\n▶mua = 0\n[[target]]", "above 0"),
                 of(SHORT, "[[target]]", "[tolerance]\n▶muspp = 0.1\n[[target]]", "Perhaps musp is meant"),
                 of(SHORT, "[[target]]", "[shelf]\n▶max_absorbers = 9\n[[target]]", "whole number between 0 and 8"),
-                of(SHORT, "[[target]]", "[shelf]\nuse = [\"a\"]\navoid = [\"b\", ▶\"a\"]\n[[target]]", "in use and in avoid"),
+                of(
+                        SHORT,
+                        "[[target]]",
+                        "[shelf]\nuse = [\"a\"]\navoid = [\"b\", ▶\"a\"]\n[[target]]",
+                        "in use and in avoid"),
                 of(SHORT, "[[target]]", "▶[balance]\ncapacity_g = 0.001\n[[target]]", "not above its smallest load"),
                 of(SHORT, "[[target]]", "[balance]\n▶readability_mg = 1\n[[target]]", "Perhaps readability_g is meant"),
                 of(SHORT, "[[target]]", "▶[[phantom]]\nname = \"A\"\n[[target]]", "use the command series"),
                 of(TISSUE, "[690, 760, 830]", "[690, ▶690]", "stands twice"),
                 of(TISSUE, "[690, 760, 830]", "[690, ▶0.8]", "between 100 and 20000"),
-                of(TISSUE, "[tissue]\nwavelengths_nm = [690, 760, 830]", "▶[tissue]\nwavelengths_nm = []", "no wavelengths_nm"),
+                of(
+                        TISSUE,
+                        "[tissue]\nwavelengths_nm = [690, 760, 830]",
+                        "▶[tissue]\nwavelengths_nm = []",
+                        "no wavelengths_nm"),
                 of(TISSUE, "wavelengths_nm = [690, 760, 830]", "▶wavelengths_nm = [690, 950]", "no value at 950 nm"),
                 of(TISSUE, "saturation = 0.70", "▶saturation = 70", "between 0 and 1"),
                 of(TISSUE, "[tissue]", "▶[tissue]", "sum to").with("water_fraction = 0.60", "water_fraction = 0.90"),
-                of(TISSUE, "musp_per_cm_at_500nm = 15.0\nscatter_power", "▶scatter_power", "without musp_per_cm_at_500nm"),
-                of(TISSUE, "\nscatter_power = 1.1", "", "scatter_power in [tissue] is missing").at(4, 1),
+                of(
+                        TISSUE,
+                        "musp_per_cm_at_500nm = 15.0\nscatter_power",
+                        "▶scatter_power",
+                        "without musp_per_cm_at_500nm"),
+                of(TISSUE, "\nscatter_power = 1.1", "", "scatter_power in [tissue] is missing")
+                        .at(4, 1),
                 of(TISSUE, "[tissue]", "▶[tissue]", "absorbs nothing at 690 nm")
                         .with("haemoglobin_umol_per_l = 60", "haemoglobin_umol_per_l = 0")
                         .with("water_fraction = 0.60\nfat_fraction = 0.20", ""),
-                of(TISSUE, "haemoglobin_umol_per_l", "▶hemoglobin_umol_per_l", "Perhaps haemoglobin_umol_per_l is meant"));
+                of(
+                        TISSUE,
+                        "haemoglobin_umol_per_l",
+                        "▶hemoglobin_umol_per_l",
+                        "Perhaps haemoglobin_umol_per_l is meant"));
     }
 
     @ParameterizedTest

@@ -39,8 +39,10 @@ class CoefficientsReferenceTest {
     @BeforeEach
     void smallShelf() {
         SmallShelf.in(folder);
-        // Compilation of Gratzer's and Kollias' haemoglobin data, oxyhaemoglobin at 350 nm: ε = 106576 per cm per mol/L (base 10,
-        // tetramer of 64500 g/mol), printed beside µa = 570.8012 per cm of blood with 150 g/L, for which it takes ln 10 as 2.303
+        // Compilation of Gratzer's and Kollias' haemoglobin data, oxyhaemoglobin at 350 nm: ε = 106576 per cm per mol/L
+        // (base 10,
+        // tetramer of 64500 g/mol), printed beside µa = 570.8012 per cm of blood with 150 g/L, for which it takes ln 10
+        // as 2.303
         Marked.write(
                 folder.resolve("spectra/hbo2.csv"), "wavelength_nm,epsilon10_l_per_mol_cm\n350,106576\n352,104040\n");
     }
@@ -48,7 +50,8 @@ class CoefficientsReferenceTest {
     @Test
     void bloodOf150GramsALitreAbsorbsAsTheCompilationSays() {
         double molPerL = 150 / 64500.0;
-        Ingredient blood = read("[absorption]\ntable = \"spectra/hbo2.csv\"\nmolar_mass_g_per_mol = 64500\nmol_per_l = " + molPerL);
+        Ingredient blood = read(
+                "[absorption]\ntable = \"spectra/hbo2.csv\"\nmolar_mass_g_per_mol = 64500\nmol_per_l = " + molPerL);
         double muaOfTheNeatLiquid = blood.absorption().get().kappaCm2PerG(350) * 1.06;
         assertEquals(570.8012 * Math.log(10) / 2.303, muaOfTheNeatLiquid, 1e-3);
     }
@@ -62,7 +65,13 @@ class CoefficientsReferenceTest {
     @Test
     void aTableByMassIsTakenAsItIs() {
         Marked.write(folder.resolve("spectra/t.csv"), "wavelength_nm,mua_cm2_per_g\n400,50000\n500,40000\n");
-        assertEquals(45000, read("[absorption]\ntable = \"spectra/t.csv\"").absorption().get().kappaCm2PerG(450), 1e-9);
+        assertEquals(
+                45000,
+                read("[absorption]\ntable = \"spectra/t.csv\"")
+                        .absorption()
+                        .get()
+                        .kappaCm2PerG(450),
+                1e-9);
     }
 
     @Test
@@ -71,7 +80,9 @@ class CoefficientsReferenceTest {
         Marked.write(folder.resolve("spectra/m.csv"), "wavelength_nm,musp_cm2_per_g\n400,30\n800,20\n");
         Scattering.Tabulated volume = assertInstanceOf(
                 Scattering.Tabulated.class,
-                read("[scattering]\nmodel = \"table\"\ntable = \"spectra/v.csv\"").scattering().get());
+                read("[scattering]\nmodel = \"table\"\ntable = \"spectra/v.csv\"")
+                        .scattering()
+                        .get());
         assertEquals(250 / 1.06, volume.muspCm2PerG(600), 1e-9);
         assertEquals(0.6, volume.gAt(600), 1e-12);
         Scattering.Tabulated mass = assertInstanceOf(
@@ -85,21 +96,25 @@ class CoefficientsReferenceTest {
 
     @Test
     void aPowerLawHoldsInItsOwnRange() {
-        Scattering law = read("[scattering]\nmodel = \"power\"\nmusp_cm2_per_g = 24.0\nat_nm = 800\nexponent = 1.2\ng = 0.7\n"
-                        + "from_nm = 500\nto_nm = 900")
-                .scattering()
-                .get();
+        Scattering law =
+                read("[scattering]\nmodel = \"power\"\nmusp_cm2_per_g = 24.0\nat_nm = 800\nexponent = 1.2\ng = 0.7\n"
+                                + "from_nm = 500\nto_nm = 900")
+                        .scattering()
+                        .get();
         assertEquals(new Scattering.PowerLaw(24, 800, 1.2, 0.7, 500, 900, 1), law);
     }
 
     @Test
     void aHistogramFromListsAndFromATableIsTheSame() {
-        String mie = "[scattering]\nmodel = \"mie\"\nparticle = \"oil\"\nparticle_volume_fraction = 0.1\ncrowding = \"polynomial\"\n"
-                + "crowding_coefficients = [-1.5, 0.4]\ncrowding_max_volume_fraction = 0.05\n[scattering.size]\nkind = \"histogram\"\n";
+        String mie =
+                "[scattering]\nmodel = \"mie\"\nparticle = \"oil\"\nparticle_volume_fraction = 0.1\ncrowding = \"polynomial\"\n"
+                        + "crowding_coefficients = [-1.5, 0.4]\ncrowding_max_volume_fraction = 0.05\n[scattering.size]\nkind = \"histogram\"\n";
         Marked.write(folder.resolve("spectra/sizes.csv"), "from_nm,to_nm,weight\n100,200,1\n200,300,3\n300,500,0\n");
         Scattering.MieParticles lists = assertInstanceOf(
                 Scattering.MieParticles.class,
-                read(mie + "edges_nm = [100, 200, 300, 500]\nweights = [1, 3, 0]").scattering().get());
+                read(mie + "edges_nm = [100, 200, 300, 500]\nweights = [1, 3, 0]")
+                        .scattering()
+                        .get());
         Scattering.MieParticles table = assertInstanceOf(
                 Scattering.MieParticles.class,
                 read(mie + "table = \"spectra/sizes.csv\"").scattering().get());

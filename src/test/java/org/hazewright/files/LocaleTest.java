@@ -49,7 +49,8 @@ class LocaleTest {
             Path folder = Path.of(args[0]);
             StringBuilder out = new StringBuilder();
             Shelf shelf = ShelfReader.read(folder);
-            out.append(shelf.require("ink").absorption().get().kappaCm2PerG(650)).append('\n');
+            out.append(shelf.require("ink").absorption().get().kappaCm2PerG(650))
+                    .append('\n');
             out.append(shelf.require("emulsion-L07").scattering()).append('\n');
             Path brief = Marked.write(
                     folder.resolve("FOREARM-I.BRIEF.TOML"),
@@ -62,14 +63,16 @@ class LocaleTest {
                     "format = 1\nbase = \"water\"\n[[item]]\ningredient = \"water\"\nmass_g = 1234.5\nweighed_g = 1234567.5\n");
             Recipe made = RecipeReader.read(recipe, shelf);
             out.append(RecipeWriter.text(made, List.of("note")));
-            for (String broken : List.of("FORMAT = 1", "format = 1\nbase = \"water\"\nbatch_ml = -1234.5\n", "format = 1\nbatch_ml = 1,5\n"))
+            for (String broken : List.of(
+                    "FORMAT = 1", "format = 1\nbase = \"water\"\nbatch_ml = -1234.5\n", "format = 1\nbatch_ml = 1,5\n"))
                 try {
                     BriefReader.read(Marked.write(brief, broken), TissueSpectra.of(null));
                     throw new AssertionError(broken);
                 } catch (Refusal refusal) {
                     out.append(refusal.getMessage()).append('\n');
                 }
-            byte[] bytes = (Locale.getDefault().getLanguage().isEmpty() ? "no locale" : out.toString()).getBytes(StandardCharsets.UTF_8);
+            byte[] bytes = (Locale.getDefault().getLanguage().isEmpty() ? "no locale" : out.toString())
+                    .getBytes(StandardCharsets.UTF_8);
             System.out.write(bytes, 0, bytes.length);
             System.out.flush();
         }

@@ -8,8 +8,8 @@ import java.nio.file.Path;
 import java.util.List;
 import java.util.stream.Stream;
 import org.hazewright.optics.Index;
-import org.hazewright.optics.Refusal;
 import org.hazewright.optics.RefractiveIndex;
+import org.hazewright.optics.Refusal;
 import org.hazewright.shelf.Material;
 import org.hazewright.shelf.Source;
 import org.junit.jupiter.api.Test;
@@ -30,18 +30,22 @@ class MaterialReaderReferenceTest {
 
     static Stream<Arguments> published() {
         return Stream.of(
-                // Malitson, J. Opt. Soc. Am. 55, 1205 (1965): fused silica, table of computed n at 20 °C: 1.458464 at 587.5618 nm,
+                // Malitson, J. Opt. Soc. Am. 55, 1205 (1965): fused silica, table of computed n at 20 °C: 1.458464 at
+                // 587.5618 nm,
                 // 1.457018 at 632.8 nm (six digits printed; from memory)
                 Arguments.of(SILICA, 587.5618, 1.458464, 1e-6),
                 Arguments.of(SILICA, 632.8, 1.457018, 1e-6),
-                // DeVore, J. Opt. Soc. Am. 41, 416 (1951): rutile, ordinary ray; the formula's value at 633 nm to twelve digits by
+                // DeVore, J. Opt. Soc. Am. 41, 416 (1951): rutile, ordinary ray; the formula's value at 633 nm to
+                // twelve digits by
                 // an independent computation
                 Arguments.of(RUTILE, 633, 2.583580138476, 1e-11),
-                // Sultanova et al., Acta Phys. Pol. A 116, 585 (2009), one-term fit; n_D of polystyrene 1.590 (handbook), and the
+                // Sultanova et al., Acta Phys. Pol. A 116, 585 (2009), one-term fit; n_D of polystyrene 1.590
+                // (handbook), and the
                 // formula's value at 633 nm by an independent computation
                 Arguments.of(POLYSTYRENE, 633, 1.587513379555, 1e-11),
                 Arguments.of(POLYSTYRENE, 589.3, 1.590, 2e-3),
-                // Michels, Foschum & Kienle, Opt. Express 16, 5907 (2008): water, n = 1.311 + 1.154e4/λ² − 1.132e9/λ⁴, λ in nm
+                // Michels, Foschum & Kienle, Opt. Express 16, 5907 (2008): water, n = 1.311 + 1.154e4/λ² − 1.132e9/λ⁴,
+                // λ in nm
                 Arguments.of(MICHELS_WATER, 633, 1.332749701871, 1e-11),
                 // IAPWS R9-97 (1997), table 3 at 0.1 MPa and 20 °C, 589 nm, as published to six digits (from memory)
                 Arguments.of("form = \"iapws-water\"", 589, 1.333355, 2e-5));
@@ -55,10 +59,12 @@ class MaterialReaderReferenceTest {
             from_nm = 210
             to_nm = 3700
             """;
-    private static final String RUTILE = "form = \"pole\"\na = 5.913\nb = [0.2441]\nc = [0.0803]\nfrom_nm = 430\nto_nm = 1530";
+    private static final String RUTILE =
+            "form = \"pole\"\na = 5.913\nb = [0.2441]\nc = [0.0803]\nfrom_nm = 430\nto_nm = 1530";
     private static final String POLYSTYRENE =
             "form = \"sellmeier\"\na = 1.0\nb = [1.4435]\nc = [0.020216]\nfrom_nm = 437\nto_nm = 1052";
-    private static final String MICHELS_WATER = "form = \"cauchy\"\na = 1.311\nb = 1.154e4\nc = -1.132e9\nfrom_nm = 400\nto_nm = 900";
+    private static final String MICHELS_WATER =
+            "form = \"cauchy\"\na = 1.311\nb = 1.154e4\nc = -1.132e9\nfrom_nm = 400\nto_nm = 900";
 
     @ParameterizedTest
     @MethodSource
@@ -80,16 +86,20 @@ class MaterialReaderReferenceTest {
 
     @Test
     void aRangeThatAFileNarrowsIsKeptTo() {
-        RefractiveIndex water = material("form = \"iapws-water\"\nfrom_nm = 400\nto_nm = 900").index();
+        RefractiveIndex water =
+                material("form = \"iapws-water\"\nfrom_nm = 400\nto_nm = 900").index();
         assertEquals(material("form = \"iapws-water\"").index().at(900, 22), water.at(900, 22));
         assertTrue(water.covers(400) && !water.covers(399));
         Refusal refusal = assertThrows(Refusal.class, () -> water.at(901, 22));
-        assertTrue(refusal.getMessage().contains("not known at 901 nm: its file says 400 to 900 nm"), refusal.getMessage());
+        assertTrue(
+                refusal.getMessage().contains("not known at 901 nm: its file says 400 to 900 nm"),
+                refusal.getMessage());
     }
 
     @Test
     void theNoteOfASourceStaysBehindItsCitation() {
-        Material material = material("form = \"constant\"\nn = 1.5\nfrom_nm = 400\nto_nm = 900\n" + SOURCE + "note = \"Odd.\"");
+        Material material =
+                material("form = \"constant\"\nn = 1.5\nfrom_nm = 400\nto_nm = 900\n" + SOURCE + "note = \"Odd.\"");
         assertEquals(new Source(Source.Basis.PUBLISHED, "See the test. Odd."), material.source());
     }
 
@@ -104,7 +114,9 @@ class MaterialReaderReferenceTest {
                 of("form = \"cauchy\"\n▶n = 1.3\nfrom_nm = 400\nto_nm = 900", "The key n is not known"),
                 of("form = \"pole\"\na = 1\nb = [1, 2]\n▶c = [0.01]\nfrom_nm = 400\nto_nm = 900", "each b needs its c"),
                 of("form = \"sellmeier\"\na = 1\nb = [1]\n▶c = [0.36]\nfrom_nm = 400\nto_nm = 900", "pole at 600 nm"),
-                of("form = \"cauchy\"\n▶a = 1.3\nb = 1.2e9\nfrom_nm = 400\nto_nm = 900", "check the coefficients' units"),
+                of(
+                        "form = \"cauchy\"\n▶a = 1.3\nb = 1.2e9\nfrom_nm = 400\nto_nm = 900",
+                        "check the coefficients' units"),
                 of("form = \"iapws-water\"\n▶from_nm = 100", "between 200 and 1100"),
                 of("▶table = \"spectra/none.csv\"", "There is no table"),
                 of("name = \"X\"", "The key form is missing"));

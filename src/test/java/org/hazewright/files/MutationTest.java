@@ -20,9 +20,48 @@ import org.junit.jupiter.api.io.TempDir;
 class MutationTest {
     private static final int ROUNDS = 800;
     private static final String[] PIECES = {
-        "\"", "'", "[", "]", "[[", "]]", "{", "}", "=", ",", ".", "#", "\n", "\r", "\t", " ", "-", "+", "1e400", "nan", "inf", "0x1",
-        "true", "1979-05-27", "\\u0000", "\\", "µ", "\uD83D\uDE00", "\uFEFF", "..", "/", "99999999999999999999", "-1", "0", "[[item]]",
-        "[tissue]", "\"\"\"", "1e-320", "a.b.c = 1", "format = 2", ";", "0,5"
+        "\"",
+        "'",
+        "[",
+        "]",
+        "[[",
+        "]]",
+        "{",
+        "}",
+        "=",
+        ",",
+        ".",
+        "#",
+        "\n",
+        "\r",
+        "\t",
+        " ",
+        "-",
+        "+",
+        "1e400",
+        "nan",
+        "inf",
+        "0x1",
+        "true",
+        "1979-05-27",
+        "\\u0000",
+        "\\",
+        "µ",
+        "\uD83D\uDE00",
+        "\uFEFF",
+        "..",
+        "/",
+        "99999999999999999999",
+        "-1",
+        "0",
+        "[[item]]",
+        "[tissue]",
+        "\"\"\"",
+        "1e-320",
+        "a.b.c = 1",
+        "format = 2",
+        ";",
+        "0,5"
     };
 
     @TempDir
@@ -93,15 +132,26 @@ class MutationTest {
     void ingredientsLotsMaterialsAndTables() {
         SmallShelf.in(folder);
         List<String> files = List.of(
-                "ink.toml", "emulsion.toml", "emulsion-L07.toml", "gelatin-10.toml", "water.toml", "materials/oil.toml", "spectra/ink.csv");
+                "ink.toml",
+                "emulsion.toml",
+                "emulsion-L07.toml",
+                "gelatin-10.toml",
+                "water.toml",
+                "materials/oil.toml",
+                "spectra/ink.csv");
         for (int i = 0; i < files.size(); i++) {
             Path file = folder.resolve(files.get(i));
             String text = read(file);
-            mutate(file, text, 10 + i, f -> {
-                ShelfReader.Lenient lenient = ShelfReader.readLenient(folder);
-                for (FileRefusal refusal : lenient.refusals()) wellSaid(refusal, folder);
-                return lenient;
-            }, ROUNDS / 10);
+            mutate(
+                    file,
+                    text,
+                    10 + i,
+                    f -> {
+                        ShelfReader.Lenient lenient = ShelfReader.readLenient(folder);
+                        for (FileRefusal refusal : lenient.refusals()) wellSaid(refusal, folder);
+                        return lenient;
+                    },
+                    ROUNDS / 10);
             Marked.write(file, text);
         }
     }
@@ -112,7 +162,8 @@ class MutationTest {
         Path file = folder.resolve("b.brief.toml");
         for (int i = 0; i < 500; i++) {
             byte[] bytes = BRIEF.getBytes(StandardCharsets.UTF_8);
-            for (int k = 0; k <= random.nextInt(3); k++) bytes[random.nextInt(bytes.length)] = (byte) random.nextInt(256);
+            for (int k = 0; k <= random.nextInt(3); k++)
+                bytes[random.nextInt(bytes.length)] = (byte) random.nextInt(256);
             Files.write(file, bytes);
             attempt(file, f -> BriefReader.read(f, TissueSpectra.of(null)), "");
         }

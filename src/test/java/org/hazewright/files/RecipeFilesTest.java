@@ -1,7 +1,6 @@
 package org.hazewright.files;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
-import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.nio.file.Path;
 import java.util.ArrayList;
@@ -145,20 +144,30 @@ class RecipeFilesTest {
                 of("temperature_c = 25", "▶balance_standard_uncertainty_g = -1", "0 or above"),
                 of("id = \"ink-1-1000\"", "▶id = \"ink-1-100\"", "Two stocks are called"),
                 of("stock = \"ink-1-100\"", "▶stock = \"ink-1-10\"", "No [[stock]] before this line", "ink-1-100"),
-                of("stock = \"ink-1-100\"", "ingredient = \"ink\"\n▶stock = \"ink-1-100\"", "an ingredient and a stock"),
+                of(
+                        "stock = \"ink-1-100\"",
+                        "ingredient = \"ink\"\n▶stock = \"ink-1-100\"",
+                        "an ingredient and a stock"),
                 of("ingredient = \"ink\"", "▶stock = \"ink-1-1000\"", "No [[stock]] before this line", "add it above"),
                 of("ingredient_g = 1.0", "▶ingredient_g = 0", "a stock holds something"),
                 of("diluent_g = 99.0", "▶diluent_g = 0", "a stock is diluted"),
                 of("diluent_g = 99.0", "▶diluent_ml = 99.0", "The key diluent_ml in [stock] is not known"),
                 of("[[item]]\ningredient = \"emulsion\"", "▶[[item]]", "neither an ingredient nor a stock"),
-                of("ingredient = \"emulsion\"", "▶ingredient = \"gelatin-10\"", "is a blend", "0.9 g water, 0.1 g gelatin-powder"),
+                of(
+                        "ingredient = \"emulsion\"",
+                        "▶ingredient = \"gelatin-10\"",
+                        "is a blend",
+                        "0.9 g water, 0.1 g gelatin-powder"),
                 of("ingredient = \"emulsion\"", "▶ingredient = \"emulsoin\"", "Perhaps \"emulsion\""),
                 of("ingredient = \"emulsion\"", "ingredient = \"emulsion-L07\"\n▶lot = \"L08\"", "is the lot \"L07\""),
                 of("mass_g = 12.34", "▶mass_g = -12.34", "0 or above"),
                 of("mass_g = 12.34", "▶mass_g = \"12.34 g\"", "must be a number without quotes"),
                 of("mass_g = 12.34", "mass_g = 12▶,34", "decimal point"),
                 of("title = \"Forearm block\"", "▶title = \"\"", "title is empty"),
-                of("[[item]]\ningredient = \"emulsion\"", "▶[[ite]]\ningredient = \"emulsion\"", "Perhaps item is meant"));
+                of(
+                        "[[item]]\ningredient = \"emulsion\"",
+                        "▶[[ite]]\ningredient = \"emulsion\"",
+                        "Perhaps item is meant"));
     }
 
     @ParameterizedTest
@@ -171,7 +180,8 @@ class RecipeFilesTest {
     @Test
     void aRecipeOfNothingIsRefused() {
         Path file = folder.resolve("block.recipe.toml");
-        Marked.of("▶format = 1\nbase = \"water\"\n").refusedAs(file, () -> RecipeReader.read(file, shelf), "nothing to weigh");
+        Marked.of("▶format = 1\nbase = \"water\"\n")
+                .refusedAs(file, () -> RecipeReader.read(file, shelf), "nothing to weigh");
         Marked.of("▶format = 1\nbase = \"water\"\n[[item]]\ningredient = \"water\"\nmass_g = 0\n")
                 .refusedAs(file, () -> RecipeReader.read(file, shelf), "weigh 0 g");
     }
@@ -199,7 +209,8 @@ class RecipeFilesTest {
         List<Stock> stocks = new ArrayList<>();
         int count = random.nextInt(4);
         for (int i = 0; i < count; i++) {
-            Optional<Stock> from = i > 0 && random.nextBoolean() ? Optional.of(stocks.get(random.nextInt(i))) : Optional.empty();
+            Optional<Stock> from =
+                    i > 0 && random.nextBoolean() ? Optional.of(stocks.get(random.nextInt(i))) : Optional.empty();
             Ingredient ingredient = from.map(Stock::ingredient).orElse(weighable.get(random.nextInt(weighable.size())));
             Optional<String> lot = from.isPresent() ? from.get().lot() : ownLot(ingredient, random);
             stocks.add(new Stock(
