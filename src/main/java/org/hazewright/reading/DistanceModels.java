@@ -85,7 +85,8 @@ final class DistanceModels {
             // from just before 0, and to where a response that begins before 0 still reaches
             TimeAxis t = setUp.time();
             double from = t.fromPs() - Math.ceil(t.fromPs() / t.stepPs()) * t.stepPs();
-            double early = setUp.response() == null ? 0 : Math.max(0, -setUp.response().timePs()[0]);
+            double early =
+                    setUp.response() == null ? 0 : Math.max(0, -setUp.response().timePs()[0]);
             return new TimeAxis(from, Math.max(t.toPs() + early, from + t.stepPs()), t.stepPs());
         }
         double period = 1e6 / setUp.modulationMhz();
@@ -131,10 +132,11 @@ final class DistanceModels {
                     "Averaged over a ring from %.4g to %.4g mm%s.",
                     ring[i].ring().innerMm(),
                     ring[i].ring().outerMm(),
-                    setUp.convention().per() == Convention.Per.ENTERED ? ", per power entered" : ", per power incident");
-        String few = poor[i]
-                ? "Too few of the " + setUp.packets() + " packets arrive there; ask for more packets."
-                : null;
+                    setUp.convention().per() == Convention.Per.ENTERED
+                            ? ", per power entered"
+                            : ", per power incident");
+        String few =
+                poor[i] ? "Too few of the " + setUp.packets() + " packets arrive there; ask for more packets." : null;
         if (silent(i)) return few != null ? few : "The run of packets was stopped.";
         if (outside[i] == null) return few;
         return few == null ? outside[i] : outside[i] + " " + few;

@@ -108,7 +108,8 @@ final class Layer {
         double[] g = new double[n * n];
         for (int i = 0; i < n; i++)
             for (int j = 0; j < n; j++)
-                g[i * n + j] = ((i == j ? 1 : 0) - albedo * phase[i * n + j] * w[j]) / directions.cosine()[i];
+                g[i * n + j] = ((i == j ? 1 : 0) - albedo * phase[i * n + j] * w[j])
+                        / directions.cosine()[i];
         return g;
     }
 
