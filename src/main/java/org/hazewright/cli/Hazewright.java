@@ -115,8 +115,9 @@ public final class Hazewright implements Runnable {
             err.println("hazewright: " + problem.getMessage());
             return REFUSED;
         }
-        err.println("hazewright: this is a fault of the program, not of your files; nothing was overwritten. Please report it with"
-                + " the lines below.");
+        err.println(
+                "hazewright: this is a fault of the program, not of your files; nothing was overwritten. Please report it with"
+                        + " the lines below.");
         problem.printStackTrace(err);
         return FAULT;
     }
@@ -133,7 +134,8 @@ public final class Hazewright implements Runnable {
         @Override
         public String[] getVersion() {
             String version = Hazewright.class.getPackage().getImplementationVersion();
-            return new String[] {"hazewright " + (version == null ? "(from source)" : version.toLowerCase(Locale.ROOT))};
+            return new String[] {"hazewright " + (version == null ? "(from source)" : version.toLowerCase(Locale.ROOT))
+            };
         }
     }
 }

@@ -3,14 +3,16 @@ package org.hazewright.mixture;
 import java.util.Arrays;
 import java.util.SplittableRandom;
 import java.util.stream.IntStream;
+import org.apache.commons.math3.util.KthSelector;
 import org.hazewright.optics.Refusal;
 
 /**
  * Monte Carlo propagation of a recipe's uncertainty (JCGM 101:2008, clause 7): the recipe made many times on paper.
  *
- * <p>Every unknown is normal. Draws come in blocks of {@value #BLOCK}, each with a generator seeded by the seed and its own number,
- * so that the same seed gives the same draws on any number of threads. Results at wavelength j: mean, standard uncertainty, 95 %
- * interval (probabilistically symmetric, clause 7.7), and the share of draws inside given limits.
+ * <p>Every unknown is normal. Draws come in blocks of {@value #BLOCK}, each with a generator of its own, split off the seed's one
+ * after the other, so that the same seed gives the same draws on any number of threads and near seeds give unrelated ones.
+ * Results at wavelength j: mean, standard uncertainty, 95 % interval (probabilistically symmetric, clause 7.7), and the share of
+ * draws inside given limits.
  */
 public final class Draws {
     private static final int BLOCK = 2048;
@@ -39,11 +41,12 @@ public final class Draws {
             throw new Refusal("A Monte Carlo of " + count + " draws is asked for; it must be 100 to 10 000 000.");
         int wavelengths = x.wavelengthsNm.length;
         double[][] values = new double[2 * wavelengths][count];
-        int blocks = (count + BLOCK - 1) / BLOCK;
-        IntStream.range(0, blocks)
+        SplittableRandom root = new SplittableRandom(seed);
+        SplittableRandom[] generators = new SplittableRandom[(count + BLOCK - 1) / BLOCK];
+        for (int b = 0; b < generators.length; b++) generators[b] = root.split();
+        IntStream.range(0, generators.length)
                 .parallel()
-                .forEach(b -> new Block(x, new SplittableRandom(seed * 0x9E3779B97F4A7C15L + b))
-                        .fill(values, b * BLOCK, Math.min(count, (b + 1) * BLOCK)));
+                .forEach(b -> new Block(x, generators[b]).fill(values, b * BLOCK, Math.min(count, (b + 1) * BLOCK)));
         return new Draws(count, wavelengths, values);
     }
 
@@ -125,9 +128,11 @@ public final class Draws {
 
     /** Ends of the interval that holds 95 % of the draws, 2.5 % left out on either side, 1/cm. */
     public double[] interval95(boolean scattering, int wavelength) {
-        double[] sorted = of(scattering, wavelength).clone();
-        Arrays.sort(sorted);
-        return new double[] {sorted[(int) Math.floor(0.025 * (count - 1))], sorted[(int) Math.ceil(0.975 * (count - 1))]
+        double[] work = of(scattering, wavelength).clone();
+        KthSelector order = new KthSelector(); // two order statistics are had without sorting the rest
+        return new double[] {
+            order.select(work, null, (int) Math.floor(0.025 * (count - 1))),
+            order.select(work, null, (int) Math.ceil(0.975 * (count - 1)))
         };
     }
 

@@ -50,7 +50,9 @@ public final class Sweep {
         double[] reached = Arrays.stream(wavelengthsNm)
                 .filter(nm -> {
                     try {
-                        mixture.massesG().keySet().forEach(i -> MassSpecific.requireFigures(i, nm, mixture.temperatureC()));
+                        mixture.massesG()
+                                .keySet()
+                                .forEach(i -> MassSpecific.requireFigures(i, nm, mixture.temperatureC()));
                         return true;
                     } catch (Refusal refusal) {
                         gap.accept(nm, refusal.getMessage());
