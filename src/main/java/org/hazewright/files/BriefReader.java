@@ -56,6 +56,12 @@ public final class BriefReader {
         return shared(page, name, page.text("title", name), text.sha256(), targets, tissue);
     }
 
+    /** A brief that comes with the program, by its name. */
+    public static Brief readShipped(String name) {
+        return ShelfReader.inShipped(
+                shelf -> read(shelf.resolveSibling("demo").resolve(name + ".brief.toml"), TissueSpectra::shipped));
+    }
+
     /** A brief of the parts that all kinds of brief files share, with these targets. */
     static Brief shared(
             TomlPage page, String name, String title, String sha256, List<Target> targets, Optional<Tissue> tissue) {

@@ -89,8 +89,10 @@ public final class AddingDoubling {
             double reflected = up * pass * (1 - normal);
             double transmitted = down * pass * (1 - normal);
             for (int i = 0; i < n; i++) {
-                double out =
-                        2 * directions.cosine()[i] * directions.weight()[i] * (1 - directions.reflectance()[i]);
+                double out = 2
+                        * directions.cosine()[i]
+                        * directions.weight()[i]
+                        * (1 - directions.reflectance()[i]);
                 reflected += out * both[2 * i];
                 transmitted += out * both[2 * i + 1];
             }

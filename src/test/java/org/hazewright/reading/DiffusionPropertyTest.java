@@ -44,7 +44,8 @@ class DiffusionPropertyTest {
     /** Trapezoidal rule in ln t over 16 decades, which converges exponentially for these curves. */
     private static double integral(DoubleUnaryOperator f) {
         double sum = 0;
-        for (double u = Math.log(1e-6); u < Math.log(1e10); u += 0.02) sum += f.applyAsDouble(Math.exp(u)) * Math.exp(u);
+        for (double u = Math.log(1e-6); u < Math.log(1e10); u += 0.02)
+            sum += f.applyAsDouble(Math.exp(u)) * Math.exp(u);
         return 0.02 * sum;
     }
 
