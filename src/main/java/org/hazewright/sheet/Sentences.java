@@ -27,10 +27,12 @@ final class Sentences {
 
     /** Whether it meets the brief, and if not how near it comes. */
     static String verdict(Answer answer) {
-        if (answer.meets()) return "The recipe meets every tolerance.";
+        if (answer.meets())
+            return "As planned, every target lies inside its tolerance; the worst miss is "
+                    + Figures.fixed(answer.worstMiss(), 2) + " half-widths.";
         long outside = answer.predicted().stream().filter(p -> !p.inside()).count();
         String how = outside + " of " + answer.predicted().size() + " targets " + (outside == 1 ? "lies" : "lie")
-                + " outside, the worst by " + Figures.fixed(answer.worstMiss(), 2) + " half-widths of its tolerance";
+                + " outside; the worst miss is " + Figures.fixed(answer.worstMiss(), 2) + " half-widths";
         double best = answer.bestPossibleWorstMiss();
         if (best > 1)
             return "No recipe from this shelf meets every tolerance; this is the closest. " + how
