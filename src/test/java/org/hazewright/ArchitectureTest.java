@@ -17,32 +17,55 @@ class ArchitectureTest {
     static final ArchRule arrows = layeredArchitecture()
             .consideringOnlyDependenciesInLayers()
             .withOptionalLayers(true)
-            .layer("optics").definedBy("org.hazewright.optics..")
-            .layer("shelf").definedBy("org.hazewright.shelf..")
-            .layer("mixture").definedBy("org.hazewright.mixture..")
-            .layer("brief").definedBy("org.hazewright.brief..")
-            .layer("design").definedBy("org.hazewright.design..")
-            .layer("bench").definedBy("org.hazewright.bench..")
-            .layer("learning").definedBy("org.hazewright.learning..")
-            .layer("reading").definedBy("org.hazewright.reading..")
-            .layer("files").definedBy("org.hazewright.files..")
-            .layer("sheet").definedBy("org.hazewright.sheet..")
-            .layer("cli").definedBy("org.hazewright.cli..")
-            .layer("desk").definedBy("org.hazewright.desk..")
-            .whereLayer("optics").mayNotAccessAnyLayer()
-            .whereLayer("shelf").mayOnlyAccessLayers("optics")
-            .whereLayer("mixture").mayOnlyAccessLayers("optics", "shelf")
-            .whereLayer("brief").mayOnlyAccessLayers("optics", "shelf")
-            .whereLayer("design").mayOnlyAccessLayers("optics", "shelf", "mixture", "brief")
-            .whereLayer("bench").mayOnlyAccessLayers("optics", "shelf", "mixture", "brief", "design")
-            .whereLayer("learning").mayOnlyAccessLayers("optics", "shelf", "mixture")
-            .whereLayer("reading").mayOnlyAccessLayers("optics", "shelf", "mixture")
+            .layer("optics")
+            .definedBy("org.hazewright.optics..")
+            .layer("shelf")
+            .definedBy("org.hazewright.shelf..")
+            .layer("mixture")
+            .definedBy("org.hazewright.mixture..")
+            .layer("brief")
+            .definedBy("org.hazewright.brief..")
+            .layer("design")
+            .definedBy("org.hazewright.design..")
+            .layer("bench")
+            .definedBy("org.hazewright.bench..")
+            .layer("learning")
+            .definedBy("org.hazewright.learning..")
+            .layer("reading")
+            .definedBy("org.hazewright.reading..")
+            .layer("files")
+            .definedBy("org.hazewright.files..")
+            .layer("sheet")
+            .definedBy("org.hazewright.sheet..")
+            .layer("cli")
+            .definedBy("org.hazewright.cli..")
+            .layer("desk")
+            .definedBy("org.hazewright.desk..")
+            .whereLayer("optics")
+            .mayNotAccessAnyLayer()
+            .whereLayer("shelf")
+            .mayOnlyAccessLayers("optics")
+            .whereLayer("mixture")
+            .mayOnlyAccessLayers("optics", "shelf")
+            .whereLayer("brief")
+            .mayOnlyAccessLayers("optics", "shelf")
+            .whereLayer("design")
+            .mayOnlyAccessLayers("optics", "shelf", "mixture", "brief")
+            .whereLayer("bench")
+            .mayOnlyAccessLayers("optics", "shelf", "mixture", "brief", "design")
+            .whereLayer("learning")
+            .mayOnlyAccessLayers("optics", "shelf", "mixture")
+            .whereLayer("reading")
+            .mayOnlyAccessLayers("optics", "shelf", "mixture")
             .whereLayer("files")
             .mayOnlyAccessLayers("optics", "shelf", "mixture", "brief", "design", "bench", "learning", "reading")
             .whereLayer("sheet")
-            .mayOnlyAccessLayers("optics", "shelf", "mixture", "brief", "design", "bench", "learning", "reading", "files")
-            .whereLayer("cli").mayNotBeAccessedByAnyLayer()
-            .whereLayer("desk").mayOnlyBeAccessedByLayers("cli")
+            .mayOnlyAccessLayers(
+                    "optics", "shelf", "mixture", "brief", "design", "bench", "learning", "reading", "files")
+            .whereLayer("cli")
+            .mayNotBeAccessedByAnyLayer()
+            .whereLayer("desk")
+            .mayOnlyBeAccessedByLayers("cli")
             .because("the domain never knows how it is filed, printed or shown");
 
     @ArchTest
@@ -52,17 +75,20 @@ class ArchitectureTest {
             .because("a room that needs its neighbour's neighbour back is not a room");
 
     @ArchTest
-    static final ArchRule javafxOnlyInDesk = only("javafx..", "org.hazewright.desk..", "the core runs without a toolkit");
+    static final ArchRule javafxOnlyInDesk =
+            only("javafx..", "org.hazewright.desk..", "the core runs without a toolkit");
 
     @ArchTest
     static final ArchRule poiOnlyInSheet =
             only("org.apache.poi..", "org.hazewright.sheet..", "workbooks are one room's business");
 
     @ArchTest
-    static final ArchRule tomlOnlyInFiles = only("org.tomlj..", "org.hazewright.files..", "files speak TOML, values do not");
+    static final ArchRule tomlOnlyInFiles =
+            only("org.tomlj..", "org.hazewright.files..", "files speak TOML, values do not");
 
     @ArchTest
-    static final ArchRule picocliOnlyInCli = only("picocli..", "org.hazewright.cli..", "commands are thin and in one place");
+    static final ArchRule picocliOnlyInCli =
+            only("picocli..", "org.hazewright.cli..", "commands are thin and in one place");
 
     @ArchTest
     static final ArchRule consoleOnlyInCli = noClasses()

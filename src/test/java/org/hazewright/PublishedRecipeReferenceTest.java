@@ -90,10 +90,12 @@ class PublishedRecipeReferenceTest {
         Answer answer = Answering.to(brief, SHELF, 0);
         Map<Ingredient, Double> grams = answer.recipe().massesG();
         double inkG = grams.get(SHELF.require("ink-published-bottle"));
-        double emulsionMl = grams.get(SHELF.require("lipid-emulsion-20")) / SHELF.require("lipid-emulsion-20").densityGPerMl();
+        double emulsionMl = grams.get(SHELF.require("lipid-emulsion-20"))
+                / SHELF.require("lipid-emulsion-20").densityGPerMl();
         assertEquals(0.01402, inkG, 0.05 * 0.01402);
         assertEquals(49.85, emulsionMl, 0.04 * 49.85);
         assertTrue(answer.meets());
-        if (coarseBalance) assertFalse(answer.recipe().stocks().isEmpty(), "14 mg on a milligram balance needs a stock");
+        if (coarseBalance)
+            assertFalse(answer.recipe().stocks().isEmpty(), "14 mg on a milligram balance needs a stock");
     }
 }

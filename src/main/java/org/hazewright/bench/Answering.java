@@ -56,8 +56,7 @@ public final class Answering {
         return to(brief, shelf, alternatives, () -> false, share -> {});
     }
 
-    public static Answer to(
-            Brief brief, Shelf shelf, int alternatives, BooleanSupplier stop, DoubleConsumer progress) {
+    public static Answer to(Brief brief, Shelf shelf, int alternatives, BooleanSupplier stop, DoubleConsumer progress) {
         return new Answering(brief, shelf, stop, progress).answer(alternatives);
     }
 
@@ -73,7 +72,7 @@ public final class Answering {
     }
 
     private Answer answer(int alternatives) {
-        Finding finding = design.find();
+        Finding finding = design.find(alternatives == 0);
         List<Planned> planned = new ArrayList<>();
         double best = Double.POSITIVE_INFINITY;
         for (Option option : finding.options()) {
@@ -161,7 +160,8 @@ public final class Answering {
             worst = Math.max(worst, Math.abs(miss));
             predicted.add(new Answer.Predicted(p, values[j], u, interval[0], interval[1], miss));
         }
-        Score score = new Score(bias, offered.score().ingredient(), offered.score().weighing());
+        Score score =
+                new Score(bias, offered.score().ingredient(), offered.score().weighing());
         Option exact = offered.option();
         return new Answer(
                 brief,
@@ -177,8 +177,7 @@ public final class Answering {
                 finding.limits(),
                 others,
                 finding.leftOut(),
-                new Answer.SearchCount(
-                        finding.admissible(), finding.solved(), finding.cut(), finding.proven()),
+                new Answer.SearchCount(finding.admissible(), finding.solved(), finding.cut(), finding.proven()),
                 offered.plan().notes());
     }
 
@@ -204,10 +203,11 @@ public final class Answering {
             }
 
             boolean beats(Way other) {
-                boolean noWorse = planned.score().total() <= other.planned.score().total()
-                        && weighings() <= other.weighings()
-                        && !(cost > other.cost)
-                        && chance >= other.chance - 0.005;
+                boolean noWorse =
+                        planned.score().total() <= other.planned.score().total()
+                                && weighings() <= other.weighings()
+                                && !(cost > other.cost)
+                                && chance >= other.chance - 0.005;
                 return noWorse
                         && (planned.score().total() < other.planned.score().total()
                                 || weighings() < other.weighings()
@@ -250,11 +250,17 @@ public final class Answering {
             if (way.chance > best.chance + 0.01) return "likelier to land";
             if (way.weighings() < best.weighings()) return "fewer weighings";
             if (way.cost < 0.95 * best.cost) return "costs less";
-            Set<Ingredient> news = new HashSet<>(way.planned.option().concentrationGPerMl().keySet());
+            Set<Ingredient> news =
+                    new HashSet<>(way.planned.option().concentrationGPerMl().keySet());
             news.removeAll(best.planned.option().concentrationGPerMl().keySet());
             return news.isEmpty()
                     ? "another base"
-                    : "with " + news.stream().map(Ingredient::id).sorted().findFirst().orElseThrow();
+                    : "with "
+                            + news.stream()
+                                    .map(Ingredient::id)
+                                    .sorted()
+                                    .findFirst()
+                                    .orElseThrow();
         }
     }
 

@@ -16,14 +16,19 @@ import org.hazewright.shelf.Ingredient;
  *
  * <p>A simpler way of dosing one ingredient counts as alike when it adds no more than {@value #ALIKE} squared half-widths of
  * tolerance, or half a per cent of the score, whichever is more: under a twentieth of a half-width in quadrature, which no
- * measurement of the finished phantom can show.
+ * measurement of the finished phantom can show. A weighing is worth a person's minutes when it gains {@value #WEIGHING_GAINS}
+ * squared half-widths, or one per cent of the score; a way that saves weighings may add as much for each.
  */
 final class Planning {
     private static final double ALIKE = 0.002;
     private static final double ALIKE_RELATIVE = 0.005;
+    private static final double WEIGHING_GAINS = 0.01;
+    private static final double WEIGHING_GAINS_RELATIVE = 0.01;
 
-    /** A last digit is moved for no less, in squared half-widths: grams that do next to nothing stay as they are. */
+    /** A last digit is moved for no less, in squared half-widths or as a share: grams that do next to nothing stay as they are. */
     private static final double WORTH_A_DIGIT = 1e-4;
+
+    private static final double WORTH_A_DIGIT_RELATIVE = 5e-4;
 
     /** Most calls of the judge. */
     private static final int CALLS = 39;
@@ -98,7 +103,8 @@ final class Planning {
     }
 
     private double simplify(List<Dose> chosen, List<List<Dose>> ways, double best, int[] steps) {
-        double allowance = Math.max(ALIKE, ALIKE_RELATIVE * Math.abs(best));
+        double alike = Math.max(ALIKE, ALIKE_RELATIVE * Math.abs(best));
+        double gains = Math.max(WEIGHING_GAINS, WEIGHING_GAINS_RELATIVE * Math.abs(best));
         double score = best;
         Comparator<Dose> simplest =
                 Comparator.<Dose>comparingInt(d -> d.weighings(balance)).thenComparingDouble(Dose::leftG);
@@ -109,7 +115,8 @@ final class Planning {
                 chosen.set(k, way);
                 Optional<Recipe> recipe = assembly.recipe(chosen, steps);
                 double s = recipe.isPresent() ? score(recipe.get()) : Double.POSITIVE_INFINITY;
-                if (s <= score + allowance) {
+                int saved = Math.max(0, precise.weighings(balance) - way.weighings(balance));
+                if (s <= score + alike + saved * gains) {
                     score = s;
                     break;
                 }
@@ -148,7 +155,7 @@ final class Planning {
             Optional<Recipe> recipe =
                     Dilutions.weighable(g, balance) ? assembly.recipe(chosen, steps) : Optional.empty();
             double s = recipe.isPresent() ? score(recipe.get()) : Double.POSITIVE_INFINITY;
-            if (!(s < best - WORTH_A_DIGIT)) {
+            if (!(s < best - Math.max(WORTH_A_DIGIT, WORTH_A_DIGIT_RELATIVE * Math.abs(best)))) {
                 steps[k] -= direction;
                 break;
             }

@@ -3,6 +3,7 @@ package org.hazewright.bench;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.OptionalDouble;
+import java.util.stream.Collectors;
 import org.hazewright.mixture.Item;
 import org.hazewright.mixture.Mixture;
 import org.hazewright.shelf.Family;
@@ -123,9 +124,18 @@ final class PouredSteps {
                             + celsius(above) + ".",
                     hold,
                     OptionalDouble.empty(),
-                    "What is added now would be better off below " + celsius(below)
-                            + ": add it slowly, a little at a time.");
+                    tooWarm(above.getAsDouble()));
         }
+    }
+
+    private String tooWarm(double leastC) {
+        String names = list.facts.added().stream()
+                .filter(i -> i.making().addBelowC().orElse(leastC) < leastC)
+                .map(Ingredient::name)
+                .collect(Collectors.joining("; "));
+        if (names.isEmpty()) names = "What is added";
+        return names + " would be better off cooler, below " + celsius(list.facts.addBelowC())
+                + ": add it slowly, a little at a time.";
     }
 
     private void add(int place) {
@@ -147,7 +157,7 @@ final class PouredSteps {
                     min,
                     Cautions.ULTRASOUND);
         } else {
-            if (i.part() != Part.MODIFIER) StockSteps.rouseBottle(list, i);
+            if (i.part() != Part.MODIFIER) StockSteps.rouseBottle(list, ADD, i);
             list.weigh(
                     ADD,
                     w,

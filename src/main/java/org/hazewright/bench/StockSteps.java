@@ -24,7 +24,7 @@ final class StockSteps {
                 continue;
             }
             if (s.from().isPresent()) list.say(Step.Stage.STOCKS, shake(s.from().get(), s.ingredient()));
-            else if (roused.add(s.ingredient())) rouseBottle(list, s.ingredient());
+            else if (roused.add(s.ingredient())) rouseBottle(list, Step.Stage.STOCKS, s.ingredient());
             boolean cured = WeighingOrder.castAndCured(list.recipe.base());
             String bottle = cured
                     ? "into a clean cup labelled " + s.id() + "."
@@ -43,11 +43,11 @@ final class StockSteps {
     }
 
     /** An ink or a suspension is stirred up in its own bottle; a powder is not. */
-    static void rouseBottle(StepList list, Ingredient i) {
+    static void rouseBottle(StepList list, Step.Stage stage, Ingredient i) {
         OptionalDouble ultrasound = i.making().sonicateMin();
         if (i.form() != Form.LIQUID || ultrasound.isEmpty()) return;
         list.say(
-                Step.Stage.STOCKS,
+                stage,
                 "Shake the bottle of " + StepList.named(i) + " and stand it in an ultrasonic bath for "
                         + StepList.minutes(ultrasound.getAsDouble()) + ".",
                 OptionalDouble.empty(),
@@ -80,6 +80,6 @@ final class StockSteps {
 
     private static String content(Stock s) {
         String part = s.from().map(f -> "stock " + f).orElse(s.ingredient().name());
-        return "1 g of " + part + " in " + Grams.plain(s.ratio()) + " g";
+        return part + ", 1 g in " + Grams.plain(s.ratio()) + " g";
     }
 }

@@ -14,16 +14,18 @@ public record Balance(double readabilityG, double standardUncertaintyG, double s
         Refusal.notNegative("Smallest load of the balance in g", smallestLoadG);
         Refusal.positive("Capacity of the balance in g", capacityG);
         if (capacityG <= smallestLoadG)
-            throw new Refusal("The balance's capacity of " + capacityG + " g is not above its smallest load of " + smallestLoadG
-                    + " g.");
+            throw new Refusal("The balance's capacity of " + capacityG + " g is not above its smallest load of "
+                    + smallestLoadG + " g.");
         if (readabilityG > capacityG)
-            throw new Refusal("The balance's readability of " + readabilityG + " g is above its capacity of " + capacityG + " g.");
+            throw new Refusal("The balance's readability of " + readabilityG + " g is above its capacity of "
+                    + capacityG + " g.");
     }
 
     /** Rounded to what the display can show. */
     public double rounded(double massG) {
         double steps = Math.rint(massG / readabilityG);
-        // Decimal readabilities are not binary: multiply back through the decimal text to print 12.345, not 12.345000000000001.
+        // Decimal readabilities are not binary: multiply back through the decimal text to print 12.345, not
+        // 12.345000000000001.
         return java.math.BigDecimal.valueOf(steps)
                 .multiply(java.math.BigDecimal.valueOf(readabilityG))
                 .doubleValue();
@@ -31,7 +33,9 @@ public record Balance(double readabilityG, double standardUncertaintyG, double s
 
     /** Digits after the point that the display shows. */
     public int decimals() {
-        return Math.max(0, java.math.BigDecimal.valueOf(readabilityG).stripTrailingZeros().scale());
+        return Math.max(
+                0,
+                java.math.BigDecimal.valueOf(readabilityG).stripTrailingZeros().scale());
     }
 
     /** Loads needed for a mass: 1, or as many as the capacity asks for. */

@@ -31,10 +31,12 @@ public record Brief(
         bases = List.copyOf(bases);
         targets = List.copyOf(targets);
         moulds = List.copyOf(moulds);
-        if (bases.isEmpty()) throw new Refusal("The brief names no base; give base = \"water\" or another base of the shelf.");
+        if (bases.isEmpty())
+            throw new Refusal("The brief names no base; give base = \"water\" or another base of the shelf.");
         if (targets.isEmpty())
-            throw new Refusal("The brief has no targets; give at least one [[target]] with wavelength_nm and mua_per_cm or"
-                    + " musp_per_cm, or a [tissue].");
+            throw new Refusal(
+                    "The brief has no targets; give at least one [[target]] with wavelength_nm and mua_per_cm or"
+                            + " musp_per_cm, or a [tissue].");
         Refusal.positive("batch_ml", batchMl);
         Refusal.within("overage", overage, 0, 2);
         Refusal.within("temperature_c", temperatureC, 0, 100);
@@ -50,23 +52,38 @@ public record Brief(
         List<Point> points = new ArrayList<>();
         for (Target t : targets) {
             t.muaPerCm()
-                    .ifPresent(v -> points.add(new Point(
-                            Point.Quantity.MUA, t.wavelengthNm(), v, t.muaTolerancePerCm(), t.weight())));
+                    .ifPresent(v -> points.add(
+                            new Point(Point.Quantity.MUA, t.wavelengthNm(), v, t.muaTolerancePerCm(), t.weight())));
             t.muspPerCm()
-                    .ifPresent(v -> points.add(new Point(
-                            Point.Quantity.MUSP, t.wavelengthNm(), v, t.muspTolerancePerCm(), t.weight())));
+                    .ifPresent(v -> points.add(
+                            new Point(Point.Quantity.MUSP, t.wavelengthNm(), v, t.muspTolerancePerCm(), t.weight())));
         }
         return points;
     }
 
     /** Wavelengths wanted, in nm, ascending, each once. */
     public double[] wavelengthsNm() {
-        return targets.stream().mapToDouble(Target::wavelengthNm).sorted().distinct().toArray();
+        return targets.stream()
+                .mapToDouble(Target::wavelengthNm)
+                .sorted()
+                .distinct()
+                .toArray();
     }
 
     /** The same brief with other targets. */
     public Brief withTargets(List<Target> others) {
         return new Brief(
-                name, title, bases, batchMl, overage, temperatureC, others, moulds, limits, balance, tissue, Optional.empty());
+                name,
+                title,
+                bases,
+                batchMl,
+                overage,
+                temperatureC,
+                others,
+                moulds,
+                limits,
+                balance,
+                tissue,
+                Optional.empty());
     }
 }

@@ -14,7 +14,8 @@ public record Mould(Shape shape, double lengthMm, double widthMm, double heightM
         Refusal.positive("Length of a mould in mm", lengthMm);
         Refusal.positive("Width of a mould in mm", widthMm);
         Refusal.positive("Height of a mould in mm", heightMm);
-        if (count < 1 || count > 1000) throw new Refusal("Count of a mould is " + count + "; it must lie between 1 and 1000.");
+        if (count < 1 || count > 1000)
+            throw new Refusal("Count of a mould is " + count + "; it must lie between 1 and 1000.");
     }
 
     public static Mould cylinder(double diameterMm, double heightMm, int count) {

@@ -8,7 +8,12 @@ import org.hazewright.optics.Refusal;
  * base's least share of the volume (at least what its own file asks for).
  */
 public record SearchLimits(
-        List<String> use, List<String> avoid, int maxAbsorbers, int maxScatterers, int maxModifiers, double leastBaseShare) {
+        List<String> use,
+        List<String> avoid,
+        int maxAbsorbers,
+        int maxScatterers,
+        int maxModifiers,
+        double leastBaseShare) {
 
     /**
      * What a brief that says nothing means: two absorbers, one scatterer, and no modifier, since a modifier moves targets only by

@@ -1,5 +1,7 @@
 package org.hazewright.brief;
 
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.util.OptionalDouble;
 import org.hazewright.optics.Refusal;
 
@@ -18,11 +20,27 @@ public record Target(
     public Target {
         Refusal.positive("Wavelength in nm", wavelengthNm);
         if (muaPerCm.isEmpty() && muspPerCm.isEmpty())
-            throw new Refusal("The target at " + wavelengthNm + " nm wants neither mua_per_cm nor musp_per_cm; give at least one.");
+            throw new Refusal("The target at " + wavelengthNm
+                    + " nm wants neither mua_per_cm nor musp_per_cm; give at least one.");
         muaPerCm.ifPresent(v -> Refusal.notNegative("µa wanted at " + wavelengthNm + " nm in 1/cm", v));
         muspPerCm.ifPresent(v -> Refusal.notNegative("µs' wanted at " + wavelengthNm + " nm in 1/cm", v));
-        if (muaPerCm.isPresent()) Refusal.positive("Tolerance of µa at " + wavelengthNm + " nm in 1/cm", muaTolerancePerCm);
-        if (muspPerCm.isPresent()) Refusal.positive("Tolerance of µs' at " + wavelengthNm + " nm in 1/cm", muspTolerancePerCm);
+        if (muaPerCm.isPresent())
+            Refusal.positive("Tolerance of µa at " + wavelengthNm + " nm in 1/cm", muaTolerancePerCm);
+        if (muspPerCm.isPresent())
+            Refusal.positive("Tolerance of µs' at " + wavelengthNm + " nm in 1/cm", muspTolerancePerCm);
         Refusal.positive("Weight of the target at " + wavelengthNm + " nm", weight);
+    }
+
+    /**
+     * The share of a wanted value that a half-width was most likely said as: one of at most four digits that gives it again; empty
+     * when there is none.
+     */
+    public static OptionalDouble shareOf(double halfWidthPerCm, double wantedPerCm) {
+        if (!(wantedPerCm > 0)) return OptionalDouble.empty();
+        double share = new BigDecimal(halfWidthPerCm / wantedPerCm)
+                .round(new MathContext(4))
+                .doubleValue();
+        boolean same = Math.abs(share * wantedPerCm - halfWidthPerCm) <= 1e-12 * halfWidthPerCm;
+        return same && share > 0 && share <= 1 ? OptionalDouble.of(share) : OptionalDouble.empty();
     }
 }

@@ -51,8 +51,10 @@ public record Tissue(
                 ? 0
                 : Math.log(10)
                         * molPerL
-                        * (saturation * spectra.oxyEpsilon().at(nm) + (1 - saturation) * spectra.deoxyEpsilon().at(nm));
-        double water = waterFraction == 0 ? 0 : waterFraction * spectra.waterMua().at(nm);
+                        * (saturation * spectra.oxyEpsilon().at(nm)
+                                + (1 - saturation) * spectra.deoxyEpsilon().at(nm));
+        double water =
+                waterFraction == 0 ? 0 : waterFraction * spectra.waterMua().at(nm);
         double fat = fatFraction == 0 ? 0 : fatFraction * spectra.fatMua().at(nm);
         return haemoglobin + water + fat;
     }

@@ -8,12 +8,12 @@ import java.util.List;
 import java.util.concurrent.Callable;
 import org.hazewright.bench.Answer;
 import org.hazewright.bench.Answering;
-import org.hazewright.bench.Warning;
 import org.hazewright.bench.Warnings;
 import org.hazewright.brief.Brief;
 import org.hazewright.files.BriefReader;
 import org.hazewright.files.RecipeWriter;
 import org.hazewright.files.SafeFile;
+import org.hazewright.sheet.RecipeSheet;
 import org.hazewright.shelf.Shelf;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
@@ -53,27 +53,31 @@ final class DesignCommand implements Callable<Integer> {
         if (alternatives < 0 || alternatives > 10)
             throw new org.hazewright.optics.Refusal(
                     "--alternatives is " + alternatives + "; it must be a whole number from 0 to 10.");
+        RecipeSheet.getReady();
         PrintWriter text = spec.commandLine().getOut();
         Shelf shelf = shared.shelf();
         Brief wanted = BriefReader.read(brief, shared.tissueSpectra());
         Answer answer = Answering.to(wanted, shelf, alternatives);
-        List<Warning> warnings = Warnings.of(answer.recipe(), LocalDate.now());
+        LocalDate today = LocalDate.now();
         Path folder = out != null ? out : brief.toAbsolutePath().getParent();
-        List<Path> written = write(answer, folder);
+        List<Path> written = write(answer, today, folder);
         if (shared.json) DesignJson.of(answer).print(text);
         else {
-            new DesignText(answer, shared.units, text).print(warnings);
+            new DesignText(answer, shared.units, text).print(Warnings.of(answer.recipe(), today));
             if (!shared.quiet) written.forEach(p -> text.println("Written: " + p));
         }
         return answer.meets() ? Hazewright.DONE : Hazewright.MISSES;
     }
 
-    private static List<Path> write(Answer answer, Path folder) {
+    private static List<Path> write(Answer answer, LocalDate today, Path folder) {
         String name = answer.brief().name();
         List<Path> written = new ArrayList<>();
         Path recipe = folder.resolve(name + ".recipe.toml");
         RecipeWriter.write(recipe, answer.recipe(), SafeFile.Overwrite.KEEP_PREVIOUS);
         written.add(recipe);
+        Path sheet = folder.resolve(name + ".xlsx");
+        SafeFile.write(sheet, RecipeSheet.write(answer, today), SafeFile.Overwrite.KEEP_PREVIOUS);
+        written.add(sheet);
         return written;
     }
 }

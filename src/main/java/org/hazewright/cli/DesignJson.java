@@ -84,8 +84,7 @@ final class DesignJson {
         for (Item item : recipe.items()) {
             double ofIngredient = item.stock().isEmpty()
                     ? item.massG()
-                    : item.massG()
-                            * recipe.contentPerG(item.stock().get()).getOrDefault(item.ingredient(), 0.0);
+                    : item.massG() * recipe.contentPerG(item.stock().get()).getOrDefault(item.ingredient(), 0.0);
             items.add(Json.object()
                     .with("ingredient", item.ingredient().id())
                     .with("lot", lot(item))
@@ -98,9 +97,7 @@ final class DesignJson {
     }
 
     private static String lot(Item item) {
-        return item.lot()
-                .or(() -> item.ingredient().lot().map(l -> l.number()))
-                .orElse(null);
+        return item.lot().or(() -> item.ingredient().lot().map(l -> l.number())).orElse(null);
     }
 
     private static List<Map<String, Object>> stocks(Recipe recipe) {

@@ -39,7 +39,8 @@ final class DesignText {
         out.println(brief.title());
         out.println(answer.recipe().base().name() + ", " + Figures.plain(brief.batchMl()) + " mL"
                 + (brief.overage() > 0
-                        ? " + " + Figures.plain(100 * brief.overage()) + " % = " + Figures.significant(brief.volumeMl(), 5) + " mL"
+                        ? " + " + Figures.plain(100 * brief.overage()) + " % = "
+                                + Figures.significant(brief.volumeMl(), 5) + " mL"
                         : "")
                 + ", at " + Figures.plain(brief.temperatureC()) + " °C");
         out.println();
@@ -116,7 +117,11 @@ final class DesignText {
             if (item.stock().isPresent()) notes.add(i.name());
             table.row(Integer.toString(++n), item.label(), grams(item.massG()), String.join(", ", notes));
         }
-        table.row("", "together", grams(answer.mixture().massG()), Figures.significant(answer.mixture().volumeMl(), 5) + " mL");
+        table.row(
+                "",
+                "together",
+                grams(answer.mixture().massG()),
+                Figures.significant(answer.mixture().volumeMl(), 5) + " mL");
         table.print(out);
     }
 
@@ -128,7 +133,8 @@ final class DesignText {
         for (Answer.Predicted p : answer.predicted()) {
             double u = units.of(p.uPerCm());
             int decimals = Math.max(
-                    Figures.decimalsFor(u), Figures.decimalsFor(units.of(p.point().tolerancePerCm())));
+                    Figures.decimalsFor(u),
+                    Figures.decimalsFor(units.of(p.point().tolerancePerCm())));
             table.row(
                     Figures.plain(p.point().wavelengthNm()),
                     p.point().quantity().sign(),
@@ -137,7 +143,9 @@ final class DesignText {
                     Figures.fixed(units.of(p.perCm()), decimals),
                     Figures.fixed(u, decimals),
                     LandingGauge.of(p.miss()),
-                    (p.miss() < 0 ? "−" : "+") + Figures.fixed(Math.abs(p.miss()), 2) + (p.inside() ? "" : "  OUTSIDE"));
+                    (p.miss() < 0 ? "−" : "+")
+                            + Figures.fixed(Math.abs(p.miss()), 2)
+                            + (p.inside() ? "" : "  OUTSIDE"));
         }
         table.print(out);
         out.println("  miss: in half-widths of the tolerance; u: standard uncertainty (k = 1)");
@@ -183,11 +191,7 @@ final class DesignText {
         for (Answer.Alternative a : answer.alternatives()) {
             Set<String> what = new LinkedHashSet<>();
             a.recipe().items().forEach(i -> what.add(i.label()));
-            table.row(
-                    a.why(),
-                    times(a.chance()) + " in 100",
-                    a.weighings() + " weighings",
-                    String.join(", ", what));
+            table.row(a.why(), times(a.chance()) + " in 100", a.weighings() + " weighings", String.join(", ", what));
         }
         table.print(out);
     }

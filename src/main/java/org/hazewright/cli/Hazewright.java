@@ -2,12 +2,19 @@ package org.hazewright.cli;
 
 import java.io.PrintWriter;
 import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
 import java.util.Locale;
+import java.util.Optional;
+import org.hazewright.desk.Opening;
 import org.hazewright.files.WriteFailure;
 import org.hazewright.optics.Refusal;
+import org.hazewright.shelf.Nearest;
 import picocli.CommandLine;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Model.CommandSpec;
+import picocli.CommandLine.Option;
+import picocli.CommandLine.Parameters;
 import picocli.CommandLine.Spec;
 
 /** The program: without a command it opens the window, with one it does that and ends with a status. */
@@ -40,10 +47,35 @@ public final class Hazewright implements Runnable {
     @Spec
     private CommandSpec spec;
 
+    @Option(
+            names = "--ingredients",
+            paramLabel = "DIR",
+            description = "Shelf for the window (default: the folder ingredients here, else the shelf that comes with the program).")
+    private Path ingredients;
+
+    @Parameters(
+            arity = "0..1",
+            paramLabel = "FILE",
+            description = "A brief, recipe or batch (.toml) to open in the window.")
+    private Path file;
+
+    /** Without a command: opens the window. */
     @Override
     public void run() {
-        throw new CommandLine.ParameterException(
-                spec.commandLine(), "Say what to do: a command is missing. Try hazewright --help.");
+        if (file != null && !file.toString().endsWith(".toml"))
+            throw new CommandLine.ParameterException(
+                    spec.commandLine(), "There is no command \"" + file + "\"." + perhaps(file.toString()));
+        if (file != null && !Files.isRegularFile(file))
+            throw new Refusal("There is no file " + file + "; name a brief, a recipe or a batch.");
+        Shared shelf = new Shared();
+        shelf.ingredients = ingredients;
+        Opening.open(Optional.ofNullable(shelf.shelfFolder()), Optional.ofNullable(file));
+    }
+
+    private String perhaps(String word) {
+        return Nearest.to(word, spec.subcommands().keySet())
+                .map(n -> " Perhaps \"" + n + "\" is meant.")
+                .orElse("");
     }
 
     public static void main(String[] args) {
@@ -83,8 +115,9 @@ public final class Hazewright implements Runnable {
             err.println("hazewright: " + problem.getMessage());
             return REFUSED;
         }
-        err.println("hazewright: this is a fault of the program, not of your files; nothing was overwritten. Please report it with"
-                + " the lines below.");
+        err.println(
+                "hazewright: this is a fault of the program, not of your files; nothing was overwritten. Please report it with"
+                        + " the lines below.");
         problem.printStackTrace(err);
         return FAULT;
     }
@@ -101,7 +134,8 @@ public final class Hazewright implements Runnable {
         @Override
         public String[] getVersion() {
             String version = Hazewright.class.getPackage().getImplementationVersion();
-            return new String[] {"hazewright " + (version == null ? "(from source)" : version.toLowerCase(Locale.ROOT))};
+            return new String[] {"hazewright " + (version == null ? "(from source)" : version.toLowerCase(Locale.ROOT))
+            };
         }
     }
 }

@@ -52,7 +52,8 @@ final class IngredientsCommand implements Callable<Integer> {
     }
 
     private static String families(Ingredient i) {
-        return String.join(", ", i.families().stream().map(Family::word).sorted().toList());
+        return String.join(
+                ", ", i.families().stream().map(Family::word).sorted().toList());
     }
 
     /** One line an ingredient. */
@@ -71,16 +72,22 @@ final class IngredientsCommand implements Callable<Integer> {
             if (shared.json) {
                 List<Map<String, Object>> rows = new ArrayList<>();
                 for (Ingredient i : shelf.ingredients()) rows.add(row(i).fields());
-                Json.object().with("shelf", shelf.place()).with("ingredients", rows).print(out);
+                Json.object()
+                        .with("shelf", shelf.place())
+                        .with("ingredients", rows)
+                        .print(out);
                 return Hazewright.DONE;
             }
             for (Part part : Part.values()) {
-                List<Ingredient> of =
-                        shelf.ingredients().stream().filter(i -> i.part() == part).toList();
+                List<Ingredient> of = shelf.ingredients().stream()
+                        .filter(i -> i.part() == part)
+                        .toList();
                 if (of.isEmpty()) continue;
-                out.println(part.word() + (part == Part.BASE ? "s, and what family they are" : "s, and what they mix into"));
+                out.println(part.word()
+                        + (part == Part.BASE ? "s, and what family they are" : "s, and what they mix into"));
                 TextTable table = new TextTable("  ", "llll");
-                for (Ingredient i : of) table.row(i.id(), i.name(), families(i), i.source().basis().word());
+                for (Ingredient i : of)
+                    table.row(i.id(), i.name(), families(i), i.source().basis().word());
                 table.print(out);
                 out.println();
             }
@@ -94,7 +101,9 @@ final class IngredientsCommand implements Callable<Integer> {
                     .with("id", i.id())
                     .with("name", i.name())
                     .with("part", i.part().word())
-                    .with("families", i.families().stream().map(Family::word).sorted().toList())
+                    .with(
+                            "families",
+                            i.families().stream().map(Family::word).sorted().toList())
                     .with("basis", i.source().basis().word());
         }
     }
@@ -155,7 +164,9 @@ final class IngredientsCommand implements Callable<Integer> {
                     .with("id", i.id())
                     .with("name", i.name())
                     .with("part", i.part().word())
-                    .with("families", i.families().stream().map(Family::word).sorted().toList())
+                    .with(
+                            "families",
+                            i.families().stream().map(Family::word).sorted().toList())
                     .with("form", i.form().word())
                     .with("density_g_per_ml", i.isBlend() ? null : i.densityGPerMl())
                     .with("blend", blend)
@@ -170,30 +181,42 @@ final class IngredientsCommand implements Callable<Integer> {
 
         private static void text(Ingredient i, Shelf shelf, PrintWriter out) {
             out.println(i.name());
-            out.println(i.id() + ", " + i.part().word() + (i.part() == Part.BASE ? " of the family " : " for ") + families(i)
-                    + ", " + i.form().word());
-            i.lot().ifPresent(l -> out.println("lot " + l.number() + " of " + l.of()
-                    + l.expires().map(d -> ", good until " + d).orElse("")));
+            out.println(i.id() + ", " + i.part().word() + (i.part() == Part.BASE ? " of the family " : " for ")
+                    + families(i) + ", " + i.form().word());
+            i.lot()
+                    .ifPresent(l -> out.println("lot " + l.number() + " of " + l.of()
+                            + l.expires().map(d -> ", good until " + d).orElse("")));
             out.println();
             TextTable facts = new TextTable("  ", "ll");
-            facts.row("density", Figures.significant(i.isBlend() ? shelf.densityGPerMl(i) : i.densityGPerMl(), 4) + " g/mL"
-                    + (i.isBlend() ? ", from its parts" : ""));
+            facts.row(
+                    "density",
+                    Figures.significant(i.isBlend() ? shelf.densityGPerMl(i) : i.densityGPerMl(), 4) + " g/mL"
+                            + (i.isBlend() ? ", from its parts" : ""));
             for (BlendPart p : i.blend())
                 facts.row("blend", Figures.plain(100 * p.massFraction()) + " % " + p.ingredient() + " by mass");
-            i.index().ifPresent(m -> facts.row("index", m.name() + " (" + m.source().citation() + ")"));
+            i.index()
+                    .ifPresent(
+                            m -> facts.row("index", m.name() + " (" + m.source().citation() + ")"));
             i.maxGPerMl().ifPresent(v -> facts.row("at most", Figures.plain(v) + " g per mL of phantom"));
             i.pricePerG().ifPresent(v -> facts.row("price", Figures.plain(v) + " per g"));
-            i.absorption().ifPresent(a -> facts.row("absorption", absorption(a) + "; known to "
-                    + percent(i.uncertainty().absorption())));
-            i.scattering().ifPresent(s -> facts.row("scattering", scattering(s) + "; known to "
-                    + percent(i.uncertainty().scattering())));
+            i.absorption()
+                    .ifPresent(a -> facts.row(
+                            "absorption",
+                            absorption(a) + "; known to "
+                                    + percent(i.uncertainty().absorption())));
+            i.scattering()
+                    .ifPresent(s -> facts.row(
+                            "scattering",
+                            scattering(s) + "; known to "
+                                    + percent(i.uncertainty().scattering())));
             facts.row("basis", i.source().basis().word());
             facts.print(out);
             if (!i.isBlend()) coefficients(i, out);
             list("Source", List.of(i.source().citation()), out);
             list("Handling", i.handling(), out);
             List<String> conflicts = new ArrayList<>();
-            for (Conflict c : i.conflicts()) conflicts.add(c.with() + ": " + c.why() + (c.refuse() ? " Never joined." : ""));
+            for (Conflict c : i.conflicts())
+                conflicts.add(c.with() + ": " + c.why() + (c.refuse() ? " Never joined." : ""));
             list("Not with", conflicts, out);
             list("Cautions", i.cautions(), out);
         }
@@ -203,7 +226,8 @@ final class IngredientsCommand implements Callable<Integer> {
         }
 
         private static String absorption(Absorption a) {
-            return a.table().name() + ", " + Figures.plain(a.table().fromNm()) + " to " + Figures.plain(a.table().toNm()) + " nm"
+            return a.table().name() + ", " + Figures.plain(a.table().fromNm()) + " to "
+                    + Figures.plain(a.table().toNm()) + " nm"
                     + (a.albedo() > 0 ? ", " + percent(a.albedo()) + " of it scattering" : "");
         }
 
@@ -271,7 +295,11 @@ final class IngredientsCommand implements Callable<Integer> {
                 Json.object()
                         .with("shelf", reading.shelf().place())
                         .with("usable", usable)
-                        .with("problems", reading.refusals().stream().map(FileRefusal::getMessage).toList())
+                        .with(
+                                "problems",
+                                reading.refusals().stream()
+                                        .map(FileRefusal::getMessage)
+                                        .toList())
                         .with(
                                 "doubts",
                                 doubts.stream()
@@ -284,11 +312,15 @@ final class IngredientsCommand implements Callable<Integer> {
             } else {
                 reading.refusals().forEach(p -> out.println(p.getMessage()));
                 if (!reading.refusals().isEmpty()) out.println();
-                if (!shared.quiet) doubts.forEach(d -> out.println("look again at " + d.ingredient() + ": " + d.sentence()));
+                if (!shared.quiet)
+                    doubts.forEach(d -> out.println("look again at " + d.ingredient() + ": " + d.sentence()));
                 if (!doubts.isEmpty() && !shared.quiet) out.println();
-                out.println(usable + " ingredients and " + reading.shelf().materials().size() + " materials read from "
+                out.println(usable + " ingredients and "
+                        + reading.shelf().materials().size() + " materials read from "
                         + reading.shelf().place() + "; " + reading.refusals().size()
-                        + (reading.refusals().size() == 1 ? " file that cannot be used, " : " files that cannot be used, ")
+                        + (reading.refusals().size() == 1
+                                ? " file that cannot be used, "
+                                : " files that cannot be used, ")
                         + doubts.size() + (doubts.size() == 1 ? " doubt." : " doubts."));
             }
             return reading.refusals().isEmpty() ? Hazewright.DONE : Hazewright.REFUSED;

@@ -31,7 +31,8 @@ final class Json {
 
     void print(PrintWriter out) {
         try {
-            out.println(JSON.std.with(JSON.Feature.PRETTY_PRINT_OUTPUT)
+            out.println(JSON.std
+                    .with(JSON.Feature.PRETTY_PRINT_OUTPUT)
                     .with(JSON.Feature.WRITE_NULL_PROPERTIES)
                     .asString(fields));
         } catch (IOException e) {

@@ -57,7 +57,10 @@ final class ParticlesCommand implements Callable<Integer> {
             description = "Number median diameter and geometric standard deviation.")
     private double[] lognormal;
 
-    @Option(names = "--sizes", paramLabel = "FILE.csv", description = "Sizing table: from_nm, to_nm, weight (by number).")
+    @Option(
+            names = "--sizes",
+            paramLabel = "FILE.csv",
+            description = "Sizing table: from_nm, to_nm, weight (by number).")
     private Path sizes;
 
     @Option(names = "--at", paramLabel = "NM", split = ",", description = "Wavelengths in nm, with commas between.")
@@ -81,13 +84,18 @@ final class ParticlesCommand implements Callable<Integer> {
     @Option(names = "--size-parameter", paramLabel = "X", description = "One sphere: x = π D n_host/λ.")
     private Double sizeParameter;
 
-    @Option(names = "--index", paramLabel = "N[,K]", split = ",", description = "Its index relative to the host, n + ik.")
+    @Option(
+            names = "--index",
+            paramLabel = "N[,K]",
+            split = ",",
+            description = "Its index relative to the host, n + ik.")
     private double[] index;
 
     @Option(
             names = "--table",
             paramLabel = "FILE.csv",
-            description = "Many spheres: size_parameter, index, absorption_index; prints the same with q_ext, q_sca, g.")
+            description =
+                    "Many spheres: size_parameter, index, absorption_index; prints the same with q_ext, q_sca, g.")
     private Path table;
 
     @Override
@@ -164,8 +172,8 @@ final class ParticlesCommand implements Callable<Integer> {
         for (double nm : at) {
             Refusal.positive("--at wavelength in nm", nm);
             double n = around.at(nm, temperatureC).n();
-            ParticleOptics p = population.perVolumeFraction(
-                    particle.at(nm, temperatureC), n, nm, volumeFraction, model);
+            ParticleOptics p =
+                    population.perVolumeFraction(particle.at(nm, temperatureC), n, nm, volumeFraction, model);
             double mus = p.musPerCm() * volumeFraction;
             double musp = p.muspPerCm() * volumeFraction;
             double mua = p.muaPerCm() * volumeFraction;
@@ -204,7 +212,8 @@ final class ParticlesCommand implements Callable<Integer> {
 
     private SizeDistribution distribution() {
         int given = (diameterNm != null ? 1 : 0) + (lognormal != null ? 1 : 0) + (sizes != null ? 1 : 0);
-        if (given != 1) throw new Refusal("Give the size once: --diameter-nm D, --lognormal-nm MEDIAN,GSD or --sizes FILE.csv.");
+        if (given != 1)
+            throw new Refusal("Give the size once: --diameter-nm D, --lognormal-nm MEDIAN,GSD or --sizes FILE.csv.");
         if (diameterNm != null) return new SizeDistribution.Single(diameterNm);
         if (sizes != null) return SizeTable.read(sizes);
         if (lognormal.length != 2)

@@ -90,7 +90,8 @@ final class PredictCommand implements Callable<Integer> {
     private void text(Recipe made, Mixture mixture, double[] nm, double[] uMua, double[] uMusp, PrintWriter out) {
         out.println(made.title());
         out.println(made.base().name() + ", " + Figures.significant(mixture.volumeMl(), 5) + " mL, "
-                + Figures.significant(mixture.densityGPerMl(), 4) + " g/mL, at " + Figures.plain(mixture.temperatureC()) + " °C");
+                + Figures.significant(mixture.densityGPerMl(), 4) + " g/mL, at " + Figures.plain(mixture.temperatureC())
+                + " °C");
         out.println();
         TextTable table = new TextTable("  ", "rrrrrr");
         String unit = " " + shared.units.sign();
@@ -131,7 +132,8 @@ final class PredictCommand implements Callable<Integer> {
             Refusal.positive("--step in nm", step);
             if (to < from) throw new Refusal("--to is " + to + " nm, below --from, " + from + " nm.");
             double count = Math.floor((to - from) / step + 1e-9) + 1;
-            if (count > MOST) throw new Refusal("That range has " + (long) count + " wavelengths; at most " + MOST + ".");
+            if (count > MOST)
+                throw new Refusal("That range has " + (long) count + " wavelengths; at most " + MOST + ".");
             double[] nm = new double[(int) count];
             for (int j = 0; j < nm.length; j++) nm[j] = from + j * step;
             return nm;

@@ -36,7 +36,8 @@ final class Shared {
     @Option(
             names = "--ingredients",
             paramLabel = "DIR",
-            description = "Shelf to use (default: the folder ingredients here, else the shelf that comes with the program).")
+            description =
+                    "Shelf to use (default: the folder ingredients here, else the shelf that comes with the program).")
     Path ingredients;
 
     @Option(names = "--units", paramLabel = "cm|mm", description = "Show coefficients per cm (default) or per mm.")

@@ -24,8 +24,7 @@ final class TextTable {
 
     void print(PrintWriter out) {
         int[] width = new int[right.length];
-        for (String[] row : rows)
-            for (int i = 0; i < row.length; i++) width[i] = Math.max(width[i], length(row[i]));
+        for (String[] row : rows) for (int i = 0; i < row.length; i++) width[i] = Math.max(width[i], length(row[i]));
         for (String[] row : rows) {
             StringBuilder line = new StringBuilder(indent);
             for (int i = 0; i < row.length; i++) {

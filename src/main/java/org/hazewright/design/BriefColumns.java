@@ -44,7 +44,8 @@ final class BriefColumns {
     /** The mixture of base and amounts in g per mL, as {@code volumeMl} of it. */
     Mixture mixture(Map<Ingredient, Double> concentrationGPerMl, double volumeMl) {
         double added = 0;
-        for (var c : concentrationGPerMl.entrySet()) added += c.getValue() / c.getKey().densityGPerMl();
+        for (var c : concentrationGPerMl.entrySet())
+            added += c.getValue() / c.getKey().densityGPerMl();
         double baseG = baseDensity * Math.max(0, 1 - added) * volumeMl;
         Map<Ingredient, Double> masses = new LinkedHashMap<>();
         candidates.baseParts.forEach((part, share) -> masses.put(part, share * baseG));
@@ -104,7 +105,8 @@ final class BriefColumns {
         List<double[]> slopes = new ArrayList<>();
         double[] residual = new double[base.length];
         for (int j = 0; j < base.length; j++) residual[j] = points.get(j).wantedPerCm() - base[j];
-        for (int k = 0; k < kappas.size(); k++) slopes.add(displaced(candidates.ingredients.get(k), kappas.get(k), base));
+        for (int k = 0; k < kappas.size(); k++)
+            slopes.add(displaced(candidates.ingredients.get(k), kappas.get(k), base));
         SearchLimits l = brief.limits();
         SetProblem.Limits limits = new SetProblem.Limits(
                 l.maxAbsorbers(),
@@ -117,29 +119,39 @@ final class BriefColumns {
     }
 
     /**
-     * The problem over some candidates, straightened at a state of the mixture: µ_j(c) ≈ µ_j(c₀) + Σ_i a_ij (c_i − c₀_i) with the
-     * slopes a_ij of the full model. Tolerances are narrowed to {@code edge} times themselves as limits, and left as they are in
-     * the score.
+     * The problem over some candidates, straightened at a state of the mixture: µ_j(c) ≈ µ_j(c₀) + Σ_i a_ij (c_i − c₀_i) with given
+     * slopes a_ij. Tolerances are narrowed to {@code edge} times themselves as limits, and left as they are in the score.
      */
-    SetProblem tangent(Map<Ingredient, Double> at, List<Ingredient> members, double edge) {
+    SetProblem tangent(Map<Ingredient, Double> at, List<Ingredient> members, List<double[]> slopes, double edge) {
         Mixture state = mixture(at, 1);
         double[] host = hostIndex(state);
         double[] here = values(state);
-        double[] base = baseValues(state);
         double[] residual = new double[here.length];
         for (int j = 0; j < here.length; j++) residual[j] = points.get(j).wantedPerCm() - here[j];
         List<double[]> kappas = new ArrayList<>();
-        List<double[]> slopes = new ArrayList<>();
-        for (Ingredient i : members) {
-            double[] kappa = kappa(i, host, state.crowdFraction(i));
-            double[] slope = movesOthers(i, at) ? slope(i, at, here) : displaced(i, kappa, base);
-            for (int j = 0; j < here.length; j++) residual[j] += slope[j] * at.get(i);
-            kappas.add(kappa);
-            slopes.add(slope);
+        for (int k = 0; k < members.size(); k++) {
+            Ingredient i = members.get(k);
+            kappas.add(kappa(i, host, state.crowdFraction(i)));
+            for (int j = 0; j < here.length; j++) residual[j] += slopes.get(k)[j] * at.get(i);
         }
         int count = members.size(); // the set is chosen: only amounts are limited here
         SetProblem.Limits free = new SetProblem.Limits(count, count, count, count, addedVolume(), List.of());
         return problem(members, kappas, slopes, residual, edge, free);
+    }
+
+    /** Slopes ∂µ_j/∂c_i of the full model at a state, cm²/g, base displacement included. */
+    List<double[]> slopes(Map<Ingredient, Double> at, List<Ingredient> members) {
+        Mixture state = mixture(at, 1);
+        double[] host = hostIndex(state);
+        double[] here = values(state);
+        double[] base = baseValues(state);
+        List<double[]> slopes = new ArrayList<>();
+        for (Ingredient i : members)
+            slopes.add(
+                    movesOthers(i, at)
+                            ? slope(i, at, here)
+                            : displaced(i, kappa(i, host, state.crowdFraction(i)), base));
+        return slopes;
     }
 
     /** Whether an ingredient changes what the others do: by crowding, or by enough volume to move the host index. */
@@ -208,7 +220,8 @@ final class BriefColumns {
     /** Most of an ingredient in g/mL: its own limit, and where its crowding model ends. */
     private static double upper(Ingredient i) {
         double upper = i.maxGPerMl().orElse(Double.POSITIVE_INFINITY);
-        if (i.scattering().orElse(null) instanceof Scattering.MieParticles mie && !(mie.crowding() instanceof Crowding.None))
+        if (i.scattering().orElse(null) instanceof Scattering.MieParticles mie
+                && !(mie.crowding() instanceof Crowding.None))
             upper = Math.min(upper, 0.999 * crowdLimit(mie) * i.densityGPerMl() / mie.volumeFraction());
         return upper;
     }

@@ -39,7 +39,8 @@ final class Candidates {
     static Candidates of(Brief brief, Shelf shelf, String baseId) {
         Ingredient base = shelf.require(baseId);
         if (base.part() != Part.BASE)
-            throw new Refusal("\"" + baseId + "\" cannot be a base: its file says part = \"" + base.part().word()
+            throw new Refusal("\"" + baseId + "\" cannot be a base: its file says part = \""
+                    + base.part().word()
                     + "\". Bases on the shelf: "
                     + shelf.ingredients().stream()
                             .filter(i -> i.part() == Part.BASE)
@@ -59,8 +60,8 @@ final class Candidates {
             Ingredient i = shelf.require(id);
             if (parts.containsKey(i) || i.equals(base)) continue;
             if (!i.mixesInto(family) && brief.bases().size() == 1)
-                throw new Refusal(id + " does not mix into " + baseId + ": it mixes into " + families(i) + ", and " + baseId
-                        + " is a " + family.word() + ". Take it out of use, or choose another base.");
+                throw new Refusal(id + " does not mix into " + baseId + ": it mixes into " + families(i) + ", and "
+                        + baseId + " is a " + family.word() + ". Take it out of use, or choose another base.");
             if (brief.limits().avoid().contains(id))
                 throw new Refusal("\"" + id + "\" stands both in use and in avoid; take it out of one.");
             String gap = gap(i, nm, brief.temperatureC());
@@ -85,15 +86,16 @@ final class Candidates {
     }
 
     private void refuseWithoutScatterer(Brief brief, Shelf shelf, double[] nm) {
-        boolean wanted = brief.points().stream()
-                .anyMatch(p -> p.quantity() == Point.Quantity.MUSP && p.wantedPerCm() > 0);
+        boolean wanted =
+                brief.points().stream().anyMatch(p -> p.quantity() == Point.Quantity.MUSP && p.wantedPerCm() > 0);
         if (!wanted) return;
         boolean scatters = ingredients.stream().anyMatch(i -> i.scattering().isPresent())
                 || baseParts.keySet().stream().anyMatch(i -> i.scattering().isPresent());
         if (scatters && brief.limits().maxScatterers() > 0) return;
         if (scatters)
-            throw new Refusal("The brief wants µs' but allows no scatterer (max_scatterers = 0); raise max_scatterers or drop"
-                    + " musp_per_cm.");
+            throw new Refusal(
+                    "The brief wants µs' but allows no scatterer (max_scatterers = 0); raise max_scatterers or drop"
+                            + " musp_per_cm.");
         String known = shelf.ingredients().stream()
                 .filter(i -> i.part() == Part.SCATTERER)
                 .map(i -> i.id() + (leftOut.containsKey(i.id()) ? " (" + leftOut.get(i.id()) + ")" : ""))

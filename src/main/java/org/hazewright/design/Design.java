@@ -46,7 +46,11 @@ public final class Design {
     /** One base's search, kept for the sentences about its limits. */
     record Searched(Candidates candidates, BriefColumns columns, SetProblem problem, SetResult result) {}
 
-    public Finding find() {
+    /**
+     * The best options; with {@code leadersOnly} those that could still be best when weighings are made finer by stocks, else all
+     * {@value #FINALISTS}.
+     */
+    public Finding find(boolean leadersOnly) {
         List<Option> options = new ArrayList<>();
         Map<String, String> leftOut = new TreeMap<>();
         List<String> refused = new ArrayList<>();
@@ -66,7 +70,7 @@ public final class Design {
             }
             searched.add(s);
             leftOut.putAll(s.candidates.leftOut);
-            List<Option> found = settle(s);
+            List<Option> found = settle(s, leadersOnly);
             double possible = Math.min(
                     settledWorstMiss(s),
                     found.stream().mapToDouble(Option::worstMiss).min().orElse(Double.POSITIVE_INFINITY));
@@ -80,12 +84,12 @@ public final class Design {
                 .thenComparing(o -> String.join(",", new java.util.TreeSet<>(o.ids()))));
         for (Searched s : searched) if (s.candidates.base.equals(options.get(0).base())) leading = s;
         List<String> limits = new HeldBack(brief, leading, options.get(0), bestPossible).sentences();
-        long admissible = searched.stream().mapToLong(s -> s.result.admissible()).sum();
+        long admissible =
+                searched.stream().mapToLong(s -> s.result.admissible()).sum();
         long solved = searched.stream().mapToLong(s -> s.result.solved()).sum();
         long cut = searched.stream().mapToLong(s -> s.result.cut()).sum();
         boolean proven = searched.stream().allMatch(s -> s.result.proven());
-        return new Finding(
-                brief, shelf, options, bestPossible, limits, leftOut, admissible, solved, cut, proven);
+        return new Finding(brief, shelf, options, bestPossible, limits, leftOut, admissible, solved, cut, proven);
     }
 
     /** The same option again with every tolerance narrowed to {@code edge} of itself: room for rounding. */
@@ -100,8 +104,7 @@ public final class Design {
         BriefColumns columns = new BriefColumns(brief, shelf, candidates);
         SetProblem problem = columns.everything();
         double bases = brief.bases().size();
-        SetResult result = new SetSearch(problem)
-                .run(FINALISTS, stop, p -> progress.accept((done + share(p)) / bases));
+        SetResult result = new SetSearch(problem).run(FINALISTS, stop, p -> progress.accept((done + share(p)) / bases));
         return new Searched(candidates, columns, problem, result);
     }
 
@@ -110,19 +113,23 @@ public final class Design {
     }
 
     /** The leading sets on the full model; sets that shrink to the same ingredients count once. */
-    private List<Option> settle(Searched s) {
+    private List<Option> settle(Searched s, boolean leadersOnly) {
         FixedPoint fixed = new FixedPoint(brief, s.columns, s.candidates);
         List<SetSolution> finalists = new ArrayList<>();
         finalists.add(s.result.best());
         finalists.addAll(s.result.runnersUp());
         List<Option> options = new ArrayList<>();
         Set<Set<String>> seen = new LinkedHashSet<>();
+        boolean canMeet = s.result.bestPossibleWorstMiss() < 1.1; // crowding moves the edge by less than that
+        double best = Double.POSITIVE_INFINITY;
         for (SetSolution f : finalists) {
             if (f.status() == ConvexProgramme.Status.INFEASIBLE) continue;
+            if (leadersOnly && f.bias() + f.ingredient() > 1.1 * best) continue;
             Map<Ingredient, Double> start = concentrations(s, f.members(), f.amounts());
-            Optional<Option> inside = fixed.leastScore(start, true, 1);
+            Optional<Option> inside = canMeet ? fixed.leastScore(start, true, 1) : Optional.empty();
             Option option = inside.or(() -> fixed.leastScore(start, false, 1)).orElseThrow();
             if (seen.add(option.ids())) options.add(option);
+            best = Math.min(best, option.score().total());
         }
         return options;
     }

@@ -22,6 +22,11 @@ final class FixedPoint {
     private static final int ROUNDS = 40;
     private static final double SETTLED = 1e-9;
 
+    /** Slopes are taken anew after a step above {@code FAR}, and once when the answer is {@code NEAR}; between they serve. */
+    private static final double FAR = 0.02;
+
+    private static final double NEAR = 1e-4;
+
     private final Brief brief;
     private final BriefColumns columns;
     private final Candidates candidates;
@@ -62,8 +67,10 @@ final class FixedPoint {
         SetProblem problem = null;
         double stride = 1;
         double[] before = null;
+        List<double[]> slopes = columns.slopes(now, members);
+        boolean near = false;
         for (int round = 0; round < ROUNDS; round++) {
-            problem = columns.tangent(now, members, edge);
+            problem = columns.tangent(now, members, slopes, edge);
             Optional<double[]> next = rule.amounts(problem);
             if (next.isEmpty()) return Optional.empty();
             double[] amounts = next.get();
@@ -78,6 +85,9 @@ final class FixedPoint {
             for (int k = 0; k < amounts.length; k++)
                 now.merge(members.get(k), stride == 1 || change <= SETTLED ? step[k] : stride * step[k], Double::sum);
             if (change <= SETTLED) break;
+            boolean arriving = change <= NEAR && !near;
+            near |= arriving;
+            if (arriving || change > FAR) slopes = columns.slopes(now, members);
         }
         double[] amounts = members.stream().mapToDouble(now::get).toArray();
         return Optional.of(option(now, members, amounts, problem));
@@ -117,7 +127,8 @@ final class FixedPoint {
     /** Signed misses of the full model. */
     private double[] misses(Mixture mixture) {
         double[] values = columns.values(mixture);
-        for (int j = 0; j < values.length; j++) values[j] = columns.points().get(j).miss(values[j]);
+        for (int j = 0; j < values.length; j++)
+            values[j] = columns.points().get(j).miss(values[j]);
         return values;
     }
 

@@ -12,6 +12,7 @@ import org.hazewright.mixture.MassSpecific;
 import org.hazewright.mixture.Mixture;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.mixture.Stock;
+import org.hazewright.optics.Refusal;
 import org.hazewright.shelf.BlendPart;
 import org.hazewright.shelf.Ingredient;
 
@@ -43,12 +44,33 @@ public final class Frozen {
                 Point p = points.get(j);
                 double nm = p.wavelengthNm();
                 double n = host.computeIfAbsent(nm, mixture::hostIndex);
-                MassSpecific m = at.computeIfAbsent(
-                        nm, x -> MassSpecific.of(i, x, mixture.temperatureC(), n, phi));
+                MassSpecific m = at.computeIfAbsent(nm, x -> MassSpecific.of(i, x, mixture.temperatureC(), n, phi));
                 k[j] = of(p, m);
             }
             kappa.put(i, k);
         }
+    }
+
+    private Frozen(List<Point> points, Frozen other) {
+        this.points = List.copyOf(points);
+        this.balance = other.balance;
+        kappa.putAll(other.kappa);
+        baseParts.addAll(other.baseParts);
+    }
+
+    /** The same model judging by other values, tolerances or weights of the same quantities at the same wavelengths. */
+    public Frozen judging(List<Point> others) {
+        boolean same = others.size() == points.size();
+        for (int j = 0; same && j < points.size(); j++)
+            same = others.get(j).quantity() == points.get(j).quantity()
+                    && others.get(j).wavelengthNm() == points.get(j).wavelengthNm();
+        if (!same) throw new Refusal("A frozen model judges only the quantities and wavelengths that it was made for.");
+        return new Frozen(others, this);
+    }
+
+    /** What is wanted, point by point. */
+    public List<Point> points() {
+        return points;
     }
 
     static double of(Point p, MassSpecific m) {
@@ -77,7 +99,8 @@ public final class Frozen {
     public double worstMiss(Recipe recipe) {
         double[] mu = valuesPerCm(recipe.massesG());
         double worst = 0;
-        for (int j = 0; j < mu.length; j++) worst = Math.max(worst, Math.abs(points.get(j).miss(mu[j])));
+        for (int j = 0; j < mu.length; j++)
+            worst = Math.max(worst, Math.abs(points.get(j).miss(mu[j])));
         return worst;
     }
 
@@ -85,7 +108,8 @@ public final class Frozen {
     public Score score(Recipe recipe) {
         Map<Ingredient, Double> masses = recipe.massesG();
         double volume = 0;
-        for (var entry : masses.entrySet()) volume += entry.getValue() / entry.getKey().densityGPerMl();
+        for (var entry : masses.entrySet())
+            volume += entry.getValue() / entry.getKey().densityGPerMl();
         double[] mu = valuesPerCm(masses);
         double bias = 0;
         double ingredient = 0;

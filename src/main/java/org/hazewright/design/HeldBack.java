@@ -58,7 +58,8 @@ final class HeldBack {
             double base = p.wantedPerCm() - searched.problem().points().get(j).residual();
             if (base <= p.wantedPerCm() + p.tolerancePerCm()) continue;
             sentences.add("The base alone already " + (p.quantity() == Point.Quantity.MUA ? "absorbs " : "scatters ")
-                    + Figures.significant(base, 3) + " /cm at " + Figures.plain(p.wavelengthNm()) + " nm, above the target "
+                    + Figures.significant(base, 3) + " /cm at " + Figures.plain(p.wavelengthNm())
+                    + " nm, above the target "
                     + Figures.significant(p.wantedPerCm(), 3) + ".");
         }
     }
@@ -70,19 +71,21 @@ final class HeldBack {
             (pull.weight() > 0 ? high : low).add(name(points.get(pull.point())));
         if (high.isEmpty() && low.isEmpty()) return;
         if (high.isEmpty() || low.isEmpty())
-            sentences.add(capital(join(high.isEmpty() ? low : high)) + (high.size() + low.size() > 1 ? " come" : " comes")
-                    + " out too " + (high.isEmpty() ? "low" : "high") + ", whatever is mixed.");
+            sentences.add(
+                    capital(join(high.isEmpty() ? low : high)) + (high.size() + low.size() > 1 ? " come" : " comes")
+                            + " out too " + (high.isEmpty() ? "low" : "high") + ", whatever is mixed.");
         else
-            sentences.add("These targets pull against each other: " + join(high) + (high.size() > 1 ? " come" : " comes")
-                    + " out too high, " + join(low) + " too low.");
+            sentences.add("These targets pull against each other: " + join(high)
+                    + (high.size() > 1 ? " come" : " comes") + " out too high, " + join(low) + " too low.");
     }
 
     private void relaxations(List<String> sentences) {
         for (LimitProof.Relaxation r : proof.whatHelps()) {
-            double after = r.loosening() == LimitProof.Loosening.TARGET_LEFT_OUT ? r.after().value() : settled(r.after());
+            double after = r.loosening() == LimitProof.Loosening.TARGET_LEFT_OUT
+                    ? r.after().value()
+                    : settled(r.after());
             if (possible - after < Math.max(WORTH, WORTH * possible)) continue;
-            String fall =
-                    " the worst miss falls from " + widths(possible) + " to " + widths(after) + " half-widths.";
+            String fall = " the worst miss falls from " + widths(possible) + " to " + widths(after) + " half-widths.";
             switch (r.loosening()) {
                 case ONE_MORE -> {
                     SetProblem.Group group = SetProblem.Group.values()[r.index()];
@@ -99,11 +102,13 @@ final class HeldBack {
                     if (after <= 1 || possible - after > 0.3 * possible)
                         sentences.add("Without the target " + name(points.get(r.index())) + fall);
                 }
-                case BASE_SHARE_LIFTED -> sentences.add("With less base than its least share of "
-                        + Figures.significant(100 * (1 - searched.problem().limits().addedVolume()), 3) + " % of the volume"
-                        + fall);
-                case CONFLICTS_LIFTED -> sentences.add(
-                        "Were " + ingredient(r.index()).id() + " free of its conflicts," + fall);
+                case BASE_SHARE_LIFTED ->
+                    sentences.add("With less base than its least share of "
+                            + Figures.significant(
+                                    100 * (1 - searched.problem().limits().addedVolume()), 3) + " % of the volume"
+                            + fall);
+                case CONFLICTS_LIFTED ->
+                    sentences.add("Were " + ingredient(r.index()).id() + " free of its conflicts," + fall);
             }
         }
     }
@@ -131,8 +136,8 @@ final class HeldBack {
                     .filter(c -> c.group() == group && c.upper() > 0)
                     .count();
             if (available <= p.limits().most(group)) continue;
-            SetSolution more = new SetSearch(
-                            new SetProblem(p.points(), p.candidates(), p.limits().oneMore(group)))
+            SetSolution more = new SetSearch(new SetProblem(
+                            p.points(), p.candidates(), p.limits().oneMore(group)))
                     .run(0)
                     .best();
             if (more.score() < 0.9 * best.score().total() && more.worstMiss() < Math.abs(miss) - WORTH)
@@ -176,7 +181,9 @@ final class HeldBack {
     }
 
     private static String ordinal(int n) {
-        String[] words = {"", "a first", "a second", "a third", "a fourth", "a fifth", "a sixth", "a seventh", "an eighth", "a ninth"};
+        String[] words = {
+            "", "a first", "a second", "a third", "a fourth", "a fifth", "a sixth", "a seventh", "an eighth", "a ninth"
+        };
         return words[n];
     }
 }

@@ -3,9 +3,7 @@ package org.hazewright.files;
 import java.util.Collection;
 import java.util.Map;
 import java.util.Optional;
-import java.util.Set;
 import java.util.TreeMap;
-import java.util.TreeSet;
 import org.hazewright.optics.ConstantIndex;
 import org.hazewright.optics.IapwsWater;
 import org.hazewright.shelf.Family;
@@ -16,14 +14,14 @@ import org.hazewright.shelf.Source;
 /** The materials of a shelf while its ingredients are read, the ones whose files are broken included by name. */
 final class Materials {
     private final Map<String, Material> good = new TreeMap<>();
-    private final Set<String> broken = new TreeSet<>();
+    private final Map<String, FileRefusal> broken = new TreeMap<>();
 
     void add(Material material) {
         good.put(material.id(), material);
     }
 
-    void addBroken(String id) {
-        broken.add(id);
+    void addBroken(String id, FileRefusal refusal) {
+        broken.put(id, refusal);
     }
 
     Collection<Material> all() {
@@ -37,9 +35,14 @@ final class Materials {
     Material require(String id, Place from) {
         Material found = good.get(id);
         if (found != null) return found;
-        if (broken.contains(id))
-            throw from.refusal("The material \"" + id
-                    + "\" cannot be used, because its own file is refused. Mend materials/" + id + ".toml first.");
+        if (broken.containsKey(id))
+            throw new FileRefusal(
+                    from.path(),
+                    from.line(),
+                    from.column(),
+                    "The file of the material \"" + id
+                            + "\" is refused, so it cannot be used here. Mend that file first.",
+                    broken.get(id));
         throw from.refusal("There is no material \"" + id + "\"; a file materials/" + id + ".toml is needed."
                 + Nearest.to(id, good.keySet())
                         .map(n -> " Perhaps \"" + n + "\" is meant.")

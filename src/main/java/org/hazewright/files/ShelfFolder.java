@@ -79,8 +79,7 @@ final class ShelfFolder {
     }
 
     private Attempt<CsvTable> attempt(Path file, String path) {
-        return Attempt.of(
-                () -> CsvTable.of(TextFile.read(file, shown + separator() + path.replace("/", separator()))));
+        return Attempt.of(() -> CsvTable.of(TextFile.read(file, shown + separator() + path.replace("/", separator()))));
     }
 
     /** The TOML files of a folder in it ("" for itself), by name; none when there is no such folder. */

@@ -9,14 +9,11 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.Comparator;
-import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
-import java.util.Set;
+import java.util.Optional;
 import java.util.TreeMap;
-import java.util.TreeSet;
 import java.util.function.Function;
-import org.hazewright.shelf.BlendPart;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Nearest;
 import org.hazewright.shelf.Shelf;
@@ -32,12 +29,11 @@ public final class ShelfReader {
     /** How messages name the shelf that comes with the program. */
     public static final String SHIPPED = "shelf of the program";
 
-    private static final Set<String> MERGED_IN_LOTS = Set.of("uncertainty", "making", "absorption", "scattering");
-
     private final ShelfFolder folder;
     private final Materials materials = new Materials();
     private final List<FileRefusal> refusals = new ArrayList<>();
     private final Map<String, TomlPage> pages = new TreeMap<>();
+    private final Map<String, FileRefusal> broken = new TreeMap<>();
     private final Map<String, Ingredient> ingredients = new TreeMap<>();
 
     private ShelfReader(ShelfFolder folder) {
@@ -101,100 +97,95 @@ public final class ShelfReader {
         for (int i = 0; i < materialFiles.size(); i++) {
             String id = materialFiles.get(i).id();
             Attempt<TomlPage> page = read.get(i);
-            if (!attempt(() -> materials.add(MaterialReader.read(page.get(), id, folder)))) materials.addBroken(id);
+            attempt(() -> materials.add(MaterialReader.read(page.get(), id, folder)))
+                    .ifPresent(refusal -> materials.addBroken(id, refusal));
         }
-        Set<String> known = new TreeSet<>();
         for (int i = 0; i < files.size(); i++) {
             String id = files.get(i).id();
             Attempt<TomlPage> page = read.get(materialFiles.size() + i);
-            known.add(id);
-            attempt(() -> pages.put(id, page.get()));
+            attempt(() -> pages.put(id, page.get())).ifPresent(refusal -> broken.put(id, refusal));
         }
-        pages.forEach((id, page) -> attempt(() -> {
-            TomlPage whole = page.has("lot_of") ? overParent(id, page, known) : page;
-            ingredients.put(id, new IngredientReader(whole, id, folder, materials).read());
-        }));
-        keepSoundBlends(known);
-        refusals.sort(Comparator.comparing(FileRefusal::path).thenComparing(FileRefusal::line));
+        pages.forEach((id, page) -> {
+            if (!page.has("lot_of")) attempt(id, page);
+        });
+        pages.forEach((id, page) -> {
+            if (page.has("lot_of"))
+                attempt(() -> attempt(id, overParent(id, page))).ifPresent(refusal -> broken.put(id, refusal));
+        });
+        keepSoundBlends();
+        refusals.sort(Comparator.comparing(ShelfReader::isConsequence)
+                .thenComparing(FileRefusal::path)
+                .thenComparing(FileRefusal::line));
         return new Lenient(new Shelf(folder.shown(), ingredients.values(), materials.all()), refusals);
     }
 
-    private boolean attempt(Runnable reading) {
+    private void attempt(String id, TomlPage page) {
+        attempt(() -> ingredients.put(id, new IngredientReader(page, id, folder, materials).read()))
+                .ifPresent(refusal -> broken.put(id, refusal));
+    }
+
+    /** Keeps the refusal of a reading, if there was one; the same words are kept once, as when two files point to a broken table. */
+    private Optional<FileRefusal> attempt(Runnable reading) {
         try {
             reading.run();
-            return true;
+            return Optional.empty();
         } catch (FileRefusal refused) {
-            refusals.add(refused);
-            return false;
+            if (refusals.stream().noneMatch(r -> r.getMessage().equals(refused.getMessage()))) refusals.add(refused);
+            return Optional.of(refused);
         }
     }
 
-    /** A lot's page over that of its ingredient; a lot's own model, table or source takes the place of the whole table. */
-    private TomlPage overParent(String id, TomlPage lot, Set<String> known) {
+    /** A refusal for no fault of the file itself: one that it builds on is refused. */
+    private static boolean isConsequence(FileRefusal refusal) {
+        return refusal.getCause() instanceof FileRefusal;
+    }
+
+    private TomlPage overParent(String id, TomlPage lot) {
         String of = lot.text("lot_of");
         if (of.equals(id))
             throw lot.refusal("lot_of", "The lot names itself in lot_of; name the ingredient that it is a lot of.");
-        if (!known.contains(of))
-            throw lot.refusal(
-                    "lot_of",
-                    "There is no ingredient \"" + of + "\" on this shelf for this lot to be of."
-                            + Nearest.to(of, known)
-                                    .map(n -> " Perhaps \"" + n + "\" is meant.")
-                                    .orElse(""));
-        TomlPage parent = pages.get(of);
-        if (parent == null)
-            throw lot.refusal(
-                    "lot_of",
-                    "The file of the ingredient \"" + of + "\" is refused, so its lot cannot be read. Mend it first.");
-        if (parent.has("lot_of"))
+        if (pages.containsKey(of) && pages.get(of).has("lot_of"))
             throw lot.refusal("lot_of", "\"" + of + "\" is itself a lot; name the ingredient that both are lots of.");
-        if (parent.has("blend"))
+        if (pages.containsKey(of) && pages.get(of).has("blend"))
             throw lot.refusal("lot_of", "\"" + of + "\" is a blend, which has no lots; its parts have.");
-        Map<String, String> replacing = new LinkedHashMap<>(Map.of("scattering", "model", "absorption", "table"));
-        Set<String> merged = new TreeSet<>(MERGED_IN_LOTS);
-        replacing.forEach((table, key) -> {
-            if (lot.table(table).map(t -> t.has(key)).orElse(false)) merged.remove(table);
-        });
-        TomlPage below = parent.without("lot", "id", "format");
-        TomlPage whole = lot.over(below, merged);
-        return lot.has("name")
-                ? whole
-                : whole.withText("name", parent.text("name") + ", lot " + lotNumber(lot), lot.at());
+        require(of, lot.at("lot_of"), "this lot");
+        return LotPage.of(lot, pages.get(of));
     }
 
-    private static String lotNumber(TomlPage lot) {
-        return lot.requireTable("lot").text("number");
-    }
-
-    private void keepSoundBlends(Set<String> known) {
+    private void keepSoundBlends() {
         for (Ingredient blend : List.copyOf(ingredients.values())) {
             if (!blend.isBlend()) continue;
             List<TomlPage> parts = pages.get(blend.id()).tables("blend");
-            boolean sound = attempt(() -> {
-                for (int i = 0; i < parts.size(); i++)
-                    requireSound(blend.blend().get(i), parts.get(i), known);
-            });
-            if (!sound) ingredients.remove(blend.id());
+            attempt(() -> {
+                        for (int i = 0; i < parts.size(); i++)
+                            requireSound(
+                                    blend.blend().get(i).ingredient(),
+                                    parts.get(i).at("ingredient"));
+                    })
+                    .ifPresent(refusal -> ingredients.remove(blend.id()));
         }
     }
 
-    private void requireSound(BlendPart part, TomlPage table, Set<String> known) {
-        String id = part.ingredient();
-        Ingredient found = ingredients.get(id);
-        if (found == null && known.contains(id))
-            throw table.refusal(
-                    "ingredient",
-                    "The file of the ingredient \"" + id + "\" is refused, so this blend cannot be used. Mend"
-                            + " it first.");
-        if (found == null)
-            throw table.refusal(
-                    "ingredient",
-                    "There is no ingredient \"" + id + "\" on this shelf for this blend."
-                            + Nearest.to(id, known)
-                                    .map(n -> " Perhaps \"" + n + "\" is meant.")
-                                    .orElse(""));
-        if (found.isBlend())
-            throw table.refusal(
-                    "ingredient", "\"" + id + "\" is itself a blend; name its parts with their mass fractions.");
+    private void requireSound(String part, Place from) {
+        if (pages.containsKey(part) && pages.get(part).has("blend"))
+            throw from.refusal("\"" + part + "\" is itself a blend; name its parts with their mass fractions.");
+        require(part, from, "this blend");
+    }
+
+    /** Refuses an ingredient that the shelf does not have, or whose file is refused, at the place that names it. */
+    private void require(String id, Place from, String who) {
+        if (broken.containsKey(id))
+            throw new FileRefusal(
+                    from.path(),
+                    from.line(),
+                    from.column(),
+                    "The file of the ingredient \"" + id + "\" is refused, so " + who
+                            + " cannot be used. Mend that file first.",
+                    broken.get(id));
+        if (!ingredients.containsKey(id))
+            throw from.refusal("There is no ingredient \"" + id + "\" on this shelf for " + who + "."
+                    + Nearest.to(id, pages.keySet())
+                            .map(n -> " Perhaps \"" + n + "\" is meant.")
+                            .orElse(""));
     }
 }

@@ -11,8 +11,7 @@ public record SphereTable(double[] sizeParameter, double[] index, double[] absor
     public static SphereTable read(Path file) {
         CsvTable table = CsvTable.read(file);
         table.refuseUnknown("size_parameter", "index", "absorption_index");
-        return new SphereTable(
-                table.column("size_parameter"), table.column("index"), table.column("absorption_index"));
+        return new SphereTable(table.column("size_parameter"), table.column("index"), table.column("absorption_index"));
     }
 
     public int rows() {

@@ -60,8 +60,8 @@ public record DilutionSeries(
         double smaller = SCATTERING_DEPTH_WARNED / depth;
         throw new Refusal("The dilution of " + ingredient + " at " + Figures.number(r.concentrationGPerMl())
                 + " g/mL in a cell of "
-                + Figures.number(r.pathMm()) + " mm has a scattering depth of " + Figures.number(depth) + " at "
-                + Figures.number(r.wavelengthNm()) + " nm; above " + Figures.number(SCATTERING_DEPTH_REFUSED)
+                + Figures.plain(r.pathMm()) + " mm has a scattering depth of " + Figures.number(depth) + " at "
+                + Figures.plain(r.wavelengthNm()) + " nm; above " + Figures.number(SCATTERING_DEPTH_REFUSED)
                 + " scattered light drowns the beam. Take a cell of at most " + Figures.number(r.pathMm() * smaller)
                 + " mm, dilute below " + Figures.number(r.concentrationGPerMl() * smaller)
                 + " g/mL, or leave this reading out.");
@@ -93,7 +93,7 @@ public record DilutionSeries(
             Optional<Linearity> linearity = Linearity.of(c, mu, w);
             return new Extinction(nm, list, line, linearity, albedo);
         } catch (Refusal refusal) {
-            throw new Refusal("The dilution series of " + ingredient + " at " + Figures.number(nm)
+            throw new Refusal("The dilution series of " + ingredient + " at " + Figures.plain(nm)
                     + " nm cannot be fitted. " + refusal.getMessage());
         }
     }

@@ -35,7 +35,7 @@ final class DilutionWarnings {
                 e -> "the line misses zero at no concentration, at most by "
                         + Figures.number(e.line().intercept()) + " ± "
                         + Figures.number(e.line().uIntercept())
-                        + " 1/cm: blank and cell are not alike. The extinction does not suffer");
+                        + " 1/cm: blank and cell are not alike. The slope is used, so a constant offset does no harm");
         gather(
                 out,
                 all,
@@ -45,7 +45,7 @@ final class DilutionWarnings {
                 e -> {
                     Linearity l = e.linearity().orElseThrow();
                     return "the line bends, most clearly by " + Figures.number(l.bend()) + " 1/cm at "
-                            + Figures.number(e.wavelengthNm()) + " nm (F-test, probability "
+                            + Figures.plain(e.wavelengthNm()) + " nm (F-test, probability "
                             + Figures.probability(l.pValue()) + "): "
                             + (l.bend() < 0
                                     ? "the thick end reads too clear, by scattered or stray light. Dilute further"
@@ -116,10 +116,8 @@ final class DilutionWarnings {
 
     private static String where(List<Extinction> hits, List<Extinction> all) {
         if (hits.size() == all.size() && all.size() > 1) return "all wavelengths";
-        String list = hits.stream()
-                .limit(4)
-                .map(e -> Figures.number(e.wavelengthNm()))
-                .collect(Collectors.joining(", "));
+        String list =
+                hits.stream().limit(4).map(e -> Figures.plain(e.wavelengthNm())).collect(Collectors.joining(", "));
         if (hits.size() > 4) return hits.size() + " of " + all.size() + " wavelengths (" + list + ", …)";
         return list + " nm";
     }

@@ -18,6 +18,13 @@ final class Figures {
         return rounded.movePointLeft(exponent).stripTrailingZeros().toPlainString() + "e" + exponent;
     }
 
+    /** As it was given, without a needless ".0": a wavelength of 692.5 nm, a cell of 10 mm. */
+    static String plain(double value) {
+        return Double.isFinite(value)
+                ? BigDecimal.valueOf(value).stripTrailingZeros().toPlainString()
+                : number(value);
+    }
+
     /** A share in per cent, two significant digits: 0.0312 is "3.1 %". */
     static String percent(double share) {
         if (!Double.isFinite(share)) return share + " %";

@@ -61,7 +61,7 @@ final class Innovation {
             for (Coefficients.Share share : at[j].shares()) {
                 double part = MeasuredBatch.of(share, v.quantity());
                 whole += part;
-                h.setEntry(row, factors.indexOf(Factor.of(share.ingredient(), v.quantity())), part / v.uPerCm());
+                h.addToEntry(row, factors.indexOf(Factor.of(share.ingredient(), v.quantity())), part / v.uPerCm());
             }
             h.setEntry(row, factors.indexOf(Factor.of(b.method(), v.quantity())), whole / v.uPerCm());
             double expected = -whole / v.uPerCm(); // the method's column counts γ, of which γ − 1 acts

@@ -21,8 +21,16 @@ public final class Budget {
 
     /** {@code capacityG} is the balance's: a mass above it takes several loads. */
     public static Budget of(Recipe recipe, double[] wavelengthsNm, double capacityG) {
-        Unknowns x = new Unknowns(recipe, wavelengthsNm, capacityG);
-        int points = wavelengthsNm.length;
+        return of(new Unknowns(recipe, wavelengthsNm, capacityG));
+    }
+
+    /** With coefficients as in a mixture that holds the same ingredients, at its wavelengths. */
+    public static Budget of(Recipe recipe, Sweep sweep, double capacityG) {
+        return of(new Unknowns(recipe, sweep, capacityG));
+    }
+
+    private static Budget of(Unknowns x) {
+        int points = x.wavelengthsNm.length;
         double[] planned = x.plannedLoadsG();
         double[] masses = new double[x.ingredients()];
         double[][] content = new double[x.stockFrom.length][x.ingredients()];
@@ -49,8 +57,7 @@ public final class Budget {
                 a[j] = (up[j] - down[j]) / width * u;
                 s[j] = (up[points + j] - down[points + j]) / width * u;
             }
-            Cause.Kind kind =
-                    x.loads.get(k).role() == Unknowns.Load.Role.ITEM ? Cause.Kind.WEIGHING : Cause.Kind.STOCK;
+            Cause.Kind kind = x.loads.get(k).role() == Unknowns.Load.Role.ITEM ? Cause.Kind.WEIGHING : Cause.Kind.STOCK;
             causes.add(new Cause(x.loads.get(k).name(), kind, a, s));
         }
         for (int i = 0; i < masses.length; i++) {
@@ -63,7 +70,7 @@ public final class Budget {
         }
         causes.add(new Cause(
                 "finished volume", Cause.Kind.VOLUME, times(mua, -Unknowns.VOLUME), times(musp, -Unknowns.VOLUME)));
-        return new Budget(wavelengthsNm.clone(), causes);
+        return new Budget(x.wavelengthsNm, causes);
     }
 
     /**

@@ -3,14 +3,16 @@ package org.hazewright.mixture;
 import java.util.Arrays;
 import java.util.SplittableRandom;
 import java.util.stream.IntStream;
+import org.apache.commons.math3.util.KthSelector;
 import org.hazewright.optics.Refusal;
 
 /**
  * Monte Carlo propagation of a recipe's uncertainty (JCGM 101:2008, clause 7): the recipe made many times on paper.
  *
- * <p>Every unknown is normal. Draws come in blocks of {@value #BLOCK}, each with a generator seeded by the seed and its own number,
- * so that the same seed gives the same draws on any number of threads. Results at wavelength j: mean, standard uncertainty, 95 %
- * interval (probabilistically symmetric, clause 7.7), and the share of draws inside given limits.
+ * <p>Every unknown is normal. Draws come in blocks of {@value #BLOCK}, each with a generator of its own, split off the seed's one
+ * after the other, so that the same seed gives the same draws on any number of threads and near seeds give unrelated ones.
+ * Results at wavelength j: mean, standard uncertainty, 95 % interval (probabilistically symmetric, clause 7.7), and the share of
+ * draws inside given limits.
  */
 public final class Draws {
     private static final int BLOCK = 2048;
@@ -26,16 +28,26 @@ public final class Draws {
     }
 
     public static Draws of(Recipe recipe, double[] wavelengthsNm, double capacityG, int count, long seed) {
+        return of(new Unknowns(recipe, wavelengthsNm, capacityG), count, seed);
+    }
+
+    /** With coefficients as in a mixture that holds the same ingredients, at its wavelengths. */
+    public static Draws of(Recipe recipe, Sweep sweep, double capacityG, int count, long seed) {
+        return of(new Unknowns(recipe, sweep, capacityG), count, seed);
+    }
+
+    private static Draws of(Unknowns x, int count, long seed) {
         if (count < 100 || count > 10_000_000)
             throw new Refusal("A Monte Carlo of " + count + " draws is asked for; it must be 100 to 10 000 000.");
-        Unknowns x = new Unknowns(recipe, wavelengthsNm, capacityG);
-        double[][] values = new double[2 * wavelengthsNm.length][count];
-        int blocks = (count + BLOCK - 1) / BLOCK;
-        IntStream.range(0, blocks)
+        int wavelengths = x.wavelengthsNm.length;
+        double[][] values = new double[2 * wavelengths][count];
+        SplittableRandom root = new SplittableRandom(seed);
+        SplittableRandom[] generators = new SplittableRandom[(count + BLOCK - 1) / BLOCK];
+        for (int b = 0; b < generators.length; b++) generators[b] = root.split();
+        IntStream.range(0, generators.length)
                 .parallel()
-                .forEach(b -> new Block(x, new SplittableRandom(seed * 0x9E3779B97F4A7C15L + b))
-                        .fill(values, b * BLOCK, Math.min(count, (b + 1) * BLOCK)));
-        return new Draws(count, wavelengthsNm.length, values);
+                .forEach(b -> new Block(x, generators[b]).fill(values, b * BLOCK, Math.min(count, (b + 1) * BLOCK)));
+        return new Draws(count, wavelengths, values);
     }
 
     /** One block's work space and its draws. */
@@ -116,10 +128,11 @@ public final class Draws {
 
     /** Ends of the interval that holds 95 % of the draws, 2.5 % left out on either side, 1/cm. */
     public double[] interval95(boolean scattering, int wavelength) {
-        double[] sorted = of(scattering, wavelength).clone();
-        Arrays.sort(sorted);
+        double[] work = of(scattering, wavelength).clone();
+        KthSelector order = new KthSelector(); // two order statistics are had without sorting the rest
         return new double[] {
-            sorted[(int) Math.floor(0.025 * (count - 1))], sorted[(int) Math.ceil(0.975 * (count - 1))]
+            order.select(work, null, (int) Math.floor(0.025 * (count - 1))),
+            order.select(work, null, (int) Math.ceil(0.975 * (count - 1)))
         };
     }
 
@@ -131,8 +144,7 @@ public final class Draws {
         int inside = 0;
         for (int draw = 0; draw < count; draw++) {
             boolean ok = true;
-            for (int p = 0; p < low.length && ok; p++)
-                ok = !(values[p][draw] < low[p]) && !(values[p][draw] > high[p]);
+            for (int p = 0; p < low.length && ok; p++) ok = !(values[p][draw] < low[p]) && !(values[p][draw] > high[p]);
             if (ok) inside++;
         }
         return (double) inside / count;

@@ -24,7 +24,8 @@ final class HostIndex {
         return mix(volumesMl, nm, temperatureC, true);
     }
 
-    private static double mix(Map<Ingredient, Double> volumesMl, double nm, double temperatureC, boolean withParticles) {
+    private static double mix(
+            Map<Ingredient, Double> volumesMl, double nm, double temperatureC, boolean withParticles) {
         double[] volume = new double[2 * volumesMl.size()];
         double[] n = new double[volume.length];
         int used = 0;
@@ -44,8 +45,9 @@ final class HostIndex {
         double total = 0;
         for (int k = 0; k < used; k++) total += volume[k];
         if (!(total > 0))
-            throw new org.hazewright.optics.Refusal("Nothing in this mixture has a refractive index, so the host index is not"
-                    + " known; give the base an index = \"<material>\" in its ingredient file.");
+            throw new org.hazewright.optics.Refusal(
+                    "Nothing in this mixture has a refractive index, so the host index is not"
+                            + " known; give the base an index = \"<material>\" in its ingredient file.");
         double[] fraction = new double[used];
         for (int k = 0; k < used; k++) fraction[k] = volume[k] / total;
         return LorentzLorenz.mix(fraction, java.util.Arrays.copyOf(n, used));

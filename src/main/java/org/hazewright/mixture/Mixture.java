@@ -105,15 +105,13 @@ public final class Mixture {
         double musp = 0;
         for (Ingredient i : massesG.keySet()) {
             double c = concentrationGPerMl(i);
-            MassSpecific k = c == 0
-                    ? MassSpecific.NOTHING
-                    : MassSpecific.of(i, nm, temperatureC, host, crowdFraction(i));
+            MassSpecific k =
+                    c == 0 ? MassSpecific.NOTHING : MassSpecific.of(i, nm, temperatureC, host, crowdFraction(i));
             shares.add(new Coefficients.Share(i, c * k.kappaA(), c * k.kappaMus(), c * k.kappaMusp()));
             mua += c * k.kappaA();
             mus += c * k.kappaMus();
             musp += c * k.kappaMusp();
         }
-        return new Coefficients(
-                nm, mua, mus, musp, host, HostIndex.boundary(volumesMl, nm, temperatureC), shares);
+        return new Coefficients(nm, mua, mus, musp, host, HostIndex.boundary(volumesMl, nm, temperatureC), shares);
     }
 }

@@ -34,7 +34,8 @@ public record Recipe(
         for (Stock s : stocks) {
             s.from().ifPresent(f -> {
                 if (!made.contains(f))
-                    throw new Refusal("Stock " + s.id() + " is diluted from \"" + f + "\", which no earlier stock is called.");
+                    throw new Refusal(
+                            "Stock " + s.id() + " is diluted from \"" + f + "\", which no earlier stock is called.");
             });
             if (!made.add(s.id())) throw new Refusal("Two stocks are called " + s.id() + ".");
         }
@@ -60,7 +61,8 @@ public record Recipe(
         Stock s = stock(stockId);
         Map<Ingredient, Double> content = new LinkedHashMap<>();
         double share = s.ingredientG() / s.totalG();
-        if (s.from().isPresent()) contentPerG(s.from().get()).forEach((i, g) -> content.merge(i, g * share, Double::sum));
+        if (s.from().isPresent())
+            contentPerG(s.from().get()).forEach((i, g) -> content.merge(i, g * share, Double::sum));
         else content.merge(s.ingredient(), share, Double::sum);
         content.merge(s.diluent(), s.diluentG() / s.totalG(), Double::sum);
         return content;
@@ -72,8 +74,7 @@ public record Recipe(
         for (Item item : items) {
             if (item.stock().isEmpty()) masses.merge(item.ingredient(), item.massG(), Double::sum);
             else
-                contentPerG(item.stock().get())
-                        .forEach((i, perG) -> masses.merge(i, perG * item.massG(), Double::sum));
+                contentPerG(item.stock().get()).forEach((i, perG) -> masses.merge(i, perG * item.massG(), Double::sum));
         }
         return masses;
     }
@@ -89,8 +90,13 @@ public record Recipe(
                 briefSha256,
                 stocks.stream()
                         .map(s -> new Stock(
-                                s.id(), s.ingredient(), s.lot(), s.ingredientG() * factor, s.diluent(),
-                                s.diluentG() * factor, s.from()))
+                                s.id(),
+                                s.ingredient(),
+                                s.lot(),
+                                s.ingredientG() * factor,
+                                s.diluent(),
+                                s.diluentG() * factor,
+                                s.from()))
                         .toList(),
                 items.stream()
                         .map(i -> new Item(i.ingredient(), i.stock(), i.lot(), i.massG() * factor))

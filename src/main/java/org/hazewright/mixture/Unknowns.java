@@ -57,30 +57,29 @@ final class Unknowns {
     final double volumeMl;
 
     Unknowns(Recipe recipe, double[] wavelengthsNm, double capacityG) {
-        this.wavelengthsNm = wavelengthsNm.clone();
-        Mixture mixture = Mixture.of(recipe);
+        this(recipe, Sweep.of(Mixture.of(recipe), wavelengthsNm), capacityG);
+    }
+
+    Unknowns(Recipe recipe, Sweep sweep, double capacityG) {
+        wavelengthsNm = sweep.wavelengthsNm();
+        Map<Ingredient, Double> planned = recipe.massesG();
         Map<Ingredient, Integer> number = new LinkedHashMap<>();
-        mixture.massesG().keySet().forEach(i -> number.put(i, number.size()));
+        planned.keySet().forEach(i -> number.put(i, number.size()));
         int count = number.size();
         ingredient = number.keySet().toArray(Ingredient[]::new);
         densityGPerMl = new double[count];
         uncertainty = new Uncertainty[count];
-        kappaA = new double[count][wavelengthsNm.length];
-        kappaS = new double[count][wavelengthsNm.length];
+        kappaA = new double[count][];
+        kappaS = new double[count][];
+        double volume = 0;
         for (int i = 0; i < count; i++) {
             densityGPerMl[i] = ingredient[i].densityGPerMl();
             uncertainty[i] = ingredient[i].uncertainty();
+            kappaA[i] = sweep.kappaA(ingredient[i]);
+            kappaS[i] = sweep.kappaMusp(ingredient[i]);
+            volume += planned.get(ingredient[i]) / densityGPerMl[i];
         }
-        for (int j = 0; j < wavelengthsNm.length; j++) {
-            Coefficients at = mixture.at(wavelengthsNm[j]);
-            for (int i = 0; i < count; i++) {
-                double c = mixture.concentrationGPerMl(ingredient[i]);
-                if (c == 0) continue;
-                kappaA[i][j] = at.shares().get(i).muaPerCm() / c;
-                kappaS[i][j] = at.shares().get(i).muspPerCm() / c;
-            }
-        }
-        volumeMl = mixture.volumeMl();
+        volumeMl = volume;
 
         Map<String, Integer> stockNumber = new LinkedHashMap<>();
         int stocks = recipe.stocks().size();

@@ -35,8 +35,8 @@ record DispersionForm(String name, double fromNm, double toNm) {
         for (int i = 0; i < c.length; i++) {
             double poleNm = 1e3 * Math.sqrt(c[i]);
             if (!Double.isFinite(b[i]) || !Double.isFinite(c[i]))
-                throw new Refusal("The formula for the refractive index of " + name + " has the coefficients b = " + b[i]
-                        + " and c = " + c[i] + "; both must be finite.");
+                throw new Refusal("The formula for the refractive index of " + name + " has the coefficients b = "
+                        + b[i] + " and c = " + c[i] + "; both must be finite.");
             if (poleNm >= fromNm && poleNm <= toNm && b[i] != 0)
                 throw new Refusal("The formula for the refractive index of " + name + " has a pole at "
                         + Plain.number(poleNm) + " nm, inside its validity range " + Plain.number(fromNm) + " to "

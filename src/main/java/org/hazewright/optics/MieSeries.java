@@ -41,7 +41,7 @@ public final class MieSeries {
     /** The coefficients for size parameter x and relative index n + ik. */
     public static MieSeries of(double x, double n, double k) {
         Mie.refuseOutsideDomain(x, n, k);
-        int orders = Mie.orders(x);
+        int orders = Mie.orders(x, k > 0);
         double uRe = (n - 1) * (n + 1) - k * k;
         double uIm = 2 * n * k;
         double m2Re = uRe + 1;
@@ -57,7 +57,7 @@ public final class MieSeries {
         double fr = 0;
         double fi = 0;
         double inverseX = 1 / x;
-        int start = Mie.startOfDownward(orders, x * Math.hypot(n, k));
+        int start = Math.max(Mie.startOfDownward(x), Mie.startOfDownward(x * Math.hypot(n, k)));
         double kr = 0;
         double ki = 0;
         for (int i = start; i >= 1; i--) {
@@ -136,7 +136,7 @@ public final class MieSeries {
         double[] psi = new double[orders + 2];
         double above = 0;
         double here = 1e-100;
-        for (int i = orders + Mie.BEYOND; i >= 0; i--) {
+        for (int i = Mie.startOfDownward(x) + 1; i >= 0; i--) {
             if (i <= orders + 1) psi[i] = here;
             double below = (2 * i + 1) / x * here - above;
             above = here;
@@ -193,6 +193,53 @@ public final class MieSeries {
             pi = piAbove;
         }
         return new double[] {s1Re * s1Re + s1Im * s1Im, s2Re * s2Re + s2Im * s2Im};
+    }
+
+    /**
+     * |S1|² + |S2|² at cos θ and at −cos θ, into {@code out}: the waves of even and of odd order are summed apart, and their
+     * sum and difference serve the two directions.
+     */
+    void patterns(double cosTheta, double[] out) {
+        // S1 + S2 = Σ w (a + b)(π + τ), S1 − S2 = Σ w (a − b)(π − τ); at −cos θ π + τ and π − τ change places, odd orders' sign
+        double sumRe = 0;
+        double sumIm = 0;
+        double difRe = 0;
+        double difIm = 0;
+        double backSumRe = 0;
+        double backSumIm = 0;
+        double backDifRe = 0;
+        double backDifIm = 0;
+        double piBelow = 0;
+        double pi = 1;
+        double sign = 1;
+        int last = orders();
+        for (int i = 1; i <= last; i++) {
+            double muPi = cosTheta * pi;
+            double tau = i * muPi - (i + 1) * piBelow;
+            double weight = (2 * i + 1.0) / (i * (i + 1.0));
+            double plus = weight * (pi + tau);
+            double minus = weight * (pi - tau);
+            double sRe = aRe[i] + bRe[i];
+            double sIm = aIm[i] + bIm[i];
+            double dRe = aRe[i] - bRe[i];
+            double dIm = aIm[i] - bIm[i];
+            sumRe += plus * sRe;
+            sumIm += plus * sIm;
+            difRe += minus * dRe;
+            difIm += minus * dIm;
+            plus *= sign;
+            minus *= sign;
+            backSumRe += minus * sRe;
+            backSumIm += minus * sIm;
+            backDifRe += plus * dRe;
+            backDifIm += plus * dIm;
+            sign = -sign;
+            double piAbove = muPi + (i + 1.0) / i * (muPi - piBelow);
+            piBelow = pi;
+            pi = piAbove;
+        }
+        out[0] = (sumRe * sumRe + sumIm * sumIm + difRe * difRe + difIm * difIm) / 2;
+        out[1] = (backSumRe * backSumRe + backSumIm * backSumIm + backDifRe * backDifRe + backDifIm * backDifIm) / 2;
     }
 
     /** Phase function for unpolarised light in 1/sr, ∫ p dΩ = 1 over all directions. */

@@ -76,21 +76,25 @@ public final class AddingDoubling {
                 near[i] = back * down + through * up;
                 far[i] = through * down + back * up;
             }
-            double[] sum = new double[n];
-            double[] difference = new double[n];
+            double[] cross = scatterAcross(n, near, far);
+            double[] twice = Square.product(n, cross, cross);
+            double[] up1 = add(near, times(n, cross, far));
+            double[] down1 = add(far, times(n, cross, near));
+            double[] both = new double[2 * n];
             for (int i = 0; i < n; i++) {
-                sum[i] = near[i] + far[i];
-                difference[i] = near[i] - far[i];
+                both[2 * i] = up1[i];
+                both[2 * i + 1] = down1[i];
             }
-            Square.solve(n, between(n, 1), 1, sum);
-            Square.solve(n, between(n, -1), 1, difference);
+            Square.solve(n, Square.onePlus(n, -1, twice), 2, both);
             double reflected = up * pass * (1 - normal);
             double transmitted = down * pass * (1 - normal);
             for (int i = 0; i < n; i++) {
-                double out =
-                        2 * directions.cosine()[i] * directions.weight()[i] * (1 - directions.reflectance()[i]);
-                reflected += out * 0.5 * (sum[i] + difference[i]);
-                transmitted += out * 0.5 * (sum[i] - difference[i]);
+                double out = 2
+                        * directions.cosine()[i]
+                        * directions.weight()[i]
+                        * (1 - directions.reflectance()[i]);
+                reflected += out * both[2 * i];
+                transmitted += out * both[2 * i + 1];
             }
             if (beam == null) return new SlabLight(normal, 0, share(reflected), 0, 0);
             double back = beam.returned();
@@ -98,16 +102,45 @@ public final class AddingDoubling {
             return new SlabLight(normal, back, share(reflected - back), through, share(transmitted - through));
         }
 
-        /** 1 − (R ± T) times the face's reflectance. */
-        private double[] between(int n, int sign) {
+        /**
+         * With ρ the face's reflectance: near and far become (1 − Rρ)⁻¹ times themselves, and (1 − Rρ)⁻¹Tρ is returned, which
+         * takes light from one face to the other. Kept apart from each other, so that the little that crosses a thick slab
+         * keeps its digits.
+         */
+        private double[] scatterAcross(int n, double[] near, double[] far) {
             double[] a = new double[n * n];
-            for (int i = 0; i < n; i++)
+            int m = n + 2;
+            double[] right = new double[n * m];
+            for (int i = 0; i < n; i++) {
                 for (int j = 0; j < n; j++) {
                     int k = i * (n + 1) + j;
-                    double x = layer.reflection[k] + sign * layer.transmission[k];
-                    a[i * n + j] = (i == j ? 1 : 0) - x * directions.reflectance()[j];
+                    double rho = directions.reflectance()[j];
+                    a[i * n + j] = (i == j ? 1 : 0) - layer.reflection[k] * rho;
+                    right[i * m + j] = layer.transmission[k] * rho;
                 }
-            return a;
+                right[i * m + n] = near[i];
+                right[i * m + n + 1] = far[i];
+            }
+            Square.solve(n, a, m, right);
+            double[] cross = new double[n * n];
+            for (int i = 0; i < n; i++) {
+                System.arraycopy(right, i * m, cross, i * n, n);
+                near[i] = right[i * m + n];
+                far[i] = right[i * m + n + 1];
+            }
+            return cross;
+        }
+
+        private static double[] times(int n, double[] a, double[] x) {
+            double[] y = new double[n];
+            for (int i = 0; i < n; i++) for (int j = 0; j < n; j++) y[i] += a[i * n + j] * x[j];
+            return y;
+        }
+
+        private static double[] add(double[] a, double[] b) {
+            double[] c = new double[a.length];
+            for (int i = 0; i < c.length; i++) c[i] = a[i] + b[i];
+            return c;
         }
 
         /** Rounding may leave −1e−17 of a share that is nothing. */

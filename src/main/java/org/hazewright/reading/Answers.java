@@ -27,6 +27,7 @@ final class Answers {
     }
 
     void curve(Double mm, Quantity quantity, Reading.Curve curve, String model, boolean inside, String note) {
-        readings.add(new Reading(setUp.title(), setUp.kind(), nm, mm, quantity, null, null, curve, model, inside, note));
+        readings.add(
+                new Reading(setUp.title(), setUp.kind(), nm, mm, quantity, null, null, curve, model, inside, note));
     }
 }

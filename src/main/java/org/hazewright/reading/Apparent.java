@@ -91,24 +91,28 @@ public record Apparent(double muaPerCm, double muspPerCm, String method) {
         double top = y[peak];
         int count = to - from + 1;
         if (count < 5)
-            throw new Refusal("The time axis has " + count + " points on the curve's peak and tail; a fit needs 5 or more."
-                    + " Take a shorter step.");
-        return fit("diffusion fit of the time curve, 80 % rise to 1 % tail", d -> {
-            TimeSignal t = new TimeSignal(known.with(d[0], d[1]));
-            double[] f = TimeCurve.seen(
-                            time -> t.perMm2PerPs(distanceMm, time, Side.REFLECTANCE), measured.axis(), response)
-                    .value();
-            double fy = 0;
-            double ff = 0;
-            for (int i = first; i < first + count; i++) {
-                fy += f[i];
-                ff += f[i] * f[i] / y[i];
-            }
-            double[] r = new double[count];
-            for (int i = 0; i < count; i++)
-                r[i] = (fy / ff * f[first + i] - y[first + i]) / Math.sqrt(y[first + i] * top);
-            return r;
-        });
+            throw new Refusal("The time axis has " + count
+                    + " points on the curve's peak and tail; a fit needs 5 or more." + " Take a shorter step.");
+        return fit(
+                "diffusion fit of the time curve, 80 % rise to 1 % tail",
+                d -> {
+                    TimeSignal t = new TimeSignal(known.with(d[0], d[1]));
+                    double[] f = TimeCurve.seen(
+                                    time -> t.perMm2PerPs(distanceMm, time, Side.REFLECTANCE),
+                                    measured.axis(),
+                                    response)
+                            .value();
+                    double fy = 0;
+                    double ff = 0;
+                    for (int i = first; i < first + count; i++) {
+                        fy += f[i];
+                        ff += f[i] * f[i] / y[i];
+                    }
+                    double[] r = new double[count];
+                    for (int i = 0; i < count; i++)
+                        r[i] = (fy / ff * f[first + i] - y[first + i]) / Math.sqrt(y[first + i] * top);
+                    return r;
+                });
     }
 
     private static int peakOf(double[] y) {
@@ -160,7 +164,8 @@ public record Apparent(double muaPerCm, double muspPerCm, String method) {
 
     private static double[] logSquared(double[] distance, double[] signal) {
         if (distance.length != signal.length || distance.length < 2)
-            throw new Refusal("The slope method needs signals at 2 distances or more; there are " + signal.length + ".");
+            throw new Refusal(
+                    "The slope method needs signals at 2 distances or more; there are " + signal.length + ".");
         double[] y = new double[signal.length];
         for (int i = 0; i < y.length; i++) {
             Refusal.positive("Signal at " + distance[i] + " mm", signal[i]);

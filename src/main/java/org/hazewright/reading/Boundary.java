@@ -101,7 +101,12 @@ public record Boundary(double nInside, double nOutside) {
         for (int i = 0; i < POINTS; i++) {
             double t = graded(RULE.getPoint(i));
             double mu = Math.sqrt(1 - (1 - t) * (1 + t) / (m * m));
-            sum += RULE.getWeight(i) * gradedSlope(RULE.getPoint(i)) * t / (m * m) * Math.pow(mu, k - 1) * fresnel(m, mu);
+            sum += RULE.getWeight(i)
+                    * gradedSlope(RULE.getPoint(i))
+                    * t
+                    / (m * m)
+                    * Math.pow(mu, k - 1)
+                    * fresnel(m, mu);
         }
         return Math.pow(criticalCosine(), k + 1) + (k + 1) * sum;
     }

@@ -8,13 +8,14 @@ import org.hazewright.optics.Refusal;
  * <p>Defaults first in each enum: signal from fluence and flux, D with absorption, unit source, per power that entered.
  */
 public record Convention(Form form, DiffusionConstant diffusion, SourceStrength sourceStrength, Per per) {
-    public static final Convention DEFAULT = new Convention(
-            Form.FLUX_AND_FLUENCE, DiffusionConstant.WITH_ABSORPTION, SourceStrength.UNIT, Per.ENTERED);
+    public static final Convention DEFAULT =
+            new Convention(Form.FLUX_AND_FLUENCE, DiffusionConstant.WITH_ABSORPTION, SourceStrength.UNIT, Per.ENTERED);
 
     public Convention {
         if (form == null || diffusion == null || sourceStrength == null || per == null)
-            throw new Refusal("A convention needs form, diffusion, source strength and per; leave the whole table out for"
-                    + " the defaults.");
+            throw new Refusal(
+                    "A convention needs form, diffusion, source strength and per; leave the whole table out for"
+                            + " the defaults.");
     }
 
     /** What of the field is taken for the signal. */
@@ -91,7 +92,7 @@ public record Convention(Form form, DiffusionConstant diffusion, SourceStrength 
 
     /** In words, for print: "flux-and-fluence, D with absorption, unit source, per power entered". */
     public String inWords() {
-        return form.word + ", D " + diffusion.word.replace('-', ' ') + ", " + sourceStrength.word + " source, per power "
-                + per.word;
+        return form.word + ", D " + diffusion.word.replace('-', ' ') + ", " + sourceStrength.word
+                + " source, per power " + per.word;
     }
 }

@@ -37,7 +37,12 @@ final class DistanceModels {
                 : 1;
         List<Integer> wanted = new ArrayList<>();
         for (int i = 0; i < n; i++) {
-            outside[i] = DiffusionRange.outside(medium, setUp.distancesMm().get(i), setUp.thicknessMm(), inTime);
+            outside[i] = DiffusionRange.outside(
+                    medium,
+                    setUp.distancesMm().get(i),
+                    setUp.thicknessMm(),
+                    inTime,
+                    setUp.convention().form());
             boolean packets = setUp.model() == SetUp.ModelChoice.PACKETS
                     || (setUp.model() == SetUp.ModelChoice.AUTO && outside[i] != null);
             if (packets) wanted.add(i);
@@ -80,7 +85,8 @@ final class DistanceModels {
             // from just before 0, and to where a response that begins before 0 still reaches
             TimeAxis t = setUp.time();
             double from = t.fromPs() - Math.ceil(t.fromPs() / t.stepPs()) * t.stepPs();
-            double early = setUp.response() == null ? 0 : Math.max(0, -setUp.response().timePs()[0]);
+            double early =
+                    setUp.response() == null ? 0 : Math.max(0, -setUp.response().timePs()[0]);
             return new TimeAxis(from, Math.max(t.toPs() + early, from + t.stepPs()), t.stepPs());
         }
         double period = 1e6 / setUp.modulationMhz();
@@ -126,10 +132,11 @@ final class DistanceModels {
                     "Averaged over a ring from %.4g to %.4g mm%s.",
                     ring[i].ring().innerMm(),
                     ring[i].ring().outerMm(),
-                    setUp.convention().per() == Convention.Per.ENTERED ? ", per power entered" : ", per power incident");
-        String few = poor[i]
-                ? "Too few of the " + setUp.packets() + " packets arrive there; ask for more packets."
-                : null;
+                    setUp.convention().per() == Convention.Per.ENTERED
+                            ? ", per power entered"
+                            : ", per power incident");
+        String few =
+                poor[i] ? "Too few of the " + setUp.packets() + " packets arrive there; ask for more packets." : null;
         if (silent(i)) return few != null ? few : "The run of packets was stopped.";
         if (outside[i] == null) return few;
         return few == null ? outside[i] : outside[i] + " " + few;

@@ -55,8 +55,7 @@ final class FrequencyReadings {
     }
 
     private static Wave diffused(DistanceModels models, Medium medium, double mm) {
-        FrequencySignal f =
-                new FrequencySignal(models.diffusionOf(medium), models.setUp.modulationMhz());
+        FrequencySignal f = new FrequencySignal(models.diffusionOf(medium), models.setUp.modulationMhz());
         double a = f.amplitudePerMm2(mm, Side.REFLECTANCE);
         return new Wave(a, f.modulation(mm, Side.REFLECTANCE), f.phaseDeg(mm, Side.REFLECTANCE), 0, 0);
     }
@@ -105,11 +104,7 @@ final class FrequencyReadings {
         try {
             Apparent seen = waves.length == 1
                     ? Apparent.frequency(
-                            models.distanceMm(0),
-                            waves[0].modulation,
-                            waves[0].phaseDeg,
-                            setUp.modulationMhz(),
-                            known)
+                            models.distanceMm(0), waves[0].modulation, waves[0].phaseDeg, setUp.modulationMhz(), known)
                     : slopes(models, waves, known);
             Double mm = waves.length == 1 ? (Double) models.distanceMm(0) : null;
             answers.add(

@@ -8,11 +8,17 @@ package org.hazewright.reading;
  * <pre>
  *   E = h P H,  F = h H Q,  H = tanh(√X)/√X at X = h² Q P;   R = 1/(1 + E) − 1/(1 + F),   T = 1/(1 + E) + 1/(1 + F) − 1
  * </pre>
- * H by its Padé fraction (945 + 105 X + X²)/(945 + 420 X + 15 X²), whose error at X = 1 is 3e−8. Doubling: R + T(1 − R²)⁻¹RT
- * and T(1 − R²)⁻¹T, by way of the even and odd illumination of the two halves, which keeps the digits of a small T. Van de
- * Hulst, Multiple Light Scattering, Academic Press (1980), ch. 4; symmetric start: Waterman, J. Opt. Soc. Am. 71, 410 (1981).
+ * H by its Padé fraction of third degree, whose error at √X = 2.5, reached by the most grazing direction only, is 4e−7.
+ * Doubling: R + T(1 − R²)⁻¹RT and T(1 − R²)⁻¹T, by way of the even and odd illumination of the two halves, which keeps the
+ * digits of a small T. (Doubling H itself would be quicker and is unstable.)
+ *
+ * <p>Van de Hulst, Multiple Light Scattering, Academic Press (1980), ch. 4; matrix exponential: Waterman, J. Opt. Soc. Am. 71,
+ * 410 (1981).
  */
 final class Layer {
+    /** Half thickness of the first layer over the smallest cosine, at most. */
+    private static final double FIRST = 2.5;
+
     final double[] reflection;
     final double[] transmission;
 
@@ -23,9 +29,7 @@ final class Layer {
 
     /** A layer of optical thickness {@code depth} in a medium of albedo a and truncated Henyey–Greenstein moments. */
     static Layer of(Directions directions, double albedo, double[] moment, double depth) {
-        double shallow = 2 * directions.cosine()[0];
-        for (double mu : directions.cosine()) shallow = Math.min(shallow, 2 * mu);
-        int doublings = Math.max(0, (int) Math.ceil(Math.log(depth / shallow) / Math.log(2)));
+        int doublings = Math.max(0, (int) Math.ceil(Math.log(depth / first(directions)) / Math.log(2)));
         Layer layer = thin(directions, albedo, moment, Math.scalb(depth, -doublings));
         for (int i = 0; i < doublings; i++) layer = layer.doubled(directions.count());
         return layer;
@@ -33,11 +37,15 @@ final class Layer {
 
     /** The same medium, so thick that less than 1e−8 of any light gets through. */
     static Layer deep(Directions directions, double albedo, double[] moment) {
-        double shallow = 2;
-        for (double mu : directions.cosine()) shallow = Math.min(shallow, 2 * mu);
-        Layer layer = thin(directions, albedo, moment, shallow);
+        Layer layer = thin(directions, albedo, moment, first(directions));
         for (int i = 0; i < 60 && layer.leaks(1e-8); i++) layer = layer.doubled(directions.count());
         return layer;
+    }
+
+    private static double first(Directions directions) {
+        double grazing = 1;
+        for (double mu : directions.cosine()) grazing = Math.min(grazing, mu);
+        return 2 * FIRST * grazing;
     }
 
     private boolean leaks(double share) {
@@ -47,29 +55,16 @@ final class Layer {
 
     private static Layer thin(Directions directions, double albedo, double[] moment, double depth) {
         int n = directions.count();
-        double h = depth / 2;
+        double half = depth / 2;
         double[] p = generator(directions, albedo, moment, 0);
         double[] q = generator(directions, albedo, moment, 1);
         double[] x = Square.product(n, q, p);
-        for (int i = 0; i < x.length; i++) x[i] *= h * h;
-        double[] x2 = Square.product(n, x, x);
-        double[] top = new double[n * n];
-        double[] bottom = new double[n * n];
-        for (int i = 0; i < x.length; i++) {
-            top[i] = 105 * x[i] + x2[i];
-            bottom[i] = 420 * x[i] + 15 * x2[i];
-        }
-        for (int i = 0; i < n; i++) {
-            top[i * n + i] += 945;
-            bottom[i * n + i] += 945;
-        }
-        Square.solve(n, bottom, n, top);
-        double[] even = Square.onePlus(n, h, Square.product(n, p, top));
-        double[] odd = Square.onePlus(n, h, Square.product(n, top, q));
+        for (int i = 0; i < x.length; i++) x[i] *= half * half;
+        double[] h = tangent(n, x);
         double[] e = Square.identity(n);
         double[] f = Square.identity(n);
-        Square.solve(n, even, n, e);
-        Square.solve(n, odd, n, f);
+        Square.solve(n, Square.onePlus(n, half, Square.product(n, p, h)), n, e);
+        Square.solve(n, Square.onePlus(n, half, Square.product(n, h, q)), n, f);
         double[] r = new double[n * n];
         double[] t = new double[n * n];
         for (int i = 0; i < r.length; i++) {
@@ -78,6 +73,24 @@ final class Layer {
         }
         for (int i = 0; i < n; i++) t[i * n + i] -= 1;
         return new Layer(r, t);
+    }
+
+    /** tanh(√x)/√x of a matrix, by the seventh convergent of its continued fraction. */
+    private static double[] tangent(int n, double[] x) {
+        double[] x2 = Square.product(n, x, x);
+        double[] x3 = Square.product(n, x, x2);
+        double[] top = new double[n * n];
+        double[] bottom = new double[n * n];
+        for (int i = 0; i < x.length; i++) {
+            top[i] = 17325 * x[i] + 378 * x2[i] + x3[i];
+            bottom[i] = 62370 * x[i] + 3150 * x2[i] + 28 * x3[i];
+        }
+        for (int i = 0; i < n; i++) {
+            top[i * n + i] += 135135;
+            bottom[i * n + i] += 135135;
+        }
+        Square.solve(n, bottom, n, top);
+        return top;
     }
 
     /** (1 − a Σ (2l + 1) χ_l P_l(µ_i) P_l(µ_j) w_j)/µ_i over even or odd l, with every scattered flux conserved. */
@@ -95,7 +108,8 @@ final class Layer {
         double[] g = new double[n * n];
         for (int i = 0; i < n; i++)
             for (int j = 0; j < n; j++)
-                g[i * n + j] = ((i == j ? 1 : 0) - albedo * phase[i * n + j] * w[j]) / directions.cosine()[i];
+                g[i * n + j] = ((i == j ? 1 : 0) - albedo * phase[i * n + j] * w[j])
+                        / directions.cosine()[i];
         return g;
     }
 

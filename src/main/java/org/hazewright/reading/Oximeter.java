@@ -43,9 +43,7 @@ public record Oximeter(String name, Spectrum oxy, Spectrum deoxy, DoubleUnaryOpe
 
     /** Absorption of the given blood solution without the base, 1/cm: the forward direction. */
     public double muaPerCm(double nm, double haemoglobinUmolPerL, double saturation) {
-        return PER_UMOL
-                * haemoglobinUmolPerL
-                * (saturation * oxy.at(nm) + (1 - saturation) * deoxy.at(nm));
+        return PER_UMOL * haemoglobinUmolPerL * (saturation * oxy.at(nm) + (1 - saturation) * deoxy.at(nm));
     }
 
     /**
@@ -55,8 +53,9 @@ public record Oximeter(String name, Spectrum oxy, Spectrum deoxy, DoubleUnaryOpe
     public Answer read(double[] wavelengthNm, double[] muaPerCm, double[] uMuaPerCm) {
         int m = wavelengthNm.length;
         if (m < 2 || muaPerCm.length != m || uMuaPerCm.length != m)
-            throw new Refusal("An oximeter reading needs absorption and its uncertainty at 2 wavelengths or more; there are "
-                    + m + ".");
+            throw new Refusal(
+                    "An oximeter reading needs absorption and its uncertainty at 2 wavelengths or more; there are " + m
+                            + ".");
         boolean weighed = true;
         for (double u : uMuaPerCm) weighed &= u > 0;
         RealMatrix a = new Array2DRowRealMatrix(m, 2);
@@ -103,7 +102,8 @@ public record Oximeter(String name, Spectrum oxy, Spectrum deoxy, DoubleUnaryOpe
     private static Answer answer(double[] c, RealMatrix v, double residual) {
         double total = c[0] + c[1];
         if (total == 0)
-            throw new Refusal("There is no absorption beyond the base's, so there is no saturation to read. Add an absorber.");
+            throw new Refusal(
+                    "There is no absorption beyond the base's, so there is no saturation to read. Add an absorber.");
         double s = c[0] / total;
         double ds0 = c[1] / (total * total);
         double ds1 = -c[0] / (total * total);

@@ -11,7 +11,8 @@ final class OximeterReadings {
     static List<Reading> of(SetUp setUp, Foresight foresight) {
         Oximeter oximeter = foresight.oximeter();
         if (oximeter == null)
-            throw new Refusal("The set-up \"" + setUp.title() + "\" reads haemoglobin, but no extinction table was given.");
+            throw new Refusal(
+                    "The set-up \"" + setUp.title() + "\" reads haemoglobin, but no extinction table was given.");
         int n = setUp.wavelengthsNm().size();
         double[] nm = new double[n];
         double[] mua = new double[n];
@@ -26,7 +27,9 @@ final class OximeterReadings {
         }
         Oximeter.Answer answer = oximeter.read(nm, mua, known ? u : new double[n]);
         boolean blood = answer.oxyUmolPerL() >= 0 && answer.deoxyUmolPerL() >= 0;
-        String note = blood ? null : "No mixture of the two haemoglobins absorbs like this; a concentration comes out below 0.";
+        String note = blood
+                ? null
+                : "No mixture of the two haemoglobins absorbs like this; a concentration comes out below 0.";
         if (n > 2) {
             String left = String.format(
                     Locale.ROOT, "Haemoglobin leaves %.2g /cm (root mean square) unexplained.", answer.residualPerCm());

@@ -54,7 +54,9 @@ final class PacketBlock {
         this.packets = packets;
         int rings = run.rings().size();
         ring = new double[SUMS * rings];
-        histogram = run.times() == null ? new double[0] : new double[rings * run.times().size()];
+        histogram = run.times() == null
+                ? new double[0]
+                : new double[rings * run.times().size()];
         innerSquared = new double[rings];
         outerSquared = new double[rings];
         for (int i = 0; i < rings; i++) {
@@ -133,7 +135,8 @@ final class PacketBlock {
                 double sr = rest * (1 - r2 / 6);
                 double cosPhi = COSINE[k] * cr - SINE[k] * sr;
                 double sinPhi = SINE[k] * cr + COSINE[k] * sr;
-                // two directions at right angles to the old one, without a root: Duff et al., J. Comput. Graph. Tech. 6, 1 (2017)
+                // two directions at right angles to the old one, without a root: Duff et al., J. Comput. Graph. Tech.
+                // 6, 1 (2017)
                 double sign = Math.copySign(1, uz);
                 double a = -1 / (sign + uz);
                 double b = ux * uy * a;

@@ -29,7 +29,8 @@ public record PacketRun(
         if (side == null || progress == null || stop == null)
             throw new Refusal("A run of packets needs a side, a progress and a stop.");
         if (times != null && (long) times.size() * Math.max(1, rings.size()) > 10_000_000)
-            throw new Refusal("The time histograms would hold more than 10000000 bins; take fewer rings or a longer step.");
+            throw new Refusal(
+                    "The time histograms would hold more than 10000000 bins; take fewer rings or a longer step.");
     }
 
     /** Totals only, on all processors. */

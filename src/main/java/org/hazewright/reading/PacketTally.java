@@ -110,7 +110,8 @@ public record PacketTally(
 
         PacketTally tally() {
             if (packets == 0)
-                return new PacketTally(0, 0, new SlabLight(0, 0, 0, 0, 0), Double.NaN, Double.NaN, 0, 0, 0, 0, List.of());
+                return new PacketTally(
+                        0, 0, new SlabLight(0, 0, 0, 0, 0), Double.NaN, Double.NaN, 0, 0, 0, 0, List.of());
             double n = packets;
             double ur = all.unscatteredReflected / n;
             double ut = all.unscatteredTransmitted / n;

@@ -12,11 +12,12 @@ import org.hazewright.optics.Refusal;
  *   Φ = 1/(πDL) Σ sin(p(z_s + z_b)) sin(p(z + z_b)) K₀(√(κ² + p²) ρ),   p = nπ/L, L = s + 2 z_b
  * </pre>
  * Images: Contini, Martelli &amp; Zaccanti, Appl. Opt. 36, 4587 (1997), eqs 36–46. Truncated at 1e−13 of the sum, except within
- * ρ &lt; L/20 of a slab that hardly absorbs, where 200 pairs leave less than 1e−7.
+ * ρ &lt; L/20 of a slab that hardly absorbs: there the m-th images fall as 1/m³ only, and what lies beyond 1000 of them is added
+ * as such a tail, to 1e−7.
  */
 final class PointSignal {
     private static final double NEGLIGIBLE = 1e-13;
-    private static final int PAIRS = 200;
+    private static final int PAIRS = 1000;
     private final Diffusion d;
     private final double kRe;
     private final double kIm;
@@ -70,6 +71,11 @@ final class PointSignal {
             pair(rho, z, -m * period + zs, -m * period - 2 * zb - zs, far);
             double step = Math.abs(re - beforeRe) + Math.abs(im - beforeIm);
             if (step <= NEGLIGIBLE * (Math.abs(re) + Math.abs(im))) return;
+            if (m == PAIRS) {
+                double tail = 0.5 * m - 0.5;
+                re += tail * (re - beforeRe);
+                im += tail * (im - beforeIm);
+            }
         }
     }
 

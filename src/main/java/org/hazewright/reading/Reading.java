@@ -30,7 +30,6 @@ public record Reading(
     Reading withNote(String more) {
         if (more == null) return this;
         String both = note == null ? more : note + " " + more;
-        return new Reading(
-                setUp, kind, wavelengthNm, distanceMm, quantity, value, u, curve, model, insideRange, both);
+        return new Reading(setUp, kind, wavelengthNm, distanceMm, quantity, value, u, curve, model, insideRange, both);
     }
 }

@@ -17,7 +17,8 @@ public record Response(double[] timePs, double[] counts) {
         double sum = 0;
         for (int i = 0; i < timePs.length; i++) {
             if (!Double.isFinite(timePs[i]) || (i > 0 && timePs[i] <= timePs[i - 1]))
-                throw new Refusal("The response's times must ascend, each once; row " + (i + 1) + " has " + timePs[i] + ".");
+                throw new Refusal(
+                        "The response's times must ascend, each once; row " + (i + 1) + " has " + timePs[i] + ".");
             sum += Refusal.notNegative("Response counts in row " + (i + 1), counts[i]);
         }
         if (!(sum > 0)) throw new Refusal("The response is 0 everywhere; it needs counts above 0.");
@@ -113,6 +114,7 @@ public record Response(double[] timePs, double[] counts) {
 
     @Override
     public String toString() {
-        return "Response of " + timePs.length + " points from " + timePs[0] + " to " + timePs[timePs.length - 1] + " ps";
+        return "Response of " + timePs.length + " points from " + timePs[0] + " to " + timePs[timePs.length - 1]
+                + " ps";
     }
 }

@@ -8,7 +8,8 @@ public record Ring(double innerMm, double outerMm) {
         Refusal.notNegative("Inner radius in mm", innerMm);
         Refusal.positive("Outer radius in mm", outerMm);
         if (outerMm <= innerMm)
-            throw new Refusal("A ring from " + innerMm + " to " + outerMm + " mm has no area; its outer radius must be larger.");
+            throw new Refusal(
+                    "A ring from " + innerMm + " to " + outerMm + " mm has no area; its outer radius must be larger.");
     }
 
     /** Around a distance, {@code halfWidthMm} to both sides; the inside stops at 0. */

@@ -83,7 +83,8 @@ public record SetUp(
         wavelengthsNm = List.copyOf(wavelengthsNm);
         distancesMm = List.copyOf(distancesMm);
         if (wavelengthsNm.isEmpty() || wavelengthsNm.size() > 1000)
-            throw new Refusal("The set-up \"" + title + "\" has " + wavelengthsNm.size() + " wavelengths; it needs 1 to 1000.");
+            throw new Refusal(
+                    "The set-up \"" + title + "\" has " + wavelengthsNm.size() + " wavelengths; it needs 1 to 1000.");
         for (double nm : wavelengthsNm) Refusal.within("Wavelength in nm", nm, 100, 20000);
         Refusal.within("Refractive index outside", outsideIndex, 1, 4);
         for (double mm : distancesMm) Refusal.within("Distance in mm", mm, 1e-3, 1e4);
@@ -101,7 +102,8 @@ public record SetUp(
         if (kind.hasDistances()) {
             int least = kind == Kind.SLOPE ? 2 : 1;
             if (distances < least || distances > 1000)
-                throw new Refusal(of + " has " + distances + " distances; it needs " + least + " to 1000 in distances_mm.");
+                throw new Refusal(
+                        of + " has " + distances + " distances; it needs " + least + " to 1000 in distances_mm.");
         } else if (distances > 0)
             throw new Refusal(of + " has no use for distances_mm; take them out, or choose another kind.");
         if ((kind == Kind.SLAB || kind == Kind.COLLIMATED) && thickness == null)
@@ -116,7 +118,8 @@ public record SetUp(
             String title, Kind kind, Double modulation, TimeAxis time, Response response, Double counts) {
         String of = "The set-up \"" + title + "\" of kind " + kind.word();
         if ((kind == Kind.FREQUENCY) != (modulation != null))
-            throw new Refusal(of + (modulation == null ? " needs modulation_mhz." : " has no use for modulation_mhz; take it out."));
+            throw new Refusal(of
+                    + (modulation == null ? " needs modulation_mhz." : " has no use for modulation_mhz; take it out."));
         if ((kind == Kind.TIME) != (time != null))
             throw new Refusal(of + (time == null ? " needs time_ps." : " has no use for time_ps; take it out."));
         if (kind != Kind.TIME && (response != null || counts != null))
@@ -126,7 +129,8 @@ public record SetUp(
     private static void checkModel(String title, Kind kind, ModelChoice model) {
         String of = "The set-up \"" + title + "\" of kind " + kind.word();
         if (kind.hasDistances() && model == ModelChoice.TRANSPORT)
-            throw new Refusal(of + " asks for model transport, which gives totals only; choose auto, diffusion or packets.");
+            throw new Refusal(
+                    of + " asks for model transport, which gives totals only; choose auto, diffusion or packets.");
         if ((kind == Kind.COLLIMATED || kind == Kind.OXIMETER) && model != ModelChoice.AUTO)
             throw new Refusal(of + " asks for model " + model.word() + ", but uses none of them; leave model out.");
     }

@@ -26,8 +26,7 @@ public final class SideWalls {
         double needed = Double.isInfinite(length)
                 ? Math.max(5 * distanceMm, 30 * medium.transportLengthMm())
                 : Math.min(
-                        0.5 * (4.6 * length + distanceMm),
-                        Math.max(5 * distanceMm, 30 * medium.transportLengthMm()));
+                        0.5 * (4.6 * length + distanceMm), Math.max(5 * distanceMm, 30 * medium.transportLengthMm()));
         return String.format(
                 Locale.ROOT,
                 "The nearest side wall is %.3g mm away, where light still reaches; the models know no side walls. Take a mould"

@@ -63,18 +63,34 @@ final class Square {
             double pivot = 1 / a[k * n + k];
             for (int i = k + 1; i < n; i++) {
                 double f = a[i * n + k] * pivot;
-                if (f == 0) continue;
+                a[i * n + k] = f;
                 for (int j = k + 1; j < n; j++) a[i * n + j] -= f * a[k * n + j];
-                for (int j = 0; j < m; j++) b[i * m + j] -= f * b[k * m + j];
             }
         }
-        for (int k = n - 1; k >= 0; k--) {
-            for (int i = k + 1; i < n; i++) {
-                double f = a[k * n + i];
-                for (int j = 0; j < m; j++) b[k * m + j] -= f * b[i * m + j];
-            }
-            double pivot = 1 / a[k * n + k];
-            for (int j = 0; j < m; j++) b[k * m + j] *= pivot;
+        for (int i = 1; i < n; i++) takeOff(n, a, m, b, i, 0, i);
+        for (int i = n - 1; i >= 0; i--) {
+            takeOff(n, a, m, b, i, i + 1, n);
+            double pivot = 1 / a[i * n + i];
+            for (int j = 0; j < m; j++) b[i * m + j] *= pivot;
+        }
+    }
+
+    /** Row i of b loses a_ik times row k, for k from {@code from} to {@code to}; four rows at a time. */
+    private static void takeOff(int n, double[] a, int m, double[] b, int i, int from, int to) {
+        int row = i * m;
+        int k = from;
+        for (; k + 3 < to; k += 4) {
+            double f0 = a[i * n + k];
+            double f1 = a[i * n + k + 1];
+            double f2 = a[i * n + k + 2];
+            double f3 = a[i * n + k + 3];
+            int b0 = k * m;
+            for (int j = 0; j < m; j++)
+                b[row + j] -= (f0 * b[b0 + j] + f1 * b[b0 + m + j]) + (f2 * b[b0 + 2 * m + j] + f3 * b[b0 + 3 * m + j]);
+        }
+        for (; k < to; k++) {
+            double f = a[i * n + k];
+            for (int j = 0; j < m; j++) b[row + j] -= f * b[k * m + j];
         }
     }
 

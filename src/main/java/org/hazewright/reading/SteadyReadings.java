@@ -59,16 +59,14 @@ final class SteadyReadings {
         return Math.hypot(s.perMua * spread.uMuaPerCm(), s.perMusp * spread.uMuspPerCm());
     }
 
-    private static void attenuation(
-            DistanceModels models, Answers answers, Signal[] signals, int i, Spread spread) {
+    private static void attenuation(DistanceModels models, Answers answers, Signal[] signals, int i, Spread spread) {
         Signal a = signals[0];
         Signal b = signals[i];
         double decibel = 10 / Math.log(10);
         Double u = spread == null
                 ? null
                 : decibel * relative(new Signal(1, b.perMua - a.perMua, b.perMusp - a.perMusp, 0), spread);
-        String against =
-                String.format(Locale.ROOT, "Against the signal at %.4g mm.", models.distanceMm(0));
+        String against = String.format(Locale.ROOT, "Against the signal at %.4g mm.", models.distanceMm(0));
         answers.add(
                 models.distanceMm(i),
                 Quantity.ATTENUATION_DB,

@@ -57,8 +57,7 @@ public final class TimeMoments {
         double s1 = phi * pair / 2 + j * (zs * e1 / r1 + sink * e2 / r2) / 2;
         double s2 = k == 0
                 ? Double.POSITIVE_INFINITY
-                : phi * (e1 * (1 + k * r1) - e2 * (1 + k * r2)) / (4 * k * k * k)
-                        + j * (zs * e1 + sink * e2) / (4 * k);
+                : phi * (e1 * (1 + k * r1) - e2 * (1 + k * r2)) / (4 * k * k * k) + j * (zs * e1 + sink * e2) / (4 * k);
         return new double[] {s0, s1 / vd, s2 / (vd * vd)};
     }
 

@@ -38,10 +38,8 @@ final class TimeReadings {
             Apparent fit = Apparent.curve(mm, seen, setUp.response(), known);
             String mua = FrequencyReadings.trueValue("µa", medium.muaPerCm());
             String musp = FrequencyReadings.trueValue("µs'", medium.muspPerCm());
-            answers.add(
-                    mm, Quantity.APPARENT_MUA_PER_CM, fit.muaPerCm(), null, fit.method(), models.inside(i), mua);
-            answers.add(
-                    mm, Quantity.APPARENT_MUSP_PER_CM, fit.muspPerCm(), null, fit.method(), models.inside(i), musp);
+            answers.add(mm, Quantity.APPARENT_MUA_PER_CM, fit.muaPerCm(), null, fit.method(), models.inside(i), mua);
+            answers.add(mm, Quantity.APPARENT_MUSP_PER_CM, fit.muspPerCm(), null, fit.method(), models.inside(i), musp);
         } catch (Refusal e) {
             answers.add(mm, Quantity.APPARENT_MUA_PER_CM, null, null, "none", false, e.getMessage());
         }

@@ -84,9 +84,9 @@ public final class TimeSignal {
             double sign = far && n % 2 == 0 ? -1 : 1;
             double read = d.fluenceShare * Math.sin(p * zb) + d.fluxShare * d.constantMm * p * Math.cos(p * zb);
             sum += sign * Math.sin(p * (d.sourceDepthMm + zb)) * read * fall;
-            // against the slowest wave, which outlives the others
-            double left = fall * Math.exp(Math.PI * Math.PI * diffused / (whole * whole));
-            if (n > 1 && left * n < 1e-15) return 2 / whole * sum;
+            // the next wave against the slowest, which outlives the others
+            double next = (n + 1) * Math.exp(-n * (n + 2) * Math.PI * Math.PI * diffused / (whole * whole));
+            if (next < 1e-15) return 2 / whole * sum;
         }
     }
 }

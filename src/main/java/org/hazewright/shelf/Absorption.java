@@ -28,7 +28,8 @@ public record Absorption(Spectrum table, Basis basis, double perTableUnit, doubl
         Refusal.within("Albedo of an extinction table", albedo, 0, 1);
         Refusal.within("Mean cosine g", g, -1, 1);
         for (double v : table.values())
-            if (v < 0) throw new Refusal(table.name() + " holds the negative absorption " + v + "; it must be 0 or above.");
+            if (v < 0)
+                throw new Refusal(table.name() + " holds the negative absorption " + v + "; it must be 0 or above.");
     }
 
     public static Absorption neat(Spectrum muaPerCm, double densityGPerMl, double albedo, double g) {

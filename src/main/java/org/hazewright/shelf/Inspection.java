@@ -27,8 +27,10 @@ public final class Inspection {
         List<Doubt> doubts = new ArrayList<>();
         for (Ingredient i : shelf.ingredients()) {
             if (!i.isBlend() && (i.densityGPerMl() < LEAST_DENSITY || i.densityGPerMl() > MOST_DENSITY))
-                doubts.add(new Doubt(i.id(), "a density of " + Figures.plain(i.densityGPerMl())
-                        + " g/mL is unusual; is it in g/mL and not kg/m³?"));
+                doubts.add(new Doubt(
+                        i.id(),
+                        "a density of " + Figures.plain(i.densityGPerMl())
+                                + " g/mL is unusual; is it in g/mL and not kg/m³?"));
             i.absorption().ifPresent(a -> {
                 spectrum(i, a.table(), doubts);
                 uncertainty(i, "absorption", i.uncertainty().absorption(), doubts);
@@ -39,14 +41,22 @@ public final class Inspection {
             });
             i.lot().ifPresent(lot -> {
                 if (shelf.find(lot.of()).isEmpty())
-                    doubts.add(new Doubt(i.id(), "it is a lot of \"" + lot.of() + "\", which the shelf does not hold."));
+                    doubts.add(
+                            new Doubt(i.id(), "it is a lot of \"" + lot.of() + "\", which the shelf does not hold."));
                 if (lot.expiredOn(today))
-                    doubts.add(new Doubt(i.id(), "lot " + lot.number() + " is past its date, "
-                            + lot.expires().orElseThrow() + "."));
+                    doubts.add(new Doubt(
+                            i.id(),
+                            "lot " + lot.number() + " is past its date, "
+                                    + lot.expires().orElseThrow() + "."));
             });
-            if (i.blend().isEmpty() && i.absorption().isEmpty() && i.scattering().isEmpty() && i.part() != Part.MODIFIER)
-                doubts.add(new Doubt(i.id(), "it neither absorbs nor scatters, so as " + i.part().word()
-                        + " it does nothing; give it [absorption] or [scattering]."));
+            if (i.blend().isEmpty()
+                    && i.absorption().isEmpty()
+                    && i.scattering().isEmpty()
+                    && i.part() != Part.MODIFIER)
+                doubts.add(new Doubt(
+                        i.id(),
+                        "it neither absorbs nor scatters, so as " + i.part().word()
+                                + " it does nothing; give it [absorption] or [scattering]."));
         }
         return doubts;
     }
@@ -60,20 +70,26 @@ public final class Inspection {
             double low = Math.min(v[k - 1], v[k]);
             double high = Math.max(v[k - 1], v[k]);
             if (nm[k] - nm[k - 1] <= 20 && high > 0.02 * most && high > JUMP * low) {
-                doubts.add(new Doubt(i.id(), s.name() + " jumps from " + Figures.significant(v[k - 1], 3) + " to "
-                        + Figures.significant(v[k], 3) + " between " + Figures.plain(nm[k - 1]) + " and "
-                        + Figures.plain(nm[k]) + " nm; is a digit missing?"));
+                doubts.add(new Doubt(
+                        i.id(),
+                        s.name() + " jumps from " + Figures.significant(v[k - 1], 3) + " to "
+                                + Figures.significant(v[k], 3) + " between " + Figures.plain(nm[k - 1]) + " and "
+                                + Figures.plain(nm[k]) + " nm; is a digit missing?"));
                 break;
             }
         }
         if (s.fromNm() > 650 || s.toNm() < 900)
-            doubts.add(new Doubt(i.id(), s.name() + " covers " + Figures.plain(s.fromNm()) + " to " + Figures.plain(s.toNm())
-                    + " nm only; briefs often ask for 650 to 900 nm."));
+            doubts.add(new Doubt(
+                    i.id(),
+                    s.name() + " covers " + Figures.plain(s.fromNm()) + " to " + Figures.plain(s.toNm())
+                            + " nm only; briefs often ask for 650 to 900 nm."));
     }
 
     private static void uncertainty(Ingredient i, String what, double u, List<Doubt> doubts) {
         if (u < 0.002)
-            doubts.add(new Doubt(i.id(), "its " + what + " is said to be known to " + Figures.significant(100 * u, 2)
-                    + " %; few bottles are known better than 0.2 %."));
+            doubts.add(new Doubt(
+                    i.id(),
+                    "its " + what + " is said to be known to " + Figures.significant(100 * u, 2)
+                            + " %; few bottles are known better than 0.2 %."));
     }
 }

@@ -29,6 +29,6 @@ public record Making(
     private static final OptionalDouble NO = OptionalDouble.empty();
 
     /** Nothing is known beyond common sense. */
-    public static final Making PLAIN = new Making(
-            NO, NO, NO, NO, NO, NO, NO, NO, NO, NO, NO, NO, NO, false, false, Optional.empty(), "");
+    public static final Making PLAIN =
+            new Making(NO, NO, NO, NO, NO, NO, NO, NO, NO, NO, NO, NO, NO, false, false, Optional.empty(), "");
 }

@@ -1,11 +1,11 @@
 package org.hazewright.shelf;
 
+import java.util.Optional;
 import org.hazewright.optics.Crowding;
 import org.hazewright.optics.Population;
 import org.hazewright.optics.Refusal;
 import org.hazewright.optics.SizeDistribution;
 import org.hazewright.optics.Spectrum;
-import java.util.Optional;
 
 /** How an ingredient scatters: by Mie from its particles, by a power law, or by a table. */
 public sealed interface Scattering {
@@ -31,7 +31,8 @@ public sealed interface Scattering {
             implements Scattering {
         public MieParticles {
             if (!(volumeFraction > 0 && volumeFraction <= 1))
-                throw new Refusal("Particle volume fraction is " + volumeFraction + "; it must lie above 0 and at most 1.");
+                throw new Refusal(
+                        "Particle volume fraction is " + volumeFraction + "; it must lie above 0 and at most 1.");
             Refusal.positive("Magnitude of scattering", magnitude);
         }
 
@@ -63,14 +64,15 @@ public sealed interface Scattering {
             Refusal.positive("µs' of a power law in cm²/g", muspCm2PerG);
             Refusal.positive("Reference wavelength of a power law in nm", atNm);
             Refusal.within("Exponent of a power law", exponent, -6, 6);
-            if (!(g >= -1 && g < 1)) throw new Refusal("Mean cosine g is " + g + "; it must lie between -1 and below 1.");
+            if (!(g >= -1 && g < 1))
+                throw new Refusal("Mean cosine g is " + g + "; it must lie between -1 and below 1.");
             Refusal.positive("Magnitude of scattering", magnitude);
         }
 
         public double muspCm2PerG(double nm) {
             if (nm < fromNm || nm > toNm)
-                throw new Refusal("The scattering power law has no value at " + nm + " nm: it holds from " + fromNm + " to "
-                        + toNm + " nm, and nothing is extrapolated.");
+                throw new Refusal("The scattering power law has no value at " + nm + " nm: it holds from " + fromNm
+                        + " to " + toNm + " nm, and nothing is extrapolated.");
             return magnitude * muspCm2PerG * Math.pow(nm / atNm, -exponent);
         }
 
@@ -90,7 +92,8 @@ public sealed interface Scattering {
             g.ifPresent(spectrum -> {
                 for (double v : spectrum.values())
                     if (!(v >= -1 && v < 1))
-                        throw new Refusal(spectrum.name() + " holds g = " + v + "; it must lie between -1 and below 1.");
+                        throw new Refusal(
+                                spectrum.name() + " holds g = " + v + "; it must lie between -1 and below 1.");
             });
         }
 

@@ -25,7 +25,8 @@ public final class Shelf {
             for (BlendPart p : i.blend()) {
                 Ingredient part = require(p.ingredient());
                 if (part.isBlend())
-                    throw new Refusal("The blend " + i.id() + " holds " + part.id() + ", itself a blend; name its parts.");
+                    throw new Refusal(
+                            "The blend " + i.id() + " holds " + part.id() + ", itself a blend; name its parts.");
             }
     }
 
@@ -77,7 +78,8 @@ public final class Shelf {
     /** Density of a base in g/mL, by adding the volumes of its parts. */
     public double densityGPerMl(Ingredient base) {
         double mlPerG = 0;
-        for (var part : partsOf(base).entrySet()) mlPerG += part.getValue() / part.getKey().densityGPerMl();
+        for (var part : partsOf(base).entrySet())
+            mlPerG += part.getValue() / part.getKey().densityGPerMl();
         return 1 / mlPerG;
     }
 

@@ -155,10 +155,22 @@ class StepsTest {
         assertFalse(steps.stream().anyMatch(s -> s.text().contains("labelled")));
     }
 
+    @Test
+    void workGoesForwardFromStocksToFinish() {
+        for (Contents contents : all().toList()) {
+            Step.Stage stage = Step.Stage.STOCKS;
+            for (Step s : steps(contents)) {
+                assertTrue(s.stage().compareTo(stage) >= 0, s.text());
+                stage = s.stage();
+            }
+        }
+    }
+
     static Stream<Contents> all() {
         return Stream.of(
                 Bottles.contents(Bottles.WATER, 1000, Bottles.INK, 14.024e-6, Bottles.EMULSION, 0.0492),
                 Bottles.contents(Bottles.WATER, 20, Bottles.INK, 1e-7),
+                Bottles.contents(Bottles.WATER, 200, Bottles.INK, 1e-2),
                 Bottles.contents(Bottles.GELATIN, 400, Bottles.TITANIA, 1e-3, Bottles.INK, 1e-5),
                 Bottles.contents(Bottles.SILICONE, 60, Bottles.TITANIA, 1e-4, Bottles.CARBON, 1e-4),
                 Bottles.contents(Bottles.RESIN, 500, Bottles.TITANIA, 1e-3));

@@ -17,8 +17,7 @@ import org.junit.jupiter.api.io.TempDir;
 
 /** The commands as a person types them, start to finish. */
 class CommandLineTest {
-    private static final String BATH =
-            """
+    private static final String BATH = """
             format = 1
             title = "Bath"
             base = "water"
@@ -91,8 +90,7 @@ class CommandLineTest {
 
     @Test
     void whatCannotBeMetIsWrittenAllTheSame() throws IOException {
-        Ran ran = design(BATH.replace("mua_per_cm = 0.1", "mua_per_cm = 0.30")
-                .replace("690", "970"));
+        Ran ran = design(BATH.replace("mua_per_cm = 0.1", "mua_per_cm = 0.30").replace("690", "970"));
         assertEquals(3, ran.status, ran.err);
         assertTrue(ran.out.contains("The base alone already absorbs 0.48"), ran.out);
         assertTrue(Files.exists(folder.resolve("out/bath.recipe.toml")));

@@ -220,7 +220,7 @@ class LotUpdateTest {
         Random random = new Random(20260304);
         Method method = new Method("time-resolved fit", 0.02, 0.02);
         Recipe recipe = DemoIngredients.recipe(
-                0.05, Item.neat(RED, 12), Item.neat(BLUE, 9), Item.neat(EMULSION, 25), Item.neat(WATER, 454));
+                0.3, Item.neat(RED, 12), Item.neat(BLUE, 9), Item.neat(EMULSION, 25), Item.neat(WATER, 454));
         double[] nm = {620, 700, 780, 860};
         List<MeasuredValue> plan = new ArrayList<>();
         Mixture m = Mixture.of(recipe);

@@ -14,7 +14,7 @@ import org.junit.jupiter.params.provider.ValueSource;
 /** The straight line and its linearity test against standards, certified values and a general statistics library. */
 class StraightLineReferenceTest {
 
-    /** ISO/TS 28037:2010, clause 6, p. 13: six points of equal weight. Printed to 3 decimals. */
+    /** ISO/TS 28037:2010, clause 6, example of equal weights (data from memory, results seen). Printed to 3 decimals. */
     @Test
     void equalWeightsOfTheStandard() {
         double[] x = {1, 2, 3, 4, 5, 6};
@@ -31,7 +31,7 @@ class StraightLineReferenceTest {
         assertFalse(line.scattersMoreThanStated());
     }
 
-    /** ISO/TS 28037:2010, clause 6, p. 15: unequal weights. Printed to 3 decimals. */
+    /** ISO/TS 28037:2010, clause 6, p. 15, example of unequal weights. Printed to 3 decimals. */
     @Test
     void unequalWeightsOfTheStandard() {
         double[] x = {1, 2, 3, 4, 5, 6};
@@ -44,7 +44,7 @@ class StraightLineReferenceTest {
         assertEquals(0.178, line.uSlope(), 5e-4);
         assertEquals(-0.082, line.covariance(), 5e-4);
         assertEquals(4.131, line.chiSquared(), 5e-4);
-        // Clause 6.3: the model stands while χ² is below its 95 % point for n − 2 = 4, 9.488.
+        // The standard lets the model stand while χ² is below its 95 % point for n − 2 = 4, 9.488.
         assertFalse(line.scattersMoreThanStated());
         assertTrue(line.pValue() > 0.05);
     }
