@@ -3,8 +3,10 @@ package org.hazewright.sheet;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.Collectors;
 import org.hazewright.bench.Answer;
 import org.hazewright.bench.Grams;
+import org.hazewright.bench.Outlook;
 import org.hazewright.bench.Weighing;
 import org.hazewright.brief.Brief;
 import org.hazewright.optics.Figures;
@@ -39,6 +41,18 @@ final class Sentences {
                     + "; no recipe can come below " + Figures.fixed(best, 2) + ".";
         return "The rounded recipe does not meet every tolerance: " + how + ". Before rounding to the balance "
                 + Figures.fixed(best, 2) + " can be reached.";
+    }
+
+    /** "ink-demo absorption 62 %, weighing ink-demo 9 %, …": shares of the variance, the first five of 2 % and more. */
+    static Optional<String> couldMove(Answer answer) {
+        Outlook outlook =
+                new Outlook(answer.brief(), answer.recipe(), answer.predicted(), answer.budget(), answer.chance());
+        String shares = outlook.causes().stream()
+                .filter(c -> c.share() >= 0.02)
+                .limit(5)
+                .map(c -> c.name() + " " + Math.round(100 * c.share()) + " %")
+                .collect(Collectors.joining(", "));
+        return shares.isEmpty() ? Optional.empty() : Optional.of(shares + " of the variance.");
     }
 
     /** Digits after the point that show both the tolerance and the uncertainty of a prediction. */
