@@ -122,6 +122,15 @@ class MutationTest {
     }
 
     @Test
+    void series() {
+        Spectrum flat = new Spectrum("flat", new double[] {600, 900}, new double[] {1, 1});
+        Tissue.Spectra spectra = new Tissue.Spectra(flat, flat, flat, flat);
+        Path file = folder.resolve("s.brief.toml");
+        mutate(file, SeriesReaderTest.GRID, 4, f -> SeriesReader.read(f, () -> spectra));
+        mutate(file, SeriesReaderTest.ROWS, 5, f -> SeriesReader.read(f, () -> spectra));
+    }
+
+    @Test
     void recipesAndBatches() {
         Shelf shelf = ShelfReader.read(SmallShelf.in(folder));
         mutate(folder.resolve("r.recipe.toml"), RECIPE, 2, file -> RecipeReader.read(file, shelf));

@@ -32,7 +32,7 @@ class SeriesReaderTest {
             batch_ml = 100
             """;
 
-    private static final String ROWS = HEAD + """
+    static final String ROWS = HEAD + """
             [[phantom]]
             name = "pale"
             wavelength_nm = 800
@@ -59,7 +59,7 @@ class SeriesReaderTest {
             evaporation_g_per_step = 0.2
             """;
 
-    private static final String GRID = HEAD + """
+    static final String GRID = HEAD + """
             [tolerance]
             mua = 0.1
             [series]
