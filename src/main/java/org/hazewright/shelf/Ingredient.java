@@ -74,4 +74,30 @@ public record Ingredient(
     public String kind() {
         return lot.map(Lot::of).orElse(id);
     }
+
+    /** The same thing, known otherwise. */
+    public Ingredient withUncertainty(Uncertainty other) {
+        return new Ingredient(
+                id,
+                name,
+                part,
+                families,
+                form,
+                densityGPerMl,
+                maxGPerMl,
+                pricePerG,
+                settles,
+                leastShare,
+                handling,
+                conflicts,
+                cautions,
+                source,
+                other,
+                absorption,
+                scattering,
+                index,
+                blend,
+                making,
+                lot);
+    }
 }
