@@ -7,10 +7,15 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.concurrent.Callable;
 import org.hazewright.bench.SeriesPlan;
+import org.hazewright.bench.TitrationPlan;
 import org.hazewright.brief.Series;
 import org.hazewright.files.RecipeWriter;
 import org.hazewright.files.SafeFile;
 import org.hazewright.files.SeriesReader;
+import org.hazewright.mixture.Recipe;
+import org.hazewright.sheet.RecipeSheet;
+import org.hazewright.sheet.SeriesSheet;
+import org.hazewright.sheet.TitrationSheet;
 import org.hazewright.shelf.Shelf;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
@@ -47,14 +52,22 @@ final class SeriesCommand implements Callable<Integer> {
     @Override
     public Integer call() {
         PrintWriter text = spec.commandLine().getOut();
+        RecipeSheet.getReady();
         Shelf shelf = shared.shelf();
         Series series = SeriesReader.read(brief, shared.tissueSpectra());
         LongWork work =
                 new LongWork(spec.commandLine().getErr(), shared.quiet || shared.json, program.interruption);
         LocalDate today = LocalDate.now();
         Path folder = out != null ? out : brief.toAbsolutePath().getParent();
-        SeriesPlan plan = SeriesPlan.of(series, shelf, work::stop, work::progress);
-        List<Path> written = write(plan, folder);
+        return series.titration().isPresent()
+                ? titration(TitrationPlan.of(series, shelf, work::stop, work::progress), today, folder, text)
+                : set(SeriesPlan.of(series, shelf, work::stop, work::progress), today, folder, text);
+    }
+
+    private int set(SeriesPlan plan, LocalDate today, Path folder, PrintWriter text) {
+        List<Path> written = new ArrayList<>();
+        for (SeriesPlan.Phantom p : plan.phantoms()) write(p.brief().name(), p.recipe(), folder, written);
+        sheet(plan.series().name(), SeriesSheet.write(plan, today), folder, written);
         if (shared.json) SeriesJson.of(plan).print(text);
         else {
             new SeriesText(plan, shared.units, text).print(today);
@@ -63,14 +76,30 @@ final class SeriesCommand implements Callable<Integer> {
         return plan.meets() ? Hazewright.DONE : Hazewright.MISSES;
     }
 
-    private static List<Path> write(SeriesPlan plan, Path folder) {
+    private int titration(TitrationPlan plan, LocalDate today, Path folder, PrintWriter text) {
         List<Path> written = new ArrayList<>();
-        for (SeriesPlan.Phantom p : plan.phantoms()) {
-            Path recipe = folder.resolve(p.brief().name() + ".recipe.toml");
-            RecipeWriter.write(recipe, p.recipe(), SafeFile.Overwrite.KEEP_PREVIOUS);
-            written.add(recipe);
+        String name = plan.series().name();
+        write(name + "-bath", plan.start(), folder, written);
+        write(name + "-titrant", plan.titrant(), folder, written);
+        sheet(name, TitrationSheet.write(plan, today), folder, written);
+        if (shared.json) TitrationText.json(plan).print(text);
+        else {
+            new TitrationText(plan, shared.units, text).print(today);
+            if (!shared.quiet) told(written, text);
         }
-        return written;
+        return plan.meets() ? Hazewright.DONE : Hazewright.MISSES;
+    }
+
+    private static void write(String name, Recipe recipe, Path folder, List<Path> written) {
+        Path file = folder.resolve(name + ".recipe.toml");
+        RecipeWriter.write(file, recipe, SafeFile.Overwrite.KEEP_PREVIOUS);
+        written.add(file);
+    }
+
+    private static void sheet(String name, byte[] workbook, Path folder, List<Path> written) {
+        Path file = folder.resolve(name + ".series.xlsx");
+        SafeFile.write(file, workbook, SafeFile.Overwrite.KEEP_PREVIOUS);
+        written.add(file);
     }
 
     private static void told(List<Path> written, PrintWriter text) {
