@@ -89,7 +89,7 @@ public final class BriefReader {
     }
 
     /** {@code forearm.brief.toml} is called forearm, and so is {@code forearm.toml}. */
-    static String nameOf(Path file) {
+    public static String nameOf(Path file) {
         String name = file.getFileName().toString();
         for (String ending : new String[] {".brief.toml", ".toml"})
             if (name.toLowerCase(Locale.ROOT).endsWith(ending) && name.length() > ending.length())

@@ -157,10 +157,10 @@ public final class SeriesReader {
     }
 
     private static Titration titration(TomlPage table) {
-        table.refuseUnknown("keep_musp", "aliquot_ml", "evaporation_g_per_step");
+        table.refuseUnknown("keep_musp", "aliquot_ml", "evaporation_g_per_step", "vessel_ml");
         boolean keep = table.flag("keep_musp", false);
         double aliquot = table.has("aliquot_ml") ? table.notNegative("aliquot_ml") : 0;
         double evaporation = table.has("evaporation_g_per_step") ? table.notNegative("evaporation_g_per_step") : 0;
-        return table.at().of(() -> new Titration(keep, aliquot, evaporation));
+        return table.at().of(() -> new Titration(keep, aliquot, evaporation, table.maybePositive("vessel_ml")));
     }
 }

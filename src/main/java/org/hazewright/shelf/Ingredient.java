@@ -77,6 +77,32 @@ public record Ingredient(
         return lot.map(Lot::of).orElse(id);
     }
 
+    /** The same thing, known otherwise. */
+    public Ingredient withUncertainty(Uncertainty other) {
+        return new Ingredient(
+                id,
+                name,
+                part,
+                families,
+                form,
+                densityGPerMl,
+                maxGPerMl,
+                pricePerG,
+                settles,
+                leastShare,
+                handling,
+                conflicts,
+                cautions,
+                source,
+                other,
+                absorption,
+                scattering,
+                index,
+                blend,
+                making,
+                lot);
+    }
+
     /** By id alone: equal ingredients have equal ids, and maps are asked for ingredients all the time. */
     @Override
     public int hashCode() {
