@@ -93,7 +93,9 @@ public sealed interface SizeDistribution {
 
         @Override
         public boolean equals(Object other) {
-            return other instanceof Histogram h && Arrays.equals(edgesNm, h.edgesNm) && Arrays.equals(weights, h.weights);
+            return other instanceof Histogram h
+                    && Arrays.equals(edgesNm, h.edgesNm)
+                    && Arrays.equals(weights, h.weights);
         }
 
         @Override

@@ -24,7 +24,8 @@ public final class Spectrum {
         for (int i = 0; i < value.length; i++) {
             Refusal.positive(name + ": wavelength in nm", wavelengthNm[i]);
             if (!Double.isFinite(value[i]))
-                throw new Refusal(name + " has the value " + value[i] + " at " + wavelengthNm[i] + " nm; it must be finite.");
+                throw new Refusal(
+                        name + " has the value " + value[i] + " at " + wavelengthNm[i] + " nm; it must be finite.");
             if (i > 0 && wavelengthNm[i] <= wavelengthNm[i - 1])
                 throw new Refusal(name + " goes from " + wavelengthNm[i - 1] + " to " + wavelengthNm[i]
                         + " nm; wavelengths must ascend, each once.");
