@@ -7,7 +7,7 @@ import org.hazewright.optics.Refusal;
  *
  * <p>Any albedo, any thickness from 0 mm up, Henyey–Greenstein phase function, |g| ≤ 0.99, smooth faces with any outside
  * index. The forward peak beyond the highest moment followed goes straight on (delta-M: Wiscombe, J. Atmos. Sci. 34, 1408,
- * 1977); the unscattered beam is kept apart exactly. Error of each share at most 1e−5 up to |g| = 0.95 and index ratio 1.6,
+ * 1977); the unscattered beam is kept apart exactly. Error of each share at most 1e−5 for g from −0.5 to 0.95 and index ratio 1.6,
  * 1e−4 beyond. The semi-infinite medium is the limit of thick layers.
  *
  * <p>Plass, Kattawar &amp; Catchings, Appl. Opt. 12, 314 (1973); van de Hulst, Multiple Light Scattering, Academic Press (1980).
@@ -42,7 +42,7 @@ public final class AddingDoubling {
         Boundary boundary = new Boundary(medium.n(), outsideIndex);
         Directions directions = Directions.of(count, boundary);
         int orders = boundary.criticalCosine() == 0 ? 2 * count : 19 * count / 10;
-        double forward = Math.pow(medium.g(), orders);
+        double forward = medium.g() > 0 ? Math.pow(medium.g(), orders) : 0;
         double[] moment = new double[orders];
         for (int l = 0; l < orders; l++) moment[l] = (Math.pow(medium.g(), l) - forward) / (1 - forward);
         double a = medium.albedo();

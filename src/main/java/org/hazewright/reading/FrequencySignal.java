@@ -7,6 +7,7 @@ import org.hazewright.optics.Refusal;
  *
  * <p>Frequency in MHz, 0 to 1e5; ρ in mm. The lag is in degrees and unwrapped: it grows from 0 at 0 MHz without jumps.
  * Haskell et al., J. Opt. Soc. Am. A 11, 2727 (1994), with the complex µeff.
+ * Not for several threads at once.
  */
 public final class FrequencySignal {
     private static final double RADIANS_PER_PS = 2 * Math.PI * 1e-6;
