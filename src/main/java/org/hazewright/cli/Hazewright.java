@@ -21,6 +21,8 @@ import picocli.CommandLine.Spec;
             DesignCommand.class,
             PredictCommand.class,
             IngredientsCommand.class,
+            BatchCommand.class,
+            CorrectCommand.class,
             ParticlesCommand.class,
         },
         footer = {
