@@ -4,6 +4,7 @@ import java.io.PrintWriter;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import org.hazewright.desk.Opening;
@@ -26,6 +27,7 @@ import picocli.CommandLine.Spec;
         synopsisSubcommandLabel = "COMMAND",
         subcommands = {
             DesignCommand.class,
+            SeriesCommand.class,
             PredictCommand.class,
             IngredientsCommand.class,
             ParticlesCommand.class,
@@ -43,6 +45,12 @@ public final class Hazewright implements Runnable {
     static final int REFUSED = 2;
     static final int MISSES = 3;
     static final int UNWRITABLE = 4;
+
+    final Interruption interruption;
+
+    Hazewright(Interruption interruption) {
+        this.interruption = interruption;
+    }
 
     @Spec
     private CommandSpec spec;
@@ -81,15 +89,22 @@ public final class Hazewright implements Runnable {
     public static void main(String[] args) {
         PrintWriter out = new PrintWriter(System.out, false, StandardCharsets.UTF_8);
         PrintWriter err = new PrintWriter(System.err, true, StandardCharsets.UTF_8);
-        int status = run(out, err, args);
+        Interruption interruption = Interruption.atTerminal();
+        int status = run(out, err, interruption, args);
         out.flush();
         err.flush();
+        interruption.finished(status);
         System.exit(out.checkError() && status == DONE ? UNWRITABLE : status);
     }
 
     /** Runs one command line against the given writers and gives its exit status. */
     static int run(PrintWriter out, PrintWriter err, String... args) {
-        CommandLine line = new CommandLine(new Hazewright())
+        return run(out, err, new Interruption(), args);
+    }
+
+    /** The same; long work ends early once {@code interruption} is asked for. */
+    static int run(PrintWriter out, PrintWriter err, Interruption interruption, String... args) {
+        CommandLine line = new CommandLine(new Hazewright(interruption))
                 .setOut(out)
                 .setErr(err)
                 .setColorScheme(CommandLine.Help.defaultColorScheme(CommandLine.Help.Ansi.OFF))
@@ -106,7 +121,8 @@ public final class Hazewright implements Runnable {
         return status;
     }
 
-    private static int status(Exception problem, PrintWriter err) {
+    /** Says what went wrong, in words for a person, and gives its exit status. */
+    static int status(Exception problem, PrintWriter err) {
         if (problem instanceof WriteFailure) {
             err.println("hazewright: " + problem.getMessage());
             return UNWRITABLE;
@@ -120,6 +136,12 @@ public final class Hazewright implements Runnable {
                         + " the lines below.");
         problem.printStackTrace(err);
         return FAULT;
+    }
+
+    /** The worse of two statuses: a fault before what could not be written, was refused, or misses. */
+    static int worse(int one, int other) {
+        List<Integer> order = List.of(DONE, MISSES, REFUSED, UNWRITABLE, FAULT);
+        return order.indexOf(one) >= order.indexOf(other) ? one : other;
     }
 
     /** Picocli's message without its bracketed details, ended with where to look. */

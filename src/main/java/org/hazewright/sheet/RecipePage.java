@@ -58,6 +58,7 @@ final class RecipePage {
         weighOut();
         targets();
         charts(spectra);
+        Sentences.couldMove(answer).ifPresent(s -> sentences("What could move it", List.of(s)));
         sentences("What holds it back", answer.limits());
         mind();
         sources();

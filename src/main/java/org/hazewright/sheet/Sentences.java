@@ -3,8 +3,10 @@ package org.hazewright.sheet;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.Collectors;
 import org.hazewright.bench.Answer;
 import org.hazewright.bench.Grams;
+import org.hazewright.bench.Outlook;
 import org.hazewright.bench.Weighing;
 import org.hazewright.brief.Brief;
 import org.hazewright.optics.Figures;
@@ -27,16 +29,30 @@ final class Sentences {
 
     /** Whether it meets the brief, and if not how near it comes. */
     static String verdict(Answer answer) {
-        if (answer.meets()) return "The recipe meets every tolerance.";
+        if (answer.meets())
+            return "As planned, every target lies inside its tolerance; the worst miss is "
+                    + Figures.fixed(answer.worstMiss(), 2) + " half-widths.";
         long outside = answer.predicted().stream().filter(p -> !p.inside()).count();
         String how = outside + " of " + answer.predicted().size() + " targets " + (outside == 1 ? "lies" : "lie")
-                + " outside, the worst by " + Figures.fixed(answer.worstMiss(), 2) + " half-widths of its tolerance";
+                + " outside; the worst miss is " + Figures.fixed(answer.worstMiss(), 2) + " half-widths";
         double best = answer.bestPossibleWorstMiss();
         if (best > 1)
             return "No recipe from this shelf meets every tolerance; this is the closest. " + how
                     + "; no recipe can come below " + Figures.fixed(best, 2) + ".";
         return "The rounded recipe does not meet every tolerance: " + how + ". Before rounding to the balance "
                 + Figures.fixed(best, 2) + " can be reached.";
+    }
+
+    /** "ink-demo absorption 62 %, weighing ink-demo 9 %, …": shares of the variance, the first five of 2 % and more. */
+    static Optional<String> couldMove(Answer answer) {
+        Outlook outlook =
+                new Outlook(answer.brief(), answer.recipe(), answer.predicted(), answer.budget(), answer.chance());
+        String shares = outlook.causes().stream()
+                .filter(c -> c.share() >= 0.02)
+                .limit(5)
+                .map(c -> c.name() + " " + Math.round(100 * c.share()) + " %")
+                .collect(Collectors.joining(", "));
+        return shares.isEmpty() ? Optional.empty() : Optional.of(shares + " of the variance.");
     }
 
     /** Digits after the point that show both the tolerance and the uncertainty of a prediction. */

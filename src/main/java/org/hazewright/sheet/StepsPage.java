@@ -26,7 +26,7 @@ final class StepsPage {
         page.height(0, 24);
         page.sentence(1, 0, DONE, answer.brief().title() + " · " + Sentences.summary(answer), Face.QUIET);
         String[] heads = {"no", "do", "at, for", "mind", "done"};
-        for (int c = 0; c < heads.length; c++) page.text(2, c, heads[c], Face.HEAD);
+        for (int c = 0; c < heads.length; c++) page.text(2, c, heads[c], c == MIND ? Face.HEAD.indent() : Face.HEAD);
         int row = 3;
         Step.Stage stage = null;
         int number = 1;
@@ -55,7 +55,7 @@ final class StepsPage {
         List<String> mind = new ArrayList<>(s.handling());
         s.cautions().forEach(c -> mind.add("Caution: " + c));
         String words = String.join("\n", mind);
-        page.text(row, MIND, words, SMALL);
+        page.text(row, MIND, words, SMALL.indent());
         page.cell(row, DONE, LINE.centred().fillIn());
         page.height(row, 16);
         page.roomFor(row, text, LINE, TEXT, TEXT);
