@@ -2,6 +2,9 @@ package org.hazewright.sheet;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Collection;
+import java.util.LinkedHashMap;
+import java.util.Map;
 import java.util.Optional;
 import java.util.stream.Collectors;
 import org.hazewright.bench.Answer;
@@ -110,5 +113,17 @@ final class Sentences {
 
     static String lot(Optional<String> lot) {
         return lot.map(l -> "lot " + l).orElse("");
+    }
+
+    /** Each caution of the ingredients' files once, with the names of all that it holds for. */
+    static Map<String, List<String>> cautionsByNames(Collection<Ingredient> all) {
+        Map<String, List<String>> names = new LinkedHashMap<>();
+        for (Ingredient i : all)
+            for (String c : i.cautions())
+                names.computeIfAbsent(c, k -> new ArrayList<>()).add(i.name());
+        Map<String, List<String>> cautions = new LinkedHashMap<>();
+        names.forEach((caution, of) -> cautions.computeIfAbsent(String.join("; ", of), k -> new ArrayList<>())
+                .add(caution));
+        return cautions;
     }
 }
