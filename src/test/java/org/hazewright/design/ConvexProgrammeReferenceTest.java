@@ -131,9 +131,11 @@ class ConvexProgrammeReferenceTest {
         double middle = Math.log(Math.E - 1);
         double[] x = {0, 0.1, 0.2, 0.35, middle, 0.6, 0.8, 0.93, 1};
         double[] ones = all(x.length, 1);
-        List<Point> points = Arrays.stream(x).mapToObj(v -> new Point(Math.exp(v), 1, 1)).toList();
+        List<Point> points =
+                Arrays.stream(x).mapToObj(v -> new Point(Math.exp(v), 1, 1)).toList();
         List<Candidate> candidates = List.of(
-                new Candidate(ones, 0, 0, OPEN, 1e-3, Group.ABSORBER), new Candidate(x, 0, 0, OPEN, 1e-3, Group.ABSORBER));
+                new Candidate(ones, 0, 0, OPEN, 1e-3, Group.ABSORBER),
+                new Candidate(x, 0, 0, OPEN, 1e-3, Group.ABSORBER));
         LeastWorstMiss least = new SetSearch(new SetProblem(points, candidates, new Limits(2, 0, 0, 2, 1, List.of())))
                 .leastWorstMiss(() -> false);
         double error = (2 - Math.E + (Math.E - 1) * middle) / 2;
@@ -141,7 +143,8 @@ class ConvexProgrammeReferenceTest {
         assertEquals(error, least.bound(), 1e-13);
         assertArrayEquals(new double[] {1 - error, Math.E - 1}, least.amounts(), 1e-13);
         for (int j = 0; j < x.length; j++) {
-            // Too low at the ends, too high in the middle; half the weight there, since the weights balance both columns.
+            // Too low at the ends, too high in the middle; half the weight there, since the weights balance both
+            // columns.
             double weight = j == 4 ? 0.5 : j == 0 ? -0.5 * (1 - middle) : j == 8 ? -0.5 * middle : 0;
             assertEquals(weight, least.pointWeight()[j], 1e-13, "point " + j);
         }

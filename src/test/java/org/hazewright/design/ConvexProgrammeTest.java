@@ -115,7 +115,8 @@ class ConvexProgrammeTest {
             double[] row = new double[n];
             row[i] = 1;
             constraints.add(new LinearConstraint(row, Relationship.GEQ, 0));
-            if (p.upper()[i] < OPEN) constraints.add(new LinearConstraint(row, Relationship.LEQ, p.upper()[i] / unit[i]));
+            if (p.upper()[i] < OPEN)
+                constraints.add(new LinearConstraint(row, Relationship.LEQ, p.upper()[i] / unit[i]));
         }
         for (Limit l : p.limits()) {
             double[] row = new double[n];
@@ -257,7 +258,8 @@ class ConvexProgrammeTest {
                             GoalType.MAXIMIZE,
                             new NonNegativeConstraint(true))
                     .getValue();
-            Solution s = ConvexProgramme.ofAmounts(new double[n][n], a, 0, upper, limits).solve();
+            Solution s = ConvexProgramme.ofAmounts(new double[n][n], a, 0, upper, limits)
+                    .solve();
             assertEquals(Status.OPTIMAL, s.status(), "seed " + seed);
             assertEquals(-expected, s.value(), 1e-8 * (1 + expected), "seed " + seed);
         }
@@ -312,9 +314,13 @@ class ConvexProgrammeTest {
     void refusesNonsense() {
         double[] one = {1};
         double[] open = {OPEN};
-        assertThrows(Refusal.class, () -> ConvexProgramme.ofAmounts(new double[0][0], new double[0], 0, new double[0], List.of()));
+        assertThrows(
+                Refusal.class,
+                () -> ConvexProgramme.ofAmounts(new double[0][0], new double[0], 0, new double[0], List.of()));
         assertThrows(Refusal.class, () -> ConvexProgramme.ofAmounts(new double[][] {{-1}}, one, 0, open, List.of()));
-        assertThrows(Refusal.class, () -> ConvexProgramme.ofAmounts(new double[][] {{1}}, new double[] {Double.NaN}, 0, open, List.of()));
+        assertThrows(
+                Refusal.class,
+                () -> ConvexProgramme.ofAmounts(new double[][] {{1}}, new double[] {Double.NaN}, 0, open, List.of()));
         assertThrows(Refusal.class, () -> new Limit(new double[] {1}, Double.NaN, 1));
         assertThrows(
                 Refusal.class,
