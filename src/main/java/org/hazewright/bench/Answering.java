@@ -1,0 +1,274 @@
+package org.hazewright.bench;
+
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.HashSet;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.Set;
+import java.util.function.BooleanSupplier;
+import java.util.function.DoubleConsumer;
+import org.hazewright.brief.Brief;
+import org.hazewright.brief.Point;
+import org.hazewright.design.Design;
+import org.hazewright.design.Finding;
+import org.hazewright.design.Option;
+import org.hazewright.design.Score;
+import org.hazewright.mixture.Budget;
+import org.hazewright.mixture.Coefficients;
+import org.hazewright.mixture.Draws;
+import org.hazewright.mixture.Mixture;
+import org.hazewright.mixture.Recipe;
+import org.hazewright.shelf.Ingredient;
+import org.hazewright.shelf.Shelf;
+
+/**
+ * From a brief to the answer that a person weighs: search, stocks, rounding, and the final check on the full model.
+ *
+ * <p>The search ranks sets without stocks; a set that needs a milligram ranks low there and may be the best once a stock is made.
+ * So every leading set is planned, unless what no plan can improve on (bias and ingredient terms of its optimum) is already above
+ * the best plan. Offered is the plan of least score among those inside every tolerance, or of all when none is.
+ */
+public final class Answering {
+    /** Draws behind the chance that is printed: its standard error is at most 0.25 in 100. */
+    public static final int DRAWS = 40_000;
+
+    private static final int DRAWS_OF_ALTERNATIVES = 4_000;
+    private static final long SEED = 1;
+
+    /** How far tolerances are narrowed, step by step, until the rounded grams stay inside. */
+    private static final double[] EDGES = {1, 0.999, 0.995, 0.98, 0.95, 0.9};
+
+    private final Brief brief;
+    private final Shelf shelf;
+    private final Design design;
+
+    private Answering(Brief brief, Shelf shelf, BooleanSupplier stop, DoubleConsumer progress) {
+        this.brief = brief;
+        this.shelf = shelf;
+        this.design = new Design(brief, shelf, stop, progress);
+    }
+
+    /** The answer, with up to {@code alternatives} other ways. */
+    public static Answer to(Brief brief, Shelf shelf, int alternatives) {
+        return to(brief, shelf, alternatives, () -> false, share -> {});
+    }
+
+    public static Answer to(Brief brief, Shelf shelf, int alternatives, BooleanSupplier stop, DoubleConsumer progress) {
+        return new Answering(brief, shelf, stop, progress).answer(alternatives);
+    }
+
+    /** An option made weighable. */
+    private record Planned(Option option, StockPlan plan, Score score, double worstMiss) {
+        Recipe recipe() {
+            return plan.recipe();
+        }
+
+        boolean meets() {
+            return worstMiss <= 1;
+        }
+    }
+
+    private Answer answer(int alternatives) {
+        Finding finding = design.find(alternatives == 0);
+        List<Planned> planned = new ArrayList<>();
+        double best = Double.POSITIVE_INFINITY;
+        for (Option option : finding.options()) {
+            if (option.meets() != finding.best().meets()) continue;
+            double unbeatable = option.score().bias() + option.score().ingredient();
+            if (alternatives == 0 && unbeatable > best) continue;
+            Planned p = plan(option);
+            planned.add(p);
+            if (p.meets() == option.meets()) best = Math.min(best, p.score().total());
+        }
+        planned.sort(Comparator.comparing((Planned p) -> !p.meets())
+                .thenComparingDouble(p -> p.score().total()));
+        Planned offered = planned.get(0);
+        return assemble(finding, offered, new OtherWays(planned).others(alternatives));
+    }
+
+    private Planned plan(Option option) {
+        Planned last = null;
+        for (double edge : EDGES) {
+            Optional<Option> narrowed = edge == 1 ? Optional.of(option) : design.narrowed(option, edge);
+            if (narrowed.isEmpty()) break;
+            Planned now = planned(narrowed.get(), option);
+            if (last == null || now.worstMiss() < last.worstMiss()) last = now;
+            if (!option.meets() || now.meets()) break;
+        }
+        return last;
+    }
+
+    private Planned planned(Option option, Option exact) {
+        Contents contents = new Contents(
+                brief.title(),
+                shelf,
+                option.base(),
+                option.concentrationGPerMl(),
+                brief.volumeMl(),
+                brief.temperatureC(),
+                brief.sha256());
+        StockPlan plan = StockPlan.of(contents, brief.balance(), recipe -> {
+            double outside = Math.max(0, option.frozen().worstMiss(recipe) - 1);
+            double fine = exact.meets() ? 1e3 * outside : 0;
+            return option.frozen().score(recipe).total() + fine;
+        });
+        Score score = option.frozen().score(plan.recipe());
+        return new Planned(exact, plan, score, worstMiss(plan.recipe()));
+    }
+
+    private double worstMiss(Recipe recipe) {
+        double[] values = values(Mixture.of(recipe));
+        double worst = 0;
+        for (int j = 0; j < values.length; j++)
+            worst = Math.max(worst, Math.abs(brief.points().get(j).miss(values[j])));
+        return worst;
+    }
+
+    private double[] values(Mixture mixture) {
+        Map<Double, Coefficients> at = new LinkedHashMap<>();
+        List<Point> points = brief.points();
+        double[] values = new double[points.size()];
+        for (int j = 0; j < values.length; j++) {
+            Coefficients c = at.computeIfAbsent(points.get(j).wavelengthNm(), mixture::at);
+            values[j] = points.get(j).quantity() == Point.Quantity.MUA ? c.muaPerCm() : c.muspPerCm();
+        }
+        return values;
+    }
+
+    private Answer assemble(Finding finding, Planned offered, List<Answer.Alternative> others) {
+        Recipe recipe = offered.recipe();
+        Mixture mixture = Mixture.of(recipe);
+        double[] nm = brief.wavelengthsNm();
+        double capacity = brief.balance().capacityG();
+        Budget budget = Budget.of(recipe, nm, capacity);
+        Draws draws = Draws.of(recipe, nm, capacity, DRAWS, SEED);
+        double[] values = values(mixture);
+        List<Answer.Predicted> predicted = new ArrayList<>();
+        double bias = 0;
+        double worst = 0;
+        for (int j = 0; j < values.length; j++) {
+            Point p = brief.points().get(j);
+            boolean scattering = p.quantity() == Point.Quantity.MUSP;
+            int at = java.util.Arrays.binarySearch(nm, p.wavelengthNm());
+            double u = (scattering ? budget.uMuspPerCm() : budget.uMuaPerCm())[at];
+            double[] interval = draws.interval95(scattering, at);
+            double miss = p.miss(values[j]);
+            bias += p.weight() * miss * miss;
+            worst = Math.max(worst, Math.abs(miss));
+            predicted.add(new Answer.Predicted(p, values[j], u, interval[0], interval[1], miss));
+        }
+        Score score =
+                new Score(bias, offered.score().ingredient(), offered.score().weighing());
+        Option exact = offered.option();
+        return new Answer(
+                brief,
+                recipe,
+                mixture,
+                predicted,
+                score,
+                new Answer.Exact(exact.score(), exact.concentrationGPerMl()),
+                worst,
+                Math.min(finding.bestPossibleWorstMiss(), worst),
+                chance(draws, nm),
+                budget,
+                finding.limits(),
+                others,
+                finding.leftOut(),
+                new Answer.SearchCount(finding.admissible(), finding.solved(), finding.cut(), finding.proven()),
+                offered.plan().notes());
+    }
+
+    private double chance(Draws draws, double[] nm) {
+        double[] low = new double[2 * nm.length];
+        double[] high = new double[2 * nm.length];
+        java.util.Arrays.fill(low, Double.NaN);
+        java.util.Arrays.fill(high, Double.NaN);
+        for (Point p : brief.points()) {
+            int at = java.util.Arrays.binarySearch(nm, p.wavelengthNm())
+                    + (p.quantity() == Point.Quantity.MUSP ? nm.length : 0);
+            low[at] = p.wantedPerCm() - p.tolerancePerCm();
+            high[at] = p.wantedPerCm() + p.tolerancePerCm();
+        }
+        return draws.shareInside(low, high);
+    }
+
+    /** Plans worth offering beside the best: none beaten by another in score, weighings, cost and chance at once. */
+    private final class OtherWays {
+        private record Way(Planned planned, double chance, double cost) {
+            int weighings() {
+                return planned.plan().weighings();
+            }
+
+            boolean beats(Way other) {
+                boolean noWorse =
+                        planned.score().total() <= other.planned.score().total()
+                                && weighings() <= other.weighings()
+                                && !(cost > other.cost)
+                                && chance >= other.chance - 0.005;
+                return noWorse
+                        && (planned.score().total() < other.planned.score().total()
+                                || weighings() < other.weighings()
+                                || cost < other.cost);
+            }
+        }
+
+        private final List<Planned> planned;
+
+        OtherWays(List<Planned> planned) {
+            this.planned = planned;
+        }
+
+        List<Answer.Alternative> others(int most) {
+            if (most == 0) return List.of();
+            List<Way> ways = new ArrayList<>();
+            double[] nm = brief.wavelengthsNm();
+            for (Planned p : planned) {
+                Draws draws = Draws.of(p.recipe(), nm, brief.balance().capacityG(), DRAWS_OF_ALTERNATIVES, SEED);
+                ways.add(new Way(p, chance(draws, nm), cost(p.recipe())));
+            }
+            Way best = ways.get(0);
+            List<Answer.Alternative> others = new ArrayList<>();
+            for (Way way : ways.subList(1, ways.size())) {
+                if (others.size() == most) break;
+                if (ways.stream().anyMatch(other -> other != way && other.beats(way))) continue;
+                others.add(new Answer.Alternative(
+                        why(way, best),
+                        way.planned.recipe(),
+                        way.planned.score(),
+                        way.planned.worstMiss(),
+                        way.chance,
+                        way.weighings(),
+                        way.cost));
+            }
+            return others;
+        }
+
+        private String why(Way way, Way best) {
+            if (way.chance > best.chance + 0.01) return "likelier to land";
+            if (way.weighings() < best.weighings()) return "fewer weighings";
+            if (way.cost < 0.95 * best.cost) return "costs less";
+            Set<Ingredient> news =
+                    new HashSet<>(way.planned.option().concentrationGPerMl().keySet());
+            news.removeAll(best.planned.option().concentrationGPerMl().keySet());
+            return news.isEmpty()
+                    ? "another base"
+                    : "with "
+                            + news.stream()
+                                    .map(Ingredient::id)
+                                    .sorted()
+                                    .findFirst()
+                                    .orElseThrow();
+        }
+    }
+
+    /** Price of what is weighed in, stocks' leftovers included; NaN when an ingredient has no price. */
+    private static double cost(Recipe recipe) {
+        double cost = 0;
+        for (var entry : recipe.massesG().entrySet())
+            cost += entry.getKey().pricePerG().orElse(Double.NaN) * entry.getValue();
+        return cost;
+    }
+}

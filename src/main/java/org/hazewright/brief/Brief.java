@@ -1,0 +1,89 @@
+package org.hazewright.brief;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import org.hazewright.optics.Refusal;
+
+/**
+ * What is wanted: targets, tolerances, base, batch and balance.
+ *
+ * @param name of the file, without its ending; results are called after it
+ * @param bases one or more candidate bases by id
+ * @param batchMl wanted volume before the extra share {@code overage}
+ * @param tissue the composition that the targets were made from, when they were
+ */
+public record Brief(
+        String name,
+        String title,
+        List<String> bases,
+        double batchMl,
+        double overage,
+        double temperatureC,
+        List<Target> targets,
+        List<Mould> moulds,
+        SearchLimits limits,
+        Balance balance,
+        Optional<Tissue> tissue,
+        Optional<String> sha256) {
+
+    public Brief {
+        bases = List.copyOf(bases);
+        targets = List.copyOf(targets);
+        moulds = List.copyOf(moulds);
+        if (bases.isEmpty())
+            throw new Refusal("The brief names no base; give base = \"water\" or another base of the shelf.");
+        if (targets.isEmpty())
+            throw new Refusal(
+                    "The brief has no targets; give at least one [[target]] with wavelength_nm and mua_per_cm or"
+                            + " musp_per_cm, or a [tissue].");
+        Refusal.positive("batch_ml", batchMl);
+        Refusal.within("overage", overage, 0, 2);
+        Refusal.within("temperature_c", temperatureC, 0, 100);
+    }
+
+    /** Volume to make, mL: the batch and the extra share. */
+    public double volumeMl() {
+        return batchMl * (1 + overage);
+    }
+
+    /** The wanted numbers one by one: by target, µa before µs'. */
+    public List<Point> points() {
+        List<Point> points = new ArrayList<>();
+        for (Target t : targets) {
+            t.muaPerCm()
+                    .ifPresent(v -> points.add(
+                            new Point(Point.Quantity.MUA, t.wavelengthNm(), v, t.muaTolerancePerCm(), t.weight())));
+            t.muspPerCm()
+                    .ifPresent(v -> points.add(
+                            new Point(Point.Quantity.MUSP, t.wavelengthNm(), v, t.muspTolerancePerCm(), t.weight())));
+        }
+        return points;
+    }
+
+    /** Wavelengths wanted, in nm, ascending, each once. */
+    public double[] wavelengthsNm() {
+        return targets.stream()
+                .mapToDouble(Target::wavelengthNm)
+                .sorted()
+                .distinct()
+                .toArray();
+    }
+
+    /** The same brief with other targets. */
+    public Brief withTargets(List<Target> others) {
+        return new Brief(
+                name,
+                title,
+                bases,
+                batchMl,
+                overage,
+                temperatureC,
+                others,
+                moulds,
+                limits,
+                balance,
+                tissue,
+                Optional.empty());
+    }
+}

@@ -1,0 +1,165 @@
+package org.hazewright.cli;
+
+import java.io.PrintWriter;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import org.hazewright.desk.Opening;
+import org.hazewright.files.WriteFailure;
+import org.hazewright.optics.Refusal;
+import org.hazewright.shelf.Nearest;
+import picocli.CommandLine;
+import picocli.CommandLine.Command;
+import picocli.CommandLine.Model.CommandSpec;
+import picocli.CommandLine.Option;
+import picocli.CommandLine.Parameters;
+import picocli.CommandLine.Spec;
+
+/** The program: without a command it opens the window, with one it does that and ends with a status. */
+@Command(
+        name = "hazewright",
+        description = "Recipes for tissue phantoms: from wanted µa and µs' to grams on a balance.",
+        mixinStandardHelpOptions = true,
+        versionProvider = Hazewright.Version.class,
+        synopsisSubcommandLabel = "COMMAND",
+        subcommands = {
+            DesignCommand.class,
+            SeriesCommand.class,
+            PredictCommand.class,
+            IngredientsCommand.class,
+            BatchCommand.class,
+            CorrectCommand.class,
+            ParticlesCommand.class,
+        },
+        footer = {
+            "",
+            "Exit status: 0 done; 2 input refused; 3 done, but no recipe from this shelf meets every",
+            "tolerance (the closest is still written); 4 output could not be written.",
+        })
+public final class Hazewright implements Runnable {
+    /** Exit statuses; 1 is a fault of the program itself. */
+    static final int DONE = 0;
+
+    static final int FAULT = 1;
+    static final int REFUSED = 2;
+    static final int MISSES = 3;
+    static final int UNWRITABLE = 4;
+
+    final Interruption interruption;
+
+    Hazewright(Interruption interruption) {
+        this.interruption = interruption;
+    }
+
+    @Spec
+    private CommandSpec spec;
+
+    @Option(
+            names = "--ingredients",
+            paramLabel = "DIR",
+            description = "Shelf for the window (default: the folder ingredients here, else the shelf that comes with the program).")
+    private Path ingredients;
+
+    @Parameters(
+            arity = "0..1",
+            paramLabel = "FILE",
+            description = "A brief, recipe or batch (.toml) to open in the window.")
+    private Path file;
+
+    /** Without a command: opens the window. */
+    @Override
+    public void run() {
+        if (file != null && !file.toString().endsWith(".toml"))
+            throw new CommandLine.ParameterException(
+                    spec.commandLine(), "There is no command \"" + file + "\"." + perhaps(file.toString()));
+        if (file != null && !Files.isRegularFile(file))
+            throw new Refusal("There is no file " + file + "; name a brief, a recipe or a batch.");
+        Shared shelf = new Shared();
+        shelf.ingredients = ingredients;
+        Opening.open(Optional.ofNullable(shelf.shelfFolder()), Optional.ofNullable(file));
+    }
+
+    private String perhaps(String word) {
+        return Nearest.to(word, spec.subcommands().keySet())
+                .map(n -> " Perhaps \"" + n + "\" is meant.")
+                .orElse("");
+    }
+
+    public static void main(String[] args) {
+        PrintWriter out = new PrintWriter(System.out, false, StandardCharsets.UTF_8);
+        PrintWriter err = new PrintWriter(System.err, true, StandardCharsets.UTF_8);
+        Interruption interruption = Interruption.atTerminal();
+        int status = run(out, err, interruption, args);
+        out.flush();
+        err.flush();
+        interruption.finished(status);
+        System.exit(out.checkError() && status == DONE ? UNWRITABLE : status);
+    }
+
+    /** Runs one command line against the given writers and gives its exit status. */
+    static int run(PrintWriter out, PrintWriter err, String... args) {
+        return run(out, err, new Interruption(), args);
+    }
+
+    /** The same; long work ends early once {@code interruption} is asked for. */
+    static int run(PrintWriter out, PrintWriter err, Interruption interruption, String... args) {
+        CommandLine line = new CommandLine(new Hazewright(interruption))
+                .setOut(out)
+                .setErr(err)
+                .setColorScheme(CommandLine.Help.defaultColorScheme(CommandLine.Help.Ansi.OFF))
+                .setUsageHelpWidth(100)
+                .setCaseInsensitiveEnumValuesAllowed(true)
+                .setParameterExceptionHandler((problem, given) -> {
+                    err.println("hazewright: " + plain(problem));
+                    return REFUSED;
+                })
+                .setExecutionExceptionHandler((problem, command, parsed) -> status(problem, err));
+        int status = line.execute(args);
+        out.flush();
+        err.flush();
+        return status;
+    }
+
+    /** Says what went wrong, in words for a person, and gives its exit status. */
+    static int status(Exception problem, PrintWriter err) {
+        if (problem instanceof WriteFailure) {
+            err.println("hazewright: " + problem.getMessage());
+            return UNWRITABLE;
+        }
+        if (problem instanceof Refusal) {
+            err.println("hazewright: " + problem.getMessage());
+            return REFUSED;
+        }
+        err.println(
+                "hazewright: this is a fault of the program, not of your files; nothing was overwritten. Please report it with"
+                        + " the lines below.");
+        problem.printStackTrace(err);
+        return FAULT;
+    }
+
+    /** The worse of two statuses: a fault before what could not be written, was refused, or misses. */
+    static int worse(int one, int other) {
+        List<Integer> order = List.of(DONE, MISSES, REFUSED, UNWRITABLE, FAULT);
+        return order.indexOf(one) >= order.indexOf(other) ? one : other;
+    }
+
+    /** Picocli's message without its bracketed details, ended with where to look. */
+    private static String plain(CommandLine.ParameterException problem) {
+        String text = problem.getMessage().strip();
+        String command = problem.getCommandLine().getCommandSpec().qualifiedName();
+        return text + (text.endsWith(".") ? "" : ".") + " See: " + command + " --help";
+    }
+
+    /** The version in the jar's manifest. */
+    static final class Version implements CommandLine.IVersionProvider {
+        @Override
+        public String[] getVersion() {
+            String version = Hazewright.class.getPackage().getImplementationVersion();
+            return new String[] {"hazewright " + (version == null ? "(from source)" : version.toLowerCase(Locale.ROOT))
+            };
+        }
+    }
+}

@@ -1,0 +1,161 @@
+package org.hazewright.files;
+
+import java.io.IOException;
+import java.nio.ByteBuffer;
+import java.nio.channels.FileChannel;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.AccessDeniedException;
+import java.nio.file.AtomicMoveNotSupportedException;
+import java.nio.file.FileAlreadyExistsException;
+import java.nio.file.FileSystemException;
+import java.nio.file.Files;
+import java.nio.file.LinkOption;
+import java.nio.file.NoSuchFileException;
+import java.nio.file.NotDirectoryException;
+import java.nio.file.Path;
+import java.nio.file.ReadOnlyFileSystemException;
+import java.nio.file.StandardCopyOption;
+import java.nio.file.StandardOpenOption;
+import java.nio.file.attribute.PosixFileAttributeView;
+import java.util.Locale;
+import java.util.concurrent.ThreadLocalRandom;
+
+/**
+ * Writes a file so that at any moment either the old one or the whole new one is there: a temporary file beside the target,
+ * synced, then moved over it.
+ *
+ * <p>A folder that is missing is made. A link is followed and kept. A target that is a folder, a device or write-protected is
+ * left alone, as is everything else when a {@link WriteFailure} is thrown.
+ */
+public final class SafeFile {
+    private SafeFile() {}
+
+    /** What happens to a file that is already there. */
+    public enum Overwrite {
+        /** It is replaced. */
+        REPLACE,
+        /** It is replaced, and the previous version stays beside it, with {@code .previous} after its name. */
+        KEEP_PREVIOUS,
+        /** It stays, and the write fails. */
+        NEVER
+    }
+
+    public static void write(Path target, String text, Overwrite policy) {
+        write(target, text.getBytes(StandardCharsets.UTF_8), policy);
+    }
+
+    public static void write(Path target, byte[] bytes, Overwrite policy) {
+        Path temporary = null;
+        try {
+            Path end = checked(target, policy);
+            Path folder = end.toAbsolutePath().getParent();
+            Files.createDirectories(folder);
+            temporary = folder.resolve("." + end.getFileName() + "."
+                    + Long.toString(ThreadLocalRandom.current().nextLong(1L << 40), 36) + ".part");
+            writeSynced(temporary, bytes);
+            copyPermissions(end, temporary);
+            if (policy == Overwrite.KEEP_PREVIOUS && Files.exists(end)) keepPrevious(end);
+            move(temporary, end, policy);
+            temporary = null;
+            syncFolder(folder);
+        } catch (IOException | ReadOnlyFileSystemException | SecurityException e) {
+            throw new WriteFailure(plain(target, e), e);
+        } finally {
+            deleteQuietly(temporary);
+        }
+    }
+
+    private static Path checked(Path target, Overwrite policy) throws IOException {
+        if (target.getFileName() == null || Files.isDirectory(target))
+            throw new WriteFailure(target + " is a folder, so no file can be written there; name a file in it.");
+        if (!Files.exists(target)) {
+            if (Files.isSymbolicLink(target))
+                throw new WriteFailure(target + " is a link that leads nowhere; delete it or name another file.");
+            return target;
+        }
+        if (!Files.isRegularFile(target))
+            throw new WriteFailure(target + " is a device or a pipe and not an ordinary file; name another file.");
+        if (policy == Overwrite.NEVER)
+            throw new WriteFailure(
+                    target + " is already there and was not touched; move it away or choose another name.");
+        if (!Files.isWritable(target))
+            throw new WriteFailure(target + " is write-protected and was not touched; choose another name.");
+        return target.toRealPath();
+    }
+
+    private static void writeSynced(Path temporary, byte[] bytes) throws IOException {
+        try (FileChannel out = FileChannel.open(temporary, StandardOpenOption.CREATE_NEW, StandardOpenOption.WRITE)) {
+            ByteBuffer rest = ByteBuffer.wrap(bytes);
+            while (rest.hasRemaining()) out.write(rest);
+            out.force(true);
+        }
+    }
+
+    private static void copyPermissions(Path from, Path to) throws IOException {
+        if (!Files.exists(from)) return;
+        PosixFileAttributeView view = Files.getFileAttributeView(to, PosixFileAttributeView.class);
+        if (view != null) view.setPermissions(Files.getPosixFilePermissions(from));
+    }
+
+    private static void keepPrevious(Path end) throws IOException {
+        Path previous = end.resolveSibling(end.getFileName() + ".previous");
+        Path copy = end.resolveSibling("." + end.getFileName() + ".previous.part");
+        Files.copy(end, copy, StandardCopyOption.REPLACE_EXISTING, StandardCopyOption.COPY_ATTRIBUTES);
+        move(copy, previous, Overwrite.REPLACE);
+    }
+
+    private static void move(Path from, Path to, Overwrite policy) throws IOException {
+        if (policy == Overwrite.NEVER) {
+            Files.move(from, to); // refuses an existing target
+            return;
+        }
+        try {
+            Files.move(from, to, StandardCopyOption.ATOMIC_MOVE, StandardCopyOption.REPLACE_EXISTING);
+        } catch (AtomicMoveNotSupportedException e) {
+            Files.move(from, to, StandardCopyOption.REPLACE_EXISTING);
+        }
+    }
+
+    /** Makes the move itself last; not every system lets a folder be synced, and then the move is only as safe as its own. */
+    private static void syncFolder(Path folder) {
+        try (FileChannel channel = FileChannel.open(folder, StandardOpenOption.READ)) {
+            channel.force(true);
+        } catch (IOException e) {
+            return;
+        }
+    }
+
+    private static void deleteQuietly(Path temporary) {
+        if (temporary == null) return;
+        try {
+            Files.deleteIfExists(temporary);
+        } catch (IOException e) {
+            return; // the failure that led here is the one to report
+        }
+    }
+
+    static String plain(Path target, Exception e) {
+        String start = "The file " + target + " could not be written: ";
+        String reason =
+                e instanceof FileSystemException f && f.getReason() != null ? f.getReason() : "" + e.getMessage();
+        String lower = reason.toLowerCase(Locale.ROOT);
+        if (lower.contains("no space") || lower.contains("not enough space") || lower.contains("quota"))
+            return start + "the disk is full. Make room, or write to another place.";
+        if (lower.contains("used by another process"))
+            return start + "another program has it open. Close it there and try again.";
+        if (e instanceof ReadOnlyFileSystemException || lower.contains("read-only"))
+            return start + "the disk is read-only. Write to another place.";
+        if (e instanceof AccessDeniedException || e instanceof SecurityException)
+            return start + "its folder does not let you write. Choose a folder of your own.";
+        Path folder = target.toAbsolutePath().getParent();
+        if (e instanceof FileAlreadyExistsException
+                || e instanceof NotDirectoryException
+                || lower.contains("not a directory"))
+            return start
+                    + "a part of its path, or the file itself, is already there as something else. Choose another name.";
+        if (e instanceof NoSuchFileException && folder != null && !Files.isDirectory(folder, LinkOption.NOFOLLOW_LINKS))
+            return start + "its folder is not there and could not be made. Choose another folder.";
+        if (lower.contains("name too long")) return start + "its name is too long. Choose a shorter one.";
+        return start + reason + ".";
+    }
+}

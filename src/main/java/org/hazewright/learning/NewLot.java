@@ -1,0 +1,95 @@
+package org.hazewright.learning;
+
+import java.util.Optional;
+import org.hazewright.optics.Refusal;
+import org.hazewright.shelf.Absorption;
+import org.hazewright.shelf.Ingredient;
+import org.hazewright.shelf.Lot;
+import org.hazewright.shelf.Scattering;
+import org.hazewright.shelf.Source;
+import org.hazewright.shelf.Uncertainty;
+
+/**
+ * An ingredient as one of its lots, with the figures that a measurement gave it: all else stays as its parent's file says.
+ *
+ * @param id of the new lot's file, {@code lot} its table, {@code source} who measured it and when
+ */
+public record NewLot(String id, Lot lot, Source source) {
+
+    /** Of an absorber: its extinction as fitted, {@code g} of the scattered share. */
+    public Ingredient absorber(Ingredient parent, DilutionFit fit, double g) {
+        Uncertainty fitted = fit.uncertainty();
+        // Scattering of its own model was not measured here and keeps its uncertainty.
+        boolean onlyExtinction =
+                fit.series().albedo() > 0 && parent.scattering().isEmpty();
+        Uncertainty u = onlyExtinction
+                ? fitted
+                : new Uncertainty(fitted.absorption(), parent.uncertainty().scattering());
+        return made(parent, u, Optional.of(fit.absorption(id, g)), parent.scattering());
+    }
+
+    /** Of a scatterer: its magnitude multiplied by measured over modelled; the shape stays the model's. */
+    public Ingredient scatterer(Ingredient parent, DilutionFit.Magnitude magnitude) {
+        Scattering model = parent.scattering()
+                .orElseThrow(
+                        () -> new Refusal(parent.id() + " has no scattering model whose magnitude could be measured."));
+        Uncertainty u = new Uncertainty(parent.uncertainty().absorption(), magnitude.u() / magnitude.ratio());
+        return made(parent, u, parent.absorption(), Optional.of(model.scaled(magnitude.ratio())));
+    }
+
+    /**
+     * Of any ingredient after an update: its figures multiplied by the factors' means, its uncertainties theirs. A table of extinction E
+     * with albedo a becomes E ((1 − a) θa + a θs) with albedo a θs over that, so that both shares are multiplied by their own factor.
+     */
+    public Ingredient learned(Ingredient parent, Factors after) {
+        Uncertainty u = after.uncertainty(parent);
+        double ofA = after.mean(Factor.of(parent, Quantity.ABSORPTION));
+        double ofS = after.mean(Factor.of(parent, Quantity.SCATTERING));
+        refuseOwnAbsorption(parent, ofA);
+        Optional<Absorption> absorption = parent.absorption().map(a -> {
+            double whole = (1 - a.albedo()) * ofA + a.albedo() * ofS;
+            return new Absorption(a.table(), a.basis(), a.perTableUnit() * whole, a.albedo() * ofS / whole, a.g());
+        });
+        return made(parent, u, absorption, parent.scattering().map(s -> s.scaled(ofS)));
+    }
+
+    /** Particles that absorb by their own index have no figure that a lot could multiply. */
+    private static void refuseOwnAbsorption(Ingredient parent, double factor) {
+        if (!(parent.scattering().orElse(null) instanceof Scattering.MieParticles mie) || Math.abs(factor - 1) < 1e-12)
+            return;
+        var index = mie.particle().index();
+        for (int i = 0; i <= 8; i++) {
+            double nm = index.fromNm() + (index.toNm() - index.fromNm()) * i / 8;
+            if (index.at(nm, 20).k() > 0)
+                throw new Refusal("The data multiply the absorption of " + parent.id() + " by " + Figures.number(factor)
+                        + ", but its particles absorb by their own refractive index, which a lot's file cannot multiply. Give "
+                        + parent.id() + " an [absorption] table in place of an absorbing particle.");
+        }
+    }
+
+    private Ingredient made(
+            Ingredient p, Uncertainty u, Optional<Absorption> absorption, Optional<Scattering> scattering) {
+        return new Ingredient(
+                id,
+                p.name(),
+                p.part(),
+                p.families(),
+                p.form(),
+                p.densityGPerMl(),
+                p.maxGPerMl(),
+                p.pricePerG(),
+                p.settles(),
+                p.leastShare(),
+                p.handling(),
+                p.conflicts(),
+                p.cautions(),
+                source,
+                u,
+                absorption,
+                scattering,
+                p.index(),
+                p.blend(),
+                p.making(),
+                Optional.of(lot));
+    }
+}
