@@ -259,7 +259,7 @@ public record TitrationPlan(
                     contents, balance, r -> judge.score(r).total(), StockPlan.Wish.NO_NEW_STOCK);
         }
 
-        /** Judges the titrant's grams: what it is planned to do at the brief's wavelengths, to one per cent. */
+        /** Judges the titrant's grams: what it is planned to do, to the share that the last phantom allows. */
         private Frozen judge(Contents titrant) {
             Assembly assembly = new Assembly(titrant, Balance.USUAL);
             List<Dose> neat = titrant.concentrationGPerMl().keySet().stream()
@@ -269,11 +269,14 @@ public record TitrationPlan(
             titrant.concentrationGPerMl().keySet().forEach(i -> masses.put(i, titrant.massG(i)));
             Mixture mixture = new Mixture(masses, titrant.temperatureC());
             List<Point> points = new ArrayList<>();
-            for (double nm : briefs.get(0).wavelengthsNm()) {
-                var at = mixture.at(nm);
-                points.add(new Point(Point.Quantity.MUA, nm, at.muaPerCm(), 0.01 * at.muaPerCm(), 1));
-                if (titration.keepMusp() && at.muspPerCm() > 0)
-                    points.add(new Point(Point.Quantity.MUSP, nm, at.muspPerCm(), 0.01 * at.muspPerCm(), 1));
+            for (Point p : briefs.get(briefs.size() - 1).points()) {
+                boolean absorption = p.quantity() == Point.Quantity.MUA;
+                if (!absorption && !titration.keepMusp() || !(p.wantedPerCm() > 0)) continue;
+                var at = mixture.at(p.wavelengthNm());
+                double value = absorption ? at.muaPerCm() : at.muspPerCm();
+                double share = p.tolerancePerCm() / p.wantedPerCm();
+                if (value > 0)
+                    points.add(new Point(p.quantity(), p.wavelengthNm(), value, share * value, p.weight()));
             }
             return new Frozen(points, mixture, base, balance);
         }

@@ -5,7 +5,6 @@ import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
-import java.util.Locale;
 import org.hazewright.bench.Answer;
 import org.hazewright.bench.Leftover;
 import org.hazewright.bench.SeriesPlan;
@@ -17,6 +16,7 @@ import org.hazewright.brief.Brief;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.mixture.Stock;
 import org.hazewright.optics.Figures;
+import org.hazewright.shelf.Form;
 
 /** A set of phantoms as text: stocks, one weighing table, where each phantom lands, what to buy. */
 final class SeriesText {
@@ -173,7 +173,7 @@ final class SeriesText {
                 .forEach((i, g) -> table.row(
                         i.id(),
                         grams(g, balance),
-                        String.format(Locale.ROOT, "%s mL", Figures.significant(g / i.densityGPerMl(), 4)),
+                        i.form() == Form.LIQUID ? Figures.significant(g / i.densityGPerMl(), 4) + " mL" : "",
                         i.name()));
         table.print(out);
     }
