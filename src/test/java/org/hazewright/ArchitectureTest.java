@@ -52,7 +52,7 @@ class ArchitectureTest {
             .whereLayer("design")
             .mayOnlyAccessLayers("optics", "shelf", "mixture", "brief")
             .whereLayer("bench")
-            .mayOnlyAccessLayers("optics", "shelf", "mixture", "brief", "design")
+            .mayOnlyAccessLayers("optics", "shelf", "mixture", "brief", "design", "learning")
             .whereLayer("learning")
             .mayOnlyAccessLayers("optics", "shelf", "mixture")
             .whereLayer("reading")

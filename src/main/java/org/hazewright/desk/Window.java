@@ -17,9 +17,11 @@ import javafx.scene.layout.Priority;
 import javafx.scene.layout.StackPane;
 import javafx.scene.layout.VBox;
 import javafx.stage.Stage;
+import org.hazewright.desk.balance.BalanceView;
 import org.hazewright.desk.brief.BriefPlace;
 import org.hazewright.desk.look.Look;
 import org.hazewright.desk.look.Palette;
+import org.hazewright.desk.model.AtBalance;
 import org.hazewright.desk.model.Desk;
 import org.hazewright.desk.model.Draft;
 import org.hazewright.desk.model.Notice;
@@ -47,6 +49,7 @@ public final class Window {
     private final BriefPlace brief;
     private final RecipePlace recipe;
     private final Deeds deeds = new Doing();
+    private BalanceView balance;
 
     /** A window on a stage of its own; call {@link #show}. */
     public Window(Stage stage, Desk desk, Look look, Optional<Chooser> chooser) {
@@ -66,6 +69,7 @@ public final class Window {
         desk.shelfProperty().addListener((p, before, now) -> lay());
         desk.solving().faultProperty().addListener((p, before, now) -> now.ifPresent(f -> desk.notices()
                 .tell(Notice.wrong("fault", "This is a fault of the program, not of your files; nothing was overwritten. " + f))));
+        desk.weighingProperty().addListener((p, before, now) -> turnTo(now));
         Scene scene = new Scene(whole, 1440, 900);
         look.dress(scene);
         keys(scene);
@@ -149,6 +153,23 @@ public final class Window {
         return middle;
     }
 
+    /** Turns to the balance, or back to the places. */
+    private void turnTo(Optional<AtBalance> weighing) {
+        if (weighing.isEmpty()) {
+            whole.getChildren().setAll(places);
+            return;
+        }
+        BalanceView view = new BalanceView(weighing.get(), desk::leaveBalance, desk::finishWeighing);
+        whole.getChildren().setAll(view);
+        view.focusField();
+        balance = view;
+    }
+
+    /** The view at the balance that was opened last; null before the first. */
+    public BalanceView balance() {
+        return balance;
+    }
+
     private void keys(Scene scene) {
         on(scene, "Shortcut+O", deeds::open);
         on(scene, "Shortcut+N", deeds::begin);
@@ -160,6 +181,7 @@ public final class Window {
         on(scene, "Shortcut+Equals", () -> look.larger(true));
         on(scene, "Shortcut+Minus", () -> look.larger(false));
         on(scene, "F1", deeds::keys);
+        on(scene, "Shortcut+Enter", deeds::balance);
         scene.addEventFilter(javafx.scene.input.KeyEvent.KEY_PRESSED, e -> {
             boolean undo = new KeyCodeCombination(KeyCode.Z, KeyCombination.SHORTCUT_DOWN).match(e);
             boolean redo = new KeyCodeCombination(KeyCode.Z, KeyCombination.SHORTCUT_DOWN, KeyCombination.SHIFT_DOWN).match(e)
@@ -306,7 +328,9 @@ public final class Window {
         }
 
         @Override
-        public void balance() {}
+        public void balance() {
+            desk.standAtBalance();
+        }
 
         @Override
         public void shelf() {}

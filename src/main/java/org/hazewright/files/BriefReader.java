@@ -172,7 +172,7 @@ public final class BriefReader {
                 t.within("least_base_share", 0, 1, 0));
     }
 
-    private static Balance balance(TomlPage t) {
+    static Balance balance(TomlPage t) {
         t.refuseUnknown("readability_g", "standard_uncertainty_g", "smallest_load_g", "capacity_g");
         Balance usual = Balance.USUAL;
         double readability = t.positive("readability_g", usual.readabilityG());

@@ -19,8 +19,8 @@ import org.hazewright.shelf.Shelf;
  * A recipe or batch file to a {@link Recipe}, its ingredients found on a shelf.
  *
  * <p>An item's or stock's {@code lot} whose number the shelf has a file of brings that lot's figures; another number is only
- * carried along. A file called {@code *.batch.toml} may hold more, and where it has grams as weighed ({@code weighed_g}, {@code
- * ingredient_weighed_g}, {@code diluent_weighed_g}) those are the recipe's grams.
+ * carried along. A file called {@code *.batch.toml} is a {@link BatchReader batch}, and then the recipe is what was made: grams as weighed, what
+ * heating took, corrections.
  */
 public final class RecipeReader {
     private static final double USUAL_UNCERTAINTY_G = 0.001;
@@ -36,8 +36,18 @@ public final class RecipeReader {
     }
 
     public static Recipe read(Path file, Shelf shelf) {
-        boolean batch = file.toString().toLowerCase(Locale.ROOT).endsWith(".batch.toml");
-        return new RecipeReader(TomlPage.read(file), shelf, batch).recipe();
+        if (isBatch(file)) return BatchReader.asMade(file, shelf);
+        return new RecipeReader(TomlPage.read(file), shelf, false).recipe();
+    }
+
+    /** Whether a file is a batch by its name. */
+    public static boolean isBatch(Path file) {
+        return file.toString().toLowerCase(Locale.ROOT).endsWith(".batch.toml");
+    }
+
+    /** The grams as planned of a batch's page. */
+    static Recipe planned(TomlPage page, Shelf shelf) {
+        return new RecipeReader(page, shelf, true).recipe();
     }
 
     private Recipe recipe() {
@@ -53,7 +63,7 @@ public final class RecipeReader {
                         "balance_standard_uncertainty_g",
                         "stock",
                         "item"),
-                List.of("id", "who", "when", "note", "recipe", "measured"));
+                BatchReader.KEYS);
         String title = page.text("title", page.has("base") ? page.text("base") : "");
         Ingredient base = ingredient(page, "base");
         if (base.part() != Part.BASE)
@@ -123,7 +133,7 @@ public final class RecipeReader {
     }
 
     private Item item(TomlPage table, Map<String, Stock> stocks) {
-        known(table, List.of("ingredient", "stock", "lot", "mass_g"), List.of("weighed_g", "when", "note"));
+        known(table, List.of("ingredient", "stock", "lot", "mass_g"), List.of("weighed_g", "correction", "note"));
         Optional<Stock> from = source(table, stocks);
         double grams = grams(table, "mass_g", "weighed_g");
         Optional<String> lot = table.maybeText("lot");
@@ -157,10 +167,7 @@ public final class RecipeReader {
     }
 
     private double grams(TomlPage table, String planned, String weighed) {
-        if (batch && table.has(weighed)) {
-            if (table.has(planned)) table.notNegative(planned);
-            return table.notNegative(weighed);
-        }
+        if (batch && table.has(weighed) && !table.has(planned)) return table.notNegative(weighed);
         return table.notNegative(planned);
     }
 

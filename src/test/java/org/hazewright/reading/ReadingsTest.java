@@ -7,6 +7,7 @@ import static org.junit.jupiter.api.Assertions.assertNull;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import org.hazewright.optics.Refusal;
@@ -145,6 +146,10 @@ class ReadingsTest {
         assertEquals("deg", only(all, Quantity.PHASE_DEG).unit());
         assertEquals(0.1, only(all, Quantity.APPARENT_MUA_PER_CM).value(), 1e-6);
         assertEquals(10, only(all, Quantity.APPARENT_MUSP_PER_CM).value(), 1e-5);
+        // an analysis that finds the true values passes their uncertainties on unchanged
+        assertEquals(SPREAD.uMuaPerCm(), only(all, Quantity.APPARENT_MUA_PER_CM).u(), 1e-5);
+        assertEquals(
+                SPREAD.uMuspPerCm(), only(all, Quantity.APPARENT_MUSP_PER_CM).u(), 1e-3);
     }
 
     /** Phase and modulation from counted packets agree with diffusion's within their own errors and the stated range. */
@@ -225,6 +230,21 @@ class ReadingsTest {
         Reading r = only(read(setUp, TYPICAL.withMua(0)), Quantity.TIME_VARIANCE_PS2);
         assertNull(r.value());
         assertTrue(r.note().contains("not finite"));
+    }
+
+    @Test
+    void progressCountsAllWavelengths() {
+        List<Double> told = new ArrayList<>();
+        SetUp setUp = of(SetUp.Kind.SLAB)
+                .wavelengthsNm(List.of(690.0, 760.0, 830.0))
+                .thicknessMm(1.0)
+                .model(SetUp.ModelChoice.PACKETS)
+                .packets(4000)
+                .done();
+        Readings.of(setUp, Foresight.of(nm -> TYPICAL).onThreads(1).watched(told::add, () -> false));
+        assertEquals(
+                List.of(1 / 6.0, 2 / 6.0, 3 / 6.0, 4 / 6.0, 5 / 6.0, 1.0),
+                told.stream().map(x -> Math.rint(x * 6) / 6).toList());
     }
 
     @Test

@@ -5,6 +5,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.function.Supplier;
 import javafx.beans.property.ReadOnlyObjectProperty;
 import javafx.beans.property.ReadOnlyObjectWrapper;
 import org.hazewright.brief.Balance;
@@ -12,8 +13,11 @@ import org.hazewright.brief.Brief;
 import org.hazewright.brief.SearchLimits;
 import org.hazewright.brief.Tissue;
 import org.hazewright.files.BriefReader;
+import org.hazewright.files.RecipeWriter;
+import org.hazewright.files.SafeFile;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Part;
+import org.hazewright.shelf.Shelf;
 
 /**
  * All that lies on the desk: the shelf, the brief that is being written, the recipe that follows it, and the papers they are kept on.
@@ -33,12 +37,15 @@ public final class Desk {
     private final BriefEditing editing = new BriefEditing(edits);
     private final Solving solving;
     private final Papers papers;
+    private final Work.Lane preparing;
+    private final ReadOnlyObjectWrapper<Optional<AtBalance>> weighing = new ReadOnlyObjectWrapper<>(Optional.empty());
     private Tissue.Spectra spectra;
 
     public Desk(Work work, Optional<Path> shelfFolder, Remembered remembered) {
         this.work = work;
         this.remembered = remembered;
         shelving = work.lane(Work.Haste.INTERRUPT);
+        preparing = work.lane(Work.Haste.FINISH);
         shelf = new ReadOnlyObjectWrapper<>(ShelfState.reading(shelfFolder));
         solving = new Solving(work);
         papers = new Papers(work, edits, remembered, notices, () -> shelf.get().folder());
@@ -57,6 +64,7 @@ public final class Desk {
                     papers.startWith(begun.brief());
                     if (file.isPresent()) open(file.get());
                     else papers.offerUntitled();
+                    offerWeighing();
                 },
                 failure -> notices.tell(Notice.wrong("shelf", Papers.words(failure))));
     }
@@ -117,6 +125,112 @@ public final class Desk {
                 .map(Ingredient::id)
                 .findFirst()
                 .orElse("water");
+    }
+
+    // at the balance
+
+    /** The weighing that is going on; empty at the desk. */
+    public ReadOnlyObjectProperty<Optional<AtBalance>> weighingProperty() {
+        return weighing.getReadOnlyProperty();
+    }
+
+    /** Turns to the balance with the recipe on the desk; a weighing of it that was broken off goes on at its step. */
+    public void standAtBalance() {
+        Shown shown = solving.shownProperty().get();
+        if (shown == null || shown.following() || shelf.get().shelf().isEmpty() || weighing.get().isPresent()) return;
+        WeighingLog log = WeighingLog.of(
+                papers.openProperty().get().file(), edits.now().name(), remembered.folder());
+        Shelf on = shelf.get().shelf().get();
+        preparing.request(
+                (stop, progress) -> {
+                    if (log.exists()) return Started.again(log, on, papers.spectra());
+                    log.begin(shown.outlook().brief(), shown.recipe(), papers.spectra());
+                    log.keep(List.of());
+                    return new Started(
+                            AtBalance.Prepared.of(shown.outlook().brief(), shown.recipe(), on, List.of()), false);
+                },
+                started -> begin(started, log, shown),
+                failure -> notices.tell(Notice.wrong("balance", Papers.words(failure))));
+    }
+
+    private record Started(AtBalance.Prepared prepared, boolean again) {
+        static Started again(WeighingLog log, Shelf on, Supplier<Tissue.Spectra> spectra) {
+            WeighingLog.Kept kept = log.read(on, spectra);
+            return new Started(AtBalance.Prepared.of(kept.brief(), kept.recipe(), on, kept.steps()), true);
+        }
+    }
+
+    private void begin(Started started, WeighingLog log, Shown shown) {
+        boolean other = started.again()
+                && !started.prepared().recipe().massesG().equals(shown.recipe().massesG())
+                && started.prepared().kept().stream().anyMatch(w -> !w.equals(Weighed.NOTHING));
+        if (other)
+            notices.tell(Notice.asked(
+                    "balance",
+                    "A weighing of an earlier recipe of “" + started.prepared().recipe().title() + "” was broken off.",
+                    new Notice.Way("go on with it", () -> turn(started, log)),
+                    new Notice.Way("begin anew with this recipe", () -> {
+                        log.drop();
+                        standAtBalance();
+                    })));
+        else if (started.again() && started.prepared().kept().stream().allMatch(w -> w.equals(Weighed.NOTHING))
+                && !started.prepared().recipe().massesG().equals(shown.recipe().massesG())) {
+            log.drop();
+            standAtBalance();
+        } else turn(started, log);
+    }
+
+    private void turn(Started started, WeighingLog log) {
+        remembered.keep("weighing", log.folder().toString());
+        weighing.set(Optional.of(new AtBalance(started.prepared(), log, work)));
+    }
+
+    /** Goes on with a weighing that a crash broke off. */
+    private void offerWeighing() {
+        String kept = remembered.text("weighing", "");
+        if (kept.isEmpty() || shelf.get().shelf().isEmpty()) return;
+        WeighingLog log = new WeighingLog(Path.of(kept));
+        if (!log.exists()) return;
+        Shelf on = shelf.get().shelf().get();
+        preparing.request(
+                (stop, progress) -> Started.again(log, on, papers.spectra()),
+                started -> {
+                    long done = started.prepared().kept().stream().filter(Weighed::done).count();
+                    if (done == 0) return;
+                    notices.tell(Notice.asked(
+                            "balance",
+                            "“" + started.prepared().recipe().title() + "” was being weighed; " + done + " of "
+                                    + started.prepared().steps().size() + " steps are done.",
+                            new Notice.Way("go on weighing", () -> turn(started, log)),
+                            new Notice.Way("later", () -> {})));
+                },
+                failure -> notices.tell(Notice.wrong("balance", Papers.words(failure))));
+    }
+
+    /** Back to the desk; the weighing is kept. */
+    public void leaveBalance() {
+        weighing.set(Optional.empty());
+    }
+
+    /** Records the batch as it was weighed and goes back to the desk. */
+    public void finishWeighing() {
+        AtBalance done = weighing.get().orElseThrow();
+        Path folder = papers.openProperty().get().file()
+                .map(f -> f.toAbsolutePath().getParent())
+                .orElse(remembered.folder());
+        preparing.request(
+                (stop, progress) -> {
+                    Path file = Recipes.freeName(folder, done.brief().name(), ".batch.toml");
+                    RecipeWriter.write(file, done.made(), SafeFile.Overwrite.NEVER);
+                    done.log().drop();
+                    return file;
+                },
+                file -> {
+                    remembered.keep("weighing", "");
+                    weighing.set(Optional.empty());
+                    notices.tell(Notice.told("balance", "Recorded: " + file + "."));
+                },
+                failure -> notices.tell(Notice.wrong("balance", Papers.words(failure))));
     }
 
     /** The weigh-out as a table for a spreadsheet, tabs between columns; empty when there is no recipe. */

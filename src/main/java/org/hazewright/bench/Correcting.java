@@ -1,0 +1,389 @@
+package org.hazewright.bench;
+
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.Set;
+import org.hazewright.brief.Brief;
+import org.hazewright.brief.Point;
+import org.hazewright.mixture.Item;
+import org.hazewright.mixture.Mixture;
+import org.hazewright.mixture.Recipe;
+import org.hazewright.mixture.Stock;
+import org.hazewright.mixture.Sweep;
+import org.hazewright.optics.Figures;
+import org.hazewright.optics.Refusal;
+import org.hazewright.shelf.Family;
+import org.hazewright.shelf.Form;
+import org.hazewright.shelf.Ingredient;
+import org.hazewright.shelf.Shelf;
+
+/**
+ * Finds the least volume to add for a wanted chance of landing.
+ *
+ * <p>For an added volume the grams are those of {@link Additions}; the chance is that of {@link Learned}, measured values included. Volumes
+ * are tried from a two-thousandth of the vessel's up, each a fourth more than the one before, to all that it holds, and the first that
+ * suffices is narrowed by halving. What the recipe draws from a stock is poured from that stock; what would be less than the balance's smallest load gets a
+ * stock of its own. Host index and crowding are held at those of the vessel, and the last word is said by the full model.
+ */
+public final class Correcting {
+    private static final double LEAST_SHARE = 0.0005;
+    private static final double STRIDE = 1.25;
+    private static final int HALVINGS = 7;
+
+    private final Batch batch;
+    private final Shelf shelf;
+    private final List<Point> points;
+    private final Recipe made;
+    private final Learned learned;
+    private final Sweep sweep;
+    private final double vesselMl;
+    private final Learned.Landing now;
+
+    private Correcting(Batch batch, Shelf shelf) {
+        this.batch = batch;
+        this.shelf = shelf;
+        Brief brief = batch.brief()
+                .orElseThrow(() -> new Refusal("The batch " + batch.id()
+                        + " does not say what is wanted, so nothing can be corrected; open it with its brief, or add [[target]]"
+                        + " tables to its file."));
+        points = brief.points();
+        made = batch.asMade();
+        learned = Learned.of(batch);
+        Mixture mixture = Mixture.of(made);
+        vesselMl = mixture.volumeMl();
+        sweep = Sweep.of(mixture, brief.wavelengthsNm());
+        now = landing(made);
+    }
+
+    /**
+     * @param wantedChance share of makings, 0 to 1, that should land inside every tolerance
+     * @param capacityMl that the vessel holds
+     */
+    public static Correction of(Batch batch, Shelf shelf, double wantedChance, double capacityMl) {
+        Refusal.within("Wanted chance", wantedChance, 0, 1);
+        Refusal.positive("Capacity of the vessel in mL", capacityMl);
+        if (!batch.complete())
+            throw new Refusal("Of the batch " + batch.id() + " " + batch.weighedCount() + " of "
+                    + batch.weighedG().size() + " weighings are filled in; weigh the rest first, it is planned to suit.");
+        Correcting c = new Correcting(batch, shelf);
+        if (capacityMl < c.vesselMl)
+            throw new Refusal("The vessel holds " + Grams.plain(c.vesselMl) + " mL already, and its capacity is said to be "
+                    + Grams.plain(capacityMl) + " mL; correct --capacity-ml.");
+        return c.find(wantedChance, capacityMl);
+    }
+
+    private Learned.Landing landing(Recipe recipe) {
+        return learned.landing(recipe, points, sweep, batch.balance().capacityG());
+    }
+
+    /** Something that can be poured: out of a bottle or a stock, or fresh base. */
+    private record Pourable(Map<Ingredient, Double> perG, Optional<Stock> stock, Optional<Stock> toMake) {}
+
+    private record Try(List<Stock> stocks, List<Item> items, Recipe after, double addedMl, Learned.Landing landing) {}
+
+    private Correction find(double wanted, double capacityMl) {
+        if (now.chance() >= wanted)
+            return correction(
+                    Correction.Outcome.NOTHING_TO_DO,
+                    new Try(List.of(), List.of(), made, 0, now),
+                    wanted,
+                    "It lands inside every tolerance with the chance that is wanted; nothing needs adding.");
+        Search inside = new Search(wanted, capacityMl - vesselMl);
+        inside.run();
+        if (inside.enough != null)
+            return correction(Correction.Outcome.ADD, inside.enough, wanted, reasonToAdd(inside.enough));
+        Search roomy = new Search(wanted, 10 * vesselMl);
+        roomy.run();
+        Try best = inside.best == null ? new Try(List.of(), List.of(), made, 0, now) : inside.best;
+        return correction(Correction.Outcome.START_AGAIN, best, wanted, reasonToStart(best, roomy, capacityMl));
+    }
+
+    private final class Search {
+        private final double wanted;
+        private final double most;
+        private Try enough;
+        private Try best;
+
+        Search(double wanted, double mostMl) {
+            this.wanted = wanted;
+            this.most = mostMl;
+        }
+
+        void run() {
+            double before = 0;
+            for (double ml = LEAST_SHARE * vesselMl; enough == null; ml *= STRIDE) {
+                double added = Math.min(ml, most);
+                if (added <= 0) return;
+                if (!look(added)) {
+                    before = added;
+                    if (added >= most) return;
+                    continue;
+                }
+                double low = before;
+                double high = added;
+                for (int k = 0; k < HALVINGS; k++) {
+                    double middle = (low + high) / 2;
+                    if (look(middle)) high = middle;
+                    else low = middle;
+                }
+            }
+        }
+
+        private boolean look(double addedMl) {
+            Optional<Try> t = attempt(addedMl);
+            if (t.isEmpty() || t.get().addedMl() > most * (1 + 1e-9)) return false;
+            double chance = t.get().landing().chance();
+            boolean nearer = best != null
+                    && chance == best.landing().chance()
+                    && t.get().landing().worstMiss() < best.landing().worstMiss() - 1e-6;
+            if (best == null || chance > best.landing().chance() || nearer) best = t.get();
+            if (chance < wanted) return false;
+            enough = t.get();
+            return true;
+        }
+    }
+
+    private Optional<Try> attempt(double addedMl) {
+        Set<Ingredient> small = new LinkedHashSet<>();
+        for (int round = 0; round < 3; round++) {
+            List<Pourable> pourables = pourables(small);
+            Optional<double[]> grams = additions(pourables).best(addedMl);
+            if (grams.isEmpty()) return Optional.empty();
+            int before = small.size();
+            for (int i = 0; i < pourables.size(); i++) {
+                Pourable p = pourables.get(i);
+                double g = grams.get()[i];
+                boolean neat = p.stock().isEmpty() && p.perG().size() == 1;
+                Ingredient only = p.perG().keySet().iterator().next();
+                if (neat
+                        && !batch.isBasePart(only)
+                        && g >= batch.balance().readabilityG() / 2
+                        && g < batch.balance().smallestLoadG()) small.add(only);
+            }
+            if (small.size() == before) return Optional.of(rounded(pourables, grams.get()));
+        }
+        return Optional.empty();
+    }
+
+    private Additions additions(List<Pourable> pourables) {
+        int n = pourables.size();
+        double[][] kappa = new double[n][points.size()];
+        double[] ml = new double[n];
+        double[] nm = sweep.wavelengthsNm();
+        for (int i = 0; i < n; i++)
+            for (var part : pourables.get(i).perG().entrySet()) {
+                Ingredient what = part.getKey();
+                ml[i] += part.getValue() / what.densityGPerMl();
+                Map<Ingredient, Double> gram = Map.of(what, 1.0);
+                double[] mua = sweep.muaPerCm(gram);
+                double[] musp = sweep.muspPerCm(gram);
+                for (int j = 0; j < points.size(); j++) {
+                    Point p = points.get(j);
+                    int at = java.util.Arrays.binarySearch(nm, p.wavelengthNm());
+                    boolean absorbs = p.quantity() == Point.Quantity.MUA;
+                    double perG = (absorbs ? mua : musp)[at] / what.densityGPerMl();
+                    kappa[i][j] += part.getValue() * perG * learned.factor(what, p.quantity());
+                }
+            }
+        double[] vessel = now.predicted().stream()
+                .mapToDouble(p -> p.perCm() * vesselMl)
+                .toArray();
+        return new Additions(points, vessel, vesselMl, kappa, ml);
+    }
+
+    /** Fresh base, every stock that an item was drawn from, and every other ingredient that went in neat. */
+    private List<Pourable> pourables(Set<Ingredient> small) {
+        List<Pourable> list = new ArrayList<>();
+        Map<Ingredient, Double> base = new LinkedHashMap<>();
+        for (var part : shelf.partsOf(made.base()).entrySet()) base.put(asUsed(part.getKey()), part.getValue());
+        list.add(new Pourable(base, Optional.empty(), Optional.empty()));
+        Set<String> seen = new LinkedHashSet<>();
+        for (Item i : made.items()) {
+            if (i.stock().isPresent()) {
+                String id = i.stock().get();
+                if (seen.add("stock " + id))
+                    list.add(new Pourable(made.contentPerG(id), Optional.of(made.stock(id)), Optional.empty()));
+            } else if (!batch.isBasePart(i.ingredient())
+                    && seen.add(i.ingredient().id())) {
+                Ingredient what = i.ingredient();
+                if (small.contains(what)) list.add(stockOf(what));
+                else list.add(new Pourable(Map.of(what, 1.0), Optional.empty(), Optional.empty()));
+            }
+        }
+        return list;
+    }
+
+    /** The lot of an ingredient that is in the vessel, so that its coefficients are those of the vessel. */
+    private Ingredient asUsed(Ingredient i) {
+        for (Ingredient used : sweepIngredients()) if (used.equals(i) || used.kind().equals(i.id())) return used;
+        throw new Refusal("The vessel holds no " + i.id() + ", a part of the base " + made.base().id()
+                + ", so no fresh base can be added to it.");
+    }
+
+    private Set<Ingredient> sweepIngredients() {
+        return made.massesG().keySet();
+    }
+
+    private Pourable stockOf(Ingredient what) {
+        Ingredient liquid = shelf.partsOf(made.base()).keySet().stream()
+                .filter(i -> i.form() == Form.LIQUID)
+                .findFirst()
+                .map(this::asUsed)
+                .orElseThrow(() -> new Refusal("Too little " + what.id()
+                        + " to weigh would be needed, and the base has no liquid to dilute it in."));
+        Stock s = new Stock(
+                what.id() + "-1-100-correction", what, what.lot().map(l -> l.number()), 1, liquid, 99, Optional.empty());
+        Map<Ingredient, Double> perG = new LinkedHashMap<>();
+        perG.put(what, 0.01);
+        perG.merge(liquid, 0.99, Double::sum);
+        return new Pourable(perG, Optional.of(s), Optional.of(s));
+    }
+
+    private Try rounded(List<Pourable> pourables, double[] grams) {
+        List<Stock> stocks = new ArrayList<>();
+        List<Item> items = new ArrayList<>();
+        for (int i = pourables.size() - 1; i >= 0; i--) { // fresh base last in the list of pourables, first to weigh below
+            Pourable p = pourables.get(i);
+            if (p.stock().isPresent()) {
+                double g = batch.balance().rounded(grams[i]);
+                if (!(g > 0)) continue;
+                p.toMake().ifPresent(stocks::add);
+                items.add(0, Item.ofStock(p.stock().get(), g));
+            } else
+                for (var part : p.perG().entrySet()) {
+                    double g = batch.balance().rounded(grams[i] * part.getValue());
+                    Ingredient what = part.getKey();
+                    if (g > 0)
+                        items.add(
+                                0,
+                                new Item(what, Optional.empty(), what.lot().map(l -> l.number()), g));
+                }
+        }
+        if (items.isEmpty()) return new Try(List.of(), List.of(), made, 0, now);
+        List<Stock> allStocks = new ArrayList<>(made.stocks());
+        allStocks.addAll(stocks);
+        List<Item> allItems = new ArrayList<>(made.items());
+        allItems.addAll(items);
+        Recipe after = new Recipe(
+                made.title(),
+                made.base(),
+                made.temperatureC(),
+                made.weighingUncertaintyG(),
+                made.briefSha256(),
+                allStocks,
+                allItems);
+        double ml = Mixture.of(after).volumeMl() - vesselMl;
+        return new Try(stocks, items, after, ml, landing(after));
+    }
+
+    private Correction correction(Correction.Outcome outcome, Try t, double wanted, String reason) {
+        Learned.Landing then = t.items().isEmpty()
+                ? now
+                : learned.landing(
+                        t.after(),
+                        points,
+                        Sweep.of(Mixture.of(t.after()), sweep.wavelengthsNm()),
+                        batch.balance().capacityG());
+        return new Correction(
+                outcome,
+                t.stocks(),
+                t.items(),
+                t.after(),
+                t.addedMl(),
+                vesselMl + t.addedMl(),
+                now,
+                then,
+                wanted,
+                reason,
+                notes(t),
+                fresh());
+    }
+
+    private List<String> notes(Try t) {
+        List<String> notes = new ArrayList<>();
+        Family family = made.base().family();
+        if (!t.items().isEmpty() && family == Family.GEL)
+            notes.add("A gel that has set must be melted again before anything is stirred in; weigh the vessel before and after.");
+        if (!t.items().isEmpty() && (family == Family.SILICONE || family == Family.RESIN))
+            notes.add("Only before it cures: what has cured cannot be corrected. Keep to the pot life that the data sheet gives.");
+        for (Leftover l : Leftover.of(made)) {
+            double drawn = t.items().stream()
+                    .filter(i -> i.stock().filter(l.stock()::equals).isPresent())
+                    .mapToDouble(Item::massG)
+                    .sum();
+            if (drawn > l.leftG())
+                notes.add("Of the stock " + l.stock() + " " + Grams.plain(drawn) + " g are needed and "
+                        + Grams.plain(Math.max(0, l.leftG())) + " g are left; make it again in the same ratio, or add less.");
+        }
+        return notes;
+    }
+
+    private Correction.Fresh fresh() {
+        Recipe plan = firstPlan();
+        double cost = 0;
+        List<String> unpriced = new ArrayList<>();
+        double grams = 0;
+        for (var e : plan.massesG().entrySet()) {
+            grams += e.getValue();
+            if (e.getKey().pricePerG().isPresent())
+                cost += e.getValue() * e.getKey().pricePerG().getAsDouble();
+            else unpriced.add(e.getKey().id());
+        }
+        double chance = Outlook.of(batch.brief().orElseThrow(), plan, 8_000).chance();
+        return new Correction.Fresh(
+                grams, Weighing.of(plan).size(), unpriced.isEmpty() ? cost : Double.NaN, unpriced, chance);
+    }
+
+    /** The plan without corrections. */
+    private Recipe firstPlan() {
+        List<Item> items = new ArrayList<>();
+        for (int k = 0; k < batch.plan().items().size(); k++)
+            if (batch.corrections().get(k) == 0) items.add(batch.plan().items().get(k));
+        Recipe p = batch.plan();
+        return new Recipe(
+                p.title(), p.base(), p.temperatureC(), p.weighingUncertaintyG(), p.briefSha256(), p.stocks(), items);
+    }
+
+    private String reasonToAdd(Try t) {
+        return "It is off most in " + words(worst(now)) + ". Adding " + Figures.significant(t.addedMl(), 3)
+                + " mL is the least that gives the wanted chance.";
+    }
+
+    private String reasonToStart(Try best, Search roomy, double capacityMl) {
+        String off = "What is off most is " + words(worst(now)) + ". ";
+        if (roomy.enough != null)
+            return off + "To put it right " + Figures.significant(roomy.enough.addedMl(), 3)
+                    + " mL would have to be added, and the vessel has room for "
+                    + Figures.significant(capacityMl - vesselMl, 3) + " mL.";
+        double reached = best.landing().chance();
+        String most = reached > now.chance() ? "At best adding reaches " + percent(reached) + ", " : "Adding does not help: ";
+        double sure = best.landing().predicted().stream()
+                .mapToDouble(p -> p.uPerCm() / p.point().tolerancePerCm())
+                .max()
+                .orElse(0);
+        if (best.landing().worstMiss() <= 1 && sure > 0.4)
+            return off + most + "because what is in the vessel is not known well enough ("
+                    + Figures.significant(sure, 2)
+                    + " of a half-width is uncertain). Measure it, or measure it better, before pouring it away.";
+        return off + most + "because " + words(worst(best.landing())) + " stays, and nothing can be taken out.";
+    }
+
+    private static Answer.Predicted worst(Learned.Landing landing) {
+        return landing.predicted().stream()
+                .max((a, b) -> Double.compare(Math.abs(a.miss()), Math.abs(b.miss())))
+                .orElseThrow();
+    }
+
+    private static String words(Answer.Predicted p) {
+        return p.point().quantity().sign() + " at " + Grams.plain(p.point().wavelengthNm()) + " nm, "
+                + Figures.significant(Math.abs(p.miss()), 2) + " half-widths too " + (p.miss() > 0 ? "high" : "low");
+    }
+
+    private static String percent(double chance) {
+        return Figures.significant(100 * chance, 2) + " in 100";
+    }
+}
