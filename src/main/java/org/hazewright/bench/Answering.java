@@ -298,7 +298,8 @@ public final class Answering {
                 if (fewer.plan().weighings() < p.plan().weighings() && fewer.meets() == p.meets()) others.add(fewer);
                 if (inHand.isEmpty()) continue;
                 Planned fromHand = plan(p.option(), StockPlan.Wish.STOCK_IN_HAND);
-                boolean another = !fromHand.plan().stocksInHand().equals(p.plan().stocksInHand());
+                boolean another =
+                        !fromHand.plan().stocksInHand().equals(p.plan().stocksInHand());
                 if (another && fromHand.meets() == p.meets()) others.add(fromHand);
             }
             return others;
@@ -332,8 +333,7 @@ public final class Answering {
                     .contentPerG(left.stock())
                     .forEach((i, perG) -> grams.merge(i, perG * left.leftG(), Double::sum));
         double cost = 0;
-        for (var entry : grams.entrySet())
-            cost += entry.getKey().pricePerG().orElse(Double.NaN) * entry.getValue();
+        for (var entry : grams.entrySet()) cost += entry.getKey().pricePerG().orElse(Double.NaN) * entry.getValue();
         return cost;
     }
 }

@@ -78,8 +78,7 @@ final class SharedStocks {
     }
 
     private List<Stock> best(Ingredient i) {
-        List<Need> with =
-                needs.stream().filter(n -> n.contents.massG(i) > 0).toList();
+        List<Need> with = needs.stream().filter(n -> n.contents.massG(i) > 0).toList();
         if (with.isEmpty()) return List.of();
         Contents first = with.get(0).contents;
         Optional<Ingredient> liquid = first.shelf().liquidOf(first.base());
@@ -96,8 +95,8 @@ final class SharedStocks {
                 best = alone;
             }
             for (int second : RATIOS) {
-                List<Stock> two = List.of(
-                        one, stock(i, liquid.get(), second, (long) ratio * second, Optional.of(one.id())));
+                List<Stock> two =
+                        List.of(one, stock(i, liquid.get(), second, (long) ratio * second, Optional.of(one.id())));
                 cost = cost(i, with, two);
                 if (cost < least) {
                     least = cost;
@@ -121,7 +120,8 @@ final class SharedStocks {
                     from[n] = level;
                 }
             }
-            if (from[n] >= 0) drawn[from[n]] += dose(i, with.get(n), stocks, from[n]).weighedG();
+            if (from[n] >= 0)
+                drawn[from[n]] += dose(i, with.get(n), stocks, from[n]).weighedG();
         }
         List<Stock> sized = new ArrayList<>(stocks);
         double sum = 0;
@@ -146,7 +146,9 @@ final class SharedStocks {
         double cost = u * u * effect(i, n);
         if (!Dilutions.weighable(d.weighedG(), balance)) cost += UNWEIGHABLE;
         if (level >= 0
-                && new Assembly(n.contents, balance).recipe(List.of(d), new int[1]).isEmpty()) cost += 2 * UNWEIGHABLE;
+                && new Assembly(n.contents, balance)
+                        .recipe(List.of(d), new int[1])
+                        .isEmpty()) cost += 2 * UNWEIGHABLE;
         return cost;
     }
 
@@ -174,8 +176,8 @@ final class SharedStocks {
      */
     private OptionalDouble roundGrams(int ratio, double drawnG) {
         double precise = Math.min(balance.standardUncertaintyG() / GOOD, USUAL_STOCK_G / ratio);
-        double least = Math.max(Math.max(leastLoadG, precise), Math.max(LEAST_STOCK_G, SPARE * drawnG) / ratio)
-                * (1 - 1e-9);
+        double least =
+                Math.max(Math.max(leastLoadG, precise), Math.max(LEAST_STOCK_G, SPARE * drawnG) / ratio) * (1 - 1e-9);
         for (int decade = -3; decade <= 3; decade++)
             for (double f : ROUND) {
                 double g = balance.rounded(f * Math.pow(10, decade));
@@ -186,15 +188,13 @@ final class SharedStocks {
     }
 
     private Stock stock(Stock like, int ratio, double g) {
-        return new Stock(
-                like.id(), like.ingredient(), like.lot(), g, like.diluent(), diluentG(ratio, g), like.from());
+        return new Stock(like.id(), like.ingredient(), like.lot(), g, like.diluent(), diluentG(ratio, g), like.from());
     }
 
     private Stock stock(Ingredient i, Ingredient diluent, int ratio, long total, Optional<String> from) {
         double g = Math.max(1, balance.rounded(leastLoadG));
         if (!(g > 0)) throw new Refusal("The balance's smallest load rounds to 0 g.");
-        return new Stock(
-                i.id() + "-1-" + total, i, WeighingOrder.lotOf(i), g, diluent, diluentG(ratio, g), from);
+        return new Stock(i.id() + "-1-" + total, i, WeighingOrder.lotOf(i), g, diluent, diluentG(ratio, g), from);
     }
 
     private double diluentG(int ratio, double g) {

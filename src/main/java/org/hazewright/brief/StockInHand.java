@@ -18,7 +18,8 @@ public record StockInHand(
         double diluentG) {
     public StockInHand {
         if (ingredient.isPresent() == from.isPresent())
-            throw new Refusal("The stock " + id + " needs an ingredient, or the stock it was diluted from: one of the two.");
+            throw new Refusal(
+                    "The stock " + id + " needs an ingredient, or the stock it was diluted from: one of the two.");
         Refusal.positive("Grams of what went into the stock " + id, ingredientG);
         Refusal.positive("Grams of diluent in the stock " + id, diluentG);
     }

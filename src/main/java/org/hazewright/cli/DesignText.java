@@ -215,7 +215,7 @@ final class DesignText {
                     worst.point().quantity().sign() + " "
                             + Figures.plain(worst.point().wavelengthNm()));
         }
-        if (rest) table.row("all else", "less than " + Figures.fixed(SLIGHT, 2), "", "");
+        if (rest) table.row("all else", "<" + Figures.fixed(SLIGHT, 2), "<" + Figures.fixed(SLIGHT, 2), "");
         table.print(out);
         BetterKnown.of(answer.brief(), answer.recipe(), Answering.DRAWS)
                 .ifPresent(b -> wrapped("Worth knowing better: with half the uncertainty of " + b.what() + " it lands "

@@ -143,7 +143,9 @@ public final class BriefReader {
                 throw t.refusal("id", "Two stocks are called \"" + id + "\"; give each its own id.");
             Optional<String> from = t.maybeText("stock");
             if (from.isPresent() && stocks.stream().noneMatch(s -> s.id().equals(from.get())))
-                throw t.refusal("stock", "No earlier [[stock_in_hand]] is called \"" + from.get() + "\"; write it above this one.");
+                throw t.refusal(
+                        "stock",
+                        "No earlier [[stock_in_hand]] is called \"" + from.get() + "\"; write it above this one.");
             Optional<String> ingredient = t.maybeText("ingredient");
             double ingredientG = t.positive("ingredient_g");
             String diluent = t.text("diluent");

@@ -93,7 +93,8 @@ class SeriesPlanTest {
         }
         double table = plan.columns().stream().mapToDouble(plan::sumG).sum();
         double recipes = plan.phantoms().stream()
-                .mapToDouble(p -> p.recipe().items().stream().mapToDouble(Item::massG).sum())
+                .mapToDouble(p ->
+                        p.recipe().items().stream().mapToDouble(Item::massG).sum())
                 .sum();
         assertEquals(recipes, table, 1e-9, "the weighing table leaves nothing out");
     }
@@ -128,7 +129,9 @@ class SeriesPlanTest {
         Series series = series(6, "water", 8);
         SeriesPlan plan = SeriesPlan.of(series, SHELF);
         assertTrue(plan.ingredients().size() <= 3, "two absorbers and a scatterer at most: " + plan.ingredients());
-        assertTrue(plan.notes().get(0).startsWith("One list of bottles"), plan.notes().get(0));
+        assertTrue(
+                plan.notes().get(0).startsWith("One list of bottles"),
+                plan.notes().get(0));
     }
 
     /**

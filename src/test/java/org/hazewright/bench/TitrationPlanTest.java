@@ -43,8 +43,7 @@ class TitrationPlanTest {
                     1000,
                     0,
                     22,
-                    List.of(new Target(
-                            800, OptionalDouble.of(mua[k]), OptionalDouble.of(10), 0.05 * mua[k], 0.6, 1)),
+                    List.of(new Target(800, OptionalDouble.of(mua[k]), OptionalDouble.of(10), 0.05 * mua[k], 0.6, 1)),
                     List.of(),
                     new SearchLimits(List.of("ink-demo", "lipid-emulsion-20"), List.of(), 1, 1, 0, 0),
                     new Balance(0.001, balanceU, 0.020, 620),
@@ -152,7 +151,8 @@ class TitrationPlanTest {
     private static List<Map<Ingredient, double[]>> kappa(TitrationPlan plan) {
         List<Map<Ingredient, double[]>> all = new ArrayList<>();
         Map<Ingredient, Double> titrant = plan.titrant().massesG();
-        double titrantG = plan.titrant().items().stream().mapToDouble(Item::massG).sum();
+        double titrantG =
+                plan.titrant().items().stream().mapToDouble(Item::massG).sum();
         Map<Ingredient, Double> now = new HashMap<>(plan.start().massesG());
         for (TitrationPlan.Step s : plan.steps()) {
             double volume = new Mixture(now, 22).volumeMl();
@@ -171,8 +171,8 @@ class TitrationPlanTest {
 
     private static double[][] draw(TitrationPlan plan, SplittableRandom random, List<Map<Ingredient, double[]>> kappa) {
         Balance balance = plan.balance();
-        java.util.function.DoubleUnaryOperator weighed = g ->
-                g + balance.standardUncertaintyG() * Math.sqrt(balance.loads(g)) * random.nextGaussian();
+        java.util.function.DoubleUnaryOperator weighed =
+                g -> g + balance.standardUncertaintyG() * Math.sqrt(balance.loads(g)) * random.nextGaussian();
         Map<String, Map<Ingredient, Double>> stocks = new HashMap<>();
         for (Stock s : plan.stocks()) {
             double g = weighed.applyAsDouble(s.ingredientG());
@@ -237,16 +237,14 @@ class TitrationPlanTest {
     @Test
     void whatCannotBeTitratedIsRefused() {
         Titration plain = new Titration(true, 0, 0);
-        Refusal gel = assertThrows(
-                Refusal.class, () -> TitrationPlan.of(series("gelatin-10", MUA, plain, 0.001), SHELF));
+        Refusal gel =
+                assertThrows(Refusal.class, () -> TitrationPlan.of(series("gelatin-10", MUA, plain, 0.001), SHELF));
         assertTrue(gel.getMessage().contains("stays liquid"), gel.getMessage());
         Refusal falling = assertThrows(
-                Refusal.class,
-                () -> TitrationPlan.of(series("water", new double[] {0.2, 0.1}, plain, 0.001), SHELF));
+                Refusal.class, () -> TitrationPlan.of(series("water", new double[] {0.2, 0.1}, plain, 0.001), SHELF));
         assertTrue(falling.getMessage().contains("from less to more"), falling.getMessage());
         Titration small = new Titration(true, 0, 0, OptionalDouble.of(1005));
-        Refusal vessel =
-                assertThrows(Refusal.class, () -> TitrationPlan.of(series("water", MUA, small, 0.001), SHELF));
+        Refusal vessel = assertThrows(Refusal.class, () -> TitrationPlan.of(series("water", MUA, small, 0.001), SHELF));
         assertTrue(vessel.getMessage().contains("the vessel holds 1005 mL"), vessel.getMessage());
     }
 }

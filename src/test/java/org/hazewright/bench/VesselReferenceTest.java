@@ -68,6 +68,10 @@ class VesselReferenceTest {
     void amountsOfTheTable(double addedG, double stockG, double totalG) {
         Vessel reached = bath(1.4939, 3617.17).plus(titrant(), addedG);
         assertEquals(totalG, reached.massG(), 0.005);
-        assertEquals(stockG * STOCK, reached.massesG().get(INK), 2e-4 * stockG * STOCK, "a digit of 75.40 g is 1.3 in 10 000");
+        assertEquals(
+                stockG * STOCK,
+                reached.massesG().get(INK),
+                2e-4 * stockG * STOCK,
+                "a digit of 75.40 g is 1.3 in 10 000");
     }
 }

@@ -65,8 +65,8 @@ class SeriesCommandTest {
     }
 
     private Ran series(String text, String... more) throws IOException {
-        List<String> args =
-                new ArrayList<>(List.of("series", file("set", text), "--out", folder.resolve("out").toString()));
+        List<String> args = new ArrayList<>(List.of(
+                "series", file("set", text), "--out", folder.resolve("out").toString()));
         args.addAll(List.of(more));
         return run(new Interruption(), args.toArray(String[]::new));
     }
@@ -83,7 +83,9 @@ class SeriesCommandTest {
         assertEquals(0, ran.status, ran.err);
         Map<String, Object> plan = JSON.std.mapFrom(ran.out);
         List<Map<?, ?>> phantoms = list(plan.get("phantoms"));
-        assertEquals(List.of("A1", "A2", "A3", "B1", "B2", "B3"), phantoms.stream().map(p -> p.get("name")).toList());
+        assertEquals(
+                List.of("A1", "A2", "A3", "B1", "B2", "B3"),
+                phantoms.stream().map(p -> p.get("name")).toList());
         for (Map<?, ?> p : phantoms) {
             Path recipe = folder.resolve("out/set-" + p.get("name") + ".recipe.toml");
             Ran read = run(new Interruption(), "predict", recipe.toString(), "--at", "800", "--json");
@@ -109,7 +111,13 @@ class SeriesCommandTest {
         Ran ran = series(GRID);
         assertEquals(0, ran.status, ran.err);
         for (String name : List.of("A1", "A3", "B3"))
-            assertEquals(2, ran.out.lines().filter(l -> l.strip().startsWith(name + " ")).count(), name + ran.out);
+            assertEquals(
+                    2,
+                    ran.out
+                            .lines()
+                            .filter(l -> l.strip().startsWith(name + " "))
+                            .count(),
+                    name + ran.out);
         assertTrue(ran.out.contains("Written: 6 recipes"), ran.out);
     }
 
@@ -157,13 +165,16 @@ class SeriesCommandTest {
         String out = folder.resolve("out").toString();
         Ran text = run(new Interruption(), "design", good, bad, missing, "--out", out);
         assertEquals(2, text.status, "refused is worse than missed");
-        assertEquals(1, text.err.lines().filter(l -> l.startsWith("hazewright:")).count(), text.err);
+        assertEquals(
+                1, text.err.lines().filter(l -> l.startsWith("hazewright:")).count(), text.err);
         assertTrue(text.err.contains("bad.brief.toml"), text.err);
         for (String name : List.of("good", "missing"))
             assertTrue(Files.exists(folder.resolve("out/" + name + ".xlsx")), name);
         Ran json = run(new Interruption(), "design", good, bad, missing, "--out", out, "--json");
         List<Map<?, ?>> results = list(JSON.std.mapFrom(json.out).get("results"));
-        assertEquals(List.of("meets", "refused", "misses"), results.stream().map(r -> r.get("status")).toList());
+        assertEquals(
+                List.of("meets", "refused", "misses"),
+                results.stream().map(r -> r.get("status")).toList());
         Ran alone = run(new Interruption(), "design", good, "--out", out, "--json");
         Map<String, Object> one = JSON.std.mapFrom(alone.out);
         Map<Object, Object> first = new java.util.HashMap<>(results.get(0));
@@ -176,8 +187,15 @@ class SeriesCommandTest {
     void briefsThatWouldOverwriteEachOtherAreRefused() throws IOException {
         String one = file("same", BATH);
         Files.createDirectories(folder.resolve("other"));
-        String two = Files.writeString(folder.resolve("other/same.brief.toml"), BATH).toString();
-        Ran ran = run(new Interruption(), "design", one, two, "--out", folder.resolve("out").toString());
+        String two =
+                Files.writeString(folder.resolve("other/same.brief.toml"), BATH).toString();
+        Ran ran = run(
+                new Interruption(),
+                "design",
+                one,
+                two,
+                "--out",
+                folder.resolve("out").toString());
         assertEquals(2, ran.status);
         assertTrue(ran.err.contains("would write the same files"), ran.err);
         assertEquals(0, run(new Interruption(), "design", one, two).status, "beside their briefs they do not meet");
@@ -187,11 +205,21 @@ class SeriesCommandTest {
     void stoppedWorkGivesTheBestSoFarAndSaysSo() throws IOException {
         Interruption asked = new Interruption();
         asked.ask();
-        Ran ran = run(asked, "design", file("bath", BATH), "--out", folder.resolve("out").toString());
+        Ran ran = run(
+                asked,
+                "design",
+                file("bath", BATH),
+                "--out",
+                folder.resolve("out").toString());
         assertEquals(0, ran.status, ran.err);
         assertTrue(ran.out.contains("the best is not proven, the search was stopped"), ran.out);
         assertTrue(Files.exists(folder.resolve("out/bath.recipe.toml")));
-        Ran set = run(asked, "series", file("set", GRID), "--out", folder.resolve("out").toString());
+        Ran set = run(
+                asked,
+                "series",
+                file("set", GRID),
+                "--out",
+                folder.resolve("out").toString());
         assertTrue(set.out.contains("not proven"), set.out);
     }
 
@@ -230,13 +258,21 @@ class SeriesCommandTest {
                 diluent_g = 49
                 """;
         Ran ran = run(
-                new Interruption(), "design", file("bath", brief), "--out", folder.resolve("out").toString(), "--json");
+                new Interruption(),
+                "design",
+                file("bath", brief),
+                "--out",
+                folder.resolve("out").toString(),
+                "--json");
         assertEquals(0, ran.status, ran.err);
         Map<String, Object> answer = JSON.std.mapFrom(ran.out);
         List<Map<?, ?>> ways = new ArrayList<>(list(answer.get("alternatives")));
         boolean best = drawsFrom(answer, "ink-of-monday");
         assertTrue(
-                best || ways.stream().anyMatch(w -> w.get("why").equals("from stock in hand") && drawsFrom(w, "ink-of-monday")),
+                best
+                        || ways.stream()
+                                .anyMatch(w ->
+                                        w.get("why").equals("from stock in hand") && drawsFrom(w, "ink-of-monday")),
                 ran.out);
         Ran mistyped = run(new Interruption(), "design", file("bath", brief.replace("diluent_g", "diluent_ml")));
         assertEquals(2, mistyped.status);
@@ -249,7 +285,12 @@ class SeriesCommandTest {
 
     @Test
     void theTextSaysWhatASlipDoesAndWhatIsWorthKnowing() throws IOException {
-        Ran ran = run(new Interruption(), "design", file("bath", BATH), "--out", folder.resolve("out").toString());
+        Ran ran = run(
+                new Interruption(),
+                "design",
+                file("bath", BATH),
+                "--out",
+                folder.resolve("out").toString());
         assertTrue(ran.out.contains("What a slip does"), ran.out);
         assertTrue(ran.out.contains("Worth knowing better: with half the uncertainty of the scattering of"), ran.out);
     }
