@@ -165,7 +165,11 @@ final class DesignCommand implements Callable<Integer> {
             results.add(Json.object()
                     .with("brief", o.brief.toString())
                     .with("format", 1)
-                    .with("status", o.problem instanceof WriteFailure ? "unwritable" : one == Hazewright.REFUSED ? "refused" : "fault")
+                    .with(
+                            "status",
+                            o.problem instanceof WriteFailure
+                                    ? "unwritable"
+                                    : one == Hazewright.REFUSED ? "refused" : "fault")
                     .with("message", o.problem.getMessage())
                     .fields());
         }
