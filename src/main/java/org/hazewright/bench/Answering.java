@@ -33,7 +33,7 @@ import org.hazewright.shelf.Shelf;
  */
 public final class Answering {
     /** Draws behind the chance that is printed: its standard error is at most 0.25 in 100. */
-    private static final int DRAWS = 40_000;
+    public static final int DRAWS = 40_000;
 
     private static final int DRAWS_OF_ALTERNATIVES = 4_000;
     private static final long SEED = 1;

@@ -25,6 +25,9 @@ final class Planning {
     private static final double WEIGHING_GAINS = 0.01;
     private static final double WEIGHING_GAINS_RELATIVE = 0.01;
 
+    /** The same where a person asks for few weighings: about the whole of a tolerance in quadrature. */
+    private static final double FEWEST_GAINS = 0.5;
+
     /** A last digit is moved for no less, in squared half-widths or as a share: grams that do next to nothing stay as they are. */
     private static final double WORTH_A_DIGIT = 1e-4;
 
@@ -43,13 +46,15 @@ final class Planning {
     private final Balance balance;
     private final ToDoubleFunction<Recipe> judge;
     private final Assembly assembly;
+    private final StockPlan.Wish wish;
     private int judged;
 
-    Planning(Contents contents, Balance balance, ToDoubleFunction<Recipe> judge) {
+    Planning(Contents contents, Balance balance, ToDoubleFunction<Recipe> judge, StockPlan.Wish wish) {
         this.contents = contents;
         this.balance = balance;
         this.judge = judge;
         this.assembly = new Assembly(contents, balance);
+        this.wish = wish;
     }
 
     StockPlan plan() {
@@ -57,7 +62,7 @@ final class Planning {
         List<List<Dose>> ways = new ArrayList<>();
         List<Dose> chosen = new ArrayList<>();
         for (Ingredient i : contents.concentrationGPerMl().keySet()) {
-            List<Dose> of = affordable(dilutions.of(i));
+            List<Dose> of = affordable(wished(dilutions.of(i)));
             ways.add(of);
             chosen.add(of.get(0));
         }
@@ -82,6 +87,17 @@ final class Planning {
         return judge.applyAsDouble(recipe);
     }
 
+    /** The ways that the wish allows; never none. */
+    private List<Dose> wished(List<Dose> ways) {
+        boolean hand = wish == StockPlan.Wish.STOCK_IN_HAND || wish == StockPlan.Wish.NO_NEW_STOCK;
+        if (!hand) return ways;
+        List<Dose> inHand = ways.stream().filter(Dose::inHand).toList();
+        if (!inHand.isEmpty()) return inHand;
+        if (wish == StockPlan.Wish.STOCK_IN_HAND) return ways;
+        List<Dose> neat = ways.stream().filter(Dose::isNeat).toList();
+        return neat.isEmpty() ? List.of(Dose.neat(ways.get(0).ingredient(), ways.get(0).massG())) : neat;
+    }
+
     /** The ways that fit the base's liquid when all else goes in neat; neat where none does. */
     private List<Dose> affordable(List<Dose> ways) {
         List<Dose> fit = ways.stream()
@@ -104,7 +120,9 @@ final class Planning {
 
     private double simplify(List<Dose> chosen, List<List<Dose>> ways, double best, int[] steps) {
         double alike = Math.max(ALIKE, ALIKE_RELATIVE * Math.abs(best));
-        double gains = Math.max(WEIGHING_GAINS, WEIGHING_GAINS_RELATIVE * Math.abs(best));
+        double gains = wish == StockPlan.Wish.FEWEST_WEIGHINGS
+                ? FEWEST_GAINS
+                : Math.max(WEIGHING_GAINS, WEIGHING_GAINS_RELATIVE * Math.abs(best));
         double score = best;
         Comparator<Dose> simplest =
                 Comparator.<Dose>comparingInt(d -> d.weighings(balance)).thenComparingDouble(Dose::leftG);

@@ -26,6 +26,18 @@ public record StockPlan(
         List<String> notes,
         int judged) {
 
+    /** What a person wants of the plan beside its score. */
+    public enum Wish {
+        /** Nothing else. */
+        LEAST_SCORE,
+        /** As few weighings as the tolerances allow. */
+        FEWEST_WEIGHINGS,
+        /** Stocks in hand are used for whatever they hold. */
+        STOCK_IN_HAND,
+        /** The same, and no new stock is made. */
+        NO_NEW_STOCK
+    }
+
     public StockPlan {
         leftovers = List.copyOf(leftovers);
         stocksInHand = List.copyOf(stocksInHand);
@@ -41,7 +53,12 @@ public record StockPlan(
      *     fewer than 40 times.
      */
     public static StockPlan of(Contents contents, Balance balance, ToDoubleFunction<Recipe> judge) {
-        return new Planning(contents, balance, judge).plan();
+        return of(contents, balance, judge, Wish.LEAST_SCORE);
+    }
+
+    /** The plan of least score for these contents that does what is wished. */
+    public static StockPlan of(Contents contents, Balance balance, ToDoubleFunction<Recipe> judge, Wish wish) {
+        return new Planning(contents, balance, judge, wish).plan();
     }
 
     /** Grams of stock made and not drawn. */

@@ -4,7 +4,9 @@ import java.io.PrintWriter;
 import java.nio.file.Path;
 import java.time.LocalDate;
 import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.concurrent.Callable;
 import org.hazewright.bench.Answer;
 import org.hazewright.bench.Answering;
@@ -13,6 +15,8 @@ import org.hazewright.brief.Brief;
 import org.hazewright.files.BriefReader;
 import org.hazewright.files.RecipeWriter;
 import org.hazewright.files.SafeFile;
+import org.hazewright.files.WriteFailure;
+import org.hazewright.optics.Refusal;
 import org.hazewright.sheet.RecipeSheet;
 import org.hazewright.shelf.Shelf;
 import picocli.CommandLine.Command;
@@ -20,13 +24,15 @@ import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
 import picocli.CommandLine.Parameters;
+import picocli.CommandLine.ParentCommand;
 import picocli.CommandLine.Spec;
 
-/** From a brief to grams: prints the recipe and writes it as a file and a sheet. */
+/** From briefs to grams: prints each recipe and writes it as a file and a sheet. */
 @Command(
         name = "design",
         description = {
             "Finds the best recipe for a brief, prints it, and writes NAME.recipe.toml and NAME.xlsx.",
+            "Several briefs are worked side by side; one that fails does not stop the rest.",
             "Example: hazewright design recipes-demo/wrist-bath.brief.toml --out out"
         })
 final class DesignCommand implements Callable<Integer> {
@@ -36,8 +42,11 @@ final class DesignCommand implements Callable<Integer> {
     @Spec
     private CommandSpec spec;
 
-    @Parameters(paramLabel = "BRIEF", description = "What is wanted: NAME.brief.toml.")
-    private Path brief;
+    @ParentCommand
+    private Hazewright program;
+
+    @Parameters(arity = "1..*", paramLabel = "BRIEF", description = "What is wanted: NAME.brief.toml, one or several.")
+    private List<Path> briefs;
 
     @Option(names = "--out", paramLabel = "DIR", description = "Folder for the results (default: beside the brief).")
     private Path out;
@@ -51,22 +60,118 @@ final class DesignCommand implements Callable<Integer> {
     @Override
     public Integer call() {
         if (alternatives < 0 || alternatives > 10)
-            throw new org.hazewright.optics.Refusal(
-                    "--alternatives is " + alternatives + "; it must be a whole number from 0 to 10.");
+            throw new Refusal("--alternatives is " + alternatives + "; it must be a whole number from 0 to 10.");
         RecipeSheet.getReady();
         PrintWriter text = spec.commandLine().getOut();
+        PrintWriter err = spec.commandLine().getErr();
         Shelf shelf = shared.shelf();
-        Brief wanted = BriefReader.read(brief, shared.tissueSpectra());
-        Answer answer = Answering.to(wanted, shelf, alternatives);
+        LongWork work = new LongWork(err, shared.quiet || shared.json, program.interruption);
         LocalDate today = LocalDate.now();
-        Path folder = out != null ? out : brief.toAbsolutePath().getParent();
-        List<Path> written = write(answer, today, folder);
-        if (shared.json) DesignJson.of(answer).print(text);
-        else {
-            new DesignText(answer, shared.units, text).print(Warnings.of(answer.recipe(), today));
-            if (!shared.quiet) written.forEach(p -> text.println("Written: " + p));
+        if (briefs.size() == 1) return print(done(briefs.get(0), shelf, work, today), today, text);
+        refuseSameResults();
+        List<Outcome> outcomes = briefs.parallelStream()
+                .map(b -> outcome(b, shelf, work, today))
+                .toList();
+        return shared.json ? printTogether(outcomes, text, err) : printEach(outcomes, today, text, err);
+    }
+
+    /** A brief answered, with the files that were written. */
+    private record Done(Answer answer, List<Path> written) {
+        int status() {
+            return answer.meets() ? Hazewright.DONE : Hazewright.MISSES;
         }
-        return answer.meets() ? Hazewright.DONE : Hazewright.MISSES;
+    }
+
+    /** What became of one of several briefs: done, or the problem that ended it. */
+    private record Outcome(Path brief, Done done, Exception problem) {}
+
+    private Done done(Path brief, Shelf shelf, LongWork work, LocalDate today) {
+        Brief wanted = BriefReader.read(brief, shared.tissueSpectra());
+        Answer answer = Answering.to(wanted, shelf, alternatives, work::stop, work::progress);
+        return new Done(answer, write(answer, today, folder(brief)));
+    }
+
+    private Outcome outcome(Path brief, Shelf shelf, LongWork work, LocalDate today) {
+        try {
+            return new Outcome(brief, done(brief, shelf, work, today), null);
+        } catch (RuntimeException problem) {
+            return new Outcome(brief, null, problem);
+        }
+    }
+
+    private Path folder(Path brief) {
+        return out != null ? out : brief.toAbsolutePath().getParent();
+    }
+
+    private void refuseSameResults() {
+        Map<Path, Path> taken = new LinkedHashMap<>();
+        for (Path brief : briefs) {
+            Path result = folder(brief)
+                    .resolve(BriefReader.nameOf(brief))
+                    .toAbsolutePath()
+                    .normalize();
+            Path before = taken.put(result, brief);
+            if (before != null)
+                throw new Refusal("The briefs " + before + " and " + brief
+                        + " would write the same files; give each its own name, or leave --out away.");
+        }
+    }
+
+    private int printEach(List<Outcome> outcomes, LocalDate today, PrintWriter text, PrintWriter err) {
+        int status = Hazewright.DONE;
+        boolean first = true;
+        for (Outcome o : outcomes) {
+            int one;
+            if (o.problem != null) one = Hazewright.status(named(o), err);
+            else {
+                if (!first) text.print("\n────────────────────────────────────────\n\n");
+                first = false;
+                one = print(o.done, today, text);
+            }
+            status = Hazewright.worse(status, one);
+        }
+        return status;
+    }
+
+    /** A refusal that does not name its file itself is told with the file's name. */
+    private static Exception named(Outcome o) {
+        boolean bare = o.problem instanceof Refusal
+                && !o.problem.getMessage().contains(o.brief.getFileName().toString());
+        return bare ? new Refusal(o.brief + ": " + o.problem.getMessage()) : o.problem;
+    }
+
+    private static int printTogether(List<Outcome> outcomes, PrintWriter text, PrintWriter err) {
+        int status = Hazewright.DONE;
+        List<Map<String, Object>> results = new ArrayList<>();
+        for (Outcome o : outcomes) {
+            if (o.problem == null) {
+                results.add(Json.object()
+                        .with("brief", o.brief.toString())
+                        .withAll(DesignJson.of(o.done.answer))
+                        .fields());
+                status = Hazewright.worse(status, o.done.status());
+                continue;
+            }
+            int one = Hazewright.status(named(o), err);
+            status = Hazewright.worse(status, one);
+            results.add(Json.object()
+                    .with("brief", o.brief.toString())
+                    .with("format", 1)
+                    .with("status", o.problem instanceof WriteFailure ? "unwritable" : one == Hazewright.REFUSED ? "refused" : "fault")
+                    .with("message", o.problem.getMessage())
+                    .fields());
+        }
+        Json.object().with("format", 1).with("results", results).print(text);
+        return status;
+    }
+
+    private int print(Done done, LocalDate today, PrintWriter text) {
+        if (shared.json) DesignJson.of(done.answer).print(text);
+        else {
+            new DesignText(done.answer, shared.units, text).print(Warnings.of(done.answer.recipe(), today));
+            if (!shared.quiet) done.written.forEach(p -> text.println("Written: " + p));
+        }
+        return done.status();
     }
 
     private static List<Path> write(Answer answer, LocalDate today, Path folder) {

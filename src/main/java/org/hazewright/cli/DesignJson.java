@@ -78,7 +78,7 @@ final class DesignJson {
                 .with("weighing", score.weighing());
     }
 
-    private static List<Map<String, Object>> items(Recipe recipe) {
+    static List<Map<String, Object>> items(Recipe recipe) {
         double volume = org.hazewright.mixture.Mixture.of(recipe).volumeMl();
         List<Map<String, Object>> items = new ArrayList<>();
         for (Item item : recipe.items()) {
@@ -100,9 +100,13 @@ final class DesignJson {
         return item.lot().or(() -> item.ingredient().lot().map(l -> l.number())).orElse(null);
     }
 
-    private static List<Map<String, Object>> stocks(Recipe recipe) {
+    static List<Map<String, Object>> stocks(Recipe recipe) {
+        return stocks(recipe.stocks());
+    }
+
+    static List<Map<String, Object>> stocks(List<Stock> all) {
         List<Map<String, Object>> stocks = new ArrayList<>();
-        for (Stock s : recipe.stocks())
+        for (Stock s : all)
             stocks.add(Json.object()
                     .with("id", s.id())
                     .with("ingredient", s.ingredient().id())

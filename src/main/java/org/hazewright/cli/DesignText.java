@@ -8,8 +8,12 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Set;
 import org.hazewright.bench.Answer;
+import org.hazewright.bench.Answering;
+import org.hazewright.bench.BetterKnown;
 import org.hazewright.bench.Leftover;
+import org.hazewright.bench.Sensitivity;
 import org.hazewright.bench.Warning;
+import org.hazewright.bench.Weighing;
 import org.hazewright.brief.Balance;
 import org.hazewright.brief.Brief;
 import org.hazewright.mixture.Cause;
@@ -49,6 +53,7 @@ final class DesignText {
         weighing();
         targets();
         causes();
+        slips();
         section("What holds it back", answer.limits());
         alternatives();
         section("Mind", mind(warnings));
@@ -183,6 +188,38 @@ final class DesignText {
         table.print(out);
     }
 
+    /** For each weighing the move of the target that it moves most; then the figure that is worth knowing better. */
+    private void slips() {
+        out.println();
+        out.println("What a slip does, in half-widths of the target it moves most");
+        TextTable table = new TextTable("  ", "lrrl");
+        table.row("", "1 % more", "1 mg more", "");
+        for (Sensitivity s :
+                Sensitivity.of(answer.recipe(), balance, answer.brief().points())) {
+            Weighing w = s.weighing();
+            Sensitivity.Effect worst = s.effects().stream()
+                    .max(Comparator.comparingDouble(e -> Math.abs(e.perPercentMiss())))
+                    .orElseThrow();
+            table.row(
+                    w.label() + w.into().map(stock -> " in " + stock).orElse(""),
+                    signed(worst.perPercentMiss()),
+                    signed(worst.perMgMiss()),
+                    worst.point().quantity().sign() + " "
+                            + Figures.plain(worst.point().wavelengthNm()));
+        }
+        table.print(out);
+        BetterKnown.of(answer.brief(), answer.recipe(), Answering.DRAWS)
+                .ifPresent(b -> wrapped("Worth knowing better: with half the uncertainty of " + b.what() + " it lands "
+                                + times(b.then()) + " in 100 instead of " + times(b.chance()) + ".")
+                        .forEach(line -> out.println("  " + line)));
+    }
+
+    /** Two decimals and a sign; what rounds to nothing as a dash. */
+    private static String signed(double miss) {
+        String digits = Figures.fixed(Math.abs(miss), 2);
+        return digits.equals("0.00") ? "–" : (miss < 0 ? "−" : "+") + digits;
+    }
+
     private void alternatives() {
         if (answer.alternatives().isEmpty()) return;
         out.println();
@@ -209,7 +246,7 @@ final class DesignText {
         return sentences;
     }
 
-    private static List<String> wrapped(String sentence) {
+    static List<String> wrapped(String sentence) {
         List<String> lines = new ArrayList<>();
         StringBuilder line = new StringBuilder("- ");
         for (String word : sentence.split(" ")) {

@@ -2,12 +2,20 @@ package org.hazewright.cli;
 
 import java.io.PrintWriter;
 import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
+import org.hazewright.desk.Opening;
 import org.hazewright.files.WriteFailure;
 import org.hazewright.optics.Refusal;
+import org.hazewright.shelf.Nearest;
 import picocli.CommandLine;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Model.CommandSpec;
+import picocli.CommandLine.Option;
+import picocli.CommandLine.Parameters;
 import picocli.CommandLine.Spec;
 
 /** The program: without a command it opens the window, with one it does that and ends with a status. */
@@ -19,6 +27,7 @@ import picocli.CommandLine.Spec;
         synopsisSubcommandLabel = "COMMAND",
         subcommands = {
             DesignCommand.class,
+            SeriesCommand.class,
             PredictCommand.class,
             IngredientsCommand.class,
             BatchCommand.class,
@@ -39,27 +48,65 @@ public final class Hazewright implements Runnable {
     static final int MISSES = 3;
     static final int UNWRITABLE = 4;
 
+    final Interruption interruption;
+
+    Hazewright(Interruption interruption) {
+        this.interruption = interruption;
+    }
+
     @Spec
     private CommandSpec spec;
 
+    @Option(
+            names = "--ingredients",
+            paramLabel = "DIR",
+            description = "Shelf for the window (default: the folder ingredients here, else the shelf that comes with the program).")
+    private Path ingredients;
+
+    @Parameters(
+            arity = "0..1",
+            paramLabel = "FILE",
+            description = "A brief, recipe or batch (.toml) to open in the window.")
+    private Path file;
+
+    /** Without a command: opens the window. */
     @Override
     public void run() {
-        throw new CommandLine.ParameterException(
-                spec.commandLine(), "Say what to do: a command is missing. Try hazewright --help.");
+        if (file != null && !file.toString().endsWith(".toml"))
+            throw new CommandLine.ParameterException(
+                    spec.commandLine(), "There is no command \"" + file + "\"." + perhaps(file.toString()));
+        if (file != null && !Files.isRegularFile(file))
+            throw new Refusal("There is no file " + file + "; name a brief, a recipe or a batch.");
+        Shared shelf = new Shared();
+        shelf.ingredients = ingredients;
+        Opening.open(Optional.ofNullable(shelf.shelfFolder()), Optional.ofNullable(file));
+    }
+
+    private String perhaps(String word) {
+        return Nearest.to(word, spec.subcommands().keySet())
+                .map(n -> " Perhaps \"" + n + "\" is meant.")
+                .orElse("");
     }
 
     public static void main(String[] args) {
         PrintWriter out = new PrintWriter(System.out, false, StandardCharsets.UTF_8);
         PrintWriter err = new PrintWriter(System.err, true, StandardCharsets.UTF_8);
-        int status = run(out, err, args);
+        Interruption interruption = Interruption.atTerminal();
+        int status = run(out, err, interruption, args);
         out.flush();
         err.flush();
+        interruption.finished(status);
         System.exit(out.checkError() && status == DONE ? UNWRITABLE : status);
     }
 
     /** Runs one command line against the given writers and gives its exit status. */
     static int run(PrintWriter out, PrintWriter err, String... args) {
-        CommandLine line = new CommandLine(new Hazewright())
+        return run(out, err, new Interruption(), args);
+    }
+
+    /** The same; long work ends early once {@code interruption} is asked for. */
+    static int run(PrintWriter out, PrintWriter err, Interruption interruption, String... args) {
+        CommandLine line = new CommandLine(new Hazewright(interruption))
                 .setOut(out)
                 .setErr(err)
                 .setColorScheme(CommandLine.Help.defaultColorScheme(CommandLine.Help.Ansi.OFF))
@@ -76,7 +123,8 @@ public final class Hazewright implements Runnable {
         return status;
     }
 
-    private static int status(Exception problem, PrintWriter err) {
+    /** Says what went wrong, in words for a person, and gives its exit status. */
+    static int status(Exception problem, PrintWriter err) {
         if (problem instanceof WriteFailure) {
             err.println("hazewright: " + problem.getMessage());
             return UNWRITABLE;
@@ -90,6 +138,12 @@ public final class Hazewright implements Runnable {
                         + " the lines below.");
         problem.printStackTrace(err);
         return FAULT;
+    }
+
+    /** The worse of two statuses: a fault before what could not be written, was refused, or misses. */
+    static int worse(int one, int other) {
+        List<Integer> order = List.of(DONE, MISSES, REFUSED, UNWRITABLE, FAULT);
+        return order.indexOf(one) >= order.indexOf(other) ? one : other;
     }
 
     /** Picocli's message without its bracketed details, ended with where to look. */

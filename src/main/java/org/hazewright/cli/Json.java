@@ -21,6 +21,12 @@ final class Json {
         return this;
     }
 
+    /** Adds all fields of another. */
+    Json withAll(Json other) {
+        fields.putAll(other.fields);
+        return this;
+    }
+
     Map<String, Object> fields() {
         return fields;
     }

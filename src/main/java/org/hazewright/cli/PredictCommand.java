@@ -7,12 +7,14 @@ import java.util.List;
 import java.util.Map;
 import java.util.concurrent.Callable;
 import org.hazewright.files.RecipeReader;
+import org.hazewright.files.SafeFile;
 import org.hazewright.mixture.Budget;
 import org.hazewright.mixture.Coefficients;
 import org.hazewright.mixture.Mixture;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.optics.Figures;
 import org.hazewright.optics.Refusal;
+import org.hazewright.sheet.SpectraPicture;
 import org.hazewright.shelf.Shelf;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
@@ -50,6 +52,12 @@ final class PredictCommand implements Callable<Integer> {
     @Option(names = "--step", paramLabel = "NM", description = "Step of the range in nm (default: ${DEFAULT-VALUE}).")
     private double step = 10;
 
+    @Option(
+            names = "--picture",
+            paramLabel = "FILE",
+            description = "Draw both spectra with their 95 % band and each ingredient's share, as .png or .svg.")
+    private Path picture;
+
     @Override
     public Integer call() {
         Shelf shelf = shared.shelf();
@@ -63,7 +71,18 @@ final class PredictCommand implements Callable<Integer> {
         PrintWriter out = spec.commandLine().getOut();
         if (shared.json) json(mixture, nm, uMua, uMusp).print(out);
         else text(made, mixture, nm, uMua, uMusp, out);
+        if (picture != null) draw(made, mixture, out);
         return Hazewright.DONE;
+    }
+
+    /** The picture always shows a range: the one asked for, or all that the ingredients share, every 5 nm. */
+    private void draw(Recipe made, Mixture mixture, PrintWriter out) {
+        double[] range = from != null ? Wavelengths.of(null, from, to, Math.min(step, 5), mixture) : Wavelengths.covered(mixture, 5);
+        SafeFile.write(
+                picture,
+                SpectraPicture.of(made, range, picture.getFileName().toString(), shared.units.of(1), shared.units.sign()),
+                SafeFile.Overwrite.KEEP_PREVIOUS);
+        if (!shared.json && !shared.quiet) out.println("Written: " + picture);
     }
 
     private static Json json(Mixture mixture, double[] nm, double[] uMua, double[] uMusp) {
@@ -123,7 +142,7 @@ final class PredictCommand implements Callable<Integer> {
                 for (double nm : at) Refusal.positive("--at wavelength in nm", nm);
                 return at;
             }
-            if (from == null && to == null) return covered(mixture);
+            if (from == null && to == null) return covered(mixture, 50);
             if (from == null || to == null)
                 throw new Refusal("A range needs both --from and --to, in nm; " + (from == null ? "--from" : "--to")
                         + " is missing.");
@@ -139,9 +158,9 @@ final class PredictCommand implements Callable<Integer> {
             return nm;
         }
 
-        private static double[] covered(Mixture mixture) {
-            double[] nm = java.util.stream.IntStream.rangeClosed(8, 22)
-                    .mapToDouble(k -> 50.0 * k)
+        private static double[] covered(Mixture mixture, double step) {
+            double[] nm = java.util.stream.IntStream.rangeClosed((int) (400 / step), (int) (1100 / step))
+                    .mapToDouble(k -> step * k)
                     .filter(x -> {
                         try {
                             mixture.requireFigures(x);

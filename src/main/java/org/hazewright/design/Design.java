@@ -83,7 +83,9 @@ public final class Design {
                 .thenComparing(o -> o.ids().size())
                 .thenComparing(o -> String.join(",", new java.util.TreeSet<>(o.ids()))));
         for (Searched s : searched) if (s.candidates.base.equals(options.get(0).base())) leading = s;
-        List<String> limits = new HeldBack(brief, leading, options.get(0), bestPossible).sentences();
+        List<String> limits = stop.getAsBoolean()
+                ? List.of() // whoever stops the search does not wait for more of them
+                : new HeldBack(brief, leading, options.get(0), bestPossible).sentences();
         long admissible =
                 searched.stream().mapToLong(s -> s.result.admissible()).sum();
         long solved = searched.stream().mapToLong(s -> s.result.solved()).sum();

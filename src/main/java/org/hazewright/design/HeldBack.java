@@ -90,7 +90,7 @@ final class HeldBack {
                 case ONE_MORE -> {
                     SetProblem.Group group = SetProblem.Group.values()[r.index()];
                     sentences.add("With " + ordinal(searched.problem().limits().most(group) + 1) + " " + word(group)
-                            + " (" + names(r.after().members()) + ")" + fall);
+                            + " (" + names(r.after().members(), group) + ")" + fall);
                 }
                 case UPPER_LIFTED -> {
                     Ingredient i = ingredient(r.index());
@@ -142,7 +142,7 @@ final class HeldBack {
                     .best();
             if (more.score() < 0.9 * best.score().total() && more.worstMiss() < Math.abs(miss) - WORTH)
                 sentences.add("With " + ordinal(p.limits().most(group) + 1) + " " + word(group) + " ("
-                        + names(more.members()) + ") it would be " + widths(more.worstMiss()) + ".");
+                        + names(more.members(), group) + ") it would be " + widths(more.worstMiss()) + ".");
         }
     }
 
@@ -150,10 +150,12 @@ final class HeldBack {
         return searched.candidates().ingredients.get(candidate);
     }
 
-    private String names(int[] members) {
+    /** The members of a group by id: the one more and its peers. */
+    private String names(int[] members, SetProblem.Group group) {
         List<String> names = new ArrayList<>();
-        for (int m : members) names.add(ingredient(m).id());
-        return join(names);
+        for (int m : members)
+            if (searched.problem().candidates().get(m).group() == group) names.add(ingredient(m).id());
+        return names.isEmpty() ? "none of which is needed" : join(names);
     }
 
     private static String name(Point p) {

@@ -14,8 +14,8 @@ import org.hazewright.brief.Target;
 import org.hazewright.brief.Tissue;
 
 /**
- * A brief file to a {@link Brief}. What it leaves out is: tolerances 5 %, no extra share, 22 °C, two absorbers, one scatterer and
- * one modifier at most, and a usual laboratory balance.
+ * A brief file to a {@link Brief}. What it leaves out is: tolerances 5 %, no extra share, 22 °C, the limits of {@link
+ * SearchLimits#USUAL}, and a usual laboratory balance.
  */
 public final class BriefReader {
     static final List<String> SHARED_KEYS = List.of(
@@ -52,11 +52,19 @@ public final class BriefReader {
                     .refusal(
                             "The brief has no targets; add a [[target]] with wavelength_nm and mua_per_cm or musp_per_cm, or"
                                     + " a [tissue].");
-        return shared(page, nameOf(file), text.sha256(), targets, tissue);
+        String name = nameOf(file);
+        return shared(page, name, page.text("title", name), text.sha256(), targets, tissue);
+    }
+
+    /** A brief that comes with the program, by its name. */
+    public static Brief readShipped(String name) {
+        return ShelfReader.inShipped(
+                shelf -> read(shelf.resolveSibling("demo").resolve(name + ".brief.toml"), TissueSpectra::shipped));
     }
 
     /** A brief of the parts that all kinds of brief files share, with these targets. */
-    static Brief shared(TomlPage page, String name, String sha256, List<Target> targets, Optional<Tissue> tissue) {
+    static Brief shared(
+            TomlPage page, String name, String title, String sha256, List<Target> targets, Optional<Tissue> tissue) {
         List<String> bases = page.textOrTexts("base");
         List<Mould> moulds = moulds(page);
         double batchMl = batchMl(page, moulds);
@@ -64,7 +72,6 @@ public final class BriefReader {
         double temperatureC = page.within("temperature_c", 0, 100, 22);
         SearchLimits limits = limits(page.table("shelf"));
         Balance balance = page.table("balance").map(BriefReader::balance).orElse(Balance.USUAL);
-        String title = page.text("title", name);
         return page.at()
                 .of(() -> new Brief(
                         name,
@@ -82,7 +89,7 @@ public final class BriefReader {
     }
 
     /** {@code forearm.brief.toml} is called forearm, and so is {@code forearm.toml}. */
-    static String nameOf(Path file) {
+    public static String nameOf(Path file) {
         String name = file.getFileName().toString();
         for (String ending : new String[] {".brief.toml", ".toml"})
             if (name.toLowerCase(Locale.ROOT).endsWith(ending) && name.length() > ending.length())

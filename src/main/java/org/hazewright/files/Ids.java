@@ -8,14 +8,20 @@ final class Ids {
 
     private Ids() {}
 
-    /** The {@code id} of a file, which must be the file's name without its ending. */
-    static String requireFileName(TomlPage page, String fileId) {
-        String id = page.text("id");
+    /** The text of a key, which must be such a name. */
+    static String require(TomlPage page, String key) {
+        String id = page.text(key);
         if (!ID.matcher(id).matches())
             throw page.refusal(
-                    "id",
-                    "The id \"" + id + "\" cannot be used; use letters, digits, dots, hyphens and underscores,"
+                    key,
+                    "The " + key + " \"" + id + "\" cannot be used; use letters, digits, dots, hyphens and underscores,"
                             + " beginning with a letter or a digit.");
+        return id;
+    }
+
+    /** The {@code id} of a file, which must be the file's name without its ending. */
+    static String requireFileName(TomlPage page, String fileId) {
+        String id = require(page, "id");
         if (!id.equals(fileId))
             throw page.refusal(
                     "id",

@@ -81,7 +81,7 @@ final class IngredientReader {
         if (page.has("least_share") && part != Part.BASE)
             throw page.refusal(
                     "least_share",
-                    "least_share is a base's; this ingredient is a " + part.word() + ". Take the line out.");
+                    "least_share is for a base, and here part = \"" + part.word() + "\". Take the line out.");
         double leastShare = page.within("least_share", 0, 1, 0);
         Optional<Absorption> absorption =
                 page.table("absorption").map(table -> AbsorptionReader.read(table, density, folder));
@@ -125,15 +125,17 @@ final class IngredientReader {
         if (page.has("family"))
             throw page.refusal(
                     "family",
-                    "family is for a base; a " + part.word()
-                            + " says what it mixes into: families = [\"liquid\", \"gel\"].");
+                    "family is for a base, and here part = \"" + part.word()
+                            + "\"; say what it mixes into: families = [\"liquid\", \"gel\"].");
         return EnumSet.copyOf(page.words("families", Family.class));
     }
 
     private List<BlendPart> blend(Part part) {
         if (!page.has("blend")) return List.of();
         if (part != Part.BASE)
-            throw page.refusal("blend", "Only a base can be a blend; this ingredient is a " + part.word() + ".");
+            throw page.refusal(
+                    "blend",
+                    "Only a base can be a blend, and here part = \"" + part.word() + "\". Take the blend out.");
         for (String own : new String[] {"density_g_per_ml", "absorption", "scattering", "index"})
             if (page.has(own))
                 throw page.refusal(

@@ -69,7 +69,9 @@ public final class RecipeReader {
         if (base.part() != Part.BASE)
             throw page.refusal(
                     "base",
-                    "\"" + base.id() + "\" is a " + base.part().word() + ", and the base of a recipe must be one of "
+                    "\"" + base.id() + "\" is no base (its file says part = \""
+                            + base.part().word()
+                            + "\"); the base of a recipe must be one of "
                             + shelf.ingredients().stream()
                                     .filter(i -> i.part() == Part.BASE)
                                     .map(Ingredient::id)

@@ -16,8 +16,8 @@ import org.hazewright.brief.Tissue;
  * <p>At a wavelength of both, each quantity that the target names takes the place of the tissue's; the other stays.
  */
 final class TargetReader {
-    private static final double LEAST_NM = 100;
-    private static final double MOST_NM = 20_000;
+    static final double LEAST_NM = 100;
+    static final double MOST_NM = 20_000;
 
     private TargetReader() {}
 

@@ -10,6 +10,7 @@ import java.nio.file.AccessDeniedException;
 import java.nio.file.Files;
 import java.nio.file.NoSuchFileException;
 import java.nio.file.Path;
+import java.nio.file.attribute.BasicFileAttributes;
 import java.security.MessageDigest;
 import java.security.NoSuchAlgorithmException;
 import java.util.HexFormat;
@@ -39,12 +40,14 @@ record TextFile(String path, String text, byte[] bytes) {
     }
 
     private static byte[] bytes(Path file, Place whole) {
-        if (Files.isDirectory(file)) throw whole.refusal("This is a folder; name a file in it.");
-        if (Files.notExists(file)) throw whole.refusal(missing(file));
-        if (!Files.isRegularFile(file))
-            throw whole.refusal("This is not an ordinary file (a device, a pipe or a broken link); name a text file.");
-        try (InputStream in = Files.newInputStream(file)) {
-            return in.readNBytes(MOST_BYTES + 1);
+        try {
+            BasicFileAttributes is = Files.readAttributes(file, BasicFileAttributes.class);
+            if (is.isDirectory()) throw whole.refusal("This is a folder; name a file in it.");
+            if (!is.isRegularFile())
+                throw whole.refusal("This is a device or a pipe and not an ordinary file; name a text file.");
+            try (InputStream in = Files.newInputStream(file)) {
+                return in.readNBytes(MOST_BYTES + 1);
+            }
         } catch (AccessDeniedException e) {
             throw whole.refusal("The file may not be read; its permissions forbid it. Ask its owner, or copy it.");
         } catch (NoSuchFileException e) {
@@ -72,15 +75,19 @@ record TextFile(String path, String text, byte[] bytes) {
     }
 
     private static String decoded(byte[] bytes, String shown) {
+        String text = new String(bytes, StandardCharsets.UTF_8);
+        if (text.indexOf('\uFFFD') >= 0) refuseOtherEncodings(bytes, shown); // only then is something perhaps not UTF-8
+        return text.startsWith("\uFEFF") ? text.substring(1) : text;
+    }
+
+    private static void refuseOtherEncodings(byte[] bytes, String shown) {
         ByteBuffer in = ByteBuffer.wrap(bytes);
         try {
-            String text = StandardCharsets.UTF_8
+            StandardCharsets.UTF_8
                     .newDecoder()
                     .onMalformedInput(CodingErrorAction.REPORT)
                     .onUnmappableCharacter(CodingErrorAction.REPORT)
-                    .decode(in)
-                    .toString();
-            return text.startsWith("\uFEFF") ? text.substring(1) : text;
+                    .decode(in);
         } catch (CharacterCodingException e) {
             // The decoder stops with the buffer at the first byte that is not UTF-8.
             String before = new String(bytes, 0, in.position(), StandardCharsets.UTF_8);

@@ -84,7 +84,7 @@ final class TomlPage {
 
     /** Refuses a file whose {@code format} is missing or not 1. */
     void requireFormat() {
-        if (!has("format")) throw at.refusal("The key format is missing; add the line: format = 1");
+        if (!has("format")) throw at.refusal("The key format is missing; add format = 1 as the first line.");
         if (!Long.valueOf(1).equals(entries.get("format").value()))
             throw refusal(
                     "format",

@@ -11,7 +11,7 @@ final class TomlText {
         if (!Double.isFinite(v)) throw new IllegalArgumentException("Not a finite number: " + v);
         double size = Math.abs(v);
         if (v != 0 && (size < 1e-6 || size >= 1e9)) return Double.toString(v).replace('E', 'e');
-        String plain = new BigDecimal(Double.toString(v)).toPlainString();
+        String plain = new BigDecimal(Double.toString(v)).stripTrailingZeros().toPlainString();
         return plain.contains(".") ? plain : plain + ".0";
     }
 

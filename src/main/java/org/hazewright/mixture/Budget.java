@@ -11,6 +11,11 @@ import org.hazewright.shelf.Uncertainty;
  * <p>Standard uncertainties in 1/cm at each wavelength asked for; {@link #causes} sum in squares to them.
  */
 public final class Budget {
+    /** Relative standard uncertainties that every mixture has: of each density, and of the finished volume. */
+    public static final double DENSITY = Unknowns.DENSITY;
+
+    public static final double VOLUME = Unknowns.VOLUME;
+
     private final double[] wavelengthsNm;
     private final List<Cause> causes;
 

@@ -5,7 +5,7 @@ import java.util.Locale;
 /**
  * Where the diffusion model may be trusted, in numbers, with the reason in words.
  *
- * <p>Found by comparison with photon packets (2e6 each) in media of µs'/µa 5 to 200, g 0.5 and 0.9, n 1.33 and 1.40,
+ * <p>Found by comparison with photon packets (0.3 to 2 million each) in media of µs'/µa 5 to 200, g 0.5 and 0.9, n 1.33 and 1.40,
  * semi-infinite and slabs of 5 to 20 transport lengths 1/(µa + µs'): inside, steady reflectance in the default convention is
  * within {@link #STEADY_ERROR} of theirs and the mean time of flight within {@link #TIME_ERROR}; the variance within 0.12. Nearer
  * the beam and in darker media the light still remembers its direction. The flux form starts later. Far away the small error

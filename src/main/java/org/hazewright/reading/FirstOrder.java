@@ -1,5 +1,6 @@
 package org.hazewright.reading;
 
+import java.util.function.Function;
 import java.util.function.ToDoubleFunction;
 
 /**
@@ -15,21 +16,36 @@ final class FirstOrder {
     private FirstOrder() {}
 
     static Double u(Medium medium, Spread spread, ToDoubleFunction<Medium> quantity) {
+        double[] u = curve(medium, spread, m -> new double[] {quantity.applyAsDouble(m)});
+        return u == null || !Double.isFinite(u[0]) ? null : (Double) u[0];
+    }
+
+    /** The same for every value of a curve. */
+    static double[] curve(Medium medium, Spread spread, Function<Medium, double[]> quantity) {
         if (spread == null) return null;
-        double a = spread.uMuaPerCm() == 0 ? 0 : spread.uMuaPerCm() * slope(medium, true, quantity);
-        double s = spread.uMuspPerCm() == 0 ? 0 : spread.uMuspPerCm() * slope(medium, false, quantity);
-        double u = Math.hypot(a, s);
-        return Double.isFinite(u) ? u : null;
+        double[] a = spread.uMuaPerCm() == 0 ? null : slopes(medium, true, quantity);
+        double[] s = spread.uMuspPerCm() == 0 ? null : slopes(medium, false, quantity);
+        int n = a != null ? a.length : s != null ? s.length : quantity.apply(medium).length;
+        double[] u = new double[n];
+        for (int i = 0; i < n; i++)
+            u[i] = Math.hypot(a == null ? 0 : spread.uMuaPerCm() * a[i], s == null ? 0 : spread.uMuspPerCm() * s[i]);
+        return u;
     }
 
     /** Slope per 1/cm of µa ({@code absorption}) or of µs'. */
     static double slope(Medium medium, boolean absorption, ToDoubleFunction<Medium> quantity) {
+        return slopes(medium, absorption, m -> new double[] {quantity.applyAsDouble(m)})[0];
+    }
+
+    private static double[] slopes(Medium medium, boolean absorption, Function<Medium, double[]> quantity) {
         double at = absorption ? medium.muaPerCm() : medium.muspPerCm();
         double h = STEP * Math.max(at, LEAST_PER_CM);
         double low = Math.max(0, at - h);
-        Medium above = absorption ? medium.withMua(at + h) : medium.withMusp(at + h);
-        Medium below = absorption ? medium.withMua(low) : medium.withMusp(low);
-        return (quantity.applyAsDouble(above) - quantity.applyAsDouble(below)) / (at + h - low);
+        double[] above = quantity.apply(absorption ? medium.withMua(at + h) : medium.withMusp(at + h));
+        double[] below = quantity.apply(absorption ? medium.withMua(low) : medium.withMusp(low));
+        double[] slope = new double[above.length];
+        for (int i = 0; i < slope.length; i++) slope[i] = (above[i] - below[i]) / (at + h - low);
+        return slope;
     }
 
     /** √(a² + b²); a is null where nothing is known, b is 0 or NaN where there is none. */

@@ -43,7 +43,7 @@ final class FrequencyReadings {
                     models.inside(i),
                     models.note(i));
         }
-        apparent(models, answers, waves);
+        apparent(models, answers, waves, spread);
         return answers.all();
     }
 
@@ -66,13 +66,13 @@ final class FrequencyReadings {
         double omega = 2 * Math.PI * 1e-6 * models.setUp.modulationMhz();
         double re = 0;
         double im = 0;
-        double sum = 0;
         double[] h = ring.histogram();
         for (int k = 0; k < h.length; k++) {
             re += h[k] * Math.cos(omega * times.at(k));
             im += h[k] * Math.sin(omega * times.at(k));
-            sum += h[k];
         }
+        // all light of the ring, also what comes after the histogram's end
+        double sum = ring.perMm2() / times.stepPs();
         double lag = Math.atan2(im, re);
         double expected = omega * ring.meanTimePs();
         lag += 2 * Math.PI * Math.rint((Math.min(expected, 2 * Math.PI * 1e3) - lag) / (2 * Math.PI));
@@ -94,24 +94,23 @@ final class FrequencyReadings {
                 Math.toDegrees(Math.sqrt(uLag) / a));
     }
 
-    private static void apparent(DistanceModels models, Answers answers, Wave[] waves) {
-        SetUp setUp = models.setUp;
+    private static void apparent(DistanceModels models, Answers answers, Wave[] waves, Spread spread) {
         Medium medium = models.medium;
-        Apparent.Known known = new Apparent.Known(
-                medium.n(), medium.g(), setUp.outsideIndex(), setUp.thicknessMm(), setUp.convention());
         boolean inside = true;
-        for (int i = 0; i < waves.length; i++) inside &= models.inside(i);
+        boolean counted = false;
+        for (int i = 0; i < waves.length; i++) {
+            inside &= models.inside(i);
+            counted |= models.byPackets(i);
+        }
+        Double mm = waves.length == 1 ? (Double) models.distanceMm(0) : null;
         try {
-            Apparent seen = waves.length == 1
-                    ? Apparent.frequency(
-                            models.distanceMm(0), waves[0].modulation, waves[0].phaseDeg, setUp.modulationMhz(), known)
-                    : slopes(models, waves, known);
-            Double mm = waves.length == 1 ? (Double) models.distanceMm(0) : null;
+            Apparent seen = analysed(models, waves);
+            double[] u = counted ? null : FirstOrder.curve(medium, spread, m -> analysed(models, m));
             answers.add(
                     mm,
                     Quantity.APPARENT_MUA_PER_CM,
                     seen.muaPerCm(),
-                    null,
+                    u == null ? null : (Double) u[0],
                     seen.method(),
                     inside,
                     trueValue("µa", medium.muaPerCm()));
@@ -119,16 +118,33 @@ final class FrequencyReadings {
                     mm,
                     Quantity.APPARENT_MUSP_PER_CM,
                     seen.muspPerCm(),
-                    null,
+                    u == null ? null : (Double) u[1],
                     seen.method(),
                     inside,
                     trueValue("µs'", medium.muspPerCm()));
         } catch (Refusal e) {
-            answers.add(null, Quantity.APPARENT_MUA_PER_CM, null, null, "none", false, e.getMessage());
+            answers.add(mm, Quantity.APPARENT_MUA_PER_CM, null, null, "none", false, e.getMessage());
         }
     }
 
-    private static Apparent slopes(DistanceModels models, Wave[] waves, Apparent.Known known) {
+    /** What the same analysis reports on a medium that is a little different. */
+    private static double[] analysed(DistanceModels models, Medium medium) {
+        int n = models.setUp.distancesMm().size();
+        Wave[] waves = new Wave[n];
+        for (int i = 0; i < n; i++) waves[i] = diffused(models, medium, models.distanceMm(i));
+        Apparent seen = analysed(models, waves);
+        return new double[] {seen.muaPerCm(), seen.muspPerCm()};
+    }
+
+    /** One distance: a fit of modulation and phase; more: their slopes. */
+    private static Apparent analysed(DistanceModels models, Wave[] waves) {
+        SetUp setUp = models.setUp;
+        Medium medium = models.medium;
+        Apparent.Known known = new Apparent.Known(
+                medium.n(), medium.g(), setUp.outsideIndex(), setUp.thicknessMm(), setUp.convention());
+        double mhz = setUp.modulationMhz();
+        if (waves.length == 1)
+            return Apparent.frequency(models.distanceMm(0), waves[0].modulation, waves[0].phaseDeg, mhz, known);
         double[] mm = new double[waves.length];
         double[] a = new double[waves.length];
         double[] p = new double[waves.length];
@@ -137,7 +153,7 @@ final class FrequencyReadings {
             a[i] = waves[i].amplitude;
             p[i] = waves[i].phaseDeg;
         }
-        return Apparent.slopes(mm, a, p, models.setUp.modulationMhz(), known);
+        return Apparent.slopes(mm, a, p, mhz, known);
     }
 
     static String trueValue(String what, double perCm) {

@@ -7,6 +7,7 @@ import org.hazewright.optics.Refusal;
  *
  * <p>Frequency in MHz, 0 to 1e5; ρ in mm. The lag is in degrees and unwrapped: it grows from 0 at 0 MHz without jumps.
  * Haskell et al., J. Opt. Soc. Am. A 11, 2727 (1994), with the complex µeff.
+ * Not for several threads at once.
  */
 public final class FrequencySignal {
     private static final double RADIANS_PER_PS = 2 * Math.PI * 1e-6;
@@ -14,6 +15,8 @@ public final class FrequencySignal {
     private final double megahertz;
     private final PointSignal steady;
     private final PointSignal modulated;
+    private double lastRhoMm = Double.NaN;
+    private Side lastSide;
 
     public FrequencySignal(Diffusion diffusion, double megahertz) {
         this.diffusion = diffusion;
@@ -24,7 +27,7 @@ public final class FrequencySignal {
 
     /** Amplitude per mm² for unit amplitude of the source. */
     public double amplitudePerMm2(double rhoMm, Side side) {
-        modulated.at(rhoMm, side);
+        modulatedAt(rhoMm, side);
         return Math.hypot(modulated.re, modulated.im);
     }
 
@@ -37,20 +40,27 @@ public final class FrequencySignal {
 
     /** Phase lag in degrees. */
     public double phaseDeg(double rhoMm, Side side) {
-        modulated.at(rhoMm, side);
+        modulatedAt(rhoMm, side);
         double lag = -Math.atan2(modulated.im, modulated.re);
         return Math.toDegrees(unwrapped(lag, rhoMm, side));
     }
 
+    /** Amplitude and phase at one place are as a rule asked for together. */
+    private void modulatedAt(double rhoMm, Side side) {
+        if (rhoMm == lastRhoMm && side == lastSide) return;
+        modulated.at(rhoMm, side);
+        lastRhoMm = rhoMm;
+        lastSide = side;
+    }
+
     /** Goes up from 0 MHz in steps over which the phase cannot turn by half a circle, counting whole turns. */
     private double unwrapped(double lag, double rho, Side side) {
-        // the lag never exceeds that of plane waves over the longest dominant path, |κ|(ρ + depth), with some room
+        // the lag is at most that of a plane wave along the whole way, Im κ (ρ + depth + thickness)
         double omega = RADIANS_PER_PS * megahertz;
-        double mua = diffusion.medium().muaPerMm();
-        double k = Math.sqrt(Math.hypot(mua, omega / diffusion.medium().speedMmPerPs()) / diffusion.constantMm);
         double path = rho + diffusion.sourceDepthMm + (diffusion.slab() ? diffusion.thicknessMm() : 0);
-        int steps = (int) Math.ceil(k * path);
-        if (steps <= 2) return lag;
+        double most = modulated.lagPerMm() * path;
+        if (most < 3) return lag;
+        int steps = (int) Math.ceil(most);
         double before = 0;
         double turns = 0;
         for (int i = 1; i < steps; i++) {

@@ -1,7 +1,9 @@
 package org.hazewright.reading;
 
 import java.util.ArrayList;
+import java.util.HashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.concurrent.ExecutionException;
 import java.util.concurrent.ExecutorService;
 import java.util.concurrent.Executors;
@@ -95,7 +97,7 @@ public final class PhotonPackets {
         final PacketTally.Sums sums;
         private final PacketRun run;
         private final long blocks;
-        private final java.util.Map<Long, PacketBlock> waiting = new java.util.HashMap<>();
+        private final Map<Long, PacketBlock> waiting = new HashMap<>();
         private long nextToAdd;
 
         Merger(PacketTally.Sums sums, PacketRun run, long blocks) {
@@ -107,7 +109,7 @@ public final class PhotonPackets {
         synchronized void take(long number, PacketBlock block) {
             waiting.put(number, block);
             for (PacketBlock b; (b = waiting.remove(nextToAdd)) != null; nextToAdd++) sums.add(b);
-            run.progress().accept((double) (nextToAdd) / blocks);
+            run.progress().accept((double) nextToAdd / blocks);
         }
     }
 }

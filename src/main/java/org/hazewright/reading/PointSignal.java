@@ -38,6 +38,11 @@ final class PointSignal {
         kIm = modulus * Math.sin(half);
     }
 
+    /** Im κ: phase lag of a plane wave, rad/mm. */
+    double lagPerMm() {
+        return kIm;
+    }
+
     /** Leaves the complex signal in {@link #re} and {@link #im}, time going as exp(+iωt). */
     void at(double rhoMm, Side side) {
         Refusal.notNegative("Distance in mm", rhoMm);
@@ -51,9 +56,15 @@ final class PointSignal {
         im *= d.strength;
     }
 
+    /**
+     * Images are quicker where absorption ends their sum early, and lose as many digits as the slab's slowest wave falls faster
+     * than the direct one; waves need a distance to fall over.
+     */
     private boolean acrossIsBetter(double rho) {
         double whole = d.extrapolatedThicknessMm();
-        return rho >= 0.5 * whole || (kRe * whole < 0.5 && rho >= 0.05 * whole);
+        if (kRe * whole < 0.5 && rho >= 0.05 * whole) return true;
+        double lost = (Math.hypot(kRe, Math.PI / whole) - kRe) * rho;
+        return rho >= 0.5 * whole && (kRe * whole < 2 || lost > 7);
     }
 
     private void images(double rho, Side side) {

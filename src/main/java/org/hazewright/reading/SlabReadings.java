@@ -70,9 +70,7 @@ final class SlabReadings {
                 answers.add(null, quantity, null, null, "packets", false, "The run of packets was stopped.");
                 return;
             }
-            double error = quantity == Quantity.DIFFUSE_REFLECTANCE || quantity == Quantity.TOTAL_REFLECTANCE
-                    ? tally.uTotalReflectance()
-                    : quantity == Quantity.SPECULAR_REFLECTANCE ? 0 : tally.uTotalTransmittance();
+            double error = countingError(quantity, tally);
             // packets would need many more to show a slope; transport shows it
             Double u = FirstOrder.u(medium, spread, m -> share.applyAsDouble(transport(setUp, m)));
             answers.add(
@@ -90,6 +88,17 @@ final class SlabReadings {
         };
         every(shares);
         return answers.all();
+    }
+
+    /** Between blocks for what is scattered; unscattered light is let through whole or not at all, a binomial. */
+    private static double countingError(Quantity quantity, PacketTally tally) {
+        double through = tally.light().unscatteredTransmittance();
+        return switch (quantity) {
+            case SPECULAR_REFLECTANCE -> 0;
+            case DIFFUSE_REFLECTANCE, TOTAL_REFLECTANCE -> tally.uTotalReflectance();
+            case UNSCATTERED_TRANSMITTANCE -> Math.sqrt(through * (1 - through) / tally.packets());
+            default -> tally.uTotalTransmittance();
+        };
     }
 
     private interface Shares {

@@ -46,8 +46,8 @@ final class SteadyReadings {
         }
         double mm = models.distanceMm(i);
         double here = new SteadySignal(models.diffusion).reflectancePerMm2(mm);
-        Double a = FirstOrder.slope(medium, true, m -> ln(models, m, mm));
-        Double s = FirstOrder.slope(medium, false, m -> ln(models, m, mm));
+        double a = FirstOrder.slope(medium, true, m -> ln(models, m, mm));
+        double s = FirstOrder.slope(medium, false, m -> ln(models, m, mm));
         return new Signal(here, a, s, 0);
     }
 

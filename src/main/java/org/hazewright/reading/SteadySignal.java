@@ -5,6 +5,7 @@ package org.hazewright.reading;
  *
  * <p>ρ in mm, 0 or above. Farrell, Patterson &amp; Wilson, Med. Phys. 19, 879 (1992); Kienle &amp; Patterson, J. Opt. Soc. Am. A
  * 14, 246 (1997); slab: Contini et al., Appl. Opt. 36, 4587 (1997). See {@link Convention} for which.
+ * Not for several threads at once.
  */
 public final class SteadySignal {
     private final PointSignal signal;

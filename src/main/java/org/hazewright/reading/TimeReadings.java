@@ -28,7 +28,9 @@ final class TimeReadings {
         SetUp setUp = models.setUp;
         Medium medium = models.medium;
         TimeCurve seen = models.byPackets(i) ? seen(setUp, counted(models, i)) : diffused(models, medium, mm);
-        double[] u = spread == null || models.byPackets(i) ? null : uncertain(models, mm, spread);
+        double[] u = models.byPackets(i)
+                ? null
+                : FirstOrder.curve(medium, spread, m -> diffused(models, m, mm).value());
         String unit = setUp.counts() == null ? "1/(mm2 ps)" : "counts";
         Reading.Curve curve = new Reading.Curve("ps", setUp.time().timesPs(), unit, seen.value(), u);
         answers.curve(mm, Quantity.TIME_CURVE, curve, models.model(i), models.inside(i), models.note(i));
@@ -38,11 +40,33 @@ final class TimeReadings {
             Apparent fit = Apparent.curve(mm, seen, setUp.response(), known);
             String mua = FrequencyReadings.trueValue("µa", medium.muaPerCm());
             String musp = FrequencyReadings.trueValue("µs'", medium.muspPerCm());
-            answers.add(mm, Quantity.APPARENT_MUA_PER_CM, fit.muaPerCm(), null, fit.method(), models.inside(i), mua);
-            answers.add(mm, Quantity.APPARENT_MUSP_PER_CM, fit.muspPerCm(), null, fit.method(), models.inside(i), musp);
+            double[] uFit =
+                    models.byPackets(i) ? null : FirstOrder.curve(medium, spread, m -> fitted(models, known, m, mm));
+            answers.add(
+                    mm,
+                    Quantity.APPARENT_MUA_PER_CM,
+                    fit.muaPerCm(),
+                    uFit == null ? null : (Double) uFit[0],
+                    fit.method(),
+                    models.inside(i),
+                    mua);
+            answers.add(
+                    mm,
+                    Quantity.APPARENT_MUSP_PER_CM,
+                    fit.muspPerCm(),
+                    uFit == null ? null : (Double) uFit[1],
+                    fit.method(),
+                    models.inside(i),
+                    musp);
         } catch (Refusal e) {
             answers.add(mm, Quantity.APPARENT_MUA_PER_CM, null, null, "none", false, e.getMessage());
         }
+    }
+
+    /** What the fit reports when the medium is a little different and the analysis is the same. */
+    private static double[] fitted(DistanceModels models, Apparent.Known known, Medium medium, double mm) {
+        Apparent fit = Apparent.curve(mm, diffused(models, medium, mm), models.setUp.response(), known);
+        return new double[] {fit.muaPerCm(), fit.muspPerCm()};
     }
 
     private static TimeCurve seen(SetUp setUp, DoubleUnaryOperator ideal) {
@@ -65,26 +89,6 @@ final class TimeReadings {
         };
     }
 
-    private static double[] uncertain(DistanceModels models, double mm, Spread spread) {
-        Medium medium = models.medium;
-        int n = models.setUp.time().size();
-        double[] u = new double[n];
-        for (int k = 0; k < 2; k++) {
-            boolean absorption = k == 0;
-            double by = absorption ? spread.uMuaPerCm() : spread.uMuspPerCm();
-            if (by == 0) continue;
-            double at = absorption ? medium.muaPerCm() : medium.muspPerCm();
-            double h = 1e-3 * Math.max(at, 1e-3);
-            double low = Math.max(0, at - h);
-            Medium above = absorption ? medium.withMua(at + h) : medium.withMusp(at + h);
-            Medium below = absorption ? medium.withMua(low) : medium.withMusp(low);
-            double[] a = diffused(models, above, mm).value();
-            double[] b = diffused(models, below, mm).value();
-            for (int j = 0; j < n; j++) u[j] = Math.hypot(u[j], by * (a[j] - b[j]) / (at + h - low));
-        }
-        return u;
-    }
-
     private static void moments(DistanceModels models, Answers answers, int i, Spread spread) {
         if (models.silent(i)) return;
         double mm = models.distanceMm(i);
@@ -103,7 +107,7 @@ final class TimeReadings {
                 ? null
                 : String.format(
                         Locale.ROOT,
-                        "Includes the response's own mean of %.4g ps and variance of %.4g ps².",
+                        "Includes the response's own mean of %.1f ps and variance of %.0f ps².",
                         response.meanPs(),
                         response.variancePs2());
         String note = join(models.note(i), own);

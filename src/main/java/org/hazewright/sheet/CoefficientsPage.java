@@ -33,7 +33,7 @@ final class CoefficientsPage {
     private static final int SUBSTANCE = 2;
     private static final int DILUENT = 3;
     private static final int SHARE = 4;
-    private static final int WEIGHINGS_ROW = 5;
+    private static final int WEIGHINGS_ROW = 6;
 
     private final Page page;
     private final Recipe recipe;
@@ -76,7 +76,10 @@ final class CoefficientsPage {
         int[] widths = new int[muspColumn + nm.length];
         java.util.Arrays.fill(widths, 92);
         widths[ID] = 170;
-        widths[NAME] = 200;
+        widths[NAME] = 270;
+        widths[CONCENTRATION] = 112;
+        for (int k = 0; k < recipe.stocks().size(); k++)
+            widths[STOCKS + k] = Math.max(104, 7 * recipe.stocks().get(k).id().length() + 14);
         page.columns(widths);
         page.text(0, 0, "Coefficients", Face.TITLE);
         page.height(0, 24);

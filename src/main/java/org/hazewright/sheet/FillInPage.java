@@ -64,7 +64,7 @@ final class FillInPage {
     }
 
     void write() {
-        page.columns(46, 236, 100, 88, 96, 88, 88, 136, 104, 62, 220, 20);
+        page.columns(46, 236, 100, 88, 96, 88, 88, 160, 104, 62, 212, 20);
         page.sheet.setColumnHidden(FillInPlan.KEY, true);
         heading();
         weighings();

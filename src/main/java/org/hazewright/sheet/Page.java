@@ -2,14 +2,19 @@ package org.hazewright.sheet;
 
 import org.apache.poi.ss.usermodel.Row;
 import org.apache.poi.ss.util.CellRangeAddress;
+import org.apache.poi.ss.util.CellReference;
 import org.apache.poi.xssf.usermodel.XSSFCell;
 import org.apache.poi.xssf.usermodel.XSSFRichTextString;
+import org.apache.poi.xssf.usermodel.XSSFRow;
 import org.apache.poi.xssf.usermodel.XSSFSheet;
 
 /** One sheet of the workbook while it is written: cells by row and column (from 0), each with its face. */
 final class Page {
     /** Points for one line of type, over the size of the type. */
     private static final double LEADING = 1.32;
+
+    /** Highest row that spreadsheet programs accept. */
+    private static final double TALLEST_PT = 409;
 
     final XSSFSheet sheet;
     final Looks looks;
@@ -77,9 +82,9 @@ final class Page {
     /** Makes a row at least high enough for a text over these columns. */
     void roomFor(int row, String text, Face face, int from, int to) {
         int lines = TextLines.count(text, face.points(), face.bold(), widthPt(from, to));
-        double needed = lines * face.points() * LEADING + 2.5;
-        Row r = sheet.getRow(row);
-        boolean set = ((org.apache.poi.xssf.usermodel.XSSFRow) r).getCTRow().getCustomHeight();
+        double needed = Math.min(TALLEST_PT, lines * face.points() * LEADING + 2.5);
+        XSSFRow r = sheet.getRow(row);
+        boolean set = r.getCTRow().getCustomHeight();
         if (!set || r.getHeightInPoints() < needed) r.setHeightInPoints((float) (Math.ceil(needed * 4) / 4));
     }
 
@@ -102,13 +107,11 @@ final class Page {
 
     /** Address of a cell as formulas on other sheets write it: 'Fill in'!$D$7. */
     String address(int row, int column) {
-        return quotedName() + "!" + new org.apache.poi.ss.util.CellReference(row, column, true, true).formatAsString();
+        return quotedName() + "!" + new CellReference(row, column, true, true).formatAsString();
     }
 
     String address(int row1, int column1, int row2, int column2) {
-        return address(row1, column1)
-                + ":"
-                + new org.apache.poi.ss.util.CellReference(row2, column2, true, true).formatAsString();
+        return address(row1, column1) + ":" + new CellReference(row2, column2, true, true).formatAsString();
     }
 
     private String quotedName() {

@@ -58,6 +58,7 @@ final class RecipePage {
         weighOut();
         targets();
         charts(spectra);
+        Sentences.couldMove(answer).ifPresent(s -> sentences("What could move it", List.of(s)));
         sentences("What holds it back", answer.limits());
         mind();
         sources();
@@ -225,25 +226,13 @@ final class RecipePage {
         warnings.forEach(w -> first.add(w.text()));
         sentences("Mind", first);
         if (first.isEmpty()) section("Mind");
-        cautionsByNames()
-                .forEach((names, cautions) ->
-                        page.sentence(row++, 0, LAST, names + ": " + String.join(" ", cautions), Face.TEXT.points(8)));
-        page.sentence(row++, 0, LAST, String.join(" ", Cautions.GENERAL), Face.QUIET.points(7.5));
-    }
-
-    /** Each caution once, with the names of all ingredients that it holds for. */
-    private Map<String, List<String>> cautionsByNames() {
         Set<Ingredient> all = new LinkedHashSet<>();
         all.add(answer.recipe().base());
         all.addAll(answer.mixture().massesG().keySet());
-        Map<String, List<String>> names = new LinkedHashMap<>();
-        for (Ingredient i : all)
-            for (String c : i.cautions())
-                names.computeIfAbsent(c, k -> new ArrayList<>()).add(i.name());
-        Map<String, List<String>> cautions = new LinkedHashMap<>();
-        names.forEach((caution, of) -> cautions.computeIfAbsent(String.join("; ", of), k -> new ArrayList<>())
-                .add(caution));
-        return cautions;
+        Sentences.cautionsByNames(all)
+                .forEach((names, cautions) ->
+                        page.sentence(row++, 0, LAST, names + ": " + String.join(" ", cautions), Face.TEXT.points(8)));
+        page.sentence(row++, 0, LAST, String.join(" ", Cautions.GENERAL), Face.QUIET.points(7.5));
     }
 
     private void sources() {

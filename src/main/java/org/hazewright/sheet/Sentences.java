@@ -2,9 +2,14 @@ package org.hazewright.sheet;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Collection;
+import java.util.LinkedHashMap;
+import java.util.Map;
 import java.util.Optional;
+import java.util.stream.Collectors;
 import org.hazewright.bench.Answer;
 import org.hazewright.bench.Grams;
+import org.hazewright.bench.Outlook;
 import org.hazewright.bench.Weighing;
 import org.hazewright.brief.Brief;
 import org.hazewright.optics.Figures;
@@ -27,16 +32,30 @@ final class Sentences {
 
     /** Whether it meets the brief, and if not how near it comes. */
     static String verdict(Answer answer) {
-        if (answer.meets()) return "The recipe meets every tolerance.";
+        if (answer.meets())
+            return "As planned, every target lies inside its tolerance; the worst miss is "
+                    + Figures.fixed(answer.worstMiss(), 2) + " half-widths.";
         long outside = answer.predicted().stream().filter(p -> !p.inside()).count();
         String how = outside + " of " + answer.predicted().size() + " targets " + (outside == 1 ? "lies" : "lie")
-                + " outside, the worst by " + Figures.fixed(answer.worstMiss(), 2) + " half-widths of its tolerance";
+                + " outside; the worst miss is " + Figures.fixed(answer.worstMiss(), 2) + " half-widths";
         double best = answer.bestPossibleWorstMiss();
         if (best > 1)
             return "No recipe from this shelf meets every tolerance; this is the closest. " + how
                     + "; no recipe can come below " + Figures.fixed(best, 2) + ".";
         return "The rounded recipe does not meet every tolerance: " + how + ". Before rounding to the balance "
                 + Figures.fixed(best, 2) + " can be reached.";
+    }
+
+    /** "ink-demo absorption 62 %, weighing ink-demo 9 %, …": shares of the variance, the first five of 2 % and more. */
+    static Optional<String> couldMove(Answer answer) {
+        Outlook outlook =
+                new Outlook(answer.brief(), answer.recipe(), answer.predicted(), answer.budget(), answer.chance());
+        String shares = outlook.causes().stream()
+                .filter(c -> c.share() >= 0.02)
+                .limit(5)
+                .map(c -> c.name() + " " + Math.round(100 * c.share()) + " %")
+                .collect(Collectors.joining(", "));
+        return shares.isEmpty() ? Optional.empty() : Optional.of(shares + " of the variance.");
     }
 
     /** Digits after the point that show both the tolerance and the uncertainty of a prediction. */
@@ -94,5 +113,17 @@ final class Sentences {
 
     static String lot(Optional<String> lot) {
         return lot.map(l -> "lot " + l).orElse("");
+    }
+
+    /** Each caution of the ingredients' files once, with the names of all that it holds for. */
+    static Map<String, List<String>> cautionsByNames(Collection<Ingredient> all) {
+        Map<String, List<String>> names = new LinkedHashMap<>();
+        for (Ingredient i : all)
+            for (String c : i.cautions())
+                names.computeIfAbsent(c, k -> new ArrayList<>()).add(i.name());
+        Map<String, List<String>> cautions = new LinkedHashMap<>();
+        names.forEach((caution, of) -> cautions.computeIfAbsent(String.join("; ", of), k -> new ArrayList<>())
+                .add(caution));
+        return cautions;
     }
 }

@@ -1,5 +1,6 @@
 package org.hazewright.sheet;
 
+import java.util.Collection;
 import java.util.LinkedHashMap;
 import java.util.Map;
 import org.hazewright.bench.Answer;
@@ -18,6 +19,10 @@ final class SourcesPage {
     private SourcesPage() {}
 
     static void write(Page page, Answer answer) {
+        write(page, answer.recipe().base(), answer.mixture().massesG().keySet());
+    }
+
+    static void write(Page page, Ingredient base, Collection<Ingredient> ingredients) {
         page.columns(180, 220, 90, 80, 88, 88, 460);
         page.text(0, 0, "Sources", Face.TITLE);
         page.height(0, 24);
@@ -36,9 +41,8 @@ final class SourcesPage {
         Map<String, Material> materials = new LinkedHashMap<>();
         Face line = Face.WRAPPED.rule();
         Map<String, Ingredient> all = new LinkedHashMap<>();
-        if (answer.recipe().base().isBlend())
-            all.put(answer.recipe().base().id(), answer.recipe().base());
-        answer.mixture().massesG().keySet().forEach(i -> all.put(i.id(), i));
+        if (base.isBlend()) all.put(base.id(), base);
+        ingredients.forEach(i -> all.put(i.id(), i));
         for (Ingredient i : all.values()) {
             page.text(row, 0, i.id(), line);
             page.text(row, 1, i.name(), line);

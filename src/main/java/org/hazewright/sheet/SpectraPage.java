@@ -47,7 +47,7 @@ final class SpectraPage {
         targets(Quantity.MUA, 8, mua);
         targets(Quantity.MUSP, 12, musp);
         page.sheet.createFreezePane(0, FIRST);
-        PrintSetup.pages(page.sheet, true, HEAD);
+        PrintSetup.onePage(page.sheet, false);
     }
 
     private void three(int row, int column, double value, double u, Face face) {

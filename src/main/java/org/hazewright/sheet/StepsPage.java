@@ -18,26 +18,55 @@ final class StepsPage {
     private static final int MIND = 3;
     private static final int DONE = 4;
 
-    private StepsPage() {}
-
     static void write(Page page, Answer answer, List<Step> steps, List<Weighing> weighings) {
+        StepsPage sheet = new StepsPage(page, answer.brief().balance(), weighings);
+        sheet.heading("Steps", answer.brief().title() + " · " + Sentences.summary(answer));
+        sheet.steps(steps);
+        sheet.print();
+    }
+
+    private final Page page;
+    private final Balance balance;
+    private final List<Weighing> weighings;
+    private int row;
+    private int number = 1;
+
+    /** {@code weighings} are those that the steps number; empty when they have no numbers. */
+    StepsPage(Page page, Balance balance, List<Weighing> weighings) {
+        this.page = page;
+        this.balance = balance;
+        this.weighings = weighings;
+    }
+
+    void heading(String title, String summary) {
         page.columns(36, 290, 92, 250, 50);
-        page.text(0, 0, "Steps", Face.TITLE);
+        page.text(0, 0, title, Face.TITLE);
         page.height(0, 24);
-        page.sentence(1, 0, DONE, answer.brief().title() + " · " + Sentences.summary(answer), Face.QUIET);
+        page.sentence(1, 0, DONE, summary, Face.QUIET);
         String[] heads = {"no", "do", "at, for", "mind", "done"};
-        for (int c = 0; c < heads.length; c++) page.text(2, c, heads[c], Face.HEAD);
-        int row = 3;
+        for (int c = 0; c < heads.length; c++) page.text(2, c, heads[c], c == MIND ? Face.HEAD.indent() : Face.HEAD);
+        row = 3;
+    }
+
+    /** A heading of its own over steps that follow. */
+    void part(String title) {
+        page.text(row, 0, title, Face.SECTION.points(12));
+        page.height(row++, 26);
+    }
+
+    void steps(List<Step> steps) {
         Step.Stage stage = null;
-        int number = 1;
         for (Step s : steps) {
             if (s.stage() != stage) {
                 stage = s.stage();
                 page.text(row, 0, stage.heading(), Face.SECTION);
                 page.height(row++, 20);
             }
-            step(page, row++, number++, s, weighings, answer.brief().balance());
+            step(page, row++, number++, s, weighings, balance);
         }
+    }
+
+    void print() {
         page.sheet.createFreezePane(0, 3);
         page.sheet.getWorkbook().setPrintArea(page.sheet.getWorkbook().getSheetIndex(page.sheet), 0, DONE, 0, row - 1);
         PrintSetup.pages(page.sheet, false, 2);
@@ -55,7 +84,7 @@ final class StepsPage {
         List<String> mind = new ArrayList<>(s.handling());
         s.cautions().forEach(c -> mind.add("Caution: " + c));
         String words = String.join("\n", mind);
-        page.text(row, MIND, words, SMALL);
+        page.text(row, MIND, words, SMALL.indent());
         page.cell(row, DONE, LINE.centred().fillIn());
         page.height(row, 16);
         page.roomFor(row, text, LINE, TEXT, TEXT);
@@ -65,7 +94,7 @@ final class StepsPage {
 
     private static String when(Step s, List<Weighing> weighings) {
         List<String> parts = new ArrayList<>();
-        s.weighing().ifPresent(w -> parts.add("weighing " + (weighings.indexOf(w) + 1)));
+        s.weighing().filter(weighings::contains).ifPresent(w -> parts.add("weighing " + (weighings.indexOf(w) + 1)));
         if (s.volumeMl().isPresent())
             parts.add("about " + Grams.plain(s.volumeMl().getAsDouble()) + " mL");
         if (s.temperatureC().isPresent()) parts.add(Grams.plain(s.temperatureC().getAsDouble()) + " °C");

@@ -1,5 +1,7 @@
 package org.hazewright.shelf;
 
+import java.util.Collections;
+import java.util.EnumSet;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -38,12 +40,12 @@ public record Ingredient(
         Optional<Lot> lot) {
 
     public Ingredient {
-        families = Set.copyOf(families);
         handling = List.copyOf(handling);
         conflicts = List.copyOf(conflicts);
         cautions = List.copyOf(cautions);
         blend = List.copyOf(blend);
         if (families.isEmpty()) throw new Refusal("Ingredient " + id + " names no family that it mixes into.");
+        families = Collections.unmodifiableSet(EnumSet.copyOf(families)); // in the order of the enum, run after run
         if (part == Part.BASE && families.size() != 1)
             throw new Refusal("Base " + id + " names " + families.size() + " families; a base is of one.");
         if (blend.isEmpty()) Refusal.positive("Density of " + id + " in g/mL", densityGPerMl);
@@ -73,5 +75,37 @@ public record Ingredient(
     /** The ingredient this is a lot of, or itself: two lots of one ingredient share it. */
     public String kind() {
         return lot.map(Lot::of).orElse(id);
+    }
+
+    /** The same thing, known otherwise. */
+    public Ingredient withUncertainty(Uncertainty other) {
+        return new Ingredient(
+                id,
+                name,
+                part,
+                families,
+                form,
+                densityGPerMl,
+                maxGPerMl,
+                pricePerG,
+                settles,
+                leastShare,
+                handling,
+                conflicts,
+                cautions,
+                source,
+                other,
+                absorption,
+                scattering,
+                index,
+                blend,
+                making,
+                lot);
+    }
+
+    /** By id alone: equal ingredients have equal ids, and maps are asked for ingredients all the time. */
+    @Override
+    public int hashCode() {
+        return id.hashCode();
     }
 }

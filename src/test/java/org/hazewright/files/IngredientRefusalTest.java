@@ -24,7 +24,7 @@ class IngredientRefusalTest {
                         SmallShelf.INK,
                         "families = [\"liquid\", \"gel\"]",
                         "▶family = \"gel\"",
-                        "says what it mixes into: families"),
+                        "say what it mixes into: families"),
                 of(SmallShelf.WATER, "family = \"liquid\"", "▶families = [\"liquid\"]", "family = \"liquid\""),
                 of(SmallShelf.INK, "form = \"liquid\"", "▶form = \"fluid\"", "liquid, powder, paste"),
                 of(SmallShelf.INK, "density_g_per_ml", "▶density_g_ml", "Perhaps density_g_per_ml is meant"),
@@ -37,7 +37,7 @@ class IngredientRefusalTest {
                 of(SmallShelf.INK, "max_g_per_ml = 0.02", "▶max_g_per_ml = 0", "must be above 0"),
                 of(SmallShelf.INK, "price_per_g = 0", "▶price_per_g = -1", "0 or above"),
                 of(SmallShelf.INK, "settles = true", "▶settles = \"yes\"", "true or false"),
-                of(SmallShelf.INK, "settles = true", "▶least_share = 0.5", "least_share is a base's"),
+                of(SmallShelf.INK, "settles = true", "▶least_share = 0.5", "least_share is for a base"),
                 of(SmallShelf.WATER, "least_share = 0.5", "▶least_share = 50", "between 0 and 1"),
                 of(SmallShelf.INK, "why = \"flocks\"", "▶wy = \"flocks\"", "Perhaps why is meant"),
                 of(

@@ -7,6 +7,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
 import java.io.UncheckedIOException;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import org.junit.jupiter.api.function.Executable;
@@ -30,7 +31,7 @@ record Marked(String text, int line, int column) {
     static Path write(Path file, String text) {
         try {
             Files.createDirectories(file.getParent());
-            return Files.writeString(file, text);
+            return Files.write(file, text.getBytes(StandardCharsets.UTF_8)); // half a surrogate pair becomes "?"
         } catch (IOException e) {
             throw new UncheckedIOException(e);
         }

@@ -295,6 +295,8 @@ class ShelfReaderTest {
             Marked.write(folder.resolve("ink.toml"), SmallShelf.INK.replace("spectra/ink.csv", "spectra/inside.csv"));
             assertTrue(ShelfReader.read(folder).find("ink").isPresent());
         } finally {
+            for (String link : List.of("spectra/linked.csv", "elsewhere", "spectra/astray.csv", "spectra/device.csv"))
+                Files.deleteIfExists(folder.resolve(link));
             Files.delete(secret);
             Files.delete(outside);
         }

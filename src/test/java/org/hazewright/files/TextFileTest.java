@@ -60,6 +60,14 @@ class TextFileTest {
     }
 
     @Test
+    void theCharacterThatStandsForAnUnknownOneIsText() throws IOException {
+        assertEquals(
+                "\uFFFD",
+                TextFile.read(Files.writeString(folder.resolve("a.toml"), "\uFFFD"))
+                        .text());
+    }
+
+    @Test
     void moreThanFourMegabytesAreRefused() throws IOException {
         Path file = folder.resolve("big.csv");
         Files.write(file, new byte[TextFile.MOST_BYTES + 1]);

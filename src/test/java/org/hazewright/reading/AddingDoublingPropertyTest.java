@@ -59,6 +59,32 @@ class AddingDoublingPropertyTest {
         assertEquals(a.diffuseTransmittance(), b.diffuseTransmittance(), 1e-10);
     }
 
+    /** Twice as many directions and more change no share by more than the error that is promised. */
+    @ParameterizedTest
+    @CsvSource({
+        "0.80, 1.40, 1",
+        "0.80, 1.50, 1",
+        "0.80, 1.33, 1.5",
+        "0.90, 1.33, 1",
+        "0.90, 1.40, 1",
+        "0.90, 1.60, 1",
+        "0.95, 1.33, 1",
+        "0.95, 1.40, 1",
+        "0.95, 1.50, 1.33",
+        "0.95, 1.40, 1.4"
+    })
+    void directionsAreEnough(double g, double n, double outside) {
+        for (double depth : new double[] {0.1, 1, 5, 50})
+            for (double albedo : new double[] {0.5, 0.99, 0.9999}) {
+                Medium m = new Medium(10 * depth * (1 - albedo), 10 * depth * albedo * (1 - g), g, n);
+                SlabLight ours = AddingDoubling.slab(m, outside, 1);
+                SlabLight fine = AddingDoubling.slab(m, outside, 1, 79);
+                String at = "depth " + depth + ", albedo " + albedo;
+                assertEquals(fine.diffuseReflectance(), ours.diffuseReflectance(), 1e-5, at);
+                assertEquals(fine.diffuseTransmittance(), ours.diffuseTransmittance(), 1e-5, at);
+            }
+    }
+
     /** Single scattering in a very thin matched slab: half of it goes back when isotropic, R = a τ/2 (τ → 0). */
     @Test
     void thinMatchedSlab() {

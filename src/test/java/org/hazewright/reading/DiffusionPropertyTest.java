@@ -11,6 +11,7 @@ import java.util.function.DoubleUnaryOperator;
 import org.hazewright.optics.Refusal;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.MethodSource;
 
 /** What must hold between the steady, modulated and pulsed signals of one medium, whatever it is. */
@@ -44,7 +45,8 @@ class DiffusionPropertyTest {
     /** Trapezoidal rule in ln t over 16 decades, which converges exponentially for these curves. */
     private static double integral(DoubleUnaryOperator f) {
         double sum = 0;
-        for (double u = Math.log(1e-6); u < Math.log(1e10); u += 0.02) sum += f.applyAsDouble(Math.exp(u)) * Math.exp(u);
+        for (double u = Math.log(1e-6); u < Math.log(1e10); u += 0.02)
+            sum += f.applyAsDouble(Math.exp(u)) * Math.exp(u);
         return 0.02 * sum;
     }
 
@@ -108,7 +110,7 @@ class DiffusionPropertyTest {
         for (double mua : new double[] {0, 0.001, 0.1, 2}) {
             Diffusion d = new Diffusion(new Medium(mua, 10, 0.8, 1.4), 1, 12.0, Convention.DEFAULT);
             SteadySignal s = new SteadySignal(d);
-            for (double share : new double[] {0.05, 0.5}) {
+            for (double share : new double[] {0.05, 0.5, 0.8, 2}) {
                 double rho = share * d.extrapolatedThicknessMm();
                 for (Side side : Side.values()) {
                     double below = s.perMm2(rho * (1 - 1e-9), side);
@@ -144,17 +146,19 @@ class DiffusionPropertyTest {
         assertEquals(1, new Diffusion(new Medium(0, 10, 0.8, 1.4), 1, null, flux).totalReflectance(), 1e-12);
     }
 
-    /** The lag grows without jumps, through many whole turns. */
-    @Test
-    void phaseIsUnwrapped() {
-        Diffusion d = new Diffusion(new Medium(0.1, 10, 0.8, 1.4), 1);
+    /** The lag grows without jumps, through whole turns, in the open medium and through slabs. */
+    @ParameterizedTest
+    @CsvSource({"0, REFLECTANCE, 720", "12, REFLECTANCE, 360", "12, TRANSMITTANCE, 360", "30, TRANSMITTANCE, 720"})
+    void phaseIsUnwrapped(double thick, Side side, double least) {
+        Medium m = new Medium(0.1, 10, 0.8, 1.4);
+        Diffusion d = new Diffusion(m, 1, thick == 0 ? null : (Double) thick, Convention.DEFAULT);
         double before = 0;
         for (double mhz = 10; mhz < 20_000; mhz *= 1.05) {
-            double lag = new FrequencySignal(d, mhz).phaseDeg(40, Side.REFLECTANCE);
+            double lag = new FrequencySignal(d, mhz).phaseDeg(40, side);
             assertTrue(lag > before && lag < before + 120, mhz + " MHz: " + before + " to " + lag);
             before = lag;
         }
-        assertTrue(before > 720);
+        assertTrue(before > least);
     }
 
     @Test

@@ -24,8 +24,8 @@ class DiffusionRangeTest {
         Medium m = new Medium(10 / (1 + ratio), 10 * ratio / (1 + ratio), g, n);
         List<Ring> rings = new ArrayList<>();
         for (double d : DISTANCES) rings.add(Ring.around(d, 0.05 * d));
-        PacketTally tally = new PhotonPackets(m, 1, thickness)
-                .run(PacketRun.of(150_000, 11).collecting(Side.REFLECTANCE, rings));
+        PacketTally tally =
+                new PhotonPackets(m, 1, thickness).run(PacketRun.of(150_000, 11).collecting(Side.REFLECTANCE, rings));
         Convention incident = new Convention(
                 Convention.Form.FLUX_AND_FLUENCE,
                 Convention.DiffusionConstant.WITH_ABSORPTION,
@@ -40,7 +40,8 @@ class DiffusionRangeTest {
             PacketTally.InRing r = tally.rings().get(i);
             double error = steady.reflectancePerMm2(rho) / r.perMm2() - 1;
             double noise = 3 * r.uPerMm2() / r.perMm2();
-            assertTrue(Math.abs(error) < DiffusionRange.STEADY_ERROR + noise, rho + " mm: " + error + ", noise " + noise);
+            assertTrue(
+                    Math.abs(error) < DiffusionRange.STEADY_ERROR + noise, rho + " mm: " + error + ", noise " + noise);
             if (DiffusionRange.outside(m, rho, thickness, true, FORM) != null) continue;
             double late = moments.meanPs(rho) / r.meanTimePs() - 1;
             double timeNoise = 3 * r.uMeanTimePs() / r.meanTimePs();
@@ -73,7 +74,8 @@ class DiffusionRangeTest {
         assertNull(DiffusionRange.outside(good, 20, null, true, FORM));
         assertTrue(DiffusionRange.outside(good, 2, null, false, FORM).contains("transport lengths from the beam"));
         assertTrue(DiffusionRange.outside(good, 20, 3.0, false, FORM).contains("thick"));
-        assertTrue(DiffusionRange.outside(good.withMua(2), 20, null, false, FORM).contains("µs' is 5.0 times µa"));
+        assertTrue(
+                DiffusionRange.outside(good.withMua(2), 20, null, false, FORM).contains("µs' is 5.0 times µa"));
         assertTrue(DiffusionRange.outside(good, 500, null, false, FORM).contains("far"));
         assertEquals(null, DiffusionRange.outside(good, (Double) null));
     }

@@ -17,7 +17,13 @@ class PhotonPacketsTest {
 
     /** Every book of a block, roulette's included, adds up to the packets that met the surface. */
     @ParameterizedTest
-    @CsvSource({"0.1, 10, 0.9, 1.4, 5", "5, 5, 0, 1.33, 1", "0, 20, 0.5, 1.5, 2", "0.01, 10, -0.3, 1, 20", "3, 0, 0, 1.4, 3"})
+    @CsvSource({
+        "0.1, 10, 0.9, 1.4, 5",
+        "5, 5, 0, 1.33, 1",
+        "0, 20, 0.5, 1.5, 2",
+        "0.01, 10, -0.3, 1, 20",
+        "3, 0, 0, 1.4, 3"
+    })
     void energyIsConservedToRounding(double mua, double musp, double g, double n, double thickness) {
         PhotonPackets problem = new PhotonPackets(new Medium(mua, musp, g, n), 1, thickness);
         PacketTally tally = problem.run(PacketRun.of(5000, 3).onThreads(1));
@@ -28,9 +34,8 @@ class PhotonPacketsTest {
     @Test
     void theSameToTheLastBitForAnyNumberOfThreads() {
         PhotonPackets problem = new PhotonPackets(new Medium(0.3, 10, 0.8, 1.4), 1, 4.0);
-        PacketRun run = PacketRun.of(21_000, 42)
-                .collecting(Side.TRANSMITTANCE, RINGS)
-                .over(new TimeAxis(0, 500, 10));
+        PacketRun run =
+                PacketRun.of(21_000, 42).collecting(Side.TRANSMITTANCE, RINGS).over(new TimeAxis(0, 500, 10));
         PacketTally one = problem.run(run.onThreads(1));
         for (int threads : new int[] {2, 3, 7}) {
             PacketTally many = problem.run(run.onThreads(threads));
@@ -40,8 +45,10 @@ class PhotonPacketsTest {
             assertEquals(one.uTotalTransmittance(), many.uTotalTransmittance());
             for (int i = 0; i < RINGS.size(); i++) {
                 assertEquals(one.rings().get(i).perMm2(), many.rings().get(i).perMm2());
-                assertEquals(one.rings().get(i).meanTimePs(), many.rings().get(i).meanTimePs());
-                assertArrayEquals(one.rings().get(i).histogram(), many.rings().get(i).histogram());
+                assertEquals(
+                        one.rings().get(i).meanTimePs(), many.rings().get(i).meanTimePs());
+                assertArrayEquals(
+                        one.rings().get(i).histogram(), many.rings().get(i).histogram());
             }
         }
         assertTrue(one.light().diffuseReflectance()

@@ -1,7 +1,5 @@
 package org.hazewright.sheet;
 
-import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -9,15 +7,12 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.Set;
 import org.hazewright.bench.Answer;
-import org.hazewright.bench.Answer.Predicted;
+import org.hazewright.bench.Outlook;
 import org.hazewright.brief.Balance;
 import org.hazewright.brief.Brief;
-import org.hazewright.brief.Point;
 import org.hazewright.brief.SearchLimits;
 import org.hazewright.brief.Target;
 import org.hazewright.design.Score;
-import org.hazewright.mixture.Budget;
-import org.hazewright.mixture.Draws;
 import org.hazewright.mixture.Item;
 import org.hazewright.mixture.Mixture;
 import org.hazewright.mixture.Recipe;
@@ -494,23 +489,11 @@ final class Answers {
                 balance,
                 Optional.empty(),
                 recipe.briefSha256());
-        double[] nm = brief.wavelengthsNm();
         Mixture mixture = Mixture.of(recipe);
-        Budget budget = Budget.of(recipe, nm, balance.capacityG());
-        Draws draws = Draws.of(recipe, nm, balance.capacityG(), 20_000, 1);
-        List<Predicted> predicted = new ArrayList<>();
-        double bias = 0;
-        double worst = 0;
-        for (Point p : brief.points()) {
-            int j = Arrays.binarySearch(nm, p.wavelengthNm());
-            boolean mua = p.quantity() == Point.Quantity.MUA;
-            double value =
-                    mua ? mixture.at(nm[j]).muaPerCm() : mixture.at(nm[j]).muspPerCm();
-            double u = (mua ? budget.uMuaPerCm() : budget.uMuspPerCm())[j];
-            predicted.add(new Predicted(p, value, u, value - 1.96 * u, value + 1.96 * u, p.miss(value)));
-            bias += p.miss(value) * p.miss(value);
-            worst = Math.max(worst, Math.abs(p.miss(value)));
-        }
+        Outlook outlook = Outlook.of(brief, recipe, 20_000);
+        double bias = outlook.predicted().stream()
+                .mapToDouble(p -> p.miss() * p.miss())
+                .sum();
         Map<Ingredient, Double> exact = new LinkedHashMap<>();
         mixture.massesG().keySet().forEach(i -> exact.put(i, mixture.concentrationGPerMl(i)));
         Score score = new Score(bias, 0.4, 0.02);
@@ -518,32 +501,18 @@ final class Answers {
                 brief,
                 recipe,
                 mixture,
-                predicted,
+                outlook.predicted(),
                 score,
                 new Answer.Exact(score, exact),
-                worst,
-                worst * 0.98,
-                chance(draws, brief),
-                budget,
+                outlook.worstMiss(),
+                outlook.worstMiss() * 0.98,
+                outlook.chance(),
+                outlook.budget(),
                 limits,
                 List.of(),
                 Map.of(),
                 new Answer.SearchCount(1, 1, 0, true),
                 List.of());
-    }
-
-    private static double chance(Draws draws, Brief brief) {
-        double[] nm = brief.wavelengthsNm();
-        double[] low = new double[2 * nm.length];
-        double[] high = new double[2 * nm.length];
-        Arrays.fill(low, Double.NaN);
-        Arrays.fill(high, Double.NaN);
-        for (Point p : brief.points()) {
-            int at = Arrays.binarySearch(nm, p.wavelengthNm()) + (p.quantity() == Point.Quantity.MUA ? 0 : nm.length);
-            low[at] = p.wantedPerCm() - p.tolerancePerCm();
-            high[at] = p.wantedPerCm() + p.tolerancePerCm();
-        }
-        return draws.shareInside(low, high);
     }
 
     private Answers() {}

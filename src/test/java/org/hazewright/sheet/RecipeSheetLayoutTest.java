@@ -57,6 +57,8 @@ class RecipeSheetLayoutTest {
                 "262.5 mL",
                 "Lands inside every tolerance",
                 "ink-demo-1-100",
+                "What could move it",
+                "ink-demo absorption",
                 "What holds it back",
                 "a dilution series of your own bottle",
                 "Hot liquid",

@@ -3,6 +3,7 @@ package org.hazewright.desk.model;
 import java.util.ArrayDeque;
 import java.util.Deque;
 import java.util.Optional;
+import java.util.function.UnaryOperator;
 import javafx.beans.property.ReadOnlyObjectProperty;
 import javafx.beans.property.ReadOnlyObjectWrapper;
 
@@ -63,6 +64,11 @@ public final class Edits<T> {
         after.clear();
         strand = "";
         now.set(value);
+    }
+
+    /** Changes the value in a way that is no edit. */
+    public void rename(UnaryOperator<T> change) {
+        now.set(change.apply(now.get()));
     }
 
     /** What undo would take back; empty when there is nothing. */

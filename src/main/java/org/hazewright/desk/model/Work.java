@@ -33,10 +33,12 @@ public final class Work implements AutoCloseable {
 
     private final Executor workers;
     private final Executor ui;
+    private final boolean waits;
 
-    private Work(Executor workers, Executor ui) {
+    private Work(Executor workers, Executor ui, boolean waits) {
         this.workers = workers;
         this.ui = ui;
+        this.waits = waits;
     }
 
     /** Runs on threads of its own; {@code ui} puts results on the interface thread. */
@@ -47,12 +49,13 @@ public final class Work implements AutoCloseable {
                     t.setDaemon(true);
                     return t;
                 }),
-                ui);
+                ui,
+                true);
     }
 
-    /** Runs everything at once on the thread that asks: for tests. */
+    /** Runs everything at once on the thread that asks, without any wait: for tests. */
     public static Work sameThread() {
-        return new Work(Runnable::run, Runnable::run);
+        return new Work(Runnable::run, Runnable::run, false);
     }
 
     public Lane lane(Haste haste) {
@@ -64,7 +67,8 @@ public final class Work implements AutoCloseable {
         if (workers instanceof ExecutorService service) service.shutdownNow();
     }
 
-    private record Request<T>(Job<T> job, Consumer<? super T> done, Consumer<? super Throwable> failed) {}
+    private record Request<T>(
+            long waitMs, Job<T> job, Consumer<? super T> done, Consumer<? super Throwable> failed) {}
 
     /** One kind of work. Its methods are called on the interface thread. */
     public final class Lane {
@@ -80,6 +84,16 @@ public final class Work implements AutoCloseable {
 
         private final class Ticket {
             private volatile boolean stop;
+
+            synchronized void stop() {
+                stop = true;
+                notifyAll();
+            }
+
+            synchronized void rest(long ms) throws InterruptedException {
+                long end = System.nanoTime() + ms * 1_000_000;
+                for (long left = ms; left > 0 && !stop; left = (end - System.nanoTime()) / 1_000_000) wait(left);
+            }
         }
 
         public ReadOnlyBooleanProperty busyProperty() {
@@ -92,16 +106,22 @@ public final class Work implements AutoCloseable {
         }
 
         public <T> void request(Job<T> job, Consumer<? super T> done, Consumer<? super Throwable> failed) {
-            waiting = new Request<>(job, done, failed);
+            requestAfter(0, job, done, failed);
+        }
+
+        /** As {@link #request}, begun only when nothing newer was asked for in so many milliseconds. */
+        public <T> void requestAfter(
+                long waitMs, Job<T> job, Consumer<? super T> done, Consumer<? super Throwable> failed) {
+            waiting = new Request<>(waits ? waitMs : 0, job, done, failed);
             busy.set(true);
             if (running == null) start();
-            else if (haste == Haste.INTERRUPT) running.stop = true;
+            else if (haste == Haste.INTERRUPT) running.stop();
         }
 
         /** Drops what waits and stops what runs. */
         public void stop() {
             waiting = null;
-            if (running != null) running.stop = true;
+            if (running != null) running.stop();
             else busy.set(false);
         }
 
@@ -118,7 +138,10 @@ public final class Work implements AutoCloseable {
                 T result = null;
                 Throwable failure = null;
                 try {
-                    result = request.job().run(() -> ticket.stop, share -> told(ticket, share));
+                    ticket.rest(request.waitMs());
+                    if (!ticket.stop) result = request.job().run(() -> ticket.stop, share -> told(ticket, share));
+                } catch (InterruptedException e) {
+                    ticket.stop = true;
                 } catch (RuntimeException | Error e) {
                     failure = e;
                 }

@@ -1,0 +1,352 @@
+package org.hazewright.desk;
+
+import java.nio.file.Path;
+import java.util.List;
+import java.util.Optional;
+import javafx.scene.Node;
+import javafx.scene.Scene;
+import javafx.scene.input.Clipboard;
+import javafx.scene.input.ClipboardContent;
+import javafx.scene.input.KeyCode;
+import javafx.scene.input.KeyCodeCombination;
+import javafx.scene.input.KeyCombination;
+import javafx.scene.input.TransferMode;
+import javafx.scene.layout.BorderPane;
+import javafx.scene.layout.HBox;
+import javafx.scene.layout.Priority;
+import javafx.scene.layout.StackPane;
+import javafx.scene.layout.VBox;
+import javafx.stage.Stage;
+import org.hazewright.desk.balance.BalanceView;
+import org.hazewright.desk.brief.BriefPlace;
+import org.hazewright.desk.look.Look;
+import org.hazewright.desk.look.Palette;
+import org.hazewright.desk.model.AtBalance;
+import org.hazewright.desk.model.Desk;
+import org.hazewright.desk.model.Draft;
+import org.hazewright.desk.model.Notice;
+import org.hazewright.desk.model.ShelfState;
+import org.hazewright.desk.parts.Chooser;
+import org.hazewright.desk.parts.Hint;
+import org.hazewright.desk.parts.NoticeBar;
+import org.hazewright.desk.parts.Say;
+import org.hazewright.desk.parts.SystemChooser;
+import org.hazewright.desk.parts.Word;
+import org.hazewright.desk.recipe.RecipePlace;
+import org.hazewright.desk.spectra.SpectraPlace;
+
+/** The window: Brief, Spectra, Recipe and Readings side by side in the order of the work. */
+public final class Window {
+    private static final String BRIEFS = "Briefs, recipes and batches";
+
+    private final Stage stage;
+    private final Desk desk;
+    private final Look look;
+    private final Chooser chooser;
+    private final StackPane whole = new StackPane();
+    private final BorderPane places = new BorderPane();
+    private final SpectraPlace spectra;
+    private final BriefPlace brief;
+    private final RecipePlace recipe;
+    private final Deeds deeds = new Doing();
+    private BalanceView balance;
+
+    /** A window on a stage of its own; call {@link #show}. */
+    public Window(Stage stage, Desk desk, Look look, Optional<Chooser> chooser) {
+        this.stage = stage;
+        this.desk = desk;
+        this.look = look;
+        this.chooser = chooser.orElseGet(() -> new SystemChooser(stage));
+        look.paletteProperty().set(desk.remembered().flag("dark") ? Palette.DARK : Palette.LIGHT);
+        look.scaleProperty().set(desk.remembered().number("letters", 1));
+        look.scaleProperty().addListener((p, before, now) -> desk.remembered().keep("letters", now.toString()));
+        brief = new BriefPlace(desk, deeds::shelf);
+        spectra = new SpectraPlace(desk, look, deeds::savePicture);
+        recipe = new RecipePlace(desk, deeds::print, deeds::saveSheet, deeds::copyGrams);
+        places.setTop(new VBox(new Head(desk, look, deeds), new NoticeBar(desk.notices())));
+        whole.getChildren().add(places);
+        lay();
+        desk.shelfProperty().addListener((p, before, now) -> lay());
+        desk.solving().faultProperty().addListener((p, before, now) -> now.ifPresent(f -> desk.notices()
+                .tell(Notice.wrong("fault", "This is a fault of the program, not of your files; nothing was overwritten. " + f))));
+        desk.weighingProperty().addListener((p, before, now) -> turnTo(now));
+        Scene scene = new Scene(whole, 1440, 900);
+        look.dress(scene);
+        keys(scene);
+        drops(scene);
+        stage.setScene(scene);
+        stage.setMinWidth(900);
+        stage.setMinHeight(560);
+        stage.setTitle("Hazewright");
+        desk.edits().nowProperty().addListener((p, before, now) -> stage.setTitle(
+                now == null ? "Hazewright" : now.title() + " – Hazewright"));
+        stage.setOnCloseRequest(e -> {
+            if (!desk.papers().changedProperty().get()) return;
+            e.consume();
+            askBeforeClosing();
+        });
+    }
+
+    public void show() {
+        stage.show();
+        desk.edits().nowProperty().addListener(new javafx.beans.value.ChangeListener<>() {
+            @Override
+            public void changed(
+                    javafx.beans.value.ObservableValue<? extends Draft> p, Draft before, Draft now) {
+                desk.edits().nowProperty().removeListener(this);
+                brief.focusFirst();
+            }
+        });
+    }
+
+    private void lay() {
+        ShelfState shelf = desk.shelfProperty().get();
+        if (shelf.problem().isPresent()) {
+            places.setCenter(noShelf(shelf));
+            return;
+        }
+        if (!shelf.refused().isEmpty())
+            desk.notices()
+                    .tell(Notice.asked(
+                            "shelf",
+                            shelf.refused().size() == 1
+                                    ? "One file of the shelf cannot be used: " + shelf.refused().get(0)
+                                    : shelf.refused().size() + " files of the shelf cannot be used; the first: "
+                                            + shelf.refused().get(0),
+                            new Notice.Way("read it again", desk::readShelfAgain),
+                            new Notice.Way("go on without", () -> {})));
+        if (places.getCenter() != null && places.getCenter().getId() != null) return;
+        BorderPane desktop = new BorderPane();
+        desktop.setId("places");
+        brief.getStyleClass().add("brief-width");
+        recipe.getStyleClass().add("recipe-width");
+        VBox middle = new VBox(
+                new Hint(desk.remembered(), "drag", "Drag an amber box, or type on the left: the recipe follows."), spectra);
+        middle.getStyleClass().add("middle");
+        VBox.setVgrow(spectra, Priority.ALWAYS);
+        desktop.setLeft(brief);
+        desktop.setCenter(middle);
+        desktop.setRight(recipe);
+        places.setCenter(desktop);
+    }
+
+    private Node noShelf(ShelfState shelf) {
+        VBox box = new VBox(
+                Say.label("There is no shelf to work from", "headline"),
+                Say.wrapped(shelf.problem().orElse("")),
+                Say.wrapped("A shelf is a folder with one file for each ingredient; a recipe is made of what is on it.", "quiet"));
+        for (String words : shelf.refused().subList(0, Math.min(8, shelf.refused().size())))
+            box.getChildren().add(Say.wrapped("✕ " + words, "missed"));
+        HBox ways = new HBox();
+        ways.getStyleClass().add("gap-m");
+        if (shelf.folder().isPresent()) {
+            ways.getChildren().add(new Word("use the shelf of the program", () -> desk.useShelf(Optional.empty())).styled("strong"));
+            ways.getChildren().add(new Word("read it again", desk::readShelfAgain).styled("strong"));
+        }
+        ways.getChildren().add(new Word("choose a folder…", () -> chooser.folder("Choose the folder of a shelf")
+                        .ifPresent(p -> desk.useShelf(Optional.of(p))))
+                .styled("strong"));
+        box.getChildren().add(ways);
+        box.getStyleClass().addAll("place", "gap-m");
+        box.setMaxWidth(720);
+        StackPane middle = new StackPane(box);
+        return middle;
+    }
+
+    /** Turns to the balance, or back to the places. */
+    private void turnTo(Optional<AtBalance> weighing) {
+        if (weighing.isEmpty()) {
+            whole.getChildren().setAll(places);
+            return;
+        }
+        BalanceView view = new BalanceView(weighing.get(), desk::leaveBalance, desk::finishWeighing);
+        whole.getChildren().setAll(view);
+        view.focusField();
+        balance = view;
+    }
+
+    /** The view at the balance that was opened last; null before the first. */
+    public BalanceView balance() {
+        return balance;
+    }
+
+    private void keys(Scene scene) {
+        on(scene, "Shortcut+O", deeds::open);
+        on(scene, "Shortcut+N", deeds::begin);
+        on(scene, "Shortcut+S", deeds::save);
+        on(scene, "Shortcut+Shift+S", deeds::saveAs);
+        on(scene, "Shortcut+P", deeds::print);
+        on(scene, "Shortcut+G", deeds::copyGrams);
+        on(scene, "Shortcut+Plus", () -> look.larger(true));
+        on(scene, "Shortcut+Equals", () -> look.larger(true));
+        on(scene, "Shortcut+Minus", () -> look.larger(false));
+        on(scene, "F1", deeds::keys);
+        on(scene, "Shortcut+Enter", deeds::balance);
+        scene.addEventFilter(javafx.scene.input.KeyEvent.KEY_PRESSED, e -> {
+            boolean undo = new KeyCodeCombination(KeyCode.Z, KeyCombination.SHORTCUT_DOWN).match(e);
+            boolean redo = new KeyCodeCombination(KeyCode.Z, KeyCombination.SHORTCUT_DOWN, KeyCombination.SHIFT_DOWN).match(e)
+                    || new KeyCodeCombination(KeyCode.Y, KeyCombination.SHORTCUT_DOWN).match(e);
+            if (undo) desk.edits().undo();
+            if (redo) desk.edits().redo();
+            if (undo || redo) e.consume();
+        });
+    }
+
+    private static void on(Scene scene, String keys, Runnable act) {
+        scene.getAccelerators().put(KeyCombination.valueOf(keys), act);
+    }
+
+    private void drops(Scene scene) {
+        scene.setOnDragOver(e -> {
+            if (e.getDragboard().hasFiles()) e.acceptTransferModes(TransferMode.COPY);
+            e.consume();
+        });
+        scene.setOnDragDropped(e -> {
+            boolean some = e.getDragboard().hasFiles() && !e.getDragboard().getFiles().isEmpty();
+            if (some) deeds.open(e.getDragboard().getFiles().get(0).toPath());
+            e.setDropCompleted(some);
+            e.consume();
+        });
+    }
+
+    private void askBeforeClosing() {
+        desk.notices()
+                .tell(Notice.asked(
+                        "closing",
+                        "“" + desk.edits().now().title() + "” has changes that are not saved.",
+                        new Notice.Way("save and close", () -> saveThen(stage::close)),
+                        new Notice.Way("close without saving", () -> {
+                            desk.papers().giveUp();
+                            stage.close();
+                        }),
+                        new Notice.Way("stay", () -> {})));
+    }
+
+    private void saveThen(Runnable then) {
+        Optional<org.hazewright.desk.model.Shown> shown =
+                Optional.ofNullable(desk.solving().shownProperty().get());
+        if (desk.papers().save(shown, then)) return;
+        chooser.save("Save the brief", desk.edits().now().name() + ".brief.toml", "Briefs", ".brief.toml")
+                .ifPresent(p -> desk.papers().saveAs(named(p), shown, then));
+    }
+
+    private static Path named(Path p) {
+        String name = p.getFileName().toString();
+        return name.endsWith(".toml") ? p : p.resolveSibling(name + ".brief.toml");
+    }
+
+    public Desk desk() {
+        return desk;
+    }
+
+    public Look look() {
+        return look;
+    }
+
+    public SpectraPlace spectra() {
+        return spectra;
+    }
+
+    public BriefPlace brief() {
+        return brief;
+    }
+
+    public Stage stage() {
+        return stage;
+    }
+
+    private final class Doing implements Deeds {
+        @Override
+        public void open() {
+            chooser.open("Open", BRIEFS, ".brief.toml", ".recipe.toml", ".batch.toml", ".toml")
+                    .ifPresent(this::open);
+        }
+
+        @Override
+        public void open(Path file) {
+            ifSaved(() -> desk.open(file));
+        }
+
+        /** Runs at once when nothing would be lost, else asks first. */
+        private void ifSaved(Runnable run) {
+            if (!desk.papers().changedProperty().get()) {
+                run.run();
+                return;
+            }
+            desk.notices()
+                    .tell(Notice.asked(
+                            "closing",
+                            "“" + desk.edits().now().title() + "” has changes that are not saved.",
+                            new Notice.Way("save first", () -> saveThen(run)),
+                            new Notice.Way("leave them", () -> {
+                                desk.papers().giveUp();
+                                run.run();
+                            }),
+                            new Notice.Way("stay", () -> {})));
+        }
+
+        @Override
+        public void begin() {
+            ifSaved(desk::beginAgain);
+        }
+
+        @Override
+        public void save() {
+            saveThen(() -> {});
+        }
+
+        @Override
+        public void saveAs() {
+            chooser.save("Save the brief as", desk.edits().now().name() + ".brief.toml", "Briefs", ".brief.toml")
+                    .ifPresent(p -> desk.papers()
+                            .saveAs(named(p), Optional.ofNullable(desk.solving().shownProperty().get()), () -> {}));
+        }
+
+        @Override
+        public void saveSheet() {
+            desk.notices().tell(Notice.wrong("sheet", "Sheets are not made here yet."));
+        }
+
+        @Override
+        public void savePicture() {
+            new Pictures(desk, look, chooser).save(spectra);
+        }
+
+        @Override
+        public void print() {
+            desk.notices().tell(Notice.wrong("print", "Printing is not there yet."));
+        }
+
+        @Override
+        public void copyGrams() {
+            desk.copyText().ifPresent(text -> {
+                ClipboardContent content = new ClipboardContent();
+                content.putString(text);
+                Clipboard.getSystemClipboard().setContent(content);
+                desk.notices().tell(Notice.told("copied", "The grams are on the clipboard; paste them into a spreadsheet."));
+            });
+        }
+
+        @Override
+        public void balance() {
+            desk.standAtBalance();
+        }
+
+        @Override
+        public void shelf() {}
+
+        @Override
+        public void dark(boolean yes) {
+            look.paletteProperty().set(yes ? Palette.DARK : Palette.LIGHT);
+            desk.remembered().keep("dark", yes);
+        }
+
+        @Override
+        public void keys() {}
+    }
+
+    /** The places in the order that F6 visits them. */
+    List<Node> order() {
+        return List.of(brief, spectra, recipe);
+    }
+}

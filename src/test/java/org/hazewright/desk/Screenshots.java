@@ -1,0 +1,72 @@
+package org.hazewright.desk;
+
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.Optional;
+import javafx.application.Platform;
+import javafx.scene.image.WritableImage;
+import org.hazewright.desk.look.Palette;
+import org.hazewright.desk.model.AtBalance;
+
+/** Makes pictures of every view at two sizes in both themes: see DEVELOPERS.md for the command. */
+public final class Screenshots {
+    private final Path out;
+
+    private Screenshots(Path out) {
+        this.out = out;
+    }
+
+    public static void main(String[] args) throws IOException {
+        Path out = Path.of(args.length > 0 ? args[0] : "target/screenshots");
+        Files.createDirectories(out);
+        Screenshots s = new Screenshots(out);
+        double[][] sizes = {{1280, 720}, {1920, 1080}};
+        try {
+            for (double[] size : sizes) s.size(size[0], size[1]);
+        } finally {
+            Platform.exit();
+        }
+    }
+
+    private void size(double w, double h) throws IOException {
+        Path memory = Files.createTempDirectory("memory");
+        Window window = Stagehand.open(memory, w, h, Optional.empty(), Optional.empty());
+        Stagehand.untilSettled(window);
+        for (Palette p : new Palette[] {Palette.LIGHT, Palette.DARK}) {
+            Stagehand.ui(() -> window.look().paletteProperty().set(p));
+            shoot(window, "desk", p, w);
+        }
+        Stagehand.ui(() -> window.desk().standAtBalance());
+        Stagehand.until("the balance", () -> window.desk().weighingProperty().get().isPresent());
+        AtBalance at = Stagehand.onUi(() -> window.desk().weighingProperty().get().orElseThrow());
+        balance(window, w, at, "task");
+        Stagehand.ui(() -> {
+            while (!at.nowProperty().get().line().name().startsWith("Lipid")) {
+                AtBalance.Line line = at.nowProperty().get().line();
+                at.enter(line.weighs() ? Double.toString(at.loadWantedG() * 1.004) + " g" : "");
+            }
+        });
+        Stagehand.ui(() -> window.balance().field().setText("15.502 g"));
+        Stagehand.until("an outlook", () -> at.outlookProperty().get() != null && at.bandProperty().get().isPresent());
+        balance(window, w, at, "weigh");
+        Stagehand.ui(() -> window.stage().close());
+    }
+
+    private void balance(Window window, double w, AtBalance at, String what) throws IOException {
+        Stagehand.until("an outlook", () -> at.outlookProperty().get() != null);
+        for (Palette p : new Palette[] {Palette.LIGHT, Palette.DARK}) {
+            Stagehand.ui(() -> window.look().paletteProperty().set(p));
+            shoot(window, "balance-" + what, p, w);
+        }
+    }
+
+    private void shoot(Window window, String name, Palette p, double w) throws IOException {
+        Stagehand.pulse();
+        byte[] png = Stagehand.onUi(() -> {
+            WritableImage image = window.stage().getScene().snapshot(null);
+            return Pictures.bytes(image);
+        });
+        Files.write(out.resolve(name + "-" + (int) w + (p.dark() ? "-dark" : "-light") + ".png"), png);
+    }
+}
