@@ -32,6 +32,7 @@ import picocli.CommandLine.Spec;
             IngredientsCommand.class,
             BatchCommand.class,
             CorrectCommand.class,
+            LotCommand.class,
             ParticlesCommand.class,
         },
         footer = {
