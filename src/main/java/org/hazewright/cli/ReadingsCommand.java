@@ -246,7 +246,7 @@ final class ReadingsCommand implements Callable<Integer> {
         String title = made == null ? "A medium of given coefficients" : made.title();
         SafeFile.write(
                 picture,
-                ReadingPicture.of(title, foreseen, picture.getFileName().toString()),
+                ReadingPicture.of(title, foreseen, made == null, picture.getFileName().toString()),
                 SafeFile.Overwrite.KEEP_PREVIOUS);
         if (!shared.json && !shared.quiet) out.println("Written: " + picture);
     }
