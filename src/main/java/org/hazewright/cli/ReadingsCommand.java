@@ -10,7 +10,6 @@ import java.util.Optional;
 import java.util.TreeSet;
 import java.util.concurrent.Callable;
 import java.util.stream.Collectors;
-import org.hazewright.brief.Mould;
 import org.hazewright.brief.Tissue;
 import org.hazewright.files.Casting;
 import org.hazewright.files.RecipeReader;
@@ -26,6 +25,7 @@ import org.hazewright.reading.Foreseen;
 import org.hazewright.reading.Foresight;
 import org.hazewright.reading.Phantom;
 import org.hazewright.reading.SetUp;
+import org.hazewright.sheet.InstrumentReadings;
 import org.hazewright.sheet.ReadingPicture;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
@@ -176,15 +176,9 @@ final class ReadingsCommand implements Callable<Integer> {
         Optional<Casting> casting = brief != null ? Optional.of(Casting.read(brief)) : Casting.beside(recipe, made);
         if (brief != null && !casting.get().isOf(made) && !shared.quiet)
             spec.commandLine().getErr().println("The recipe was not made for " + brief + " as it is now; its mould is taken all the same.");
-        Body mould = casting.flatMap(c -> c.moulds().stream().findFirst()).map(ReadingsCommand::body).orElse(null);
+        Body mould = casting.flatMap(c -> c.moulds().stream().findFirst()).map(InstrumentReadings::body).orElse(null);
         if (body != null && mould != null) body = new Body(body.thicknessMm(), mould.wallMm());
         return Phantom.of(made, body != null ? body : mould);
-    }
-
-    private static Body body(Mould m) {
-        return m.shape() == Mould.Shape.BOX
-                ? Body.box(m.lengthMm(), m.widthMm(), m.heightMm())
-                : Body.cylinder(m.lengthMm(), m.heightMm());
     }
 
     private List<SetUp> wanted(Phantom phantom) {
