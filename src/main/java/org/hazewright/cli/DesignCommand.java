@@ -186,14 +186,14 @@ final class DesignCommand implements Callable<Integer> {
         return done.status();
     }
 
-    private static List<Path> write(Answer answer, LocalDate today, Path folder) {
+    private List<Path> write(Answer answer, LocalDate today, Path folder) {
         String name = answer.brief().name();
         List<Path> written = new ArrayList<>();
         Path recipe = folder.resolve(name + ".recipe.toml");
         RecipeWriter.write(recipe, answer.recipe(), SafeFile.Overwrite.KEEP_PREVIOUS);
         written.add(recipe);
         Path sheet = folder.resolve(name + ".xlsx");
-        SafeFile.write(sheet, RecipeSheet.write(answer, today), SafeFile.Overwrite.KEEP_PREVIOUS);
+        SafeFile.write(sheet, RecipeSheet.write(answer, today, shared.tissueSpectra()), SafeFile.Overwrite.KEEP_PREVIOUS);
         written.add(sheet);
         return written;
     }
