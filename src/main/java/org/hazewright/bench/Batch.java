@@ -236,7 +236,8 @@ public record Batch(
         return with(plan, weighedG, corrections, heating, all, notes);
     }
 
-    public Batch withNote(String note) {
+    public Batch withNote(String text) {
+        String note = text.replaceAll("\\p{Cntrl}", " ").strip();
         if (note.isBlank() || notes.contains(note)) return this;
         List<String> all = new ArrayList<>(notes);
         all.add(note);

@@ -30,6 +30,8 @@ import picocli.CommandLine.Spec;
             SeriesCommand.class,
             PredictCommand.class,
             IngredientsCommand.class,
+            BatchCommand.class,
+            CorrectCommand.class,
             ParticlesCommand.class,
         },
         footer = {

@@ -205,10 +205,11 @@ final class ActiveSet {
 
     /** The code of the limit violated most, or −1; limits in force hold by construction. */
     private int mostViolated() {
-        double size = 1;
+        double size = 0;
         for (int i = 0; i < n; i++) size = Math.max(size, Math.abs(x[i]));
         int found = -1;
-        double worst = 1e-12 * size;
+        double grain = 1e-12 * size;
+        double worst = grain;
         for (int i = 0; i < n; i++) {
             if (lower[i] - x[i] > worst && !inForce[i]) {
                 worst = lower[i] - x[i];
@@ -227,12 +228,11 @@ final class ActiveSet {
             double[] c = column[i];
             for (int k = 0; k < rows; k++) y[k] += xi * c[k];
         }
-        if (worst < 1e-11) worst = 1e-11;
         for (int k = 0; k < rows; k++) {
             double under = low[k] - y[k];
             double over = y[k] - high[k];
             double violation = Math.max(under, over);
-            if (violation > worst && violation > 1e-13 * Math.abs(y[k])) {
+            if (violation > worst && violation > grain + 1e-12 * Math.abs(over > under ? high[k] : low[k])) {
                 int code = 2 * n + 2 * k + (over > under ? 1 : 0);
                 if (!inForce[code]) {
                     worst = violation;

@@ -126,6 +126,25 @@ final class Columns {
         return members;
     }
 
+    /** Positions, ascending, of candidate indices. */
+    int[] positions(int[] members) {
+        int[] set = new int[members.length];
+        for (int k = 0; k < set.length; k++) for (int i = 0; i < size; i++) if (index[i] == members[k]) set[k] = i;
+        Arrays.sort(set);
+        return set;
+    }
+
+    /** Whether positions, ascending, are an admissible set. */
+    boolean admits(int[] set) {
+        if (set.length > mostTogether) return false;
+        int[] of = new int[most.length];
+        for (int k = 0; k < set.length; k++) {
+            if (k > 0 && set[k] == set[k - 1] || ++of[group[set[k]]] > most[group[set[k]]]) return false;
+            if (excludes != null) for (int l = 0; l < k; l++) if (excludes[set[k]][set[l]]) return false;
+        }
+        return true;
+    }
+
     /** Whether another candidate could join the set without breaking a limit on numbers or a conflict. */
     boolean canGrow(int[] set, int count) {
         if (count >= mostTogether) return false;

@@ -47,21 +47,40 @@ final class MissBounds {
     /** Whether some proof gives the set a worst miss of at least {@code least}. */
     boolean exclude(int[] set, int size, double least) {
         for (int b = 0; b < count; b++) {
-            if (base[b] < least) continue;
             double room = base[b] - least;
+            if (room < 0) continue;
             double[] reaches = perReach[b];
             double sum = 0;
             for (int k = 0; k < size; k++) sum += reaches[set[k]];
-            if (sum > room) {
-                double[] volumes = perVolume[b];
-                double most = 0;
-                for (int k = 0; k < size; k++) most = Math.max(most, volumes[set[k]]);
-                if (most > room) continue;
-            }
+            if (sum > room && mostPull(b, set, size) > room) continue;
             if (b > 0) swap(b, b - 1);
             return true;
         }
         return false;
+    }
+
+    /** The most that the columns can pull a bound down within the volume: filled by the greatest pull per volume first. */
+    private double mostPull(int b, int[] set, int size) {
+        double[] perShare = perVolume[b];
+        double pull = 0;
+        double left = 1;
+        double below = Double.POSITIVE_INFINITY;
+        int after = -1;
+        while (left > 0) {
+            int next = -1;
+            for (int k = 0; k < size; k++) {
+                double v = perShare[set[k]];
+                boolean later = v < below || v == below && k > after;
+                if (later && (next < 0 || v > perShare[set[next]])) next = k;
+            }
+            if (next < 0 || perShare[set[next]] == 0) break;
+            below = perShare[set[next]];
+            after = next;
+            double share = Math.min(left, columns.reach[set[next]] * columns.volume[set[next]]);
+            pull += share * below;
+            left -= share;
+        }
+        return pull;
     }
 
     private void swap(int a, int b) {

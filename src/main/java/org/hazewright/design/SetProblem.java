@@ -150,7 +150,7 @@ public record SetProblem(List<Point> points, List<Candidate> candidates, Limits 
         for (int k = 0; k < set.length; k++) {
             if (k > 0 && set[k] <= set[k - 1]) return false;
             Candidate c = candidates.get(set[k]);
-            if (c.upper == 0 || ++count[c.group.ordinal()] > limits.most(c.group)) return false;
+            if (reach(set[k]) == 0 || ++count[c.group.ordinal()] > limits.most(c.group)) return false;
         }
         for (Conflict c : limits.conflicts) if (holds(set, c.first) && holds(set, c.second)) return false;
         return true;

@@ -1,6 +1,7 @@
 package org.hazewright.design;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 
 /**
@@ -51,8 +52,12 @@ final class TopSets {
     /** Whether the set would enter as things stand. */
     boolean wants(Entry e) {
         if (full() && !before(e, entries.get(most - 1))) return false;
-        for (Entry other : entries) if (java.util.Arrays.equals(other.members, e.members)) return false;
-        return true;
+        return !holds(e.members);
+    }
+
+    boolean holds(int[] members) {
+        for (Entry e : entries) if (Arrays.equals(e.members, members)) return true;
+        return false;
     }
 
     void add(Entry e) {

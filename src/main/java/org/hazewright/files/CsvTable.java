@@ -54,6 +54,11 @@ public final class CsvTable {
         return table;
     }
 
+    /** A table that came out of something else than a text file, a workbook for one; line n of the text is row n there. */
+    public static CsvTable of(String path, String text) {
+        return new CsvTable(new TextFile(path, text, new byte[0]));
+    }
+
     static CsvTable of(TextFile file) {
         return new CsvTable(file);
     }
