@@ -3,11 +3,14 @@ package org.hazewright.desk;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Optional;
 import javafx.application.Platform;
 import javafx.scene.image.WritableImage;
 import org.hazewright.desk.look.Palette;
 import org.hazewright.desk.model.AtBalance;
+import org.hazewright.desk.model.MadeBatch;
 
 /** Makes pictures of every view at two sizes in both themes: see DEVELOPERS.md for the command. */
 public final class Screenshots {
@@ -50,6 +53,30 @@ public final class Screenshots {
         Stagehand.ui(() -> window.balance().field().setText("15.502 g"));
         Stagehand.until("an outlook", () -> at.outlookProperty().get() != null && at.bandProperty().get().isPresent());
         balance(window, w, at, "weigh");
+        Stagehand.ui(() -> {
+            while (!at.nowProperty().get().over()) {
+                AtBalance.Line line = at.nowProperty().get().line();
+                at.enter(line.weighs() ? Double.toString(at.loadWantedG()) + " g" : "");
+            }
+        });
+        balance(window, w, at, "over");
+        Stagehand.ui(() -> window.desk().finishWeighing());
+        Stagehand.until("the batch", () -> window.desk().madeProperty().get().isPresent());
+        MadeBatch made = Stagehand.onUi(() -> window.desk().madeProperty().get().orElseThrow());
+        Stagehand.until("a look", () -> made.seenProperty().get() != null);
+        Stagehand.ui(() -> {
+            List<MadeBatch.Entry> entries = new ArrayList<>();
+            made.points().forEach(p -> entries.add(new MadeBatch.Entry(
+                    p.wavelengthNm(), p.quantity(), Double.toString(p.wantedPerCm() * 1.09), "2 %")));
+            made.measured("time-resolved fit", "bench instrument", entries);
+        });
+        Stagehand.until("a verdict", () -> made.seenProperty().get().verdict().isPresent());
+        Stagehand.ui(made::correct);
+        Stagehand.until("a correction", () -> made.correctionProperty().get().isPresent());
+        for (Palette p : new Palette[] {Palette.LIGHT, Palette.DARK}) {
+            Stagehand.ui(() -> window.look().paletteProperty().set(p));
+            shoot(window, "batch", p, w);
+        }
         Stagehand.ui(() -> window.stage().close());
     }
 

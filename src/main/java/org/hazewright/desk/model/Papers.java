@@ -97,6 +97,11 @@ public final class Papers {
         return one.withChosen(Optional.empty()).equals(other.withChosen(Optional.empty()));
     }
 
+    /** The folder that results go to: beside the brief, or for one that was never saved the person's own folder. */
+    public Path folder() {
+        return open.get().file().map(f -> f.toAbsolutePath().getParent()).orElse(remembered.workFolder());
+    }
+
     Supplier<Tissue.Spectra> spectra() {
         return TissueSpectra.of(shelfFolder.get().orElse(null));
     }
