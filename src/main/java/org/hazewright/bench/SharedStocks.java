@@ -76,8 +76,7 @@ final class SharedStocks {
     }
 
     private List<Stock> best(Ingredient i) {
-        List<Need> with =
-                needs.stream().filter(n -> n.contents.massG(i) > 0).toList();
+        List<Need> with = needs.stream().filter(n -> n.contents.massG(i) > 0).toList();
         if (with.isEmpty()) return List.of();
         Contents first = with.get(0).contents;
         Optional<Ingredient> liquid = first.shelf().liquidOf(first.base());
@@ -94,8 +93,8 @@ final class SharedStocks {
                 best = alone;
             }
             for (int second : RATIOS) {
-                List<Stock> two = List.of(
-                        one, stock(i, liquid.get(), second, (long) ratio * second, Optional.of(one.id())));
+                List<Stock> two =
+                        List.of(one, stock(i, liquid.get(), second, (long) ratio * second, Optional.of(one.id())));
                 cost = cost(i, with, two);
                 if (cost < least) {
                     least = cost;
@@ -117,9 +116,7 @@ final class SharedStocks {
             int from = -1;
             Assembly assembly = new Assembly(c, balance);
             for (int level = stocks.isEmpty() ? -1 : 0; level < stocks.size(); level++) {
-                Dose d = level < 0
-                        ? Dose.neat(i, massG)
-                        : new Dose(i, massG, stocks.subList(0, level + 1), true);
+                Dose d = level < 0 ? Dose.neat(i, massG) : new Dose(i, massG, stocks.subList(0, level + 1), true);
                 double u = Math.min(1, d.relativeUncertainty(balance));
                 double cost = u * u * effect(i, n);
                 if (!Dilutions.weighable(d.weighedG(), balance)) cost += UNWEIGHABLE;
@@ -169,15 +166,13 @@ final class SharedStocks {
     }
 
     private Stock stock(Stock like, int ratio, double g) {
-        return new Stock(
-                like.id(), like.ingredient(), like.lot(), g, like.diluent(), diluentG(ratio, g), like.from());
+        return new Stock(like.id(), like.ingredient(), like.lot(), g, like.diluent(), diluentG(ratio, g), like.from());
     }
 
     private Stock stock(Ingredient i, Ingredient diluent, int ratio, long total, Optional<String> from) {
         double g = Math.max(1, balance.rounded(leastLoadG));
         if (!(g > 0)) throw new Refusal("The balance's smallest load rounds to 0 g.");
-        return new Stock(
-                i.id() + "-1-" + total, i, WeighingOrder.lotOf(i), g, diluent, diluentG(ratio, g), from);
+        return new Stock(i.id() + "-1-" + total, i, WeighingOrder.lotOf(i), g, diluent, diluentG(ratio, g), from);
     }
 
     private double diluentG(int ratio, double g) {

@@ -69,9 +69,8 @@ final class DesignCommand implements Callable<Integer> {
         LocalDate today = LocalDate.now();
         if (briefs.size() == 1) return print(done(briefs.get(0), shelf, work, today), today, text);
         refuseSameResults();
-        List<Outcome> outcomes = briefs.parallelStream()
-                .map(b -> outcome(b, shelf, work, today))
-                .toList();
+        List<Outcome> outcomes =
+                briefs.parallelStream().map(b -> outcome(b, shelf, work, today)).toList();
         return shared.json ? printTogether(outcomes, text, err) : printEach(outcomes, today, text, err);
     }
 
@@ -157,7 +156,11 @@ final class DesignCommand implements Callable<Integer> {
             results.add(Json.object()
                     .with("brief", o.brief.toString())
                     .with("format", 1)
-                    .with("status", o.problem instanceof WriteFailure ? "unwritable" : one == Hazewright.REFUSED ? "refused" : "fault")
+                    .with(
+                            "status",
+                            o.problem instanceof WriteFailure
+                                    ? "unwritable"
+                                    : one == Hazewright.REFUSED ? "refused" : "fault")
                     .with("message", o.problem.getMessage())
                     .fields());
         }

@@ -106,10 +106,12 @@ public final class SeriesSheet {
                 1,
                 0,
                 done + 1,
-                plan.series().title() + " · grams, each row one phantom, from left to right; nothing where there is a dash",
+                plan.series().title()
+                        + " · grams, each row one phantom, from left to right; nothing where there is a dash",
                 Face.QUIET);
         page.text(2, 0, "phantom", Face.HEAD);
-        for (int c = 0; c < columns.size(); c++) page.text(2, c + 1, columns.get(c), Face.HEAD.right().wrap());
+        for (int c = 0; c < columns.size(); c++)
+            page.text(2, c + 1, columns.get(c), Face.HEAD.right().wrap());
         page.text(2, together, "together", Face.HEAD.right());
         page.text(2, done, "done", Face.HEAD.centred());
         page.text(2, done + 1, "weighed otherwise, and remarks", Face.HEAD.indent());
@@ -129,8 +131,7 @@ public final class SeriesSheet {
             page.height(row++, 17);
         }
         page.text(row, 0, "all", SetPage.LINE.ink(Palette.QUIET));
-        for (int c = 1; c <= together; c++)
-            page.formula(row, c, sum(3, c, row - 1, c), grams.ink(Palette.QUIET));
+        for (int c = 1; c <= together; c++) page.formula(row, c, sum(3, c, row - 1, c), grams.ink(Palette.QUIET));
         page.height(row, 17);
         page.sheet.createFreezePane(1, 3);
         page.sheet.getWorkbook().setPrintArea(page.sheet.getWorkbook().getSheetIndex(page.sheet), 0, done + 1, 0, row);

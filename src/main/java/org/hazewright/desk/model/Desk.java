@@ -89,8 +89,7 @@ public final class Desk {
 
     private void solve() {
         if (edits.now() == null || shelf.get().shelf().isEmpty()) return;
-        solving.solve(
-                papers.brief(), shelf.get().shelf().get(), edits.now().chosen());
+        solving.solve(papers.brief(), shelf.get().shelf().get(), edits.now().chosen());
     }
 
     /** Puts a short new brief on the desk. */
@@ -105,7 +104,11 @@ public final class Desk {
         papers.startWith(new Draft(
                         "phantom",
                         "New phantom",
-                        List.of(shelf.get().shelf().flatMap(s -> s.find("water")).map(i -> i.id()).orElseGet(this::anyBase)),
+                        List.of(shelf.get()
+                                .shelf()
+                                .flatMap(s -> s.find("water"))
+                                .map(i -> i.id())
+                                .orElseGet(this::anyBase)),
                         250,
                         List.of(),
                         0,
@@ -137,9 +140,12 @@ public final class Desk {
     /** Turns to the balance with the recipe on the desk; a weighing of it that was broken off goes on at its step. */
     public void standAtBalance() {
         Shown shown = solving.shownProperty().get();
-        if (shown == null || shown.following() || shelf.get().shelf().isEmpty() || weighing.get().isPresent()) return;
-        WeighingLog log = WeighingLog.of(
-                papers.openProperty().get().file(), edits.now().name(), remembered.folder());
+        if (shown == null
+                || shown.following()
+                || shelf.get().shelf().isEmpty()
+                || weighing.get().isPresent()) return;
+        WeighingLog log =
+                WeighingLog.of(papers.openProperty().get().file(), edits.now().name(), remembered.folder());
         Shelf on = shelf.get().shelf().get();
         preparing.request(
                 (stop, progress) -> {
@@ -167,13 +173,15 @@ public final class Desk {
         if (other)
             notices.tell(Notice.asked(
                     "balance",
-                    "A weighing of an earlier recipe of “" + started.prepared().recipe().title() + "” was broken off.",
+                    "A weighing of an earlier recipe of “"
+                            + started.prepared().recipe().title() + "” was broken off.",
                     new Notice.Way("go on with it", () -> turn(started, log)),
                     new Notice.Way("begin anew with this recipe", () -> {
                         log.drop();
                         standAtBalance();
                     })));
-        else if (started.again() && started.prepared().kept().stream().allMatch(w -> w.equals(Weighed.NOTHING))
+        else if (started.again()
+                && started.prepared().kept().stream().allMatch(w -> w.equals(Weighed.NOTHING))
                 && !started.prepared().recipe().massesG().equals(shown.recipe().massesG())) {
             log.drop();
             standAtBalance();
@@ -195,7 +203,9 @@ public final class Desk {
         preparing.request(
                 (stop, progress) -> Started.again(log, on, papers.spectra()),
                 started -> {
-                    long done = started.prepared().kept().stream().filter(Weighed::done).count();
+                    long done = started.prepared().kept().stream()
+                            .filter(Weighed::done)
+                            .count();
                     if (done == 0) return;
                     notices.tell(Notice.asked(
                             "balance",
@@ -215,7 +225,9 @@ public final class Desk {
     /** Records the batch as it was weighed and goes back to the desk. */
     public void finishWeighing() {
         AtBalance done = weighing.get().orElseThrow();
-        Path folder = papers.openProperty().get().file()
+        Path folder = papers.openProperty()
+                .get()
+                .file()
                 .map(f -> f.toAbsolutePath().getParent())
                 .orElse(remembered.folder());
         preparing.request(

@@ -99,10 +99,12 @@ public final class WeighingLog {
         if (line == null) return Weighed.NOTHING;
         String[] words = line.strip().split("\\s+");
         try {
-            List<Double> loads = Arrays.stream(words).skip(1).map(Double::valueOf).toList();
+            List<Double> loads =
+                    Arrays.stream(words).skip(1).map(Double::valueOf).toList();
             return new Weighed(loads, words[0].equals("done"));
         } catch (NumberFormatException e) {
-            throw new Refusal("The weighing kept in " + folder + " has the line “" + line + "”, which is not one of its own.");
+            throw new Refusal(
+                    "The weighing kept in " + folder + " has the line “" + line + "”, which is not one of its own.");
         }
     }
 
@@ -110,7 +112,8 @@ public final class WeighingLog {
     public void drop() {
         if (!Files.isDirectory(folder)) return;
         try (Stream<Path> inside = Files.walk(folder, 1)) {
-            for (Path p : inside.sorted(Comparator.reverseOrder()).collect(Collectors.toList())) Files.deleteIfExists(p);
+            for (Path p : inside.sorted(Comparator.reverseOrder()).collect(Collectors.toList()))
+                Files.deleteIfExists(p);
         } catch (IOException e) {
             return; // a leftover is offered once more, no harm
         }
