@@ -69,11 +69,13 @@ public final class Correcting {
         Refusal.positive("Capacity of the vessel in mL", capacityMl);
         if (!batch.complete())
             throw new Refusal("Of the batch " + batch.id() + " " + batch.weighedCount() + " of "
-                    + batch.weighedG().size() + " weighings are filled in; weigh the rest first, it is planned to suit.");
+                    + batch.weighedG().size()
+                    + " weighings are filled in; weigh the rest first, it is planned to suit.");
         Correcting c = new Correcting(batch, shelf);
         if (capacityMl < c.vesselMl)
-            throw new Refusal("The vessel holds " + Grams.plain(c.vesselMl) + " mL already, and its capacity is said to be "
-                    + Grams.plain(capacityMl) + " mL; correct --capacity-ml.");
+            throw new Refusal(
+                    "The vessel holds " + Grams.plain(c.vesselMl) + " mL already, and its capacity is said to be "
+                            + Grams.plain(capacityMl) + " mL; correct --capacity-ml.");
         return c.find(wantedChance, capacityMl);
     }
 
@@ -192,9 +194,8 @@ public final class Correcting {
                     kappa[i][j] += part.getValue() * perG * learned.factor(what, p.quantity());
                 }
             }
-        double[] vessel = now.predicted().stream()
-                .mapToDouble(p -> p.perCm() * vesselMl)
-                .toArray();
+        double[] vessel =
+                now.predicted().stream().mapToDouble(p -> p.perCm() * vesselMl).toArray();
         return new Additions(points, vessel, vesselMl, kappa, ml);
     }
 
@@ -222,9 +223,10 @@ public final class Correcting {
 
     /** The lot of an ingredient that is in the vessel, so that its coefficients are those of the vessel. */
     private Ingredient asUsed(Ingredient i) {
-        for (Ingredient used : sweepIngredients()) if (used.equals(i) || used.kind().equals(i.id())) return used;
-        throw new Refusal("The vessel holds no " + i.id() + ", a part of the base " + made.base().id()
-                + ", so no fresh base can be added to it.");
+        for (Ingredient used : sweepIngredients())
+            if (used.equals(i) || used.kind().equals(i.id())) return used;
+        throw new Refusal("The vessel holds no " + i.id() + ", a part of the base "
+                + made.base().id() + ", so no fresh base can be added to it.");
     }
 
     private Set<Ingredient> sweepIngredients() {
@@ -239,7 +241,13 @@ public final class Correcting {
                 .orElseThrow(() -> new Refusal("Too little " + what.id()
                         + " to weigh would be needed, and the base has no liquid to dilute it in."));
         Stock s = new Stock(
-                what.id() + "-1-100-correction", what, what.lot().map(l -> l.number()), 1, liquid, 99, Optional.empty());
+                what.id() + "-1-100-correction",
+                what,
+                what.lot().map(l -> l.number()),
+                1,
+                liquid,
+                99,
+                Optional.empty());
         Map<Ingredient, Double> perG = new LinkedHashMap<>();
         perG.put(what, 0.01);
         perG.merge(liquid, 0.99, Double::sum);
@@ -249,7 +257,9 @@ public final class Correcting {
     private Try rounded(List<Pourable> pourables, double[] grams) {
         List<Stock> stocks = new ArrayList<>();
         List<Item> items = new ArrayList<>();
-        for (int i = pourables.size() - 1; i >= 0; i--) { // fresh base last in the list of pourables, first to weigh below
+        for (int i = pourables.size() - 1;
+                i >= 0;
+                i--) { // fresh base last in the list of pourables, first to weigh below
             Pourable p = pourables.get(i);
             if (p.stock().isPresent()) {
                 double g = batch.balance().rounded(grams[i]);
@@ -261,9 +271,7 @@ public final class Correcting {
                     double g = batch.balance().rounded(grams[i] * part.getValue());
                     Ingredient what = part.getKey();
                     if (g > 0)
-                        items.add(
-                                0,
-                                new Item(what, Optional.empty(), what.lot().map(l -> l.number()), g));
+                        items.add(0, new Item(what, Optional.empty(), what.lot().map(l -> l.number()), g));
                 }
         }
         if (items.isEmpty()) return new Try(List.of(), List.of(), made, 0, now);
@@ -303,9 +311,11 @@ public final class Correcting {
         List<String> notes = new ArrayList<>();
         Family family = made.base().family();
         if (!t.items().isEmpty() && family == Family.GEL)
-            notes.add("A gel that has set must be melted again before anything is stirred in; weigh the vessel before and after.");
+            notes.add(
+                    "A gel that has set must be melted again before anything is stirred in; weigh the vessel before and after.");
         if (!t.items().isEmpty() && (family == Family.SILICONE || family == Family.RESIN))
-            notes.add("Only before it cures: what has cured cannot be corrected. Keep to the pot life that the data sheet gives.");
+            notes.add(
+                    "Only before it cures: what has cured cannot be corrected. Keep to the pot life that the data sheet gives.");
         for (Leftover l : Leftover.of(made)) {
             double drawn = t.items().stream()
                     .filter(i -> i.stock().filter(l.stock()::equals).isPresent())
@@ -313,7 +323,8 @@ public final class Correcting {
                     .sum();
             if (drawn > l.leftG())
                 notes.add("Of the stock " + l.stock() + " " + Grams.plain(drawn) + " g are needed and "
-                        + Grams.plain(Math.max(0, l.leftG())) + " g are left; make it again in the same ratio, or add less.");
+                        + Grams.plain(Math.max(0, l.leftG()))
+                        + " g are left; make it again in the same ratio, or add less.");
         }
         return notes;
     }
@@ -356,7 +367,8 @@ public final class Correcting {
                     + " mL would have to be added, and the vessel has room for "
                     + Figures.significant(capacityMl - vesselMl, 3) + " mL.";
         double reached = best.landing().chance();
-        String most = reached > now.chance() ? "At best adding reaches " + percent(reached) + ", " : "Adding does not help: ";
+        String most =
+                reached > now.chance() ? "At best adding reaches " + percent(reached) + ", " : "Adding does not help: ";
         double sure = best.landing().predicted().stream()
                 .mapToDouble(p -> p.uPerCm() / p.point().tolerancePerCm())
                 .max()

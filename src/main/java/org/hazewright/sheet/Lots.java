@@ -51,12 +51,6 @@ final class Lots {
             }
         }
         return batch.withPlan(new Recipe(
-                r.title(),
-                r.base(),
-                r.temperatureC(),
-                r.weighingUncertaintyG(),
-                r.briefSha256(),
-                stocks,
-                items));
+                r.title(), r.base(), r.temperatureC(), r.weighingUncertaintyG(), r.briefSha256(), stocks, items));
     }
 }

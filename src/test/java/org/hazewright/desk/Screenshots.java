@@ -41,8 +41,10 @@ public final class Screenshots {
             shoot(window, "desk", p, w);
         }
         Stagehand.ui(() -> window.desk().standAtBalance());
-        Stagehand.until("the balance", () -> window.desk().weighingProperty().get().isPresent());
-        AtBalance at = Stagehand.onUi(() -> window.desk().weighingProperty().get().orElseThrow());
+        Stagehand.until(
+                "the balance", () -> window.desk().weighingProperty().get().isPresent());
+        AtBalance at =
+                Stagehand.onUi(() -> window.desk().weighingProperty().get().orElseThrow());
         balance(window, w, at, "task");
         Stagehand.ui(() -> {
             while (!at.nowProperty().get().line().name().startsWith("Lipid")) {
@@ -51,7 +53,10 @@ public final class Screenshots {
             }
         });
         Stagehand.ui(() -> window.balance().field().setText("15.502 g"));
-        Stagehand.until("an outlook", () -> at.outlookProperty().get() != null && at.bandProperty().get().isPresent());
+        Stagehand.until(
+                "an outlook",
+                () -> at.outlookProperty().get() != null
+                        && at.bandProperty().get().isPresent());
         balance(window, w, at, "weigh");
         Stagehand.ui(() -> {
             while (!at.nowProperty().get().over()) {

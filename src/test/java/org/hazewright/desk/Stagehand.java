@@ -84,12 +84,15 @@ final class Stagehand {
     static void untilSettled(Window window) {
         until("a settled recipe", () -> {
             var s = window.desk().solving();
-            boolean has = s.shownProperty().get() != null || s.problemProperty().get().isPresent();
+            boolean has =
+                    s.shownProperty().get() != null || s.problemProperty().get().isPresent();
             return has
                     && !s.searchingProperty().get()
                     && !s.lookingForWaysProperty().get()
-                    && (s.curvesProperty().get() != null || s.problemProperty().get().isPresent())
-                    && (s.shownProperty().get() == null || !s.shownProperty().get().following());
+                    && (s.curvesProperty().get() != null
+                            || s.problemProperty().get().isPresent())
+                    && (s.shownProperty().get() == null
+                            || !s.shownProperty().get().following());
         });
         pulse();
     }

@@ -121,7 +121,8 @@ public final class Remembered {
         recent.remove(whole);
         recent.add(0, whole);
         for (int k = 0; k < MOST_RECENT; k++) {
-            if (k < recent.size()) lines.setProperty("recent." + k, recent.get(k).toString());
+            if (k < recent.size())
+                lines.setProperty("recent." + k, recent.get(k).toString());
             else lines.remove("recent." + k);
         }
         write();

@@ -77,13 +77,16 @@ public final class RecipePlace extends VBox {
     }
 
     private void problem() {
-        desk.solving().problemProperty().get().ifPresentOrElse(
-                words -> {
-                    verdict.setText("✕ " + words);
-                    verdict.getStyleClass().setAll("label", "headline", "missed");
-                    List.of(weighing, stocks, causes, limits, ways).forEach(box -> Say.show(box, false));
-                },
-                () -> show(desk.solving().shownProperty().get()));
+        desk.solving()
+                .problemProperty()
+                .get()
+                .ifPresentOrElse(
+                        words -> {
+                            verdict.setText("✕ " + words);
+                            verdict.getStyleClass().setAll("label", "headline", "missed");
+                            List.of(weighing, stocks, causes, limits, ways).forEach(box -> Say.show(box, false));
+                        },
+                        () -> show(desk.solving().shownProperty().get()));
     }
 
     private void show(Shown shown) {
@@ -136,7 +139,8 @@ public final class RecipePlace extends VBox {
 
     private static double volumeMl(Recipe recipe) {
         double ml = 0;
-        for (var e : recipe.massesG().entrySet()) ml += e.getValue() / e.getKey().densityGPerMl();
+        for (var e : recipe.massesG().entrySet())
+            ml += e.getValue() / e.getKey().densityGPerMl();
         return ml;
     }
 
@@ -158,7 +162,8 @@ public final class RecipePlace extends VBox {
         Balance balance = shown.outlook().brief().balance();
         List<Node> boxes = new ArrayList<>();
         for (Stock s : recipe.stocks()) {
-            String from = s.from().map(f -> Words.stock(recipe, recipe.stock(f))).orElse(Words.shortName(s.ingredient()));
+            String from =
+                    s.from().map(f -> Words.stock(recipe, recipe.stock(f))).orElse(Words.shortName(s.ingredient()));
             Label make = Say.wrapped("first make the stock " + Words.ratio(s) + ": " + from + " "
                     + Words.grams(s.ingredientG(), balance) + " g in " + Words.inSentence(s.diluent()) + " "
                     + Words.grams(s.diluentG(), balance) + " g");
@@ -193,7 +198,10 @@ public final class RecipePlace extends VBox {
             who.setAccessibleText(who.getText() + ", " + percent);
             Region filled = new Region();
             filled.getStyleClass().add("bar");
-            filled.setStyle(String.format(Locale.ROOT, "-fx-min-height: 1em; -fx-max-height: 1em; -fx-pref-width: %.2fem;", Math.max(0.3, 9 * c.share() / most)));
+            filled.setStyle(String.format(
+                    Locale.ROOT,
+                    "-fx-min-height: 1em; -fx-max-height: 1em; -fx-pref-width: %.2fem;",
+                    Math.max(0.3, 9 * c.share() / most)));
             HBox line = new HBox(filled, Say.label(percent, "small"));
             line.setAlignment(Pos.CENTER_LEFT);
             line.getStyleClass().add("gap-s");
@@ -239,9 +247,11 @@ public final class RecipePlace extends VBox {
             head.getChildren()
                     .add(new Word("back to the best", () -> desk.editing().choose(java.util.Optional.empty())));
         ways.getChildren().setAll(head, flow);
-        Say.show(ways, desk.solving().shownProperty().get() != null
-                && desk.solving().problemProperty().get().isEmpty()
-                && (looking || chosen || !cards.isEmpty()));
+        Say.show(
+                ways,
+                desk.solving().shownProperty().get() != null
+                        && desk.solving().problemProperty().get().isEmpty()
+                        && (looking || chosen || !cards.isEmpty()));
     }
 
     private Node card(Shown.Card c) {
@@ -249,8 +259,7 @@ public final class RecipePlace extends VBox {
         gauge.land(c.worstMiss());
         gauge.getStyleClass().add("in-card");
         boolean meets = c.outlook().meets();
-        Label chance = Say.label(
-                meets ? Words.times(c.chance()) + " in 100" : "✕ misses", meets ? "lands" : "missed");
+        Label chance = Say.label(meets ? Words.times(c.chance()) + " in 100" : "✕ misses", meets ? "lands" : "missed");
         VBox inside = new VBox(
                 Say.label(Words.capital(c.title()), "strong"),
                 Say.label(c.weighings() + " weighings", "quiet", "small"),
