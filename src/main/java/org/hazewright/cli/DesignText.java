@@ -74,6 +74,9 @@ final class DesignText {
     static String verdict(Answer answer) {
         String chance = times(answer.chance());
         if (answer.meets()) return "Lands inside every tolerance " + chance + " in 100.";
+        if (!answer.search().proven())
+            return "Misses: no recipe that meets every tolerance was found before the search was stopped; this is the closest so"
+                    + " far. Its worst miss is " + Figures.significant(answer.worstMiss(), 3) + " half-widths.";
         return "Misses: no recipe from this shelf meets every tolerance; this is the closest. Its worst miss is "
                 + Figures.significant(answer.worstMiss(), 3) + " half-widths, and "
                 + Figures.significant(answer.bestPossibleWorstMiss(), 3) + " is the best possible.";

@@ -85,7 +85,7 @@ public final class Design {
         for (Searched s : searched) if (s.candidates.base.equals(options.get(0).base())) leading = s;
         List<String> limits = stop.getAsBoolean()
                 ? List.of() // whoever stops the search does not wait for more of them
-                : new HeldBack(brief, leading, options.get(0), bestPossible).sentences();
+                : new HeldBack(brief, leading, options.get(0), bestPossible, stop).sentences();
         long admissible =
                 searched.stream().mapToLong(s -> s.result.admissible()).sum();
         long solved = searched.stream().mapToLong(s -> s.result.solved()).sum();
