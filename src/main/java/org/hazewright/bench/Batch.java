@@ -228,6 +228,33 @@ public record Batch(
         return with(recipe(allStocks, allItems), grams, of, heating, measured, notes);
     }
 
+    /** With the lot that was used at the weighing of that place (from 0); a stock's goes on to what is drawn from it. */
+    public Batch withLot(int n, String lot) {
+        if (n < 0 || n >= weighedG.size())
+            throw new Refusal("The batch " + id + " has no weighing " + (n + 1) + "; it has 1 to " + weighedG.size() + ".");
+        Weighing w = weighings().get(n);
+        List<Stock> stocks = new ArrayList<>(plan.stocks());
+        List<Item> items = new ArrayList<>(plan.items());
+        Optional<String> number = Optional.of(lot);
+        if (w.role() == Weighing.Role.ITEM && w.from().isEmpty()) {
+            Item i = items.get(w.place());
+            items.set(w.place(), new Item(i.ingredient(), i.stock(), number, i.massG()));
+        } else if (w.role() == Weighing.Role.STOCK_SUBSTANCE && w.from().isEmpty()) {
+            Stock s = stocks.get(w.place());
+            stocks.set(
+                    w.place(),
+                    new Stock(s.id(), s.ingredient(), number, s.ingredientG(), s.diluent(), s.diluentG(), s.from()));
+            for (int k = 0; k < items.size(); k++) {
+                Item i = items.get(k);
+                if (i.stock().filter(s.id()::equals).isPresent())
+                    items.set(k, new Item(i.ingredient(), i.stock(), number, i.massG()));
+            }
+        } else
+            throw new Refusal("Weighing " + (n + 1) + " of the batch " + id + " is not out of a bottle whose lot is kept ("
+                    + w.label() + "); give the lot where the bottle itself is weighed.");
+        return withPlan(recipe(stocks, items));
+    }
+
     public Batch withHeating(Heating h) {
         return with(plan, weighedG, corrections, Optional.of(h), measured, notes);
     }

@@ -26,9 +26,8 @@ import org.hazewright.shelf.Shelf;
  *
  * <p>For an added volume the grams are those of {@link Additions}; the chance is that of {@link Learned}, measured values included. Volumes
  * are tried from a two-thousandth of the vessel's up, each a fourth more than the one before, to all that it holds, and the first that
- * suffices is narrowed by halving. What the recipe draws from a stock is poured from that stock; what would be less than the balance's smallest load gets a
- * stock of its own. Grams are planned
- * with the vessel's host index and crowding; every try is judged by the full model.
+ * suffices is narrowed by halving. What the recipe draws from a stock is poured from that stock; what would be less than the balance's
+ * smallest load is left out where that will do, and else diluted first. Grams are planned with the vessel's host index and crowding; every try is judged by the full model.
  */
 public final class Correcting {
     private static final double LEAST_SHARE = 0.0005;
@@ -69,13 +68,11 @@ public final class Correcting {
         Refusal.positive("Capacity of the vessel in mL", capacityMl);
         if (!batch.complete())
             throw new Refusal("Of the batch " + batch.id() + " " + batch.weighedCount() + " of "
-                    + batch.weighedG().size()
-                    + " weighings are filled in; weigh the rest first, it is planned to suit.");
+                    + batch.weighedG().size() + " weighings are filled in; weigh the rest first, it is planned to suit.");
         Correcting c = new Correcting(batch, shelf);
         if (capacityMl < c.vesselMl)
-            throw new Refusal(
-                    "The vessel holds " + Grams.plain(c.vesselMl) + " mL already, and its capacity is said to be "
-                            + Grams.plain(capacityMl) + " mL; correct --capacity-ml.");
+            throw new Refusal("The vessel holds " + Grams.plain(c.vesselMl) + " mL already, and its capacity is said to be "
+                    + Grams.plain(capacityMl) + " mL; correct --capacity-ml.");
         return c.find(wantedChance, capacityMl);
     }
 
@@ -86,7 +83,8 @@ public final class Correcting {
     }
 
     /** Something that can be poured: out of a bottle or a stock, or fresh base. */
-    private record Pourable(Map<Ingredient, Double> perG, Optional<Stock> stock, Optional<Stock> toMake) {}
+    private record Pourable(
+            String label, Map<Ingredient, Double> perG, Optional<Stock> stock, Optional<Stock> toMake) {}
 
     private record Try(List<Stock> stocks, List<Item> items, Recipe after, double addedMl, Learned.Landing landing) {}
 
@@ -139,7 +137,7 @@ public final class Correcting {
         }
 
         private boolean look(double addedMl) {
-            Optional<Try> t = attempt(addedMl);
+            Optional<Try> t = attempt(addedMl, wanted);
             if (t.isEmpty() || t.get().addedMl() > most * (1 + 1e-9)) return false;
             double chance = t.get().landing().chance();
             boolean nearer = best != null
@@ -152,26 +150,31 @@ public final class Correcting {
         }
     }
 
-    private Optional<Try> attempt(double addedMl) {
-        Set<Ingredient> small = new LinkedHashSet<>();
-        for (int round = 0; round < 3; round++) {
-            List<Pourable> pourables = pourables(small);
-            Optional<double[]> grams = additions(pourables).best(addedMl);
-            if (grams.isEmpty()) return Optional.empty();
-            int before = small.size();
-            for (int i = 0; i < pourables.size(); i++) {
-                Pourable p = pourables.get(i);
-                double g = grams.get()[i];
-                boolean neat = p.stock().isEmpty() && p.perG().size() == 1;
-                Ingredient only = p.perG().keySet().iterator().next();
-                if (neat
-                        && !batch.isBasePart(only)
-                        && g >= batch.balance().readabilityG() / 2
-                        && g < batch.balance().smallestLoadG()) small.add(only);
-            }
-            if (small.size() == before) return Optional.of(rounded(pourables, grams.get()));
+    /** The best of that volume; what is too little to weigh is left out where that does, and diluted first where it does not. */
+    private Optional<Try> attempt(double addedMl, double wanted) {
+        Optional<Try> without = attempt(addedMl, Set.of(), true);
+        if (without.isPresent() && without.get().landing().chance() >= wanted) return without;
+        Optional<Try> with = attempt(addedMl, Set.of(), false);
+        if (with.isEmpty()) return without;
+        boolean better = without.isEmpty()
+                || with.get().landing().chance() > without.get().landing().chance() + 0.005;
+        return better ? with : without;
+    }
+
+    private Optional<Try> attempt(double addedMl, Set<String> known, boolean leaveOut) {
+        List<Pourable> pourables = pourables(known, leaveOut);
+        Optional<double[]> grams = additions(pourables).best(addedMl);
+        if (grams.isEmpty()) return Optional.empty();
+        Set<String> small = new LinkedHashSet<>(known);
+        for (int i = 1; i < pourables.size(); i++) { // the first is fresh base
+            double g = grams.get()[i];
+            boolean diluted = pourables.get(i).toMake().isPresent();
+            if (!diluted && g >= batch.balance().readabilityG() / 2 && g < batch.balance().smallestLoadG())
+                small.add(pourables.get(i).label());
         }
-        return Optional.empty();
+        return small.size() > known.size()
+                ? attempt(addedMl, small, leaveOut)
+                : Optional.of(rounded(pourables, grams.get()));
     }
 
     private Additions additions(List<Pourable> pourables) {
@@ -194,72 +197,72 @@ public final class Correcting {
                     kappa[i][j] += part.getValue() * perG * learned.factor(what, p.quantity());
                 }
             }
-        double[] vessel =
-                now.predicted().stream().mapToDouble(p -> p.perCm() * vesselMl).toArray();
+        double[] vessel = now.predicted().stream()
+                .mapToDouble(p -> p.perCm() * vesselMl)
+                .toArray();
         return new Additions(points, vessel, vesselMl, kappa, ml);
     }
 
-    /** Fresh base, every stock that an item was drawn from, and every other ingredient that went in neat. */
-    private List<Pourable> pourables(Set<Ingredient> small) {
+    /** Fresh base, every stock that an item was drawn from, and every other ingredient that went in neat; the small ones left out or diluted. */
+    private List<Pourable> pourables(Set<String> small, boolean leaveOut) {
         List<Pourable> list = new ArrayList<>();
         Map<Ingredient, Double> base = new LinkedHashMap<>();
         for (var part : shelf.partsOf(made.base()).entrySet()) base.put(asUsed(part.getKey()), part.getValue());
-        list.add(new Pourable(base, Optional.empty(), Optional.empty()));
+        list.add(new Pourable("base", base, Optional.empty(), Optional.empty()));
         Set<String> seen = new LinkedHashSet<>();
         for (Item i : made.items()) {
-            if (i.stock().isPresent()) {
-                String id = i.stock().get();
-                if (seen.add("stock " + id))
-                    list.add(new Pourable(made.contentPerG(id), Optional.of(made.stock(id)), Optional.empty()));
-            } else if (!batch.isBasePart(i.ingredient())
-                    && seen.add(i.ingredient().id())) {
-                Ingredient what = i.ingredient();
-                if (small.contains(what)) list.add(stockOf(what));
-                else list.add(new Pourable(Map.of(what, 1.0), Optional.empty(), Optional.empty()));
-            }
+            if (i.stock().isEmpty() && batch.isBasePart(i.ingredient()) || !seen.add(i.label())) continue;
+            Optional<Stock> from = i.stock().map(made::stock);
+            Pourable p = from.isPresent()
+                    ? new Pourable(i.label(), made.contentPerG(i.stock().get()), from, Optional.empty())
+                    : new Pourable(i.label(), Map.of(i.ingredient(), 1.0), Optional.empty(), Optional.empty());
+            boolean tooLittle = small.contains(p.label());
+            if (tooLittle && leaveOut) continue;
+            list.add(tooLittle ? diluted(p, i.ingredient(), from) : p);
         }
         return list;
     }
 
     /** The lot of an ingredient that is in the vessel, so that its coefficients are those of the vessel. */
     private Ingredient asUsed(Ingredient i) {
-        for (Ingredient used : sweepIngredients())
-            if (used.equals(i) || used.kind().equals(i.id())) return used;
-        throw new Refusal("The vessel holds no " + i.id() + ", a part of the base "
-                + made.base().id() + ", so no fresh base can be added to it.");
+        for (Ingredient used : sweepIngredients()) if (used.equals(i) || used.kind().equals(i.id())) return used;
+        throw new Refusal("The vessel holds no " + i.id() + ", a part of the base " + made.base().id()
+                + ", so no fresh base can be added to it.");
     }
 
     private Set<Ingredient> sweepIngredients() {
         return made.massesG().keySet();
     }
 
-    private Pourable stockOf(Ingredient what) {
+    /** A bottle diluted a hundred times, a stock ten times more, so that the balance can weigh it. */
+    private Pourable diluted(Pourable p, Ingredient what, Optional<Stock> from) {
         Ingredient liquid = shelf.partsOf(made.base()).keySet().stream()
                 .filter(i -> i.form() == Form.LIQUID)
                 .findFirst()
                 .map(this::asUsed)
-                .orElseThrow(() -> new Refusal("Too little " + what.id()
+                .orElseThrow(() -> new Refusal("Too little " + p.label()
                         + " to weigh would be needed, and the base has no liquid to dilute it in."));
+        int ratio = from.isPresent() ? 10 : 100;
+        double grams = batch.balance().rounded(Math.max(0.5, 25 * batch.balance().smallestLoadG()));
         Stock s = new Stock(
-                what.id() + "-1-100-correction",
+                p.label() + "-1-" + ratio + "-correction-" + (batch.correctionCount() + 1),
                 what,
-                what.lot().map(l -> l.number()),
-                1,
+                from.isPresent() ? from.get().lot() : what.lot().map(l -> l.number()),
+                grams,
                 liquid,
-                99,
-                Optional.empty());
+                batch.balance().rounded((ratio - 1) * grams),
+                from.map(Stock::id));
         Map<Ingredient, Double> perG = new LinkedHashMap<>();
-        perG.put(what, 0.01);
-        perG.merge(liquid, 0.99, Double::sum);
-        return new Pourable(perG, Optional.of(s), Optional.of(s));
+        double share = s.ingredientG() / s.totalG();
+        p.perG().forEach((i, g) -> perG.merge(i, g * share, Double::sum));
+        perG.merge(liquid, 1 - share, Double::sum);
+        return new Pourable(p.label(), perG, Optional.of(s), Optional.of(s));
     }
 
     private Try rounded(List<Pourable> pourables, double[] grams) {
         List<Stock> stocks = new ArrayList<>();
         List<Item> items = new ArrayList<>();
-        for (int i = pourables.size() - 1;
-                i >= 0;
-                i--) { // fresh base last in the list of pourables, first to weigh below
+        for (int i = pourables.size() - 1; i >= 0; i--) { // fresh base last in the list of pourables, first to weigh below
             Pourable p = pourables.get(i);
             if (p.stock().isPresent()) {
                 double g = batch.balance().rounded(grams[i]);
@@ -271,7 +274,9 @@ public final class Correcting {
                     double g = batch.balance().rounded(grams[i] * part.getValue());
                     Ingredient what = part.getKey();
                     if (g > 0)
-                        items.add(0, new Item(what, Optional.empty(), what.lot().map(l -> l.number()), g));
+                        items.add(
+                                0,
+                                new Item(what, Optional.empty(), what.lot().map(l -> l.number()), g));
                 }
         }
         if (items.isEmpty()) return new Try(List.of(), List.of(), made, 0, now);
@@ -311,11 +316,9 @@ public final class Correcting {
         List<String> notes = new ArrayList<>();
         Family family = made.base().family();
         if (!t.items().isEmpty() && family == Family.GEL)
-            notes.add(
-                    "A gel that has set must be melted again before anything is stirred in; weigh the vessel before and after.");
+            notes.add("A gel that has set must be melted again before anything is stirred in; weigh the vessel before and after.");
         if (!t.items().isEmpty() && (family == Family.SILICONE || family == Family.RESIN))
-            notes.add(
-                    "Only before it cures: what has cured cannot be corrected. Keep to the pot life that the data sheet gives.");
+            notes.add("Only before it cures: what has cured cannot be corrected. Keep to the pot life that the data sheet gives.");
         for (Leftover l : Leftover.of(made)) {
             double drawn = t.items().stream()
                     .filter(i -> i.stock().filter(l.stock()::equals).isPresent())
@@ -323,8 +326,7 @@ public final class Correcting {
                     .sum();
             if (drawn > l.leftG())
                 notes.add("Of the stock " + l.stock() + " " + Grams.plain(drawn) + " g are needed and "
-                        + Grams.plain(Math.max(0, l.leftG()))
-                        + " g are left; make it again in the same ratio, or add less.");
+                        + Grams.plain(Math.max(0, l.leftG())) + " g are left; make it again in the same ratio, or add less.");
         }
         return notes;
     }
@@ -367,8 +369,7 @@ public final class Correcting {
                     + " mL would have to be added, and the vessel has room for "
                     + Figures.significant(capacityMl - vesselMl, 3) + " mL.";
         double reached = best.landing().chance();
-        String most =
-                reached > now.chance() ? "At best adding reaches " + percent(reached) + ", " : "Adding does not help: ";
+        String most = reached > now.chance() ? "At best adding reaches " + percent(reached) + ", " : "Adding does not help: ";
         double sure = best.landing().predicted().stream()
                 .mapToDouble(p -> p.uPerCm() / p.point().tolerancePerCm())
                 .max()

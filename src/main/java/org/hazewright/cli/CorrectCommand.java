@@ -98,7 +98,7 @@ final class CorrectCommand implements Callable<Integer> {
             table.row(
                     "make " + s.id(),
                     Grams.shown(s.ingredientG(), batch.balance()),
-                    s.ingredient().id() + " + " + Grams.shown(s.diluentG(), batch.balance()) + " "
+                    s.from().orElse(s.ingredient().id()) + " + " + Grams.shown(s.diluentG(), batch.balance()) + " "
                             + s.diluent().id());
         for (Item i : c.items())
             table.row(

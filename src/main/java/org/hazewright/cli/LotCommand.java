@@ -318,7 +318,11 @@ final class LotCommand implements Runnable {
                 String fresh = number != null ? number : old + last;
                 Source source = new Source(
                         Source.Basis.MEASURED,
-                        "Learned from " + batches.stream().map(MeasuredBatch::name).distinct().toList() + " up to " + last
+                        "Learned from "
+                                + String.join(
+                                        ", ",
+                                        batches.stream().map(MeasuredBatch::name).distinct().toList())
+                                + " up to " + last
                                 + ", beginning at the figures of " + i.id() + ".");
                 NewLot lot = new NewLot(LotWriter.id(i.kind(), fresh), lot(i, fresh), source);
                 written.addAll(LotWriter.write(folder, lot.learned(i, update.after()), flags(flags, i)));

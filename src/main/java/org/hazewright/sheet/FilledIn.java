@@ -76,7 +76,12 @@ public record FilledIn(
                                 + Nearest.to(key, place.keySet())
                                         .map(k -> " Nearest there is " + words(k) + ".")
                                         .orElse(""));
-        Batch now = Lots.used(batch, lots);
+        Batch now = batch;
+        for (var e : lots.entrySet()) {
+            Weighing w = weighings.get(place.getOrDefault(e.getKey(), 0));
+            boolean bottle = w.from().isEmpty() && w.role() != Weighing.Role.STOCK_DILUENT;
+            if (bottle && place.containsKey(e.getKey())) now = now.withLot(place.get(e.getKey()), e.getValue());
+        }
         for (var e : weighedG.entrySet()) now = now.withWeighed(place.get(e.getKey()), e.getValue());
         for (String note : notes) now = now.withNote(note);
         return now.madeBy(operator.orElse(batch.who()), date.orElse(batch.on()));
