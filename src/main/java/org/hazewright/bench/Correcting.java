@@ -27,7 +27,8 @@ import org.hazewright.shelf.Shelf;
  * <p>For an added volume the grams are those of {@link Additions}; the chance is that of {@link Learned}, measured values included. Volumes
  * are tried from a two-thousandth of the vessel's up, each a fourth more than the one before, to all that it holds, and the first that
  * suffices is narrowed by halving. What the recipe draws from a stock is poured from that stock; what would be less than the balance's smallest load gets a
- * stock of its own. Host index and crowding are held at those of the vessel, and the last word is said by the full model.
+ * stock of its own. Grams are planned
+ * with the vessel's host index and crowding; every try is judged by the full model.
  */
 public final class Correcting {
     private static final double LEAST_SHARE = 0.0005;
@@ -76,8 +77,10 @@ public final class Correcting {
         return c.find(wantedChance, capacityMl);
     }
 
+    /** On the full model, crowding and host index of the recipe itself. */
     private Learned.Landing landing(Recipe recipe) {
-        return learned.landing(recipe, points, sweep, batch.balance().capacityG());
+        Sweep own = Sweep.of(Mixture.of(recipe), sweep.wavelengthsNm());
+        return learned.landing(recipe, points, own, batch.balance().capacityG());
     }
 
     /** Something that can be poured: out of a bottle or a stock, or fresh base. */
@@ -281,13 +284,6 @@ public final class Correcting {
     }
 
     private Correction correction(Correction.Outcome outcome, Try t, double wanted, String reason) {
-        Learned.Landing then = t.items().isEmpty()
-                ? now
-                : learned.landing(
-                        t.after(),
-                        points,
-                        Sweep.of(Mixture.of(t.after()), sweep.wavelengthsNm()),
-                        batch.balance().capacityG());
         return new Correction(
                 outcome,
                 t.stocks(),
@@ -296,7 +292,7 @@ public final class Correcting {
                 t.addedMl(),
                 vesselMl + t.addedMl(),
                 now,
-                then,
+                t.landing(),
                 wanted,
                 reason,
                 notes(t),
@@ -335,7 +331,7 @@ public final class Correcting {
         }
         double chance = Outlook.of(batch.brief().orElseThrow(), plan, 8_000).chance();
         return new Correction.Fresh(
-                grams, Weighing.of(plan).size(), unpriced.isEmpty() ? cost : Double.NaN, unpriced, chance);
+                grams, Weighing.of(plan).size(), cost, unpriced, chance);
     }
 
     /** The plan without corrections. */

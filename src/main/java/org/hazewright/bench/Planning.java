@@ -95,7 +95,9 @@ final class Planning {
         if (!inHand.isEmpty()) return inHand;
         if (wish == StockPlan.Wish.STOCK_IN_HAND) return ways;
         List<Dose> neat = ways.stream().filter(Dose::isNeat).toList();
-        return neat.isEmpty() ? List.of(Dose.neat(ways.get(0).ingredient(), ways.get(0).massG())) : neat;
+        return neat.isEmpty()
+                ? List.of(Dose.neat(ways.get(0).ingredient(), ways.get(0).massG()))
+                : neat;
     }
 
     /** The ways that fit the base's liquid when all else goes in neat; neat where none does. */

@@ -112,9 +112,10 @@ final class CorrectCommand implements Callable<Integer> {
     }
 
     private static String cost(Correction.Fresh fresh) {
-        return Double.isNaN(fresh.cost())
-                ? "price unknown (none for " + String.join(", ", fresh.unpriced()) + ")"
-                : "about " + Figures.significant(fresh.cost(), 3) + " in the shelf's prices";
+        String none = String.join(", ", fresh.unpriced());
+        if (!(fresh.cost() > 0)) return "of unknown price (the shelf has none for " + none + ")";
+        return "about " + Figures.significant(fresh.cost(), 3) + " in the shelf's prices"
+                + (none.isEmpty() ? "" : " (no price for " + none + ")");
     }
 
     private static Json json(Correction c) {

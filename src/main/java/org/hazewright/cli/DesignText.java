@@ -26,6 +26,9 @@ import org.hazewright.shelf.Ingredient;
 
 /** An answer as a page of text that could be carried to a balance. */
 final class DesignText {
+    /** A slip that moves no target by this share of its half-width is not listed. */
+    private static final double SLIGHT = 0.05;
+
     private final Answer answer;
     private final Shared.Units units;
     private final PrintWriter out;
@@ -194,12 +197,17 @@ final class DesignText {
         out.println("What a slip does, in half-widths of the target it moves most");
         TextTable table = new TextTable("  ", "lrrl");
         table.row("", "1 % more", "1 mg more", "");
+        boolean rest = false;
         for (Sensitivity s :
                 Sensitivity.of(answer.recipe(), balance, answer.brief().points())) {
             Weighing w = s.weighing();
             Sensitivity.Effect worst = s.effects().stream()
                     .max(Comparator.comparingDouble(e -> Math.abs(e.perPercentMiss())))
                     .orElseThrow();
+            if (Math.abs(worst.perPercentMiss()) < SLIGHT && Math.abs(worst.perMgMiss()) < SLIGHT) {
+                rest = true;
+                continue;
+            }
             table.row(
                     w.label() + w.into().map(stock -> " in " + stock).orElse(""),
                     signed(worst.perPercentMiss()),
@@ -207,6 +215,7 @@ final class DesignText {
                     worst.point().quantity().sign() + " "
                             + Figures.plain(worst.point().wavelengthNm()));
         }
+        if (rest) table.row("all else", "<" + Figures.fixed(SLIGHT, 2), "<" + Figures.fixed(SLIGHT, 2), "");
         table.print(out);
         BetterKnown.of(answer.brief(), answer.recipe(), Answering.DRAWS)
                 .ifPresent(b -> wrapped("Worth knowing better: with half the uncertainty of " + b.what() + " it lands "

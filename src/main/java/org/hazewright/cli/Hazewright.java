@@ -29,9 +29,11 @@ import picocli.CommandLine.Spec;
             DesignCommand.class,
             SeriesCommand.class,
             PredictCommand.class,
+            ReadingsCommand.class,
             IngredientsCommand.class,
             BatchCommand.class,
             CorrectCommand.class,
+            LotCommand.class,
             ParticlesCommand.class,
         },
         footer = {
@@ -60,7 +62,8 @@ public final class Hazewright implements Runnable {
     @Option(
             names = "--ingredients",
             paramLabel = "DIR",
-            description = "Shelf for the window (default: the folder ingredients here, else the shelf that comes with the program).")
+            description =
+                    "Shelf for the window (default: the folder ingredients here, else the shelf that comes with the program).")
     private Path ingredients;
 
     @Parameters(

@@ -1,9 +1,9 @@
 package org.hazewright.sheet;
 
 import java.util.ArrayList;
-import java.util.List;
 import java.util.Collection;
 import java.util.LinkedHashMap;
+import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.stream.Collectors;
