@@ -34,6 +34,7 @@ import org.hazewright.desk.parts.NoticeBar;
 import org.hazewright.desk.parts.Say;
 import org.hazewright.desk.parts.SystemChooser;
 import org.hazewright.desk.parts.Word;
+import org.hazewright.desk.readings.ReadingsPlace;
 import org.hazewright.desk.recipe.RecipePlace;
 import org.hazewright.desk.spectra.SpectraPlace;
 
@@ -130,6 +131,7 @@ public final class Window {
         recipe.getStyleClass().add("recipe-width");
         VBox middle = new VBox(
                 new Hint(desk.remembered(), "drag", "Drag an amber box, or type on the left: the recipe follows."), spectra);
+        middle.getChildren().add(new ReadingsPlace(desk.foreseeing(), look, desk.remembered()));
         middle.getStyleClass().add("middle");
         VBox.setVgrow(spectra, Priority.ALWAYS);
         desktop.setLeft(brief);

@@ -36,6 +36,7 @@ public final class Screenshots {
         Path memory = Files.createTempDirectory("memory");
         Window window = Stagehand.open(memory, w, h, Optional.empty(), Optional.empty());
         Stagehand.untilSettled(window);
+        Stagehand.until("readings", () -> window.desk().foreseeing().foreseenProperty().get() != null);
         for (Palette p : new Palette[] {Palette.LIGHT, Palette.DARK}) {
             Stagehand.ui(() -> window.look().paletteProperty().set(p));
             shoot(window, "desk", p, w);

@@ -42,6 +42,7 @@ public final class BriefPlace extends VBox {
     private final Word balance = new Word("", () -> {});
     private final TargetTable table;
     private final VBox balancePanel = new VBox();
+    private List<Object> offered = List.of();
 
     public BriefPlace(Desk desk, Runnable openShelf) {
         this.desk = desk;
@@ -103,6 +104,7 @@ public final class BriefPlace extends VBox {
         grid.addRow(1, Say.quiet("Batch"), amount);
         VBox moulds = new VBox();
         desk.edits().nowProperty().addListener((p, before, now) -> {
+            if (before != null && now != null && before.moulds().equals(now.moulds())) return;
             moulds.getChildren().clear();
             if (now != null && !now.moulds().isEmpty())
                 moulds.getChildren().add(Say.wrapped("for " + moulds(now.moulds()), "quiet", "small"));
@@ -198,7 +200,9 @@ public final class BriefPlace extends VBox {
                 .collect(Collectors.joining(" or "));
         base.setText(names);
         base.setAccessibleText("Base: " + names + "; press to choose");
-        shelf.ifPresent(s -> bases(draft, s));
+        List<Object> choice = List.of(draft.bases(), shelf);
+        if (!choice.equals(offered)) shelf.ifPresent(s -> bases(draft, s));
+        offered = choice;
     }
 
     private void bases(Draft draft, Shelf shelf) {

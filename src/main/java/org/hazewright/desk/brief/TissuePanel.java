@@ -41,7 +41,9 @@ final class TissuePanel extends VBox {
         ask(grid, "scatter power", "", "1.1");
         said.setText("Fills the table as you type. µs′ follows (λ/500 nm) to the minus scatter power.");
         getChildren().addAll(Say.label("Tissue-like values", "strong"), grid, said);
-        desk.edits().nowProperty().addListener((p, before, now) -> take(now));
+        desk.edits().nowProperty().addListener((p, before, now) -> {
+            if (before == null || now == null || before.tissue() != now.tissue()) take(now);
+        });
         take(desk.edits().now());
     }
 

@@ -42,10 +42,11 @@ public final class Desk {
     private final BriefEditing editing = new BriefEditing(edits);
     private final Solving solving;
     private final Papers papers;
+    private final Foreseeing foreseeing;
     private final Work.Lane preparing;
     private final ReadOnlyObjectWrapper<Optional<MadeBatch>> made = new ReadOnlyObjectWrapper<>(Optional.empty());
     private final ReadOnlyObjectWrapper<Optional<AtBalance>> weighing = new ReadOnlyObjectWrapper<>(Optional.empty());
-    private Tissue.Spectra spectra;
+    private volatile Tissue.Spectra spectra;
 
     public Desk(Work work, Optional<Path> shelfFolder, Remembered remembered) {
         this.work = work;
@@ -56,6 +57,7 @@ public final class Desk {
         solving = new Solving(work);
         papers = new Papers(work, edits, remembered, notices, () -> shelf.get().folder());
         edits.nowProperty().addListener((p, before, now) -> solve());
+        foreseeing = new Foreseeing(this);
     }
 
     private record Begun(ShelfState shelf, Brief brief) {}
@@ -315,10 +317,11 @@ public final class Desk {
                             + " (.recipe.toml) or a batch (.batch.toml)."));
     }
 
-    /** Spectra for tissue-like values, read when first asked for. */
+    /** Spectra for tissue-like values and oximeters, read when first asked for; on any thread. */
     public Tissue.Spectra spectra() {
-        if (spectra == null) spectra = papers.spectra().get();
-        return spectra;
+        Tissue.Spectra known = spectra;
+        if (known == null) spectra = known = papers.spectra().get();
+        return known;
     }
 
     public Work work() {
@@ -351,5 +354,9 @@ public final class Desk {
 
     public Papers papers() {
         return papers;
+    }
+
+    public Foreseeing foreseeing() {
+        return foreseeing;
     }
 }

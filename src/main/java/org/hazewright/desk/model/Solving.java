@@ -28,7 +28,7 @@ public final class Solving {
     private static final long REST_MS = 120;
 
     private static final int WAYS = 3;
-    private static final int DRAWS_WHILE_FOLLOWING = 2000;
+    private static final int DRAWS_WHILE_FOLLOWING = 1000;
 
     private final Work.Lane following;
     private final Work.Lane search;
