@@ -158,7 +158,8 @@ final class HeldBack {
     private String names(int[] members, SetProblem.Group group) {
         List<String> names = new ArrayList<>();
         for (int m : members)
-            if (searched.problem().candidates().get(m).group() == group) names.add(ingredient(m).id());
+            if (searched.problem().candidates().get(m).group() == group)
+                names.add(ingredient(m).id());
         return names.isEmpty() ? "none of which is needed" : join(names);
     }
 
