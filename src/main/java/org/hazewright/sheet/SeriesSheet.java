@@ -178,7 +178,7 @@ public final class SeriesSheet {
                 page.number(row, 6, x.uPerCm(), figure.format("± " + format).ink(Palette.QUIET));
                 page.number(row, 7, x.miss(), figure.format("+0.00;−0.00;0.00"));
                 page.rich(row, 8, LandingGauge.drawn(x.miss(), 8, page.looks), SetPage.LINE.centred());
-                String lands = first ? Figures.fixed(100 * p.outlook().chance(), 0) + " times in 100" : "";
+                String lands = first ? often(p.outlook().chance()) : "";
                 page.text(
                         row,
                         9,
@@ -193,6 +193,12 @@ public final class SeriesSheet {
         page.sheet.createFreezePane(1, 3);
         page.sheet.getWorkbook().setPrintArea(page.sheet.getWorkbook().getSheetIndex(page.sheet), 0, 9, 0, row - 1);
         PrintSetup.pages(page.sheet, false, 2);
+    }
+
+    /** Never 100 for what is not certain. */
+    private static String often(double chance) {
+        long times = Math.round(100 * chance);
+        return (times == 100 && chance < 1 ? "more than 99" : Long.toString(times)) + " in 100";
     }
 
     private void steps(Page page) {

@@ -69,7 +69,8 @@ class BetterKnownTest {
     @Test
     void halvingTheOneFigureThatMatters() {
         Recipe recipe = recipe(known("lipid-emulsion-20", 0, 0.05), known("ink-demo", 0.001, 0), 1e-6);
-        BetterKnown better = BetterKnown.of(brief(recipe, 0.05, 1e-6), recipe, 40_000).orElseThrow();
+        BetterKnown better =
+                BetterKnown.of(brief(recipe, 0.05, 1e-6), recipe, 40_000).orElseThrow();
         assertEquals("the scattering of lipid-emulsion-20", better.what());
         assertEquals(0.683, better.chance(), 0.012, "0.23 % is the standard error; host and densities add a little");
         assertEquals(0.954, better.then(), 0.008);
@@ -78,7 +79,8 @@ class BetterKnownTest {
     @Test
     void theBalanceCanBeTheFigure() {
         Recipe recipe = recipe(known("lipid-emulsion-20", 0, 0.001), known("ink-demo", 0.001, 0), 0.003);
-        BetterKnown better = BetterKnown.of(brief(recipe, 0.05, 0.003), recipe, 20_000).orElseThrow();
+        BetterKnown better =
+                BetterKnown.of(brief(recipe, 0.05, 0.003), recipe, 20_000).orElseThrow();
         assertEquals("the balance's load", better.what());
         assertTrue(better.then() > better.chance() + 0.05, better.toString());
     }

@@ -229,7 +229,12 @@ class SeriesCommandTest {
         Interruption asked = new Interruption();
         asked.ask();
         String brief = BATH.replace("0.1", "0.30").replace("690", "970");
-        Ran ran = run(asked, "design", file("bath", brief), "--out", folder.resolve("out").toString());
+        Ran ran = run(
+                asked,
+                "design",
+                file("bath", brief),
+                "--out",
+                folder.resolve("out").toString());
         assertEquals(3, ran.status, ran.err);
         assertTrue(ran.out.contains("before the search was stopped"), ran.out);
         assertFalse(ran.out.contains("no recipe from this shelf meets"), ran.out);
