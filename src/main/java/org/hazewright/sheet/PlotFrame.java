@@ -44,7 +44,8 @@ record PlotFrame(Rectangle2D area, double x0, double x1, double y0, double y1) {
     private void yGrid(Graphics2D g) {
         g.setFont(g.getFont().deriveFont(Font.PLAIN, 11f));
         double step = roundStep((y1 - y0) / 6);
-        int decimals = Math.max(0, java.math.BigDecimal.valueOf(step).stripTrailingZeros().scale());
+        int decimals = Math.max(
+                0, java.math.BigDecimal.valueOf(step).stripTrailingZeros().scale());
         for (double y = Math.ceil(y0 / step - 1e-9) * step; y <= y1 * (1 + 1e-9); y += step) {
             g.setColor(Canvas.colour(Palette.RULE));
             g.draw(new Line2D.Double(area.getX(), py(y), area.getMaxX(), py(y)));
