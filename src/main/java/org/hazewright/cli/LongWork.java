@@ -31,8 +31,7 @@ final class LongWork {
         this("Searching", err, silent, interruption, nanoTime);
     }
 
-    private LongWork(
-            String doing, PrintWriter err, boolean silent, Interruption interruption, LongSupplier nanoTime) {
+    private LongWork(String doing, PrintWriter err, boolean silent, Interruption interruption, LongSupplier nanoTime) {
         this.doing = doing;
         this.err = err;
         this.silent = silent;

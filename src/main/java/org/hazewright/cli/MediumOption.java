@@ -23,7 +23,9 @@ record MediumOption(Medium medium, Spread spread) {
             String key = part.substring(0, equals).strip();
             if (!KNOWN.contains(key))
                 throw new Refusal("--medium holds \"" + key + "\", which is not known."
-                        + Nearest.to(key, KNOWN).map(n -> " Perhaps " + n + " is meant.").orElse(LIKE));
+                        + Nearest.to(key, KNOWN)
+                                .map(n -> " Perhaps " + n + " is meant.")
+                                .orElse(LIKE));
             if (values.put(key, number(key, part.substring(equals + 1).strip())) != null)
                 throw new Refusal("--medium names " + key + " twice; name it once.");
         }
@@ -42,7 +44,8 @@ record MediumOption(Medium medium, Spread spread) {
         try {
             return Double.parseDouble(text);
         } catch (NumberFormatException e) {
-            throw new Refusal("--medium gives " + key + " as \"" + text + "\"; it must be a number with a decimal point.");
+            throw new Refusal(
+                    "--medium gives " + key + " as \"" + text + "\"; it must be a number with a decimal point.");
         }
     }
 }

@@ -60,7 +60,8 @@ final class ReadingsCommand implements Callable<Integer> {
     @Option(
             names = "--medium",
             paramLabel = "NAME=VALUE,…",
-            description = "In place of a recipe: mua_per_cm, musp_per_cm, g and n; u_mua_per_cm and u_musp_per_cm if known.")
+            description =
+                    "In place of a recipe: mua_per_cm, musp_per_cm, g and n; u_mua_per_cm and u_musp_per_cm if known.")
     private String medium;
 
     @Option(
@@ -86,7 +87,8 @@ final class ReadingsCommand implements Callable<Integer> {
     @Option(
             names = "--brief",
             paramLabel = "BRIEF",
-            description = "Brief whose mould the phantom is cast in (default: the one beside the recipe that it answers).")
+            description =
+                    "Brief whose mould the phantom is cast in (default: the one beside the recipe that it answers).")
     private Path brief;
 
     @Option(names = "--picture", paramLabel = "FILE", description = "Draw the readings, as .png or .svg.")
@@ -126,7 +128,10 @@ final class ReadingsCommand implements Callable<Integer> {
         Phantom phantom = phantom(made);
         List<SetUp> wanted = wanted(phantom);
         LongWork work = new LongWork(
-                "Following photon packets", spec.commandLine().getErr(), shared.quiet || shared.json, program.interruption);
+                "Following photon packets",
+                spec.commandLine().getErr(),
+                shared.quiet || shared.json,
+                program.interruption);
         List<Foreseen> foreseen = new ArrayList<>();
         List<List<Double>> every = new ArrayList<>();
         for (int i = 0; i < wanted.size(); i++) {
@@ -175,8 +180,13 @@ final class ReadingsCommand implements Callable<Integer> {
         }
         Optional<Casting> casting = brief != null ? Optional.of(Casting.read(brief)) : Casting.beside(recipe, made);
         if (brief != null && !casting.get().isOf(made) && !shared.quiet)
-            spec.commandLine().getErr().println("The recipe was not made for " + brief + " as it is now; its mould is taken all the same.");
-        Body mould = casting.flatMap(c -> c.moulds().stream().findFirst()).map(InstrumentReadings::body).orElse(null);
+            spec.commandLine()
+                    .getErr()
+                    .println(
+                            "The recipe was not made for " + brief + " as it is now; its mould is taken all the same.");
+        Body mould = casting.flatMap(c -> c.moulds().stream().findFirst())
+                .map(InstrumentReadings::body)
+                .orElse(null);
         if (body != null && mould != null) body = new Body(body.thicknessMm(), mould.wallMm());
         return Phantom.of(made, body != null ? body : mould);
     }
@@ -187,6 +197,10 @@ final class ReadingsCommand implements Callable<Integer> {
         for (String name : all ? SetUpReader.shipped() : setUps) {
             SetUp s = all ? SetUpReader.readShipped(name) : SetUpReader.named(name);
             if (all && !phantom.isRecipe() && s.kind() == SetUp.Kind.OXIMETER) continue;
+            if (at != null
+                    && all
+                    && s.kind() == SetUp.Kind.OXIMETER
+                    && distinct(at).size() < 2) continue;
             if (at != null) s = Adapted.atWavelengths(s, distinct(at));
             Optional<String> gap = phantom.gap(s);
             if (gap.isPresent() && !all)
@@ -195,8 +209,9 @@ final class ReadingsCommand implements Callable<Integer> {
             else wanted.add(s);
         }
         if (wanted.isEmpty())
-            throw new Refusal("No set-up that comes with the program has wavelengths which this recipe's ingredients reach;"
-                    + " name wavelengths with --at, or a set-up of your own with --setup.");
+            throw new Refusal(
+                    "No set-up that comes with the program has wavelengths which this recipe's ingredients reach;"
+                            + " name wavelengths with --at, or a set-up of your own with --setup.");
         return wanted;
     }
 
@@ -208,7 +223,8 @@ final class ReadingsCommand implements Callable<Integer> {
         if (made == null) out.println("A medium of given coefficients");
         else {
             out.println(made.title());
-            out.println(made.base().name() + ", " + Figures.significant(Mixture.of(made).volumeMl(), 5) + " mL, at "
+            out.println(made.base().name() + ", "
+                    + Figures.significant(Mixture.of(made).volumeMl(), 5) + " mL, at "
                     + Figures.plain(made.temperatureC()) + " °C" + mould(phantom));
         }
         out.println();
@@ -240,7 +256,8 @@ final class ReadingsCommand implements Callable<Integer> {
         String title = made == null ? "A medium of given coefficients" : made.title();
         SafeFile.write(
                 picture,
-                ReadingPicture.of(title, foreseen, made == null, picture.getFileName().toString()),
+                ReadingPicture.of(
+                        title, foreseen, made == null, picture.getFileName().toString()),
                 SafeFile.Overwrite.KEEP_PREVIOUS);
         if (!shared.json && !shared.quiet) out.println("Written: " + picture);
     }

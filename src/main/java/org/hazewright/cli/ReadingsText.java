@@ -65,10 +65,7 @@ final class ReadingsText {
     void legend(boolean doubtful) {
         out.println();
         out.println("±: standard uncertainty (k = 1), the recipe's and, by packets, that of counting them");
-        if (doubtful)
-            wrapped(
-                    "",
-                    "DOUBTFUL: the model is not to be trusted there; the note says why.");
+        if (doubtful) wrapped("", "DOUBTFUL: the model is not to be trusted there; the note says why.");
     }
 
     private static String where(SetUp s) {

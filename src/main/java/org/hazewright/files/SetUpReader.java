@@ -80,9 +80,12 @@ public final class SetUpReader {
 
     private static Refusal noSuch(String name) {
         List<String> all = shipped();
-        return new Refusal("There is no set-up \"" + name + "\"; name a file NAME.setup.toml or one that comes with the program: "
-                + String.join(", ", all) + "."
-                + Nearest.to(name, all).map(n -> " Perhaps \"" + n + "\" is meant.").orElse(""));
+        return new Refusal(
+                "There is no set-up \"" + name + "\"; name a file NAME.setup.toml or one that comes with the program: "
+                        + String.join(", ", all) + "."
+                        + Nearest.to(name, all)
+                                .map(n -> " Perhaps \"" + n + "\" is meant.")
+                                .orElse(""));
     }
 
     /** Names of the set-ups that come with the program, in order of the alphabet. */
@@ -107,7 +110,8 @@ public final class SetUpReader {
     /** The text of a shipped set-up, to begin one's own with. */
     public static String shippedText(String name) {
         if (!shipped().contains(name)) throw noSuch(name);
-        return inShipped(setUps -> TextFile.read(setUps.resolve(name + ENDING), name + ENDING).text());
+        return inShipped(setUps ->
+                TextFile.read(setUps.resolve(name + ENDING), name + ENDING).text());
     }
 
     private static <T> T inShipped(java.util.function.Function<Path, T> reader) {
@@ -161,7 +165,9 @@ public final class SetUpReader {
         for (String key : keys)
             if (page.has(key))
                 throw page.refusal(
-                        key, "A set-up of kind " + kind.word() + " has no use for " + key + "; take the line out, or change kind.");
+                        key,
+                        "A set-up of kind " + kind.word() + " has no use for " + key
+                                + "; take the line out, or change kind.");
     }
 
     /** Numbers of a list, each once and within its limits; a fault is told at its own entry. */
@@ -171,8 +177,8 @@ public final class SetUpReader {
         if (numbers.length < least || numbers.length > 1000)
             throw page.refusal(
                     key,
-                    key + " has " + numbers.length + (numbers.length == 1 ? " entry" : " entries") + "; a set-up of kind "
-                            + kind.word() + " needs " + least + " to 1000.");
+                    key + " has " + numbers.length + (numbers.length == 1 ? " entry" : " entries")
+                            + "; a set-up of kind " + kind.word() + " needs " + least + " to 1000.");
         Set<Double> seen = new HashSet<>();
         List<Double> list = new ArrayList<>();
         for (int i = 0; i < numbers.length; i++) {
@@ -197,15 +203,18 @@ public final class SetUpReader {
 
     private TimeAxis time() {
         if (!page.has("time_ps"))
-            throw page.at().refusal("The key time_ps is missing; a set-up of kind time needs one:"
-                    + " time_ps = {from = 0, to = 5000, step = 5}.");
+            throw page.at()
+                    .refusal("The key time_ps is missing; a set-up of kind time needs one:"
+                            + " time_ps = {from = 0, to = 5000, step = 5}.");
         TomlPage t = page.table("time_ps").orElseThrow();
         t.refuseUnknown("from", "to", "step");
         double from = t.number("from");
         double to = t.number("to");
         if (to <= from)
             throw t.refusal(
-                    "to", "time_ps goes from " + TomlPage.plain(from) + " to " + TomlPage.plain(to) + "; it must go forward.");
+                    "to",
+                    "time_ps goes from " + TomlPage.plain(from) + " to " + TomlPage.plain(to)
+                            + "; it must go forward.");
         double step = t.positive("step");
         return t.holding("step", () -> new TimeAxis(from, to, step));
     }
@@ -221,7 +230,8 @@ public final class SetUpReader {
         if (!Files.exists(file))
             throw page.refusal(
                     "response",
-                    "There is no table \"" + path + "\" beside the set-up; response is a path from the set-up's folder.");
+                    "There is no table \"" + path
+                            + "\" beside the set-up; response is a path from the set-up's folder.");
         CsvTable table = CsvTable.read(file, List.of("time_ps", "counts"));
         table.refuseNegative("counts");
         double[] times = table.column("time_ps");

@@ -180,8 +180,20 @@ public final class Phantom {
         for (int i = 0; i < readings.size(); i++) {
             Reading r = readings.get(i);
             double u = r.quantity() == Quantity.SATURATION ? saturation : haemoglobin;
-            readings.set(i, new Reading(
-                    r.setUp(), r.kind(), null, null, r.quantity(), r.value(), u, null, r.model(), r.insideRange(), r.note()));
+            readings.set(
+                    i,
+                    new Reading(
+                            r.setUp(),
+                            r.kind(),
+                            null,
+                            null,
+                            r.quantity(),
+                            r.value(),
+                            u,
+                            null,
+                            r.model(),
+                            r.insideRange(),
+                            r.note()));
         }
     }
 }

@@ -23,12 +23,11 @@ final class BarPlot implements ReadingPicture.Panel {
         this.foreseen = foreseen;
         this.atEvery = atEvery;
         this.scale = foreseen.setUp().kind() == SetUp.Kind.OXIMETER ? 100 : 1;
-        List<Quantity> shown =
-                switch (foreseen.setUp().kind()) {
-                    case SLAB -> List.of(Quantity.TOTAL_REFLECTANCE, Quantity.TOTAL_TRANSMITTANCE);
-                    case COLLIMATED -> List.of(Quantity.UNSCATTERED_TRANSMITTANCE);
-                    default -> List.of(Quantity.SATURATION);
-                };
+        List<Quantity> shown = switch (foreseen.setUp().kind()) {
+            case SLAB -> List.of(Quantity.TOTAL_REFLECTANCE, Quantity.TOTAL_TRANSMITTANCE);
+            case COLLIMATED -> List.of(Quantity.UNSCATTERED_TRANSMITTANCE);
+            default -> List.of(Quantity.SATURATION);
+        };
         for (Quantity q : shown)
             for (Reading r : foreseen.readings()) if (r.quantity() == q && r.value() != null) bars.add(r);
     }
@@ -77,16 +76,22 @@ final class BarPlot implements ReadingPicture.Panel {
             Marks.whisker(g, middle, below, above, Canvas.colour(Palette.INK));
         }
         g.setColor(Canvas.colour(Palette.INK));
-        String value = scale == 100 ? Figures.fixed(100 * r.value(), 1) + " %" : r.value() != 0 && Math.abs(r.value()) < 5e-4
-                ? Figures.significant(r.value(), 2)
-                : Figures.fixed(r.value(), 3);
+        String value = scale == 100
+                ? Figures.fixed(100 * r.value(), 1) + " %"
+                : r.value() != 0 && Math.abs(r.value()) < 5e-4
+                        ? Figures.significant(r.value(), 2)
+                        : Figures.fixed(r.value(), 3);
         double over = above - 6 < frame.area().getY() + 10 ? y + 16 : above - 6;
         if (over > above) g.setColor(Canvas.colour(r.insideRange() ? Palette.MILK : Palette.INK));
         PlotFrame.centre(g, value, middle, over);
         g.setColor(Canvas.colour(Palette.QUIET));
         PlotFrame.centre(g, first(r), middle, frame.area().getMaxY() + 16);
         if (r.wavelengthNm() != null && !atEvery)
-            PlotFrame.centre(g, Figures.plain(r.wavelengthNm()) + " nm", middle, frame.area().getMaxY() + 30);
+            PlotFrame.centre(
+                    g,
+                    Figures.plain(r.wavelengthNm()) + " nm",
+                    middle,
+                    frame.area().getMaxY() + 30);
         g.setColor(Canvas.colour(Palette.TRACK));
         g.draw(new Line2D.Double(frame.area().getX(), zero, frame.area().getMaxX(), zero));
     }
@@ -94,7 +99,10 @@ final class BarPlot implements ReadingPicture.Panel {
     private String first(Reading r) {
         if (foreseen.setUp().kind() == SetUp.Kind.OXIMETER)
             return String.join(
-                    ", ", foreseen.setUp().wavelengthsNm().stream().map(Figures::plain).toList()) + " nm";
+                            ", ",
+                            foreseen.setUp().wavelengthsNm().stream()
+                                    .map(Figures::plain)
+                                    .toList()) + " nm";
         return switch (r.quantity()) {
             case TOTAL_REFLECTANCE -> "reflected";
             case TOTAL_TRANSMITTANCE -> "transmitted";

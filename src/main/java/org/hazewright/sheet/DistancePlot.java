@@ -41,12 +41,11 @@ final class DistancePlot implements ReadingPicture.Panel {
     @Override
     public void draw(Graphics2D g, Rectangle2D area) {
         PlotFrame frame = frame(area);
-        String what =
-                switch (quantity) {
-                    case PHASE_DEG -> "phase lag, °";
-                    case MODULATION -> "modulation";
-                    default -> "reflectance, /mm²";
-                };
+        String what = switch (quantity) {
+            case PHASE_DEG -> "phase lag, °";
+            case MODULATION -> "modulation";
+            default -> "reflectance, /mm²";
+        };
         String title = foreseen.setUp().title() + ": " + what;
         if (logarithmic) decades(g, frame, title);
         else frame.axes(g, title, true, "distance in mm");
@@ -61,7 +60,8 @@ final class DistancePlot implements ReadingPicture.Panel {
             // above the falling curve of a reflectance, below a rising one
             PlotFrame.right(g, Figures.plain(here) + " nm", area.getMaxX() - 8, keyY(area, w, nm.size()));
         }
-        if (points.stream().anyMatch(r -> !r.insideRange())) Marks.doubtful(g, area, quantity == Quantity.PHASE_DEG ? 0 : nm.size());
+        if (points.stream().anyMatch(r -> !r.insideRange()))
+            Marks.doubtful(g, area, quantity == Quantity.PHASE_DEG ? 0 : nm.size());
     }
 
     private double keyY(Rectangle2D area, int w, int count) {
@@ -69,7 +69,10 @@ final class DistancePlot implements ReadingPicture.Panel {
     }
 
     private PlotFrame frame(Rectangle2D area) {
-        double most = foreseen.setUp().distancesMm().stream().mapToDouble(x -> x).max().orElse(1);
+        double most = foreseen.setUp().distancesMm().stream()
+                .mapToDouble(x -> x)
+                .max()
+                .orElse(1);
         double low = Double.MAX_VALUE;
         double high = -Double.MAX_VALUE;
         for (List<Reading> some : List.of(points, line))
@@ -80,7 +83,8 @@ final class DistancePlot implements ReadingPicture.Panel {
         if (low > high) return new PlotFrame(area, 0, 1.15 * most, logarithmic ? -6 : 0, logarithmic ? 0 : 1);
         if (logarithmic)
             return new PlotFrame(area, 0, 1.15 * most, Math.floor(Math.log10(low)), Math.ceil(Math.log10(high) + 0.05));
-        if (quantity == Quantity.MODULATION) return new PlotFrame(area, 0, 1.15 * most, Math.max(0, 1 - 1.2 * (1 - low)), 1);
+        if (quantity == Quantity.MODULATION)
+            return new PlotFrame(area, 0, 1.15 * most, Math.max(0, 1 - 1.2 * (1 - low)), 1);
         return new PlotFrame(area, 0, 1.15 * most, 0, 1.08 * high);
     }
 
@@ -93,7 +97,8 @@ final class DistancePlot implements ReadingPicture.Panel {
         new PlotFrame(frame.area(), frame.x0(), frame.x1(), 0, 1).xAxis(g, title, "distance in mm");
         for (int d = (int) frame.y0(); d <= frame.y1(); d++) {
             g.setColor(Canvas.colour(Palette.RULE));
-            g.draw(new Line2D.Double(frame.area().getX(), frame.py(d), frame.area().getMaxX(), frame.py(d)));
+            g.draw(new Line2D.Double(
+                    frame.area().getX(), frame.py(d), frame.area().getMaxX(), frame.py(d)));
             g.setColor(Canvas.colour(Palette.QUIET));
             PlotFrame.right(g, "1e" + d, frame.area().getX() - 6, frame.py(d) + 4);
         }

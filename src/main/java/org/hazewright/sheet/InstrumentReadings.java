@@ -30,13 +30,17 @@ public record InstrumentReadings(Phantom phantom, List<Foreseen> foreseen, List<
     }
 
     public static InstrumentReadings of(Answer answer, Supplier<Tissue.Spectra> tables) {
-        Body body = answer.brief().moulds().stream().findFirst().map(InstrumentReadings::body).orElse(null);
+        Body body = answer.brief().moulds().stream()
+                .findFirst()
+                .map(InstrumentReadings::body)
+                .orElse(null);
         return of(answer.recipe(), body, tables);
     }
 
     static InstrumentReadings of(Recipe recipe, Body body, Supplier<Tissue.Spectra> tables) {
         Phantom phantom = Phantom.of(recipe, body);
-        List<SetUp> setUps = SetUpReader.shipped().stream().map(SetUpReader::readShipped).toList();
+        List<SetUp> setUps =
+                SetUpReader.shipped().stream().map(SetUpReader::readShipped).toList();
         record Tried(Foreseen foreseen, String leftOut) {}
         List<Tried> tried = setUps.parallelStream()
                 .map(s -> {
@@ -47,7 +51,8 @@ public record InstrumentReadings(Phantom phantom, List<Foreseen> foreseen, List<
                         if (needsPackets(phantom, placed))
                             return new Tried(
                                     null,
-                                    s.title() + ": diffusion does not hold there; the command hazewright readings follows photon packets.");
+                                    s.title()
+                                            + ": diffusion does not hold there; the command hazewright readings follows photon packets.");
                         boolean quick = !placed.distancesMm().isEmpty();
                         SetUp here = quick ? Adapted.byModel(s, SetUp.ModelChoice.DIFFUSION) : s;
                         return new Tried(Foreseen.of(phantom, here, running(phantom, here, tables)), null);
@@ -86,7 +91,11 @@ public record InstrumentReadings(Phantom phantom, List<Foreseen> foreseen, List<
         for (double nm : s.wavelengthsNm())
             for (double mm : s.distancesMm())
                 if (DiffusionRange.outside(
-                                phantom.medium(nm), mm, s.thicknessMm(), inTime, s.convention().form())
+                                phantom.medium(nm),
+                                mm,
+                                s.thicknessMm(),
+                                inTime,
+                                s.convention().form())
                         != null) return true;
         return false;
     }

@@ -11,6 +11,7 @@ import org.apache.poi.xddf.usermodel.chart.AxisPosition;
 import org.apache.poi.xddf.usermodel.chart.AxisTickMark;
 import org.apache.poi.xddf.usermodel.chart.BarDirection;
 import org.apache.poi.xddf.usermodel.chart.ChartTypes;
+import org.apache.poi.xddf.usermodel.chart.DisplayBlanks;
 import org.apache.poi.xddf.usermodel.chart.LegendPosition;
 import org.apache.poi.xddf.usermodel.chart.MarkerStyle;
 import org.apache.poi.xddf.usermodel.chart.ScatterStyle;
@@ -37,6 +38,7 @@ final class ReadingChart {
     ReadingChart(XSSFSheet sheet, String title, int col1, int row1, int col2, int row2) {
         this.sheet = sheet;
         chart = sheet.createDrawingPatriarch().createChart(new XSSFClientAnchor(0, 0, 0, 0, col1, row1, col2, row2));
+        chart.displayBlanksAs(DisplayBlanks.GAP);
         chart.setTitleText(title);
         chart.setTitleOverlay(false);
         SpectrumChart.type(chart.getTitle().getBody(), 8, true, Palette.INK);

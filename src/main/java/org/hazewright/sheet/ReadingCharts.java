@@ -52,7 +52,7 @@ final class ReadingCharts {
     }
 
     private ReadingChart next(String title) {
-        int middle = lastColumn / 2;
+        int middle = 4; // after the first wavelength: about half of the page's width
         int left = drawn % 2 == 0 ? 0 : middle;
         int right = drawn % 2 == 0 ? middle : lastColumn + 1;
         int from = top + drawn / 2 * ROWS;
@@ -74,16 +74,29 @@ final class ReadingCharts {
                     high = Math.max(high, r.value());
                     low = Math.min(low, r.value());
                 }
-            if (!line.isEmpty()) series.add(column("", line, Marks.hex(w), false));
-            series.add(column(Figures.plain(nm) + " nm", points, Marks.hex(w), true));
+            int rows = Math.max(most(f.line(), q, f), most(f.readings(), q, f));
+            if (!line.isEmpty()) series.add(column("", line, rows, Marks.hex(w), false));
+            series.add(column(Figures.plain(nm) + " nm", points, rows, Marks.hex(w), true));
         }
         if (series.isEmpty()) return;
         double most = f.setUp().distancesMm().stream().mapToDouble(x -> x).max().orElse(1);
         ReadingChart chart = next(f.setUp().title() + ": " + what);
         if (q == Quantity.REFLECTANCE_PER_MM2)
             chart.scatter(
-                    series, 0, 1.15 * most, Math.pow(10, Math.floor(Math.log10(low))), Math.pow(10, Math.ceil(Math.log10(high))), true);
+                    series,
+                    0,
+                    1.15 * most,
+                    Math.pow(10, Math.floor(Math.log10(low))),
+                    Math.pow(10, Math.ceil(Math.log10(high))),
+                    true);
         else chart.scatter(series, 0, 1.15 * most, 0, 1.05 * high, false);
+    }
+
+    private static int most(List<Reading> all, Quantity q, Foreseen f) {
+        return f.setUp().wavelengthsNm().stream()
+                .mapToInt(nm -> at(all, q, nm).size())
+                .max()
+                .orElse(0);
     }
 
     private static List<Reading> at(List<Reading> all, Quantity q, double nm) {
@@ -92,15 +105,18 @@ final class ReadingCharts {
                 .toList();
     }
 
-    private ReadingChart.Series column(String name, List<Reading> readings, String colour, boolean points) {
+    private ReadingChart.Series column(String name, List<Reading> readings, int rows, String colour, boolean points) {
         double[] x = readings.stream().mapToDouble(Reading::distanceMm).toArray();
         double[] y = readings.stream().mapToDouble(Reading::value).toArray();
-        return cells(name, "mm", x, y, colour, points);
+        return cells(name, "mm", x, y, rows, colour, points);
     }
 
-    /** Two columns of figures right of the page. */
+    /**
+     * Two columns of figures right of the page. All series of a chart take as many {@code rows}, the last of them empty: one
+     * spreadsheet program puts points at 0 where a series is shorter than its neighbours.
+     */
     private ReadingChart.Series cells(
-            String name, String xName, double[] x, double[] y, String colour, boolean points) {
+            String name, String xName, double[] x, double[] y, int rows, String colour, boolean points) {
         page.text(0, dataColumn, xName, Face.HEAD.right());
         page.text(0, dataColumn + 1, name.isEmpty() ? "line" : name, Face.HEAD.right());
         for (int i = 0; i < x.length; i++) {
@@ -109,8 +125,8 @@ final class ReadingCharts {
         }
         var series = new ReadingChart.Series(
                 name,
-                new CellRangeAddress(1, x.length, dataColumn, dataColumn),
-                new CellRangeAddress(1, x.length, dataColumn + 1, dataColumn + 1),
+                new CellRangeAddress(1, rows, dataColumn, dataColumn),
+                new CellRangeAddress(1, rows, dataColumn + 1, dataColumn + 1),
                 colour,
                 points);
         dataColumn += 2;
@@ -119,30 +135,34 @@ final class ReadingCharts {
 
     private void times(Foreseen f) {
         List<ReadingChart.Series> series = new ArrayList<>();
-        double end = 1;
+        int last = 1;
         double high = 0;
+        for (Reading r : f.readings()) {
+            if (r.curve() == null) continue;
+            double[] y = r.curve().y();
+            double peak = 0;
+            for (double v : y) peak = Math.max(peak, v);
+            for (int i = last; i < y.length; i++) if (y[i] > 0.002 * peak) last = i;
+            high = Math.max(high, peak);
+        }
+        int step = (last + TIMES - 1) / TIMES;
+        int count = last / step + 1;
         String unit = "";
+        double end = 1;
         for (Reading r : f.readings()) {
             if (r.curve() == null) continue;
             Reading.Curve c = r.curve();
             unit = c.yUnit();
-            double peak = 0;
-            for (double y : c.y()) peak = Math.max(peak, y);
-            int last = 1;
-            for (int i = 0; i < c.y().length; i++) if (c.y()[i] > 0.002 * peak) last = i;
-            int step = Math.max(1, (last + TIMES - 1) / TIMES);
-            int count = last / step + 1;
+            end = c.x()[last];
             double[] x = new double[count];
             double[] y = new double[count];
             for (int i = 0; i < count; i++) {
                 x[i] = c.x()[i * step];
                 y[i] = c.y()[i * step];
             }
-            high = Math.max(high, peak);
-            end = Math.max(end, c.x()[last]);
             int w = f.setUp().wavelengthsNm().indexOf(r.wavelengthNm());
             String name = Figures.plain(r.wavelengthNm()) + " nm, " + Figures.plain(r.distanceMm()) + " mm";
-            series.add(cells(name, "ps", x, y, Marks.hex(w), false));
+            series.add(cells(name, "ps", x, y, count, Marks.hex(w), false));
         }
         if (series.isEmpty()) return;
         next(f.setUp().title() + ": " + unit + " over ps").scatter(series, 0, end, 0, 1.05 * high, false);

@@ -57,8 +57,10 @@ public final class ReadingPicture {
         SetUp.Kind kind = f.setUp().kind();
         return switch (kind) {
             case REFLECTANCE, SLOPE -> List.of(new DistancePlot(f, Quantity.REFLECTANCE_PER_MM2, atEvery));
-            case FREQUENCY -> List.of(
-                    new DistancePlot(f, Quantity.MODULATION, atEvery), new DistancePlot(f, Quantity.PHASE_DEG, atEvery));
+            case FREQUENCY ->
+                List.of(
+                        new DistancePlot(f, Quantity.MODULATION, atEvery),
+                        new DistancePlot(f, Quantity.PHASE_DEG, atEvery));
             case TIME -> List.of(new TimePlot(f, atEvery));
             case SLAB, COLLIMATED, OXIMETER -> List.of(new BarPlot(f, atEvery));
         };
@@ -69,7 +71,6 @@ public final class ReadingPicture {
         g.setColor(Canvas.colour(Palette.QUIET));
         g.drawString(
                 "points and bars: readings with their 95 % interval; lines: diffusion, dashed where it does not hold; hollow: doubtful",
-                24,
-                (float) y);
+                24, (float) y);
     }
 }

@@ -51,8 +51,13 @@ final class ReadingsPage {
         page.columns(widths);
         page.text(0, 0, "Readings", Face.TITLE);
         page.height(0, 24);
-        page.sentence(1, 0, trust, answer.brief().title() + " · what instruments will show on it as planned" + body()
-                + ". ±: standard uncertainty (k = 1), from the recipe's budget.", Face.QUIET);
+        page.sentence(
+                1,
+                0,
+                trust,
+                answer.brief().title() + " · what instruments will show on it as planned" + body()
+                        + ". ±: standard uncertainty (k = 1), from the recipe's budget.",
+                Face.QUIET);
         page.text(2, WHAT, "", Face.HEAD);
         page.text(2, MM, "mm", Face.HEAD.right());
         for (int j = 0; j < nm.size(); j++) {
@@ -84,7 +89,8 @@ final class ReadingsPage {
     private String conventions() {
         TreeSet<String> words = new TreeSet<>();
         for (Foreseen f : readings.foreseen())
-            if (!f.setUp().distancesMm().isEmpty()) words.add(f.setUp().convention().inWords());
+            if (!f.setUp().distancesMm().isEmpty())
+                words.add(f.setUp().convention().inWords());
         return words.isEmpty() ? "" : "Diffusion: " + String.join("; ", words) + ".";
     }
 
@@ -101,7 +107,9 @@ final class ReadingsPage {
 
     private static String geometry(SetUp s) {
         String body = s.thicknessMm() == null ? "semi-infinite" : Figures.plain(s.thicknessMm()) + " mm thick";
-        return s.kind() == SetUp.Kind.OXIMETER ? "" : " · " + body + ", n " + Figures.plain(s.outsideIndex()) + " outside";
+        return s.kind() == SetUp.Kind.OXIMETER
+                ? ""
+                : " · " + body + ", n " + Figures.plain(s.outsideIndex()) + " outside";
     }
 
     private void reading(Foreseen f, List<Reading> same) {
@@ -120,7 +128,8 @@ final class ReadingsPage {
             if (note == null) continue;
             if (!notes.contains(note)) notes.add(note);
             String mark = "[" + (notes.indexOf(note) + 1) + "]";
-            if (marks.indexOf(mark) < 0) marks.append(marks.length() == 0 ? "" : " ").append(mark);
+            if (marks.indexOf(mark) < 0)
+                marks.append(marks.length() == 0 ? "" : " ").append(mark);
         }
         String convention = ": " + f.setUp().convention().inWords();
         page.text(row, by, shortened(first.model().replace(convention, "")), Face.QUIET.indent());
@@ -150,12 +159,13 @@ final class ReadingsPage {
 
     private void number(int row, int column, Quantity q, double value, Double u) {
         String format;
-        if (q == Quantity.SATURATION) format = "0.0%";
+        if (q == Quantity.SATURATION) format = u != null && u > 0 && u < 0.0005 ? "0.00%" : "0.0%";
         else if (value != 0 && Math.abs(value) < 1e-3) format = "0.00E+00";
         else if (u != null && u > 0) format = Face.numberFormat(Figures.decimalsFor(u));
         else format = "0.0000";
         page.number(row, column, value, Face.TEXT.format(format).right());
-        if (u != null && u > 0) page.number(row, column + 1, u, Face.QUIET.format(format).right());
+        if (u != null && u > 0)
+            page.number(row, column + 1, u, Face.QUIET.format(format).right());
     }
 
     private static String shortened(String model) {
@@ -167,7 +177,9 @@ final class ReadingsPage {
     }
 
     private static String ownNote(Reading r) {
-        return r.note() == null || r.note().matches("The true µ\\S+ is \\S+ /cm\\.") ? null : r.note();
+        if (r.note() == null) return null;
+        String rest = r.note().replaceFirst("^The true µ\\S+ is \\S+ /cm\\.\\s*", "");
+        return rest.isEmpty() ? null : rest;
     }
 
     static String name(Quantity q) {

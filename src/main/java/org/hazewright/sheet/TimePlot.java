@@ -20,7 +20,8 @@ final class TimePlot implements ReadingPicture.Panel {
     TimePlot(Foreseen foreseen, boolean atEvery) {
         this.foreseen = foreseen;
         this.atEvery = atEvery;
-        this.curves = foreseen.readings().stream().filter(r -> r.curve() != null).toList();
+        this.curves =
+                foreseen.readings().stream().filter(r -> r.curve() != null).toList();
     }
 
     @Override
@@ -50,8 +51,8 @@ final class TimePlot implements ReadingPicture.Panel {
             int w = nm.indexOf(r.wavelengthNm());
             draw(g, frame, r, Marks.hex(w), scale);
             g.setColor(Marks.of(w));
-            String key = (atEvery ? "" : Figures.plain(r.wavelengthNm()) + " nm, ") + Figures.plain(r.distanceMm()) + " mm"
-                    + (r.insideRange() ? "" : ", doubtful");
+            String key = (atEvery ? "" : Figures.plain(r.wavelengthNm()) + " nm, ") + Figures.plain(r.distanceMm())
+                    + " mm" + (r.insideRange() ? "" : ", doubtful");
             PlotFrame.right(g, key, area.getMaxX() - 8, area.getY() + 18 + 14 * place++);
         }
     }
