@@ -146,6 +146,11 @@ final class ReadingsCommand implements Callable<Integer> {
                         every.add(once ? s.wavelengthsNm() : List.of());
                     });
         }
+        if (program.interruption.asked() && !shared.quiet)
+            spec.commandLine()
+                    .getErr()
+                    .println(
+                            "Stopped: fewer packets were followed than asked for; the uncertainties are of those that were.");
         if (shared.json) ReadingsJson.of(foreseen, every).print(out);
         else text(made, phantom, foreseen, out);
         if (picture != null) draw(made, foreseen, out);
