@@ -36,7 +36,8 @@ public final class Screenshots {
         Path memory = Files.createTempDirectory("memory");
         Window window = Stagehand.open(memory, w, h, Optional.empty(), Optional.empty());
         Stagehand.untilSettled(window);
-        Stagehand.until("readings", () -> window.desk().foreseeing().foreseenProperty().get() != null);
+        Stagehand.until(
+                "readings", () -> window.desk().foreseeing().foreseenProperty().get() != null);
         for (Palette p : new Palette[] {Palette.LIGHT, Palette.DARK}) {
             Stagehand.ui(() -> window.look().paletteProperty().set(p));
             shoot(window, "desk", p, w);
@@ -72,8 +73,9 @@ public final class Screenshots {
         Stagehand.until("a look", () -> made.seenProperty().get() != null);
         Stagehand.ui(() -> {
             List<MadeBatch.Entry> entries = new ArrayList<>();
-            made.points().forEach(p -> entries.add(new MadeBatch.Entry(
-                    p.wavelengthNm(), p.quantity(), Double.toString(p.wantedPerCm() * 1.09), "2 %")));
+            made.points()
+                    .forEach(p -> entries.add(new MadeBatch.Entry(
+                            p.wavelengthNm(), p.quantity(), Double.toString(p.wantedPerCm() * 1.09), "2 %")));
             made.measured("time-resolved fit", "bench instrument", entries);
         });
         Stagehand.until("a verdict", () -> made.seenProperty().get().verdict().isPresent());

@@ -58,7 +58,10 @@ public final class MeasuredTable extends VBox {
             row(p, row++, p.wavelengthNm() != before);
             before = p.wavelengthNm();
         }
-        Field how = new Field(() -> method, text -> keep(() -> method = text), true).named("how it was measured").styled("boxed").columns(16);
+        Field how = new Field(() -> method, text -> keep(() -> method = text), true)
+                .named("how it was measured")
+                .styled("boxed")
+                .columns(16);
         how.setPromptText("how: time-resolved fit");
         Field with = new Field(() -> instrument, text -> keep(() -> instrument = text), true)
                 .named("with which instrument")
@@ -74,7 +77,9 @@ public final class MeasuredTable extends VBox {
         getChildren().addAll(grid, line);
         Say.show(line, !made.points().isEmpty());
         if (made.points().isEmpty())
-            getChildren().add(Say.wrapped("This batch was opened without its brief, so there are no targets to land on.", "quiet"));
+            getChildren()
+                    .add(Say.wrapped(
+                            "This batch was opened without its brief, so there are no targets to land on.", "quiet"));
         made.seenProperty().addListener((p, was, now) -> show());
         made.batchProperty().addListener((p, was, now) -> show());
         show();
@@ -150,7 +155,8 @@ public final class MeasuredTable extends VBox {
                     .filter(x -> x.wavelengthNm() == p.wavelengthNm()
                             && (x.quantity() == Quantity.ABSORPTION) == (p.quantity() == Point.Quantity.MUA))
                     .findFirst();
-            last.get(key(p)).setText(v.map(x -> Words.value(x.perCm(), x.uPerCm())).orElse("–"));
+            last.get(key(p))
+                    .setText(v.map(x -> Words.value(x.perCm(), x.uPerCm())).orElse("–"));
             Say.show(measuredGauges.get(key(p)), v.isPresent());
             v.ifPresent(x -> measuredGauges.get(key(p)).land(p.miss(x.perCm())));
         }
