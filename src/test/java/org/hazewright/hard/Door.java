@@ -124,12 +124,17 @@ enum Door {
             if (!STATUSES.contains(ran.status()))
                 throw new AssertionError("Exit status " + ran.status() + "\n" + ran.err());
             if (ran.status() == 2 || ran.status() == 4)
-                Promise.wellSaid(ran.out() + ran.err(), String.join("\n", words));
+                Promise.wellSaid(ran.out().startsWith("{") ? "JSON." + ran.err() : ran.out() + ran.err(), String.join("\n", words));
             Promise.nothingHalfWritten(Path.of(""));
         }
     };
 
     private static final Set<Integer> STATUSES = Set.of(0, 2, 3, 4);
+
+    /** Processor time that an input may take: a reader reads, a command also computes, and says so while it does. */
+    double mostSeconds() {
+        return this == COMMAND ? 60 : 5;
+    }
 
     /** Reads these bytes; throws only when the promise is broken. */
     abstract void open(Path things, byte[] bytes);

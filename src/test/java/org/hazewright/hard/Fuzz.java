@@ -83,7 +83,7 @@ public final class Fuzz {
                 .redirectErrorStream(true)
                 .redirectOutput(log.toFile())
                 .start();
-        if (!engine.waitFor(seconds + 120L, TimeUnit.SECONDS))
+        if (!engine.waitFor(seconds + 240L, TimeUnit.SECONDS))
             engine.destroyForcibly().waitFor();
         String said = Files.readString(log, java.nio.charset.StandardCharsets.ISO_8859_1);
         Matcher covered = COVERED.matcher(said);
