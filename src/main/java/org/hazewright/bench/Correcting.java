@@ -26,8 +26,8 @@ import org.hazewright.shelf.Shelf;
  *
  * <p>For an added volume the grams are those of {@link Additions}; the chance is that of {@link Learned}, measured values included. Volumes
  * are tried from a two-thousandth of the vessel's up, each a fourth more than the one before, to all that it holds, and the first that
- * suffices is narrowed by halving. What the recipe draws from a stock is poured from that stock; what would be less than the balance's smallest load gets a
- * stock of its own. Host index and crowding are held at those of the vessel, and the last word is said by the full model.
+ * suffices is narrowed by halving. What the recipe draws from a stock is poured from that stock; what would be less than the balance's
+ * smallest load is left out where that will do, and else diluted first. Grams are planned with the vessel's host index and crowding; every try is judged by the full model.
  */
 public final class Correcting {
     private static final double LEAST_SHARE = 0.0005;
@@ -76,12 +76,15 @@ public final class Correcting {
         return c.find(wantedChance, capacityMl);
     }
 
+    /** On the full model, crowding and host index of the recipe itself. */
     private Learned.Landing landing(Recipe recipe) {
-        return learned.landing(recipe, points, sweep, batch.balance().capacityG());
+        Sweep own = Sweep.of(Mixture.of(recipe), sweep.wavelengthsNm());
+        return learned.landing(recipe, points, own, batch.balance().capacityG());
     }
 
     /** Something that can be poured: out of a bottle or a stock, or fresh base. */
-    private record Pourable(Map<Ingredient, Double> perG, Optional<Stock> stock, Optional<Stock> toMake) {}
+    private record Pourable(
+            String label, Map<Ingredient, Double> perG, Optional<Stock> stock, Optional<Stock> toMake) {}
 
     private record Try(List<Stock> stocks, List<Item> items, Recipe after, double addedMl, Learned.Landing landing) {}
 
@@ -134,7 +137,7 @@ public final class Correcting {
         }
 
         private boolean look(double addedMl) {
-            Optional<Try> t = attempt(addedMl);
+            Optional<Try> t = attempt(addedMl, wanted);
             if (t.isEmpty() || t.get().addedMl() > most * (1 + 1e-9)) return false;
             double chance = t.get().landing().chance();
             boolean nearer = best != null
@@ -147,26 +150,31 @@ public final class Correcting {
         }
     }
 
-    private Optional<Try> attempt(double addedMl) {
-        Set<Ingredient> small = new LinkedHashSet<>();
-        for (int round = 0; round < 3; round++) {
-            List<Pourable> pourables = pourables(small);
-            Optional<double[]> grams = additions(pourables).best(addedMl);
-            if (grams.isEmpty()) return Optional.empty();
-            int before = small.size();
-            for (int i = 0; i < pourables.size(); i++) {
-                Pourable p = pourables.get(i);
-                double g = grams.get()[i];
-                boolean neat = p.stock().isEmpty() && p.perG().size() == 1;
-                Ingredient only = p.perG().keySet().iterator().next();
-                if (neat
-                        && !batch.isBasePart(only)
-                        && g >= batch.balance().readabilityG() / 2
-                        && g < batch.balance().smallestLoadG()) small.add(only);
-            }
-            if (small.size() == before) return Optional.of(rounded(pourables, grams.get()));
+    /** The best of that volume; what is too little to weigh is left out where that does, and diluted first where it does not. */
+    private Optional<Try> attempt(double addedMl, double wanted) {
+        Optional<Try> without = attempt(addedMl, Set.of(), true);
+        if (without.isPresent() && without.get().landing().chance() >= wanted) return without;
+        Optional<Try> with = attempt(addedMl, Set.of(), false);
+        if (with.isEmpty()) return without;
+        boolean better = without.isEmpty()
+                || with.get().landing().chance() > without.get().landing().chance() + 0.005;
+        return better ? with : without;
+    }
+
+    private Optional<Try> attempt(double addedMl, Set<String> known, boolean leaveOut) {
+        List<Pourable> pourables = pourables(known, leaveOut);
+        Optional<double[]> grams = additions(pourables).best(addedMl);
+        if (grams.isEmpty()) return Optional.empty();
+        Set<String> small = new LinkedHashSet<>(known);
+        for (int i = 1; i < pourables.size(); i++) { // the first is fresh base
+            double g = grams.get()[i];
+            boolean diluted = pourables.get(i).toMake().isPresent();
+            if (!diluted && g >= batch.balance().readabilityG() / 2 && g < batch.balance().smallestLoadG())
+                small.add(pourables.get(i).label());
         }
-        return Optional.empty();
+        return small.size() > known.size()
+                ? attempt(addedMl, small, leaveOut)
+                : Optional.of(rounded(pourables, grams.get()));
     }
 
     private Additions additions(List<Pourable> pourables) {
@@ -195,24 +203,22 @@ public final class Correcting {
         return new Additions(points, vessel, vesselMl, kappa, ml);
     }
 
-    /** Fresh base, every stock that an item was drawn from, and every other ingredient that went in neat. */
-    private List<Pourable> pourables(Set<Ingredient> small) {
+    /** Fresh base, every stock that an item was drawn from, and every other ingredient that went in neat; the small ones left out or diluted. */
+    private List<Pourable> pourables(Set<String> small, boolean leaveOut) {
         List<Pourable> list = new ArrayList<>();
         Map<Ingredient, Double> base = new LinkedHashMap<>();
         for (var part : shelf.partsOf(made.base()).entrySet()) base.put(asUsed(part.getKey()), part.getValue());
-        list.add(new Pourable(base, Optional.empty(), Optional.empty()));
+        list.add(new Pourable("base", base, Optional.empty(), Optional.empty()));
         Set<String> seen = new LinkedHashSet<>();
         for (Item i : made.items()) {
-            if (i.stock().isPresent()) {
-                String id = i.stock().get();
-                if (seen.add("stock " + id))
-                    list.add(new Pourable(made.contentPerG(id), Optional.of(made.stock(id)), Optional.empty()));
-            } else if (!batch.isBasePart(i.ingredient())
-                    && seen.add(i.ingredient().id())) {
-                Ingredient what = i.ingredient();
-                if (small.contains(what)) list.add(stockOf(what));
-                else list.add(new Pourable(Map.of(what, 1.0), Optional.empty(), Optional.empty()));
-            }
+            if (i.stock().isEmpty() && batch.isBasePart(i.ingredient()) || !seen.add(i.label())) continue;
+            Optional<Stock> from = i.stock().map(made::stock);
+            Pourable p = from.isPresent()
+                    ? new Pourable(i.label(), made.contentPerG(i.stock().get()), from, Optional.empty())
+                    : new Pourable(i.label(), Map.of(i.ingredient(), 1.0), Optional.empty(), Optional.empty());
+            boolean tooLittle = small.contains(p.label());
+            if (tooLittle && leaveOut) continue;
+            list.add(tooLittle ? diluted(p, i.ingredient(), from) : p);
         }
         return list;
     }
@@ -228,19 +234,29 @@ public final class Correcting {
         return made.massesG().keySet();
     }
 
-    private Pourable stockOf(Ingredient what) {
+    /** A bottle diluted a hundred times, a stock ten times more, so that the balance can weigh it. */
+    private Pourable diluted(Pourable p, Ingredient what, Optional<Stock> from) {
         Ingredient liquid = shelf.partsOf(made.base()).keySet().stream()
                 .filter(i -> i.form() == Form.LIQUID)
                 .findFirst()
                 .map(this::asUsed)
-                .orElseThrow(() -> new Refusal("Too little " + what.id()
+                .orElseThrow(() -> new Refusal("Too little " + p.label()
                         + " to weigh would be needed, and the base has no liquid to dilute it in."));
+        int ratio = from.isPresent() ? 10 : 100;
+        double grams = batch.balance().rounded(Math.max(0.5, 25 * batch.balance().smallestLoadG()));
         Stock s = new Stock(
-                what.id() + "-1-100-correction", what, what.lot().map(l -> l.number()), 1, liquid, 99, Optional.empty());
+                p.label() + "-1-" + ratio + "-correction-" + (batch.correctionCount() + 1),
+                what,
+                from.isPresent() ? from.get().lot() : what.lot().map(l -> l.number()),
+                grams,
+                liquid,
+                batch.balance().rounded((ratio - 1) * grams),
+                from.map(Stock::id));
         Map<Ingredient, Double> perG = new LinkedHashMap<>();
-        perG.put(what, 0.01);
-        perG.merge(liquid, 0.99, Double::sum);
-        return new Pourable(perG, Optional.of(s), Optional.of(s));
+        double share = s.ingredientG() / s.totalG();
+        p.perG().forEach((i, g) -> perG.merge(i, g * share, Double::sum));
+        perG.merge(liquid, 1 - share, Double::sum);
+        return new Pourable(p.label(), perG, Optional.of(s), Optional.of(s));
     }
 
     private Try rounded(List<Pourable> pourables, double[] grams) {
@@ -281,13 +297,6 @@ public final class Correcting {
     }
 
     private Correction correction(Correction.Outcome outcome, Try t, double wanted, String reason) {
-        Learned.Landing then = t.items().isEmpty()
-                ? now
-                : learned.landing(
-                        t.after(),
-                        points,
-                        Sweep.of(Mixture.of(t.after()), sweep.wavelengthsNm()),
-                        batch.balance().capacityG());
         return new Correction(
                 outcome,
                 t.stocks(),
@@ -296,7 +305,7 @@ public final class Correcting {
                 t.addedMl(),
                 vesselMl + t.addedMl(),
                 now,
-                then,
+                t.landing(),
                 wanted,
                 reason,
                 notes(t),
@@ -335,7 +344,7 @@ public final class Correcting {
         }
         double chance = Outlook.of(batch.brief().orElseThrow(), plan, 8_000).chance();
         return new Correction.Fresh(
-                grams, Weighing.of(plan).size(), unpriced.isEmpty() ? cost : Double.NaN, unpriced, chance);
+                grams, Weighing.of(plan).size(), cost, unpriced, chance);
     }
 
     /** The plan without corrections. */

@@ -39,8 +39,8 @@ public record Correction(
     }
 
     /**
-     * A new batch of the same recipe: grams of all that is weighed in, its price where every ingredient has one (NaN otherwise), the
-     * ingredients without a price, and the chance of landing as the ingredients' files stand.
+     * A new batch of the same recipe: grams of all that is weighed in, the price of those that have one, the ingredients
+     * without a price, and the chance of landing as the ingredients' files stand.
      */
     public record Fresh(double massG, int weighings, double cost, List<String> unpriced, double chance) {
         public Fresh {

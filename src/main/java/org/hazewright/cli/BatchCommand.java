@@ -215,6 +215,13 @@ final class BatchCommand implements Runnable {
         @Option(names = "--grams", paramLabel = "G", description = "Grams as weighed, one for each --item.")
         private List<Double> grams = List.of();
 
+        @Option(
+                names = "--lot",
+                paramLabel = "N=NUMBER",
+                split = ",",
+                description = "Lot of the bottle at a weighing: --lot 4=L07.")
+        private java.util.Map<Integer, String> lots = java.util.Map.of();
+
         @Option(names = "--from", paramLabel = "SHEET", description = "The recipe's sheet, filled in.")
         private Path from;
 
@@ -238,8 +245,9 @@ final class BatchCommand implements Runnable {
             if (items.size() != grams.size())
                 throw new Refusal("--item is given " + items.size() + " times and --grams " + grams.size()
                         + " times; each --item has its --grams.");
-            if (items.isEmpty() && from == null && vessel == null)
-                throw new Refusal("Say what was weighed: --item N --grams G, --from SHEET.xlsx, or --vessel BEFORE,AFTER.");
+            if (items.isEmpty() && from == null && vessel == null && lots.isEmpty())
+                throw new Refusal(
+                        "Say what was weighed: --item N --grams G, --from SHEET.xlsx, --vessel BEFORE,AFTER, or --lot N=NUMBER.");
             Shelf shelf = shared.shelf();
             Batch before = BatchReader.read(file, shelf);
             Batch batch = before;
@@ -252,6 +260,7 @@ final class BatchCommand implements Runnable {
                     throw new Refusal("No grams are filled in on the sheet " + from + ".");
             }
             for (int k = 0; k < items.size(); k++) batch = batch.withWeighed(items.get(k) - 1, grams.get(k));
+            for (var lot : lots.entrySet()) batch = batch.withLot(lot.getKey() - 1, lot.getValue());
             if (vessel != null) {
                 if (vessel.length != 2)
                     throw new Refusal("--vessel takes two weights, before and after heating, with a comma between: 512.3,498.1");

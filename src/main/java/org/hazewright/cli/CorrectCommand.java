@@ -83,9 +83,10 @@ final class CorrectCommand implements Callable<Integer> {
         out.println(c.reason());
         BatchText text = new BatchText(batch, shared.units, out);
         if (c.outcome() == Correction.Outcome.START_AGAIN)
-            out.println("Start again. A new batch takes " + Grams.plain(c.newBatch().massG()) + " g in "
-                    + c.newBatch().weighings() + " weighings, " + cost(c.newBatch()) + ", and lands "
-                    + DesignText.times(c.newBatch().chance()) + " in 100.");
+            out.println(
+                    "Start again. A new batch takes " + Grams.plain(c.newBatch().massG()) + " g in "
+                            + c.newBatch().weighings() + " weighings, " + cost(c.newBatch()) + ", and lands "
+                            + DesignText.times(c.newBatch().chance()) + " in 100.");
         if (c.items().isEmpty()) {
             text.table(c.now().predicted());
             return;
@@ -97,7 +98,7 @@ final class CorrectCommand implements Callable<Integer> {
             table.row(
                     "make " + s.id(),
                     Grams.shown(s.ingredientG(), batch.balance()),
-                    s.ingredient().id() + " + " + Grams.shown(s.diluentG(), batch.balance()) + " "
+                    s.from().orElse(s.ingredient().id()) + " + " + Grams.shown(s.diluentG(), batch.balance()) + " "
                             + s.diluent().id());
         for (Item i : c.items())
             table.row(
@@ -106,15 +107,17 @@ final class CorrectCommand implements Callable<Integer> {
                     i.stock().isPresent() ? i.ingredient().name() : "");
         table.print(out);
         out.println("  " + Figures.significant(c.addedMl(), 3) + " mL more, " + Figures.significant(c.volumeMl(), 5)
-                + " mL in all; then it lands inside every tolerance " + DesignText.times(c.then().chance()) + " in 100.");
+                + " mL in all; then it lands inside every tolerance "
+                + DesignText.times(c.then().chance()) + " in 100.");
         text.table(c.then().predicted());
         for (String note : c.notes()) out.println("Mind: " + note);
     }
 
     private static String cost(Correction.Fresh fresh) {
-        return Double.isNaN(fresh.cost())
-                ? "price unknown (none for " + String.join(", ", fresh.unpriced()) + ")"
-                : "about " + Figures.significant(fresh.cost(), 3) + " in the shelf's prices";
+        String none = String.join(", ", fresh.unpriced());
+        if (!(fresh.cost() > 0)) return "of unknown price (the shelf has none for " + none + ")";
+        return "about " + Figures.significant(fresh.cost(), 3) + " in the shelf's prices"
+                + (none.isEmpty() ? "" : " (no price for " + none + ")");
     }
 
     private static Json json(Correction c) {
@@ -127,7 +130,9 @@ final class CorrectCommand implements Callable<Integer> {
                     .fields());
         return Json.object()
                 .with("format", 1)
-                .with("outcome", c.outcome().name().toLowerCase(java.util.Locale.ROOT).replace('_', '-'))
+                .with(
+                        "outcome",
+                        c.outcome().name().toLowerCase(java.util.Locale.ROOT).replace('_', '-'))
                 .with("reason", c.reason())
                 .with("items", items)
                 .with("added_ml", c.addedMl())

@@ -29,9 +29,11 @@ import picocli.CommandLine.Spec;
             DesignCommand.class,
             SeriesCommand.class,
             PredictCommand.class,
+            ReadingsCommand.class,
             IngredientsCommand.class,
             BatchCommand.class,
             CorrectCommand.class,
+            LotCommand.class,
             ParticlesCommand.class,
         },
         footer = {

@@ -113,7 +113,7 @@ public final class BriefReader {
                 : moulds.stream().mapToDouble(Mould::volumeMl).sum();
     }
 
-    private static List<Mould> moulds(TomlPage page) {
+    static List<Mould> moulds(TomlPage page) {
         List<Mould> moulds = new ArrayList<>();
         for (TomlPage table : page.tables("mould")) {
             if (table.oneOf("shape", "box", "cylinder").equals("box")) {

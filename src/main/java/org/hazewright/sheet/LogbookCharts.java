@@ -48,7 +48,8 @@ final class LogbookCharts {
     }
 
     private static XSSFChart chart(XSSFSheet on, int row, String title) {
-        XSSFChart chart = on.createDrawingPatriarch().createChart(new XSSFClientAnchor(0, 0, 0, 0, 0, row, 11, row + 19));
+        XSSFChart chart =
+                on.createDrawingPatriarch().createChart(new XSSFClientAnchor(0, 0, 0, 0, 0, row, 11, row + 19));
         chart.setTitleText(title);
         chart.setTitleOverlay(false);
         chart.getOrAddLegend().setPosition(LegendPosition.BOTTOM);

@@ -49,7 +49,8 @@ final class LogbookTable {
                     file,
                     "This is not a logbook, or a page of it was deleted: the named cell " + name
                             + " is missing. Name another file with --logbook, or take back the previous version beside it.");
-        CellReference at = new AreaReference(found.getRefersToFormula(), workbook.getSpreadsheetVersion()).getFirstCell();
+        CellReference at =
+                new AreaReference(found.getRefersToFormula(), workbook.getSpreadsheetVersion()).getFirstCell();
         XSSFSheet sheet = workbook.getSheet(at.getSheetName());
         LogbookTable t = new LogbookTable(workbook, sheet, at.getRow(), key);
         t.read(file, names);
@@ -136,7 +137,8 @@ final class LogbookTable {
         else if (value instanceof LocalDate day) cell.setCellValue(day);
         else {
             String text = SafeText.of(value.toString());
-            if (SafeText.startsFormula(text)) cell.setCellStyle(quoted.computeIfAbsent(cell.getCellStyle(), this::asText));
+            if (SafeText.startsFormula(text))
+                cell.setCellStyle(quoted.computeIfAbsent(cell.getCellStyle(), this::asText));
             cell.setCellValue(text);
         }
     }
