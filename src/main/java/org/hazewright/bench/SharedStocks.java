@@ -19,10 +19,11 @@ import org.hazewright.shelf.Ingredient;
 /**
  * Stocks that several mixtures draw from, each made once in an amount that covers all of its draws.
  *
- * <p>For every ingredient one way of dosing is chosen for all mixtures but those that weigh it well neat: neat, one stock, or two in series with each mixture drawing
- * from whichever suits it. A way costs the squared half-widths that its weighings add over all mixtures, first-order, and {@value
- * #PER_WEIGHING} for each weighing that makes a stock; a dose below the balance's smallest load costs {@value #UNWEIGHABLE} more.
- * Ratios are those of a single recipe's stocks; the grams that go in are the smallest round ones that leave a tenth to spare and can be weighed well.
+ * <p>For every ingredient one way of dosing is chosen for all mixtures, but for those that weigh it well neat: neat, one stock, or
+ * two in series with each mixture drawing from whichever suits it. A way costs the squared half-widths that its weighings add
+ * over all mixtures, first-order, and {@value #PER_WEIGHING} for each weighing that makes a stock; a dose below the balance's
+ * smallest load costs {@value #UNWEIGHABLE} more. Ratios are those of a single recipe's stocks; the grams that go in are the
+ * smallest round ones that leave a tenth to spare and can be weighed well.
  */
 final class SharedStocks {
     private static final int[] RATIOS = {10, 20, 50, 100, 200, 500, 1000};
