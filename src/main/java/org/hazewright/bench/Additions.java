@@ -47,8 +47,8 @@ record Additions(
         for (int i = 0; i < n; i++) quadratic[i][i] += 2 * TIE * Math.pow(mlPerG[i] / addedMl, 2);
         double[] upper = new double[n];
         Arrays.fill(upper, Double.POSITIVE_INFINITY);
-        ConvexProgramme.Solution s = ConvexProgramme.ofAmounts(quadratic, linear, 0, upper, inside)
-                .solve();
+        ConvexProgramme.Solution s =
+                ConvexProgramme.ofAmounts(quadratic, linear, 0, upper, inside).solve();
         if (s.status() != ConvexProgramme.Status.OPTIMAL)
             s = ConvexProgramme.ofAmounts(quadratic, linear, 0, upper, limits).solve();
         return s.status() == ConvexProgramme.Status.OPTIMAL

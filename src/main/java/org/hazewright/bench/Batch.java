@@ -150,8 +150,8 @@ public record Batch(
             int place = weighings.get(n).place();
             if (corrections.get(place) > after) continue;
             Item i = plan.items().get(place);
-            items.add(new Item(
-                    i.ingredient(), i.stock(), i.lot(), weighedG.get(n).orElse(i.massG())));
+            items.add(
+                    new Item(i.ingredient(), i.stock(), i.lot(), weighedG.get(n).orElse(i.massG())));
         }
         heating.ifPresent(h -> takeOff(items, h.missingG()));
         return recipe(stocks, items);
@@ -198,7 +198,8 @@ public record Batch(
     /** With grams at the weighing of that place (from 0). */
     public Batch withWeighed(int n, double massG) {
         if (n < 0 || n >= weighedG.size())
-            throw new Refusal("The batch " + id + " has no weighing " + (n + 1) + "; it has 1 to " + weighedG.size() + ".");
+            throw new Refusal(
+                    "The batch " + id + " has no weighing " + (n + 1) + "; it has 1 to " + weighedG.size() + ".");
         Refusal.notNegative("Grams as weighed", massG);
         List<OptionalDouble> grams = new ArrayList<>(weighedG);
         grams.set(n, OptionalDouble.of(massG));
@@ -216,7 +217,8 @@ public record Batch(
         allStocks.addAll(stocks);
         List<Item> allItems = new ArrayList<>(plan.items());
         allItems.addAll(items);
-        List<OptionalDouble> grams = new ArrayList<>(weighedG.subList(0, 2 * plan.stocks().size()));
+        List<OptionalDouble> grams =
+                new ArrayList<>(weighedG.subList(0, 2 * plan.stocks().size()));
         for (int k = 0; k < 2 * stocks.size(); k++) grams.add(OptionalDouble.empty());
         grams.addAll(weighedG.subList(2 * plan.stocks().size(), weighedG.size()));
         items.forEach(i -> grams.add(OptionalDouble.empty()));
@@ -229,7 +231,8 @@ public record Batch(
     /** With the lot that was used at the weighing of that place (from 0); a stock's goes on to what is drawn from it. */
     public Batch withLot(int n, String lot) {
         if (n < 0 || n >= weighedG.size())
-            throw new Refusal("The batch " + id + " has no weighing " + (n + 1) + "; it has 1 to " + weighedG.size() + ".");
+            throw new Refusal(
+                    "The batch " + id + " has no weighing " + (n + 1) + "; it has 1 to " + weighedG.size() + ".");
         Weighing w = weighings().get(n);
         List<Stock> stocks = new ArrayList<>(plan.stocks());
         List<Item> items = new ArrayList<>(plan.items());
@@ -248,8 +251,9 @@ public record Batch(
                     items.set(k, new Item(i.ingredient(), i.stock(), number, i.massG()));
             }
         } else
-            throw new Refusal("Weighing " + (n + 1) + " of the batch " + id + " is not out of a bottle whose lot is kept ("
-                    + w.label() + "); give the lot where the bottle itself is weighed.");
+            throw new Refusal(
+                    "Weighing " + (n + 1) + " of the batch " + id + " is not out of a bottle whose lot is kept ("
+                            + w.label() + "); give the lot where the bottle itself is weighed.");
         return withPlan(recipe(stocks, items));
     }
 
@@ -299,7 +303,9 @@ public record Batch(
         for (int n = 0; n < weighings.size(); n++)
             if (weighed(n))
                 done.add(new Replan.Done(
-                        weighings.get(n).role(), weighings.get(n).place(), weighedG.get(n).getAsDouble()));
+                        weighings.get(n).role(),
+                        weighings.get(n).place(),
+                        weighedG.get(n).getAsDouble()));
         Recipe after = new Replan(brief().get(), plan, shelf).after(done);
         List<Stock> stocks = new ArrayList<>();
         for (int k = 0; k < plan.stocks().size(); k++) {

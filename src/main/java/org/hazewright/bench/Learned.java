@@ -69,7 +69,8 @@ public final class Learned {
                     .toArray();
             Recipe made = batch.asMade(m.correction());
             Sweep sweep = Sweep.of(Mixture.of(made), nm);
-            List<Cause> causes = Budget.of(made, sweep, batch.balance().capacityG()).causes();
+            List<Cause> causes =
+                    Budget.of(made, sweep, batch.balance().capacityG()).causes();
             List<String> keys = keys(causes);
             double[] mua = sweep.muaPerCm(made.massesG());
             double[] musp = sweep.muspPerCm(made.massesG());
@@ -82,7 +83,9 @@ public final class Learned {
                     row.put(numbered(number, keys.get(c)), effect(causes.get(c), scattering, at));
                 Method method = m.method();
                 row.put(
-                        numbered(number, "scale of " + method.name() + v.quantity().sign()),
+                        numbered(
+                                number,
+                                "scale of " + method.name() + v.quantity().sign()),
                         predicted * method.uScale(v.quantity()));
                 rows.add(row);
                 differences.add(v.perCm() - predicted);
@@ -195,8 +198,7 @@ public final class Learned {
         for (int j = 0; j < n; j++) scale[j] = points.get(j).tolerancePerCm();
         for (int i = 0; i < n; i++)
             for (int j = 0; j < n; j++)
-                inTolerances.setEntry(
-                        i, j, (spread.getEntry(i, j) + spread.getEntry(j, i)) / 2 / scale[i] / scale[j]);
+                inTolerances.setEntry(i, j, (spread.getEntry(i, j) + spread.getEntry(j, i)) / 2 / scale[i] / scale[j]);
         EigenDecomposition e = new EigenDecomposition(inTolerances);
         double[][] root = new double[n][n];
         for (int k = 0; k < n; k++) {
@@ -222,7 +224,8 @@ public final class Learned {
     /** What a bottle's figure is now believed to be, over what its file says. */
     double factor(Ingredient i, Point.Quantity quantity) {
         double first = meanOf(Cause.Kind.ABSORPTION + " " + i.id() + " absorption 1");
-        if (quantity == Point.Quantity.MUA) return Math.max(0, 1 + i.uncertainty().absorption() * first);
+        if (quantity == Point.Quantity.MUA)
+            return Math.max(0, 1 + i.uncertainty().absorption() * first);
         double second = meanOf(Cause.Kind.SCATTERING + " " + i.id() + " scattering 1");
         double r = i.uncertainty().correlation();
         return Math.max(0, 1 + i.uncertainty().scattering() * (r * first + Math.sqrt(1 - r * r) * second));

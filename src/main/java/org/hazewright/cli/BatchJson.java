@@ -30,7 +30,9 @@ final class BatchJson {
                     .with("what", all.get(n).label())
                     .with("into_stock", all.get(n).into().orElse(null))
                     .with("planned_g", all.get(n).massG())
-                    .with("weighed_g", batch.weighed(n) ? batch.weighedG().get(n).getAsDouble() : null)
+                    .with(
+                            "weighed_g",
+                            batch.weighed(n) ? batch.weighedG().get(n).getAsDouble() : null)
                     .fields());
         Json json = Json.object()
                 .with("format", 1)
@@ -67,7 +69,12 @@ final class BatchJson {
                     .with("when", m.on().toString())
                     .with("method", m.method().name())
                     .with("correction", m.correction())
-                    .with("verdict", v.outcome().name().toLowerCase(java.util.Locale.ROOT).replace('_', '-'))
+                    .with(
+                            "verdict",
+                            v.outcome()
+                                    .name()
+                                    .toLowerCase(java.util.Locale.ROOT)
+                                    .replace('_', '-'))
                     .with("sentence", v.sentence())
                     .with("values", rows)
                     .fields());

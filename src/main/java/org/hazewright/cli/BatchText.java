@@ -43,8 +43,8 @@ final class BatchText {
         out.println();
         weighings();
         batch.heating()
-                .ifPresent(h -> out.println("  Heating took " + Grams.plain(h.lostG()) + " g, " + Grams.plain(h.waterBackG())
-                        + " g was given back: " + missing(h.missingG())));
+                .ifPresent(h -> out.println("  Heating took " + Grams.plain(h.lostG()) + " g, "
+                        + Grams.plain(h.waterBackG()) + " g was given back: " + missing(h.missingG())));
         landing(made);
         for (Measurement m : batch.measured()) measured(m);
         for (String note : batch.notes()) out.println("Note: " + note);
@@ -57,7 +57,8 @@ final class BatchText {
 
     void weighings() {
         Balance balance = batch.balance();
-        out.println("Weighed " + batch.weighedCount() + " of " + batch.weighedG().size());
+        out.println(
+                "Weighed " + batch.weighedCount() + " of " + batch.weighedG().size());
         TextTable table = new TextTable("  ", "rlrrrl");
         table.row("no", "what", "planned g", "weighed g", "off", "into");
         List<Weighing> all = batch.weighings();
@@ -73,7 +74,9 @@ final class BatchText {
                     shown(w.massG(), balance),
                     in ? shown(g, balance) : "",
                     in && w.massG() > 0 ? signedPercent(g / w.massG() - 1) : "",
-                    w.into().map(s -> "stock " + s).orElse(correction == 0 ? "vessel" : "vessel, correction " + correction));
+                    w.into()
+                            .map(s -> "stock " + s)
+                            .orElse(correction == 0 ? "vessel" : "vessel, correction " + correction));
         }
         table.print(out);
     }
@@ -107,7 +110,8 @@ final class BatchText {
                 ? landing.chance()
                 : Outlook.of(brief.get(), made, 20_000).chance();
         out.println((batch.complete() ? "As made" : "With the rest as planned") + ", "
-                + (measured ? "by its grams and by what was measured, " : "by its grams, ") + "it lands inside every tolerance "
+                + (measured ? "by its grams and by what was measured, " : "by its grams, ")
+                + "it lands inside every tolerance "
                 + DesignText.times(chance) + " in 100.");
         table(landing.predicted());
     }

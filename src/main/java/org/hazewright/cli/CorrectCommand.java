@@ -83,9 +83,10 @@ final class CorrectCommand implements Callable<Integer> {
         out.println(c.reason());
         BatchText text = new BatchText(batch, shared.units, out);
         if (c.outcome() == Correction.Outcome.START_AGAIN)
-            out.println("Start again. A new batch takes " + Grams.plain(c.newBatch().massG()) + " g in "
-                    + c.newBatch().weighings() + " weighings, " + cost(c.newBatch()) + ", and lands "
-                    + DesignText.times(c.newBatch().chance()) + " in 100.");
+            out.println(
+                    "Start again. A new batch takes " + Grams.plain(c.newBatch().massG()) + " g in "
+                            + c.newBatch().weighings() + " weighings, " + cost(c.newBatch()) + ", and lands "
+                            + DesignText.times(c.newBatch().chance()) + " in 100.");
         if (c.items().isEmpty()) {
             text.table(c.now().predicted());
             return;
@@ -106,7 +107,8 @@ final class CorrectCommand implements Callable<Integer> {
                     i.stock().isPresent() ? i.ingredient().name() : "");
         table.print(out);
         out.println("  " + Figures.significant(c.addedMl(), 3) + " mL more, " + Figures.significant(c.volumeMl(), 5)
-                + " mL in all; then it lands inside every tolerance " + DesignText.times(c.then().chance()) + " in 100.");
+                + " mL in all; then it lands inside every tolerance "
+                + DesignText.times(c.then().chance()) + " in 100.");
         text.table(c.then().predicted());
         for (String note : c.notes()) out.println("Mind: " + note);
     }
@@ -128,7 +130,9 @@ final class CorrectCommand implements Callable<Integer> {
                     .fields());
         return Json.object()
                 .with("format", 1)
-                .with("outcome", c.outcome().name().toLowerCase(java.util.Locale.ROOT).replace('_', '-'))
+                .with(
+                        "outcome",
+                        c.outcome().name().toLowerCase(java.util.Locale.ROOT).replace('_', '-'))
                 .with("reason", c.reason())
                 .with("items", items)
                 .with("added_ml", c.addedMl())

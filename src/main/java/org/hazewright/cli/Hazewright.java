@@ -62,7 +62,8 @@ public final class Hazewright implements Runnable {
     @Option(
             names = "--ingredients",
             paramLabel = "DIR",
-            description = "Shelf for the window (default: the folder ingredients here, else the shelf that comes with the program).")
+            description =
+                    "Shelf for the window (default: the folder ingredients here, else the shelf that comes with the program).")
     private Path ingredients;
 
     @Parameters(

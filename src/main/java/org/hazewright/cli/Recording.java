@@ -27,14 +27,13 @@ final class Recording {
         Path book = logbook != null ? logbook : file.toAbsolutePath().resolveSibling("logbook.xlsx");
         Logbook.Recorded recorded = Logbook.record(book, batch, file);
         if (recorded.waiting().isPresent()) {
-            err.println("hazewright: The batch itself is written. " + recorded.waiting().get());
+            err.println("hazewright: The batch itself is written. "
+                    + recorded.waiting().get());
             return Hazewright.UNWRITABLE;
         }
         if (!shared.json && !shared.quiet)
             out.println("Recorded: " + shown(book)
-                    + (recorded.merged() > 0
-                            ? " (and " + recorded.merged() + " that waited beside it)"
-                            : ""));
+                    + (recorded.merged() > 0 ? " (and " + recorded.merged() + " that waited beside it)" : ""));
         return Hazewright.DONE;
     }
 

@@ -35,7 +35,9 @@ final class TargetsCommand implements Callable<Integer> {
     @Spec
     private CommandSpec spec;
 
-    @Parameters(paramLabel = "TABLE", description = "Wavelength, µa, µs', tolerances where there are any; per cm or per mm.")
+    @Parameters(
+            paramLabel = "TABLE",
+            description = "Wavelength, µa, µs', tolerances where there are any; per cm or per mm.")
     private Path table;
 
     @Option(names = "--table-unit", paramLabel = "cm|mm", description = "Unit of a table whose headings name none.")
@@ -59,16 +61,20 @@ final class TargetsCommand implements Callable<Integer> {
 
     @Override
     public Integer call() {
-        if (tolerance.length != 2) throw new Refusal("--tolerance takes two shares with a comma between, as in 0.05,0.05.");
+        if (tolerance.length != 2)
+            throw new Refusal("--tolerance takes two shares with a comma between, as in 0.05,0.05.");
         PrintWriter print = spec.commandLine().getOut();
         CoefficientTable read = BatchCommand.coefficients(table, tableUnit);
         List<Target> targets = read.targets(tolerance[0], tolerance[1]);
         for (String line : read.understood()) print.println("  " + line);
         TextTable shown = new TextTable("  ", "rlrl");
         for (Target t : targets) {
-            t.muaPerCm().ifPresent(v -> shown.row(Figures.plain(t.wavelengthNm()), "µa", value(v, t.muaTolerancePerCm()), "/cm"));
+            t.muaPerCm()
+                    .ifPresent(v ->
+                            shown.row(Figures.plain(t.wavelengthNm()), "µa", value(v, t.muaTolerancePerCm()), "/cm"));
             t.muspPerCm()
-                    .ifPresent(v -> shown.row(Figures.plain(t.wavelengthNm()), "µs'", value(v, t.muspTolerancePerCm()), "/cm"));
+                    .ifPresent(v ->
+                            shown.row(Figures.plain(t.wavelengthNm()), "µs'", value(v, t.muspTolerancePerCm()), "/cm"));
         }
         shown.print(print);
         if (out == null) {

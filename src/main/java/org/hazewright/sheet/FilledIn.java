@@ -70,7 +70,8 @@ public record FilledIn(
             if (!place.containsKey(key))
                 throw SafeWorkbook.refusal(
                         file,
-                        "The sheet is of another recipe (\"" + title + "\"): it weighs " + words(key) + ", which the batch "
+                        "The sheet is of another recipe (\"" + title + "\"): it weighs " + words(key)
+                                + ", which the batch "
                                 + batch.id() + " (\"" + batch.plan().title() + "\") does not."
                                 + Nearest.to(key, place.keySet())
                                         .map(k -> " Nearest there is " + words(k) + ".")
@@ -164,13 +165,16 @@ public record FilledIn(
                     Cell g = row.getCell(5);
                     if (g == null || g.getCellType() != CellType.NUMERIC)
                         throw SafeWorkbook.refusal(
-                                file, "The hidden record of the plan was changed (" + where(row, 5) + "); use a fresh sheet.");
+                                file,
+                                "The hidden record of the plan was changed (" + where(row, 5)
+                                        + "); use a fresh sheet.");
                     planned.put(first, g.getNumericCellValue());
                 }
                 if (first.equals("weighing")) table = true;
             }
             if (planned.isEmpty())
-                throw SafeWorkbook.refusal(file, "The hidden record of the plan is empty; use a fresh sheet of the recipe.");
+                throw SafeWorkbook.refusal(
+                        file, "The hidden record of the plan is empty; use a fresh sheet of the recipe.");
             return title;
         }
 
@@ -191,8 +195,8 @@ public record FilledIn(
                 }
                 Integer before = seen.put(key, r);
                 if (before != null) {
-                    problems.add(where(row, FillInPlan.WEIGHED) + ": the row of " + words(key) + " stands twice, here and in row "
-                            + (before + 1) + ". Delete one.");
+                    problems.add(where(row, FillInPlan.WEIGHED) + ": the row of " + words(key)
+                            + " stands twice, here and in row " + (before + 1) + ". Delete one.");
                     continue;
                 }
                 mass(weighed, planned.get(key)).ifPresent(g -> grams.put(key, g));
@@ -208,17 +212,22 @@ public record FilledIn(
         /** The row of the targets' heading, or the last row when it is not found. */
         private int endOfWeighings(XSSFSheet page) {
             AreaReference landed = area(Names.LANDED);
-            if (landed != null && page.getSheetName().equals(landed.getFirstCell().getSheetName()))
+            if (landed != null
+                    && page.getSheetName().equals(landed.getFirstCell().getSheetName()))
                 return landed.getFirstCell().getRow() - 2;
             return page.getLastRowNum() + 1;
         }
 
         private OptionalDouble mass(Cell cell, double plannedG) {
             if (blank(cell)) return OptionalDouble.empty();
-            CellType type = cell.getCellType() == CellType.FORMULA ? cell.getCachedFormulaResultType() : cell.getCellType();
+            CellType type =
+                    cell.getCellType() == CellType.FORMULA ? cell.getCachedFormulaResultType() : cell.getCellType();
             double g;
-            if (type == CellType.NUMERIC && cell.getCellType() != CellType.FORMULA && DateUtil.isCellDateFormatted(cell)) {
-                problems.add(where(cell) + " holds a date; the spreadsheet program took the grams for one. Format the cell as a"
+            if (type == CellType.NUMERIC
+                    && cell.getCellType() != CellType.FORMULA
+                    && DateUtil.isCellDateFormatted(cell)) {
+                problems.add(where(cell)
+                        + " holds a date; the spreadsheet program took the grams for one. Format the cell as a"
                         + " number and type them again.");
                 return OptionalDouble.empty();
             } else if (type == CellType.NUMERIC) g = cell.getNumericCellValue();
@@ -230,7 +239,8 @@ public record FilledIn(
                     return typed;
                 }
                 g = typed.getAsDouble();
-                notes.add(where(cell) + " was typed as the text " + quoted(cell) + " and read as " + Figures.plain(g) + " g");
+                notes.add(where(cell) + " was typed as the text " + quoted(cell) + " and read as " + Figures.plain(g)
+                        + " g");
             } else {
                 problems.add(where(cell) + " holds " + quoted(cell) + "; it must be grams, a number such as "
                         + Figures.plain(plannedG) + ".");
@@ -241,8 +251,9 @@ public record FilledIn(
                 return OptionalDouble.empty();
             }
             if (g > plannedG * UNBELIEVABLE || g > 0 && g < plannedG / UNBELIEVABLE) {
-                problems.add(where(cell) + " is " + Figures.plain(g) + " g and " + Figures.plain(plannedG)
-                        + " g were planned; was it typed in another unit? If it is right, record it with batch weigh --item.");
+                problems.add(
+                        where(cell) + " is " + Figures.plain(g) + " g and " + Figures.plain(plannedG)
+                                + " g were planned; was it typed in another unit? If it is right, record it with batch weigh --item.");
                 return OptionalDouble.empty();
             }
             return OptionalDouble.of(g);
@@ -280,15 +291,15 @@ public record FilledIn(
         /** A cell's text or number on one line. */
         private static String shown(Cell cell) {
             if (cell == null) return "";
-            CellType type = cell.getCellType() == CellType.FORMULA ? cell.getCachedFormulaResultType() : cell.getCellType();
-            String s =
-                    switch (type) {
-                        case STRING -> cell.getStringCellValue();
-                        case NUMERIC -> Figures.plain(cell.getNumericCellValue());
-                        case BOOLEAN -> cell.getBooleanCellValue() ? "TRUE" : "FALSE";
-                        case ERROR -> "an error";
-                        default -> "";
-                    };
+            CellType type =
+                    cell.getCellType() == CellType.FORMULA ? cell.getCachedFormulaResultType() : cell.getCellType();
+            String s = switch (type) {
+                case STRING -> cell.getStringCellValue();
+                case NUMERIC -> Figures.plain(cell.getNumericCellValue());
+                case BOOLEAN -> cell.getBooleanCellValue() ? "TRUE" : "FALSE";
+                case ERROR -> "an error";
+                default -> "";
+            };
             return s.replaceAll("\\p{Cntrl}", " ").strip();
         }
 

@@ -61,8 +61,8 @@ public final class Logbook {
         Path pending = pendingFor(logbook, entry);
         Optional<String> open = openElsewhere(logbook);
         if (open.isPresent()) return keep(logbook, pending, entry, open.get());
-        try (FileChannel channel = FileChannel.open(
-                lockFile(logbook), StandardOpenOption.CREATE, StandardOpenOption.WRITE)) {
+        try (FileChannel channel =
+                FileChannel.open(lockFile(logbook), StandardOpenOption.CREATE, StandardOpenOption.WRITE)) {
             FileLock lock = locked(channel);
             if (lock == null)
                 return keep(logbook, pending, entry, "another command has been writing it for ten seconds");
@@ -98,7 +98,8 @@ public final class Logbook {
             Optional<String> open = openElsewhere(logbook);
             if (open.isPresent()) return keep(logbook, pending, entry, open.get());
             Stamp now = Stamp.of(logbook);
-            if (before == null ? now != null : !before.equals(now)) continue; // somebody saved it meanwhile: read it again
+            if (before == null ? now != null : !before.equals(now))
+                continue; // somebody saved it meanwhile: read it again
             SafeFile.write(logbook, bytes, SafeFile.Overwrite.KEEP_PREVIOUS);
             int merged = 0;
             for (Path p : waiting) {
@@ -126,8 +127,8 @@ public final class Logbook {
             this.workbook = workbook;
             batches = LogbookTable.find(
                     workbook, file, LogbookPages.BATCHES, LogbookEntry.BATCH_COLUMNS, LogbookEntry.BATCH);
-            values =
-                    LogbookTable.find(workbook, file, LogbookPages.VALUES, LogbookEntry.VALUE_COLUMNS, LogbookEntry.KEY);
+            values = LogbookTable.find(
+                    workbook, file, LogbookPages.VALUES, LogbookEntry.VALUE_COLUMNS, LogbookEntry.KEY);
             lots = LogbookTable.find(workbook, file, LogbookPages.LOTS, LogbookLots.COLUMNS, LogbookLots.LOT);
         }
 
@@ -137,10 +138,12 @@ public final class Logbook {
         }
 
         void finish() {
-            List<Map<String, Object>> used = LogbookLots.of(batches.all(), values.all());
+            List<Map<String, Object>> used = LogbookLots.of(
+                    batches.all(List.of(LogbookEntry.DATE, LogbookEntry.LOTS)),
+                    values.all(List.of(LogbookEntry.LOTS, LogbookEntry.MUA_RATIO, LogbookEntry.MUSP_RATIO)));
             used.forEach(lots::put);
             for (String lot : lots.keys()) // of a lot that was written down wrongly once, only the name is left
-                if (used.stream().noneMatch(row -> row.get(LogbookLots.LOT).equals(lot)))
+            if (used.stream().noneMatch(row -> row.get(LogbookLots.LOT).equals(lot)))
                     lots.clear(lot, LogbookLots.COLUMNS.subList(1, LogbookLots.COLUMNS.size()));
             LogbookCharts.follow(sheetOf(workbook, LogbookPages.CHARTS), values, lots);
         }

@@ -48,14 +48,18 @@ final class LogbookCharts {
     }
 
     private static XSSFChart chart(XSSFSheet on, int row, String title) {
-        XSSFChart chart = on.createDrawingPatriarch().createChart(new XSSFClientAnchor(0, 0, 0, 0, 0, row, 11, row + 19));
+        XSSFChart chart =
+                on.createDrawingPatriarch().createChart(new XSSFClientAnchor(0, 0, 0, 0, 0, row, 11, row + 19));
         chart.setTitleText(title);
         chart.setTitleOverlay(false);
-        chart.getTitle().getBody().getParagraphs().forEach(p -> p.getTextRuns().forEach(r -> {
-            r.setLanguage(java.util.Locale.ENGLISH);
-            r.setFontSize(10d);
-            r.setBold(true);
-        }));
+        chart.getTitle()
+                .getBody()
+                .getParagraphs()
+                .forEach(p -> p.getTextRuns().forEach(r -> {
+                    r.setLanguage(java.util.Locale.ENGLISH);
+                    r.setFontSize(10d);
+                    r.setBold(true);
+                }));
         chart.displayBlanksAs(org.apache.poi.xddf.usermodel.chart.DisplayBlanks.GAP);
         chart.getOrAddLegend().setPosition(LegendPosition.BOTTOM);
         return chart;

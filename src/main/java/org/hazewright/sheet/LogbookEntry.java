@@ -43,11 +43,39 @@ record LogbookEntry(Map<String, Object> batch, List<Map<String, Object>> values)
     static final String BETWEEN = "; ";
 
     static final List<String> BATCH_COLUMNS = List.of(
-            BATCH, DATE, "title", "base", "who", "state", "wanted", "predicted as made", "measured", "worst miss",
-            "chance in 100", "verdict", LOTS, "corrections", "volume mL", "notes", "file");
+            BATCH,
+            DATE,
+            "title",
+            "base",
+            "who",
+            "state",
+            "wanted",
+            "predicted as made",
+            "measured",
+            "worst miss",
+            "chance in 100",
+            "verdict",
+            LOTS,
+            "corrections",
+            "volume mL",
+            "notes",
+            "file");
     static final List<String> VALUE_COLUMNS = List.of(
-            BATCH, DATE, "nm", "quantity", "wanted", "± tolerance", "predicted", "± u predicted", "measured",
-            "± u measured", MUA_RATIO, MUSP_RATIO, "method", LOTS, KEY);
+            BATCH,
+            DATE,
+            "nm",
+            "quantity",
+            "wanted",
+            "± tolerance",
+            "predicted",
+            "± u predicted",
+            "measured",
+            "± u measured",
+            MUA_RATIO,
+            MUSP_RATIO,
+            "method",
+            LOTS,
+            KEY);
 
     /** {@code file} is where the batch's own file is, as the logbook should name it. */
     static LogbookEntry of(Batch batch, String file) {
@@ -141,14 +169,15 @@ record LogbookEntry(Map<String, Object> batch, List<Map<String, Object>> values)
             row.put(DATE, m.on());
             row.put("nm", v.wavelengthNm());
             row.put("quantity", v.quantity().sign());
-            batch.brief().ifPresent(b -> b.points().stream()
-                    .filter(p -> p.wavelengthNm() == v.wavelengthNm()
-                            && (p.quantity() == Point.Quantity.MUSP) == scattering)
-                    .findFirst()
-                    .ifPresent(p -> {
-                        row.put("wanted", p.wantedPerCm());
-                        row.put("± tolerance", p.tolerancePerCm());
-                    }));
+            batch.brief()
+                    .ifPresent(b -> b.points().stream()
+                            .filter(p -> p.wavelengthNm() == v.wavelengthNm()
+                                    && (p.quantity() == Point.Quantity.MUSP) == scattering)
+                            .findFirst()
+                            .ifPresent(p -> {
+                                row.put("wanted", p.wantedPerCm());
+                                row.put("± tolerance", p.tolerancePerCm());
+                            }));
             row.put("predicted", predicted);
             row.put("± u predicted", (scattering ? uMusp : uMua)[at]);
             row.put("measured", v.perCm());
@@ -156,8 +185,10 @@ record LogbookEntry(Map<String, Object> batch, List<Map<String, Object>> values)
             row.put(scattering ? MUSP_RATIO : MUA_RATIO, v.perCm() / predicted);
             row.put("method", m.method().name());
             row.put(LOTS, lots);
-            row.put(KEY, batch.id() + " / " + (number + 1) + " / " + Figures.plain(v.wavelengthNm()) + " / "
-                    + v.quantity().word());
+            row.put(
+                    KEY,
+                    batch.id() + " / " + (number + 1) + " / " + Figures.plain(v.wavelengthNm()) + " / "
+                            + v.quantity().word());
             values.add(row);
         }
     }
@@ -173,8 +204,8 @@ record LogbookEntry(Map<String, Object> batch, List<Map<String, Object>> values)
     }
 
     private static void note(Map<String, TreeSet<String>> numbers, Ingredient i, String typed) {
-        boolean colours = i.part() == org.hazewright.shelf.Part.ABSORBER
-                || i.part() == org.hazewright.shelf.Part.SCATTERER;
+        boolean colours =
+                i.part() == org.hazewright.shelf.Part.ABSORBER || i.part() == org.hazewright.shelf.Part.SCATTERER;
         String lot = typed.isEmpty() ? i.lot().map(l -> l.number()).orElse("") : typed;
         if (!colours && lot.isEmpty()) return;
         TreeSet<String> known = numbers.computeIfAbsent(i.kind(), k -> new TreeSet<>());

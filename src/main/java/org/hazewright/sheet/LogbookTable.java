@@ -49,7 +49,8 @@ final class LogbookTable {
                     file,
                     "This is not a logbook, or a page of it was deleted: the named cell " + name
                             + " is missing. Name another file with --logbook, or take back the previous version beside it.");
-        CellReference at = new AreaReference(found.getRefersToFormula(), workbook.getSpreadsheetVersion()).getFirstCell();
+        CellReference at =
+                new AreaReference(found.getRefersToFormula(), workbook.getSpreadsheetVersion()).getFirstCell();
         XSSFSheet sheet = workbook.getSheet(at.getSheetName());
         LogbookTable t = new LogbookTable(workbook, sheet, at.getRow(), key);
         t.read(file, names);
@@ -119,9 +120,11 @@ final class LogbookTable {
         double needed = 0;
         for (Cell c : row)
             if (c.getCellType() == CellType.STRING && c.getCellStyle().getWrapText()) {
-                double points = workbook.getFontAt(c.getCellStyle().getFontIndex()).getFontHeightInPoints();
+                double points =
+                        workbook.getFontAt(c.getCellStyle().getFontIndex()).getFontHeightInPoints();
                 double width = 0.75 * sheet.getColumnWidthInPixels(c.getColumnIndex());
-                needed = Math.max(needed, TextLines.count(c.getStringCellValue(), points, false, width) * points * 1.32 + 2.5);
+                needed = Math.max(
+                        needed, TextLines.count(c.getStringCellValue(), points, false, width) * points * 1.32 + 2.5);
             }
         if (needed > row.getHeightInPoints()) row.setHeightInPoints((float) Math.min(400, Math.ceil(needed)));
     }
@@ -163,7 +166,8 @@ final class LogbookTable {
         else if (value instanceof LocalDate day) cell.setCellValue(day);
         else {
             String text = SafeText.of(value.toString());
-            if (SafeText.startsFormula(text)) cell.setCellStyle(quoted.computeIfAbsent(cell.getCellStyle(), this::asText));
+            if (SafeText.startsFormula(text))
+                cell.setCellStyle(quoted.computeIfAbsent(cell.getCellStyle(), this::asText));
             cell.setCellValue(text);
         }
     }
@@ -177,15 +181,20 @@ final class LogbookTable {
 
     /** Every row as its cells by column: texts, numbers and dates; formulas by their last result. */
     List<Map<String, Object>> all() {
+        return all(List.copyOf(columns.keySet()));
+    }
+
+    /** The same of some columns only. */
+    List<Map<String, Object>> all(List<String> wanted) {
         List<Map<String, Object>> all = new ArrayList<>();
         for (int r = headRow + 1; r <= last; r++) {
             Row row = sheet.getRow(r);
             if (row == null || text(row, columns.get(key)).isEmpty()) continue;
             Map<String, Object> values = new LinkedHashMap<>();
-            columns.forEach((name, c) -> {
-                Object v = value(row.getCell(c));
+            for (String name : wanted) {
+                Object v = value(row.getCell(columns.get(name)));
                 if (v != null) values.put(name, v);
-            });
+            }
             all.add(values);
         }
         return all;

@@ -123,7 +123,8 @@ final class SafeWorkbook {
             }
         }
         if (!workbook)
-            throw refusal(file, "This is an archive but not a workbook (.xlsx); save it as .xlsx, or name another file.");
+            throw refusal(
+                    file, "This is an archive but not a workbook (.xlsx); save it as .xlsx, or name another file.");
     }
 
     private static boolean isXml(String name) {

@@ -17,15 +17,19 @@ final class TypedNumber {
 
     /** Grams, or empty when the text is no mass that could be meant. */
     static OptionalDouble grams(String typed, double plannedG) {
-        String text = typed.replace('\u00a0', ' ').replace('\u202f', ' ').strip().toLowerCase(Locale.ROOT);
+        String text =
+                typed.replace('\u00a0', ' ').replace('\u202f', ' ').strip().toLowerCase(Locale.ROOT);
         Matcher m = NUMBER.matcher(text);
         if (!m.matches()) return OptionalDouble.empty();
         String digits = m.group(1).replace(" ", "").replace("'", "");
-        double unit = m.group(2) == null ? 1 : m.group(2).equals("mg") ? 0.001 : m.group(2).equals("kg") ? 1000 : 1;
+        double unit = m.group(2) == null
+                ? 1
+                : m.group(2).equals("mg") ? 0.001 : m.group(2).equals("kg") ? 1000 : 1;
         int comma = digits.lastIndexOf(',');
         int point = digits.lastIndexOf('.');
         if (comma < 0) return parsed(digits, unit);
-        if (point >= 0) return parsed(comma > point ? digits.replace(".", "").replace(',', '.') : digits.replace(",", ""), unit);
+        if (point >= 0)
+            return parsed(comma > point ? digits.replace(".", "").replace(',', '.') : digits.replace(",", ""), unit);
         OptionalDouble asDecimal = parsed(digits.replace(',', '.'), unit);
         boolean mayGroup = digits.matches("[+-]?[1-9][0-9]{0,2}(,[0-9]{3})+");
         if (!mayGroup) return asDecimal;

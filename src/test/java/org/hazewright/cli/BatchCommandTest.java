@@ -59,7 +59,8 @@ class BatchCommandTest {
     void open() throws IOException {
         Files.writeString(folder.resolve("bath.brief.toml"), BRIEF);
         assertEquals(0, run("design", file("bath.brief.toml")).status);
-        Ran ran = run("batch", "open", file("bath.recipe.toml"), "--id", "b-1", "--who", "bench 2", "--on", "2026-03-02");
+        Ran ran =
+                run("batch", "open", file("bath.recipe.toml"), "--id", "b-1", "--who", "bench 2", "--on", "2026-03-02");
         assertEquals(0, ran.status, ran.err);
         batch = file("b-1.batch.toml");
     }
@@ -75,7 +76,13 @@ class BatchCommandTest {
             double g = now.weighings().get(n).massG();
             boolean emulsion = now.weighings().get(n).label().startsWith("lipid");
             Ran ran = run(
-                    "batch", "weigh", batch, "--item", "" + (n + 1), "--grams", "" + g * (emulsion ? factorOfEmulsion : 1),
+                    "batch",
+                    "weigh",
+                    batch,
+                    "--item",
+                    "" + (n + 1),
+                    "--grams",
+                    "" + g * (emulsion ? factorOfEmulsion : 1),
                     "--no-logbook");
             assertEquals(0, ran.status, ran.err);
         }
@@ -112,8 +119,27 @@ class BatchCommandTest {
     @Test
     void theBatchFileReadsBackEqual() {
         weighAsPlanned(1.02);
-        run("batch", "weigh", batch, "--vessel", "612.3,604.1", "--water-back", "8.0", "--lot", "3=L07", "--no-logbook");
-        run("batch", "measure", batch, "--method", "slab fit", "--value", "690,0.101,0.002,9.9,0.1", "--on", "2026-03-02",
+        run(
+                "batch",
+                "weigh",
+                batch,
+                "--vessel",
+                "612.3,604.1",
+                "--water-back",
+                "8.0",
+                "--lot",
+                "3=L07",
+                "--no-logbook");
+        run(
+                "batch",
+                "measure",
+                batch,
+                "--method",
+                "slab fit",
+                "--value",
+                "690,0.101,0.002,9.9,0.1",
+                "--on",
+                "2026-03-02",
                 "--no-logbook");
         Batch once = read();
         assertEquals(8.2, once.heating().orElseThrow().lostG(), 1e-9);
@@ -144,7 +170,15 @@ class BatchCommandTest {
             grams[7 + 4 * n] = "" + plan.weighings().get(n).massG() * (strong ? 1.10 : 1);
         }
         assertEquals(0, run(grams).status);
-        run("batch", "measure", batch, "--method", "slab fit", "--value", "690,0.1096,0.0005,10.95,0.05", "--no-logbook");
+        run(
+                "batch",
+                "measure",
+                batch,
+                "--method",
+                "slab fit",
+                "--value",
+                "690,0.1096,0.0005,10.95,0.05",
+                "--no-logbook");
         Ran ran = run("correct", batch, "--chance", "0.95", "--capacity-ml", "700", "--json");
         assertEquals(0, ran.status, ran.err);
         Map<String, Object> c = JSON.std.mapFrom(ran.out);
@@ -173,7 +207,8 @@ class BatchCommandTest {
     @Test
     void aBadMeasurementBlamesTheBottle() {
         weighAsPlanned(1);
-        Ran ran = run("batch", "measure", batch, "--method", "slab fit", "--no-logbook", "--value", "690,0.13,0.001,10,0.05");
+        Ran ran = run(
+                "batch", "measure", batch, "--method", "slab fit", "--no-logbook", "--value", "690,0.13,0.001,10,0.05");
         assertEquals(0, ran.status, ran.err);
         assertTrue(ran.out.contains("ink-demo absorption"), ran.out);
         Ran learned = run("lot", "update", batch, "--out", file("shelf"));
@@ -185,11 +220,29 @@ class BatchCommandTest {
     @Test
     void aLearnedLotMakesTheNextPredictionTighter() throws IOException {
         weighAsPlanned(1);
-        run("batch", "measure", batch, "--method", "slab fit", "--no-logbook", "--value", "690,0.1005,0.001,9.9,0.05",
-                "--on", "2026-03-02");
+        run(
+                "batch",
+                "measure",
+                batch,
+                "--method",
+                "slab fit",
+                "--no-logbook",
+                "--value",
+                "690,0.1005,0.001,9.9,0.05",
+                "--on",
+                "2026-03-02");
         Path shelf = folder.resolve("shelf");
         copy(Path.of("ingredients"), shelf);
-        Ran learned = run("lot", "update", batch, "--ingredients", shelf.toString(), "--of", "lipid-emulsion-20", "--number", "L9");
+        Ran learned = run(
+                "lot",
+                "update",
+                batch,
+                "--ingredients",
+                shelf.toString(),
+                "--of",
+                "lipid-emulsion-20",
+                "--number",
+                "L9");
         assertEquals(0, learned.status, learned.err);
         Shelf now = ShelfReader.read(shelf);
         var lot = now.require("lipid-emulsion-20-lot-L9");
@@ -198,7 +251,8 @@ class BatchCommandTest {
                 folder.resolve("bath.recipe.toml"),
                 Files.readString(folder.resolve("bath.recipe.toml"))
                         .replace("ingredient = \"lipid-emulsion-20\"", "ingredient = \"lipid-emulsion-20-lot-L9\""));
-        Ran after = run("predict", file("bath.recipe.toml"), "--at", "690", "--json", "--ingredients", shelf.toString());
+        Ran after =
+                run("predict", file("bath.recipe.toml"), "--at", "690", "--json", "--ingredients", shelf.toString());
         assertEquals(0, after.status, after.err);
         double musp = (Double) row(after, "rows", 0).get("musp_per_cm");
         assertEquals(9.9, musp, 0.1, "the prediction goes where the measurement was");
@@ -207,7 +261,8 @@ class BatchCommandTest {
 
     private static void copy(Path from, Path to) throws IOException {
         try (var all = Files.walk(from)) {
-            for (Path p : all.toList()) Files.copy(p, to.resolve(from.relativize(p).toString()));
+            for (Path p : all.toList())
+                Files.copy(p, to.resolve(from.relativize(p).toString()));
         }
     }
 
@@ -215,7 +270,8 @@ class BatchCommandTest {
     void measuredValuesComeInEitherUnitAndAreShown() throws IOException {
         weighAsPlanned(1);
         Files.writeString(
-                folder.resolve("m.csv"), "wavelength;µa (1/mm);u(µa) /mm;µs' mm-1;u musp per mm;remark\n690;0,01005;0,0002;0,99;0,01;ok\n");
+                folder.resolve("m.csv"),
+                "wavelength;µa (1/mm);u(µa) /mm;µs' mm-1;u musp per mm;remark\n690;0,01005;0,0002;0,99;0,01;ok\n");
         Ran ran = run("batch", "measure", batch, "--from", file("m.csv"), "--method", "slab fit", "--no-logbook");
         assertEquals(0, ran.status, ran.err);
         assertTrue(ran.out.contains("times 10 to 1/cm") && ran.out.contains("\"remark\" is left aside"), ran.out);

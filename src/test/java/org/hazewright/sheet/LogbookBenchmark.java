@@ -38,8 +38,8 @@ public class LogbookBenchmark {
         Path folder = Files.createTempDirectory("logbook");
         logbook = folder.resolve("logbook.xlsx");
         try (XSSFWorkbook w = LogbookPages.create()) {
-            LogbookTable batches = LogbookTable.find(
-                    w, logbook, LogbookPages.BATCHES, LogbookEntry.BATCH_COLUMNS, LogbookEntry.BATCH);
+            LogbookTable batches =
+                    LogbookTable.find(w, logbook, LogbookPages.BATCHES, LogbookEntry.BATCH_COLUMNS, LogbookEntry.BATCH);
             LogbookTable values =
                     LogbookTable.find(w, logbook, LogbookPages.VALUES, LogbookEntry.VALUE_COLUMNS, LogbookEntry.KEY);
             for (int n = 0; n < 1000; n++) {
@@ -55,7 +55,9 @@ public class LogbookBenchmark {
         Filled filled = Filled.of(Answers.gelatin());
         for (int n = 0; n < filled.weighed().size(); n++) filled.weigh(n, 1 + n);
         for (int n = 0; n < filled.weighed().size(); n++)
-            filled.weigh(n, Filled.beside(filled.weighed().get(n), FillInPlan.PLANNED).getNumericCellValue());
+            filled.weigh(
+                    n,
+                    Filled.beside(filled.weighed().get(n), FillInPlan.PLANNED).getNumericCellValue());
         try (OutputStream out = Files.newOutputStream(sheet)) {
             filled.workbook.write(out);
         }
