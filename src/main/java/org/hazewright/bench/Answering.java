@@ -12,6 +12,7 @@ import java.util.function.BooleanSupplier;
 import java.util.function.DoubleConsumer;
 import org.hazewright.brief.Brief;
 import org.hazewright.brief.Point;
+import org.hazewright.brief.StockInHand;
 import org.hazewright.design.Design;
 import org.hazewright.design.Finding;
 import org.hazewright.design.Option;
@@ -21,6 +22,7 @@ import org.hazewright.mixture.Coefficients;
 import org.hazewright.mixture.Draws;
 import org.hazewright.mixture.Mixture;
 import org.hazewright.mixture.Recipe;
+import org.hazewright.mixture.Stock;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Shelf;
 
@@ -38,17 +40,45 @@ public final class Answering {
     private static final int DRAWS_OF_ALTERNATIVES = 4_000;
     private static final long SEED = 1;
 
+    /** Sets for which other ways of dosing are tried. */
+    private static final int LEADING = 3;
+
+    /** Fewer weighings of the same set are offered when they land at least this often as the best does. */
+    private static final double WORTH_FEWER = 0.5;
+
     /** How far tolerances are narrowed, step by step, until the rounded grams stay inside. */
     private static final double[] EDGES = {1, 0.999, 0.995, 0.98, 0.95, 0.9};
 
     private final Brief brief;
     private final Shelf shelf;
     private final Design design;
+    private final List<Stock> inHand;
 
     private Answering(Brief brief, Shelf shelf, BooleanSupplier stop, DoubleConsumer progress) {
         this.brief = brief;
         this.shelf = shelf;
         this.design = new Design(brief, shelf, stop, progress);
+        this.inHand = inHand(brief, shelf);
+    }
+
+    private static List<Stock> inHand(Brief brief, Shelf shelf) {
+        Map<String, Stock> stocks = new LinkedHashMap<>();
+        for (StockInHand s : brief.stocksInHand()) {
+            Ingredient holds = s.from().isPresent()
+                    ? stocks.get(s.from().get()).ingredient()
+                    : shelf.require(s.ingredient().orElseThrow());
+            stocks.put(
+                    s.id(),
+                    new Stock(
+                            s.id(),
+                            holds,
+                            WeighingOrder.lotOf(holds),
+                            s.ingredientG(),
+                            shelf.require(s.diluent()),
+                            s.diluentG(),
+                            s.from()));
+        }
+        return List.copyOf(stocks.values());
     }
 
     /** The answer, with up to {@code alternatives} other ways. */
@@ -90,18 +120,22 @@ public final class Answering {
     }
 
     private Planned plan(Option option) {
+        return plan(option, StockPlan.Wish.LEAST_SCORE);
+    }
+
+    private Planned plan(Option option, StockPlan.Wish wish) {
         Planned last = null;
         for (double edge : EDGES) {
             Optional<Option> narrowed = edge == 1 ? Optional.of(option) : design.narrowed(option, edge);
             if (narrowed.isEmpty()) break;
-            Planned now = planned(narrowed.get(), option);
+            Planned now = planned(narrowed.get(), option, wish);
             if (last == null || now.worstMiss() < last.worstMiss()) last = now;
             if (!option.meets() || now.meets()) break;
         }
         return last;
     }
 
-    private Planned planned(Option option, Option exact) {
+    private Planned planned(Option option, Option exact, StockPlan.Wish wish) {
         Contents contents = new Contents(
                 brief.title(),
                 shelf,
@@ -109,12 +143,17 @@ public final class Answering {
                 option.concentrationGPerMl(),
                 brief.volumeMl(),
                 brief.temperatureC(),
-                brief.sha256());
-        StockPlan plan = StockPlan.of(contents, brief.balance(), recipe -> {
-            double outside = Math.max(0, option.frozen().worstMiss(recipe) - 1);
-            double fine = exact.meets() ? 1e3 * outside : 0;
-            return option.frozen().score(recipe).total() + fine;
-        });
+                brief.sha256(),
+                inHand);
+        StockPlan plan = StockPlan.of(
+                contents,
+                brief.balance(),
+                recipe -> {
+                    double outside = Math.max(0, option.frozen().worstMiss(recipe) - 1);
+                    double fine = exact.meets() ? 1e3 * outside : 0;
+                    return option.frozen().score(recipe).total() + fine;
+                },
+                wish);
         Score score = option.frozen().score(plan.recipe());
         return new Planned(exact, plan, score, worstMiss(plan.recipe()));
     }
@@ -225,15 +264,19 @@ public final class Answering {
             if (most == 0) return List.of();
             List<Way> ways = new ArrayList<>();
             double[] nm = brief.wavelengthsNm();
-            for (Planned p : planned) {
+            List<Planned> all = new ArrayList<>(planned);
+            all.addAll(otherDosing());
+            for (Planned p : all) {
                 Draws draws = Draws.of(p.recipe(), nm, brief.balance().capacityG(), DRAWS_OF_ALTERNATIVES, SEED);
-                ways.add(new Way(p, chance(draws, nm), cost(p.recipe())));
+                ways.add(new Way(p, chance(draws, nm), cost(p.plan())));
             }
             Way best = ways.get(0);
             List<Answer.Alternative> others = new ArrayList<>();
             for (Way way : ways.subList(1, ways.size())) {
                 if (others.size() == most) break;
                 if (ways.stream().anyMatch(other -> other != way && other.beats(way))) continue;
+                boolean fewer = way.weighings() < best.weighings() && way.planned.option() == best.planned.option();
+                if (fewer && way.chance < WORTH_FEWER * best.chance) continue;
                 others.add(new Answer.Alternative(
                         why(way, best),
                         way.planned.recipe(),
@@ -246,7 +289,25 @@ public final class Answering {
             return others;
         }
 
+        /** The leading sets dosed with fewer weighings, and from the stocks in hand, where that is another recipe. */
+        private List<Planned> otherDosing() {
+            List<Planned> others = new ArrayList<>();
+            for (Planned p : planned.subList(0, Math.min(LEADING, planned.size()))) {
+                if (p.option().meets() != p.meets()) continue;
+                Planned fewer = plan(p.option(), StockPlan.Wish.FEWEST_WEIGHINGS);
+                if (fewer.plan().weighings() < p.plan().weighings() && fewer.meets() == p.meets()) others.add(fewer);
+                if (inHand.isEmpty()) continue;
+                Planned fromHand = plan(p.option(), StockPlan.Wish.STOCK_IN_HAND);
+                boolean another =
+                        !fromHand.plan().stocksInHand().equals(p.plan().stocksInHand());
+                if (another && fromHand.meets() == p.meets()) others.add(fromHand);
+            }
+            return others;
+        }
+
         private String why(Way way, Way best) {
+            if (!way.planned.plan().stocksInHand().isEmpty()
+                    && best.planned.plan().stocksInHand().isEmpty()) return "from stock in hand";
             if (way.chance > best.chance + 0.01) return "likelier to land";
             if (way.weighings() < best.weighings()) return "fewer weighings";
             if (way.cost < 0.95 * best.cost) return "costs less";
@@ -264,11 +325,15 @@ public final class Answering {
         }
     }
 
-    /** Price of what is weighed in, stocks' leftovers included; NaN when an ingredient has no price. */
-    private static double cost(Recipe recipe) {
+    /** Price of what is weighed in, the rest of new stocks included; NaN when an ingredient has no price. */
+    private static double cost(StockPlan plan) {
+        Map<Ingredient, Double> grams = new LinkedHashMap<>(plan.recipe().massesG());
+        for (Leftover left : plan.leftovers())
+            plan.recipe()
+                    .contentPerG(left.stock())
+                    .forEach((i, perG) -> grams.merge(i, perG * left.leftG(), Double::sum));
         double cost = 0;
-        for (var entry : recipe.massesG().entrySet())
-            cost += entry.getKey().pricePerG().orElse(Double.NaN) * entry.getValue();
+        for (var entry : grams.entrySet()) cost += entry.getKey().pricePerG().orElse(Double.NaN) * entry.getValue();
         return cost;
     }
 }

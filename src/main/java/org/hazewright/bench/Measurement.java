@@ -12,8 +12,7 @@ import org.hazewright.optics.Refusal;
  * @param instrument in the words of whoever measured; may be empty
  * @param correction how many corrections were in the vessel by then: 0 before the first
  */
-public record Measurement(
-        LocalDate on, Method method, String instrument, int correction, List<MeasuredValue> values) {
+public record Measurement(LocalDate on, Method method, String instrument, int correction, List<MeasuredValue> values) {
     public Measurement {
         values = List.copyOf(values);
         if (correction < 0) throw new Refusal("A measurement counts " + correction + " corrections; 0 or more.");
@@ -24,7 +23,8 @@ public record Measurement(
                 if (values.get(i).quantity() == values.get(k).quantity()
                         && values.get(i).wavelengthNm() == values.get(k).wavelengthNm())
                     throw new Refusal("The measurement of " + on + " gives "
-                            + values.get(i).quantity().sign() + " at " + Grams.plain(values.get(i).wavelengthNm())
+                            + values.get(i).quantity().sign() + " at "
+                            + Grams.plain(values.get(i).wavelengthNm())
                             + " nm twice; keep one, or their mean.");
     }
 }

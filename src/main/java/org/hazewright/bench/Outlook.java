@@ -27,6 +27,9 @@ public record Outlook(Brief brief, Recipe recipe, List<Answer.Predicted> predict
     /** Half-width of the interval that holds 95 % of a normal distribution, in standard deviations. */
     private static final double NORMAL_95 = 1.959964;
 
+    /** Fewer draws than this do not settle the ends of an interval; the interval is then first-order. */
+    private static final int DRAWS_FOR_INTERVALS = 3000;
+
     /** A cause's share of the summed variance in units of tolerance, 0 to 1. */
     public record CauseShare(String name, Cause.Kind kind, double share) {}
 
@@ -34,7 +37,7 @@ public record Outlook(Brief brief, Recipe recipe, List<Answer.Predicted> predict
         predicted = List.copyOf(predicted);
     }
 
-    /** On the full model, with so many Monte Carlo draws (0 for none: the interval is then first-order). */
+    /** On the full model, with so many Monte Carlo draws; 0 for none. */
     public static Outlook of(Brief brief, Recipe recipe, int draws) {
         return near(brief, recipe, Sweep.of(Mixture.of(recipe), brief.wavelengthsNm()), draws);
     }
@@ -62,7 +65,7 @@ public record Outlook(Brief brief, Recipe recipe, List<Answer.Predicted> predict
             int at = Arrays.binarySearch(nm, p.wavelengthNm());
             double value = (scattering ? musp : mua)[at];
             double u = (scattering ? uMusp : uMua)[at];
-            double[] interval = draws == null
+            double[] interval = count < DRAWS_FOR_INTERVALS
                     ? new double[] {value - NORMAL_95 * u, value + NORMAL_95 * u}
                     : draws.interval95(scattering, at);
             predicted.add(new Answer.Predicted(p, value, u, interval[0], interval[1], p.miss(value)));

@@ -89,13 +89,18 @@ final class Planning {
 
     /** The ways that the wish allows; never none. */
     private List<Dose> wished(List<Dose> ways) {
+        Dose undiluted = Dose.neat(ways.get(0).ingredient(), ways.get(0).massG());
+        if (wish == StockPlan.Wish.NO_NEW_STOCK && SharedStocks.neatEnough(undiluted, balance))
+            return List.of(undiluted);
         boolean hand = wish == StockPlan.Wish.STOCK_IN_HAND || wish == StockPlan.Wish.NO_NEW_STOCK;
         if (!hand) return ways;
         List<Dose> inHand = ways.stream().filter(Dose::inHand).toList();
         if (!inHand.isEmpty()) return inHand;
         if (wish == StockPlan.Wish.STOCK_IN_HAND) return ways;
         List<Dose> neat = ways.stream().filter(Dose::isNeat).toList();
-        return neat.isEmpty() ? List.of(Dose.neat(ways.get(0).ingredient(), ways.get(0).massG())) : neat;
+        return neat.isEmpty()
+                ? List.of(Dose.neat(ways.get(0).ingredient(), ways.get(0).massG()))
+                : neat;
     }
 
     /** The ways that fit the base's liquid when all else goes in neat; neat where none does. */

@@ -92,9 +92,13 @@ public final class Replan {
             OptionalDouble substance = massOf(done, Weighing.Role.STOCK_SUBSTANCE, k);
             OptionalDouble diluent = massOf(done, Weighing.Role.STOCK_DILUENT, k);
             double substanceG = substance.orElse(
-                    diluent.isPresent() ? rounded(s.ingredientG() * diluent.getAsDouble() / s.diluentG()) : s.ingredientG());
+                    diluent.isPresent()
+                            ? rounded(s.ingredientG() * diluent.getAsDouble() / s.diluentG())
+                            : s.ingredientG());
             double diluentG = diluent.orElse(
-                    substance.isPresent() ? rounded(s.diluentG() * substance.getAsDouble() / s.ingredientG()) : s.diluentG());
+                    substance.isPresent()
+                            ? rounded(s.diluentG() * substance.getAsDouble() / s.ingredientG())
+                            : s.diluentG());
             stocks.add(new Stock(s.id(), s.ingredient(), s.lot(), substanceG, s.diluent(), diluentG, s.from()));
         }
         List<Item> items = new ArrayList<>();
@@ -204,7 +208,8 @@ public final class Replan {
         boolean any = fixed.stream().anyMatch(i -> i.massG() > 0);
         Map<Ingredient, Double> fixedG = any ? with(recipe, fixed).massesG() : Map.of();
         double fixedMl = volumeMl(fixedG);
-        double[] x = free.stream().mapToDouble(k -> recipe.items().get(k).massG()).toArray();
+        double[] x =
+                free.stream().mapToDouble(k -> recipe.items().get(k).massG()).toArray();
         for (int round = 0; round < ROUNDS; round++) {
             double volume = fixedMl;
             for (int i = 0; i < n; i++) volume += x[i] * volumeMl(content.get(i));
@@ -243,15 +248,15 @@ public final class Replan {
         ConvexProgramme.Solution s =
                 ConvexProgramme.ofAmounts(quadratic, linear, 0, upper, inside).solve();
         if (s.status() != ConvexProgramme.Status.OPTIMAL)
-            s = ConvexProgramme.ofAmounts(quadratic, linear, 0, upper, List.of()).solve();
+            s = ConvexProgramme.ofAmounts(quadratic, linear, 0, upper, List.of())
+                    .solve();
         return s.status() == ConvexProgramme.Status.OPTIMAL
                 ? Optional.of(Arrays.stream(s.x()).map(v -> Math.max(0, v)).toArray())
                 : Optional.empty();
     }
 
     /** Adds what is not known of each ingredient of the free items: (Σ x_i share_ik κ_kj u_k)² for each ingredient k. */
-    private void uncertain(
-            List<Map<Ingredient, Double>> content, Point p, int at, double scale, double[][] quadratic) {
+    private void uncertain(List<Map<Ingredient, Double>> content, Point p, int at, double scale, double[][] quadratic) {
         for (Ingredient k : sweepIngredients(content)) {
             if (baseParts.containsKey(k)) continue;
             double u = p.quantity() == Point.Quantity.MUA

@@ -87,8 +87,8 @@ public record SeriesPlan(
         List<Brief> briefs = series.phantoms();
         CommonSet.Found found = CommonSet.find(briefs, shelf, stop, progress);
         List<Option> options = IntStream.range(0, briefs.size())
-                .mapToObj(k -> found.own()
-                        .getOrDefault(k, found.best().options().get(k)))
+                .mapToObj(
+                        k -> found.own().getOrDefault(k, found.best().options().get(k)))
                 .toList();
         Balance balance = briefs.get(0).balance();
         List<SharedStocks.Need> needs = IntStream.range(0, briefs.size())
@@ -177,9 +177,8 @@ public record SeriesPlan(
         StockPlan best = null;
         double least = Double.POSITIVE_INFINITY;
         for (double edge : EDGES) {
-            Optional<Option> narrowed = edge == 1
-                    ? Optional.of(option)
-                    : new Design(brief, shelf).narrowed(option, edge);
+            Optional<Option> narrowed =
+                    edge == 1 ? Optional.of(option) : new Design(brief, shelf).narrowed(option, edge);
             if (narrowed.isEmpty()) break;
             Option o = narrowed.get();
             StockPlan plan = StockPlan.of(
@@ -226,8 +225,7 @@ public record SeriesPlan(
             double used = 0;
             for (Recipe r : recipes)
                 for (Item i : r.items()) if (i.stock().filter(s.id()::equals).isPresent()) used += i.massG();
-            for (Stock later : stocks)
-                if (later.from().filter(s.id()::equals).isPresent()) used += later.ingredientG();
+            for (Stock later : stocks) if (later.from().filter(s.id()::equals).isPresent()) used += later.ingredientG();
             left.add(new Leftover(s.id(), s.totalG(), used));
         }
         return left;
@@ -248,7 +246,9 @@ public record SeriesPlan(
         List<String> notes = new ArrayList<>();
         long all = phantoms.size();
         long inside = found.best().meeting();
-        String bottles = found.best().ids().isEmpty() ? "no bottle but the base" : String.join(", ", found.best().ids());
+        String bottles = found.best().ids().isEmpty()
+                ? "no bottle but the base"
+                : String.join(", ", found.best().ids());
         String why = "One list of bottles for the set: " + bottles + ". Of " + found.compared()
                 + (found.compared() == 1 ? " set" : " sets") + " that " + (found.compared() == 1 ? "leads" : "lead")
                 + " for any phantom it brings " + inside + " of " + all + " inside every tolerance";
@@ -260,8 +260,9 @@ public record SeriesPlan(
         }
         notes.add(why + ".");
         found.own()
-                .forEach((k, option) -> notes.add(phantoms.get(k).name() + " cannot be met with these bottles; it is made with "
-                        + option.ids().stream().sorted().collect(Collectors.joining(", ")) + " instead."));
+                .forEach((k, option) ->
+                        notes.add(phantoms.get(k).name() + " cannot be met with these bottles; it is made with "
+                                + option.ids().stream().sorted().collect(Collectors.joining(", ")) + " instead."));
         List<Phantom> outside = phantoms.stream().filter(p -> !p.meets()).toList();
         if (!outside.isEmpty()) {
             Phantom worst = outside.stream()
@@ -270,8 +271,10 @@ public record SeriesPlan(
             Answer.Predicted p = worst.outlook().predicted().stream()
                     .max(java.util.Comparator.comparingDouble(x -> Math.abs(x.miss())))
                     .orElseThrow();
-            notes.add("Outside a tolerance: " + outside.stream().map(Phantom::name).collect(Collectors.joining(", "))
-                    + ". Farthest is " + worst.name() + ", " + p.point().quantity().sign() + " at "
+            notes.add("Outside a tolerance: "
+                    + outside.stream().map(Phantom::name).collect(Collectors.joining(", "))
+                    + ". Farthest is " + worst.name() + ", "
+                    + p.point().quantity().sign() + " at "
                     + Figures.plain(p.point().wavelengthNm()) + " nm: " + Figures.significant(p.perCm(), 3)
                     + " /cm in place of " + Figures.significant(p.point().wantedPerCm(), 3)
                     + "; ask for that phantom alone (design) to read what holds it back.");

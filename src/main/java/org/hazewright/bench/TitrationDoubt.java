@@ -68,11 +68,17 @@ final class TitrationDoubt {
         stocks().values().forEach(w -> add(variance, w.massG(), by -> stockMoved(w, by)));
         for (int k = 0; k < planned.addedG.size(); k++) {
             int step = k;
-            add(variance, planned.addedG.get(k), by -> new Loads(
-                    planned.start, planned.titrant, moved(planned.addedG, step, by), planned.waterBackG));
+            add(
+                    variance,
+                    planned.addedG.get(k),
+                    by -> new Loads(
+                            planned.start, planned.titrant, moved(planned.addedG, step, by), planned.waterBackG));
             if (planned.waterBackG.get(k) > 0)
-                add(variance, planned.waterBackG.get(k), by -> new Loads(
-                        planned.start, planned.titrant, planned.addedG, moved(planned.waterBackG, step, by)));
+                add(
+                        variance,
+                        planned.waterBackG.get(k),
+                        by -> new Loads(
+                                planned.start, planned.titrant, planned.addedG, moved(planned.waterBackG, step, by)));
         }
         variance.forEach(v -> Arrays.setAll(v, j -> Math.sqrt(v[j])));
         return variance;
@@ -82,19 +88,16 @@ final class TitrationDoubt {
     private Map<String, Weighing> stocks() {
         Map<String, Weighing> loads = new LinkedHashMap<>();
         for (Recipe r : List.of(planned.start, planned.titrant))
-            for (Weighing w : Weighing.of(r))
-                w.into().ifPresent(id -> loads.putIfAbsent(w.role() + " " + id, w));
+            for (Weighing w : Weighing.of(r)) w.into().ifPresent(id -> loads.putIfAbsent(w.role() + " " + id, w));
         return loads;
     }
 
     private Loads startMoved(Weighing w, double by) {
-        return new Loads(
-                w.changed(planned.start, w.massG() + by), planned.titrant, planned.addedG, planned.waterBackG);
+        return new Loads(w.changed(planned.start, w.massG() + by), planned.titrant, planned.addedG, planned.waterBackG);
     }
 
     private Loads titrantMoved(Weighing w, double by) {
-        return new Loads(
-                planned.start, w.changed(planned.titrant, w.massG() + by), planned.addedG, planned.waterBackG);
+        return new Loads(planned.start, w.changed(planned.titrant, w.massG() + by), planned.addedG, planned.waterBackG);
     }
 
     private Loads stockMoved(Weighing stock, double by) {
@@ -107,8 +110,7 @@ final class TitrationDoubt {
 
     private static Recipe withStock(Recipe recipe, Weighing stock, double by) {
         for (Weighing w : Weighing.of(recipe))
-            if (w.role() == stock.role() && w.into().equals(stock.into()))
-                return w.changed(recipe, w.massG() + by);
+            if (w.role() == stock.role() && w.into().equals(stock.into())) return w.changed(recipe, w.massG() + by);
         return recipe;
     }
 

@@ -121,12 +121,14 @@ public record TitrationPlan(
         Titration titration = series.titration()
                 .orElseThrow(() -> new Refusal("The series \"" + series.title() + "\" has no [titration]."));
         if (series.phantoms().size() < 2)
-            throw new Refusal("A titration needs at least two phantoms: the first is mixed, the next are reached by adding.");
+            throw new Refusal(
+                    "A titration needs at least two phantoms: the first is mixed, the next are reached by adding.");
         CommonSet.Found found = CommonSet.find(series.phantoms(), shelf, stop, progress);
         Ingredient base = found.best().base();
         if (base.family() != Family.LIQUID)
             throw new Refusal("A titration needs a base that stays liquid, and " + base.id() + " is a "
-                    + base.family().word() + "; choose a liquid base, or take [titration] out to make the phantoms one by one.");
+                    + base.family().word()
+                    + "; choose a liquid base, or take [titration] out to make the phantoms one by one.");
         return new Making(series, shelf, titration, found).plan();
     }
 
@@ -178,7 +180,8 @@ public record TitrationPlan(
             return holds -> {
                 if (neededMl > holds)
                     throw new Refusal("The titration comes to " + Grams.plain(neededMl) + " mL, and the vessel holds "
-                            + Grams.plain(holds) + " mL; begin with less (batch_ml), take aliquots out, or use a larger vessel.");
+                            + Grams.plain(holds)
+                            + " mL; begin with less (batch_ml), take aliquots out, or use a larger vessel.");
             };
         }
 
@@ -255,25 +258,27 @@ public record TitrationPlan(
         }
 
         private StockPlan weighable(Contents contents, Frozen judge) {
-            return StockPlan.of(
-                    contents, balance, r -> judge.score(r).total(), StockPlan.Wish.NO_NEW_STOCK);
+            return StockPlan.of(contents, balance, r -> judge.score(r).total(), StockPlan.Wish.NO_NEW_STOCK);
         }
 
-        /** Judges the titrant's grams: what it is planned to do at the brief's wavelengths, to one per cent. */
+        /** Judges the titrant's grams: what it is planned to do, to the share that the last phantom allows. */
         private Frozen judge(Contents titrant) {
             Assembly assembly = new Assembly(titrant, Balance.USUAL);
             List<Dose> neat = titrant.concentrationGPerMl().keySet().stream()
                     .map(i -> Dose.neat(i, titrant.massG(i)))
                     .toList();
-            Map<Ingredient, Double> masses = new LinkedHashMap<>(assembly.require(neat).massesG());
+            Map<Ingredient, Double> masses =
+                    new LinkedHashMap<>(assembly.require(neat).massesG());
             titrant.concentrationGPerMl().keySet().forEach(i -> masses.put(i, titrant.massG(i)));
             Mixture mixture = new Mixture(masses, titrant.temperatureC());
             List<Point> points = new ArrayList<>();
-            for (double nm : briefs.get(0).wavelengthsNm()) {
-                var at = mixture.at(nm);
-                points.add(new Point(Point.Quantity.MUA, nm, at.muaPerCm(), 0.01 * at.muaPerCm(), 1));
-                if (titration.keepMusp() && at.muspPerCm() > 0)
-                    points.add(new Point(Point.Quantity.MUSP, nm, at.muspPerCm(), 0.01 * at.muspPerCm(), 1));
+            for (Point p : briefs.get(briefs.size() - 1).points()) {
+                boolean absorption = p.quantity() == Point.Quantity.MUA;
+                if (!absorption && !titration.keepMusp() || !(p.wantedPerCm() > 0)) continue;
+                var at = mixture.at(p.wavelengthNm());
+                double value = absorption ? at.muaPerCm() : at.muspPerCm();
+                double share = p.tolerancePerCm() / p.wantedPerCm();
+                if (value > 0) points.add(new Point(p.quantity(), p.wavelengthNm(), value, share * value, p.weight()));
             }
             return new Frozen(points, mixture, base, balance);
         }
@@ -344,15 +349,16 @@ public record TitrationPlan(
 
         private List<String> notes(List<Step> steps, List<StockPlan> plans) {
             List<String> notes = new ArrayList<>();
-            notes.add(titration.keepMusp()
-                    ? "The titrant scatters as the bath does, so that µs' stays while µa rises."
-                    : "The titrant carries no scatterer: µs' falls as the volume grows. With keep_musp = true it stays.");
-            notes.add("Weigh each addition by difference from the titrant's bottle. Whatever is really weighed, write it down: an"
-                    + " error of an early addition stays for the later ones, and the uncertainties count it.");
+            notes.add(
+                    titration.keepMusp()
+                            ? "The titrant scatters as the bath does, so that µs' stays while µa rises."
+                            : "The titrant carries no scatterer: µs' falls as the volume grows. With keep_musp = true it stays.");
+            notes.add(
+                    "Weigh each addition by difference from the titrant's bottle. Whatever is really weighed, write it down: an"
+                            + " error of an early addition stays for the later ones, and the uncertainties count it.");
             List<String> outside =
                     steps.stream().filter(s -> !s.meets()).map(Step::name).toList();
-            if (!outside.isEmpty())
-                notes.add("Outside a tolerance: " + String.join(", ", outside) + ".");
+            if (!outside.isEmpty()) notes.add("Outside a tolerance: " + String.join(", ", outside) + ".");
             plans.stream().flatMap(p -> p.notes().stream()).distinct().forEach(notes::add);
             return notes;
         }

@@ -41,8 +41,8 @@ public record Vessel(Map<Ingredient, Double> massesG) {
         double whole = volumeMl();
         Refusal.notNegative("Volume taken out in mL", volumeMl);
         if (volumeMl >= whole)
-            throw new Refusal("Taking " + Grams.plain(volumeMl) + " mL out of a vessel that holds "
-                    + Grams.plain(whole) + " mL leaves nothing; take less out, or begin with more.");
+            throw new Refusal("Taking " + Grams.plain(volumeMl) + " mL out of a vessel that holds " + Grams.plain(whole)
+                    + " mL leaves nothing; take less out, or begin with more.");
         Map<Ingredient, Double> masses = new LinkedHashMap<>(massesG);
         masses.replaceAll((i, g) -> g * (1 - volumeMl / whole));
         return new Vessel(masses);

@@ -11,6 +11,7 @@ import org.hazewright.optics.Refusal;
  * @param name of the file, without its ending; results are called after it
  * @param bases one or more candidate bases by id
  * @param batchMl wanted volume before the extra share {@code overage}
+ * @param stocksInHand dilutions that are made already and may be used, in making order
  * @param tissue the composition that the targets were made from, when they were
  */
 public record Brief(
@@ -24,6 +25,7 @@ public record Brief(
         List<Mould> moulds,
         SearchLimits limits,
         Balance balance,
+        List<StockInHand> stocksInHand,
         Optional<Tissue> tissue,
         Optional<String> sha256) {
 
@@ -31,6 +33,7 @@ public record Brief(
         bases = List.copyOf(bases);
         targets = List.copyOf(targets);
         moulds = List.copyOf(moulds);
+        stocksInHand = List.copyOf(stocksInHand);
         if (bases.isEmpty())
             throw new Refusal("The brief names no base; give base = \"water\" or another base of the shelf.");
         if (targets.isEmpty())
@@ -40,6 +43,36 @@ public record Brief(
         Refusal.positive("batch_ml", batchMl);
         Refusal.within("overage", overage, 0, 2);
         Refusal.within("temperature_c", temperatureC, 0, 100);
+    }
+
+    /** Without stocks in hand. */
+    public Brief(
+            String name,
+            String title,
+            List<String> bases,
+            double batchMl,
+            double overage,
+            double temperatureC,
+            List<Target> targets,
+            List<Mould> moulds,
+            SearchLimits limits,
+            Balance balance,
+            Optional<Tissue> tissue,
+            Optional<String> sha256) {
+        this(
+                name,
+                title,
+                bases,
+                batchMl,
+                overage,
+                temperatureC,
+                targets,
+                moulds,
+                limits,
+                balance,
+                List.of(),
+                tissue,
+                sha256);
     }
 
     /** Volume to make, mL: the batch and the extra share. */
@@ -83,6 +116,7 @@ public record Brief(
                 moulds,
                 limits,
                 balance,
+                stocksInHand,
                 tissue,
                 Optional.empty());
     }

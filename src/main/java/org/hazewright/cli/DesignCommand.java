@@ -18,7 +18,6 @@ import org.hazewright.files.SafeFile;
 import org.hazewright.files.WriteFailure;
 import org.hazewright.optics.Refusal;
 import org.hazewright.sheet.RecipeSheet;
-import org.hazewright.shelf.Shelf;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
@@ -64,13 +63,12 @@ final class DesignCommand implements Callable<Integer> {
         RecipeSheet.getReady();
         PrintWriter text = spec.commandLine().getOut();
         PrintWriter err = spec.commandLine().getErr();
-        Shelf shelf = shared.shelf();
         LongWork work = new LongWork(err, shared.quiet || shared.json, program.interruption);
         LocalDate today = LocalDate.now();
-        if (briefs.size() == 1) return print(done(briefs.get(0), shelf, work, today), today, text);
+        if (briefs.size() == 1) return print(done(briefs.get(0), work, today), today, text);
         refuseSameResults();
         List<Outcome> outcomes = briefs.parallelStream()
-                .map(b -> outcome(b, shelf, work, today))
+                .map(b -> outcome(b, work, today))
                 .toList();
         return shared.json ? printTogether(outcomes, text, err) : printEach(outcomes, today, text, err);
     }
@@ -85,15 +83,25 @@ final class DesignCommand implements Callable<Integer> {
     /** What became of one of several briefs: done, or the problem that ended it. */
     private record Outcome(Path brief, Done done, Exception problem) {}
 
-    private Done done(Path brief, Shelf shelf, LongWork work, LocalDate today) {
+    private Done done(Path brief, LongWork work, LocalDate today) {
         Brief wanted = BriefReader.read(brief, shared.tissueSpectra());
-        Answer answer = Answering.to(wanted, shelf, alternatives, work::stop, work::progress);
+        Answer answer = answer(wanted, work);
         return new Done(answer, write(answer, today, folder(brief)));
     }
 
-    private Outcome outcome(Path brief, Shelf shelf, LongWork work, LocalDate today) {
+    /** A brief that names its bottles needs only those; when it is refused, the whole shelf says best what would mend it. */
+    private Answer answer(Brief wanted, LongWork work) {
         try {
-            return new Outcome(brief, done(brief, shelf, work, today), null);
+            return Answering.to(wanted, shared.shelfFor(wanted), alternatives, work::stop, work::progress);
+        } catch (Refusal refusal) {
+            if (wanted.limits().use().isEmpty()) throw refusal;
+            return Answering.to(wanted, shared.shelf(), alternatives, work::stop, work::progress);
+        }
+    }
+
+    private Outcome outcome(Path brief, LongWork work, LocalDate today) {
+        try {
+            return new Outcome(brief, done(brief, work, today), null);
         } catch (RuntimeException problem) {
             return new Outcome(brief, null, problem);
         }
@@ -157,7 +165,11 @@ final class DesignCommand implements Callable<Integer> {
             results.add(Json.object()
                     .with("brief", o.brief.toString())
                     .with("format", 1)
-                    .with("status", o.problem instanceof WriteFailure ? "unwritable" : one == Hazewright.REFUSED ? "refused" : "fault")
+                    .with(
+                            "status",
+                            o.problem instanceof WriteFailure
+                                    ? "unwritable"
+                                    : one == Hazewright.REFUSED ? "refused" : "fault")
                     .with("message", o.problem.getMessage())
                     .fields());
         }
@@ -174,14 +186,14 @@ final class DesignCommand implements Callable<Integer> {
         return done.status();
     }
 
-    private static List<Path> write(Answer answer, LocalDate today, Path folder) {
+    private List<Path> write(Answer answer, LocalDate today, Path folder) {
         String name = answer.brief().name();
         List<Path> written = new ArrayList<>();
         Path recipe = folder.resolve(name + ".recipe.toml");
         RecipeWriter.write(recipe, answer.recipe(), SafeFile.Overwrite.KEEP_PREVIOUS);
         written.add(recipe);
         Path sheet = folder.resolve(name + ".xlsx");
-        SafeFile.write(sheet, RecipeSheet.write(answer, today), SafeFile.Overwrite.KEEP_PREVIOUS);
+        SafeFile.write(sheet, RecipeSheet.write(answer, today, shared.tissueSpectra()), SafeFile.Overwrite.KEEP_PREVIOUS);
         written.add(sheet);
         return written;
     }

@@ -26,6 +26,9 @@ import org.hazewright.shelf.Ingredient;
 
 /** An answer as a page of text that could be carried to a balance. */
 final class DesignText {
+    /** A slip that moves no target by this share of its half-width is not listed. */
+    private static final double SLIGHT = 0.05;
+
     private final Answer answer;
     private final Shared.Units units;
     private final PrintWriter out;
@@ -71,6 +74,9 @@ final class DesignText {
     static String verdict(Answer answer) {
         String chance = times(answer.chance());
         if (answer.meets()) return "Lands inside every tolerance " + chance + " in 100.";
+        if (!answer.search().proven())
+            return "Misses: no recipe that meets every tolerance was found before the search was stopped; this is the closest so"
+                    + " far. Its worst miss is " + Figures.significant(answer.worstMiss(), 3) + " half-widths.";
         return "Misses: no recipe from this shelf meets every tolerance; this is the closest. Its worst miss is "
                 + Figures.significant(answer.worstMiss(), 3) + " half-widths, and "
                 + Figures.significant(answer.bestPossibleWorstMiss(), 3) + " is the best possible.";
@@ -194,12 +200,17 @@ final class DesignText {
         out.println("What a slip does, in half-widths of the target it moves most");
         TextTable table = new TextTable("  ", "lrrl");
         table.row("", "1 % more", "1 mg more", "");
+        boolean rest = false;
         for (Sensitivity s :
                 Sensitivity.of(answer.recipe(), balance, answer.brief().points())) {
             Weighing w = s.weighing();
             Sensitivity.Effect worst = s.effects().stream()
                     .max(Comparator.comparingDouble(e -> Math.abs(e.perPercentMiss())))
                     .orElseThrow();
+            if (Math.abs(worst.perPercentMiss()) < SLIGHT && Math.abs(worst.perMgMiss()) < SLIGHT) {
+                rest = true;
+                continue;
+            }
             table.row(
                     w.label() + w.into().map(stock -> " in " + stock).orElse(""),
                     signed(worst.perPercentMiss()),
@@ -207,6 +218,7 @@ final class DesignText {
                     worst.point().quantity().sign() + " "
                             + Figures.plain(worst.point().wavelengthNm()));
         }
+        if (rest) table.row("all else", "<" + Figures.fixed(SLIGHT, 2), "<" + Figures.fixed(SLIGHT, 2), "");
         table.print(out);
         BetterKnown.of(answer.brief(), answer.recipe(), Answering.DRAWS)
                 .ifPresent(b -> wrapped("Worth knowing better: with half the uncertainty of " + b.what() + " it lands "

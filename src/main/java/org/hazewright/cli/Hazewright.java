@@ -29,6 +29,7 @@ import picocli.CommandLine.Spec;
             DesignCommand.class,
             SeriesCommand.class,
             PredictCommand.class,
+            ReadingsCommand.class,
             IngredientsCommand.class,
             BatchCommand.class,
             CorrectCommand.class,

@@ -11,7 +11,7 @@ import java.util.concurrent.TimeUnit;
  * is ended at once.
  */
 final class Interruption {
-    private static final int PATIENCE_S = 30;
+    private static final int PATIENCE_S = 60;
 
     private final CountDownLatch finished = new CountDownLatch(1);
     private volatile boolean listening;

@@ -9,6 +9,7 @@ import java.util.function.LongSupplier;
  * short and a person knows that it is alive and how to end it.
  */
 final class LongWork {
+    private final String doing;
     private final PrintWriter err;
     private final boolean silent;
     private final Interruption interruption;
@@ -18,10 +19,20 @@ final class LongWork {
     private volatile double share;
 
     LongWork(PrintWriter err, boolean silent, Interruption interruption) {
-        this(err, silent, interruption, System::nanoTime);
+        this("Searching", err, silent, interruption);
+    }
+
+    /** {@code doing} is the word for the work: "Searching". */
+    LongWork(String doing, PrintWriter err, boolean silent, Interruption interruption) {
+        this(doing, err, silent, interruption, System::nanoTime);
     }
 
     LongWork(PrintWriter err, boolean silent, Interruption interruption, LongSupplier nanoTime) {
+        this("Searching", err, silent, interruption, nanoTime);
+    }
+
+    private LongWork(String doing, PrintWriter err, boolean silent, Interruption interruption, LongSupplier nanoTime) {
+        this.doing = doing;
         this.err = err;
         this.silent = silent;
         this.interruption = interruption;
@@ -46,6 +57,6 @@ final class LongWork {
         if (s < nextS) return;
         while (nextS <= s) nextS *= 2;
         String percent = share > 0 && share < 1 ? ", " + Math.round(100 * share) + " % done" : "";
-        err.println("Searching for " + s + " s" + percent + ". Ctrl-C ends it with the best so far.");
+        err.println(doing + " for " + s + " s" + percent + ". Ctrl-C ends it with the best so far.");
     }
 }

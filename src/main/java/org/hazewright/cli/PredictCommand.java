@@ -77,10 +77,13 @@ final class PredictCommand implements Callable<Integer> {
 
     /** The picture always shows a range: the one asked for, or all that the ingredients share, every 5 nm. */
     private void draw(Recipe made, Mixture mixture, PrintWriter out) {
-        double[] range = from != null ? Wavelengths.of(null, from, to, Math.min(step, 5), mixture) : Wavelengths.covered(mixture, 5);
+        double[] range = from != null
+                ? Wavelengths.of(null, from, to, Math.min(step, 5), mixture)
+                : Wavelengths.covered(mixture, 5);
         SafeFile.write(
                 picture,
-                SpectraPicture.of(made, range, picture.getFileName().toString(), shared.units.of(1), shared.units.sign()),
+                SpectraPicture.of(
+                        made, range, picture.getFileName().toString(), shared.units.of(1), shared.units.sign()),
                 SafeFile.Overwrite.KEEP_PREVIOUS);
         if (!shared.json && !shared.quiet) out.println("Written: " + picture);
     }

@@ -55,8 +55,7 @@ final class SeriesCommand implements Callable<Integer> {
         RecipeSheet.getReady();
         Shelf shelf = shared.shelf();
         Series series = SeriesReader.read(brief, shared.tissueSpectra());
-        LongWork work =
-                new LongWork(spec.commandLine().getErr(), shared.quiet || shared.json, program.interruption);
+        LongWork work = new LongWork(spec.commandLine().getErr(), shared.quiet || shared.json, program.interruption);
         LocalDate today = LocalDate.now();
         Path folder = out != null ? out : brief.toAbsolutePath().getParent();
         return series.titration().isPresent()

@@ -44,8 +44,8 @@ final class SeriesJson {
 
     static List<Map<String, Object>> buy(Map<Ingredient, Double> buyG) {
         List<Map<String, Object>> buy = new ArrayList<>();
-        buyG.forEach((i, g) ->
-                buy.add(Json.object().with("ingredient", i.id()).with("mass_g", g).fields()));
+        buyG.forEach((i, g) -> buy.add(
+                Json.object().with("ingredient", i.id()).with("mass_g", g).fields()));
         return buy;
     }
 
@@ -60,8 +60,7 @@ final class SeriesJson {
             int j = Arrays.binarySearch(nm, point.wavelengthNm());
             boolean scattering = point.quantity() == Point.Quantity.MUSP;
             String name = scattering ? "musp" : "mua";
-            rows.computeIfAbsent(
-                            point.wavelengthNm(), at -> Json.object().with("wavelength_nm", at))
+            rows.computeIfAbsent(point.wavelengthNm(), at -> Json.object().with("wavelength_nm", at))
                     .with(name + "_per_cm", p.perCm())
                     .with("u_" + name + "_per_cm", (scattering ? uMusp : uMua)[j])
                     .with(name + "_miss", p.miss());

@@ -5,7 +5,6 @@ import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
-import java.util.Locale;
 import org.hazewright.bench.Answer;
 import org.hazewright.bench.Leftover;
 import org.hazewright.bench.SeriesPlan;
@@ -17,6 +16,7 @@ import org.hazewright.brief.Brief;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.mixture.Stock;
 import org.hazewright.optics.Figures;
+import org.hazewright.shelf.Form;
 
 /** A set of phantoms as text: stocks, one weighing table, where each phantom lands, what to buy. */
 final class SeriesText {
@@ -101,7 +101,8 @@ final class SeriesText {
         head.addAll(columns);
         head.add("together");
         table.row(head.toArray(String[]::new));
-        for (Phantom p : plan.phantoms()) row(table, p.name(), columns.stream().map(p::massG).toList());
+        for (Phantom p : plan.phantoms())
+            row(table, p.name(), columns.stream().map(p::massG).toList());
         row(table, "all", columns.stream().map(plan::sumG).toList());
         table.print(out);
     }
@@ -119,7 +120,8 @@ final class SeriesText {
 
     private void targets() {
         out.println();
-        boolean narrow = plan.phantoms().stream().allMatch(p -> points(p).equals(points(plan.phantoms().get(0))))
+        boolean narrow = plan.phantoms().stream()
+                        .allMatch(p -> points(p).equals(points(plan.phantoms().get(0))))
                 && points(plan.phantoms().get(0)).size() <= MOST_COLUMNS;
         out.println("Where they land, " + units.sign() + (narrow ? ": predicted (wanted) ± u" : ""));
         List<String> heads = narrow ? points(plan.phantoms().get(0)) : List.of();
@@ -135,8 +137,10 @@ final class SeriesText {
             cells.add(LandingGauge.of(worst.miss()));
             cells.add((worst.miss() < 0 ? "−" : "+") + Figures.fixed(Math.abs(worst.miss()), 2));
             cells.add(DesignText.times(p.outlook().chance()) + " in 100"
-                    + (narrow ? "" : ", " + worst.point().quantity().sign() + " "
-                            + Figures.plain(worst.point().wavelengthNm()))
+                    + (narrow
+                            ? ""
+                            : ", " + worst.point().quantity().sign() + " "
+                                    + Figures.plain(worst.point().wavelengthNm()))
                     + (p.meets() ? "" : "  OUTSIDE"));
             table.row(cells.toArray(String[]::new));
         }
@@ -159,8 +163,7 @@ final class SeriesText {
     private String figures(Answer.Predicted x) {
         double u = units.of(x.uPerCm());
         int decimals = Math.max(
-                Figures.decimalsFor(u),
-                Figures.decimalsFor(units.of(x.point().tolerancePerCm())));
+                Figures.decimalsFor(u), Figures.decimalsFor(units.of(x.point().tolerancePerCm())));
         return Figures.fixed(units.of(x.perCm()), decimals) + " ("
                 + Figures.fixed(units.of(x.point().wantedPerCm()), decimals) + ") ± " + Figures.fixed(u, decimals);
     }
@@ -173,7 +176,7 @@ final class SeriesText {
                 .forEach((i, g) -> table.row(
                         i.id(),
                         grams(g, balance),
-                        String.format(Locale.ROOT, "%s mL", Figures.significant(g / i.densityGPerMl(), 4)),
+                        i.form() == Form.LIQUID ? Figures.significant(g / i.densityGPerMl(), 4) + " mL" : "",
                         i.name()));
         table.print(out);
     }

@@ -2,7 +2,10 @@ package org.hazewright.cli;
 
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.LinkedHashSet;
+import java.util.Set;
 import java.util.function.Supplier;
+import org.hazewright.brief.Brief;
 import org.hazewright.brief.Tissue;
 import org.hazewright.files.ShelfReader;
 import org.hazewright.files.TissueSpectra;
@@ -62,6 +65,15 @@ final class Shared {
     Shelf shelf() {
         Path folder = shelfFolder();
         return folder == null ? ShelfReader.readShipped() : ShelfReader.read(folder);
+    }
+
+    /** The bottles that a brief names in {@code use} with its bases, or the whole shelf when it names none. */
+    Shelf shelfFor(Brief brief) {
+        if (brief.limits().use().isEmpty()) return shelf();
+        Set<String> named = new LinkedHashSet<>(brief.limits().use());
+        named.addAll(brief.limits().avoid());
+        named.addAll(brief.bases());
+        return ShelfReader.readOnly(shelfFolder(), named);
     }
 
     ShelfReader.Lenient lenientShelf() {

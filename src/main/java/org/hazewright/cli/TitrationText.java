@@ -35,12 +35,15 @@ final class TitrationText {
                 + Figures.plain(plan.start().temperatureC()) + " °C");
         out.println();
         long inside = plan.steps().stream().filter(TitrationPlan.Step::meets).count();
-        out.println(inside == plan.steps().size()
-                ? "By plan every step lies inside every tolerance."
-                : "By plan " + inside + " of " + plan.steps().size() + " steps lie inside every tolerance.");
+        out.println(
+                inside == plan.steps().size()
+                        ? "By plan every step lies inside every tolerance."
+                        : "By plan " + inside + " of " + plan.steps().size() + " steps lie inside every tolerance.");
         SeriesText.stocks(out, plan.stocks(), plan.leftovers(), balance);
         recipe("Mix the bath, " + plan.steps().get(0).name(), plan.start());
-        recipe("Mix the titrant, of which " + SeriesText.grams(plan.titrantUsedG(), balance) + " are used", plan.titrant());
+        recipe(
+                "Mix the titrant, of which " + SeriesText.grams(plan.titrantUsedG(), balance) + " are used",
+                plan.titrant());
         steps();
         List<String> mind = new ArrayList<>(plan.notes());
         Warnings.of(plan.titrant(), day).stream().map(Warning::text).forEach(mind::add);
@@ -75,7 +78,8 @@ final class TitrationText {
         if (aliquots) head.add("take out mL");
         if (water) head.add("water back g");
         head.addAll(List.of("add titrant g", "in vessel g", "mL"));
-        points.forEach(p -> head.add(p.point().quantity().sign() + " " + Figures.plain(p.point().wavelengthNm())));
+        points.forEach(p -> head.add(
+                p.point().quantity().sign() + " " + Figures.plain(p.point().wavelengthNm())));
         head.add("worst miss");
         TextTable table = new TextTable("  ", "l" + "r".repeat(head.size() - 1));
         table.row(head.toArray(String[]::new));
@@ -113,7 +117,9 @@ final class TitrationText {
             for (Answer.Predicted p : s.predicted())
                 predicted.add(Json.object()
                         .with("wavelength_nm", p.point().wavelengthNm())
-                        .with("quantity", p.point().quantity() == org.hazewright.brief.Point.Quantity.MUA ? "mua" : "musp")
+                        .with(
+                                "quantity",
+                                p.point().quantity() == org.hazewright.brief.Point.Quantity.MUA ? "mua" : "musp")
                         .with("per_cm", p.perCm())
                         .with("u_per_cm", p.uPerCm())
                         .with("miss", p.miss())

@@ -81,7 +81,8 @@ public final class CommonSet {
     }
 
     /** One phantom in one base. */
-    private record Cell(Brief brief, Candidates candidates, BriefColumns columns, SetProblem problem, SetResult result) {
+    private record Cell(
+            Brief brief, Candidates candidates, BriefColumns columns, SetProblem problem, SetResult result) {
         int[] positions(Set<String> ids) {
             return IntStream.range(0, candidates.ingredients.size())
                     .filter(i -> ids.contains(candidates.ingredients.get(i).id()))

@@ -85,7 +85,7 @@ public final class Design {
         for (Searched s : searched) if (s.candidates.base.equals(options.get(0).base())) leading = s;
         List<String> limits = stop.getAsBoolean()
                 ? List.of() // whoever stops the search does not wait for more of them
-                : new HeldBack(brief, leading, options.get(0), bestPossible).sentences();
+                : new HeldBack(brief, leading, options.get(0), bestPossible, stop).sentences();
         long admissible =
                 searched.stream().mapToLong(s -> s.result.admissible()).sum();
         long solved = searched.stream().mapToLong(s -> s.result.solved()).sum();
@@ -120,20 +120,24 @@ public final class Design {
         List<SetSolution> finalists = new ArrayList<>();
         finalists.add(s.result.best());
         finalists.addAll(s.result.runnersUp());
-        List<Option> options = new ArrayList<>();
-        Set<Set<String>> seen = new LinkedHashSet<>();
         boolean canMeet = s.result.bestPossibleWorstMiss() < 1.1; // crowding moves the edge by less than that
-        double best = Double.POSITIVE_INFINITY;
-        for (SetSolution f : finalists) {
-            if (f.status() == ConvexProgramme.Status.INFEASIBLE) continue;
-            if (leadersOnly && f.bias() + f.ingredient() > 1.1 * best) continue;
-            Map<Ingredient, Double> start = concentrations(s, f.members(), f.amounts());
-            Optional<Option> inside = canMeet ? fixed.leastScore(start, true, 1) : Optional.empty();
-            Option option = inside.or(() -> fixed.leastScore(start, false, 1)).orElseThrow();
-            if (seen.add(option.ids())) options.add(option);
-            best = Math.min(best, option.score().total());
-        }
+        finalists.removeIf(f -> f.status() == ConvexProgramme.Status.INFEASIBLE);
+        List<Option> options = new ArrayList<>();
+        options.add(settled(s, fixed, finalists.get(0), canMeet));
+        double best = options.get(0).score().total();
+        options.addAll(finalists.subList(1, finalists.size()).parallelStream()
+                .filter(f -> !leadersOnly || f.bias() + f.ingredient() <= 1.1 * best)
+                .map(f -> settled(s, fixed, f, canMeet))
+                .toList());
+        Set<Set<String>> seen = new LinkedHashSet<>();
+        options.removeIf(o -> !seen.add(o.ids()));
         return options;
+    }
+
+    private static Option settled(Searched s, FixedPoint fixed, SetSolution f, boolean canMeet) {
+        Map<Ingredient, Double> start = concentrations(s, f.members(), f.amounts());
+        Optional<Option> inside = canMeet ? fixed.leastScore(start, true, 1) : Optional.empty();
+        return inside.or(() -> fixed.leastScore(start, false, 1)).orElseThrow();
     }
 
     /** The least worst miss of the search, on the full model. */

@@ -15,17 +15,15 @@ import org.hazewright.shelf.Ingredient;
  *
  * <p>Each round straightens the full model at the present amounts, crowding and host index included, and solves the convex
  * programme there (Gauss–Newton with limits), so a round squares the error where crowding bends the model by a few per cent. When a
- * step turns back on the one before, strides are halved. Rounds end at a relative change of 1e-9, or after {@value #ROUNDS}. The
+ * step turns back on the one before, strides are halved. Rounds end at a relative change of 1e-8, or after {@value #ROUNDS}. The
  * misses reported are those of {@link Mixture} itself.
  */
 final class FixedPoint {
     private static final int ROUNDS = 40;
-    private static final double SETTLED = 1e-9;
+    private static final double SETTLED = 1e-8;
 
-    /** Slopes are taken anew after a step above {@code FAR}, and once when the answer is {@code NEAR}; between they serve. */
+    /** A step above this share takes the slopes anew; below they serve, and the answer is theirs to a part in a million. */
     private static final double FAR = 0.02;
-
-    private static final double NEAR = 1e-4;
 
     private final Brief brief;
     private final BriefColumns columns;
@@ -68,7 +66,6 @@ final class FixedPoint {
         double stride = 1;
         double[] before = null;
         List<double[]> slopes = columns.slopes(now, members);
-        boolean near = false;
         for (int round = 0; round < ROUNDS; round++) {
             problem = columns.tangent(now, members, slopes, edge);
             Optional<double[]> next = rule.amounts(problem);
@@ -85,9 +82,7 @@ final class FixedPoint {
             for (int k = 0; k < amounts.length; k++)
                 now.merge(members.get(k), stride == 1 || change <= SETTLED ? step[k] : stride * step[k], Double::sum);
             if (change <= SETTLED) break;
-            boolean arriving = change <= NEAR && !near;
-            near |= arriving;
-            if (arriving || change > FAR) slopes = columns.slopes(now, members);
+            if (change > FAR && round > 0) slopes = columns.slopes(now, members);
         }
         double[] amounts = members.stream().mapToDouble(now::get).toArray();
         return Optional.of(option(now, members, amounts, problem));

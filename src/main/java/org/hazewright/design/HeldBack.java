@@ -3,6 +3,7 @@ package org.hazewright.design;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.function.BooleanSupplier;
 import org.hazewright.brief.Brief;
 import org.hazewright.brief.Point;
 import org.hazewright.optics.Figures;
@@ -26,14 +27,17 @@ final class HeldBack {
     private final double possible;
     private final List<Point> points;
     private final LimitProof proof;
+    private final BooleanSupplier stop;
 
-    HeldBack(Brief brief, Design.Searched searched, Option best, double possible) {
+    /** Once {@code stop} is true no further problem is solved to its end; what a sentence then says was reached all the same. */
+    HeldBack(Brief brief, Design.Searched searched, Option best, double possible, BooleanSupplier stop) {
+        this.stop = stop;
         this.brief = brief;
         this.searched = searched;
         this.best = best;
         this.possible = possible;
         this.points = searched.columns().points();
-        this.proof = new LimitProof(searched.problem(), searched.result().leastWorstMiss());
+        this.proof = new LimitProof(searched.problem(), searched.result().leastWorstMiss(), stop);
     }
 
     List<String> sentences() {
@@ -138,7 +142,7 @@ final class HeldBack {
             if (available <= p.limits().most(group)) continue;
             SetSolution more = new SetSearch(new SetProblem(
                             p.points(), p.candidates(), p.limits().oneMore(group)))
-                    .run(0)
+                    .run(0, stop, done -> {})
                     .best();
             if (more.score() < 0.9 * best.score().total() && more.worstMiss() < Math.abs(miss) - WORTH)
                 sentences.add("With " + ordinal(p.limits().most(group) + 1) + " " + word(group) + " ("
@@ -154,7 +158,8 @@ final class HeldBack {
     private String names(int[] members, SetProblem.Group group) {
         List<String> names = new ArrayList<>();
         for (int m : members)
-            if (searched.problem().candidates().get(m).group() == group) names.add(ingredient(m).id());
+            if (searched.problem().candidates().get(m).group() == group)
+                names.add(ingredient(m).id());
         return names.isEmpty() ? "none of which is needed" : join(names);
     }
 

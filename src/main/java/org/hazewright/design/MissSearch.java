@@ -14,6 +14,8 @@ import java.util.List;
 final class MissSearch {
     /** Values below this are exact fits; nothing is gained by looking further. */
     private static final double NONE = 1e-9;
+    /** Gap between a programme's value and its dual that counts as rounding, in tolerances. */
+    private static final double GRAIN = 1e-9;
 
     private final Columns columns;
     private final MissBounds bounds;
@@ -108,7 +110,7 @@ final class MissSearch {
             sound &= proven;
             return true;
         }
-        sound &= bounds.exclude(set, count, wanted() * (1 - 1e-9));
+        sound &= bounds.exclude(set, count, wanted() * (1 - 1e-9) - GRAIN);
         return false;
     }
 

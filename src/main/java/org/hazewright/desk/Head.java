@@ -34,7 +34,9 @@ final class Head extends HBox {
         getStyleClass().addAll("head", "gap-m");
         setAlignment(Pos.CENTER_LEFT);
         Field title = new Field(
-                        () -> desk.edits().now() == null ? "" : desk.edits().now().title(),
+                        () -> desk.edits().now() == null
+                                ? ""
+                                : desk.edits().now().title(),
                         desk.editing()::title,
                         false)
                 .named("title of the brief")
@@ -62,7 +64,10 @@ final class Head extends HBox {
         state.setMinWidth(Region.USE_PREF_SIZE);
         getChildren().addAll(title, state, busy(), Say.spring(), file, new Word("Shelf", deeds::shelf), balance);
         desk.solving().shownProperty().addListener((p, before, now) -> state(now));
-        desk.solving().problemProperty().addListener((p, before, now) -> state(desk.solving().shownProperty().get()));
+        desk.solving()
+                .problemProperty()
+                .addListener(
+                        (p, before, now) -> state(desk.solving().shownProperty().get()));
     }
 
     private HBox busy() {
@@ -80,8 +85,10 @@ final class Head extends HBox {
         box.getStyleClass().add("gap-s");
         box.setAlignment(Pos.CENTER_LEFT);
         // shown only for work that a person would notice, so that typing does not flicker
-        javafx.animation.PauseTransition patience = new javafx.animation.PauseTransition(javafx.util.Duration.millis(600));
-        patience.setOnFinished(e -> Say.show(box, desk.solving().searchingProperty().get()));
+        javafx.animation.PauseTransition patience =
+                new javafx.animation.PauseTransition(javafx.util.Duration.millis(600));
+        patience.setOnFinished(
+                e -> Say.show(box, desk.solving().searchingProperty().get()));
         Say.show(box, false);
         desk.solving().searchingProperty().addListener((p, was, is) -> {
             if (is) patience.playFromStart();
@@ -113,7 +120,8 @@ final class Head extends HBox {
     private void fill(Look look, Deeds deeds) {
         Menu recent = new Menu("Open recent");
         for (Path p : desk.remembered().recent()) {
-            MenuItem item = new MenuItem(p.getFileName() + "   " + Optional.ofNullable(p.getParent()).map(Path::toString).orElse(""));
+            MenuItem item = new MenuItem(p.getFileName() + "   "
+                    + Optional.ofNullable(p.getParent()).map(Path::toString).orElse(""));
             item.setMnemonicParsing(false);
             item.setOnAction(e -> deeds.open(p));
             recent.getItems().add(item);
@@ -122,37 +130,44 @@ final class Head extends HBox {
         CheckMenuItem dark = new CheckMenuItem("Dark");
         dark.setSelected(look.palette().dark());
         dark.setOnAction(e -> deeds.dark(dark.isSelected()));
-        file.getItems().setAll(
-                item("Open…", "Shortcut+O", deeds::open),
-                recent,
-                item("New brief", "Shortcut+N", deeds::begin),
-                new SeparatorMenuItem(),
-                item("Save", "Shortcut+S", deeds::save),
-                item("Save as…", "Shortcut+Shift+S", deeds::saveAs),
-                item("Save recipe sheet…", null, deeds::saveSheet),
-                item("Save picture of the spectra…", null, deeds::savePicture),
-                item("Print…", "Shortcut+P", deeds::print),
-                new SeparatorMenuItem(),
-                undo(),
-                redo(),
-                item("Copy grams", "Shortcut+G", deeds::copyGrams),
-                new SeparatorMenuItem(),
-                dark,
-                item("Larger letters", "Shortcut+Plus", () -> look.larger(true)),
-                item("Smaller letters", "Shortcut+Minus", () -> look.larger(false)),
-                item("Keys", "F1", deeds::keys));
+        file.getItems()
+                .setAll(
+                        item("Open…", "Shortcut+O", deeds::open),
+                        recent,
+                        item("New brief", "Shortcut+N", deeds::begin),
+                        new SeparatorMenuItem(),
+                        item("Save", "Shortcut+S", deeds::save),
+                        item("Save as…", "Shortcut+Shift+S", deeds::saveAs),
+                        item("Save recipe sheet…", null, deeds::saveSheet),
+                        item("Save picture of the spectra…", null, deeds::savePicture),
+                        item("Print…", "Shortcut+P", deeds::print),
+                        new SeparatorMenuItem(),
+                        undo(),
+                        redo(),
+                        item("Copy grams", "Shortcut+G", deeds::copyGrams),
+                        new SeparatorMenuItem(),
+                        dark,
+                        item("Larger letters", "Shortcut+Plus", () -> look.larger(true)),
+                        item("Smaller letters", "Shortcut+Minus", () -> look.larger(false)),
+                        item("Keys", "F1", deeds::keys));
     }
 
     private MenuItem undo() {
         Optional<String> what = desk.edits().undoable();
-        MenuItem item = item("Undo" + what.map(w -> ": " + w).orElse(""), "Shortcut+Z", () -> desk.edits().undo());
+        MenuItem item = item(
+                "Undo" + what.map(w -> ": " + w).orElse(""),
+                "Shortcut+Z",
+                () -> desk.edits().undo());
         item.setDisable(what.isEmpty());
         return item;
     }
 
     private MenuItem redo() {
         Optional<String> what = desk.edits().redoable();
-        MenuItem item = item("Redo" + what.map(w -> ": " + w).orElse(""), "Shortcut+Shift+Z", () -> desk.edits().redo());
+        MenuItem item = item(
+                "Redo" + what.map(w -> ": " + w).orElse(""),
+                "Shortcut+Shift+Z",
+                () -> desk.edits().redo());
         item.setDisable(what.isEmpty());
         return item;
     }

@@ -31,7 +31,7 @@ public final class Opening {
         @Override
         public void start(Stage stage) {
             work = Work.threaded(Platform::runLater);
-            Desk desk = new Desk(work, shelf, Remembered.in(Remembered.usualFolder()));
+            Desk desk = new Desk(work, shelf, Remembered.in(Remembered.usualFolder(), Remembered.usualWorkFolder()));
             desk.begin(file);
             new Window(stage, desk, new Look(), Optional.empty()).show();
         }

@@ -39,8 +39,8 @@ final class Pictures {
 
     void save(SpectraPlace spectra) {
         if (desk.edits().now() == null) return;
-        Optional<Path> file = chooser.save(
-                "Save picture", desk.edits().now().name() + "-spectra.png", "Pictures", ".png", ".svg");
+        Optional<Path> file =
+                chooser.save("Save picture", desk.edits().now().name() + "-spectra.png", "Pictures", ".png", ".svg");
         file.ifPresent(f -> write(f, spectra.picture(Palette.LIGHT, WIDTH, HEIGHT, EM)));
     }
 
@@ -49,7 +49,10 @@ final class Pictures {
             if (file.toString().endsWith(".svg")) {
                 SvgPen pen = new SvgPen(WIDTH, HEIGHT);
                 plot.draw(pen);
-                SafeFile.write(file, pen.picture(desk.edits().now().title() + ": " + plot.inWords()), SafeFile.Overwrite.REPLACE);
+                SafeFile.write(
+                        file,
+                        pen.picture(desk.edits().now().title() + ": " + plot.inWords()),
+                        SafeFile.Overwrite.REPLACE);
             } else {
                 Path png = file.toString().endsWith(".png") ? file : file.resolveSibling(file.getFileName() + ".png");
                 SafeFile.write(png, png(plot), SafeFile.Overwrite.REPLACE);

@@ -18,12 +18,14 @@ import javafx.scene.layout.StackPane;
 import javafx.scene.layout.VBox;
 import javafx.stage.Stage;
 import org.hazewright.desk.balance.BalanceView;
+import org.hazewright.desk.batch.BatchView;
 import org.hazewright.desk.brief.BriefPlace;
 import org.hazewright.desk.look.Look;
 import org.hazewright.desk.look.Palette;
 import org.hazewright.desk.model.AtBalance;
 import org.hazewright.desk.model.Desk;
 import org.hazewright.desk.model.Draft;
+import org.hazewright.desk.model.Edits;
 import org.hazewright.desk.model.Notice;
 import org.hazewright.desk.model.ShelfState;
 import org.hazewright.desk.parts.Chooser;
@@ -32,6 +34,7 @@ import org.hazewright.desk.parts.NoticeBar;
 import org.hazewright.desk.parts.Say;
 import org.hazewright.desk.parts.SystemChooser;
 import org.hazewright.desk.parts.Word;
+import org.hazewright.desk.readings.ReadingsPlace;
 import org.hazewright.desk.recipe.RecipePlace;
 import org.hazewright.desk.spectra.SpectraPlace;
 
@@ -50,6 +53,9 @@ public final class Window {
     private final RecipePlace recipe;
     private final Deeds deeds = new Doing();
     private BalanceView balance;
+    private BatchView batch;
+    private Node atDesk = new StackPane();
+    private final Head head;
 
     /** A window on a stage of its own; call {@link #show}. */
     public Window(Stage stage, Desk desk, Look look, Optional<Chooser> chooser) {
@@ -63,13 +69,15 @@ public final class Window {
         brief = new BriefPlace(desk, deeds::shelf);
         spectra = new SpectraPlace(desk, look, deeds::savePicture);
         recipe = new RecipePlace(desk, deeds::print, deeds::saveSheet, deeds::copyGrams);
-        places.setTop(new VBox(new Head(desk, look, deeds), new NoticeBar(desk.notices())));
+        head = new Head(desk, look, deeds);
+        places.setTop(new VBox(head, new NoticeBar(desk.notices())));
         whole.getChildren().add(places);
         lay();
         desk.shelfProperty().addListener((p, before, now) -> lay());
         desk.solving().faultProperty().addListener((p, before, now) -> now.ifPresent(f -> desk.notices()
                 .tell(Notice.wrong("fault", "This is a fault of the program, not of your files; nothing was overwritten. " + f))));
-        desk.weighingProperty().addListener((p, before, now) -> turnTo(now));
+        desk.weighingProperty().addListener((p, before, now) -> turn());
+        desk.madeProperty().addListener((p, before, now) -> turn());
         Scene scene = new Scene(whole, 1440, 900);
         look.dress(scene);
         keys(scene);
@@ -102,7 +110,8 @@ public final class Window {
     private void lay() {
         ShelfState shelf = desk.shelfProperty().get();
         if (shelf.problem().isPresent()) {
-            places.setCenter(noShelf(shelf));
+            atDesk = noShelf(shelf);
+            turn();
             return;
         }
         if (!shelf.refused().isEmpty())
@@ -115,19 +124,21 @@ public final class Window {
                                             + shelf.refused().get(0),
                             new Notice.Way("read it again", desk::readShelfAgain),
                             new Notice.Way("go on without", () -> {})));
-        if (places.getCenter() != null && places.getCenter().getId() != null) return;
+        if (atDesk.getId() != null) return;
         BorderPane desktop = new BorderPane();
         desktop.setId("places");
         brief.getStyleClass().add("brief-width");
         recipe.getStyleClass().add("recipe-width");
         VBox middle = new VBox(
                 new Hint(desk.remembered(), "drag", "Drag an amber box, or type on the left: the recipe follows."), spectra);
+        middle.getChildren().add(new ReadingsPlace(desk.foreseeing(), look, desk.remembered()));
         middle.getStyleClass().add("middle");
         VBox.setVgrow(spectra, Priority.ALWAYS);
         desktop.setLeft(brief);
         desktop.setCenter(middle);
         desktop.setRight(recipe);
-        places.setCenter(desktop);
+        atDesk = desktop;
+        turn();
     }
 
     private Node noShelf(ShelfState shelf) {
@@ -153,16 +164,29 @@ public final class Window {
         return middle;
     }
 
-    /** Turns to the balance, or back to the places. */
-    private void turnTo(Optional<AtBalance> weighing) {
-        if (weighing.isEmpty()) {
-            whole.getChildren().setAll(places);
-            return;
-        }
-        BalanceView view = new BalanceView(weighing.get(), desk::leaveBalance, desk::finishWeighing);
-        whole.getChildren().setAll(view);
-        view.focusField();
-        balance = view;
+    /** Turns to the balance, to a batch, or back to the places. */
+    private void turn() {
+        Optional<AtBalance> weighing = desk.weighingProperty().get();
+        if (weighing.isPresent()) {
+            balance = new BalanceView(weighing.get(), desk::leaveBalance, desk::finishWeighing);
+            center(balance, false);
+            balance.focusField();
+        } else if (desk.madeProperty().get().isPresent()) {
+            batch = new BatchView(desk.madeProperty().get().get(), desk::leaveBatch);
+            center(batch, false);
+            batch.requestFocus();
+        } else center(atDesk, true);
+    }
+
+    /** Puts one view in the window; the head belongs to the desk. */
+    private void center(Node view, boolean head) {
+        places.setCenter(view);
+        Say.show(this.head, head);
+    }
+
+    /** The view of the batch that was looked at last; null before the first. */
+    public BatchView batch() {
+        return batch;
     }
 
     /** The view at the balance that was opened last; null before the first. */
@@ -186,10 +210,19 @@ public final class Window {
             boolean undo = new KeyCodeCombination(KeyCode.Z, KeyCombination.SHORTCUT_DOWN).match(e);
             boolean redo = new KeyCodeCombination(KeyCode.Z, KeyCombination.SHORTCUT_DOWN, KeyCombination.SHIFT_DOWN).match(e)
                     || new KeyCodeCombination(KeyCode.Y, KeyCombination.SHORTCUT_DOWN).match(e);
-            if (undo) desk.edits().undo();
-            if (redo) desk.edits().redo();
-            if (undo || redo) e.consume();
+            if (!undo && !redo) return;
+            e.consume();
+            if (desk.weighingProperty().get().isPresent()) {
+                if (undo) desk.weighingProperty().get().get().back();
+                return;
+            }
+            desk.madeProperty().get().ifPresentOrElse(made -> step(made.edits(), undo), () -> step(desk.edits(), undo));
         });
+    }
+
+    private static void step(Edits<?> edits, boolean back) {
+        if (back) edits.undo();
+        else edits.redo();
     }
 
     private static void on(Scene scene, String keys, Runnable act) {

@@ -28,7 +28,17 @@ import org.hazewright.shelf.Shelf;
  */
 public final class BatchReader {
     static final List<String> KEYS = List.of(
-            "id", "who", "when", "notes", "recipe", "batch_ml", "target", "tolerance", "balance", "heating", "measured");
+            "id",
+            "who",
+            "when",
+            "notes",
+            "recipe",
+            "batch_ml",
+            "target",
+            "tolerance",
+            "balance",
+            "heating",
+            "measured");
 
     private final TomlPage page;
     private final Shelf shelf;
@@ -44,9 +54,11 @@ public final class BatchReader {
         TomlPage page = TomlPage.read(file);
         if (!RecipeReader.isBatch(file))
             throw page.at()
-                    .refusal("This is not a batch: its name does not end in .batch.toml. Make one of a recipe with: hazewright"
-                            + " batch open RECIPE");
-        if (!page.has("when")) throw page.at().refusal("The key when is missing; give the day of making: when = 2026-03-02");
+                    .refusal(
+                            "This is not a batch: its name does not end in .batch.toml. Make one of a recipe with: hazewright"
+                                    + " batch open RECIPE");
+        if (!page.has("when"))
+            throw page.at().refusal("The key when is missing; give the day of making: when = 2026-03-02");
         return new BatchReader(page, shelf, nameOf(file)).batch();
     }
 
@@ -83,8 +95,7 @@ public final class BatchReader {
             corrections.add(c);
         }
         Tolerance tolerance = Tolerance.read(page);
-        List<Target> targets =
-                TargetReader.read(page, Optional.empty(), () -> null, tolerance);
+        List<Target> targets = TargetReader.read(page, Optional.empty(), () -> null, tolerance);
         Balance balance = page.table("balance").map(BriefReader::balance).orElse(Balance.USUAL);
         double volume = page.has("batch_ml") ? page.positive("batch_ml") : ownVolumeMl(plan, corrections);
         LocalDate on = page.date("when").orElse(LocalDate.EPOCH);
@@ -150,9 +161,11 @@ public final class BatchReader {
             value(v, Quantity.ABSORPTION, "mua_per_cm").ifPresent(values::add);
             value(v, Quantity.SCATTERING, "musp_per_cm").ifPresent(values::add);
             if (values.size() == before)
-                throw v.at().refusal("This measured value gives neither mua_per_cm nor musp_per_cm; give at least one.");
+                throw v.at().refusal(
+                                "This measured value gives neither mua_per_cm nor musp_per_cm; give at least one.");
         }
-        return t.at().of(() -> new Measurement(on, new Method(name, ua, us), t.text("instrument", ""), correction, values));
+        return t.at().of(() ->
+                new Measurement(on, new Method(name, ua, us), t.text("instrument", ""), correction, values));
     }
 
     private static Optional<MeasuredValue> value(TomlPage v, Quantity quantity, String key) {

@@ -26,26 +26,78 @@ public final class BatchTable {
     }
 
     private void all(Batch b) {
-        row("row", "batch", "date", "number", "what", "planned_g", "weighed_g", "wavelength_nm", "quantity", "wanted_per_cm",
-                "predicted_per_cm", "measured_per_cm", "u_measured_per_cm", "method");
+        row(
+                "row",
+                "batch",
+                "date",
+                "number",
+                "what",
+                "planned_g",
+                "weighed_g",
+                "wavelength_nm",
+                "quantity",
+                "wanted_per_cm",
+                "predicted_per_cm",
+                "measured_per_cm",
+                "u_measured_per_cm",
+                "method");
         List<Weighing> all = b.weighings();
         for (int n = 0; n < all.size(); n++) {
             OptionalDouble g = b.weighedG().get(n);
-            row("weighing", b.id(), b.on(), n + 1, all.get(n).label(), all.get(n).massG(),
-                    g.isPresent() ? g.getAsDouble() : "", "", "", "", "", "", "", "");
+            row(
+                    "weighing",
+                    b.id(),
+                    b.on(),
+                    n + 1,
+                    all.get(n).label(),
+                    all.get(n).massG(),
+                    g.isPresent() ? g.getAsDouble() : "",
+                    "",
+                    "",
+                    "",
+                    "",
+                    "",
+                    "",
+                    "");
         }
         Mixture made = Mixture.of(b.asMade());
         b.brief().ifPresent(brief -> {
             for (Point p : brief.points())
-                row("target", b.id(), b.on(), "", "", "", "", p.wavelengthNm(), word(p.quantity() == Point.Quantity.MUSP),
-                        p.wantedPerCm(), value(made, p.wavelengthNm(), p.quantity() == Point.Quantity.MUSP), "", "", "");
+                row(
+                        "target",
+                        b.id(),
+                        b.on(),
+                        "",
+                        "",
+                        "",
+                        "",
+                        p.wavelengthNm(),
+                        word(p.quantity() == Point.Quantity.MUSP),
+                        p.wantedPerCm(),
+                        value(made, p.wavelengthNm(), p.quantity() == Point.Quantity.MUSP),
+                        "",
+                        "",
+                        "");
         });
         for (Measurement m : b.measured()) {
             Mixture then = Mixture.of(b.asMade(m.correction()));
             for (MeasuredValue v : m.values()) {
                 boolean scattering = v.quantity() == org.hazewright.learning.Quantity.SCATTERING;
-                row("measured", b.id(), m.on(), "", "", "", "", v.wavelengthNm(), word(scattering), "",
-                        value(then, v.wavelengthNm(), scattering), v.perCm(), v.uPerCm(), m.method().name());
+                row(
+                        "measured",
+                        b.id(),
+                        m.on(),
+                        "",
+                        "",
+                        "",
+                        "",
+                        v.wavelengthNm(),
+                        word(scattering),
+                        "",
+                        value(then, v.wavelengthNm(), scattering),
+                        v.perCm(),
+                        v.uPerCm(),
+                        m.method().name());
             }
         }
     }

@@ -42,10 +42,12 @@ public final class BatchWriter {
         line("when = " + b.on());
         if (!b.who().isBlank()) text("who", b.who());
         if (!b.notes().isEmpty())
-            line("notes = "
-                    + b.notes().stream().map(TomlText::text).collect(Collectors.joining(", ", "[", "]")));
+            line("notes = " + b.notes().stream().map(TomlText::text).collect(Collectors.joining(", ", "[", "]")));
         for (int k = 0; k < b.plan().stocks().size(); k++)
-            stock(b.plan().stocks().get(k), b.weighedG().get(2 * k), b.weighedG().get(2 * k + 1));
+            stock(
+                    b.plan().stocks().get(k),
+                    b.weighedG().get(2 * k),
+                    b.weighedG().get(2 * k + 1));
         int first = 2 * b.plan().stocks().size();
         for (int k = 0; k < b.plan().items().size(); k++)
             item(
@@ -94,8 +96,8 @@ public final class BatchWriter {
         line("correction = " + m.correction());
         number("mua_scale_uncertainty", m.method().uMuaScale());
         number("musp_scale_uncertainty", m.method().uMuspScale());
-        TreeMap<Double, List<MeasuredValue>> byNm = new TreeMap<>(
-                m.values().stream().collect(Collectors.groupingBy(MeasuredValue::wavelengthNm)));
+        TreeMap<Double, List<MeasuredValue>> byNm =
+                new TreeMap<>(m.values().stream().collect(Collectors.groupingBy(MeasuredValue::wavelengthNm)));
         byNm.forEach((nm, values) -> {
             head("[[measured.value]]");
             number("wavelength_nm", nm);

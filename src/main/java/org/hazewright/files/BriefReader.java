@@ -10,6 +10,7 @@ import org.hazewright.brief.Balance;
 import org.hazewright.brief.Brief;
 import org.hazewright.brief.Mould;
 import org.hazewright.brief.SearchLimits;
+import org.hazewright.brief.StockInHand;
 import org.hazewright.brief.Target;
 import org.hazewright.brief.Tissue;
 
@@ -42,7 +43,7 @@ public final class BriefReader {
                 throw page.refusal(
                         key, "This brief describes a set of phantoms (" + key + "); use the command series for it.");
         List<String> known = new ArrayList<>(SHARED_KEYS);
-        known.addAll(List.of("target", "tissue"));
+        known.addAll(List.of("target", "tissue", "stock_in_hand"));
         page.refuseUnknown(known);
         Tolerance tolerance = Tolerance.read(page);
         Optional<Tissue> tissue = page.table("tissue").map(TargetReader::tissue);
@@ -71,6 +72,7 @@ public final class BriefReader {
         double overage = page.within("overage", 0, 2, 0);
         double temperatureC = page.within("temperature_c", 0, 100, 22);
         SearchLimits limits = limits(page.table("shelf"));
+        List<StockInHand> stocks = stocks(page);
         Balance balance = page.table("balance").map(BriefReader::balance).orElse(Balance.USUAL);
         return page.at()
                 .of(() -> new Brief(
@@ -84,6 +86,7 @@ public final class BriefReader {
                         moulds,
                         limits,
                         balance,
+                        stocks,
                         tissue,
                         Optional.of(sha256)));
     }
@@ -110,7 +113,7 @@ public final class BriefReader {
                 : moulds.stream().mapToDouble(Mould::volumeMl).sum();
     }
 
-    private static List<Mould> moulds(TomlPage page) {
+    static List<Mould> moulds(TomlPage page) {
         List<Mould> moulds = new ArrayList<>();
         for (TomlPage table : page.tables("mould")) {
             if (table.oneOf("shape", "box", "cylinder").equals("box")) {
@@ -129,6 +132,27 @@ public final class BriefReader {
             }
         }
         return moulds;
+    }
+
+    private static List<StockInHand> stocks(TomlPage page) {
+        List<StockInHand> stocks = new ArrayList<>();
+        for (TomlPage t : page.tables("stock_in_hand")) {
+            t.refuseUnknown("id", "ingredient", "stock", "ingredient_g", "diluent", "diluent_g");
+            String id = Ids.require(t, "id");
+            if (stocks.stream().anyMatch(s -> s.id().equals(id)))
+                throw t.refusal("id", "Two stocks are called \"" + id + "\"; give each its own id.");
+            Optional<String> from = t.maybeText("stock");
+            if (from.isPresent() && stocks.stream().noneMatch(s -> s.id().equals(from.get())))
+                throw t.refusal(
+                        "stock",
+                        "No earlier [[stock_in_hand]] is called \"" + from.get() + "\"; write it above this one.");
+            Optional<String> ingredient = t.maybeText("ingredient");
+            double ingredientG = t.positive("ingredient_g");
+            String diluent = t.text("diluent");
+            double diluentG = t.positive("diluent_g");
+            stocks.add(t.at().of(() -> new StockInHand(id, ingredient, from, ingredientG, diluent, diluentG)));
+        }
+        return stocks;
     }
 
     private static SearchLimits limits(Optional<TomlPage> shelf) {

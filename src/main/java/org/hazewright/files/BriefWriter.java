@@ -15,6 +15,7 @@ import org.hazewright.brief.Balance;
 import org.hazewright.brief.Brief;
 import org.hazewright.brief.Mould;
 import org.hazewright.brief.SearchLimits;
+import org.hazewright.brief.StockInHand;
 import org.hazewright.brief.Target;
 import org.hazewright.brief.Tissue;
 
@@ -66,6 +67,18 @@ public final class BriefWriter {
         for (Target t : brief.targets()) target(t, Optional.ofNullable(given.get(t.wavelengthNm())));
         limits(brief.limits());
         balance(brief.balance());
+        brief.stocksInHand().forEach(this::stock);
+    }
+
+    private void stock(StockInHand s) {
+        line("");
+        line("[[stock_in_hand]]");
+        line("id = " + TomlText.text(s.id()));
+        s.ingredient().ifPresent(id -> line("ingredient = " + TomlText.text(id)));
+        s.from().ifPresent(id -> line("stock = " + TomlText.text(id)));
+        number("ingredient_g", s.ingredientG());
+        line("diluent = " + TomlText.text(s.diluent()));
+        number("diluent_g", s.diluentG());
     }
 
     private void mould(Mould m) {

@@ -62,7 +62,8 @@ public final class CoefficientTable {
         this.path = path;
         int head = 0;
         while (head < cells.size() && cells.get(head).stream().allMatch(String::isBlank)) head++;
-        if (head == cells.size()) throw Place.whole(path).refusal("The table is empty; it needs a heading row, then numbers.");
+        if (head == cells.size())
+            throw Place.whole(path).refusal("The table is empty; it needs a heading row, then numbers.");
         heading(cells.get(head), head + 1, saidUnit);
         TreeMap<Double, Integer> seen = new TreeMap<>();
         for (int r = head + 1; r < cells.size(); r++) {
@@ -75,7 +76,8 @@ public final class CoefficientTable {
                         path,
                         r + 1,
                         1,
-                        Figures.plain(read.wavelengthNm()) + " nm stands in row " + before + " already; keep one of them.");
+                        Figures.plain(read.wavelengthNm()) + " nm stands in row " + before
+                                + " already; keep one of them.");
             rows.add(read);
         }
         if (rows.isEmpty())
@@ -120,8 +122,8 @@ public final class CoefficientTable {
                         path,
                         line,
                         1,
-                        "Two columns hold the " + column.get().words + ": \"" + head.get(before).strip() + "\" and \"" + raw
-                                + "\"; keep one, or rename the other.");
+                        "Two columns hold the " + column.get().words + ": \""
+                                + head.get(before).strip() + "\" and \"" + raw + "\"; keep one, or rename the other.");
             double factor = column.get() == Column.WAVELENGTH ? nanometres(raw) : perCm(raw, line, saidUnit);
             toOurs.put(column.get(), factor);
             understood.add("\"" + raw + "\" is the " + column.get().words
@@ -131,7 +133,10 @@ public final class CoefficientTable {
         }
         if (!place.containsKey(Column.WAVELENGTH))
             throw new FileRefusal(
-                    path, line, 1, "No column holds the wavelength; call it wavelength_nm. Found: " + String.join(", ", head));
+                    path,
+                    line,
+                    1,
+                    "No column holds the wavelength; call it wavelength_nm. Found: " + String.join(", ", head));
         if (!place.containsKey(Column.MUA) && !place.containsKey(Column.MUSP))
             throw new FileRefusal(
                     path,
@@ -142,7 +147,10 @@ public final class CoefficientTable {
     }
 
     private static Optional<Column> column(String raw) {
-        String s = raw.toLowerCase(Locale.ROOT).replace('μ', 'µ').replace('′', '\'').replace('’', '\'');
+        String s = raw.toLowerCase(Locale.ROOT)
+                .replace('μ', 'µ')
+                .replace('′', '\'')
+                .replace('’', '\'');
         String bare = s.replaceAll("[^a-zµλ'0-9]", "");
         boolean musp = bare.contains("musp")
                 || bare.contains("mus'")
@@ -197,7 +205,8 @@ public final class CoefficientTable {
                     path,
                     line,
                     1,
-                    "The wavelength is " + Figures.plain(nm.getAsDouble()) + " nm; it must lie between 100 and 20000 nm.");
+                    "The wavelength is " + Figures.plain(nm.getAsDouble())
+                            + " nm; it must lie between 100 and 20000 nm.");
         return new Row(
                 nm.getAsDouble(),
                 number(cells, Column.MUA, line, commas),
@@ -223,7 +232,8 @@ public final class CoefficientTable {
                     path,
                     line,
                     1,
-                    "The " + column.words + " is \"" + raw + "\" in this row; it must be a number, 0 or above, without a unit.");
+                    "The " + column.words + " is \"" + raw
+                            + "\" in this row; it must be a number, 0 or above, without a unit.");
         }
     }
 

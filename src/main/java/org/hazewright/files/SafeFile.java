@@ -17,6 +17,7 @@ import java.nio.file.ReadOnlyFileSystemException;
 import java.nio.file.StandardCopyOption;
 import java.nio.file.StandardOpenOption;
 import java.nio.file.attribute.PosixFileAttributeView;
+import java.util.Arrays;
 import java.util.Locale;
 import java.util.concurrent.ThreadLocalRandom;
 
@@ -34,7 +35,10 @@ public final class SafeFile {
     public enum Overwrite {
         /** It is replaced. */
         REPLACE,
-        /** It is replaced, and the previous version stays beside it, with {@code .previous} after its name. */
+        /**
+         * It is replaced, and the previous version stays beside it, with {@code .previous} after its name; a file that holds the
+         * same bytes already is left as it is.
+         */
         KEEP_PREVIOUS,
         /** It stays, and the write fails. */
         NEVER
@@ -48,6 +52,7 @@ public final class SafeFile {
         Path temporary = null;
         try {
             Path end = checked(target, policy);
+            if (policy == Overwrite.KEEP_PREVIOUS && holds(end, bytes)) return;
             Path folder = end.toAbsolutePath().getParent();
             Files.createDirectories(folder);
             temporary = folder.resolve("." + end.getFileName() + "."
@@ -95,6 +100,10 @@ public final class SafeFile {
         if (!Files.exists(from)) return;
         PosixFileAttributeView view = Files.getFileAttributeView(to, PosixFileAttributeView.class);
         if (view != null) view.setPermissions(Files.getPosixFilePermissions(from));
+    }
+
+    private static boolean holds(Path end, byte[] bytes) throws IOException {
+        return Files.exists(end) && Files.size(end) == bytes.length && Arrays.equals(Files.readAllBytes(end), bytes);
     }
 
     private static void keepPrevious(Path end) throws IOException {

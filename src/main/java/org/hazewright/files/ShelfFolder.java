@@ -53,11 +53,11 @@ final class ShelfFolder {
      * The pages of TOML files, read on all cores, in the order given; meanwhile the tables of {@code spectra/} are read ahead, and
      * one that is broken counts only when a file asks for it.
      */
-    List<Attempt<TomlPage>> pages(List<TextFileName> files) {
+    List<Attempt<TomlPage>> pages(List<TextFileName> files, boolean tablesAhead) {
         List<Supplier<Attempt<TomlPage>>> reading = new ArrayList<>();
         for (TextFileName f : files)
             reading.add(() -> Attempt.of(() -> TomlPage.of(TextFile.read(f.file(), f.shown()))));
-        for (Path table : tablesAhead())
+        for (Path table : tablesAhead ? tablesAhead() : List.<Path>of())
             reading.add(() -> {
                 tables.computeIfAbsent(table, file -> attempt(file, "spectra/" + file.getFileName()));
                 return null;

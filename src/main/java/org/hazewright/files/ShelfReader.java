@@ -7,12 +7,17 @@ import java.nio.file.FileSystem;
 import java.nio.file.FileSystems;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.ArrayDeque;
 import java.util.ArrayList;
+import java.util.Collection;
 import java.util.Comparator;
+import java.util.Deque;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.Set;
 import java.util.TreeMap;
+import java.util.TreeSet;
 import java.util.function.Function;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Nearest;
@@ -62,6 +67,16 @@ public final class ShelfReader {
         return new ShelfReader(new ShelfFolder(folder, folder.toString())).readAll();
     }
 
+    /**
+     * The part of a shelf that holds some ids, their lots' parents, blends' parts and materials; of the rest only the names of the
+     * files. {@code folder} null is the shelf of the program. An id that is not there is left to {@link Shelf#require}.
+     */
+    public static Shelf readOnly(Path folder, Collection<String> ids) {
+        if (folder == null)
+            return inShipped(root -> new ShelfReader(new ShelfFolder(root, SHIPPED)).readPart(ids));
+        return new ShelfReader(new ShelfFolder(folder, folder.toString())).readPart(ids);
+    }
+
     /** The shelf that comes with the program. */
     public static Shelf readShipped() {
         return inShipped(root -> new ShelfReader(new ShelfFolder(root, SHIPPED)).readAll())
@@ -86,14 +101,46 @@ public final class ShelfReader {
     }
 
     private Lenient readAll() {
-        List<ShelfFolder.TextFileName> materialFiles = folder.tomlFiles("materials");
+        List<ShelfFolder.TextFileName> files = ingredientFiles();
+        return read(folder.tomlFiles("materials"), files, true);
+    }
+
+    private List<ShelfFolder.TextFileName> ingredientFiles() {
         List<ShelfFolder.TextFileName> files = folder.tomlFiles("");
         if (files.isEmpty())
             throw Place.whole(folder.shown())
                     .refusal("The folder holds no ingredient files (<id>.toml); name the folder of a shelf.");
+        return files;
+    }
+
+    private Shelf readPart(Collection<String> ids) {
+        Map<String, ShelfFolder.TextFileName> there = new TreeMap<>();
+        ingredientFiles().forEach(f -> there.put(f.id(), f));
+        Set<String> wanted = new TreeSet<>();
+        Set<String> madeOf = new TreeSet<>();
+        Deque<String> ask = new ArrayDeque<>(ids);
+        while (!ask.isEmpty()) {
+            String id = ask.pop();
+            if (!there.containsKey(id) || !wanted.add(id)) continue;
+            TomlPage page = TomlPage.of(TextFile.read(there.get(id).file(), there.get(id).shown()));
+            madeOf.add(id);
+            page.maybeText("lot_of").ifPresent(ask::add);
+            page.maybeText("index").ifPresent(madeOf::add);
+            page.table("scattering").flatMap(s -> s.maybeText("particle")).ifPresent(madeOf::add);
+            for (TomlPage part : page.tables("blend")) part.maybeText("ingredient").ifPresent(ask::add);
+        }
+        List<ShelfFolder.TextFileName> materialFiles = folder.tomlFiles("materials").stream()
+                .filter(f -> madeOf.contains(f.id()))
+                .toList();
+        Shelf part = read(materialFiles, wanted.stream().map(there::get).toList(), false).orFirstRefusal();
+        return new Shelf(part.place(), part.ingredients(), part.materials(), there.keySet());
+    }
+
+    private Lenient read(
+            List<ShelfFolder.TextFileName> materialFiles, List<ShelfFolder.TextFileName> files, boolean tablesAhead) {
         List<ShelfFolder.TextFileName> all = new ArrayList<>(materialFiles);
         all.addAll(files);
-        List<Attempt<TomlPage>> read = folder.pages(all);
+        List<Attempt<TomlPage>> read = folder.pages(all, tablesAhead);
         for (int i = 0; i < materialFiles.size(); i++) {
             String id = materialFiles.get(i).id();
             Attempt<TomlPage> page = read.get(i);

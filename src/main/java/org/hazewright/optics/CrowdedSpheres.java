@@ -20,16 +20,24 @@ final class CrowdedSpheres {
 
     /** Sizes and their weights by number; {@code perCm} turns a mean cross section in nm² into the coefficient. */
     CrowdedSpheres(
-            double[] diametersNm, double[] weights, Index particle, double hostIndex, double wavelengthNm, double perCm) {
+            double[] diametersNm,
+            double[] weights,
+            Index particle,
+            double hostIndex,
+            double wavelengthNm,
+            double perCm) {
         int sizes = diametersNm.length;
         double waveNumber = 2 * Math.PI * hostIndex / wavelengthNm;
         MieSeries[] series = new MieSeries[sizes];
         double[] scattered = new double[sizes];
         double total = 0;
         for (int i = 0; i < sizes; i++) {
-            series[i] = MieSeries.of(
-                    waveNumber * diametersNm[i] / 2, particle.n() / hostIndex, particle.k() / hostIndex);
-            scattered[i] = weights[i] * diametersNm[i] * diametersNm[i] * series[i].efficiencies().qSca();
+            series[i] =
+                    MieSeries.of(waveNumber * diametersNm[i] / 2, particle.n() / hostIndex, particle.k() / hostIndex);
+            scattered[i] = weights[i]
+                    * diametersNm[i]
+                    * diametersNm[i]
+                    * series[i].efficiencies().qSca();
             total += scattered[i];
         }
         int count = 0;
@@ -48,7 +56,8 @@ final class CrowdedSpheres {
             if (series[i] == null) continue;
             GaussLegendre rule = rule(series[i]);
             double x = series[i].x;
-            double factor = perCm * weights[i] * Math.PI / (waveNumber * waveNumber); // 2π/k² times half of |S1|² + |S2|²
+            double factor =
+                    perCm * weights[i] * Math.PI / (waveNumber * waveNumber); // 2π/k² times half of |S1|² + |S2|²
             for (int j = 0; j < rule.node().length; j++) {
                 double cos = rule.node()[j];
                 series[i].patterns(cos, pattern);

@@ -96,7 +96,8 @@ final class HistogramQuadrature extends SizeQuadrature {
     double[] wantedNm() {
         double[] out = new double[POINTS * open.size()];
         for (int i = 0; i < out.length; i++)
-            // a bin may begin at 0; below the smallest sphere the cross section is as good as 0 beside the rest of the bin
+            // a bin may begin at 0; below the smallest sphere the cross section is as good as 0 beside the rest of the
+            // bin
             out[i] = Math.max(leastNm, open.get(i / POINTS).node(i % POINTS));
         return out;
     }
@@ -157,7 +158,8 @@ final class HistogramQuadrature extends SizeQuadrature {
     @Override
     double[] diametersNm() {
         double[] out = new double[POINTS * settled.size()];
-        for (int i = 0; i < out.length; i++) out[i] = Math.max(leastNm, settled.get(i / POINTS).node(i % POINTS));
+        for (int i = 0; i < out.length; i++)
+            out[i] = Math.max(leastNm, settled.get(i / POINTS).node(i % POINTS));
         return out;
     }
 

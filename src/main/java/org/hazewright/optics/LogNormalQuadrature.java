@@ -57,7 +57,8 @@ final class LogNormalQuadrature extends SizeQuadrature {
             double t = low + (high - low) * i / grid;
             double x = medianNm * sizePerNm * Math.exp(t);
             double area = Math.exp(-t * t / (2 * sigma * sigma) + 2 * t);
-            double scattering = area / (1 / (scatteringSmall * x * x * x * x + 1e-300) + 1 / (scatteringMiddle * x * x + 1e-300) + 0.5);
+            double scattering = area
+                    / (1 / (scatteringSmall * x * x * x * x + 1e-300) + 1 / (scatteringMiddle * x * x + 1e-300) + 0.5);
             rough[0][i] = scattering;
             rough[1][i] = scattering / (1 + x * x);
             rough[2][i] = area * Math.min(x, 1);
@@ -65,7 +66,8 @@ final class LogNormalQuadrature extends SizeQuadrature {
             if (rough[0][i] == most[0]) top = i;
         }
         int first = 0;
-        while (first < grid && rough[1][first] < TAIL * most[1] && (!absorbing || rough[2][first] < TAIL * most[2])) first++;
+        while (first < grid && rough[1][first] < TAIL * most[1] && (!absorbing || rough[2][first] < TAIL * most[2]))
+            first++;
         int last = grid;
         while (last > 0 && rough[0][last] < TAIL * most[0] && (!absorbing || rough[2][last] < TAIL * most[2])) last--;
         double end = low + (high - low) * Math.min(grid, last + 1) / grid;
@@ -73,8 +75,10 @@ final class LogNormalQuadrature extends SizeQuadrature {
         this.typicalSize = medianNm * sizePerNm * Math.exp(low + (high - low) * top / grid);
         double largest = medianNm * sizePerNm * Math.exp(end);
         if (largest > Mie.X_MAX)
-            throw new Refusal("This log-normal distribution reaches particles of " + Plain.number(Math.rint(largest / sizePerNm / 1e3))
-                    + " µm, size parameter " + Plain.number(Math.rint(largest)) + ", that still scatter noticeably; spheres can be"
+            throw new Refusal("This log-normal distribution reaches particles of "
+                    + Plain.number(Math.rint(largest / sizePerNm / 1e3))
+                    + " µm, size parameter " + Plain.number(Math.rint(largest))
+                    + ", that still scatter noticeably; spheres can be"
                     + " computed up to 20000. Give a smaller median or geometric standard deviation.");
         this.step = sigma / 2;
         this.nodes = new double[2 + (int) ((end - from) / step)];

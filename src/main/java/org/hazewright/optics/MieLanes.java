@@ -433,7 +433,6 @@ final class MieLanes {
     }
 
     private static void addAcross(double w, double[] wave, double[] sums) {
-        for (int i = 0; i < LANES; i++)
-            sums[i + L1] += w * (wave[i] * wave[i + L2] + wave[i + L1] * wave[i + L3]);
+        for (int i = 0; i < LANES; i++) sums[i + L1] += w * (wave[i] * wave[i + L2] + wave[i + L1] * wave[i + L3]);
     }
 }

@@ -200,7 +200,8 @@ public final class MieSeries {
      * sum and difference serve the two directions.
      */
     void patterns(double cosTheta, double[] out) {
-        // S1 + S2 = Σ w (a + b)(π + τ), S1 − S2 = Σ w (a − b)(π − τ); at −cos θ π + τ and π − τ change places, odd orders' sign
+        // S1 + S2 = Σ w (a + b)(π + τ), S1 − S2 = Σ w (a − b)(π − τ); at −cos θ π + τ and π − τ change places, odd
+        // orders' sign
         double sumRe = 0;
         double sumIm = 0;
         double difRe = 0;

@@ -43,7 +43,8 @@ public record Population(SizeDistribution sizes) {
     public List<ParticleOptics> spectrum(List<Index> particle, double[] hostIndex, double[] wavelengthsNm) {
         if (particle.size() != wavelengthsNm.length || hostIndex.length != wavelengthsNm.length)
             throw new Refusal("A spectrum of " + wavelengthsNm.length + " wavelengths has " + particle.size()
-                    + " particle indices and " + hostIndex.length + " host indices; it needs one of each for every wavelength.");
+                    + " particle indices and " + hostIndex.length
+                    + " host indices; it needs one of each for every wavelength.");
         List<Key> keys = new ArrayList<>();
         for (int i = 0; i < wavelengthsNm.length; i++)
             keys.add(new Key(sizes, particle.get(i), hostIndex[i], wavelengthsNm[i]));
@@ -78,12 +79,7 @@ public record Population(SizeDistribution sizes) {
         if (known != null) return known;
         Figures figures = figures(key);
         CrowdedSpheres made = new CrowdedSpheres(
-                figures.diametersNm,
-                figures.weights,
-                key.particle,
-                key.hostIndex,
-                key.wavelengthNm,
-                perCm(key.sizes));
+                figures.diametersNm, figures.weights, key.particle, key.hostIndex, key.wavelengthNm, perCm(key.sizes));
         CROWDED.put(key, made);
         return made;
     }

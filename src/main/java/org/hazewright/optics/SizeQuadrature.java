@@ -42,8 +42,9 @@ abstract class SizeQuadrature {
     abstract double[] weights();
 
     static Refusal doesNotSettle() {
-        return new Refusal("The average over this size distribution does not settle to one part in a million: its particles are"
-                + " too large for their wavelength, and too many different sizes matter. Give a narrower distribution.");
+        return new Refusal(
+                "The average over this size distribution does not settle to one part in a million: its particles are"
+                        + " too large for their wavelength, and too many different sizes matter. Give a narrower distribution.");
     }
 
     /** Largest of |difference|/average over the three figures; a figure that is 0 throughout has no error. */

@@ -1,5 +1,6 @@
 package org.hazewright.reading;
 
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.function.Function;
@@ -49,14 +50,21 @@ final class SlabReadings {
             Function<Medium, SlabLight> solve) {
         Answers answers = new Answers(setUp, nm);
         SlabLight light = solve.apply(medium);
-        Shares shares = (quantity, share) -> answers.add(
-                null,
-                quantity,
-                share.applyAsDouble(light),
-                FirstOrder.u(medium, spread, m -> share.applyAsDouble(solve.apply(m))),
-                model,
-                outside == null,
-                noteFor(quantity, light, outside));
+        // all shares come from one solution, so that each neighbour of the medium is solved once
+        double[] u = FirstOrder.curve(medium, spread, m -> valuesOf(solve.apply(m)));
+        int[] next = {0};
+        Shares shares = (quantity, share) -> {
+            Double here = u == null || !Double.isFinite(u[next[0]]) ? null : (Double) u[next[0]];
+            next[0]++;
+            answers.add(
+                    null,
+                    quantity,
+                    share.applyAsDouble(light),
+                    here,
+                    model,
+                    outside == null,
+                    noteFor(quantity, light, outside));
+        };
         every(shares);
         return answers.all();
     }
@@ -112,6 +120,13 @@ final class SlabReadings {
         shares.add(Quantity.DIFFUSE_TRANSMITTANCE, SlabLight::diffuseTransmittance);
         shares.add(Quantity.UNSCATTERED_TRANSMITTANCE, SlabLight::unscatteredTransmittance);
         shares.add(Quantity.TOTAL_TRANSMITTANCE, SlabLight::totalTransmittance);
+    }
+
+    /** The shares in the order of {@link #every}. */
+    private static double[] valuesOf(SlabLight light) {
+        List<Double> values = new ArrayList<>();
+        every((quantity, share) -> values.add(share.applyAsDouble(light)));
+        return values.stream().mapToDouble(v -> v).toArray();
     }
 
     private static String noteFor(Quantity quantity, SlabLight light, String outside) {

@@ -10,7 +10,6 @@ import org.apache.poi.ss.usermodel.Row;
 import org.apache.poi.xssf.usermodel.XSSFSheet;
 import org.apache.poi.xssf.usermodel.XSSFWorkbook;
 import org.hazewright.files.CsvTable;
-import org.hazewright.optics.Figures;
 
 /** The first visible page of somebody's workbook as plain cells of text: for tables of targets, measured values and dilutions. */
 public final class FirstPage {
@@ -23,7 +22,8 @@ public final class FirstPage {
     public static List<List<String>> cells(Path file) {
         try (XSSFWorkbook workbook = SafeWorkbook.open(file, SafeWorkbook.SHEET)) {
             for (int k = 0; k < workbook.getNumberOfSheets(); k++)
-                if (!workbook.isSheetHidden(k) && !workbook.isSheetVeryHidden(k)) return cells(file, workbook.getSheetAt(k));
+                if (!workbook.isSheetHidden(k) && !workbook.isSheetVeryHidden(k))
+                    return cells(file, workbook.getSheetAt(k));
             throw SafeWorkbook.refusal(file, "The workbook has no visible page.");
         } catch (IOException e) {
             throw SafeWorkbook.refusal(file, "The workbook could not be closed again (" + e.getMessage() + ").");
@@ -40,7 +40,8 @@ public final class FirstPage {
     private static List<List<String>> cells(Path file, XSSFSheet sheet) {
         List<List<String>> rows = new ArrayList<>();
         if (sheet.getLastRowNum() >= MOST_ROWS)
-            throw SafeWorkbook.refusal(file, "Page \"" + sheet.getSheetName() + "\" has more than " + MOST_ROWS + " rows.");
+            throw SafeWorkbook.refusal(
+                    file, "Page \"" + sheet.getSheetName() + "\" has more than " + MOST_ROWS + " rows.");
         int width = 0;
         for (Row row : sheet) width = Math.max(width, row.getLastCellNum());
         width = Math.min(width, MOST_COLUMNS);
@@ -63,7 +64,8 @@ public final class FirstPage {
         CellType type = cell.getCellType() == CellType.FORMULA ? cell.getCachedFormulaResultType() : cell.getCellType();
         return switch (type) {
             case NUMERIC -> Double.toString(cell.getNumericCellValue());
-            case STRING -> cell.getStringCellValue().replaceAll("[\\p{Cntrl}]", " ").strip();
+            case STRING ->
+                cell.getStringCellValue().replaceAll("[\\p{Cntrl}]", " ").strip();
             case BOOLEAN -> Boolean.toString(cell.getBooleanCellValue());
             case ERROR -> "#error";
             default -> "";

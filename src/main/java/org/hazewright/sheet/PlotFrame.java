@@ -24,15 +24,38 @@ record PlotFrame(Rectangle2D area, double x0, double x1, double y0, double y1) {
 
     /** Grid, numbers and the title; {@code xNumbers} when this is the lowest of several on one axis. */
     void axes(Graphics2D g, String title, boolean xNumbers, String xUnit) {
+        yGrid(g);
+        xTicks(g, xNumbers, xUnit);
+        outline(g, title);
+    }
+
+    /** Without the grid and numbers of y, for whoever draws his own. */
+    void xAxis(Graphics2D g, String title, String xUnit) {
+        xTicks(g, true, xUnit);
+        outline(g, title);
+    }
+
+    /** Without the numbers of x. */
+    void yAxis(Graphics2D g, String title) {
+        yGrid(g);
+        outline(g, title);
+    }
+
+    private void yGrid(Graphics2D g) {
         g.setFont(g.getFont().deriveFont(Font.PLAIN, 11f));
         double step = roundStep((y1 - y0) / 6);
-        int decimals = Math.max(0, java.math.BigDecimal.valueOf(step).stripTrailingZeros().scale());
+        int decimals = Math.max(
+                0, java.math.BigDecimal.valueOf(step).stripTrailingZeros().scale());
         for (double y = Math.ceil(y0 / step - 1e-9) * step; y <= y1 * (1 + 1e-9); y += step) {
             g.setColor(Canvas.colour(Palette.RULE));
             g.draw(new Line2D.Double(area.getX(), py(y), area.getMaxX(), py(y)));
             g.setColor(Canvas.colour(Palette.QUIET));
             right(g, Figures.fixed(y, decimals), area.getX() - 6, py(y) + 4);
         }
+    }
+
+    private void xTicks(Graphics2D g, boolean xNumbers, String xUnit) {
+        g.setFont(g.getFont().deriveFont(Font.PLAIN, 11f));
         double xStep = roundStep((x1 - x0) / 7);
         for (double x = Math.ceil(x0 / xStep - 1e-9) * xStep; x <= x1 * (1 + 1e-9); x += xStep) {
             g.setColor(Canvas.colour(Palette.RULE));
@@ -42,6 +65,9 @@ record PlotFrame(Rectangle2D area, double x0, double x1, double y0, double y1) {
             centre(g, Figures.plain(x), px(x), area.getMaxY() + 18);
         }
         if (xNumbers) right(g, xUnit, area.getMaxX(), area.getMaxY() + 34);
+    }
+
+    private void outline(Graphics2D g, String title) {
         g.setColor(Canvas.colour(Palette.TRACK));
         g.draw(area);
         g.setColor(Canvas.colour(Palette.INK));

@@ -1,10 +1,8 @@
 package org.hazewright.sheet;
 
 import java.util.ArrayList;
-import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
-import java.util.Map;
 import java.util.Set;
 import org.hazewright.bench.Answer;
 import org.hazewright.bench.Answer.Predicted;

@@ -4,6 +4,8 @@ import java.time.LocalDate;
 import java.util.HashSet;
 import java.util.List;
 import java.util.Set;
+import java.util.concurrent.CompletableFuture;
+import java.util.function.Supplier;
 import org.apache.poi.xssf.usermodel.XSSFFormulaEvaluator;
 import org.apache.poi.xssf.usermodel.XSSFSheet;
 import org.apache.poi.xssf.usermodel.XSSFWorkbook;
@@ -14,6 +16,7 @@ import org.hazewright.bench.Steps;
 import org.hazewright.bench.Warning;
 import org.hazewright.bench.Warnings;
 import org.hazewright.bench.Weighing;
+import org.hazewright.brief.Tissue;
 import org.hazewright.mixture.Recipe;
 
 /**
@@ -33,6 +36,12 @@ public final class RecipeSheet {
      * @param warnings what to know before starting, the gravest first, of {@code Warnings}; may be empty
      */
     public static byte[] write(Answer answer, List<Step> steps, List<Warning> warnings) {
+        return write(answer, steps, warnings, null);
+    }
+
+    /** {@code readings} is asked when all other pages are written; null for a workbook without that page. */
+    private static byte[] write(
+            Answer answer, List<Step> steps, List<Warning> warnings, Supplier<InstrumentReadings> readings) {
         List<Sensitivity> bands = Sensitivity.of(
                 answer.recipe(), answer.brief().balance(), answer.brief().points());
         List<Weighing> weighings = bands.stream().map(Sensitivity::weighing).toList();
@@ -46,6 +55,7 @@ public final class RecipeSheet {
             Page stepList = page(workbook, "Steps", looks);
             Page sources = page(workbook, "Sources", looks);
             Page spectra = page(workbook, "Spectra", looks);
+            Page instruments = readings == null ? null : page(workbook, "Readings", looks);
             Page record = page(workbook, "Format", looks);
 
             FillInPlan plan = FillInPlan.of(weighings, answer.predicted().size());
@@ -69,6 +79,7 @@ public final class RecipeSheet {
             StepsPage.write(stepList, answer, steps, weighings);
             SourcesPage.write(sources, answer);
             RecordPage.write(record, answer, bands);
+            if (readings != null) new ReadingsPage(instruments, answer, readings.get()).write();
             workbook.setSheetHidden(workbook.getSheetIndex(record.sheet), true);
             for (Page formulasOnly : List.of(coefficients, record)) formulasOnly.sheet.enableLocking();
 
@@ -86,6 +97,21 @@ public final class RecipeSheet {
                 answer.recipe(), answer.brief().balance(), answer.brief().points());
         return write(
                 answer, Steps.of(answer.recipe(), answer.brief().balance(), bands), Warnings.of(answer.recipe(), day));
+    }
+
+    /**
+     * The same with a page of what instruments will show on the recipe; {@code tables} gives the haemoglobin spectra for oximeters.
+     */
+    public static byte[] write(Answer answer, LocalDate day, Supplier<Tissue.Spectra> tables) {
+        CompletableFuture<InstrumentReadings> readings =
+                CompletableFuture.supplyAsync(() -> InstrumentReadings.of(answer, tables));
+        List<Sensitivity> bands = Sensitivity.of(
+                answer.recipe(), answer.brief().balance(), answer.brief().points());
+        return write(
+                answer,
+                Steps.of(answer.recipe(), answer.brief().balance(), bands),
+                Warnings.of(answer.recipe(), day),
+                readings::join);
     }
 
     /**

@@ -1,9 +1,9 @@
 package org.hazewright.sheet;
 
 import java.util.ArrayList;
-import java.util.List;
 import java.util.Collection;
 import java.util.LinkedHashMap;
+import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.stream.Collectors;
@@ -32,13 +32,16 @@ final class Sentences {
 
     /** Whether it meets the brief, and if not how near it comes. */
     static String verdict(Answer answer) {
+        String stopped =
+                answer.search().proven() ? "" : " The search was stopped: this is the best so far, not proven.";
         if (answer.meets())
             return "As planned, every target lies inside its tolerance; the worst miss is "
-                    + Figures.fixed(answer.worstMiss(), 2) + " half-widths.";
+                    + Figures.fixed(answer.worstMiss(), 2) + " half-widths." + stopped;
         long outside = answer.predicted().stream().filter(p -> !p.inside()).count();
         String how = outside + " of " + answer.predicted().size() + " targets " + (outside == 1 ? "lies" : "lie")
                 + " outside; the worst miss is " + Figures.fixed(answer.worstMiss(), 2) + " half-widths";
         double best = answer.bestPossibleWorstMiss();
+        if (!answer.search().proven()) return "Not every tolerance is met: " + how + "." + stopped;
         if (best > 1)
             return "No recipe from this shelf meets every tolerance; this is the closest. " + how
                     + "; no recipe can come below " + Figures.fixed(best, 2) + ".";

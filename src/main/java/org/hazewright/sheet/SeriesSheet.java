@@ -23,6 +23,9 @@ import org.hazewright.shelf.Ingredient;
  * phantom lands; the order of work; the sources. Sums are live formulas. Equal input gives equal bytes.
  */
 public final class SeriesSheet {
+    /** Most columns of the weighing table that stand on an upright page. */
+    private static final int UPRIGHT = 4;
+
     private final SeriesPlan plan;
     private final LocalDate day;
     private final Recipe fullest;
@@ -95,10 +98,10 @@ public final class SeriesSheet {
         int together = columns.size() + 1;
         int done = together + 1;
         int[] widths = new int[done + 2];
-        java.util.Arrays.fill(widths, 112);
+        java.util.Arrays.fill(widths, columns.size() > UPRIGHT ? 112 : 100);
         widths[0] = 84;
         widths[done] = 52;
-        widths[done + 1] = 160;
+        widths[done + 1] = columns.size() > UPRIGHT ? 160 : 110;
         page.columns(widths);
         page.text(0, 0, "Weigh", Face.TITLE);
         page.height(0, 24);
@@ -106,13 +109,15 @@ public final class SeriesSheet {
                 1,
                 0,
                 done + 1,
-                plan.series().title() + " · grams, each row one phantom, from left to right; nothing where there is a dash",
+                plan.series().title()
+                        + " · grams, each row one phantom, from left to right; nothing where there is a dash",
                 Face.QUIET);
         page.text(2, 0, "phantom", Face.HEAD);
-        for (int c = 0; c < columns.size(); c++) page.text(2, c + 1, columns.get(c), Face.HEAD.right().wrap());
+        for (int c = 0; c < columns.size(); c++)
+            page.text(2, c + 1, columns.get(c), Face.HEAD.right().wrap());
         page.text(2, together, "together", Face.HEAD.right());
         page.text(2, done, "done", Face.HEAD.centred());
-        page.text(2, done + 1, "weighed otherwise, and remarks", Face.HEAD.indent());
+        page.text(2, done + 1, "remarks", Face.HEAD.indent());
         page.height(2, 15);
         Face grams = SetPage.LINE.decimals(plan.balance().decimals()).points(11).right();
         int row = 3;
@@ -129,12 +134,11 @@ public final class SeriesSheet {
             page.height(row++, 17);
         }
         page.text(row, 0, "all", SetPage.LINE.ink(Palette.QUIET));
-        for (int c = 1; c <= together; c++)
-            page.formula(row, c, sum(3, c, row - 1, c), grams.ink(Palette.QUIET));
+        for (int c = 1; c <= together; c++) page.formula(row, c, sum(3, c, row - 1, c), grams.ink(Palette.QUIET));
         page.height(row, 17);
         page.sheet.createFreezePane(1, 3);
         page.sheet.getWorkbook().setPrintArea(page.sheet.getWorkbook().getSheetIndex(page.sheet), 0, done + 1, 0, row);
-        PrintSetup.pages(page.sheet, true, 2);
+        PrintSetup.pages(page.sheet, columns.size() > UPRIGHT, 2);
     }
 
     private static String sum(int row1, int column1, int row2, int column2) {
@@ -174,7 +178,7 @@ public final class SeriesSheet {
                 page.number(row, 6, x.uPerCm(), figure.format("± " + format).ink(Palette.QUIET));
                 page.number(row, 7, x.miss(), figure.format("+0.00;−0.00;0.00"));
                 page.rich(row, 8, LandingGauge.drawn(x.miss(), 8, page.looks), SetPage.LINE.centred());
-                String lands = first ? Figures.fixed(100 * p.outlook().chance(), 0) + " times in 100" : "";
+                String lands = first ? often(p.outlook().chance()) : "";
                 page.text(
                         row,
                         9,
@@ -189,6 +193,12 @@ public final class SeriesSheet {
         page.sheet.createFreezePane(1, 3);
         page.sheet.getWorkbook().setPrintArea(page.sheet.getWorkbook().getSheetIndex(page.sheet), 0, 9, 0, row - 1);
         PrintSetup.pages(page.sheet, false, 2);
+    }
+
+    /** Never 100 for what is not certain. */
+    private static String often(double chance) {
+        long times = Math.round(100 * chance);
+        return (times == 100 && chance < 1 ? "more than 99" : Long.toString(times)) + " in 100";
     }
 
     private void steps(Page page) {

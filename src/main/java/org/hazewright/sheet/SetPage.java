@@ -35,12 +35,7 @@ final class SetPage {
     void heading(String title, String summary, String verdict, boolean meets) {
         page.sentence(row++, 0, last, title, Face.TITLE);
         page.sentence(row++, 0, last, summary, Face.QUIET);
-        page.sentence(
-                row++,
-                0,
-                last,
-                verdict,
-                Face.TEXT.points(11).bolder().ink(meets ? Palette.TEAL : Palette.BRICK));
+        page.sentence(row++, 0, last, verdict, Face.TEXT.points(11).bolder().ink(meets ? Palette.TEAL : Palette.BRICK));
     }
 
     void section(String title) {
@@ -51,7 +46,11 @@ final class SetPage {
 
     private void heads(String... heads) {
         for (int c = 0; c < heads.length; c++)
-            page.text(row, c, heads[c], c == 2 || c == 4 ? Face.HEAD.right() : c == 3 || c == 5 ? Face.HEAD.indent() : Face.HEAD);
+            page.text(
+                    row,
+                    c,
+                    heads[c],
+                    c == 2 || c == 4 ? Face.HEAD.right() : c == 3 || c == 5 ? Face.HEAD.indent() : Face.HEAD);
         page.height(row++, 12.5);
     }
 
@@ -86,7 +85,11 @@ final class SetPage {
         double sum = 0;
         for (Item i : recipe.items()) {
             page.number(row, 0, ++n, LINE.left());
-            page.text(row, 1, i.stock().map(s -> "stock " + s).orElse(i.ingredient().name()), LINE.wrap());
+            page.text(
+                    row,
+                    1,
+                    i.stock().map(s -> "stock " + s).orElse(i.ingredient().name()),
+                    LINE.wrap());
             page.number(row, 2, i.massG(), grams);
             page.text(row, 3, ml(i.ingredient(), i.massG(), i.stock().isPresent()), QUIET.indent());
             page.height(row, 16);
@@ -114,9 +117,7 @@ final class SetPage {
 
     /** Of a liquid bottle, the mL too. */
     private static String ml(Ingredient i, double massG, boolean ofStock) {
-        return ofStock || i.form() != Form.LIQUID
-                ? ""
-                : Figures.significant(massG / i.densityGPerMl(), 4) + " mL";
+        return ofStock || i.form() != Form.LIQUID ? "" : Figures.significant(massG / i.densityGPerMl(), 4) + " mL";
     }
 
     void mind(List<String> notes, List<Warning> warnings, Collection<Ingredient> all) {

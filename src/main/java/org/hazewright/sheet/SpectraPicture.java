@@ -71,10 +71,7 @@ public final class SpectraPicture {
         }
         PlotFrame frame = new PlotFrame(area, nm[0], nm[n - 1], 0, top > 0 ? 1.08 * top : 1);
         frame.axes(
-                g,
-                (scattering ? "reduced scattering µs' " : "absorption µa ") + unit,
-                scattering,
-                "wavelength in nm");
+                g, (scattering ? "reduced scattering µs' " : "absorption µa ") + unit, scattering, "wavelength in nm");
         shares(g, mixture, at, nm, scattering, unitPerCm, frame);
         frame.band(g, nm, low, high, Canvas.faint(Palette.TEAL, 70));
         frame.line(g, nm, value, Palette.TEAL, 2.2f);
@@ -110,7 +107,11 @@ public final class SpectraPicture {
         shares.sort(Comparator.comparingDouble(Share::mean).reversed());
         double[] below = new double[nm.length];
         Color[] grounds = {
-            Canvas.colour("EAE2D2"), Canvas.colour("DCE7E4"), Canvas.colour("F1E4C8"), Canvas.colour("E3DDE8"), Canvas.colour("E8D9D2")
+            Canvas.colour("EAE2D2"),
+            Canvas.colour("DCE7E4"),
+            Canvas.colour("F1E4C8"),
+            Canvas.colour("E3DDE8"),
+            Canvas.colour("E8D9D2")
         };
         for (int s = 0; s < shares.size(); s++) {
             Share share = shares.get(s);
@@ -133,7 +134,8 @@ public final class SpectraPicture {
         double room = frame.py(below[widest]) - frame.py(above[widest]);
         if (room < 11) return;
         double half = g.getFontMetrics().stringWidth(id) / 2.0;
-        double x = Math.max(frame.area().getX() + half + 4, Math.min(frame.area().getMaxX() - half - 4, frame.px(nm[widest])));
+        double x = Math.max(
+                frame.area().getX() + half + 4, Math.min(frame.area().getMaxX() - half - 4, frame.px(nm[widest])));
         g.setColor(Canvas.colour(Palette.INK));
         PlotFrame.centre(g, id, x, frame.py((below[widest] + above[widest]) / 2) + 4);
     }

@@ -188,7 +188,7 @@ final class SpectrumChart {
         return unit;
     }
 
-    private static void type(XDDFTextBody body, double points, boolean bold, String colour) {
+    static void type(XDDFTextBody body, double points, boolean bold, String colour) {
         body.getParagraphs()
                 .forEach(p -> p.getTextRuns().forEach(r -> {
                     r.setLanguage(Locale.ENGLISH); // else that of whoever runs the program, and bytes would differ
@@ -198,13 +198,13 @@ final class SpectrumChart {
                 }));
     }
 
-    private static XDDFLineProperties line(String colour, double widthPt) {
+    static XDDFLineProperties line(String colour, double widthPt) {
         XDDFLineProperties line = new XDDFLineProperties(solid(colour));
         line.setWidth(widthPt);
         return line;
     }
 
-    private static XDDFSolidFillProperties solid(String colour) {
+    static XDDFSolidFillProperties solid(String colour) {
         return new XDDFSolidFillProperties(XDDFColor.from(Palette.rgb(colour)));
     }
 }

@@ -70,7 +70,8 @@ public final class TitrationSheet {
                 plan.meets());
         mix.stocks(plan.stocks(), plan.leftovers());
         mix.mixture("Bath: the phantom " + plan.steps().get(0).name(), plan.start());
-        mix.mixture("Titrant, of which " + Grams.shown(plan.titrantUsedG(), plan.balance()) + " are used", plan.titrant());
+        mix.mixture(
+                "Titrant, of which " + Grams.shown(plan.titrantUsedG(), plan.balance()) + " are used", plan.titrant());
         mix.atHand(plan.buyG());
         Set<Ingredient> all = new LinkedHashSet<>();
         all.add(plan.base());
@@ -96,9 +97,18 @@ public final class TitrationSheet {
                         + " · each row: take out, give back, add, stir, measure. Coefficients in 1/cm: wanted, predicted, ± u",
                 Face.QUIET);
         String[] heads = {
-            "phantom", "take out mL", "water back g", "add titrant g", "really added g", "in vessel g", "mL", "worst miss", "done"
+            "phantom",
+            "take out mL",
+            "water back g",
+            "add titrant g",
+            "really added g",
+            "in vessel g",
+            "mL",
+            "worst miss",
+            "done"
         };
-        for (int c = 0; c < heads.length; c++) page.text(2, c, heads[c], c == 0 ? Face.HEAD : Face.HEAD.right().wrap());
+        for (int c = 0; c < heads.length; c++)
+            page.text(2, c, heads[c], c == 0 ? Face.HEAD : Face.HEAD.right().wrap());
         for (int j = 0; j < points.size(); j++) {
             String what = points.get(j).point().quantity().sign() + " "
                     + Figures.plain(points.get(j).point().wavelengthNm());
@@ -121,7 +131,9 @@ public final class TitrationSheet {
                     row,
                     7,
                     Figures.fixed(s.worstMiss(), 2) + (s.meets() ? "" : " OUTSIDE"),
-                    s.meets() ? SetPage.LINE.right() : SetPage.LINE.bolder().ink(Palette.BRICK).right());
+                    s.meets()
+                            ? SetPage.LINE.right()
+                            : SetPage.LINE.bolder().ink(Palette.BRICK).right());
             page.cell(row, 8, SetPage.LINE.fillIn());
             for (int j = 0; j < points.size() && j < s.predicted().size(); j++) {
                 Predicted p = s.predicted().get(j);
@@ -129,7 +141,11 @@ public final class TitrationSheet {
                 Face figure = SetPage.LINE.format(format).right();
                 page.number(row, LAST + 3 * j, p.point().wantedPerCm(), figure.ink(Palette.AMBER_TYPE));
                 page.number(row, LAST + 3 * j + 1, p.perCm(), figure.bolder().ink(Palette.TEAL));
-                page.number(row, LAST + 3 * j + 2, p.uPerCm(), figure.format("± " + format).ink(Palette.QUIET));
+                page.number(
+                        row,
+                        LAST + 3 * j + 2,
+                        p.uPerCm(),
+                        figure.format("± " + format).ink(Palette.QUIET));
             }
             page.height(row++, 18);
         }
@@ -167,10 +183,12 @@ public final class TitrationSheet {
             texts.add("Stir, and take out " + Grams.plain(any.takenOutMl())
                     + " mL; keep it closed and labelled with the name of the phantom.");
         if (any.waterBackG() > 0)
-            texts.add("Give back what evaporated: the grams of the column water back. If the vessel can be weighed, give back what"
-                    + " it really lost.");
-        texts.add("Shake the titrant, weigh its bottle, pour or pipette the grams of the column add titrant into the vessel while it"
-                + " is stirred, weigh the bottle again, and write what was really added into the box.");
+            texts.add(
+                    "Give back what evaporated: the grams of the column water back. If the vessel can be weighed, give back what"
+                            + " it really lost.");
+        texts.add(
+                "Shake the titrant, weigh its bottle, pour or pipette the grams of the column add titrant into the vessel while it"
+                        + " is stirred, weigh the bottle again, and write what was really added into the box.");
         texts.add("Stir until it is even: at least five minutes, without drawing in air (common practice).");
         return texts.stream()
                 .map(t -> new Step(

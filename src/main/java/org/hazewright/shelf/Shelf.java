@@ -5,7 +5,9 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.Set;
 import java.util.TreeMap;
+import java.util.TreeSet;
 import org.hazewright.optics.Refusal;
 
 /** The ingredients that can be used, by id, in the order of their ids; and the materials they are made of. */
@@ -13,10 +15,21 @@ public final class Shelf {
     private final Map<String, Ingredient> ingredients = new TreeMap<>();
     private final Map<String, Material> materials = new TreeMap<>();
     private final String place;
+    private final List<String> others;
 
     /** {@code place} is where the shelf came from, for messages. */
     public Shelf(String place, Collection<Ingredient> ingredients, Collection<Material> materials) {
+        this(place, ingredients, materials, List.of());
+    }
+
+    /** A part of a shelf: {@code others} are ids that it also holds and that were not asked for, named when an id is mistyped. */
+    public Shelf(
+            String place,
+            Collection<Ingredient> ingredients,
+            Collection<Material> materials,
+            Collection<String> others) {
         this.place = place;
+        this.others = List.copyOf(others);
         for (Ingredient i : ingredients)
             if (this.ingredients.put(i.id(), i) != null)
                 throw new Refusal("Two ingredients on the shelf " + place + " have the id \"" + i.id() + "\".");
@@ -49,7 +62,11 @@ public final class Shelf {
     /** The ingredient of that id, or a refusal that suggests the nearest one. */
     public Ingredient require(String id) {
         Ingredient found = ingredients.get(id);
-        if (found == null) throw new Refusal(unknown("ingredient", id, ingredients.keySet()));
+        if (found == null) {
+            Set<String> known = new TreeSet<>(ingredients.keySet());
+            known.addAll(others);
+            throw new Refusal(unknown("ingredient", id, known));
+        }
         return found;
     }
 

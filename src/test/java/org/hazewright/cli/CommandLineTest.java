@@ -167,6 +167,14 @@ class CommandLineTest {
     }
 
     @Test
+    void theSameResultAgainLeavesNoPrevious() throws IOException {
+        design(BATH);
+        design(BATH);
+        assertFalse(Files.exists(folder.resolve("out/bath.recipe.toml.previous")));
+        assertFalse(Files.exists(folder.resolve("out/bath.xlsx.previous")));
+    }
+
+    @Test
     void oneSphereToSeventeenDigits() throws IOException {
         Ran ran = run("particles", "--size-parameter", "10", "--index", "1.5", "--json");
         Map<String, Object> q = JSON.std.mapFrom(ran.out);

@@ -40,8 +40,18 @@ class DesignTest {
 
     private static Brief brief(List<String> bases, SearchLimits limits, Target... targets) {
         return new Brief(
-                "test", "Test", bases, 1000, 0, 22, List.of(targets), List.of(), limits, new Balance(0.0001, 0.0001, 0.001, 2000),
-                Optional.empty(), Optional.empty());
+                "test",
+                "Test",
+                bases,
+                1000,
+                0,
+                22,
+                List.of(targets),
+                List.of(),
+                limits,
+                new Balance(0.0001, 0.0001, 0.001, 2000),
+                Optional.empty(),
+                Optional.empty());
     }
 
     private static SearchLimits use(int absorbers, int modifiers, String... ids) {
@@ -87,7 +97,8 @@ class DesignTest {
         Option found = new Design(brief, SHELF).find(true).best();
         List<Ingredient> members = new ArrayList<>(found.concentrationGPerMl().keySet());
         assertEquals(2, members.size());
-        double[] c = members.stream().mapToDouble(found.concentrationGPerMl()::get).toArray();
+        double[] c =
+                members.stream().mapToDouble(found.concentrationGPerMl()::get).toArray();
         double[] scale = c.clone();
         // Nelder & Mead, Comput. J. 7, 308 (1965), as Commons Math has it, from a start 20 % off
         double[] best = new SimplexOptimizer(1e-13, 1e-13)
@@ -96,13 +107,14 @@ class DesignTest {
                         GoalType.MINIMIZE,
                         new InitialGuess(new double[] {1.2, 0.8}),
                         new NelderMeadSimplex(2, 0.1),
-                        new ObjectiveFunction(
-                                x -> score(brief, "water", members, new double[] {x[0] * scale[0], x[1] * scale[1]})))
+                        new ObjectiveFunction(x ->
+                                score(brief, "water", members, new double[] {x[0] * scale[0], x[1] * scale[1]})))
                 .getPoint();
         double theirs = score(brief, "water", members, new double[] {best[0] * scale[0], best[1] * scale[1]});
         double ours = score(brief, "water", members, c);
         assertEquals(found.score().bias() + found.score().ingredient(), ours, 1e-6 * ours, "the score is what it says");
-        // crowding is strong at 22 /cm; D c² holds κ at the answer while the independent score lets it move, hence not less than 1e-4
+        // crowding is strong at 22 /cm; D c² holds κ at the answer while the independent score lets it move, hence not
+        // less than 1e-4
         assertEquals(theirs, ours, 1e-4 * theirs);
     }
 
@@ -117,13 +129,16 @@ class DesignTest {
         Option found = new Design(brief, SHELF).find(true).best();
         assertTrue(found.meets());
         List<Ingredient> members = new ArrayList<>(found.concentrationGPerMl().keySet());
-        double[] c = members.stream().mapToDouble(found.concentrationGPerMl()::get).toArray();
+        double[] c =
+                members.stream().mapToDouble(found.concentrationGPerMl()::get).toArray();
         double here = score(brief, "water", members, c);
         for (int k = 0; k < c.length; k++)
             for (double factor : new double[] {0.98, 1.02}) {
                 double[] moved = c.clone();
                 moved[k] *= factor;
-                assertTrue(score(brief, "water", members, moved) > here, members.get(k).id() + " times " + factor);
+                assertTrue(
+                        score(brief, "water", members, moved) > here,
+                        members.get(k).id() + " times " + factor);
             }
     }
 
@@ -135,7 +150,9 @@ class DesignTest {
                 target(760, 0.10, 8, 0.2),
                 target(970, 0.33, 6, 0.2));
         Option found = new Design(brief, SHELF).find(true).best();
-        assertTrue(found.ids().contains("sucrose"), "water absorbs 0.48 /cm at 970 nm and must be displaced: " + found.ids());
+        assertTrue(
+                found.ids().contains("sucrose"),
+                "water absorbs 0.48 /cm at 970 nm and must be displaced: " + found.ids());
         assertTrue(found.meets(), "worst miss " + found.worstMiss());
         double n = found.mixture().hostIndex(760);
         assertTrue(n > 1.35, "the host index is that of the sugar solution, " + n);
@@ -143,13 +160,13 @@ class DesignTest {
 
     @Test
     void aBaseAboveTheTargetIsNamed() {
-        Brief brief = brief(
-                List.of("water"), use(1, 0, "ink-demo", "lipid-emulsion-20"), target(970, 0.30, 6, 0.05));
+        Brief brief = brief(List.of("water"), use(1, 0, "ink-demo", "lipid-emulsion-20"), target(970, 0.30, 6, 0.05));
         Finding finding = new Design(brief, SHELF).find(true);
         assertFalse(finding.best().meets());
         assertTrue(finding.bestPossibleWorstMiss() > 1);
         assertTrue(
-                finding.limits().stream().anyMatch(s -> s.contains("The base alone already absorbs 0.480 /cm at 970 nm")),
+                finding.limits().stream()
+                        .anyMatch(s -> s.contains("The base alone already absorbs 0.480 /cm at 970 nm")),
                 finding.limits().toString());
     }
 
@@ -176,7 +193,9 @@ class DesignTest {
                 .orElseThrow(() -> new AssertionError(finding.limits()));
         double promised = Double.parseDouble(promise.replaceAll(".* to ([0-9.]+) half-widths.*", "$1"));
         SearchLimits two = use(2, 0, "ink-demo", "nir-dye-demo-850", "lipid-emulsion-20");
-        double kept = new Design(brief(List.of("water"), two, targets), SHELF).find(true).bestPossibleWorstMiss();
+        double kept = new Design(brief(List.of("water"), two, targets), SHELF)
+                .find(true)
+                .bestPossibleWorstMiss();
         assertEquals(promised, kept, 0.01 + 0.03 * kept, promise);
     }
 
@@ -186,6 +205,8 @@ class DesignTest {
         assertThrows(Refusal.class, () -> new Design(silicone, SHELF).find(true));
         Brief all = brief(List.of("water"), SearchLimits.USUAL, target(900, 0.1, 8, 0.1));
         Finding finding = new Design(all, SHELF).find(true);
-        assertTrue(finding.leftOut().get("ink-published-bottle").contains("842.5"), finding.leftOut().toString());
+        assertTrue(
+                finding.leftOut().get("ink-published-bottle").contains("842.5"),
+                finding.leftOut().toString());
     }
 }

@@ -43,11 +43,13 @@ public class SearchBenchmark {
 
     private SetProblem thirty;
     private SetProblem twelve;
+    private SetProblem sixty;
 
     @Setup
     public void lay() {
         thirty = shelf(30, wavelengths, 4, brief);
         twelve = shelf(12, 5, 4, brief);
+        sixty = shelf(60, wavelengths, 6, brief);
     }
 
     @Benchmark
@@ -58,6 +60,14 @@ public class SearchBenchmark {
     @Benchmark
     public SetResult twelveAtFiveWavelengths() {
         return new SetSearch(twelve).run(10);
+    }
+
+    /** 56 049 058 sets; mostly cut. */
+    @Benchmark
+    @Warmup(iterations = 1, time = 1)
+    @Measurement(iterations = 2, time = 1)
+    public SetResult sixtyUpToSix() {
+        return new SetSearch(sixty).run(10);
     }
 
     /** A made-up shelf and brief. */

@@ -3,11 +3,14 @@ package org.hazewright.desk;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Optional;
 import javafx.application.Platform;
 import javafx.scene.image.WritableImage;
 import org.hazewright.desk.look.Palette;
 import org.hazewright.desk.model.AtBalance;
+import org.hazewright.desk.model.MadeBatch;
 
 /** Makes pictures of every view at two sizes in both themes: see DEVELOPERS.md for the command. */
 public final class Screenshots {
@@ -33,13 +36,16 @@ public final class Screenshots {
         Path memory = Files.createTempDirectory("memory");
         Window window = Stagehand.open(memory, w, h, Optional.empty(), Optional.empty());
         Stagehand.untilSettled(window);
+        Stagehand.until("readings", () -> window.desk().foreseeing().foreseenProperty().get() != null);
         for (Palette p : new Palette[] {Palette.LIGHT, Palette.DARK}) {
             Stagehand.ui(() -> window.look().paletteProperty().set(p));
             shoot(window, "desk", p, w);
         }
         Stagehand.ui(() -> window.desk().standAtBalance());
-        Stagehand.until("the balance", () -> window.desk().weighingProperty().get().isPresent());
-        AtBalance at = Stagehand.onUi(() -> window.desk().weighingProperty().get().orElseThrow());
+        Stagehand.until(
+                "the balance", () -> window.desk().weighingProperty().get().isPresent());
+        AtBalance at =
+                Stagehand.onUi(() -> window.desk().weighingProperty().get().orElseThrow());
         balance(window, w, at, "task");
         Stagehand.ui(() -> {
             while (!at.nowProperty().get().line().name().startsWith("Lipid")) {
@@ -48,8 +54,35 @@ public final class Screenshots {
             }
         });
         Stagehand.ui(() -> window.balance().field().setText("15.502 g"));
-        Stagehand.until("an outlook", () -> at.outlookProperty().get() != null && at.bandProperty().get().isPresent());
+        Stagehand.until(
+                "an outlook",
+                () -> at.outlookProperty().get() != null
+                        && at.bandProperty().get().isPresent());
         balance(window, w, at, "weigh");
+        Stagehand.ui(() -> {
+            while (!at.nowProperty().get().over()) {
+                AtBalance.Line line = at.nowProperty().get().line();
+                at.enter(line.weighs() ? Double.toString(at.loadWantedG()) + " g" : "");
+            }
+        });
+        balance(window, w, at, "over");
+        Stagehand.ui(() -> window.desk().finishWeighing());
+        Stagehand.until("the batch", () -> window.desk().madeProperty().get().isPresent());
+        MadeBatch made = Stagehand.onUi(() -> window.desk().madeProperty().get().orElseThrow());
+        Stagehand.until("a look", () -> made.seenProperty().get() != null);
+        Stagehand.ui(() -> {
+            List<MadeBatch.Entry> entries = new ArrayList<>();
+            made.points().forEach(p -> entries.add(new MadeBatch.Entry(
+                    p.wavelengthNm(), p.quantity(), Double.toString(p.wantedPerCm() * 1.09), "2 %")));
+            made.measured("time-resolved fit", "bench instrument", entries);
+        });
+        Stagehand.until("a verdict", () -> made.seenProperty().get().verdict().isPresent());
+        Stagehand.ui(made::correct);
+        Stagehand.until("a correction", () -> made.correctionProperty().get().isPresent());
+        for (Palette p : new Palette[] {Palette.LIGHT, Palette.DARK}) {
+            Stagehand.ui(() -> window.look().paletteProperty().set(p));
+            shoot(window, "batch", p, w);
+        }
         Stagehand.ui(() -> window.stage().close());
     }
 

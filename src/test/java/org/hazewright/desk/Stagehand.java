@@ -70,7 +70,7 @@ final class Stagehand {
     static Window open(Path memory, double w, double h, Optional<Path> file, Optional<Chooser> chooser) {
         startToolkit();
         return onUi(() -> {
-            Desk desk = new Desk(Work.threaded(Platform::runLater), Optional.empty(), Remembered.in(memory));
+            Desk desk = new Desk(Work.threaded(Platform::runLater), Optional.empty(), Remembered.in(memory, memory.resolve("work")));
             Window window = new Window(new Stage(), desk, new Look(), chooser);
             window.stage().setWidth(w);
             window.stage().setHeight(h);
@@ -84,12 +84,15 @@ final class Stagehand {
     static void untilSettled(Window window) {
         until("a settled recipe", () -> {
             var s = window.desk().solving();
-            boolean has = s.shownProperty().get() != null || s.problemProperty().get().isPresent();
+            boolean has =
+                    s.shownProperty().get() != null || s.problemProperty().get().isPresent();
             return has
                     && !s.searchingProperty().get()
                     && !s.lookingForWaysProperty().get()
-                    && (s.curvesProperty().get() != null || s.problemProperty().get().isPresent())
-                    && (s.shownProperty().get() == null || !s.shownProperty().get().following());
+                    && (s.curvesProperty().get() != null
+                            || s.problemProperty().get().isPresent())
+                    && (s.shownProperty().get() == null
+                            || !s.shownProperty().get().following());
         });
         pulse();
     }

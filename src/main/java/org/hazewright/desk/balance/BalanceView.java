@@ -72,7 +72,9 @@ public final class BalanceView extends BorderPane {
         weighing.bandProperty().addListener((p, before, now) -> showBand());
         weighing.complaintProperty().addListener((p, before, now) -> complain());
         weighing.outlookProperty().addListener((p, before, now) -> showOutlook(now));
-        weighing.moreBaseProperty().addListener((p, before, now) -> showOutlook(weighing.outlookProperty().get()));
+        weighing.moreBaseProperty()
+                .addListener((p, before, now) ->
+                        showOutlook(weighing.outlookProperty().get()));
         addEventFilter(KeyEvent.KEY_PRESSED, e -> {
             if (e.getCode() == KeyCode.ESCAPE) {
                 leave.run();
@@ -174,7 +176,9 @@ public final class BalanceView extends BorderPane {
 
     private String overWords() {
         Outlook o = weighing.outlookProperty().get();
-        return o == null ? "" : Words.verdict(o).replace("this is the closest this shelf can come.", "see below where.");
+        return o == null
+                ? ""
+                : Words.verdict(o).replace("this is the closest this shelf can come.", "see below where.");
     }
 
     private void showWeighing(AtBalance.Line line) {
@@ -200,9 +204,11 @@ public final class BalanceView extends BorderPane {
     private void showTask(Step step) {
         sentence.setText(step.text());
         String facts = "";
-        if (step.temperatureC().isPresent()) facts += Figures.plain(step.temperatureC().getAsDouble()) + " °C";
+        if (step.temperatureC().isPresent())
+            facts += Figures.plain(step.temperatureC().getAsDouble()) + " °C";
         if (step.minutes().isPresent())
-            facts += (facts.isEmpty() ? "" : " · ") + Figures.plain(step.minutes().getAsDouble()) + " min";
+            facts += (facts.isEmpty() ? "" : " · ")
+                    + Figures.plain(step.minutes().getAsDouble()) + " min";
         tell(facts + "  " + String.join(" ", step.handling()), step);
         go.setText("Done ⏎");
         below.setText("Enter: done, go on");
@@ -217,9 +223,11 @@ public final class BalanceView extends BorderPane {
         } catch (Refusal other) {
             read = Optional.empty();
         }
-        double sofar = weighing.loads().stream().mapToDouble(Double::doubleValue).sum();
+        double sofar =
+                weighing.loads().stream().mapToDouble(Double::doubleValue).sum();
         double rest = now.line().wantedG() - sofar - weighing.loadWantedG();
-        Optional<AtBalance.Band> load = weighing.bandProperty().get()
+        Optional<AtBalance.Band> load = weighing.bandProperty()
+                .get()
                 .map(b -> new AtBalance.Band(
                         Math.max(0, b.lowG() - sofar - rest), Math.max(0, b.highG() - sofar - rest)));
         band.show(load, read, weighing.balance());
@@ -236,9 +244,14 @@ public final class BalanceView extends BorderPane {
         if (o == null) return;
         String words = o.meets()
                 ? "Chance to land inside every tolerance: " + Words.times(o.chance()) + " in 100"
-                : "✕ " + o.predicted().stream().filter(p -> !p.inside()).map(p -> Words.of(p.point()) + (p.miss() > 0 ? " lands high" : " lands low"))
-                        .collect(Collectors.joining(", ")) + ", outside its tolerance.";
-        words += weighing.moreBaseProperty().get()
+                : "✕ "
+                        + o.predicted().stream()
+                                .filter(p -> !p.inside())
+                                .map(p -> Words.of(p.point()) + (p.miss() > 0 ? " lands high" : " lands low"))
+                                .collect(Collectors.joining(", "))
+                        + ", outside its tolerance.";
+        words += weighing.moreBaseProperty()
+                .get()
                 .map(g -> " " + Words.grams(g, weighing.balance()) + " g more "
                         + Words.inSentence(weighing.plan().base()) + " would bring every target inside.")
                 .orElse("");

@@ -11,8 +11,8 @@ import javafx.scene.shape.MoveTo;
 import javafx.scene.shape.Path;
 import javafx.scene.shape.Rectangle;
 import javafx.scene.text.Text;
-import org.hazewright.desk.model.AtBalance;
 import org.hazewright.brief.Balance;
+import org.hazewright.desk.model.AtBalance;
 import org.hazewright.desk.model.Words;
 
 /** The grams allowed, as an amber bracket on a rail, and the reading as a point on it; outside, the point is a cross. */
@@ -51,7 +51,9 @@ final class BandGauge extends Pane {
         this.balance = balance;
         setAccessibleText(allowed.map(b -> "allowed from " + Words.grams(b.lowG(), balance) + " to "
                         + Words.grams(b.highG(), balance) + " g"
-                        + read.map(r -> r < b.lowG() ? "; the reading is below" : r > b.highG() ? "; the reading is above" : "; the reading is inside")
+                        + read.map(r -> r < b.lowG()
+                                        ? "; the reading is below"
+                                        : r > b.highG() ? "; the reading is above" : "; the reading is inside")
                                 .orElse(""))
                 .orElse("no band known"));
         requestLayout();

@@ -29,7 +29,8 @@ final class StepColumn extends ScrollPane {
     void show(AtBalance weighing) {
         AtBalance.Now now = weighing.nowProperty().get();
         List<Node> all = new ArrayList<>();
-        for (int k = 0; k < now.lines().size(); k++) all.add(row(weighing, now.lines().get(k), k + 1));
+        for (int k = 0; k < now.lines().size(); k++)
+            all.add(row(weighing, now.lines().get(k), k + 1));
         rows.getChildren().setAll(all);
         int at = Math.min(now.at(), all.size() - 1);
         if (at >= 0) keepInSight(at, all.size());
@@ -45,7 +46,8 @@ final class StepColumn extends ScrollPane {
     private Node row(AtBalance weighing, AtBalance.Line line, int number) {
         boolean done = line.state() == AtBalance.State.DONE;
         boolean present = line.state() == AtBalance.State.NOW;
-        Label disc = Say.label(done ? "✓" : Integer.toString(number), "number-disc", done ? "done" : present ? "now" : "later");
+        Label disc = Say.label(
+                done ? "✓" : Integer.toString(number), "number-disc", done ? "done" : present ? "now" : "later");
         Label name = Say.wrapped(line.weighs() ? line.name() : firstSentence(line.name()));
         if (present) name.getStyleClass().add("strong");
         else if (!done) name.getStyleClass().add("quiet");
@@ -54,16 +56,15 @@ final class StepColumn extends ScrollPane {
         if (!why.isEmpty()) words.getChildren().add(Say.wrapped(why, "wanted", "small"));
         HBox.setHgrow(words, Priority.ALWAYS);
         Label right = Say.label("");
-        if (done && line.weighs())
-            right = Say.label(Words.grams(line.weighedG(), weighing.balance()) + " g", "lands");
+        if (done && line.weighs()) right = Say.label(Words.grams(line.weighedG(), weighing.balance()) + " g", "lands");
         else if (present) right = Say.label("now", "quiet");
-        else if (line.weighs())
-            right = Say.label(Words.grams(line.wantedG(), weighing.balance()) + " g", "quiet");
+        else if (line.weighs()) right = Say.label(Words.grams(line.wantedG(), weighing.balance()) + " g", "quiet");
         right.setMinWidth(Region.USE_PREF_SIZE);
         HBox row = new HBox(disc, words, right);
         row.getStyleClass().add("gap-m");
         row.setAlignment(Pos.TOP_LEFT);
-        row.setAccessibleText("step " + number + ", " + (done ? "done" : present ? "now" : "later") + ": " + line.name());
+        row.setAccessibleText(
+                "step " + number + ", " + (done ? "done" : present ? "now" : "later") + ": " + line.name());
         return row;
     }
 

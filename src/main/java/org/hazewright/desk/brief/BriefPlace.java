@@ -42,6 +42,7 @@ public final class BriefPlace extends VBox {
     private final Word balance = new Word("", () -> {});
     private final TargetTable table;
     private final VBox balancePanel = new VBox();
+    private List<Object> offered = List.of();
 
     public BriefPlace(Desk desk, Runnable openShelf) {
         this.desk = desk;
@@ -52,7 +53,9 @@ public final class BriefPlace extends VBox {
         Word fromTissue = new Word("from tissue-like values…", () -> {
             boolean open = !tissue.isVisible();
             Say.show(tissue, open);
-            if (open && desk.edits().now() != null && desk.edits().now().tissue().isEmpty()) tissue.fill();
+            if (open
+                    && desk.edits().now() != null
+                    && desk.edits().now().tissue().isEmpty()) tissue.fill();
         });
         VBox all = new VBox(particulars(), table, adding(fromTissue), tissue, new ShelfList(desk, openShelf));
         all.getStyleClass().add("gap-l");
@@ -67,8 +70,14 @@ public final class BriefPlace extends VBox {
         show(desk.edits().now());
     }
 
-    private Field field(Function<Draft, String> value, Function<String, Optional<String>> take, String name, int least) {
-        Field f = new Field(() -> desk.edits().now() == null ? "" : value.apply(desk.edits().now()), take, true)
+    private Field field(
+            Function<Draft, String> value, Function<String, Optional<String>> take, String name, int least) {
+        Field f = new Field(
+                        () -> desk.edits().now() == null
+                                ? ""
+                                : value.apply(desk.edits().now()),
+                        take,
+                        true)
                 .named(name)
                 .fitted(least)
                 .onDone(() -> desk.editing().settle());
@@ -82,13 +91,20 @@ public final class BriefPlace extends VBox {
         base.getStyleClass().setAll("menu-word", "value");
         grid.addRow(0, Say.quiet("Base"), base);
 
-        Field batch = field(d -> Figures.significant(d.batchMl(), 6).replaceFirst("(\\.\\d*?)0+$", "$1").replaceFirst("\\.$", ""), desk.editing()::batchMl, "batch in mL", 2);
+        Field batch = field(
+                d -> Figures.significant(d.batchMl(), 6)
+                        .replaceFirst("(\\.\\d*?)0+$", "$1")
+                        .replaceFirst("\\.$", ""),
+                desk.editing()::batchMl,
+                "batch in mL",
+                2);
         Field overage = field(d -> percent(d.overage()), desk.editing()::overage, "extra share in per cent", 1);
         HBox amount = new HBox(batch, Say.label("mL +"), overage, Say.label("% extra"));
         amount.setAlignment(Pos.BASELINE_LEFT);
         grid.addRow(1, Say.quiet("Batch"), amount);
         VBox moulds = new VBox();
         desk.edits().nowProperty().addListener((p, before, now) -> {
+            if (before != null && now != null && before.moulds().equals(now.moulds())) return;
             moulds.getChildren().clear();
             if (now != null && !now.moulds().isEmpty())
                 moulds.getChildren().add(Say.wrapped("for " + moulds(now.moulds()), "quiet", "small"));
@@ -112,15 +128,18 @@ public final class BriefPlace extends VBox {
     }
 
     private static String percent(double share) {
-        return Figures.plain(
-                new java.math.BigDecimal(100 * share).round(new java.math.MathContext(6)).doubleValue());
+        return Figures.plain(new java.math.BigDecimal(100 * share)
+                .round(new java.math.MathContext(6))
+                .doubleValue());
     }
 
     private static String moulds(List<Mould> moulds) {
         return moulds.stream()
-                .map(m -> m.count() + (m.shape() == Mould.Shape.BOX ? " box" : " cylinder") + (m.count() > 1 ? m.shape() == Mould.Shape.BOX ? "es " : "s " : " ")
+                .map(m -> m.count() + (m.shape() == Mould.Shape.BOX ? " box" : " cylinder")
+                        + (m.count() > 1 ? m.shape() == Mould.Shape.BOX ? "es " : "s " : " ")
                         + (m.shape() == Mould.Shape.BOX
-                                ? Figures.plain(m.lengthMm()) + " × " + Figures.plain(m.widthMm()) + " × " + Figures.plain(m.heightMm())
+                                ? Figures.plain(m.lengthMm()) + " × " + Figures.plain(m.widthMm()) + " × "
+                                        + Figures.plain(m.heightMm())
                                 : "⌀ " + Figures.plain(m.lengthMm()) + " × " + Figures.plain(m.heightMm()))
                         + " mm")
                 .collect(Collectors.joining(", "));
@@ -138,8 +157,10 @@ public final class BriefPlace extends VBox {
         Say.show(balancePanel, false);
     }
 
-    private void ask(GridPane grid, String what, Function<Draft, Double> value, Function<String, Optional<String>> take) {
-        Field f = field(d -> Figures.plain(value.apply(d)), take, "balance: " + what + " in g", 6).styled("boxed");
+    private void ask(
+            GridPane grid, String what, Function<Draft, Double> value, Function<String, Optional<String>> take) {
+        Field f = field(d -> Figures.plain(value.apply(d)), take, "balance: " + what + " in g", 6)
+                .styled("boxed");
         int at = grid.getRowCount();
         grid.addRow(at, Say.quiet(what), f, Say.label("g", "quiet", "small"));
         grid.add(new ErrorLine(f), 0, at + 1, 3, 1);
@@ -150,7 +171,10 @@ public final class BriefPlace extends VBox {
                         () -> "",
                         text -> text.isBlank()
                                 ? Optional.empty()
-                                : desk.editing().addWavelength(text, desk.solving().curvesProperty().get()),
+                                : desk.editing()
+                                        .addWavelength(
+                                                text,
+                                                desk.solving().curvesProperty().get()),
                         false)
                 .named("add a wavelength in nm")
                 .styled("quiet");
@@ -166,7 +190,8 @@ public final class BriefPlace extends VBox {
         if (draft == null) return;
         fields.forEach(Field::refresh);
         Balance b = draft.balance();
-        balance.setText(small(b.readabilityG()) + ", " + small(b.smallestLoadG()) + " to " + Figures.plain(b.capacityG()) + " g");
+        balance.setText(small(b.readabilityG()) + ", " + small(b.smallestLoadG()) + " to "
+                + Figures.plain(b.capacityG()) + " g");
         balance.setAccessibleText("Balance: last digit " + small(b.readabilityG()) + ", smallest load "
                 + small(b.smallestLoadG()) + ", capacity " + Figures.plain(b.capacityG()) + " g; press to change");
         Optional<Shelf> shelf = desk.shelfProperty().get().shelf();
@@ -175,7 +200,9 @@ public final class BriefPlace extends VBox {
                 .collect(Collectors.joining(" or "));
         base.setText(names);
         base.setAccessibleText("Base: " + names + "; press to choose");
-        shelf.ifPresent(s -> bases(draft, s));
+        List<Object> choice = List.of(draft.bases(), shelf);
+        if (!choice.equals(offered)) shelf.ifPresent(s -> bases(draft, s));
+        offered = choice;
     }
 
     private void bases(Draft draft, Shelf shelf) {
@@ -205,7 +232,11 @@ public final class BriefPlace extends VBox {
     }
 
     private static String small(double g) {
-        return g < 1 ? Figures.plain(new java.math.BigDecimal(1000 * g).round(new java.math.MathContext(6)).doubleValue()) + " mg" : Figures.plain(g) + " g";
+        return g < 1
+                ? Figures.plain(new java.math.BigDecimal(1000 * g)
+                                .round(new java.math.MathContext(6))
+                                .doubleValue()) + " mg"
+                : Figures.plain(g) + " g";
     }
 
     /** Puts the cursor where a wish can be typed. */

@@ -46,7 +46,8 @@ final class ShelfList extends VBox {
         this.desk = desk;
         getStyleClass().add("gap-s");
         rows.getStyleClass().add("gap-xs");
-        HBox head = new HBox(Say.place("Shelf"), Say.spring(), new Word("look through", openShelf).named("look through the shelf"));
+        HBox head = new HBox(
+                Say.place("Shelf"), Say.spring(), new Word("look through", openShelf).named("look through the shelf"));
         head.setAlignment(Pos.BASELINE_LEFT);
         Say.show(refused, false);
         getChildren().addAll(head, rows, refused, limits());
@@ -58,13 +59,17 @@ final class ShelfList extends VBox {
 
     private Node limits() {
         Field absorbers = count(
-                () -> desk.edits().now().limits().maxAbsorbers(), text -> desk.editing().maxAbsorbers(text), "most absorbers");
+                () -> desk.edits().now().limits().maxAbsorbers(),
+                text -> desk.editing().maxAbsorbers(text),
+                "most absorbers");
         Field scatterers = count(
                 () -> desk.edits().now().limits().maxScatterers(),
                 text -> desk.editing().maxScatterers(text),
                 "most scatterers");
         Field modifiers = count(
-                () -> desk.edits().now().limits().maxModifiers(), text -> desk.editing().maxModifiers(text), "most modifiers");
+                () -> desk.edits().now().limits().maxModifiers(),
+                text -> desk.editing().maxModifiers(text),
+                "most modifiers");
         FlowPane line = new FlowPane(
                 Say.quiet("at most"),
                 together(absorbers, "absorbers,"),
@@ -72,8 +77,10 @@ final class ShelfList extends VBox {
                 together(modifiers, "modifiers"));
         line.getStyleClass().add("flow");
         line.setRowValignment(VPos.BASELINE);
-        desk.edits().nowProperty().addListener((p, before, now) -> List.of(absorbers, scatterers, modifiers)
-                .forEach(Field::refresh));
+        desk.edits()
+                .nowProperty()
+                .addListener((p, before, now) ->
+                        List.of(absorbers, scatterers, modifiers).forEach(Field::refresh));
         return new VBox(line, new ErrorLine(absorbers, scatterers, modifiers));
     }
 
@@ -84,9 +91,10 @@ final class ShelfList extends VBox {
     }
 
     private Field count(
-            java.util.function.IntSupplier value, java.util.function.Function<String, Optional<String>> take, String name) {
-        return new Field(
-                        () -> desk.edits().now() == null ? "" : Integer.toString(value.getAsInt()), take, true)
+            java.util.function.IntSupplier value,
+            java.util.function.Function<String, Optional<String>> take,
+            String name) {
+        return new Field(() -> desk.edits().now() == null ? "" : Integer.toString(value.getAsInt()), take, true)
                 .named(name)
                 .fitted(1);
     }
@@ -155,7 +163,11 @@ final class ShelfList extends VBox {
     }
 
     private static String families(Set<Family> families) {
-        return families.stream().map(Family::word).sorted().reduce((a, b) -> a + " or " + b).orElse("it");
+        return families.stream()
+                .map(Family::word)
+                .sorted()
+                .reduce((a, b) -> a + " or " + b)
+                .orElse("it");
     }
 
     private static boolean ticked(SearchLimits l, String id) {

@@ -116,7 +116,8 @@ final class TargetTable extends VBox {
                     .columns(5)
                     .onDone(() -> desk.editing().settle());
             wanted.setPromptText("–");
-            Field allowed = new Field(() -> allowed(nm, q), text -> desk.editing().allowed(nm, q, text), true)
+            Field allowed = new Field(
+                            () -> allowed(nm, q), text -> desk.editing().allowed(nm, q, text), true)
                     .named("tolerance of " + Words.sign(q) + " at " + shownNm + " nm")
                     .styled("quiet")
                     .columns(4)
@@ -151,7 +152,9 @@ final class TargetTable extends VBox {
     }
 
     private String wanted(double nm, Point.Quantity q) {
-        return desk.edits().now().row(nm)
+        return desk.edits()
+                .now()
+                .row(nm)
                 .map(r -> r.wanted(q).isPresent() ? figure(r.wanted(q).getAsDouble()) : "")
                 .orElse("");
     }
@@ -163,7 +166,9 @@ final class TargetTable extends VBox {
     }
 
     private String allowed(double nm, Point.Quantity q) {
-        return desk.edits().now().row(nm)
+        return desk.edits()
+                .now()
+                .row(nm)
                 .map(r -> r.wanted(q).isPresent() ? r.allowed(q).text() : "")
                 .orElse("");
     }

@@ -41,7 +41,9 @@ final class TissuePanel extends VBox {
         ask(grid, "scatter power", "", "1.1");
         said.setText("Fills the table as you type. µs′ follows (λ/500 nm) to the minus scatter power.");
         getChildren().addAll(Say.label("Tissue-like values", "strong"), grid, said);
-        desk.edits().nowProperty().addListener((p, before, now) -> take(now));
+        desk.edits().nowProperty().addListener((p, before, now) -> {
+            if (before == null || now == null || before.tissue() != now.tissue()) take(now);
+        });
         take(desk.edits().now());
     }
 
@@ -63,18 +65,26 @@ final class TissuePanel extends VBox {
         Tissue t = draft.tissue().get();
         texts.put(
                 "wavelengths",
-                java.util.Arrays.stream(t.wavelengthsNm()).mapToObj(Figures::plain).collect(Collectors.joining(", ")));
+                java.util.Arrays.stream(t.wavelengthsNm())
+                        .mapToObj(Figures::plain)
+                        .collect(Collectors.joining(", ")));
         texts.put("haemoglobin", Figures.plain(t.haemoglobinUmolPerL()));
         texts.put("oxygen saturation", percent(t.saturation()));
         texts.put("water", percent(t.waterFraction()));
         texts.put("fat", percent(t.fatFraction()));
-        texts.put("µs′ at 500 nm", t.muspPerCmAt500Nm().isPresent() ? Figures.plain(t.muspPerCmAt500Nm().getAsDouble()) : "");
+        texts.put(
+                "µs′ at 500 nm",
+                t.muspPerCmAt500Nm().isPresent()
+                        ? Figures.plain(t.muspPerCmAt500Nm().getAsDouble())
+                        : "");
         texts.put("scatter power", Figures.plain(t.scatterPower()));
         fields.values().forEach(Field::refresh);
     }
 
     private static String percent(double share) {
-        return Figures.plain(new java.math.BigDecimal(100 * share).round(new java.math.MathContext(6)).doubleValue());
+        return Figures.plain(new java.math.BigDecimal(100 * share)
+                .round(new java.math.MathContext(6))
+                .doubleValue());
     }
 
     private Optional<String> typed(String what, String text) {

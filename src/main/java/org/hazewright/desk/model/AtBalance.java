@@ -5,12 +5,12 @@ import java.util.List;
 import java.util.Optional;
 import javafx.beans.property.ReadOnlyObjectProperty;
 import javafx.beans.property.ReadOnlyObjectWrapper;
+import org.hazewright.bench.Batch;
 import org.hazewright.bench.Grams;
 import org.hazewright.bench.Outlook;
 import org.hazewright.bench.Replan;
 import org.hazewright.bench.Sensitivity;
 import org.hazewright.bench.Step;
-import org.hazewright.bench.Steps;
 import org.hazewright.bench.Weighing;
 import org.hazewright.brief.Balance;
 import org.hazewright.brief.Brief;
@@ -63,9 +63,10 @@ public final class AtBalance {
     /** The grams allowed at the step. */
     public record Band(double lowG, double highG) {}
 
-    private final Brief brief;
+    private final Batch opened;
+    private final Optional<Brief> brief;
     private final Recipe plan;
-    private final Replan replan;
+    private final Optional<Replan> replan;
     private final List<Step> steps;
     private final List<Weighed> entries = new ArrayList<>();
     private final WeighingLog log;
@@ -79,25 +80,30 @@ public final class AtBalance {
     private final ReadOnlyObjectWrapper<Optional<Double>> moreBase = new ReadOnlyObjectWrapper<>(Optional.empty());
     private String asked = "";
 
-    /** All that must be computed before the first step; made off the interface thread. */
-    public record Prepared(Brief brief, Recipe recipe, Replan replan, List<Step> steps, List<Weighed> kept) {
-        public static Prepared of(Brief brief, Recipe recipe, Shelf shelf, List<Weighed> kept) {
-            List<Sensitivity> bands = Sensitivity.of(recipe, brief.balance(), brief.points());
-            return new Prepared(
-                    brief, recipe, new Replan(brief, recipe, shelf), Steps.of(recipe, brief.balance(), bands), kept);
+    /**
+     * All that must be computed before the first step; made off the interface thread.
+     *
+     * @param replan empty when the batch does not know what is wanted
+     * @param kept what was done before
+     */
+    public record Prepared(Batch batch, Optional<Replan> replan, List<Step> steps, List<Weighed> kept) {
+        public static Prepared of(Batch batch, Shelf shelf, List<Weighed> kept) {
+            List<Step> steps = WeighingSteps.of(batch);
+            Optional<Replan> replan = batch.brief().map(b -> new Replan(b, batch.plan(), shelf));
+            return new Prepared(batch, replan, steps, WeighingSteps.entries(batch, steps, kept));
         }
     }
 
     public AtBalance(Prepared p, WeighingLog log, Work work) {
-        this.brief = p.brief();
-        this.plan = p.recipe();
+        this.opened = p.batch();
+        this.brief = p.batch().brief();
+        this.plan = p.batch().plan();
         this.replan = p.replan();
         this.steps = p.steps();
         this.log = log;
         looking = work.lane(Work.Haste.INTERRUPT);
         keeping = work.lane(Work.Haste.FINISH);
-        for (int k = 0; k < steps.size(); k++)
-            entries.add(k < p.kept().size() ? p.kept().get(k) : Weighed.NOTHING);
+        entries.addAll(p.kept());
         show();
     }
 
@@ -124,12 +130,19 @@ public final class AtBalance {
         return moreBase.getReadOnlyProperty();
     }
 
-    public Brief brief() {
-        return brief;
+    public Balance balance() {
+        return opened.balance();
     }
 
-    public Balance balance() {
-        return brief.balance();
+    /** The batch with what is weighed so far. */
+    public Batch batch() {
+        Batch b = opened;
+        List<Weighing> weighings = opened.weighings();
+        for (int k = 0; k < steps.size(); k++) {
+            Optional<Weighing> w = steps.get(k).weighing();
+            if (w.isPresent() && entries.get(k).done()) b = b.withWeighed(place(weighings, w.get()), entries.get(k).massG());
+        }
+        return b;
     }
 
     /** The recipe as it was planned. */
@@ -220,9 +233,10 @@ public final class AtBalance {
         complaint.set("");
         show();
         List<Weighed> copy = List.copyOf(entries);
+        Batch batch = batch();
         keeping.request(
                 (stop, progress) -> {
-                    log.keep(copy);
+                    log.keep(batch, copy);
                     return null;
                 },
                 kept -> {},
@@ -239,8 +253,14 @@ public final class AtBalance {
         return done;
     }
 
+    /** What is weighed, and the rest as it should be; what corrects a batch is weighed as it was planned. */
+    private Recipe asItShouldBe() {
+        boolean corrects = opened.correctionCount() > 0;
+        return corrects || replan.isEmpty() ? batch().asMade() : replan.get().after(done());
+    }
+
     private void show() {
-        Recipe made = replan.after(done());
+        Recipe made = asItShouldBe();
         List<Weighing> planned = Weighing.of(plan);
         List<Weighing> wanted = Weighing.of(made);
         int at = 0;
@@ -266,7 +286,8 @@ public final class AtBalance {
         look(made, at);
     }
 
-    private static int place(List<Weighing> all, Weighing w) {
+    /** Where a weighing stands among all of a recipe. */
+    static int place(List<Weighing> all, Weighing w) {
         for (int k = 0; k < all.size(); k++) if (all.get(k).role() == w.role() && all.get(k).place() == w.place()) return k;
         throw new IllegalStateException("The recipe has no such weighing.");
     }
@@ -282,19 +303,22 @@ public final class AtBalance {
     private record Looked(Outlook outlook, Optional<Band> band, Optional<Double> moreBase) {}
 
     private void look(Recipe made, int at) {
+        if (brief.isEmpty()) return;
+        Brief wanted = brief.get();
+        Replan with = replan.get();
         boolean weighs = at < steps.size() && steps.get(at).weighing().isPresent();
         Weighing w = weighs ? steps.get(at).weighing().get() : null;
         looking.request(
                 (stop, progress) -> {
-                    Outlook o = Outlook.near(brief, made, replan.sweep(), DRAWS);
+                    Outlook o = Outlook.near(wanted, made, with.sweep(), DRAWS);
                     Optional<Band> allowed = w == null
                             ? Optional.empty()
-                            : Sensitivity.of(made, brief.balance(), brief.points()).stream()
+                            : Sensitivity.of(made, wanted.balance(), wanted.points()).stream()
                                     .filter(s -> s.weighing().role() == w.role()
                                             && s.weighing().place() == w.place())
                                     .findFirst()
                                     .map(s -> new Band(s.lowG(), s.highG()));
-                    return new Looked(o, allowed, replan.moreBaseG(made));
+                    return new Looked(o, allowed, with.moreBaseG(made));
                 },
                 looked -> {
                     outlook.set(looked.outlook());

@@ -53,7 +53,8 @@ public final class BriefEditing {
     }
 
     public Optional<String> temperatureC(String text) {
-        return attempt("the temperature", "temperature", d -> d.withTemperatureC(Typed.number(text, "°C", "C", "deg C")));
+        return attempt(
+                "the temperature", "temperature", d -> d.withTemperatureC(Typed.number(text, "°C", "C", "deg C")));
     }
 
     public Optional<String> moulds(List<Mould> moulds) {
@@ -85,12 +86,16 @@ public final class BriefEditing {
     }
 
     public Optional<String> allowed(double nm, Point.Quantity q, String text) {
-        return row("the tolerance of " + Words.sign(q) + " at " + Figures.plain(nm) + " nm", "allowed " + q + nm, nm, r -> r
-                .withAllowed(q, Allowed.typed(text)));
+        return row(
+                "the tolerance of " + Words.sign(q) + " at " + Figures.plain(nm) + " nm",
+                "allowed " + q + nm,
+                nm,
+                r -> r.withAllowed(q, Allowed.typed(text)));
     }
 
     public Optional<String> weight(double nm, String text) {
-        return row("the weight at " + Figures.plain(nm) + " nm", "weight" + nm, nm, r -> r.withWeight(Typed.number(text)));
+        return row(
+                "the weight at " + Figures.plain(nm) + " nm", "weight" + nm, nm, r -> r.withWeight(Typed.number(text)));
     }
 
     public Optional<String> wavelength(double nm, String text) {
@@ -135,13 +140,17 @@ public final class BriefEditing {
     /** Moves a wanted value while it is dragged; {@link #settle} ends the drag. */
     public void drag(double nm, Point.Quantity q, double perCm) {
         double v = digits(Math.max(0, perCm), 4);
-        row("wanted " + Words.sign(q) + " at " + Figures.plain(nm) + " nm", "drag " + q + nm, nm, r -> r.withWanted(
-                q, OptionalDouble.of(v)));
+        row(
+                "wanted " + Words.sign(q) + " at " + Figures.plain(nm) + " nm",
+                "drag " + q + nm,
+                nm,
+                r -> r.withWanted(q, OptionalDouble.of(v)));
     }
 
     /** Moves a wanted value by a share of itself, for the arrow keys. */
     public void nudge(double nm, Point.Quantity q, double share) {
-        now().row(nm).flatMap(r -> r.wanted(q).isPresent() ? Optional.of(r.wanted(q).getAsDouble()) : Optional.empty())
+        now().row(nm)
+                .flatMap(r -> r.wanted(q).isPresent() ? Optional.of(r.wanted(q).getAsDouble()) : Optional.empty())
                 .ifPresent(v -> drag(nm, q, v * (1 + share)));
     }
 
@@ -214,15 +223,19 @@ public final class BriefEditing {
     }
 
     private static SearchLimits limits(SearchLimits l, List<String> use, List<String> avoid) {
-        return new SearchLimits(
-                use, avoid, l.maxAbsorbers(), l.maxScatterers(), l.maxModifiers(), l.leastBaseShare());
+        return new SearchLimits(use, avoid, l.maxAbsorbers(), l.maxScatterers(), l.maxModifiers(), l.leastBaseShare());
     }
 
     public Optional<String> maxAbsorbers(String text) {
         return attempt("the most absorbers", "max absorbers", d -> {
             SearchLimits l = d.limits();
             return d.withLimits(new SearchLimits(
-                    l.use(), l.avoid(), Typed.whole(text, 0, 8), l.maxScatterers(), l.maxModifiers(), l.leastBaseShare()));
+                    l.use(),
+                    l.avoid(),
+                    Typed.whole(text, 0, 8),
+                    l.maxScatterers(),
+                    l.maxModifiers(),
+                    l.leastBaseShare()));
         });
     }
 
@@ -230,7 +243,12 @@ public final class BriefEditing {
         return attempt("the most scatterers", "max scatterers", d -> {
             SearchLimits l = d.limits();
             return d.withLimits(new SearchLimits(
-                    l.use(), l.avoid(), l.maxAbsorbers(), Typed.whole(text, 0, 8), l.maxModifiers(), l.leastBaseShare()));
+                    l.use(),
+                    l.avoid(),
+                    l.maxAbsorbers(),
+                    Typed.whole(text, 0, 8),
+                    l.maxModifiers(),
+                    l.leastBaseShare()));
         });
     }
 
@@ -238,29 +256,38 @@ public final class BriefEditing {
         return attempt("the most modifiers", "max modifiers", d -> {
             SearchLimits l = d.limits();
             return d.withLimits(new SearchLimits(
-                    l.use(), l.avoid(), l.maxAbsorbers(), l.maxScatterers(), Typed.whole(text, 0, 8), l.leastBaseShare()));
+                    l.use(),
+                    l.avoid(),
+                    l.maxAbsorbers(),
+                    l.maxScatterers(),
+                    Typed.whole(text, 0, 8),
+                    l.leastBaseShare()));
         });
     }
 
     // the balance, in g
 
     public Optional<String> readability(String text) {
-        return balance("readability", b -> new Balance(
-                grams(text), b.standardUncertaintyG(), b.smallestLoadG(), b.capacityG()));
+        return balance(
+                "readability",
+                b -> new Balance(grams(text), b.standardUncertaintyG(), b.smallestLoadG(), b.capacityG()));
     }
 
     public Optional<String> balanceUncertainty(String text) {
-        return balance("uncertainty", b -> new Balance(b.readabilityG(), grams(text), b.smallestLoadG(), b.capacityG()));
+        return balance(
+                "uncertainty", b -> new Balance(b.readabilityG(), grams(text), b.smallestLoadG(), b.capacityG()));
     }
 
     public Optional<String> smallestLoad(String text) {
-        return balance("smallest load", b -> new Balance(
-                b.readabilityG(), b.standardUncertaintyG(), grams(text), b.capacityG()));
+        return balance(
+                "smallest load",
+                b -> new Balance(b.readabilityG(), b.standardUncertaintyG(), grams(text), b.capacityG()));
     }
 
     public Optional<String> capacity(String text) {
-        return balance("capacity", b -> new Balance(
-                b.readabilityG(), b.standardUncertaintyG(), b.smallestLoadG(), grams(text)));
+        return balance(
+                "capacity",
+                b -> new Balance(b.readabilityG(), b.standardUncertaintyG(), b.smallestLoadG(), grams(text)));
     }
 
     private Optional<String> balance(String what, UnaryOperator<Balance> edit) {

@@ -131,7 +131,8 @@ public final class Curves {
             return new double[] {Double.NaN, Double.NaN};
         double t = (wavelengthNm - nm[next - 1]) / (nm[next] - nm[next - 1]);
         return new double[] {
-            value(q, next - 1) + t * (value(q, next) - value(q, next - 1)), u(q, next - 1) + t * (u(q, next) - u(q, next - 1))
+            value(q, next - 1) + t * (value(q, next) - value(q, next - 1)),
+            u(q, next - 1) + t * (u(q, next) - u(q, next - 1))
         };
     }
 }

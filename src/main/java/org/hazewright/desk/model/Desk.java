@@ -1,20 +1,25 @@
 package org.hazewright.desk.model;
 
+import java.nio.file.Files;
 import java.nio.file.Path;
+import java.time.LocalDate;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.OptionalDouble;
-import java.util.function.Supplier;
 import javafx.beans.property.ReadOnlyObjectProperty;
 import javafx.beans.property.ReadOnlyObjectWrapper;
+import org.hazewright.bench.Batch;
 import org.hazewright.brief.Balance;
 import org.hazewright.brief.Brief;
 import org.hazewright.brief.SearchLimits;
 import org.hazewright.brief.Tissue;
+import org.hazewright.files.BatchWriter;
 import org.hazewright.files.BriefReader;
-import org.hazewright.files.RecipeWriter;
+import org.hazewright.files.RecipeReader;
 import org.hazewright.files.SafeFile;
+import org.hazewright.mixture.Recipe;
+import org.hazewright.sheet.Logbook;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Part;
 import org.hazewright.shelf.Shelf;
@@ -37,9 +42,11 @@ public final class Desk {
     private final BriefEditing editing = new BriefEditing(edits);
     private final Solving solving;
     private final Papers papers;
+    private final Foreseeing foreseeing;
     private final Work.Lane preparing;
+    private final ReadOnlyObjectWrapper<Optional<MadeBatch>> made = new ReadOnlyObjectWrapper<>(Optional.empty());
     private final ReadOnlyObjectWrapper<Optional<AtBalance>> weighing = new ReadOnlyObjectWrapper<>(Optional.empty());
-    private Tissue.Spectra spectra;
+    private volatile Tissue.Spectra spectra;
 
     public Desk(Work work, Optional<Path> shelfFolder, Remembered remembered) {
         this.work = work;
@@ -50,6 +57,7 @@ public final class Desk {
         solving = new Solving(work);
         papers = new Papers(work, edits, remembered, notices, () -> shelf.get().folder());
         edits.nowProperty().addListener((p, before, now) -> solve());
+        foreseeing = new Foreseeing(this);
     }
 
     private record Begun(ShelfState shelf, Brief brief) {}
@@ -127,6 +135,36 @@ public final class Desk {
                 .orElse("water");
     }
 
+    private record FoundRecipe(Recipe recipe, Optional<Path> brief) {}
+
+    /** Opens the brief that a recipe answers to when it lies beside it; else a brief that wants what the recipe gives. */
+    private void openRecipe(Path file) {
+        if (shelf.get().shelf().isEmpty()) return;
+        Shelf on = shelf.get().shelf().get();
+        preparing.request(
+                (stop, progress) -> {
+                    Recipe recipe = RecipeReader.read(file, on);
+                    return new FoundRecipe(recipe, Recipes.briefBeside(file, recipe, papers.spectra()));
+                },
+                found -> {
+                    if (found.brief().isPresent()) {
+                        papers.open(found.brief().get());
+                        return;
+                    }
+                    remembered.used(file);
+                    papers.startWith(Recipes.asBrief(found.recipe(), Recipes.nameOf(file)));
+                    edits.edit(
+                            edits.now().withChosen(Optional.of(Shown.key(found.recipe()))),
+                            "keeping to the recipe's ingredients",
+                            "");
+                    notices.tell(Notice.told(
+                            "open",
+                            "No brief beside " + file.getFileName()
+                                    + " answers to it; the targets here are what it gives, and its ingredients are kept to."));
+                },
+                failure -> notices.tell(Notice.wrong("open", Papers.words(failure))));
+    }
+
     // at the balance
 
     /** The weighing that is going on; empty at the desk. */
@@ -138,73 +176,76 @@ public final class Desk {
     public void standAtBalance() {
         Shown shown = solving.shownProperty().get();
         if (shown == null || shown.following() || shelf.get().shelf().isEmpty() || weighing.get().isPresent()) return;
-        WeighingLog log = WeighingLog.of(
-                papers.openProperty().get().file(), edits.now().name(), remembered.folder());
         Shelf on = shelf.get().shelf().get();
+        Path folder = papers.folder();
+        String name = edits.now().name();
+        Optional<Path> before = unfinished();
         preparing.request(
                 (stop, progress) -> {
-                    if (log.exists()) return Started.again(log, on, papers.spectra());
-                    log.begin(shown.outlook().brief(), shown.recipe(), papers.spectra());
-                    log.keep(List.of());
-                    return new Started(
-                            AtBalance.Prepared.of(shown.outlook().brief(), shown.recipe(), on, List.of()), false);
+                    Optional<Started> kept = before.map(f -> Started.again(new WeighingLog(f), on))
+                            .filter(s -> s.prepared().batch().plan().equals(shown.recipe()));
+                    return kept.orElseGet(() -> Started.anew(shown, folder, name, remembered.text("who", ""), on));
                 },
-                started -> begin(started, log, shown),
+                this::turn,
                 failure -> notices.tell(Notice.wrong("balance", Papers.words(failure))));
     }
 
-    private record Started(AtBalance.Prepared prepared, boolean again) {
-        static Started again(WeighingLog log, Shelf on, Supplier<Tissue.Spectra> spectra) {
-            WeighingLog.Kept kept = log.read(on, spectra);
-            return new Started(AtBalance.Prepared.of(kept.brief(), kept.recipe(), on, kept.steps()), true);
+    private record Started(AtBalance.Prepared prepared, WeighingLog log) {
+        static Started again(WeighingLog log, Shelf on) {
+            return new Started(AtBalance.Prepared.of(log.batch(on), on, log.entries()), log);
+        }
+
+        static Started anew(Shown shown, Path folder, String name, String who, Shelf on) {
+            LocalDate today = LocalDate.now();
+            Path file = Recipes.freeName(folder, name + "-" + today, ".batch.toml");
+            String id = file.getFileName().toString().replace(".batch.toml", "");
+            Batch batch = Batch.open(id, shown.recipe(), Optional.of(shown.outlook().brief()), who, today);
+            return new Started(AtBalance.Prepared.of(batch, on, List.of()), new WeighingLog(file));
         }
     }
 
-    private void begin(Started started, WeighingLog log, Shown shown) {
-        boolean other = started.again()
-                && !started.prepared().recipe().massesG().equals(shown.recipe().massesG())
-                && started.prepared().kept().stream().anyMatch(w -> !w.equals(Weighed.NOTHING));
-        if (other)
-            notices.tell(Notice.asked(
-                    "balance",
-                    "A weighing of an earlier recipe of “" + started.prepared().recipe().title() + "” was broken off.",
-                    new Notice.Way("go on with it", () -> turn(started, log)),
-                    new Notice.Way("begin anew with this recipe", () -> {
-                        log.drop();
-                        standAtBalance();
-                    })));
-        else if (started.again() && started.prepared().kept().stream().allMatch(w -> w.equals(Weighed.NOTHING))
-                && !started.prepared().recipe().massesG().equals(shown.recipe().massesG())) {
-            log.drop();
-            standAtBalance();
-        } else turn(started, log);
+    private void turn(Started started) {
+        remembered.keep("weighing", started.log().file().toString());
+        weighing.set(Optional.of(new AtBalance(started.prepared(), started.log(), work)));
     }
 
-    private void turn(Started started, WeighingLog log) {
-        remembered.keep("weighing", log.folder().toString());
-        weighing.set(Optional.of(new AtBalance(started.prepared(), log, work)));
-    }
-
-    /** Goes on with a weighing that a crash broke off. */
-    private void offerWeighing() {
+    /** The file of a weighing that was not finished. */
+    private Optional<Path> unfinished() {
         String kept = remembered.text("weighing", "");
-        if (kept.isEmpty() || shelf.get().shelf().isEmpty()) return;
-        WeighingLog log = new WeighingLog(Path.of(kept));
-        if (!log.exists()) return;
+        return kept.isEmpty() ? Optional.empty() : Optional.of(Path.of(kept)).filter(Files::isRegularFile);
+    }
+
+    /** Offers to go on with a weighing that a crash or an evening broke off. */
+    private void offerWeighing() {
+        Optional<Path> file = unfinished();
+        if (file.isEmpty() || shelf.get().shelf().isEmpty()) return;
         Shelf on = shelf.get().shelf().get();
         preparing.request(
-                (stop, progress) -> Started.again(log, on, papers.spectra()),
+                (stop, progress) -> Started.again(new WeighingLog(file.get()), on),
                 started -> {
                     long done = started.prepared().kept().stream().filter(Weighed::done).count();
-                    if (done == 0) return;
                     notices.tell(Notice.asked(
                             "balance",
-                            "“" + started.prepared().recipe().title() + "” was being weighed; " + done + " of "
+                            "“" + started.prepared().batch().plan().title() + "” was being weighed; " + done + " of "
                                     + started.prepared().steps().size() + " steps are done.",
-                            new Notice.Way("go on weighing", () -> turn(started, log)),
+                            new Notice.Way("go on weighing", () -> turn(started)),
                             new Notice.Way("later", () -> {})));
                 },
                 failure -> notices.tell(Notice.wrong("balance", Papers.words(failure))));
+    }
+
+    /** Opens a batch's file: at the balance while it is being weighed, else as a batch that is made. */
+    private void openBatch(Path file) {
+        if (shelf.get().shelf().isEmpty()) return;
+        Shelf on = shelf.get().shelf().get();
+        preparing.request(
+                (stop, progress) -> Started.again(new WeighingLog(file), on),
+                started -> {
+                    remembered.used(file);
+                    if (started.prepared().batch().complete()) made.set(Optional.of(new MadeBatch(this, started.log().file(), started.prepared().batch())));
+                    else turn(started);
+                },
+                failure -> notices.tell(Notice.wrong("open", Papers.words(failure))));
     }
 
     /** Back to the desk; the weighing is kept. */
@@ -212,23 +253,49 @@ public final class Desk {
         weighing.set(Optional.empty());
     }
 
-    /** Records the batch as it was weighed and goes back to the desk. */
+    /** Records the batch in the logbook beside it and turns to it. */
     public void finishWeighing() {
         AtBalance done = weighing.get().orElseThrow();
-        Path folder = papers.openProperty().get().file()
-                .map(f -> f.toAbsolutePath().getParent())
-                .orElse(remembered.folder());
+        Batch batch = done.batch();
+        Path file = done.log().file();
         preparing.request(
                 (stop, progress) -> {
-                    Path file = Recipes.freeName(folder, done.brief().name(), ".batch.toml");
-                    RecipeWriter.write(file, done.made(), SafeFile.Overwrite.NEVER);
-                    done.log().drop();
-                    return file;
+                    BatchWriter.write(file, batch, SafeFile.Overwrite.REPLACE);
+                    done.log().over();
+                    return Logbook.record(MadeBatch.logbook(file), batch, file);
                 },
-                file -> {
+                recorded -> {
                     remembered.keep("weighing", "");
+                    remembered.used(file);
                     weighing.set(Optional.empty());
-                    notices.tell(Notice.told("balance", "Recorded: " + file + "."));
+                    made.set(Optional.of(new MadeBatch(this, file, batch)));
+                    MadeBatch.tell(notices, recorded);
+                },
+                failure -> notices.tell(Notice.wrong("balance", Papers.words(failure))));
+    }
+
+    // a batch that is made
+
+    /** The batch that is looked at; empty at the desk. */
+    public ReadOnlyObjectProperty<Optional<MadeBatch>> madeProperty() {
+        return made.getReadOnlyProperty();
+    }
+
+    public void leaveBatch() {
+        made.set(Optional.empty());
+    }
+
+    /** Goes to the balance with a correction that was planned. */
+    void weighCorrection(Path file, Batch batch) {
+        Shelf on = shelf.get().shelf().orElseThrow();
+        preparing.request(
+                (stop, progress) -> {
+                    BatchWriter.write(file, batch, SafeFile.Overwrite.KEEP_PREVIOUS);
+                    return Started.again(new WeighingLog(file), on);
+                },
+                started -> {
+                    made.set(Optional.empty());
+                    turn(started);
                 },
                 failure -> notices.tell(Notice.wrong("balance", Papers.words(failure))));
     }
@@ -241,16 +308,20 @@ public final class Desk {
     /** Opens a file by what its name says it is. */
     public void open(Path file) {
         String name = file.getFileName().toString().toLowerCase(Locale.ROOT);
-        if (name.endsWith(".toml")) papers.open(file);
+        if (name.endsWith(".batch.toml")) openBatch(file);
+        else if (name.endsWith(".recipe.toml")) openRecipe(file);
+        else if (name.endsWith(".toml")) papers.open(file);
         else
             notices.tell(Notice.wrong(
-                    "open", file.getFileName() + " is none of the files that open here: a brief (.brief.toml)."));
+                    "open", file.getFileName() + " is none of the files that open here: a brief (.brief.toml), a recipe"
+                            + " (.recipe.toml) or a batch (.batch.toml)."));
     }
 
-    /** Spectra for tissue-like values, read when first asked for. */
+    /** Spectra for tissue-like values and oximeters, read when first asked for; on any thread. */
     public Tissue.Spectra spectra() {
-        if (spectra == null) spectra = papers.spectra().get();
-        return spectra;
+        Tissue.Spectra known = spectra;
+        if (known == null) spectra = known = papers.spectra().get();
+        return known;
     }
 
     public Work work() {
@@ -283,5 +354,9 @@ public final class Desk {
 
     public Papers papers() {
         return papers;
+    }
+
+    public Foreseeing foreseeing() {
+        return foreseeing;
     }
 }

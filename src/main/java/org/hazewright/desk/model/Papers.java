@@ -97,6 +97,11 @@ public final class Papers {
         return one.withChosen(Optional.empty()).equals(other.withChosen(Optional.empty()));
     }
 
+    /** The folder that results go to: beside the brief, or for one that was never saved the person's own folder. */
+    public Path folder() {
+        return open.get().file().map(f -> f.toAbsolutePath().getParent()).orElse(remembered.workFolder());
+    }
+
     Supplier<Tissue.Spectra> spectra() {
         return TissueSpectra.of(shelfFolder.get().orElse(null));
     }
@@ -154,8 +159,7 @@ public final class Papers {
             Brief kept = BriefReader.read(side, spectra());
             if (unless != null) kept = renamed(kept, unless.name());
             if (unless != null && same(Draft.of(kept), Draft.of(unless))) return Optional.empty();
-            LocalTime when = LocalTime.ofInstant(
-                    Files.getLastModifiedTime(side).toInstant(), ZoneId.systemDefault());
+            LocalTime when = LocalTime.ofInstant(Files.getLastModifiedTime(side).toInstant(), ZoneId.systemDefault());
             return Optional.of(new Unsaved(kept, when));
         } catch (Refusal | IOException unreadable) {
             return Optional.empty();
@@ -169,10 +173,12 @@ public final class Papers {
     private void offer(Unsaved u, Path side) {
         notices.tell(Notice.asked(
                 "unsaved",
-                "Changes to “" + u.brief().title() + "” from " + DateTimeFormatter.ofPattern("HH:mm", Locale.ROOT).format(u.when())
-                        + " were never saved.",
-                new Notice.Way("take them up", () -> edits.edit(
-                        Draft.of(u.brief()).withName(edits.now().name()), "taking up unsaved changes", "")),
+                "Changes to “" + u.brief().title() + "” from "
+                        + DateTimeFormatter.ofPattern("HH:mm", Locale.ROOT).format(u.when()) + " were never saved.",
+                new Notice.Way(
+                        "take them up",
+                        () -> edits.edit(
+                                Draft.of(u.brief()).withName(edits.now().name()), "taking up unsaved changes", "")),
                 new Notice.Way("throw them away", () -> drop(side))));
     }
 
@@ -252,7 +258,8 @@ public final class Papers {
                     return side;
                 },
                 kept -> notices.putAway("autosave"),
-                failure -> notices.tell(Notice.wrong("autosave", "Unsaved changes could not be kept safe. " + words(failure))));
+                failure -> notices.tell(
+                        Notice.wrong("autosave", "Unsaved changes could not be kept safe. " + words(failure))));
     }
 
     /** Gives up changes that are not saved, on closing without saving. */

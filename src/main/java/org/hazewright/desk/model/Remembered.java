@@ -24,15 +24,17 @@ public final class Remembered {
     private static final int MOST_RECENT = 8;
 
     private final Path folder;
+    private final Path work;
     private final Properties lines = new Properties();
 
-    private Remembered(Path folder) {
+    private Remembered(Path folder, Path work) {
         this.folder = folder;
+        this.work = work;
     }
 
-    /** Kept in a folder of its own. */
-    public static Remembered in(Path folder) {
-        Remembered r = new Remembered(folder);
+    /** Kept in a folder of its own; {@code work} is where results of briefs go that were never saved. */
+    public static Remembered in(Path folder, Path work) {
+        Remembered r = new Remembered(folder, work);
         try {
             Path file = r.file();
             if (Files.isRegularFile(file)) r.lines.load(new StringReader(Files.readString(file)));
@@ -53,7 +55,16 @@ public final class Remembered {
         return xdg != null && !xdg.isBlank() ? Path.of(xdg, "hazewright") : Path.of(home, ".config", "hazewright");
     }
 
-    /** Where files that belong to no document are kept. */
+    /** The usual folder for results of briefs that were never saved: one a person finds. */
+    public static Path usualWorkFolder() {
+        return Path.of(System.getProperty("user.home", "."), "Hazewright");
+    }
+
+    public Path workFolder() {
+        return work;
+    }
+
+    /** Where what belongs to no document is kept. */
     public Path folder() {
         return folder;
     }
@@ -110,7 +121,8 @@ public final class Remembered {
         recent.remove(whole);
         recent.add(0, whole);
         for (int k = 0; k < MOST_RECENT; k++) {
-            if (k < recent.size()) lines.setProperty("recent." + k, recent.get(k).toString());
+            if (k < recent.size())
+                lines.setProperty("recent." + k, recent.get(k).toString());
             else lines.remove("recent." + k);
         }
         write();

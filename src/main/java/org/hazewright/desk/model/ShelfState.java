@@ -38,7 +38,8 @@ public record ShelfState(Optional<Shelf> shelf, Optional<Path> folder, List<Stri
                     ? "holds no base, and without water, a gel, a silicone or a resin there is nothing to mix into."
                     : "holds no base that can be read; " + refused.size()
                             + (refused.size() == 1 ? " file is" : " files are") + " refused.";
-            return new ShelfState(Optional.empty(), folder, refused, Optional.of("The shelf " + place(folder) + " " + why));
+            return new ShelfState(
+                    Optional.empty(), folder, refused, Optional.of("The shelf " + place(folder) + " " + why));
         } catch (Refusal refusal) {
             return new ShelfState(Optional.empty(), folder, List.of(), Optional.of(refusal.getMessage()));
         }

@@ -17,7 +17,8 @@ import org.hazewright.mixture.Recipe;
 public record Shown(Outlook outlook, Answer answer, boolean following) {
 
     /** Another way that may be chosen. */
-    public record Card(String title, List<String> what, int weighings, double chance, Outlook outlook, List<String> key) {
+    public record Card(
+            String title, List<String> what, int weighings, double chance, Outlook outlook, List<String> key) {
         public Card {
             what = List.copyOf(what);
             key = List.copyOf(key);

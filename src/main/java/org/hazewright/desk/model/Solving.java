@@ -28,7 +28,7 @@ public final class Solving {
     private static final long REST_MS = 120;
 
     private static final int WAYS = 3;
-    private static final int DRAWS_WHILE_FOLLOWING = 2000;
+    private static final int DRAWS_WHILE_FOLLOWING = 1000;
 
     private final Work.Lane following;
     private final Work.Lane search;
@@ -120,9 +120,7 @@ public final class Solving {
                     Brief asked = chosen.map(key -> keeping(brief, key)).orElse(brief);
                     Answer a = Answering.to(asked, shelf, 0, stop, progress);
                     Outlook outlook = new Outlook(brief, a.recipe(), a.predicted(), a.budget(), a.chance());
-                    return stop.getAsBoolean()
-                            ? null
-                            : new Solved(a, outlook, new Following(brief, a.recipe(), shelf));
+                    return stop.getAsBoolean() ? null : new Solved(a, outlook, new Following(brief, a.recipe(), shelf));
                 },
                 solved -> {
                     following.stop();
@@ -137,7 +135,8 @@ public final class Solving {
 
     private boolean keepsTo(Optional<List<String>> chosen) {
         return shown.get() != null
-                && chosen.map(key -> key.equals(Shown.key(shown.get().recipe()))).orElse(true);
+                && chosen.map(key -> key.equals(Shown.key(shown.get().recipe())))
+                        .orElse(true);
     }
 
     private void follow(Brief brief) {
@@ -197,17 +196,13 @@ public final class Solving {
 
     private static Shown.Card card(String title, Outlook o, int weighings, double chance, Recipe recipe) {
         return new Shown.Card(
-                title,
-                recipe.items().stream().map(Words::item).toList(),
-                weighings,
-                chance,
-                o,
-                Shown.key(recipe));
+                title, recipe.items().stream().map(Words::item).toList(), weighings, chance, o, Shown.key(recipe));
     }
 
     private static int weighings(Recipe recipe, Brief brief) {
         int count = 0;
-        for (var s : recipe.stocks()) count += brief.balance().loads(s.ingredientG()) + brief.balance().loads(s.diluentG());
+        for (var s : recipe.stocks())
+            count += brief.balance().loads(s.ingredientG()) + brief.balance().loads(s.diluentG());
         for (var i : recipe.items()) count += brief.balance().loads(i.massG());
         return count;
     }

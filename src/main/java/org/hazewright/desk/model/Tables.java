@@ -19,7 +19,8 @@ public final class Tables {
         line(text, "into", "what", "lot", "mass_g");
         for (Stock s : recipe.stocks()) {
             String into = Words.stock(recipe, s);
-            String from = s.from().map(f -> Words.stock(recipe, recipe.stock(f))).orElse(Words.shortName(s.ingredient()));
+            String from =
+                    s.from().map(f -> Words.stock(recipe, recipe.stock(f))).orElse(Words.shortName(s.ingredient()));
             line(text, into, from, s.lot().orElse(""), Words.grams(s.ingredientG(), balance));
             line(text, into, Words.shortName(s.diluent()), "", Words.grams(s.diluentG(), balance));
         }
@@ -29,7 +30,11 @@ public final class Tables {
     }
 
     private static void line(StringBuilder text, String... cells) {
-        text.append(String.join("\t", List.of(cells).stream().map(c -> c.replaceAll("[\t\r\n]", " ")).toList()))
+        text.append(String.join(
+                        "\t",
+                        List.of(cells).stream()
+                                .map(c -> c.replaceAll("[\t\r\n]", " "))
+                                .toList()))
                 .append('\n');
     }
 }

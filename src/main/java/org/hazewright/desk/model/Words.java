@@ -55,7 +55,9 @@ public final class Words {
 
     /** What stands on the bottle: a stock by what it holds and its ratio, an ingredient by its name. */
     public static String item(Item item) {
-        return item.stock().map(s -> shortName(item.ingredient()) + ", stock" + ratio(s)).orElse(shortName(item.ingredient()));
+        return item.stock()
+                .map(s -> shortName(item.ingredient()) + ", stock" + ratio(s))
+                .orElse(shortName(item.ingredient()));
     }
 
     private static String ratio(String stockId) {
@@ -82,7 +84,9 @@ public final class Words {
 
     /** A volume in mL, below 1 mL in µL. */
     public static String volume(double ml) {
-        return ml < 1 ? Figures.significant(1000 * ml, 3).replaceFirst("\\.0+$", "") + " µL" : Figures.significant(ml, 4) + " mL";
+        return ml < 1
+                ? Figures.significant(1000 * ml, 3).replaceFirst("\\.0+$", "") + " µL"
+                : Figures.significant(ml, 4) + " mL";
     }
 
     /** A name without its afterthoughts on provenance. */
@@ -104,12 +108,16 @@ public final class Words {
 
     /** A predicted value to the place that its tolerance asks for. */
     public static String predicted(Answer.Predicted p) {
-        return Figures.fixed(p.perCm(), Figures.decimalsFor(Math.min(p.point().tolerancePerCm(), p.uPerCm() > 0 ? p.uPerCm() : 1e9)));
+        return Figures.fixed(
+                p.perCm(),
+                Figures.decimalsFor(Math.min(p.point().tolerancePerCm(), p.uPerCm() > 0 ? p.uPerCm() : 1e9)));
     }
 
     /** "0.4 half-widths high, inside" – a landing said in words. */
     public static String landing(double miss) {
-        String side = Math.abs(miss) < 0.05 ? "in the middle" : Figures.fixed(Math.abs(miss), 1) + " half-widths " + (miss > 0 ? "high" : "low");
+        String side = Math.abs(miss) < 0.05
+                ? "in the middle"
+                : Figures.fixed(Math.abs(miss), 1) + " half-widths " + (miss > 0 ? "high" : "low");
         return side + (Math.abs(miss) <= 1 ? ", inside" : ", outside");
     }
 
@@ -120,6 +128,8 @@ public final class Words {
     }
 
     public static String capital(String sentence) {
-        return sentence.isEmpty() ? sentence : sentence.substring(0, 1).toUpperCase(Locale.ROOT) + sentence.substring(1);
+        return sentence.isEmpty()
+                ? sentence
+                : sentence.substring(0, 1).toUpperCase(Locale.ROOT) + sentence.substring(1);
     }
 }

@@ -67,8 +67,7 @@ public final class Work implements AutoCloseable {
         if (workers instanceof ExecutorService service) service.shutdownNow();
     }
 
-    private record Request<T>(
-            long waitMs, Job<T> job, Consumer<? super T> done, Consumer<? super Throwable> failed) {}
+    private record Request<T>(long waitMs, Job<T> job, Consumer<? super T> done, Consumer<? super Throwable> failed) {}
 
     /** One kind of work. Its methods are called on the interface thread. */
     public final class Lane {

@@ -14,7 +14,9 @@ public final class ErrorLine extends Label {
         setMinHeight(USE_PREF_SIZE);
         StringExpression words = Bindings.createStringBinding(
                 () -> {
-                    for (Field f : fields) if (!f.errorProperty().get().isEmpty()) return "✕ " + f.errorProperty().get();
+                    for (Field f : fields)
+                        if (!f.errorProperty().get().isEmpty())
+                            return "✕ " + f.errorProperty().get();
                     return "";
                 },
                 java.util.Arrays.stream(fields).map(Field::errorProperty).toArray(javafx.beans.Observable[]::new));

@@ -94,7 +94,8 @@ public final class Field extends TextField {
             Text measure = new Text(getText().isEmpty() && getPromptText() != null ? getPromptText() : getText());
             measure.setFont(getFont());
             double em = getFont().getSize();
-            setPrefWidth(Math.ceil(Math.max(least * em * 0.62, measure.getLayoutBounds().getWidth()) + 0.6 * em + 7));
+            setPrefWidth(Math.ceil(
+                    Math.max(least * em * 0.62, measure.getLayoutBounds().getWidth()) + 0.6 * em + 7));
         };
         textProperty().addListener((p, before, now) -> fit.run());
         fontProperty().addListener((p, before, now) -> fit.run());

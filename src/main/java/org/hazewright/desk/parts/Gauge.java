@@ -6,9 +6,9 @@ import javafx.scene.AccessibleRole;
 import javafx.scene.layout.Region;
 import javafx.scene.shape.Circle;
 import javafx.scene.shape.Line;
-import javafx.scene.shape.Path;
 import javafx.scene.shape.LineTo;
 import javafx.scene.shape.MoveTo;
+import javafx.scene.shape.Path;
 import org.hazewright.desk.model.Words;
 
 /**
@@ -38,7 +38,7 @@ public final class Gauge extends Region {
         setAccessibleRole(AccessibleRole.TEXT);
         miss.addListener((p, before, now) -> {
             say();
-            setNeedsLayout(true);
+            place(); // nothing else moves, so no layout is asked for
         });
         say();
     }
@@ -74,6 +74,10 @@ public final class Gauge extends Region {
 
     @Override
     protected void layoutChildren() {
+        place();
+    }
+
+    private void place() {
         double w = getWidth();
         double h = getHeight();
         double y = Math.rint(h / 2) + 0.5;

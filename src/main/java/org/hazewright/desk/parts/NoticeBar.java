@@ -33,10 +33,12 @@ public final class NoticeBar extends VBox {
         if (n.kind() == Notice.Kind.WRONG) line.getStyleClass().add("wrong");
         if (n.kind() == Notice.Kind.ASKED) line.getStyleClass().add("asked");
         for (Notice.Way way : n.ways())
-            line.getChildren().add(new Word(way.word(), () -> {
-                notices.putAway(n);
-                way.act().run();
-            }).styled("strong"));
+            line.getChildren()
+                    .add(new Word(way.word(), () -> {
+                                notices.putAway(n);
+                                way.act().run();
+                            })
+                            .styled("strong"));
         if (n.kind() != Notice.Kind.ASKED)
             line.getChildren().add(new Word("×", () -> notices.putAway(n)).named("put this away: " + n.text()));
         return line;

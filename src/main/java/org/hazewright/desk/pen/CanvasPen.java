@@ -50,7 +50,15 @@ public final class CanvasPen implements Pen {
 
     @Override
     public void box(
-            double x, double y, double w, double h, double radius, String fill, double opacity, String stroke, double width) {
+            double x,
+            double y,
+            double w,
+            double h,
+            double radius,
+            String fill,
+            double opacity,
+            String stroke,
+            double width) {
         if (fill != null) {
             g.setFill(colour(fill, opacity));
             g.fillRoundRect(x, y, w, h, 2 * radius, 2 * radius);

@@ -21,7 +21,15 @@ public interface Pen {
 
     /** A rectangle with round corners; {@code fill} or {@code stroke} may be null. */
     void box(
-            double x, double y, double w, double h, double radius, String fill, double opacity, String stroke, double width);
+            double x,
+            double y,
+            double w,
+            double h,
+            double radius,
+            String fill,
+            double opacity,
+            String stroke,
+            double width);
 
     void disc(double x, double y, double radius, String colour);
 

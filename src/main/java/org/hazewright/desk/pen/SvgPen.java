@@ -33,7 +33,8 @@ public final class SvgPen implements Pen {
 
     private static String points(double[] x, double[] y, int count) {
         StringBuilder s = new StringBuilder();
-        for (int k = 0; k < count; k++) s.append(k == 0 ? "" : " ").append(n(x[k])).append(',').append(n(y[k]));
+        for (int k = 0; k < count; k++)
+            s.append(k == 0 ? "" : " ").append(n(x[k])).append(',').append(n(y[k]));
         return s.toString();
     }
 
@@ -86,35 +87,64 @@ public final class SvgPen implements Pen {
                 n(radius),
                 fill == null ? "none" : fill,
                 n(opacity)));
-        if (stroke != null) body.append(" stroke=\"").append(stroke).append("\" stroke-width=\"").append(n(strokeWidth)).append('"');
+        if (stroke != null)
+            body.append(" stroke=\"")
+                    .append(stroke)
+                    .append("\" stroke-width=\"")
+                    .append(n(strokeWidth))
+                    .append('"');
         body.append("/>\n");
     }
 
     @Override
     public void disc(double x, double y, double radius, String colour) {
-        body.append("<circle cx=\"").append(n(x)).append("\" cy=\"").append(n(y)).append("\" r=\"").append(n(radius));
+        body.append("<circle cx=\"")
+                .append(n(x))
+                .append("\" cy=\"")
+                .append(n(y))
+                .append("\" r=\"")
+                .append(n(radius));
         body.append("\" fill=\"").append(colour).append("\"/>\n");
     }
 
     @Override
     public void text(String text, double x, double y, double size, boolean bold, String colour, Align align) {
-        String anchor =
-                switch (align) {
-                    case LEFT -> "start";
-                    case CENTRE -> "middle";
-                    case RIGHT -> "end";
-                };
-        body.append("<text x=\"").append(n(x)).append("\" y=\"").append(n(y)).append("\" font-size=\"").append(n(size));
+        String anchor = switch (align) {
+            case LEFT -> "start";
+            case CENTRE -> "middle";
+            case RIGHT -> "end";
+        };
+        body.append("<text x=\"")
+                .append(n(x))
+                .append("\" y=\"")
+                .append(n(y))
+                .append("\" font-size=\"")
+                .append(n(size));
         body.append("\" font-family=\"sans-serif\"").append(bold ? " font-weight=\"bold\"" : "");
-        body.append(" fill=\"").append(colour).append("\" text-anchor=\"").append(anchor).append("\">");
+        body.append(" fill=\"")
+                .append(colour)
+                .append("\" text-anchor=\"")
+                .append(anchor)
+                .append("\">");
         body.append(escaped(text)).append("</text>\n");
     }
 
     @Override
     public void clip(double x, double y, double width, double height) {
         String id = "c" + ++clips;
-        definitions.append("<clipPath id=\"").append(id).append("\"><rect x=\"").append(n(x)).append("\" y=\"").append(n(y));
-        definitions.append("\" width=\"").append(n(width)).append("\" height=\"").append(n(height)).append("\"/></clipPath>\n");
+        definitions
+                .append("<clipPath id=\"")
+                .append(id)
+                .append("\"><rect x=\"")
+                .append(n(x))
+                .append("\" y=\"")
+                .append(n(y));
+        definitions
+                .append("\" width=\"")
+                .append(n(width))
+                .append("\" height=\"")
+                .append(n(height))
+                .append("\"/></clipPath>\n");
         body.append("<g clip-path=\"url(#").append(id).append(")\">\n");
     }
 

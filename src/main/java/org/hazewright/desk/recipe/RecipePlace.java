@@ -3,11 +3,13 @@ package org.hazewright.desk.recipe;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 import javafx.geometry.Pos;
 import javafx.scene.Node;
 import javafx.scene.control.Button;
 import javafx.scene.control.Label;
 import javafx.scene.control.ScrollPane;
+import javafx.scene.control.Tooltip;
 import javafx.scene.layout.ColumnConstraints;
 import javafx.scene.layout.FlowPane;
 import javafx.scene.layout.GridPane;
@@ -15,20 +17,14 @@ import javafx.scene.layout.HBox;
 import javafx.scene.layout.Priority;
 import javafx.scene.layout.Region;
 import javafx.scene.layout.VBox;
-import org.hazewright.bench.Leftover;
 import org.hazewright.bench.Outlook;
-import org.hazewright.brief.Balance;
 import org.hazewright.desk.model.Desk;
 import org.hazewright.desk.model.Shown;
 import org.hazewright.desk.model.Words;
 import org.hazewright.desk.parts.Gauge;
 import org.hazewright.desk.parts.Say;
 import org.hazewright.desk.parts.Word;
-import org.hazewright.mixture.Item;
 import org.hazewright.mixture.Recipe;
-import org.hazewright.mixture.Stock;
-import org.hazewright.optics.Figures;
-import org.hazewright.shelf.Form;
 import org.hazewright.shelf.Ingredient;
 
 /** The place Recipe. */
@@ -40,16 +36,16 @@ public final class RecipePlace extends VBox {
 
     private final Desk desk;
     private final Label verdict = Say.wrapped("", "headline");
-    private final VBox weighing = new VBox();
-    private final VBox stocks = new VBox();
+    private final WeighRows weighing = new WeighRows();
     private final VBox causes = new VBox();
     private final VBox limits = new VBox();
     private final VBox ways = new VBox();
+    private boolean following;
 
     public RecipePlace(Desk desk, Runnable print, Runnable saveSheet, Runnable copyGrams) {
         this.desk = desk;
         getStyleClass().addAll("place", "side-right");
-        VBox all = new VBox(verdict, weighing, stocks, causes, limits, ways);
+        VBox all = new VBox(verdict, weighing, causes, limits, ways);
         all.getStyleClass().add("gap-l");
         ScrollPane scroll = new ScrollPane(all);
         scroll.setFitToWidth(true);
@@ -65,9 +61,7 @@ public final class RecipePlace extends VBox {
         foot.setAlignment(Pos.BASELINE_LEFT);
         getStyleClass().add("gap-m");
         getChildren().addAll(Say.place("Recipe"), scroll, foot);
-        verdict.setMinHeight(Region.USE_PREF_SIZE);
-        weighing.getStyleClass().add("gap-s");
-        List.of(stocks, causes, limits, ways).forEach(box -> box.getStyleClass().add("gap-s"));
+        List.of(causes, limits, ways).forEach(box -> box.getStyleClass().add("gap-s"));
 
         desk.solving().shownProperty().addListener((p, before, now) -> show(now));
         desk.solving().cardsProperty().addListener((p, before, now) -> ways());
@@ -76,103 +70,44 @@ public final class RecipePlace extends VBox {
         show(desk.solving().shownProperty().get());
     }
 
+    private void say(String words, String tone) {
+        verdict.setText(words);
+        if (!verdict.getStyleClass().contains(tone)) verdict.getStyleClass().setAll("label", "headline", tone);
+    }
+
+    private void showAll(boolean yes) {
+        List.of(weighing, causes, limits, ways).forEach(box -> Say.show(box, yes));
+    }
+
     private void problem() {
-        desk.solving().problemProperty().get().ifPresentOrElse(
-                words -> {
-                    verdict.setText("✕ " + words);
-                    verdict.getStyleClass().setAll("label", "headline", "missed");
-                    List.of(weighing, stocks, causes, limits, ways).forEach(box -> Say.show(box, false));
-                },
-                () -> show(desk.solving().shownProperty().get()));
+        Optional<String> words = desk.solving().problemProperty().get();
+        if (words.isPresent()) {
+            say("✕ " + words.get(), "missed");
+            showAll(false);
+        } else show(desk.solving().shownProperty().get());
     }
 
     private void show(Shown shown) {
-        boolean any = shown != null;
-        List.of(weighing, stocks, causes, limits, ways).forEach(box -> Say.show(box, any));
-        if (!any) {
-            verdict.setText("Looking for a recipe …");
-            verdict.getStyleClass().setAll("label", "headline", "quiet");
+        if (shown == null) {
+            showAll(false);
+            say("Looking for a recipe …", "quiet");
+            following = false;
             return;
         }
         if (desk.solving().problemProperty().get().isPresent()) return;
         Outlook o = shown.outlook();
-        verdict.setText((o.meets() ? "" : "✕ ") + Words.verdict(o));
-        verdict.getStyleClass().setAll("label", "headline", o.meets() ? "strong" : "missed");
-        weighing(shown);
-        stocks(shown);
+        say((o.meets() ? "" : "✕ ") + Words.verdict(o), o.meets() ? "strong" : "missed");
+        Say.show(weighing, true);
+        weighing.show(shown);
+        if (shown.following() && following) return; // the rest follows when the hand rests
+        following = shown.following();
+        if (following) {
+            limits.getChildren().setAll(Say.heading("What holds it back"), Say.wrapped("The amounts follow; the search goes on when you rest.", "quiet"));
+            return;
+        }
         causes(o);
         limits(shown);
         ways();
-    }
-
-    private void weighing(Shown shown) {
-        Recipe recipe = shown.recipe();
-        Balance balance = shown.outlook().brief().balance();
-        List<Node> rows = new ArrayList<>();
-        int n = 0;
-        for (Item item : recipe.items()) {
-            Label disc = Say.label(Integer.toString(++n), "number-disc");
-            Label name = Say.wrapped(Words.item(item));
-            VBox words = new VBox(name);
-            String note = note(item, balance);
-            if (!note.isEmpty()) words.getChildren().add(Say.wrapped(note, "quiet", "small"));
-            HBox.setHgrow(words, Priority.ALWAYS);
-            Label grams = Say.label(Words.grams(item.massG(), balance) + " g", "grams");
-            grams.setMinWidth(Region.USE_PREF_SIZE);
-            HBox row = new HBox(disc, words, grams);
-            row.getStyleClass().add("gap-m");
-            row.setAlignment(Pos.TOP_LEFT);
-            row.setAccessibleText(Words.item(item) + ", " + grams.getText());
-            rows.add(row);
-        }
-        double sum = recipe.items().stream().mapToDouble(Item::massG).sum();
-        HBox together = new HBox(
-                Say.quiet("together " + Figures.significant(volumeMl(recipe), 4) + " mL"),
-                Say.spring(),
-                Say.label(Words.grams(sum, balance) + " g", "quiet", "mono"));
-        rows.add(together);
-        weighing.getChildren().setAll(rows);
-    }
-
-    private static double volumeMl(Recipe recipe) {
-        double ml = 0;
-        for (var e : recipe.massesG().entrySet()) ml += e.getValue() / e.getKey().densityGPerMl();
-        return ml;
-    }
-
-    private static String note(Item item, Balance balance) {
-        List<String> notes = new ArrayList<>();
-        Ingredient i = item.ingredient();
-        int loads = balance.loads(item.massG());
-        if (loads > 1) notes.add("in " + loads + " loads");
-        if (item.stock().isEmpty() && i.form() == Form.LIQUID)
-            notes.add(Words.volume(item.massG() / i.densityGPerMl()));
-        i.making().addBelowC().ifPresent(c -> notes.add("below " + Figures.plain(c) + " °C"));
-        if (i.making().addLast()) notes.add("last");
-        if (i.settles()) notes.add("settles: keep stirring");
-        return String.join(" · ", notes);
-    }
-
-    private void stocks(Shown shown) {
-        Recipe recipe = shown.recipe();
-        Balance balance = shown.outlook().brief().balance();
-        List<Node> boxes = new ArrayList<>();
-        for (Stock s : recipe.stocks()) {
-            String from = s.from().map(f -> Words.stock(recipe, recipe.stock(f))).orElse(Words.shortName(s.ingredient()));
-            Label make = Say.wrapped("first make the stock " + Words.ratio(s) + ": " + from + " "
-                    + Words.grams(s.ingredientG(), balance) + " g in " + Words.inSentence(s.diluent()) + " "
-                    + Words.grams(s.diluentG(), balance) + " g");
-            VBox box = new VBox(make);
-            Leftover.of(recipe).stream()
-                    .filter(l -> l.stock().equals(s.id()))
-                    .findFirst()
-                    .ifPresent(l -> box.getChildren()
-                            .add(Say.wrapped(Words.grams(l.leftG(), balance) + " g left over", "quiet", "small")));
-            box.getStyleClass().add("soft-box");
-            boxes.add(box);
-        }
-        stocks.getChildren().setAll(boxes);
-        Say.show(stocks, !boxes.isEmpty());
     }
 
     private void causes(Outlook o) {
@@ -193,7 +128,7 @@ public final class RecipePlace extends VBox {
             who.setAccessibleText(who.getText() + ", " + percent);
             Region filled = new Region();
             filled.getStyleClass().add("bar");
-            filled.setStyle(String.format(Locale.ROOT, "-fx-min-height: 1em; -fx-max-height: 1em; -fx-pref-width: %.2fem;", Math.max(0.3, 9 * c.share() / most)));
+            filled.setStyle(String.format(Locale.ROOT, "-fx-pref-width: %.2fem;", Math.max(0.3, 9 * c.share() / most)));
             HBox line = new HBox(filled, Say.label(percent, "small"));
             line.setAlignment(Pos.CENTER_LEFT);
             line.getStyleClass().add("gap-s");
@@ -218,10 +153,10 @@ public final class RecipePlace extends VBox {
         sentences.add(Say.heading("What holds it back"));
         List<String> said = new ArrayList<>(shown.answer().limits());
         said.addAll(shown.answer().notes());
-        if (shown.following()) said = List.of("The amounts follow; the search goes on when you rest.");
-        else if (said.isEmpty()) said = List.of("Nothing: every target lands close to its middle.");
+        if (said.isEmpty()) said.add("Nothing: every target lands close to its middle.");
         said.forEach(s -> sentences.add(Say.wrapped(s)));
         limits.getChildren().setAll(sentences);
+        Say.show(limits, true);
     }
 
     private void ways() {
@@ -236,12 +171,13 @@ public final class RecipePlace extends VBox {
         head.setAlignment(Pos.BASELINE_LEFT);
         if (looking) head.getChildren().add(Say.label("looking …", "quiet", "small"));
         if (chosen)
-            head.getChildren()
-                    .add(new Word("back to the best", () -> desk.editing().choose(java.util.Optional.empty())));
+            head.getChildren().add(new Word("back to the best", () -> desk.editing().choose(Optional.empty())));
         ways.getChildren().setAll(head, flow);
-        Say.show(ways, desk.solving().shownProperty().get() != null
-                && desk.solving().problemProperty().get().isEmpty()
-                && (looking || chosen || !cards.isEmpty()));
+        Say.show(
+                ways,
+                desk.solving().shownProperty().get() != null
+                        && desk.solving().problemProperty().get().isEmpty()
+                        && (looking || chosen || !cards.isEmpty()));
     }
 
     private Node card(Shown.Card c) {
@@ -249,8 +185,8 @@ public final class RecipePlace extends VBox {
         gauge.land(c.worstMiss());
         gauge.getStyleClass().add("in-card");
         boolean meets = c.outlook().meets();
-        Label chance = Say.label(
-                meets ? Words.times(c.chance()) + " in 100" : "✕ misses", meets ? "lands" : "missed");
+        Label chance =
+                Say.label(meets ? Words.times(c.chance()) + " in 100" : "✕ misses", meets ? "lands" : "missed");
         VBox inside = new VBox(
                 Say.label(Words.capital(c.title()), "strong"),
                 Say.label(c.weighings() + " weighings", "quiet", "small"),
@@ -261,9 +197,8 @@ public final class RecipePlace extends VBox {
         button.setGraphic(inside);
         button.getStyleClass().setAll("card", "way");
         button.setAccessibleText("Choose: " + c.title() + ", " + c.weighings() + " weighings, " + chance.getText());
-        javafx.scene.control.Tooltip.install(
-                button, new javafx.scene.control.Tooltip(Words.capital(Words.join(c.what()))));
-        button.setOnAction(e -> desk.editing().choose(java.util.Optional.of(c.key())));
+        button.setTooltip(new Tooltip(Words.capital(Words.join(c.what()))));
+        button.setOnAction(e -> desk.editing().choose(Optional.of(c.key())));
         return button;
     }
 }

@@ -69,10 +69,10 @@ public final class SpectraPlace extends VBox {
             if (held.isPresent() && now != null && now.row(held.get().nm()).isEmpty()) held = Optional.empty();
             name(sharing, range);
         });
-        desk.solving().shownProperty().addListener((p, before, now) -> surface.requestLayout());
-        desk.solving().curvesProperty().addListener((p, before, now) -> surface.requestLayout());
-        look.paletteProperty().addListener((p, before, now) -> surface.requestLayout());
-        look.emProperty().addListener((p, before, now) -> surface.requestLayout());
+        desk.solving().shownProperty().addListener((p, before, now) -> surface.redraw());
+        desk.solving().curvesProperty().addListener((p, before, now) -> surface.redraw());
+        look.paletteProperty().addListener((p, before, now) -> surface.redraw());
+        look.emProperty().addListener((p, before, now) -> surface.redraw());
     }
 
     private void name(Word sharing, Word range) {
@@ -81,7 +81,7 @@ public final class SpectraPlace extends VBox {
         range.setText(Figures.plain(r[0]) + "–" + Figures.plain(r[1]) + " nm");
         range.setAccessibleText(
                 "wavelengths drawn: " + range.getText() + (whole ? ", press for those around the targets" : ", press for all"));
-        surface.requestLayout();
+        surface.redraw();
     }
 
     /** Ends of the wavelengths that are drawn, nm. */
@@ -96,9 +96,8 @@ public final class SpectraPlace extends VBox {
         return new double[] {from, to};
     }
 
-    /** The plot as it stands on the screen. */
+    /** The plot as it stands on the screen; null before it was drawn. */
     public SpectraPlot plot() {
-        if (plot == null) surface.layoutChildren();
         return plot;
     }
 
@@ -121,12 +120,27 @@ public final class SpectraPlace extends VBox {
         return surface;
     }
 
-    private final class Surface extends Region {
+    /** The canvas alone: its own layout root, so that drawing anew lays out nothing else. */
+    private final class Drawing extends Region {
         private final Canvas canvas = new Canvas();
 
-        Surface() {
-            getChildren().add(canvas);
+        Drawing() {
+            setManaged(false);
             canvas.setManaged(false);
+            getChildren().add(canvas);
+        }
+
+        @Override
+        protected void layoutChildren() {
+            surface.draw(canvas, getWidth(), getHeight());
+        }
+    }
+
+    private final class Surface extends Region {
+        private final Drawing drawing = new Drawing();
+
+        Surface() {
+            getChildren().add(drawing);
             setFocusTraversable(true);
             setAccessibleRole(AccessibleRole.IMAGE_VIEW);
             setAccessibleRoleDescription("plots; left and right choose a target, up and down move what is wanted");
@@ -141,14 +155,23 @@ public final class SpectraPlace extends VBox {
             addEventHandler(KeyEvent.KEY_PRESSED, this::typed);
             focusedProperty().addListener((p, before, now) -> {
                 if (now && held.isEmpty()) choose(0);
-                requestLayout();
+                redraw();
             });
         }
 
         @Override
         protected void layoutChildren() {
-            double w = Math.floor(getWidth());
-            double h = Math.floor(getHeight());
+            drawing.resizeRelocate(0, 0, getWidth(), getHeight());
+            drawing.requestLayout();
+        }
+
+        void redraw() {
+            drawing.requestLayout();
+        }
+
+        private void draw(Canvas canvas, double width, double height) {
+            double w = Math.floor(width);
+            double h = Math.floor(height);
             if (canvas.getWidth() != w) canvas.setWidth(w);
             if (canvas.getHeight() != h) canvas.setHeight(h);
             if (w < 60 || h < 60 || desk.edits().now() == null) return;
@@ -171,7 +194,7 @@ public final class SpectraPlace extends VBox {
 
         private void point(double nm) {
             pointerNm = nm;
-            requestLayout();
+            redraw();
         }
 
         private void moved(MouseEvent e) {
@@ -208,7 +231,7 @@ public final class SpectraPlace extends VBox {
             dragging = false;
             hold = Optional.empty();
             desk.editing().settle();
-            requestLayout();
+            redraw();
         }
 
         private void typed(KeyEvent e) {

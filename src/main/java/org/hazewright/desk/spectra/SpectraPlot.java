@@ -25,7 +25,8 @@ public final class SpectraPlot {
     private static final double COVER_95 = 1.96;
 
     /** A target as it is drawn; {@code predictedPerCm} is NaN before there is a prediction. */
-    public record Box(double nm, Point.Quantity quantity, double wanted, double tolerance, double predictedPerCm, double miss) {}
+    public record Box(
+            double nm, Point.Quantity quantity, double wanted, double tolerance, double predictedPerCm, double miss) {}
 
     /** Which box, by what it wants. */
     public record Grip(double nm, Point.Quantity quantity) {}
@@ -59,7 +60,14 @@ public final class SpectraPlot {
      * @param hold ends of the axes to keep while a box is dragged, widened only where something would leave them
      */
     public SpectraPlot(
-            List<Box> boxes, Curves curves, View view, Optional<Ends> hold, Palette palette, double w, double h, double em) {
+            List<Box> boxes,
+            Curves curves,
+            View view,
+            Optional<Ends> hold,
+            Palette palette,
+            double w,
+            double h,
+            double em) {
         this.boxes = List.copyOf(boxes);
         this.curves = curves;
         this.view = view;
@@ -315,7 +323,8 @@ public final class SpectraPlot {
                 bestY = (top + bottom) / 2;
             }
         }
-        if (!Double.isNaN(bestX)) pen.text(name, bestX, bestY + 0.32 * em, size, false, palette.slate(), Pen.Align.CENTRE);
+        if (!Double.isNaN(bestX))
+            pen.text(name, bestX, bestY + 0.32 * em, size, false, palette.slate(), Pen.Align.CENTRE);
     }
 
     /** Indices of the curve inside the range drawn. */
@@ -375,7 +384,9 @@ public final class SpectraPlot {
         double half = 0.65 * em;
         double y = yOf(b.quantity(), b.wanted());
         double tall = Math.max(0.22 * em, Math.abs(yOf(b.quantity(), b.wanted() + b.tolerance()) - y));
-        boolean held = view.held().filter(g -> g.nm() == b.nm() && g.quantity() == b.quantity()).isPresent();
+        boolean held = view.held()
+                .filter(g -> g.nm() == b.nm() && g.quantity() == b.quantity())
+                .isPresent();
         pen.box(x - half, y - tall, 2 * half, 2 * tall, 2, null, 0, palette.amber(), held ? 0.26 * em : 0.15 * em);
         if (held) {
             pen.line(x - half - 0.5 * em, y, x - half, y, palette.amber(), 0.15 * em);
@@ -431,7 +442,14 @@ public final class SpectraPlot {
         double y = top + 1.4 * em;
         for (int k = 0; k < lines.size(); k++, y += 1.35 * em) {
             boolean head = q == Point.Quantity.MUA && k == 0;
-            pen.text(lines.get(k), left + 0.75 * em, y, size, head, head ? palette.ink() : palette.teal(), Pen.Align.LEFT);
+            pen.text(
+                    lines.get(k),
+                    left + 0.75 * em,
+                    y,
+                    size,
+                    head,
+                    head ? palette.ink() : palette.teal(),
+                    Pen.Align.LEFT);
         }
     }
 
@@ -439,15 +457,22 @@ public final class SpectraPlot {
     public String inWords() {
         StringBuilder s = new StringBuilder("Spectra from " + Figures.plain(view.fromNm()) + " to "
                 + Figures.plain(view.toNm()) + " nm, " + boxes.size() + " targets.");
-        view.held().ifPresent(g -> boxes.stream()
-                .filter(b -> b.nm() == g.nm() && b.quantity() == g.quantity())
-                .findFirst()
-                .ifPresent(b -> {
-                    s.append(" Held: ").append(Words.sign(b.quantity())).append(" at ").append(Figures.plain(b.nm()));
-                    s.append(" nm, wanted ").append(Figures.significant(b.wanted(), 4)).append(" /cm");
-                    if (!Double.isNaN(b.predictedPerCm())) s.append(", lands ").append(Words.landing(b.miss()));
-                    s.append('.');
-                }));
+        view.held()
+                .ifPresent(g -> boxes.stream()
+                        .filter(b -> b.nm() == g.nm() && b.quantity() == g.quantity())
+                        .findFirst()
+                        .ifPresent(b -> {
+                            s.append(" Held: ")
+                                    .append(Words.sign(b.quantity()))
+                                    .append(" at ")
+                                    .append(Figures.plain(b.nm()));
+                            s.append(" nm, wanted ")
+                                    .append(Figures.significant(b.wanted(), 4))
+                                    .append(" /cm");
+                            if (!Double.isNaN(b.predictedPerCm()))
+                                s.append(", lands ").append(Words.landing(b.miss()));
+                            s.append('.');
+                        }));
         return s.toString();
     }
 }

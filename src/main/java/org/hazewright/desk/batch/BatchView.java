@@ -1,0 +1,235 @@
+package org.hazewright.desk.batch;
+
+import java.util.List;
+import java.util.OptionalDouble;
+import javafx.geometry.Pos;
+import javafx.scene.Node;
+import javafx.scene.control.Button;
+import javafx.scene.control.Label;
+import javafx.scene.control.ScrollPane;
+import javafx.scene.input.KeyCode;
+import javafx.scene.input.KeyEvent;
+import javafx.scene.layout.BorderPane;
+import javafx.scene.layout.GridPane;
+import javafx.scene.layout.HBox;
+import javafx.scene.layout.Priority;
+import javafx.scene.layout.Region;
+import javafx.scene.layout.VBox;
+import org.hazewright.bench.Batch;
+import org.hazewright.bench.Correction;
+import org.hazewright.bench.Weighing;
+import org.hazewright.desk.model.MadeBatch;
+import org.hazewright.desk.model.Words;
+import org.hazewright.desk.parts.Field;
+import org.hazewright.desk.parts.Say;
+import org.hazewright.desk.parts.Word;
+import org.hazewright.mixture.Item;
+import org.hazewright.mixture.Stock;
+import org.hazewright.optics.Figures;
+
+/** The view of a batch: weighed on the left, landing and measured values in the middle, what they say on the right. */
+public final class BatchView extends BorderPane {
+    private final MadeBatch made;
+    private final VBox weighed = new VBox();
+    private final VBox says = new VBox();
+    private final VBox puts = new VBox();
+    private final Label complaint = Say.wrapped("", "error-line");
+    private final MeasuredTable table;
+
+    /** @param leave goes back to the desk */
+    public BatchView(MadeBatch made, Runnable leave) {
+        this.made = made;
+        getStyleClass().add("balance-view");
+        table = new MeasuredTable(made);
+        List.of(weighed, says, puts).forEach(v -> v.getStyleClass().add("gap-s"));
+        setTop(head(leave));
+        setLeft(column("step-column", "side-left", Say.place("Weighed"), weighed, who()));
+        VBox middle = new VBox(Say.place("Landing and measured values"), table, complaint);
+        middle.getStyleClass().addAll("place", "gap-m");
+        setCenter(scrolled(middle));
+        setRight(column("recipe-width", "side-right", Say.place("What it says"), says, puts));
+        made.batchProperty().addListener((p, before, now) -> show());
+        made.seenProperty().addListener((p, before, now) -> show());
+        made.correctionProperty().addListener((p, before, now) -> puts());
+        made.correctingProperty().addListener((p, before, now) -> puts());
+        made.complaintProperty().addListener((p, before, now) -> complain());
+        addEventFilter(KeyEvent.KEY_PRESSED, e -> {
+            if (e.getCode() != KeyCode.ESCAPE) return;
+            leave.run();
+            e.consume();
+        });
+        show();
+        complain();
+    }
+
+    private Node head(Runnable leave) {
+        Batch b = made.batchProperty().get();
+        HBox head = new HBox(
+                Say.label("Batch " + b.id(), "title"),
+                Say.quiet(b.plan().title() + " · " + b.on()),
+                Say.spring(),
+                new Word("Esc: back to the desk", leave));
+        head.getStyleClass().addAll("head", "gap-m");
+        head.setAlignment(Pos.BASELINE_LEFT);
+        return head;
+    }
+
+    private static ScrollPane scrolled(Node inside) {
+        ScrollPane scroll = new ScrollPane(inside);
+        scroll.setFitToWidth(true);
+        scroll.setHbarPolicy(ScrollPane.ScrollBarPolicy.NEVER);
+        return scroll;
+    }
+
+    private static Node column(String width, String side, Node... inside) {
+        VBox all = new VBox(inside);
+        all.getStyleClass().add("gap-m");
+        ScrollPane scroll = scrolled(all);
+        VBox.setVgrow(scroll, Priority.ALWAYS);
+        VBox column = new VBox(scroll);
+        column.getStyleClass().addAll("place", width, side);
+        return column;
+    }
+
+    private Node who() {
+        Field who = new Field(() -> made.batchProperty().get().who(), made::who, false)
+                .named("who made it")
+                .styled("boxed");
+        who.setPromptText("name or initials");
+        Field note = new Field(() -> "", text -> text.isBlank() ? java.util.Optional.empty() : made.note(text), false)
+                .named("a note on this batch")
+                .styled("boxed");
+        note.setPromptText("a note, then Enter");
+        VBox box = new VBox(Say.quiet("Made by"), who, Say.quiet("Notes"), note);
+        box.getStyleClass().add("gap-xs");
+        VBox notes = new VBox();
+        Runnable tell = () -> notes.getChildren()
+                .setAll(made.batchProperty().get().notes().stream()
+                        .map(n -> (Node) Say.wrapped("– " + n, "quiet"))
+                        .toList());
+        made.batchProperty().addListener((p, before, now) -> tell.run());
+        tell.run();
+        box.getChildren().add(notes);
+        return box;
+    }
+
+    private void show() {
+        weighed();
+        says();
+        puts();
+    }
+
+    private void complain() {
+        String words = made.complaintProperty().get();
+        complaint.setText(words.isEmpty() ? "" : "✕ " + words);
+        Say.show(complaint, !words.isEmpty());
+    }
+
+    private void weighed() {
+        Batch b = made.batchProperty().get();
+        GridPane grid = new GridPane();
+        grid.getStyleClass().add("weighed-grid");
+        grid.addRow(0, Say.label("", "quiet"), Say.label("planned g", "quiet", "small"), Say.label("weighed g", "quiet", "small"));
+        List<Weighing> all = b.weighings();
+        for (int n = 0; n < all.size(); n++) {
+            Weighing w = all.get(n);
+            OptionalDouble g = b.weighedG().get(n);
+            Label name = Say.wrapped(name(b, w));
+            GridPane.setHgrow(name, Priority.ALWAYS);
+            Label planned = Say.label(Words.grams(w.massG(), b.balance()), "quiet");
+            Label real = Say.label(g.isPresent() ? Words.grams(g.getAsDouble(), b.balance()) : "–", "lands");
+            for (Label l : List.of(planned, real)) {
+                l.setMinWidth(Region.USE_PREF_SIZE);
+                GridPane.setHalignment(l, javafx.geometry.HPos.RIGHT);
+            }
+            grid.addRow(n + 1, name, planned, real);
+        }
+        weighed.getChildren().setAll(grid);
+    }
+
+    private static String name(Batch b, Weighing w) {
+        if (w.role() == Weighing.Role.ITEM) {
+            int of = b.corrections().get(w.place());
+            return Words.item(b.plan().items().get(w.place())) + (of > 0 ? ", correction " + of : "");
+        }
+        Stock s = b.plan().stocks().get(w.place());
+        String bottle = w.from().isPresent() ? Words.stock(b.plan(), b.plan().stock(w.from().get())) : Words.shortName(w.ingredient());
+        return bottle + " for the stock " + Words.ratio(s);
+    }
+
+    private void says() {
+        says.getChildren().clear();
+        MadeBatch.Seen seen = made.seenProperty().get();
+        if (seen == null) return;
+        if (!seen.landing().isEmpty()) {
+            boolean inside = seen.landing().stream().allMatch(p -> p.inside());
+            String known = made.batchProperty().get().measured().isEmpty() ? "As weighed" : "By all that is known now";
+            String words = inside
+                    ? known + " it lands inside every tolerance " + Words.times(seen.chance()) + " times in 100."
+                    : "✕ " + known + " it misses " + seen.landing().stream().filter(p -> !p.inside()).count() + " of "
+                            + seen.landing().size() + ".";
+            says.getChildren().add(Say.wrapped(words, "headline", inside ? "strong" : "missed"));
+        }
+        seen.verdict()
+                .ifPresentOrElse(
+                        v -> {
+                            says.getChildren().add(Say.heading("Measured against predicted"));
+                            says.getChildren().add(Say.wrapped(v.sentence()));
+                        },
+                        () -> says.getChildren()
+                                .add(Say.wrapped("Nothing is measured yet. Type values beside the targets when it was.", "quiet")));
+        if (!seen.beliefs().isEmpty()) {
+            says.getChildren().add(Say.heading("What it teaches of the bottles"));
+            for (MadeBatch.Belief b : seen.beliefs())
+                says.getChildren()
+                        .add(Say.wrapped(Words.capital(b.words()) + ": " + Figures.withUncertainty(b.factor(), b.uAfter())
+                                + " times its file, known to " + Figures.significant(100 * b.uAfter(), 2) + " % in place of "
+                                + Figures.significant(100 * b.uBefore(), 2) + " %."));
+        }
+    }
+
+    private void puts() {
+        puts.getChildren().clear();
+        if (made.points().isEmpty()) return;
+        HBox head = new HBox(Say.heading("What would put it right"));
+        head.getStyleClass().add("gap-m");
+        head.setAlignment(Pos.BASELINE_LEFT);
+        puts.getChildren().add(head);
+        if (made.correctingProperty().get()) {
+            puts.getChildren().add(Say.quiet("looking …"));
+            return;
+        }
+        if (made.correctionProperty().get().isEmpty()) {
+            puts.getChildren().add(new Word("look for the least addition", made::correct).styled("strong"));
+            return;
+        }
+        Correction c = made.correctionProperty().get().get();
+        Batch b = made.batchProperty().get();
+        puts.getChildren().add(Say.wrapped(c.reason()));
+        for (Stock s : c.stocks())
+            puts.getChildren()
+                    .add(Say.wrapped("First make a stock: " + Words.grams(s.ingredientG(), b.balance()) + " g "
+                            + Words.inSentence(s.ingredient()) + " in " + Words.grams(s.diluentG(), b.balance()) + " g "
+                            + Words.inSentence(s.diluent()) + "."));
+        for (Item i : c.items()) {
+            HBox row = new HBox(Say.wrapped(Words.item(i)), Say.spring(), Say.label("+ " + Words.grams(i.massG(), b.balance()) + " g", "grams"));
+            row.setAlignment(Pos.BASELINE_LEFT);
+            puts.getChildren().add(row);
+        }
+        c.notes().forEach(n -> puts.getChildren().add(Say.wrapped("Mind: " + n, "quiet")));
+        if (c.outcome() == Correction.Outcome.ADD) {
+            puts.getChildren()
+                    .add(Say.wrapped("Then it lands " + Words.times(c.then().chance()) + " times in 100, in "
+                            + Figures.significant(c.volumeMl(), 4) + " mL.", "lands"));
+            Button go = new Button("Weigh it in ⏎");
+            go.getStyleClass().setAll("go");
+            go.setOnAction(e -> made.weighCorrection());
+            puts.getChildren().add(go);
+        }
+    }
+
+    /** The fields of measured values, for a test to type in. */
+    public MeasuredTable table() {
+        return table;
+    }
+}
