@@ -231,7 +231,8 @@ public record Batch(
     /** With the lot that was used at the weighing of that place (from 0); a stock's goes on to what is drawn from it. */
     public Batch withLot(int n, String lot) {
         if (n < 0 || n >= weighedG.size())
-            throw new Refusal("The batch " + id + " has no weighing " + (n + 1) + "; it has 1 to " + weighedG.size() + ".");
+            throw new Refusal(
+                    "The batch " + id + " has no weighing " + (n + 1) + "; it has 1 to " + weighedG.size() + ".");
         Weighing w = weighings().get(n);
         List<Stock> stocks = new ArrayList<>(plan.stocks());
         List<Item> items = new ArrayList<>(plan.items());
@@ -250,8 +251,9 @@ public record Batch(
                     items.set(k, new Item(i.ingredient(), i.stock(), number, i.massG()));
             }
         } else
-            throw new Refusal("Weighing " + (n + 1) + " of the batch " + id + " is not out of a bottle whose lot is kept ("
-                    + w.label() + "); give the lot where the bottle itself is weighed.");
+            throw new Refusal(
+                    "Weighing " + (n + 1) + " of the batch " + id + " is not out of a bottle whose lot is kept ("
+                            + w.label() + "); give the lot where the bottle itself is weighed.");
         return withPlan(recipe(stocks, items));
     }
 

@@ -68,11 +68,13 @@ public final class Correcting {
         Refusal.positive("Capacity of the vessel in mL", capacityMl);
         if (!batch.complete())
             throw new Refusal("Of the batch " + batch.id() + " " + batch.weighedCount() + " of "
-                    + batch.weighedG().size() + " weighings are filled in; weigh the rest first, it is planned to suit.");
+                    + batch.weighedG().size()
+                    + " weighings are filled in; weigh the rest first, it is planned to suit.");
         Correcting c = new Correcting(batch, shelf);
         if (capacityMl < c.vesselMl)
-            throw new Refusal("The vessel holds " + Grams.plain(c.vesselMl) + " mL already, and its capacity is said to be "
-                    + Grams.plain(capacityMl) + " mL; correct --capacity-ml.");
+            throw new Refusal(
+                    "The vessel holds " + Grams.plain(c.vesselMl) + " mL already, and its capacity is said to be "
+                            + Grams.plain(capacityMl) + " mL; correct --capacity-ml.");
         return c.find(wantedChance, capacityMl);
     }
 
@@ -169,7 +171,9 @@ public final class Correcting {
         for (int i = 1; i < pourables.size(); i++) { // the first is fresh base
             double g = grams.get()[i];
             boolean diluted = pourables.get(i).toMake().isPresent();
-            if (!diluted && g >= batch.balance().readabilityG() / 2 && g < batch.balance().smallestLoadG())
+            if (!diluted
+                    && g >= batch.balance().readabilityG() / 2
+                    && g < batch.balance().smallestLoadG())
                 small.add(pourables.get(i).label());
         }
         return small.size() > known.size()
@@ -197,9 +201,8 @@ public final class Correcting {
                     kappa[i][j] += part.getValue() * perG * learned.factor(what, p.quantity());
                 }
             }
-        double[] vessel = now.predicted().stream()
-                .mapToDouble(p -> p.perCm() * vesselMl)
-                .toArray();
+        double[] vessel =
+                now.predicted().stream().mapToDouble(p -> p.perCm() * vesselMl).toArray();
         return new Additions(points, vessel, vesselMl, kappa, ml);
     }
 
@@ -225,9 +228,10 @@ public final class Correcting {
 
     /** The lot of an ingredient that is in the vessel, so that its coefficients are those of the vessel. */
     private Ingredient asUsed(Ingredient i) {
-        for (Ingredient used : sweepIngredients()) if (used.equals(i) || used.kind().equals(i.id())) return used;
-        throw new Refusal("The vessel holds no " + i.id() + ", a part of the base " + made.base().id()
-                + ", so no fresh base can be added to it.");
+        for (Ingredient used : sweepIngredients())
+            if (used.equals(i) || used.kind().equals(i.id())) return used;
+        throw new Refusal("The vessel holds no " + i.id() + ", a part of the base "
+                + made.base().id() + ", so no fresh base can be added to it.");
     }
 
     private Set<Ingredient> sweepIngredients() {
@@ -243,7 +247,8 @@ public final class Correcting {
                 .orElseThrow(() -> new Refusal("Too little " + p.label()
                         + " to weigh would be needed, and the base has no liquid to dilute it in."));
         int ratio = from.isPresent() ? 10 : 100;
-        double grams = batch.balance().rounded(Math.max(0.5, 25 * batch.balance().smallestLoadG()));
+        double grams =
+                batch.balance().rounded(Math.max(0.5, 25 * batch.balance().smallestLoadG()));
         Stock s = new Stock(
                 p.label() + "-1-" + ratio + "-correction-" + (batch.correctionCount() + 1),
                 what,
@@ -262,7 +267,9 @@ public final class Correcting {
     private Try rounded(List<Pourable> pourables, double[] grams) {
         List<Stock> stocks = new ArrayList<>();
         List<Item> items = new ArrayList<>();
-        for (int i = pourables.size() - 1; i >= 0; i--) { // fresh base last in the list of pourables, first to weigh below
+        for (int i = pourables.size() - 1;
+                i >= 0;
+                i--) { // fresh base last in the list of pourables, first to weigh below
             Pourable p = pourables.get(i);
             if (p.stock().isPresent()) {
                 double g = batch.balance().rounded(grams[i]);
@@ -274,9 +281,7 @@ public final class Correcting {
                     double g = batch.balance().rounded(grams[i] * part.getValue());
                     Ingredient what = part.getKey();
                     if (g > 0)
-                        items.add(
-                                0,
-                                new Item(what, Optional.empty(), what.lot().map(l -> l.number()), g));
+                        items.add(0, new Item(what, Optional.empty(), what.lot().map(l -> l.number()), g));
                 }
         }
         if (items.isEmpty()) return new Try(List.of(), List.of(), made, 0, now);
@@ -316,9 +321,11 @@ public final class Correcting {
         List<String> notes = new ArrayList<>();
         Family family = made.base().family();
         if (!t.items().isEmpty() && family == Family.GEL)
-            notes.add("A gel that has set must be melted again before anything is stirred in; weigh the vessel before and after.");
+            notes.add(
+                    "A gel that has set must be melted again before anything is stirred in; weigh the vessel before and after.");
         if (!t.items().isEmpty() && (family == Family.SILICONE || family == Family.RESIN))
-            notes.add("Only before it cures: what has cured cannot be corrected. Keep to the pot life that the data sheet gives.");
+            notes.add(
+                    "Only before it cures: what has cured cannot be corrected. Keep to the pot life that the data sheet gives.");
         for (Leftover l : Leftover.of(made)) {
             double drawn = t.items().stream()
                     .filter(i -> i.stock().filter(l.stock()::equals).isPresent())
@@ -326,7 +333,8 @@ public final class Correcting {
                     .sum();
             if (drawn > l.leftG())
                 notes.add("Of the stock " + l.stock() + " " + Grams.plain(drawn) + " g are needed and "
-                        + Grams.plain(Math.max(0, l.leftG())) + " g are left; make it again in the same ratio, or add less.");
+                        + Grams.plain(Math.max(0, l.leftG()))
+                        + " g are left; make it again in the same ratio, or add less.");
         }
         return notes;
     }
@@ -343,8 +351,7 @@ public final class Correcting {
             else unpriced.add(e.getKey().id());
         }
         double chance = Outlook.of(batch.brief().orElseThrow(), plan, 8_000).chance();
-        return new Correction.Fresh(
-                grams, Weighing.of(plan).size(), cost, unpriced, chance);
+        return new Correction.Fresh(grams, Weighing.of(plan).size(), cost, unpriced, chance);
     }
 
     /** The plan without corrections. */
@@ -369,7 +376,8 @@ public final class Correcting {
                     + " mL would have to be added, and the vessel has room for "
                     + Figures.significant(capacityMl - vesselMl, 3) + " mL.";
         double reached = best.landing().chance();
-        String most = reached > now.chance() ? "At best adding reaches " + percent(reached) + ", " : "Adding does not help: ";
+        String most =
+                reached > now.chance() ? "At best adding reaches " + percent(reached) + ", " : "Adding does not help: ";
         double sure = best.landing().predicted().stream()
                 .mapToDouble(p -> p.uPerCm() / p.point().tolerancePerCm())
                 .max()

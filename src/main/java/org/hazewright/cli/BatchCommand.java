@@ -37,8 +37,8 @@ import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
-import picocli.CommandLine.Parameters;
 import picocli.CommandLine.ParameterException;
+import picocli.CommandLine.Parameters;
 import picocli.CommandLine.Spec;
 
 /** One making of a recipe, recorded in its own file and in the logbook. */
@@ -137,15 +137,17 @@ final class BatchCommand implements Runnable {
             Path in = folder != null ? folder : recipe.toAbsolutePath().getParent();
             String chosen = id != null ? id : free(in, name + "-" + day);
             if (!chosen.matches("[\\p{L}\\p{N}][\\p{L}\\p{N}._ -]{0,79}"))
-                throw new Refusal("--id is \"" + chosen + "\"; use letters, digits, dots, hyphens, underscores and blanks.");
+                throw new Refusal(
+                        "--id is \"" + chosen + "\"; use letters, digits, dots, hyphens, underscores and blanks.");
             Path file = in.resolve(chosen + ".batch.toml");
             if (Files.exists(file))
-                throw new Refusal(file + " is there already; choose another --id, or go on with: hazewright batch weigh "
-                        + file);
+                throw new Refusal(
+                        file + " is there already; choose another --id, or go on with: hazewright batch weigh " + file);
             Batch batch = Batch.open(chosen, plan, wanted, who, day);
             if (wanted.isEmpty() && !shared.quiet)
-                err.println("hazewright: no brief beside the recipe answers to it, so the batch does not know what is wanted; give it"
-                        + " with --brief.");
+                err.println(
+                        "hazewright: no brief beside the recipe answers to it, so the batch does not know what is wanted; give it"
+                                + " with --brief.");
             int status = recording.save(file, batch, shared, out, err);
             if (shared.json) BatchJson.of(batch).print(out);
             else new BatchText(batch, shared.units, out).weighings();
@@ -209,7 +211,10 @@ final class BatchCommand implements Runnable {
         @Parameters(paramLabel = "BATCH", description = "NAME.batch.toml.")
         private Path file;
 
-        @Option(names = "--item", paramLabel = "N", description = "Number of the weighing, as batch show and the sheet have it.")
+        @Option(
+                names = "--item",
+                paramLabel = "N",
+                description = "Number of the weighing, as batch show and the sheet have it.")
         private List<Integer> items = List.of();
 
         @Option(names = "--grams", paramLabel = "G", description = "Grams as weighed, one for each --item.")
@@ -232,7 +237,10 @@ final class BatchCommand implements Runnable {
                 description = "Vessel with its contents before and after heating, in g.")
         private double[] vessel;
 
-        @Option(names = "--water-back", paramLabel = "G", description = "Water given back after heating, in g (default: 0).")
+        @Option(
+                names = "--water-back",
+                paramLabel = "G",
+                description = "Water given back after heating, in g (default: 0).")
         private double waterBack;
 
         @Option(names = "--keep-plan", description = "Leave the steps still to come as they were planned.")
@@ -252,7 +260,8 @@ final class BatchCommand implements Runnable {
             Batch before = BatchReader.read(file, shelf);
             Batch batch = before;
             if (from != null) {
-                if (!isWorkbook(from)) throw new Refusal("--from is " + from + "; the filled-in sheet is a workbook (.xlsx).");
+                if (!isWorkbook(from))
+                    throw new Refusal("--from is " + from + "; the filled-in sheet is a workbook (.xlsx).");
                 FilledIn sheet = FilledIn.read(from);
                 batch = sheet.into(batch, from);
                 if (!shared.quiet) for (String note : sheet.notes()) err.println("hazewright: " + note);
@@ -263,7 +272,8 @@ final class BatchCommand implements Runnable {
             for (var lot : lots.entrySet()) batch = batch.withLot(lot.getKey() - 1, lot.getValue());
             if (vessel != null) {
                 if (vessel.length != 2)
-                    throw new Refusal("--vessel takes two weights, before and after heating, with a comma between: 512.3,498.1");
+                    throw new Refusal(
+                            "--vessel takes two weights, before and after heating, with a comma between: 512.3,498.1");
                 batch = batch.withHeating(new Heating(vessel[0], vessel[1], waterBack));
             } else if (waterBack != 0) throw new Refusal("--water-back goes with --vessel BEFORE,AFTER.");
             batch.asMade();
@@ -285,8 +295,9 @@ final class BatchCommand implements Runnable {
             List<Weighing> fresh = now.weighings();
             for (int n = 0; n < old.size(); n++)
                 if (!now.weighed(n) && old.get(n).massG() != fresh.get(n).massG())
-                    out.println("Planned anew: " + fresh.get(n).label() + " " + Grams.shown(fresh.get(n).massG(), now.balance())
-                            + " in place of " + Grams.shown(old.get(n).massG(), now.balance()) + ".");
+                    out.println("Planned anew: " + fresh.get(n).label() + " "
+                            + Grams.shown(fresh.get(n).massG(), now.balance()) + " in place of "
+                            + Grams.shown(old.get(n).massG(), now.balance()) + ".");
             now.brief()
                     .flatMap(b -> new Replan(b, now.plan(), shelf).moreBaseG(now.asMade()))
                     .ifPresent(g -> out.println("No tolerance is lost if " + Grams.shown(g, now.balance()) + " more "
@@ -315,7 +326,10 @@ final class BatchCommand implements Runnable {
         @Parameters(paramLabel = "BATCH", description = "NAME.batch.toml.")
         private Path file;
 
-        @Option(names = "--from", paramLabel = "TABLE", description = "CSV file or workbook: wavelength, µa, µs', uncertainties.")
+        @Option(
+                names = "--from",
+                paramLabel = "TABLE",
+                description = "CSV file or workbook: wavelength, µa, µs', uncertainties.")
         private Path from;
 
         @Option(
@@ -327,7 +341,10 @@ final class BatchCommand implements Runnable {
         @Option(names = "--table-unit", paramLabel = "cm|mm", description = "Unit of a table whose headings name none.")
         private Shared.Units tableUnit;
 
-        @Option(names = "--u", paramLabel = "SHARE", description = "Standard uncertainty of values that state none, as a share.")
+        @Option(
+                names = "--u",
+                paramLabel = "SHARE",
+                description = "Standard uncertainty of values that state none, as a share.")
         private Double share;
 
         @Option(names = "--method", paramLabel = "WORDS", required = true, description = "How it was measured.")
@@ -396,8 +413,9 @@ final class BatchCommand implements Runnable {
         private static List<MeasuredValue> typed(String v) {
             String[] parts = v.split(",", -1);
             if (parts.length != 5)
-                throw new Refusal("--value is \"" + v + "\"; it takes five entries with commas between, NM,MUA,U,MUSP,U, of"
-                        + " which a pair may be empty: 690,0.101,0.002,,");
+                throw new Refusal(
+                        "--value is \"" + v + "\"; it takes five entries with commas between, NM,MUA,U,MUSP,U, of"
+                                + " which a pair may be empty: 690,0.101,0.002,,");
             double nm = number(parts[0], v);
             List<MeasuredValue> list = new ArrayList<>();
             for (int k = 0; k < 2; k++) {

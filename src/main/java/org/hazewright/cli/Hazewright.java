@@ -34,6 +34,7 @@ import picocli.CommandLine.Spec;
             BatchCommand.class,
             CorrectCommand.class,
             LotCommand.class,
+            TargetsCommand.class,
             ParticlesCommand.class,
         },
         footer = {

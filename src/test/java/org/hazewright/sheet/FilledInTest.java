@@ -52,8 +52,7 @@ class FilledInTest {
 
     private String refusal(Consumer<Filled> hands) {
         Path file = sheet(hands);
-        String message =
-                assertThrows(Refusal.class, () -> FilledIn.read(file)).getMessage();
+        String message = assertThrows(Refusal.class, () -> FilledIn.read(file)).getMessage();
         assertFalse(message.contains("Exception"), message);
         return message;
     }
@@ -153,8 +152,7 @@ class FilledInTest {
         Answer other = Answers.bath();
         Batch bath = Batch.open("b", other.recipe(), Optional.of(other.brief()), "", LocalDate.of(2026, 1, 1));
         Path file = sheet(s -> s.weigh(3, 25));
-        String message = assertThrows(
-                        Refusal.class, () -> FilledIn.read(file).into(bath, file))
+        String message = assertThrows(Refusal.class, () -> FilledIn.read(file).into(bath, file))
                 .getMessage();
         assertTrue(message.contains("another recipe") && message.contains("gelatin-powder"), message);
     }
@@ -177,8 +175,7 @@ class FilledInTest {
     private void refused(byte[] bytes, String word) throws IOException {
         Path file = folder.resolve("other.xlsx");
         Files.write(file, bytes);
-        String message =
-                assertThrows(Refusal.class, () -> FilledIn.read(file)).getMessage();
+        String message = assertThrows(Refusal.class, () -> FilledIn.read(file)).getMessage();
         assertTrue(message.contains(word), message);
     }
 

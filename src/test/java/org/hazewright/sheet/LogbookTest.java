@@ -83,7 +83,8 @@ class LogbookTest {
             assertEquals(4, rows(w.getSheet("Values")), "two values of two batches");
             assertEquals(2, rows(w.getSheet("Lots")));
             XSSFSheet charts = w.getSheet("Charts");
-            String shown = charts.getDrawingPatriarch().getCharts().get(0).getCTChart().toString();
+            String shown =
+                    charts.getDrawingPatriarch().getCharts().get(0).getCTChart().toString();
             assertTrue(shown.contains("Values!$B$5:$B$8"), "the chart follows the rows");
         }
         assertTrue(Files.exists(folder.resolve("logbook.xlsx.previous")));
@@ -126,7 +127,8 @@ class LogbookTest {
                 w.write(out);
             }
         }
-        for (int k = 2; k < 6; k++) assertEquals(Optional.empty(), record(logbook, "b-" + k, k).waiting());
+        for (int k = 2; k < 6; k++)
+            assertEquals(Optional.empty(), record(logbook, "b-" + k, k).waiting());
         assertEquals(List.of("b-1", "b-2", "b-3", "b-4", "b-5"), ids(logbook));
         try (XSSFWorkbook w = open(logbook)) {
             XSSFSheet s = w.getSheet("Our batches");
@@ -137,7 +139,9 @@ class LogbookTest {
             assertEquals(
                     "a bubble at the edge",
                     s.getRow(6).getCell(0).getCellComment().getString().getString());
-            assertEquals("'Our batches'!A7", w.getSheet("My own page").getRow(0).getCell(0).getCellFormula());
+            assertEquals(
+                    "'Our batches'!A7",
+                    w.getSheet("My own page").getRow(0).getCell(0).getCellFormula());
             boolean sum = false;
             for (var row : s) for (var c : row) sum |= c.toString().equals("sum of the year");
             assertTrue(sum, "what stood below the table moved down");
