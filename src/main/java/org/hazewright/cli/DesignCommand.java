@@ -67,9 +67,8 @@ final class DesignCommand implements Callable<Integer> {
         LocalDate today = LocalDate.now();
         if (briefs.size() == 1) return print(done(briefs.get(0), work, today), today, text);
         refuseSameResults();
-        List<Outcome> outcomes = briefs.parallelStream()
-                .map(b -> outcome(b, work, today))
-                .toList();
+        List<Outcome> outcomes =
+                briefs.parallelStream().map(b -> outcome(b, work, today)).toList();
         return shared.json ? printTogether(outcomes, text, err) : printEach(outcomes, today, text, err);
     }
 
@@ -193,7 +192,8 @@ final class DesignCommand implements Callable<Integer> {
         RecipeWriter.write(recipe, answer.recipe(), SafeFile.Overwrite.KEEP_PREVIOUS);
         written.add(recipe);
         Path sheet = folder.resolve(name + ".xlsx");
-        SafeFile.write(sheet, RecipeSheet.write(answer, today, shared.tissueSpectra()), SafeFile.Overwrite.KEEP_PREVIOUS);
+        SafeFile.write(
+                sheet, RecipeSheet.write(answer, today, shared.tissueSpectra()), SafeFile.Overwrite.KEEP_PREVIOUS);
         written.add(sheet);
         return written;
     }

@@ -13,9 +13,9 @@ import java.util.concurrent.Callable;
 import org.hazewright.bench.Batch;
 import org.hazewright.bench.Measurement;
 import org.hazewright.files.BatchReader;
+import org.hazewright.files.DilutionReader;
 import org.hazewright.files.LotWriter;
 import org.hazewright.files.SafeFile;
-import org.hazewright.files.DilutionReader;
 import org.hazewright.learning.DilutionFit;
 import org.hazewright.learning.DilutionSeries;
 import org.hazewright.learning.Drift;
@@ -67,19 +67,16 @@ final class LotCommand implements Runnable {
     private static Path folder(Path out, Shared shared) {
         if (out != null) return out;
         if (shared.shelfFolder() != null) return shared.shelfFolder();
-        throw new Refusal("The shelf that comes with the program cannot be written to; say --out DIR, or --ingredients with a"
-                + " shelf of your own.");
+        throw new Refusal(
+                "The shelf that comes with the program cannot be written to; say --out DIR, or --ingredients with a"
+                        + " shelf of your own.");
     }
 
     /** The number of a lot whose file is written anew. */
     private static Lot lot(Ingredient of, String number) {
         Optional<Lot> old = of.lot();
         return new Lot(
-                of.kind(),
-                number,
-                old.flatMap(Lot::received),
-                old.flatMap(Lot::opened),
-                old.flatMap(Lot::expires));
+                of.kind(), number, old.flatMap(Lot::received), old.flatMap(Lot::opened), old.flatMap(Lot::expires));
     }
 
     /** A dilution series to a lot file. */
@@ -115,13 +112,17 @@ final class LotCommand implements Runnable {
                 description = "Share of the extinction that is scattering (default: the ingredient's; a scatterer: 1).")
         private Double albedo;
 
-        @Option(names = "--u-albedo", paramLabel = "U", description = "Its standard uncertainty (default: ${DEFAULT-VALUE}).")
+        @Option(
+                names = "--u-albedo",
+                paramLabel = "U",
+                description = "Its standard uncertainty (default: ${DEFAULT-VALUE}).")
         private double uAlbedo = 0.02;
 
         @Option(
                 names = "--u-common",
                 paramLabel = "SHARE",
-                description = "Uncertainty that all dilutions share: their stock, the cell (default: ${DEFAULT-VALUE}).")
+                description =
+                        "Uncertainty that all dilutions share: their stock, the cell (default: ${DEFAULT-VALUE}).")
         private double uCommon = 0.005;
 
         @Option(names = "--on", paramLabel = "DAY", description = "Day of the series (default: today).")
@@ -134,14 +135,19 @@ final class LotCommand implements Runnable {
         public Integer call() {
             Shelf shelf = shared.shelf();
             Ingredient parent = shelf.require(of);
-            if (!LotWriter.canBeLot(parent)) throw new Refusal(of + " is a base; lots are fitted of what is added to one.");
+            if (!LotWriter.canBeLot(parent))
+                throw new Refusal(of + " is a base; lots are fitted of what is added to one.");
             Ingredient water = shelf.require(diluent);
-            boolean scatterer = parent.part() == Part.SCATTERER && parent.scattering().isPresent();
+            boolean scatterer =
+                    parent.part() == Part.SCATTERER && parent.scattering().isPresent();
             double share = albedo != null
                     ? albedo
-                    : scatterer ? 1 : parent.absorption().map(Absorption::albedo).orElse(0.0);
+                    : scatterer
+                            ? 1
+                            : parent.absorption().map(Absorption::albedo).orElse(0.0);
             double uShare = share == 0 || share == 1 ? 0 : uAlbedo;
-            DilutionReader.About about = new DilutionReader.About(parent, water.densityGPerMl(), share, uShare, uCommon);
+            DilutionReader.About about =
+                    new DilutionReader.About(parent, water.densityGPerMl(), share, uShare, uCommon);
             DilutionSeries read = BatchCommand.isWorkbook(series)
                     ? DilutionReader.read(FirstPage.table(series), about)
                     : DilutionReader.read(series, about);
@@ -149,22 +155,25 @@ final class LotCommand implements Runnable {
             LocalDate day = BatchCommand.day(on, "--on");
             Source source = new Source(
                     Source.Basis.MEASURED,
-                    "Dilution series " + series.getFileName() + " in " + diluent + " of " + day + ", fitted with the shelf's " + of
-                            + ".");
+                    "Dilution series " + series.getFileName() + " in " + diluent + " of " + day
+                            + ", fitted with the shelf's " + of + ".");
             NewLot fresh = new NewLot(LotWriter.id(parent.kind(), number), lot(parent, number), source);
             Ingredient lot;
             String strength;
             if (scatterer) {
-                double n = new Mixture(Map.of(water, 1.0), 22).hostIndex(fit.wavelengths().get(0).wavelengthNm());
+                double n = new Mixture(Map.of(water, 1.0), 22)
+                        .hostIndex(fit.wavelengths().get(0).wavelengthNm());
                 DilutionFit.Magnitude m = fit.magnitudeOf(parent, n, 22);
                 lot = fresh.scatterer(parent, m);
                 strength = "Measured over modelled: " + Figures.withUncertainty(m.ratio(), m.u()) + "; the shape "
-                        + (m.pValue() < 0.05 ? "does NOT agree" : "agrees") + " (χ² " + Figures.significant(m.chiSquared(), 3)
+                        + (m.pValue() < 0.05 ? "does NOT agree" : "agrees") + " (χ² "
+                        + Figures.significant(m.chiSquared(), 3)
                         + " of " + m.degreesOfFreedom() + ").";
             } else {
-                lot = fresh.absorber(parent, fit, parent.absorption().map(Absorption::g).orElse(0.0));
-                strength = "Relative standard uncertainty " + Figures.significant(100 * fit.relativeU(), 2) + " %, of which "
-                        + Figures.significant(100 * fit.shared(), 2) + " % from the dilutions.";
+                lot = fresh.absorber(
+                        parent, fit, parent.absorption().map(Absorption::g).orElse(0.0));
+                strength = "Relative standard uncertainty " + Figures.significant(100 * fit.relativeU(), 2)
+                        + " %, of which " + Figures.significant(100 * fit.shared(), 2) + " % from the dilutions.";
             }
             Path folder = folder(out, shared);
             List<Path> written = new ArrayList<>(LotWriter.write(folder, lot, fit.warnings()));
@@ -238,13 +247,17 @@ final class LotCommand implements Runnable {
         @Parameters(paramLabel = "BATCH", arity = "1..*", description = "Measured batches.")
         private List<Path> files;
 
-        @Option(names = "--of", paramLabel = "INGREDIENT", description = "Only this bottle, by the id of its ingredient.")
+        @Option(
+                names = "--of",
+                paramLabel = "INGREDIENT",
+                description = "Only this bottle, by the id of its ingredient.")
         private List<String> of = List.of();
 
         @Option(
                 names = "--number",
                 paramLabel = "NUMBER",
-                description = "Number of the new lot; with one --of (default: the old number and the day of the last measurement).")
+                description =
+                        "Number of the new lot; with one --of (default: the old number and the day of the last measurement).")
         private String number;
 
         @Option(names = "--anyway", description = "Write lot files although the measurements are hard to believe.")
@@ -255,7 +268,8 @@ final class LotCommand implements Runnable {
 
         @Override
         public Integer call() {
-            if (number != null && of.size() != 1) throw new Refusal("--number names one lot; say which bottle with one --of.");
+            if (number != null && of.size() != 1)
+                throw new Refusal("--number names one lot; say which bottle with one --of.");
             Shelf shelf = shared.shelf();
             List<MeasuredBatch> batches = new ArrayList<>();
             for (Path file : files) {
@@ -321,7 +335,10 @@ final class LotCommand implements Runnable {
                         "Learned from "
                                 + String.join(
                                         ", ",
-                                        batches.stream().map(MeasuredBatch::name).distinct().toList())
+                                        batches.stream()
+                                                .map(MeasuredBatch::name)
+                                                .distinct()
+                                                .toList())
                                 + " up to " + last
                                 + ", beginning at the figures of " + i.id() + ".");
                 NewLot lot = new NewLot(LotWriter.id(i.kind(), fresh), lot(i, fresh), source);
@@ -370,8 +387,9 @@ final class LotCommand implements Runnable {
                     if (tighter) found.add(i);
                 }
             if (found.isEmpty())
-                throw new Refusal("These batches say nothing new of " + (of.isEmpty() ? "any bottle" : String.join(", ", of))
-                        + ": their values are less certain than the files. Measure better, or more often.");
+                throw new Refusal(
+                        "These batches say nothing new of " + (of.isEmpty() ? "any bottle" : String.join(", ", of))
+                                + ": their values are less certain than the files. Measure better, or more often.");
             return found;
         }
 

@@ -89,8 +89,12 @@ public final class Window {
         whole.getChildren().add(places);
         lay();
         desk.shelfProperty().addListener((p, before, now) -> lay());
-        desk.solving().faultProperty().addListener((p, before, now) -> now.ifPresent(f -> desk.notices()
-                .tell(Notice.wrong("fault", "This is a fault of the program, not of your files; nothing was overwritten. " + f))));
+        desk.solving()
+                .faultProperty()
+                .addListener((p, before, now) -> now.ifPresent(f -> desk.notices()
+                        .tell(Notice.wrong(
+                                "fault",
+                                "This is a fault of the program, not of your files; nothing was overwritten. " + f))));
         desk.weighingProperty().addListener((p, before, now) -> turn());
         desk.madeProperty().addListener((p, before, now) -> turn());
         Scene scene = new Scene(whole, 1440, 900);
@@ -101,8 +105,10 @@ public final class Window {
         stage.setMinWidth(900);
         stage.setMinHeight(560);
         stage.setTitle("Hazewright");
-        desk.edits().nowProperty().addListener((p, before, now) -> stage.setTitle(
-                now == null ? "Hazewright" : now.title() + " – Hazewright"));
+        desk.edits()
+                .nowProperty()
+                .addListener(
+                        (p, before, now) -> stage.setTitle(now == null ? "Hazewright" : now.title() + " – Hazewright"));
         stage.setOnCloseRequest(e -> {
             if (!desk.papers().changedProperty().get()) return;
             e.consume();
@@ -114,8 +120,7 @@ public final class Window {
         stage.show();
         desk.edits().nowProperty().addListener(new javafx.beans.value.ChangeListener<>() {
             @Override
-            public void changed(
-                    javafx.beans.value.ObservableValue<? extends Draft> p, Draft before, Draft now) {
+            public void changed(javafx.beans.value.ObservableValue<? extends Draft> p, Draft before, Draft now) {
                 desk.edits().nowProperty().removeListener(this);
                 brief.focusFirst();
             }
@@ -134,7 +139,8 @@ public final class Window {
                     .tell(Notice.asked(
                             "shelf",
                             shelf.refused().size() == 1
-                                    ? "One file of the shelf cannot be used: " + shelf.refused().get(0)
+                                    ? "One file of the shelf cannot be used: "
+                                            + shelf.refused().get(0)
                                     : shelf.refused().size() + " files of the shelf cannot be used; the first: "
                                             + shelf.refused().get(0),
                             new Notice.Way("read it again", desk::readShelfAgain),
@@ -165,18 +171,26 @@ public final class Window {
         VBox box = new VBox(
                 Say.label("There is no shelf to work from", "headline"),
                 Say.wrapped(shelf.problem().orElse("")),
-                Say.wrapped("A shelf is a folder with one file for each ingredient; a recipe is made of what is on it.", "quiet"));
-        for (String words : shelf.refused().subList(0, Math.min(8, shelf.refused().size())))
+                Say.wrapped(
+                        "A shelf is a folder with one file for each ingredient; a recipe is made of what is on it.",
+                        "quiet"));
+        for (String words :
+                shelf.refused().subList(0, Math.min(8, shelf.refused().size())))
             box.getChildren().add(Say.wrapped("✕ " + words, "missed"));
         HBox ways = new HBox();
         ways.getStyleClass().add("gap-m");
         if (shelf.folder().isPresent()) {
-            ways.getChildren().add(new Word("use the shelf of the program", () -> desk.useShelf(Optional.empty())).styled("strong"));
+            ways.getChildren()
+                    .add(new Word("use the shelf of the program", () -> desk.useShelf(Optional.empty()))
+                            .styled("strong"));
             ways.getChildren().add(new Word("read it again", desk::readShelfAgain).styled("strong"));
         }
-        ways.getChildren().add(new Word("choose a folder…", () -> chooser.folder("Choose the folder of a shelf")
-                        .ifPresent(p -> desk.useShelf(Optional.of(p))))
-                .styled("strong"));
+        ways.getChildren()
+                .add(new Word(
+                                "choose a folder…",
+                                () -> chooser.folder("Choose the folder of a shelf")
+                                        .ifPresent(p -> desk.useShelf(Optional.of(p))))
+                        .styled("strong"));
         box.getChildren().add(ways);
         box.getStyleClass().addAll("place", "gap-m");
         box.setMaxWidth(720);
@@ -197,7 +211,11 @@ public final class Window {
             batch.requestFocus();
         } else if (shelfOpen) {
             ShelfView view = new ShelfView(
-                    desk.shelfRoom(), ShelfState.place(desk.shelfProperty().get().folder()), look, chooser, () -> shelf(false));
+                    desk.shelfRoom(),
+                    ShelfState.place(desk.shelfProperty().get().folder()),
+                    look,
+                    chooser,
+                    () -> shelf(false));
             center(view, false);
             view.requestFocus();
         } else if (keysOpen) {
@@ -255,8 +273,9 @@ public final class Window {
         on(scene, "Shift+F6", () -> nextPlace(-1));
         scene.addEventFilter(javafx.scene.input.KeyEvent.KEY_PRESSED, e -> {
             boolean undo = new KeyCodeCombination(KeyCode.Z, KeyCombination.SHORTCUT_DOWN).match(e);
-            boolean redo = new KeyCodeCombination(KeyCode.Z, KeyCombination.SHORTCUT_DOWN, KeyCombination.SHIFT_DOWN).match(e)
-                    || new KeyCodeCombination(KeyCode.Y, KeyCombination.SHORTCUT_DOWN).match(e);
+            boolean redo =
+                    new KeyCodeCombination(KeyCode.Z, KeyCombination.SHORTCUT_DOWN, KeyCombination.SHIFT_DOWN).match(e)
+                            || new KeyCodeCombination(KeyCode.Y, KeyCombination.SHORTCUT_DOWN).match(e);
             if (!undo && !redo) return;
             e.consume();
             if (desk.weighingProperty().get().isPresent()) {
@@ -282,7 +301,8 @@ public final class Window {
             e.consume();
         });
         scene.setOnDragDropped(e -> {
-            boolean some = e.getDragboard().hasFiles() && !e.getDragboard().getFiles().isEmpty();
+            boolean some =
+                    e.getDragboard().hasFiles() && !e.getDragboard().getFiles().isEmpty();
             if (some) deeds.open(e.getDragboard().getFiles().get(0).toPath());
             e.setDropCompleted(some);
             e.consume();
@@ -379,7 +399,11 @@ public final class Window {
         public void saveAs() {
             chooser.save("Save the brief as", desk.edits().now().name() + ".brief.toml", "Briefs", ".brief.toml")
                     .ifPresent(p -> desk.papers()
-                            .saveAs(named(p), Optional.ofNullable(desk.solving().shownProperty().get()), () -> {}));
+                            .saveAs(
+                                    named(p),
+                                    Optional.ofNullable(
+                                            desk.solving().shownProperty().get()),
+                                    () -> {}));
         }
 
         @Override
@@ -406,8 +430,8 @@ public final class Window {
 
         /** Draws the spectra in the room that paper has for them. */
         private Consumer<Pen> spectraOnPaper() {
-            SpectraPlot plot = spectra.picture(
-                    Palette.LIGHT, RecipePaper.spectraWidth(), RecipePaper.spectraHeight(), 9.5);
+            SpectraPlot plot =
+                    spectra.picture(Palette.LIGHT, RecipePaper.spectraWidth(), RecipePaper.spectraHeight(), 9.5);
             return plot::draw;
         }
 
@@ -422,7 +446,8 @@ public final class Window {
 
         @Override
         public void print() {
-            settled().flatMap(s -> Printing.print(stage, s.outlook(), s.answer(), spectraOnPaper()))
+            settled()
+                    .flatMap(s -> Printing.print(stage, s.outlook(), s.answer(), spectraOnPaper()))
                     .ifPresent(words -> desk.notices()
                             .tell(Notice.asked(
                                     "print",
@@ -437,7 +462,8 @@ public final class Window {
                 ClipboardContent content = new ClipboardContent();
                 content.putString(text);
                 Clipboard.getSystemClipboard().setContent(content);
-                desk.notices().tell(Notice.told("copied", "The grams are on the clipboard; paste them into a spreadsheet."));
+                desk.notices()
+                        .tell(Notice.told("copied", "The grams are on the clipboard; paste them into a spreadsheet."));
             });
         }
 
@@ -476,7 +502,8 @@ public final class Window {
     }
 
     private static Optional<Node> first(Node in) {
-        if (in.isFocusTraversable() && in.isVisible() && !in.isDisabled() && !(in instanceof ScrollPane)) return Optional.of(in);
+        if (in.isFocusTraversable() && in.isVisible() && !in.isDisabled() && !(in instanceof ScrollPane))
+            return Optional.of(in);
         if (!(in instanceof Parent p) || !in.isVisible()) return Optional.empty();
         for (Node child : p.getChildrenUnmodifiable()) {
             Optional<Node> found = first(child);

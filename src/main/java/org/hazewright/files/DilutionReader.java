@@ -16,7 +16,8 @@ public final class DilutionReader {
     private DilutionReader() {}
 
     /** What the table does not say of what was diluted and how. */
-    public record About(Ingredient ingredient, double diluentDensityGPerMl, double albedo, double uAlbedo, double uCommon) {}
+    public record About(
+            Ingredient ingredient, double diluentDensityGPerMl, double albedo, double uAlbedo, double uCommon) {}
 
     public static DilutionSeries read(Path csv, About about) {
         return read(CsvTable.read(csv), about);
@@ -24,7 +25,13 @@ public final class DilutionReader {
 
     public static DilutionSeries read(CsvTable table, About about) {
         table.refuseUnknown(
-                "concentration_g_per_ml", "mass_fraction", "path_mm", "wavelength_nm", "transmission", "absorbance", "u");
+                "concentration_g_per_ml",
+                "mass_fraction",
+                "path_mm",
+                "wavelength_nm",
+                "transmission",
+                "absorbance",
+                "u");
         String amount = table.oneOf("concentration_g_per_ml", "mass_fraction");
         String signal = table.oneOf("transmission", "absorbance");
         double[] c = table.column(amount);

@@ -63,7 +63,8 @@ public final class IngredientWriter {
                 throw new Refusal("The id “" + id + "” is also the file's name: small letters, digits and hyphens.");
             if (families.isEmpty()) throw new Refusal("Tick at least one kind of base that it mixes into.");
             if (absorption.isEmpty() && scattering.isEmpty())
-                throw new Refusal("Give a table of its absorption, or its scattering; without either it does nothing to light.");
+                throw new Refusal(
+                        "Give a table of its absorption, or its scattering; without either it does nothing to light.");
         }
     }
 
@@ -84,7 +85,8 @@ public final class IngredientWriter {
         SafeFile.write(file, toml(i), SafeFile.Overwrite.NEVER);
         written.add(0, file);
         Optional<FileRefusal> refused = ShelfReader.readLenient(shelfFolder).refusals().stream()
-                .filter(r -> r.path().endsWith(i.id() + ".toml") || r.path().endsWith(table.getFileName().toString()))
+                .filter(r -> r.path().endsWith(i.id() + ".toml")
+                        || r.path().endsWith(table.getFileName().toString()))
                 .findFirst();
         if (refused.isPresent()) {
             for (Path p : written)
@@ -112,9 +114,13 @@ public final class IngredientWriter {
         out.append("form = ").append(TomlText.text(i.form().word())).append('\n');
         number(out, "density_g_per_ml", i.densityGPerMl());
         i.pricePerG().ifPresent(v -> number(out, "price_per_g", v));
-        out.append("\n[source]\nbasis = ").append(TomlText.text(i.source().basis().word())).append('\n');
+        out.append("\n[source]\nbasis = ")
+                .append(TomlText.text(i.source().basis().word()))
+                .append('\n');
         if (!i.source().citation().isEmpty())
-            out.append("citation = ").append(TomlText.text(i.source().citation())).append('\n');
+            out.append("citation = ")
+                    .append(TomlText.text(i.source().citation()))
+                    .append('\n');
         out.append("\n[uncertainty]\n");
         number(out, "absorption", i.uncertainty().absorption());
         number(out, "scattering", i.uncertainty().scattering());
@@ -143,12 +149,20 @@ public final class IngredientWriter {
         out.append("# quantity: ")
                 .append(t.albedo() > 0 ? "extinction" : "absorption")
                 .append(" coefficient, base e, ")
-                .append(t.basis() == Basis.NEAT ? "of the ingredient as bought, 1/cm" : "by mass in the phantom's volume, cm2/g")
+                .append(
+                        t.basis() == Basis.NEAT
+                                ? "of the ingredient as bought, 1/cm"
+                                : "by mass in the phantom's volume, cm2/g")
                 .append('\n');
-        out.append(TomlText.comment("source: " + i.source().basis().word() + " " + i.source().citation())).append('\n');
+        out.append(TomlText.comment("source: " + i.source().basis().word() + " "
+                        + i.source().citation()))
+                .append('\n');
         out.append("wavelength_nm,").append(t.basis().column).append('\n');
         for (int k = 0; k < t.wavelengthNm().length; k++)
-            out.append(TomlText.number(t.wavelengthNm()[k])).append(',').append(TomlText.number(t.value()[k])).append('\n');
+            out.append(TomlText.number(t.wavelengthNm()[k]))
+                    .append(',')
+                    .append(TomlText.number(t.value()[k]))
+                    .append('\n');
         return out.toString();
     }
 
@@ -179,7 +193,11 @@ public final class IngredientWriter {
                 rows.add(new double[] {nm, v});
             } catch (NumberFormatException | ArrayIndexOutOfBoundsException e) {
                 if (rows.isEmpty()) continue; // a heading
-                throw new FileRefusal(file.toString(), n, 1, "Here should stand a wavelength in nm and a value: “" + line.strip() + "”.");
+                throw new FileRefusal(
+                        file.toString(),
+                        n,
+                        1,
+                        "Here should stand a wavelength in nm and a value: “" + line.strip() + "”.");
             }
         }
         if (rows.size() < 2)
@@ -207,7 +225,8 @@ public final class IngredientWriter {
                 }
                 return null;
             } catch (java.io.IOException e) {
-                throw new Refusal("The shelf of the program could not be copied to " + folder + " (" + e.getMessage() + ").");
+                throw new Refusal(
+                        "The shelf of the program could not be copied to " + folder + " (" + e.getMessage() + ").");
             }
         });
     }

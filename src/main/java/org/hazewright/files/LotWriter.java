@@ -45,7 +45,8 @@ public final class LotWriter {
                 .append("\n\n[uncertainty]\n");
         number(out, "absorption", lot.uncertainty().absorption());
         number(out, "scattering", lot.uncertainty().scattering());
-        if (lot.uncertainty().correlation() != 0) number(out, "correlation", lot.uncertainty().correlation());
+        if (lot.uncertainty().correlation() != 0)
+            number(out, "correlation", lot.uncertainty().correlation());
         // A scatterer's small own absorption stays its ingredient's where nothing was learned of it.
         if (lot.absorption().isPresent()) {
             Absorption a = lot.absorption().get();
@@ -82,9 +83,11 @@ public final class LotWriter {
 
     private static String table(Ingredient lot, Absorption a) {
         StringBuilder out = new StringBuilder();
-        out.append(TomlText.comment("material: " + lot.name() + ", lot " + lot.lot().orElseThrow().number()))
+        out.append(TomlText.comment("material: " + lot.name() + ", lot "
+                        + lot.lot().orElseThrow().number()))
                 .append('\n');
-        out.append("# quantity: extinction by mass in the phantom's volume, base e; the lot's file says which share is scattering\n");
+        out.append(
+                "# quantity: extinction by mass in the phantom's volume, base e; the lot's file says which share is scattering\n");
         out.append(TomlText.comment("source: " + lot.source().citation())).append('\n');
         out.append("wavelength_nm,mua_cm2_per_g\n");
         double[] nm = a.table().wavelengthsNm();

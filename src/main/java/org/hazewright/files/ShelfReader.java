@@ -72,8 +72,7 @@ public final class ShelfReader {
      * files. {@code folder} null is the shelf of the program. An id that is not there is left to {@link Shelf#require}.
      */
     public static Shelf readOnly(Path folder, Collection<String> ids) {
-        if (folder == null)
-            return inShipped(root -> new ShelfReader(new ShelfFolder(root, SHIPPED)).readPart(ids));
+        if (folder == null) return inShipped(root -> new ShelfReader(new ShelfFolder(root, SHIPPED)).readPart(ids));
         return new ShelfReader(new ShelfFolder(folder, folder.toString())).readPart(ids);
     }
 
@@ -122,17 +121,20 @@ public final class ShelfReader {
         while (!ask.isEmpty()) {
             String id = ask.pop();
             if (!there.containsKey(id) || !wanted.add(id)) continue;
-            TomlPage page = TomlPage.of(TextFile.read(there.get(id).file(), there.get(id).shown()));
+            TomlPage page = TomlPage.of(
+                    TextFile.read(there.get(id).file(), there.get(id).shown()));
             madeOf.add(id);
             page.maybeText("lot_of").ifPresent(ask::add);
             page.maybeText("index").ifPresent(madeOf::add);
             page.table("scattering").flatMap(s -> s.maybeText("particle")).ifPresent(madeOf::add);
-            for (TomlPage part : page.tables("blend")) part.maybeText("ingredient").ifPresent(ask::add);
+            for (TomlPage part : page.tables("blend"))
+                part.maybeText("ingredient").ifPresent(ask::add);
         }
         List<ShelfFolder.TextFileName> materialFiles = folder.tomlFiles("materials").stream()
                 .filter(f -> madeOf.contains(f.id()))
                 .toList();
-        Shelf part = read(materialFiles, wanted.stream().map(there::get).toList(), false).orFirstRefusal();
+        Shelf part = read(materialFiles, wanted.stream().map(there::get).toList(), false)
+                .orFirstRefusal();
         return new Shelf(part.place(), part.ingredients(), part.materials(), there.keySet());
     }
 

@@ -47,7 +47,9 @@ public record InstrumentReadings(Phantom phantom, List<Foreseen> foreseen, List<
                     Optional<String> gap = phantom.gap(s);
                     if (gap.isPresent()) return new Tried(null, s.title() + ": " + gap.get());
                     if (s.kind() == SetUp.Kind.SLAB)
-                        return new Tried(null, s.title() + ": transport takes its time; the command hazewright readings has it.");
+                        return new Tried(
+                                null,
+                                s.title() + ": transport takes its time; the command hazewright readings has it.");
                     try {
                         SetUp placed = phantom.placed(s);
                         if (needsPackets(phantom, placed))

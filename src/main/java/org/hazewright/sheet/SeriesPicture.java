@@ -76,11 +76,23 @@ public final class SeriesPicture {
             text(xTitle, left + width / 2 - 8 * xTitle.length() / 2, top + height + 52, 14, false, Palette.QUIET);
             for (double v = this.x0; v <= this.x1 * (1 + 1e-9); v += xUnit) {
                 rule(x(v), top, x(v), top + height);
-                text(Figures.plain(Double.parseDouble(Figures.significant(v, 6))), x(v) - 16, top + height + 22, 13, false, Palette.QUIET);
+                text(
+                        Figures.plain(Double.parseDouble(Figures.significant(v, 6))),
+                        x(v) - 16,
+                        top + height + 22,
+                        13,
+                        false,
+                        Palette.QUIET);
             }
             for (double v = 0; v <= this.y1 * (1 + 1e-9); v += yUnit) {
                 rule(left, y(v), left + width, y(v));
-                text(Figures.plain(Double.parseDouble(Figures.significant(v, 6))), left - 52, y(v) + 5, 13, false, Palette.QUIET);
+                text(
+                        Figures.plain(Double.parseDouble(Figures.significant(v, 6))),
+                        left - 52,
+                        y(v) + 5,
+                        13,
+                        false,
+                        Palette.QUIET);
             }
         }
 
@@ -109,7 +121,10 @@ public final class SeriesPicture {
             g.setColor(colour(INKS[k]));
             g.setStroke(new BasicStroke(2));
             g.draw(new Line2D.Double(
-                    panel.x(0), panel.y(Math.max(0, e.line().at(0))), panel.x(most), panel.y(e.line().at(most))));
+                    panel.x(0),
+                    panel.y(Math.max(0, e.line().at(0))),
+                    panel.x(most),
+                    panel.y(e.line().at(most))));
             for (StraightLine.FitPoint p : e.line().points()) {
                 dot(panel.x(p.x()), panel.y(p.y()), 4, INKS[k], true);
                 if (p.outlier()) dot(panel.x(p.x()), panel.y(p.y()), 9, Palette.BRICK, false);

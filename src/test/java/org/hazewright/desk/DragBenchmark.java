@@ -67,7 +67,8 @@ public final class DragBenchmark {
             for (int k : asked.keySet()) if (value[k] == has) upTo = k;
             if (upTo <= drawn[0]) return;
             long now = System.nanoTime();
-            for (int k : asked.headMap(upTo, true).keySet()) if (k > drawn[0]) latencies.add((now - asked.get(k)) / 1e6);
+            for (int k : asked.headMap(upTo, true).keySet())
+                if (k > drawn[0]) latencies.add((now - asked.get(k)) / 1e6);
             drawn[0] = upTo;
         };
         ConcurrentLinkedQueue<Double> blocked = new ConcurrentLinkedQueue<>();
@@ -83,7 +84,13 @@ public final class DragBenchmark {
             Platform.runLater(() -> {
                 asked.put(move, System.nanoTime());
                 window.desk().editing().drag(row.wavelengthNm(), Point.Quantity.MUA, to);
-                value[move] = window.desk().edits().now().row(row.wavelengthNm()).orElseThrow().muaPerCm().orElseThrow();
+                value[move] = window.desk()
+                        .edits()
+                        .now()
+                        .row(row.wavelengthNm())
+                        .orElseThrow()
+                        .muaPerCm()
+                        .orElseThrow();
             });
             next += EVERY_NS;
             long left = next - System.nanoTime();
@@ -92,7 +99,9 @@ public final class DragBenchmark {
         Thread.sleep(400);
         watch.interrupt();
         watch.join();
-        double ui = (Stagehand.onUi(() -> ManagementFactory.getThreadMXBean().getCurrentThreadCpuTime()) - uiBefore) / 1e6 / moves;
+        double ui = (Stagehand.onUi(() -> ManagementFactory.getThreadMXBean().getCurrentThreadCpuTime()) - uiBefore)
+                / 1e6
+                / moves;
         double all = (cpu() - allBefore) / 1e6 / moves;
         Stagehand.ui(() -> {
             window.stage().getScene().removePostLayoutPulseListener(pulse);
@@ -121,14 +130,22 @@ public final class DragBenchmark {
     }
 
     private static void report(Run run) {
-        say("drag, edit to redrawn: %d moves, median %.1f ms, 99 %% %.1f ms, most %.1f ms", run.latenciesMs.length, at(run.latenciesMs, 0.5), at(run.latenciesMs, 0.99), at(run.latenciesMs, 1));
-        say("processor time: %.2f ms a move on the interface thread, %.2f ms on all threads", run.uiMsPerMove, run.allMsPerMove);
+        say(
+                "drag, edit to redrawn: %d moves, median %.1f ms, 99 %% %.1f ms, most %.1f ms",
+                run.latenciesMs.length, at(run.latenciesMs, 0.5), at(run.latenciesMs, 0.99), at(run.latenciesMs, 1));
+        say(
+                "processor time: %.2f ms a move on the interface thread, %.2f ms on all threads",
+                run.uiMsPerMove, run.allMsPerMove);
         long over = Arrays.stream(run.blockedMs).filter(ms -> ms > 16).count();
-        say("interface thread: a moment was had after %.2f ms (median), %.1f ms (99 %%), %.1f ms at most; %d of %d above 16 ms", at(run.blockedMs, 0.5), at(run.blockedMs, 0.99), at(run.blockedMs, 1), over, run.blockedMs.length);
+        say(
+                "interface thread: a moment was had after %.2f ms (median), %.1f ms (99 %%), %.1f ms at most; %d of %d above 16 ms",
+                at(run.blockedMs, 0.5), at(run.blockedMs, 0.99), at(run.blockedMs, 1), over, run.blockedMs.length);
     }
 
     private static double at(double[] sorted, double share) {
-        return sorted.length == 0 ? Double.NaN : sorted[(int) Math.min(sorted.length - 1, Math.floor(share * sorted.length))];
+        return sorted.length == 0
+                ? Double.NaN
+                : sorted[(int) Math.min(sorted.length - 1, Math.floor(share * sorted.length))];
     }
 
     private static void idle() throws InterruptedException {
@@ -140,16 +157,23 @@ public final class DragBenchmark {
     }
 
     private static long cpu() {
-        return ((com.sun.management.OperatingSystemMXBean) ManagementFactory.getOperatingSystemMXBean()).getProcessCpuTime();
+        return ((com.sun.management.OperatingSystemMXBean) ManagementFactory.getOperatingSystemMXBean())
+                .getProcessCpuTime();
     }
 
     private static void memory() throws IOException {
         System.gc();
         var heap = ManagementFactory.getMemoryMXBean().getHeapMemoryUsage();
         String resident = Files.exists(Path.of("/proc/self/status"))
-                ? Files.readAllLines(Path.of("/proc/self/status")).stream().filter(l -> l.startsWith("VmRSS")).findFirst().orElse("").replaceAll("\\s+", " ")
+                ? Files.readAllLines(Path.of("/proc/self/status")).stream()
+                        .filter(l -> l.startsWith("VmRSS"))
+                        .findFirst()
+                        .orElse("")
+                        .replaceAll("\\s+", " ")
                 : "";
-        say("memory: heap in use %d MiB, committed %d MiB; %s", heap.getUsed() >> 20, heap.getCommitted() >> 20, resident);
+        say(
+                "memory: heap in use %d MiB, committed %d MiB; %s",
+                heap.getUsed() >> 20, heap.getCommitted() >> 20, resident);
     }
 
     private static void say(String form, Object... values) {

@@ -22,14 +22,13 @@ final class Hand {
     /** Letters, digits and the signs that numbers are made of. */
     void type(String text) {
         for (char c : text.toCharArray()) {
-            KeyCode key =
-                    switch (c) {
-                        case '.' -> KeyCode.PERIOD;
-                        case ',' -> KeyCode.COMMA;
-                        case ' ' -> KeyCode.SPACE;
-                        case '-' -> KeyCode.MINUS;
-                        default -> KeyCode.getKeyCode(String.valueOf(Character.toUpperCase(c)));
-                    };
+            KeyCode key = switch (c) {
+                case '.' -> KeyCode.PERIOD;
+                case ',' -> KeyCode.COMMA;
+                case ' ' -> KeyCode.SPACE;
+                case '-' -> KeyCode.MINUS;
+                default -> KeyCode.getKeyCode(String.valueOf(Character.toUpperCase(c)));
+            };
             Stagehand.ui(() -> robot.keyType(key));
         }
         Stagehand.pulse();

@@ -36,19 +36,23 @@ public final class Screenshots {
         Path memory = Files.createTempDirectory("memory");
         Window window = Stagehand.open(memory, w, h, Optional.empty(), Optional.empty());
         Stagehand.untilSettled(window);
-        Stagehand.until("readings", () -> window.desk().foreseeing().foreseenProperty().get() != null);
+        Stagehand.until(
+                "readings", () -> window.desk().foreseeing().foreseenProperty().get() != null);
         for (Palette p : new Palette[] {Palette.LIGHT, Palette.DARK}) {
             Stagehand.ui(() -> window.look().paletteProperty().set(p));
             shoot(window, "desk", p, w);
         }
         Stagehand.ui(() -> {
             var room = window.desk().shelfRoom();
-            for (String id : List.of("ink-demo", "dye-blue-demo", "lipid-emulsion-20", "water", "microspheres-polystyrene-1000"))
+            for (String id :
+                    List.of("ink-demo", "dye-blue-demo", "lipid-emulsion-20", "water", "microspheres-polystyrene-1000"))
                 room.compare(id, true);
-            room.choose(window.desk().shelfProperty().get().shelf().orElseThrow().require("lipid-emulsion-20"));
+            room.choose(
+                    window.desk().shelfProperty().get().shelf().orElseThrow().require("lipid-emulsion-20"));
             window.openShelf();
         });
-        Stagehand.until("spectra", () -> window.desk().shelfRoom().linesProperty().get().size() == 5);
+        Stagehand.until(
+                "spectra", () -> window.desk().shelfRoom().linesProperty().get().size() == 5);
         for (Palette p : new Palette[] {Palette.LIGHT, Palette.DARK}) {
             Stagehand.ui(() -> window.look().paletteProperty().set(p));
             shoot(window, "shelf", p, w);
@@ -84,8 +88,9 @@ public final class Screenshots {
         Stagehand.until("a look", () -> made.seenProperty().get() != null);
         Stagehand.ui(() -> {
             List<MadeBatch.Entry> entries = new ArrayList<>();
-            made.points().forEach(p -> entries.add(new MadeBatch.Entry(
-                    p.wavelengthNm(), p.quantity(), Double.toString(p.wantedPerCm() * 1.09), "2 %")));
+            made.points()
+                    .forEach(p -> entries.add(new MadeBatch.Entry(
+                            p.wavelengthNm(), p.quantity(), Double.toString(p.wantedPerCm() * 1.09), "2 %")));
             made.measured("time-resolved fit", "bench instrument", entries);
         });
         Stagehand.until("a verdict", () -> made.seenProperty().get().verdict().isPresent());

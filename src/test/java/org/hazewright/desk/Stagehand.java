@@ -71,7 +71,8 @@ final class Stagehand {
     static Window open(Path memory, double w, double h, Optional<Path> file, Optional<Chooser> chooser) {
         startToolkit();
         return onUi(() -> {
-            Desk desk = new Desk(Work.threaded(Platform::runLater), Optional.empty(), Remembered.in(memory, memory.resolve("work")));
+            Desk desk = new Desk(
+                    Work.threaded(Platform::runLater), Optional.empty(), Remembered.in(memory, memory.resolve("work")));
             Window window = new Window(new Stage(), desk, new Look(), chooser);
             window.stage().setWidth(w);
             window.stage().setHeight(h);

@@ -103,7 +103,10 @@ class WindowTest {
     }
 
     private Button button(String text) {
-        return (Button) all(n -> n instanceof Button b && b.getText() != null && b.getText().contains(text)).stream()
+        return (Button) all(n -> n instanceof Button b
+                        && b.getText() != null
+                        && b.getText().contains(text))
+                .stream()
                 .findFirst()
                 .orElseThrow(() -> new AssertionError("There is no button “" + text + "”."));
     }
@@ -152,7 +155,13 @@ class WindowTest {
         hand.press(KeyCode.ENTER);
         String words = Stagehand.onUi(() -> field.errorProperty().get());
         assertTrue(words.contains("x"), words);
-        assertEquals(1, all(n -> n instanceof Labeled l && l.getText() != null && l.getText().contains(words)).size(), "said beside the field");
+        assertEquals(
+                1,
+                all(n -> n instanceof Labeled l
+                                && l.getText() != null
+                                && l.getText().contains(words))
+                        .size(),
+                "said beside the field");
         assertEquals(0.1, wanted(690), "the last value that made sense holds");
         hand.press(KeyCode.ESCAPE);
         assertEquals("", Stagehand.onUi(() -> field.errorProperty().get()));
@@ -177,10 +186,8 @@ class WindowTest {
         double y = plot.yOf(Point.Quantity.MUA, before);
         double to = plot.yOf(Point.Quantity.MUA, before * 1.15);
         List<Boolean> followed = new ArrayList<>();
-        Stagehand.ui(() -> window.desk()
-                .solving()
-                .shownProperty()
-                .addListener((p, was, now) -> followed.add(now.following())));
+        Stagehand.ui(() ->
+                window.desk().solving().shownProperty().addListener((p, was, now) -> followed.add(now.following())));
         hand.drag(surface, x, y, x, to);
         assertEquals(before * 1.15, wanted(830), 0.01 * before);
         assertTrue(followed.contains(true), "the recipe did not follow during the drag");
@@ -230,12 +237,16 @@ class WindowTest {
         Path side = folder.resolve(".bath.brief.toml.unsaved");
         Stagehand.until("autosave", () -> Files.exists(side));
         assertEquals(
-                new String(original, StandardCharsets.UTF_8), Files.readString(file), "the brief itself was written unasked");
+                new String(original, StandardCharsets.UTF_8),
+                Files.readString(file),
+                "the brief itself was written unasked");
         Stagehand.untilSettled(window);
         hand.press(KeyCode.CONTROL, KeyCode.S);
         Stagehand.until("saved", () -> !window.desk().papers().changedProperty().get());
         assertFalse(Files.exists(side), "the side file outlived the save");
-        assertEquals(new String(original, StandardCharsets.UTF_8), Files.readString(folder.resolve("bath.brief.toml.previous")));
+        assertEquals(
+                new String(original, StandardCharsets.UTF_8),
+                Files.readString(folder.resolve("bath.brief.toml.previous")));
         assertTrue(Files.readString(file).startsWith("# the daily bath\n"), "comments at the top are kept");
 
         Brief back = BriefReader.read(file, TissueSpectra.of(null));
@@ -258,7 +269,10 @@ class WindowTest {
         Stagehand.ui(() -> window.stage().close()); // the program ends without asking
         open(Optional.of(file));
         assertEquals(0.1, wanted(690));
-        Stagehand.until("the offer", () -> window.desk().notices().all().stream().anyMatch(n -> n.strand().equals("unsaved")));
+        Stagehand.until(
+                "the offer",
+                () -> window.desk().notices().all().stream()
+                        .anyMatch(n -> n.strand().equals("unsaved")));
         Stagehand.ui(button("take them up")::fire);
         assertEquals(0.12, wanted(690));
     }
@@ -267,14 +281,17 @@ class WindowTest {
     void aWrongWeighingMovesTheLaterStepsAndACrashLosesNothing() {
         open(Optional.of(bath()));
         hand.press(KeyCode.CONTROL, KeyCode.ENTER);
-        Stagehand.until("the balance", () -> window.desk().weighingProperty().get().isPresent());
-        AtBalance at = Stagehand.onUi(() -> window.desk().weighingProperty().get().orElseThrow());
+        Stagehand.until(
+                "the balance", () -> window.desk().weighingProperty().get().isPresent());
+        AtBalance at =
+                Stagehand.onUi(() -> window.desk().weighingProperty().get().orElseThrow());
         toStep(at, "Lipid");
         AtBalance.Now before = Stagehand.onUi(() -> at.nowProperty().get());
         double wanted = before.line().wantedG();
         List<Double> later = later(before);
         focus(window.balance().field());
-        String over = String.format(java.util.Locale.ROOT, "%.3f", wanted * 1.04).replace('.', ',') + " g";
+        String over =
+                String.format(java.util.Locale.ROOT, "%.3f", wanted * 1.04).replace('.', ',') + " g";
         hand.type(over);
         hand.press(KeyCode.ENTER);
         AtBalance.Now after = Stagehand.onUi(() -> at.nowProperty().get());
@@ -286,15 +303,24 @@ class WindowTest {
         Stagehand.pulse();
         Stagehand.ui(() -> window.stage().close()); // the crash
         open(Optional.empty());
-        Stagehand.until("the offer", () -> window.desk().notices().all().stream().anyMatch(n -> n.strand().equals("balance")));
+        Stagehand.until(
+                "the offer",
+                () -> window.desk().notices().all().stream()
+                        .anyMatch(n -> n.strand().equals("balance")));
         Stagehand.ui(button("go on weighing")::fire);
-        Stagehand.until("the balance", () -> window.desk().weighingProperty().get().isPresent());
-        AtBalance.Now again = Stagehand.onUi(
-                () -> window.desk().weighingProperty().get().orElseThrow().nowProperty().get());
+        Stagehand.until(
+                "the balance", () -> window.desk().weighingProperty().get().isPresent());
+        AtBalance.Now again = Stagehand.onUi(() -> window.desk()
+                .weighingProperty()
+                .get()
+                .orElseThrow()
+                .nowProperty()
+                .get());
         assertEquals(after.at(), again.at(), "it goes on at the same step");
         assertEquals(later(after), later(again));
 
-        AtBalance second = Stagehand.onUi(() -> window.desk().weighingProperty().get().orElseThrow());
+        AtBalance second =
+                Stagehand.onUi(() -> window.desk().weighingProperty().get().orElseThrow());
         Stagehand.ui(() -> {
             while (!second.nowProperty().get().over()) {
                 AtBalance.Line line = second.nowProperty().get().line();
@@ -309,14 +335,19 @@ class WindowTest {
 
     private Path batchFile() {
         try (var files = Files.list(folder)) {
-            return files.filter(p -> p.toString().endsWith(".batch.toml")).findFirst().orElse(folder.resolve("none"));
+            return files.filter(p -> p.toString().endsWith(".batch.toml"))
+                    .findFirst()
+                    .orElse(folder.resolve("none"));
         } catch (java.io.IOException e) {
             throw new IllegalStateException(e);
         }
     }
 
     private static List<Double> later(AtBalance.Now now) {
-        return now.lines().subList(Math.min(now.at(), now.lines().size()), now.lines().size()).stream()
+        return now
+                .lines()
+                .subList(Math.min(now.at(), now.lines().size()), now.lines().size())
+                .stream()
                 .filter(AtBalance.Line::weighs)
                 .map(AtBalance.Line::wantedG)
                 .toList();
@@ -340,7 +371,8 @@ class WindowTest {
             Stagehand.ui(button("Save sheet")::fire);
             Stagehand.until(name, () -> Files.exists(folder.resolve(name)));
         }
-        assertEquals("%PDF", new String(Files.readAllBytes(folder.resolve("bath.pdf")), 0, 4, StandardCharsets.US_ASCII));
+        assertEquals(
+                "%PDF", new String(Files.readAllBytes(folder.resolve("bath.pdf")), 0, 4, StandardCharsets.US_ASCII));
         for (String name : List.of("bath.png", "bath.svg")) {
             chooser.next(folder.resolve(name));
             Stagehand.ui(button("save picture")::fire);
@@ -361,12 +393,14 @@ class WindowTest {
                     org.hazewright.desk.model.Work.threaded(javafx.application.Platform::runLater),
                     Optional.of(empty),
                     org.hazewright.desk.model.Remembered.in(folder.resolve("memory"), folder.resolve("work")));
-            Window w = new Window(new javafx.stage.Stage(), desk, new org.hazewright.desk.look.Look(), Optional.of(chooser));
+            Window w = new Window(
+                    new javafx.stage.Stage(), desk, new org.hazewright.desk.look.Look(), Optional.of(chooser));
             desk.begin(Optional.empty());
             w.show();
             return w;
         });
-        Stagehand.until("words", () -> window.desk().shelfProperty().get().problem().isPresent());
+        Stagehand.until(
+                "words", () -> window.desk().shelfProperty().get().problem().isPresent());
         Stagehand.pulse();
         Stagehand.ui(button("use the shelf of the program")::fire);
         Stagehand.untilSettled(window);
@@ -385,9 +419,10 @@ class WindowTest {
     private void named(String where) {
         for (Node n : all(Node::isFocusTraversable)) {
             if (n instanceof ScrollPane) continue;
-            String name = Stagehand.onUi(() -> n.getAccessibleText() != null && !n.getAccessibleText().isBlank()
-                    ? n.getAccessibleText()
-                    : n instanceof Labeled l && l.getText() != null ? l.getText() : "");
+            String name = Stagehand.onUi(() ->
+                    n.getAccessibleText() != null && !n.getAccessibleText().isBlank()
+                            ? n.getAccessibleText()
+                            : n instanceof Labeled l && l.getText() != null ? l.getText() : "");
             assertFalse(name.isBlank(), where + ": " + n + " has no name for a screen reader");
         }
     }
@@ -402,7 +437,8 @@ class WindowTest {
                 window.stage(),
                 new javafx.stage.WindowEvent(window.stage(), javafx.stage.WindowEvent.WINDOW_CLOSE_REQUEST)));
         assertTrue(Stagehand.onUi(() -> window.stage().isShowing()));
-        assertTrue(Stagehand.onUi(() -> window.desk().notices().all().stream().anyMatch(n -> n.kind() == Notice.Kind.ASKED)));
+        assertTrue(Stagehand.onUi(
+                () -> window.desk().notices().all().stream().anyMatch(n -> n.kind() == Notice.Kind.ASKED)));
         Stagehand.ui(button("close without saving")::fire);
         assertFalse(Stagehand.onUi(() -> window.stage().isShowing()));
     }

@@ -31,9 +31,8 @@ class PopulationReferenceTest {
     })
     void perVolumeFraction(
             String what, double n, double host, double medianNm, double gsd, double mus, double g, double musp) {
-        SizeDistribution sizes = gsd == 0
-                ? new SizeDistribution.Single(medianNm)
-                : new SizeDistribution.LogNormal(medianNm, gsd);
+        SizeDistribution sizes =
+                gsd == 0 ? new SizeDistribution.Single(medianNm) : new SizeDistribution.LogNormal(medianNm, gsd);
         ParticleOptics p = new Population(sizes).perVolumeFraction(Index.real(n), host, 633);
         assertEquals(10 * mus, p.musPerCm(), 1e-6 * 10 * mus, what + " µs");
         assertEquals(10 * musp, p.muspPerCm(), 1e-6 * 10 * musp, what + " µs'");
@@ -111,8 +110,7 @@ class PopulationReferenceTest {
         Population population = new Population(new SizeDistribution.Single(300));
         Refusal refusal = assertThrows(
                 Refusal.class,
-                () -> population.perVolumeFraction(
-                        Index.real(1.58), 1.33, 633, 0.5, new Crowding.PercusYevick()));
+                () -> population.perVolumeFraction(Index.real(1.58), 1.33, 633, 0.5, new Crowding.PercusYevick()));
         assertTrue(refusal.getMessage().contains("0.45"), refusal.getMessage());
     }
 }

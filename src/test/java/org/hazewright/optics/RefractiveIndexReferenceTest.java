@@ -91,7 +91,16 @@ class RefractiveIndexReferenceTest {
      * form fitted to Sultanova, Kasarova & Nikolov, Acta Phys. Pol. A 116, 585, 2009, follows it to 1.5e-3.
      */
     @ParameterizedTest
-    @CsvSource({"486, 1.606", "546, 1.596", "588, 1.592", "633, 1.587", "703, 1.582", "804, 1.578", "879, 1.576", "1052, 1.572"})
+    @CsvSource({
+        "486, 1.606",
+        "546, 1.596",
+        "588, 1.592",
+        "633, 1.587",
+        "703, 1.582",
+        "804, 1.578",
+        "879, 1.576",
+        "1052, 1.572"
+    })
     void polystyrene(double nm, double n) {
         assertEquals(n, POLYSTYRENE.at(nm, ROOM).n(), 1.5e-3);
     }
@@ -118,8 +127,7 @@ class RefractiveIndexReferenceTest {
     @Test
     void poleInsideTheRangeIsRefused() {
         Refusal refusal = assertThrows(
-                Refusal.class,
-                () -> new SellmeierIndex("glass", 1, new double[] {1}, new double[] {0.25}, 400, 700));
+                Refusal.class, () -> new SellmeierIndex("glass", 1, new double[] {1}, new double[] {0.25}, 400, 700));
         assertTrue(refusal.getMessage().contains("500 nm"), refusal.getMessage());
     }
 

@@ -76,7 +76,9 @@ class ReadingsPageTest {
             for (Reading r : f.readings()) assertFalse(r.model().contains("packets"), r.toString());
         assertEquals(2, readings.leftOut().size(), readings.leftOut().toString());
         assertTrue(readings.leftOut().get(0).startsWith("Near probe"));
-        assertTrue(readings.leftOut().get(1).startsWith("Slab"), "transport is the command's, since a sheet must be quick");
+        assertTrue(
+                readings.leftOut().get(1).startsWith("Slab"),
+                "transport is the command's, since a sheet must be quick");
     }
 
     @Test

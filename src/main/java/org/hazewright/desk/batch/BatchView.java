@@ -129,7 +129,11 @@ public final class BatchView extends BorderPane {
         Batch b = made.batchProperty().get();
         GridPane grid = new GridPane();
         grid.getStyleClass().add("weighed-grid");
-        grid.addRow(0, Say.label("", "quiet"), Say.label("plan g", "quiet", "small"), Say.label("real g", "quiet", "small"));
+        grid.addRow(
+                0,
+                Say.label("", "quiet"),
+                Say.label("plan g", "quiet", "small"),
+                Say.label("real g", "quiet", "small"));
         List<Weighing> all = b.weighings();
         for (int n = 0; n < all.size(); n++) {
             Weighing w = all.get(n);
@@ -153,7 +157,9 @@ public final class BatchView extends BorderPane {
             return Words.item(b.plan().items().get(w.place())) + (of > 0 ? ", correction " + of : "");
         }
         Stock s = b.plan().stocks().get(w.place());
-        String bottle = w.from().isPresent() ? Words.stock(b.plan(), b.plan().stock(w.from().get())) : Words.shortName(w.ingredient());
+        String bottle = w.from().isPresent()
+                ? Words.stock(b.plan(), b.plan().stock(w.from().get()))
+                : Words.shortName(w.ingredient());
         return bottle + " for the stock " + Words.ratio(s);
     }
 
@@ -166,7 +172,8 @@ public final class BatchView extends BorderPane {
             String known = made.batchProperty().get().measured().isEmpty() ? "As weighed" : "By all that is known now";
             String words = inside
                     ? known + " it lands inside every tolerance " + Words.times(seen.chance()) + " times in 100."
-                    : "✕ " + known + " it misses " + seen.landing().stream().filter(p -> !p.inside()).count() + " of "
+                    : "✕ " + known + " it misses "
+                            + seen.landing().stream().filter(p -> !p.inside()).count() + " of "
                             + seen.landing().size() + ".";
             says.getChildren().add(Say.wrapped(words, "headline", inside ? "strong" : "missed"));
         }
@@ -177,14 +184,18 @@ public final class BatchView extends BorderPane {
                             says.getChildren().add(Say.wrapped(v.sentence()));
                         },
                         () -> says.getChildren()
-                                .add(Say.wrapped("Nothing is measured yet. Type values beside the targets when it was.", "quiet")));
+                                .add(Say.wrapped(
+                                        "Nothing is measured yet. Type values beside the targets when it was.",
+                                        "quiet")));
         if (!seen.beliefs().isEmpty()) {
             says.getChildren().add(Say.heading("What it teaches of the bottles"));
             for (MadeBatch.Belief b : seen.beliefs())
                 says.getChildren()
-                        .add(Say.wrapped(Words.capital(b.words()) + ": " + Figures.withUncertainty(b.factor(), b.uAfter())
-                                + " times its file, known to " + Figures.significant(100 * b.uAfter(), 2) + " % in place of "
-                                + Figures.significant(100 * b.uBefore(), 2) + " %."));
+                        .add(Say.wrapped(
+                                Words.capital(b.words()) + ": " + Figures.withUncertainty(b.factor(), b.uAfter())
+                                        + " times its file, known to " + Figures.significant(100 * b.uAfter(), 2)
+                                        + " % in place of "
+                                        + Figures.significant(100 * b.uBefore(), 2) + " %."));
         }
     }
 
@@ -212,15 +223,20 @@ public final class BatchView extends BorderPane {
                             + Words.inSentence(s.ingredient()) + " in " + Words.grams(s.diluentG(), b.balance()) + " g "
                             + Words.inSentence(s.diluent()) + "."));
         for (Item i : c.items()) {
-            HBox row = new HBox(Say.wrapped(Words.item(i)), Say.spring(), Say.label("+ " + Words.grams(i.massG(), b.balance()) + " g", "grams"));
+            HBox row = new HBox(
+                    Say.wrapped(Words.item(i)),
+                    Say.spring(),
+                    Say.label("+ " + Words.grams(i.massG(), b.balance()) + " g", "grams"));
             row.setAlignment(Pos.BASELINE_LEFT);
             puts.getChildren().add(row);
         }
         c.notes().forEach(n -> puts.getChildren().add(Say.wrapped("Mind: " + n, "quiet")));
         if (c.outcome() == Correction.Outcome.ADD) {
             puts.getChildren()
-                    .add(Say.wrapped("Then it lands " + Words.times(c.then().chance()) + " times in 100, in "
-                            + Figures.significant(c.volumeMl(), 4) + " mL.", "lands"));
+                    .add(Say.wrapped(
+                            "Then it lands " + Words.times(c.then().chance()) + " times in 100, in "
+                                    + Figures.significant(c.volumeMl(), 4) + " mL.",
+                            "lands"));
             Button go = new Button("Weigh it in ⏎");
             go.getStyleClass().setAll("go");
             go.setOnAction(e -> made.weighCorrection());

@@ -7,8 +7,8 @@ import java.util.Map;
 import java.util.Optional;
 import javafx.scene.control.Button;
 import javafx.scene.control.Label;
-import javafx.scene.layout.GridPane;
 import javafx.scene.layout.FlowPane;
+import javafx.scene.layout.GridPane;
 import javafx.scene.layout.Region;
 import javafx.scene.layout.VBox;
 import org.hazewright.bench.Answer;
@@ -58,7 +58,10 @@ public final class MeasuredTable extends VBox {
             row(p, row++, p.wavelengthNm() != before);
             before = p.wavelengthNm();
         }
-        Field how = new Field(() -> method, text -> keep(() -> method = text), true).named("how it was measured").styled("boxed").columns(16);
+        Field how = new Field(() -> method, text -> keep(() -> method = text), true)
+                .named("how it was measured")
+                .styled("boxed")
+                .columns(16);
         how.setPromptText("how: time-resolved fit");
         Field with = new Field(() -> instrument, text -> keep(() -> instrument = text), true)
                 .named("with which instrument")
@@ -73,7 +76,9 @@ public final class MeasuredTable extends VBox {
         getChildren().addAll(grid, line);
         Say.show(line, !made.points().isEmpty());
         if (made.points().isEmpty())
-            getChildren().add(Say.wrapped("This batch was opened without its brief, so there are no targets to land on.", "quiet"));
+            getChildren()
+                    .add(Say.wrapped(
+                            "This batch was opened without its brief, so there are no targets to land on.", "quiet"));
         made.seenProperty().addListener((p, was, now) -> show());
         made.batchProperty().addListener((p, was, now) -> show());
         show();
@@ -115,17 +120,7 @@ public final class MeasuredTable extends VBox {
         Label wanted = Say.label(Figures.significant(p.wantedPerCm(), 4), "wanted");
         for (Label l : List.of(at, sign, wanted)) l.setMinWidth(Region.USE_PREF_SIZE);
         for (Region r : List.of(v, u)) r.setMinWidth(Region.USE_PREF_SIZE);
-        grid.addRow(
-                row,
-                at,
-                sign,
-                wanted,
-                value,
-                gauge,
-                was,
-                measured,
-                v,
-                u);
+        grid.addRow(row, at, sign, wanted, value, gauge, was, measured, v, u);
     }
 
     private Field field(String key, String name) {
@@ -143,7 +138,8 @@ public final class MeasuredTable extends VBox {
             for (Answer.Predicted p : seen.landing()) {
                 gauges.get(key(p.point())).land(p.miss());
                 values.get(key(p.point())).setText(Words.predicted(p));
-                values.get(key(p.point())).setTooltip(new javafx.scene.control.Tooltip(Words.value(p.perCm(), p.uPerCm()) + " /cm"));
+                values.get(key(p.point()))
+                        .setTooltip(new javafx.scene.control.Tooltip(Words.value(p.perCm(), p.uPerCm()) + " /cm"));
             }
         Batch b = made.batchProperty().get();
         if (b.measured().isEmpty()) {
@@ -157,7 +153,9 @@ public final class MeasuredTable extends VBox {
                     .filter(x -> x.wavelengthNm() == p.wavelengthNm()
                             && (x.quantity() == Quantity.ABSORPTION) == (p.quantity() == Point.Quantity.MUA))
                     .findFirst();
-            last.get(key(p)).setText(v.map(x -> Figures.fixed(x.perCm(), Figures.decimalsFor(Math.max(x.uPerCm(), 1e-9)))).orElse("–"));
+            last.get(key(p))
+                    .setText(v.map(x -> Figures.fixed(x.perCm(), Figures.decimalsFor(Math.max(x.uPerCm(), 1e-9))))
+                            .orElse("–"));
             Say.show(measuredGauges.get(key(p)), v.isPresent());
             v.ifPresent(x -> measuredGauges.get(key(p)).land(p.miss(x.perCm())));
         }

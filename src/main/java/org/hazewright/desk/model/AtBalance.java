@@ -140,7 +140,8 @@ public final class AtBalance {
         List<Weighing> weighings = opened.weighings();
         for (int k = 0; k < steps.size(); k++) {
             Optional<Weighing> w = steps.get(k).weighing();
-            if (w.isPresent() && entries.get(k).done()) b = b.withWeighed(place(weighings, w.get()), entries.get(k).massG());
+            if (w.isPresent() && entries.get(k).done())
+                b = b.withWeighed(place(weighings, w.get()), entries.get(k).massG());
         }
         return b;
     }
@@ -160,7 +161,9 @@ public final class AtBalance {
         Line line = now.get().line();
         double left = line.wantedG() - entries.get(now.get().at()).massG();
         int loads = balance().loads(line.wantedG()) - loads().size();
-        return loads <= 1 ? Math.max(0, balance().rounded(left)) : Grams.loads(left, balance()).get(0);
+        return loads <= 1
+                ? Math.max(0, balance().rounded(left))
+                : Grams.loads(left, balance()).get(0);
     }
 
     /** How many loads the present step takes. */
@@ -188,10 +191,12 @@ public final class AtBalance {
                 throw new Refusal(Figures.plain(g) + " g is more than this balance can carry ("
                         + Figures.plain(balance().capacityG()) + " g).");
             double wanted = loadWantedG();
-            boolean strange = Math.abs(g - wanted) > Math.max(STRANGE * wanted, 5 * balance().readabilityG());
+            boolean strange = Math.abs(g - wanted)
+                    > Math.max(STRANGE * wanted, 5 * balance().readabilityG());
             if (strange && !asked.equals(text.strip())) {
                 asked = text.strip();
-                complaint.set("That is far from " + Grams.shown(wanted, balance()) + ". If it is what the balance shows, press"
+                complaint.set("That is far from " + Grams.shown(wanted, balance())
+                        + ". If it is what the balance shows, press"
                         + " Enter once more and the rest is planned anew.");
                 return false;
             }
@@ -248,7 +253,8 @@ public final class AtBalance {
         for (int k = 0; k < steps.size(); k++) {
             Optional<Weighing> w = steps.get(k).weighing();
             if (w.isPresent() && entries.get(k).done())
-                done.add(new Replan.Done(w.get().role(), w.get().place(), entries.get(k).massG()));
+                done.add(new Replan.Done(
+                        w.get().role(), w.get().place(), entries.get(k).massG()));
         }
         return done;
     }
@@ -278,7 +284,9 @@ public final class AtBalance {
                 wantedG = wanted.get(n).massG();
                 name = name(step.weighing().get());
             }
-            double weighedG = entries.get(k).done() && step.weighing().isPresent() ? entries.get(k).massG() : Double.NaN;
+            double weighedG = entries.get(k).done() && step.weighing().isPresent()
+                    ? entries.get(k).massG()
+                    : Double.NaN;
             lines.add(new Line(step, state, name, wantedG, plannedG, weighedG));
         }
         now.set(new Now(List.copyOf(lines), at, made));
@@ -288,15 +296,15 @@ public final class AtBalance {
 
     /** Where a weighing stands among all of a recipe. */
     static int place(List<Weighing> all, Weighing w) {
-        for (int k = 0; k < all.size(); k++) if (all.get(k).role() == w.role() && all.get(k).place() == w.place()) return k;
+        for (int k = 0; k < all.size(); k++)
+            if (all.get(k).role() == w.role() && all.get(k).place() == w.place()) return k;
         throw new IllegalStateException("The recipe has no such weighing.");
     }
 
     private String name(Weighing w) {
         if (w.role() == Weighing.Role.ITEM) return Words.item(plan.items().get(w.place()));
-        String bottle = w.from().isPresent()
-                ? Words.stock(plan, plan.stock(w.from().get()))
-                : Words.shortName(w.ingredient());
+        String bottle =
+                w.from().isPresent() ? Words.stock(plan, plan.stock(w.from().get())) : Words.shortName(w.ingredient());
         return bottle + " for the stock " + Words.ratio(plan.stocks().get(w.place()));
     }
 
@@ -331,7 +339,8 @@ public final class AtBalance {
     /** Why a later step asks for other grams than the recipe: "planned 1.812 g; what was weighed before asks for 1.815 g". */
     public String why(Line line) {
         if (!line.weighs() || line.state() == State.DONE || line.wantedG() == line.plannedG()) return "";
-        return Words.grams(line.plannedG(), balance()) + " → " + Words.grams(line.wantedG(), balance()) + " g, after what was weighed";
+        return Words.grams(line.plannedG(), balance()) + " → " + Words.grams(line.wantedG(), balance())
+                + " g, after what was weighed";
     }
 
     /** The batch as it was weighed, every step done or as re-planned. */

@@ -101,8 +101,7 @@ public final class Desk {
 
     private void solve() {
         if (edits.now() == null || shelf.get().shelf().isEmpty()) return;
-        solving.solve(
-                papers.brief(), shelf.get().shelf().get(), edits.now().chosen());
+        solving.solve(papers.brief(), shelf.get().shelf().get(), edits.now().chosen());
     }
 
     /** Puts a short new brief on the desk. */
@@ -117,7 +116,11 @@ public final class Desk {
         papers.startWith(new Draft(
                         "phantom",
                         "New phantom",
-                        List.of(shelf.get().shelf().flatMap(s -> s.find("water")).map(i -> i.id()).orElseGet(this::anyBase)),
+                        List.of(shelf.get()
+                                .shelf()
+                                .flatMap(s -> s.find("water"))
+                                .map(i -> i.id())
+                                .orElseGet(this::anyBase)),
                         250,
                         List.of(),
                         0,
@@ -161,10 +164,11 @@ public final class Desk {
                             edits.now().withChosen(Optional.of(Shown.key(found.recipe()))),
                             "keeping to the recipe's ingredients",
                             "");
-                    notices.tell(Notice.told(
-                            "open",
-                            "No brief beside " + file.getFileName()
-                                    + " answers to it; the targets here are what it gives, and its ingredients are kept to."));
+                    notices.tell(
+                            Notice.told(
+                                    "open",
+                                    "No brief beside " + file.getFileName()
+                                            + " answers to it; the targets here are what it gives, and its ingredients are kept to."));
                 },
                 failure -> notices.tell(Notice.wrong("open", Papers.words(failure))));
     }
@@ -179,7 +183,10 @@ public final class Desk {
     /** Turns to the balance with the recipe on the desk; a weighing of it that was broken off goes on at its step. */
     public void standAtBalance() {
         Shown shown = solving.shownProperty().get();
-        if (shown == null || shown.following() || shelf.get().shelf().isEmpty() || weighing.get().isPresent()) return;
+        if (shown == null
+                || shown.following()
+                || shelf.get().shelf().isEmpty()
+                || weighing.get().isPresent()) return;
         Shelf on = shelf.get().shelf().get();
         Path folder = papers.folder();
         String name = edits.now().name();
@@ -203,7 +210,8 @@ public final class Desk {
             LocalDate today = LocalDate.now();
             Path file = Recipes.freeName(folder, name + "-" + today, ".batch.toml");
             String id = file.getFileName().toString().replace(".batch.toml", "");
-            Batch batch = Batch.open(id, shown.recipe(), Optional.of(shown.outlook().brief()), who, today);
+            Batch batch =
+                    Batch.open(id, shown.recipe(), Optional.of(shown.outlook().brief()), who, today);
             return new Started(AtBalance.Prepared.of(batch, on, List.of()), new WeighingLog(file));
         }
     }
@@ -227,7 +235,9 @@ public final class Desk {
         preparing.request(
                 (stop, progress) -> Started.again(new WeighingLog(file.get()), on),
                 started -> {
-                    long done = started.prepared().kept().stream().filter(Weighed::done).count();
+                    long done = started.prepared().kept().stream()
+                            .filter(Weighed::done)
+                            .count();
                     notices.tell(Notice.asked(
                             "balance",
                             "“" + started.prepared().batch().plan().title() + "” was being weighed; " + done + " of "
@@ -246,7 +256,9 @@ public final class Desk {
                 (stop, progress) -> Started.again(new WeighingLog(file), on),
                 started -> {
                     remembered.used(file);
-                    if (started.prepared().batch().complete()) made.set(Optional.of(new MadeBatch(this, started.log().file(), started.prepared().batch())));
+                    if (started.prepared().batch().complete())
+                        made.set(Optional.of(new MadeBatch(
+                                this, started.log().file(), started.prepared().batch())));
                     else turn(started);
                 },
                 failure -> notices.tell(Notice.wrong("open", Papers.words(failure))));
@@ -308,7 +320,8 @@ public final class Desk {
     public void saveSheet(Path file, Function<Shown, byte[]> paper) {
         Shown shown = solving.shownProperty().get();
         boolean pdf = file.toString().toLowerCase(Locale.ROOT).endsWith(".pdf");
-        Path named = pdf || file.toString().endsWith(".xlsx") ? file : file.resolveSibling(file.getFileName() + ".xlsx");
+        Path named =
+                pdf || file.toString().endsWith(".xlsx") ? file : file.resolveSibling(file.getFileName() + ".xlsx");
         preparing.request(
                 (stop, progress) -> {
                     byte[] bytes = pdf ? paper.apply(shown) : RecipeSheet.write(shown.answer(), LocalDate.now());
@@ -332,7 +345,8 @@ public final class Desk {
         else if (name.endsWith(".toml")) papers.open(file);
         else
             notices.tell(Notice.wrong(
-                    "open", file.getFileName() + " is none of the files that open here: a brief (.brief.toml), a recipe"
+                    "open",
+                    file.getFileName() + " is none of the files that open here: a brief (.brief.toml), a recipe"
                             + " (.recipe.toml) or a batch (.batch.toml)."));
     }
 

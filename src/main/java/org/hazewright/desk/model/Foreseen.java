@@ -43,12 +43,14 @@ public record Foreseen(
         public Asked {
             if (!(nm >= 200 && nm <= 3000)) throw new Refusal("Type a wavelength from 200 to 3000 nm.");
             if (!(distanceMm >= 0.5 && distanceMm <= 200)) throw new Refusal("Type a distance from 0.5 to 200 mm.");
-            if (!(thicknessMm >= 0.1 && thicknessMm <= 1000)) throw new Refusal("Type a thickness from 0.1 to 1000 mm.");
+            if (!(thicknessMm >= 0.1 && thicknessMm <= 1000))
+                throw new Refusal("Type a thickness from 0.1 to 1000 mm.");
         }
     }
 
     /** Reflectance per mm² over distance in mm; attenuation at the distance asked for, dB, and its standard uncertainty. */
-    public record Distances(double[] mm, double[] perMm2, double attenuationDb, double uDb, boolean holds, String note) {}
+    public record Distances(
+            double[] mm, double[] perMm2, double attenuationDb, double uDb, boolean holds, String note) {}
 
     /** The curve of a short pulse over ps, and its mean time with its standard uncertainty, ps. */
     public record Pulse(double[] ps, double[] height, double meanPs, double uPs, boolean holds, String note) {}
@@ -124,7 +126,8 @@ public record Foreseen(
         private Distances distances() {
             double most = Math.max(40, 1.3 * asked.distanceMm());
             double[] mm = DoubleStream.concat(
-                            DoubleStream.iterate(2, x -> x <= most, x -> x + most / 40), DoubleStream.of(asked.distanceMm()))
+                            DoubleStream.iterate(2, x -> x <= most, x -> x + most / 40),
+                            DoubleStream.of(asked.distanceMm()))
                     .sorted()
                     .distinct()
                     .toArray();
@@ -161,7 +164,12 @@ public record Foreseen(
             Reading mean = one(all, Quantity.MEAN_TIME_PS);
             if (curve == null || curve.curve() == null || mean == null || mean.value() == null) return null;
             return new Pulse(
-                    curve.curve().x(), curve.curve().y(), mean.value(), mean.u() == null ? 0 : mean.u(), mean.insideRange(), said(mean));
+                    curve.curve().x(),
+                    curve.curve().y(),
+                    mean.value(),
+                    mean.u() == null ? 0 : mean.u(),
+                    mean.insideRange(),
+                    said(mean));
         }
 
         private Slab slab() {
@@ -187,8 +195,8 @@ public record Foreseen(
                 notes.add("Saturation needs targets at two wavelengths or more.");
                 return null;
             }
-            Oximeter oximeter =
-                    new Oximeter(ShelfReader.SHIPPED, spectra.oxyEpsilon(), spectra.deoxyEpsilon(), spectra.waterMua()::at);
+            Oximeter oximeter = new Oximeter(
+                    ShelfReader.SHIPPED, spectra.oxyEpsilon(), spectra.deoxyEpsilon(), spectra.waterMua()::at);
             SetUp setUp = SetUp.of("oximeter", SetUp.Kind.OXIMETER)
                     .wavelengthsNm(Arrays.stream(nm).boxed().toList())
                     .done();

@@ -58,7 +58,8 @@ public final class MadeBatch {
     private final Work.Lane writing;
     private final Work.Lane correcting;
     private final ReadOnlyObjectWrapper<Seen> seen = new ReadOnlyObjectWrapper<>();
-    private final ReadOnlyObjectWrapper<Optional<Correction>> correction = new ReadOnlyObjectWrapper<>(Optional.empty());
+    private final ReadOnlyObjectWrapper<Optional<Correction>> correction =
+            new ReadOnlyObjectWrapper<>(Optional.empty());
     private final ReadOnlyObjectWrapper<String> complaint = new ReadOnlyObjectWrapper<>("");
 
     MadeBatch(Desk desk, Path file, Batch batch) {
@@ -113,8 +114,7 @@ public final class MadeBatch {
 
     private void look() {
         Batch batch = edits.now();
-        seeing.request(
-                (stop, progress) -> see(batch), seen::set, failure -> complaint.set(Papers.words(failure)));
+        seeing.request((stop, progress) -> see(batch), seen::set, failure -> complaint.set(Papers.words(failure)));
     }
 
     private static Seen see(Batch batch) {
@@ -124,7 +124,11 @@ public final class MadeBatch {
             Brief brief = batch.brief().get();
             Sweep sweep = Sweep.of(Mixture.of(batch.asMade()), brief.wavelengthsNm());
             Learned.Landing l = Learned.of(batch)
-                    .landing(batch.asMade(), brief.points(), sweep, batch.balance().capacityG());
+                    .landing(
+                            batch.asMade(),
+                            brief.points(),
+                            sweep,
+                            batch.balance().capacityG());
             landing = l.predicted();
             chance = l.chance();
         }
@@ -179,8 +183,11 @@ public final class MadeBatch {
             List<MeasuredValue> values = new ArrayList<>();
             for (Entry e : entries) {
                 if (e.value().isBlank()) continue;
-                String where = Words.sign(e.quantity()) + " at " + org.hazewright.optics.Figures.plain(e.wavelengthNm()) + " nm";
-                if (e.u().isBlank()) throw new Refusal("Say how well " + where + " is known: its standard uncertainty, or a share such as 3 %.");
+                String where = Words.sign(e.quantity()) + " at " + org.hazewright.optics.Figures.plain(e.wavelengthNm())
+                        + " nm";
+                if (e.u().isBlank())
+                    throw new Refusal(
+                            "Say how well " + where + " is known: its standard uncertainty, or a share such as 3 %.");
                 double v = number(where, e.value());
                 double u = e.u().strip().endsWith("%") ? Typed.percent(e.u()) * v : number(where, e.u());
                 values.add(new MeasuredValue(
@@ -221,7 +228,8 @@ public final class MadeBatch {
 
     /** Goes to the balance with the correction that was found. */
     public void weighCorrection() {
-        correction.get()
+        correction
+                .get()
                 .filter(c -> c.outcome() == Correction.Outcome.ADD)
                 .ifPresent(c -> desk.weighCorrection(file, edits.now().withCorrection(c.stocks(), c.items())));
     }
@@ -244,8 +252,7 @@ public final class MadeBatch {
 
     static void tell(Notices notices, Logbook.Recorded recorded) {
         notices.tell(recorded.waiting()
-                .map(why -> Notice.wrong(
-                        "logbook", "The batch is written; the logbook has to wait. " + why))
+                .map(why -> Notice.wrong("logbook", "The batch is written; the logbook has to wait. " + why))
                 .orElse(Notice.told("logbook", "Recorded in " + recorded.kept() + ".")));
     }
 }

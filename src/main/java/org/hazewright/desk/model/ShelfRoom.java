@@ -237,7 +237,10 @@ public final class ShelfRoom {
     public Optional<String> add(Entry f) {
         try {
             IngredientWriter.Plain plain = plain(f);
-            write(() -> IngredientWriter.write(desk.shelfProperty().get().folder().orElseThrow(), plain), plain.id());
+            write(
+                    () -> IngredientWriter.write(
+                            desk.shelfProperty().get().folder().orElseThrow(), plain),
+                    plain.id());
             return Optional.empty();
         } catch (Refusal refusal) {
             return Optional.of(refusal.getMessage());
@@ -299,9 +302,7 @@ public final class ShelfRoom {
                     uAbsorption.isBlank() ? parent.uncertainty().absorption() : share("absorption", uAbsorption),
                     uScattering.isBlank() ? parent.uncertainty().scattering() : share("scattering", uScattering));
             Ingredient made = asLot(parent, LotWriter.id(parent.kind(), number.strip()), lot, source, u);
-            write(
-                    () -> LotWriter.write(desk.shelfProperty().get().folder().orElseThrow(), made, List.of()),
-                    made.id());
+            write(() -> LotWriter.write(desk.shelfProperty().get().folder().orElseThrow(), made, List.of()), made.id());
             return Optional.empty();
         } catch (Refusal refusal) {
             return Optional.of(refusal.getMessage());
@@ -312,9 +313,7 @@ public final class ShelfRoom {
     public Optional<String> addLearned(Ingredient parent, NewLot lot, org.hazewright.learning.Factors after) {
         try {
             Ingredient made = lot.learned(parent, after);
-            write(
-                    () -> LotWriter.write(desk.shelfProperty().get().folder().orElseThrow(), made, List.of()),
-                    made.id());
+            write(() -> LotWriter.write(desk.shelfProperty().get().folder().orElseThrow(), made, List.of()), made.id());
             return Optional.empty();
         } catch (Refusal refusal) {
             return Optional.of(refusal.getMessage());
@@ -362,7 +361,9 @@ public final class ShelfRoom {
                 files -> {
                     desk.readShelfAgain();
                     desk.notices()
-                            .tell(Notice.told("shelf", "On the shelf: " + id + " (" + files.get(0).getFileName() + ")."));
+                            .tell(Notice.told(
+                                    "shelf",
+                                    "On the shelf: " + id + " (" + files.get(0).getFileName() + ")."));
                 },
                 failure -> desk.notices().tell(Notice.wrong("shelf", Papers.words(failure))));
     }

@@ -36,9 +36,11 @@ final class WeighingSteps {
         Recipe plan = batch.plan();
         if (batch.correctionCount() == 0) return plan;
         List<Item> items = new ArrayList<>();
-        for (int k = 0; k < plan.items().size(); k++) if (batch.corrections().get(k) == 0) items.add(plan.items().get(k));
+        for (int k = 0; k < plan.items().size(); k++)
+            if (batch.corrections().get(k) == 0) items.add(plan.items().get(k));
         List<Stock> stocks = new ArrayList<>(plan.stocks());
-        while (!stocks.isEmpty() && !drawn(stocks.get(stocks.size() - 1), items, stocks)) stocks.remove(stocks.size() - 1);
+        while (!stocks.isEmpty() && !drawn(stocks.get(stocks.size() - 1), items, stocks))
+            stocks.remove(stocks.size() - 1);
         return new Recipe(
                 plan.title(),
                 plan.base(),

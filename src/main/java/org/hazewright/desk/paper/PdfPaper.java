@@ -175,12 +175,11 @@ public final class PdfPaper implements Paper, AutoCloseable {
         public void text(String text, double x, double y, double size, boolean heavy, String colour, Align align) {
             PDFont font = heavy ? bold : plain;
             String known = known(text, font);
-            double left =
-                    switch (align) {
-                        case LEFT -> x;
-                        case CENTRE -> x - width(known, size, heavy) / 2;
-                        case RIGHT -> x - width(known, size, heavy);
-                    };
+            double left = switch (align) {
+                case LEFT -> x;
+                case CENTRE -> x - width(known, size, heavy) / 2;
+                case RIGHT -> x - width(known, size, heavy);
+            };
             act(() -> {
                 fill(colour, 1);
                 content.beginText();

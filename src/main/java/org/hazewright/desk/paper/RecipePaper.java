@@ -62,8 +62,8 @@ public final class RecipePaper {
         pen.text(brief.title(), LEFT, y, 17, true, c.ink(), Pen.Align.LEFT);
         y += 17;
         pen.text(
-                Words.shortName(recipe.base()) + ", " + Figures.plain(Math.rint(10 * brief.volumeMl()) / 10) + " mL to make, used at "
-                        + Figures.plain(brief.temperatureC()) + " °C",
+                Words.shortName(recipe.base()) + ", " + Figures.plain(Math.rint(10 * brief.volumeMl()) / 10)
+                        + " mL to make, used at " + Figures.plain(brief.temperatureC()) + " °C",
                 LEFT,
                 y,
                 SIZE,
@@ -167,9 +167,23 @@ public final class RecipePaper {
                 at += LINE - 1.5;
             }
             if (weighs) {
-                pen.text(Words.grams(s.weighing().get().massG(), balance) + " g", RIGHT - 84, y, 12, true, c.ink(), Pen.Align.RIGHT);
-                s.allowed().ifPresent(a -> pen.text(
-                        Grams.band(a.lowG(), a.highG(), balance), RIGHT - 84, y + 11, 7.5, false, c.amberText(), Pen.Align.RIGHT));
+                pen.text(
+                        Words.grams(s.weighing().get().massG(), balance) + " g",
+                        RIGHT - 84,
+                        y,
+                        12,
+                        true,
+                        c.ink(),
+                        Pen.Align.RIGHT);
+                s.allowed()
+                        .ifPresent(a -> pen.text(
+                                Grams.band(a.lowG(), a.highG(), balance),
+                                RIGHT - 84,
+                                y + 11,
+                                7.5,
+                                false,
+                                c.amberText(),
+                                Pen.Align.RIGHT));
                 pen.box(RIGHT - 76, y - 11, 76, 17, 2, null, 1, c.slate(), 0.8);
             }
             y += tall;
@@ -191,13 +205,41 @@ public final class RecipePaper {
             before = nm;
             int decimals = Figures.decimalsFor(Math.min(p.point().tolerancePerCm(), p.uPerCm() > 0 ? p.uPerCm() : 1));
             pen.text(Words.sign(p.point().quantity()), x[1], y, SIZE, false, c.amberText(), Pen.Align.LEFT);
-            pen.text(Figures.fixed(p.point().wantedPerCm(), decimals), x[2], y, SIZE, false, c.amberText(), Pen.Align.RIGHT);
-            pen.text(Figures.fixed(p.point().tolerancePerCm(), decimals), x[3], y, SIZE, false, c.slate(), Pen.Align.RIGHT);
-            pen.text(Figures.withUncertainty(p.perCm(), p.uPerCm()), x[4] + 10, y, SIZE, false, p.inside() ? c.teal() : c.brick(), Pen.Align.RIGHT);
+            pen.text(
+                    Figures.fixed(p.point().wantedPerCm(), decimals),
+                    x[2],
+                    y,
+                    SIZE,
+                    false,
+                    c.amberText(),
+                    Pen.Align.RIGHT);
+            pen.text(
+                    Figures.fixed(p.point().tolerancePerCm(), decimals),
+                    x[3],
+                    y,
+                    SIZE,
+                    false,
+                    c.slate(),
+                    Pen.Align.RIGHT);
+            pen.text(
+                    Figures.withUncertainty(p.perCm(), p.uPerCm()),
+                    x[4] + 10,
+                    y,
+                    SIZE,
+                    false,
+                    p.inside() ? c.teal() : c.brick(),
+                    Pen.Align.RIGHT);
             gauge(x[4] + 40, y - 3, 120, p.miss());
             y += LINE;
         }
-        pen.text("± is the tolerance; after a prediction its standard uncertainty (k = 1)", LEFT, y, 7.5, false, c.slate(), Pen.Align.LEFT);
+        pen.text(
+                "± is the tolerance; after a prediction its standard uncertainty (k = 1)",
+                LEFT,
+                y,
+                7.5,
+                false,
+                c.slate(),
+                Pen.Align.LEFT);
         y += LINE;
     }
 
@@ -252,7 +294,15 @@ public final class RecipePaper {
 
         @Override
         public void box(
-                double x, double y, double w, double h, double radius, String fill, double opacity, String stroke, double width) {
+                double x,
+                double y,
+                double w,
+                double h,
+                double radius,
+                String fill,
+                double opacity,
+                String stroke,
+                double width) {
             pen.box(x + dx, y + dy, w, h, radius, fill, opacity, stroke, width);
         }
 

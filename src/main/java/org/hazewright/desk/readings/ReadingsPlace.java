@@ -87,7 +87,9 @@ public final class ReadingsPlace extends VBox {
     }
 
     private static Field asked(Supplier<Double> value, Function<String, Optional<String>> take, String name) {
-        return new Field(() -> Figures.plain(value.get()), take, true).named(name).fitted(1);
+        return new Field(() -> Figures.plain(value.get()), take, true)
+                .named(name)
+                .fitted(1);
     }
 
     private static Node card(Label title, Picture picture, Label said) {
@@ -126,9 +128,12 @@ public final class ReadingsPlace extends VBox {
             return;
         }
         Foreseen.Distances d = f.distances().get();
-        distancesSaid.setText(Figures.plain(f.asked().distanceMm()) + " mm: " + Figures.withUncertainty(d.attenuationDb(), d.uDb()) + " dB" + doubt(d.holds()));
+        distancesSaid.setText(Figures.plain(f.asked().distanceMm()) + " mm: "
+                + Figures.withUncertainty(d.attenuationDb(), d.uDb()) + " dB" + doubt(d.holds()));
         tip(distancesSaid, d.note());
-        double[] logs = java.util.Arrays.stream(d.perMm2()).map(v -> Math.log10(Math.max(v, 1e-30))).toArray();
+        double[] logs = java.util.Arrays.stream(d.perMm2())
+                .map(v -> Math.log10(Math.max(v, 1e-30)))
+                .toArray();
         distances.show((pen, w, h) -> curve(pen, w, h, d.mm(), logs, f.asked().distanceMm(), "mm", false));
         distances.setAccessibleText("diffuse reflectance over distance, " + distancesSaid.getText());
     }
@@ -148,7 +153,8 @@ public final class ReadingsPlace extends VBox {
             return;
         }
         Foreseen.Pulse p = f.pulse().get();
-        pulseSaid.setText("mean " + Figures.withUncertainty(p.meanPs() / 1000, p.uPs() / 1000) + " ns" + doubt(p.holds()));
+        pulseSaid.setText(
+                "mean " + Figures.withUncertainty(p.meanPs() / 1000, p.uPs() / 1000) + " ns" + doubt(p.holds()));
         tip(pulseSaid, p.note());
         double[] ns = java.util.Arrays.stream(p.ps()).map(t -> t / 1000).toArray();
         pulse.show((pen, w, h) -> curve(pen, w, h, cut(ns, p), cutHeights(p), p.meanPs() / 1000, "ns", true));
@@ -202,10 +208,10 @@ public final class ReadingsPlace extends VBox {
             return;
         }
         Foreseen.Slab s = f.slab().get();
-        slabSaid.setText(Figures.plain(f.asked().thicknessMm()) + " mm thick, through " + percent(s.through(), s.uThrough()));
+        slabSaid.setText(
+                Figures.plain(f.asked().thicknessMm()) + " mm thick, through " + percent(s.through(), s.uThrough()));
         slab.show((pen, w, h) -> slab(pen, w, h, s));
-        slab.setAccessibleText(
-                "slab, reflected " + percent(s.reflected(), s.uReflected()) + ", " + slabSaid.getText());
+        slab.setAccessibleText("slab, reflected " + percent(s.reflected(), s.uReflected()) + ", " + slabSaid.getText());
     }
 
     private static String percent(double share, double u) {
@@ -227,7 +233,14 @@ public final class ReadingsPlace extends VBox {
             pen.box(0, y, w, bar, 2, c.milk(), 1, null, 0);
             pen.box(0, y, Math.max(1, w * share[k]), bar, 2, fill[k], 1, c.line(), 1);
             pen.text(name[k], 0.4 * em, y + bar / 2 + 0.35 * em, em, false, c.ink(), Pen.Align.LEFT);
-            pen.text(Figures.significant(100 * share[k], 2) + " %", w - 0.3 * em, y + bar / 2 + 0.35 * em, em, false, c.slate(), Pen.Align.RIGHT);
+            pen.text(
+                    Figures.significant(100 * share[k], 2) + " %",
+                    w - 0.3 * em,
+                    y + bar / 2 + 0.35 * em,
+                    em,
+                    false,
+                    c.slate(),
+                    Pen.Align.RIGHT);
         }
     }
 
@@ -243,7 +256,8 @@ public final class ReadingsPlace extends VBox {
         boolean strange = b.saturation() < 0 || b.saturation() > 1;
         saturationSaid.setText("± " + Figures.significant(100 * b.uSaturation(), 2) + " % oxygen saturation"
                 + (strange ? "; ✕ no blood reads so" : ""));
-        wanted.setText(Double.isNaN(b.wanted()) ? "" : "wanted " + Figures.plain(Math.rint(1000 * b.wanted()) / 10) + " %");
+        wanted.setText(
+                Double.isNaN(b.wanted()) ? "" : "wanted " + Figures.plain(Math.rint(1000 * b.wanted()) / 10) + " %");
         Say.show(wanted, !wanted.getText().isEmpty());
         bloodSaid.setText("Hb " + Figures.withUncertainty(b.umolPerL(), b.uUmolPerL()) + " µmol/L");
         saturation.setTooltip(new Tooltip("What an oximeter would believe that reads µa at the targets' wavelengths."));

@@ -102,7 +102,10 @@ public final class RecipePlace extends VBox {
         if (shown.following() && following) return; // the rest follows when the hand rests
         following = shown.following();
         if (following) {
-            limits.getChildren().setAll(Say.heading("What holds it back"), Say.wrapped("The amounts follow; the search goes on when you rest.", "quiet"));
+            limits.getChildren()
+                    .setAll(
+                            Say.heading("What holds it back"),
+                            Say.wrapped("The amounts follow; the search goes on when you rest.", "quiet"));
             return;
         }
         causes(o);
@@ -171,7 +174,8 @@ public final class RecipePlace extends VBox {
         head.setAlignment(Pos.BASELINE_LEFT);
         if (looking) head.getChildren().add(Say.label("looking …", "quiet", "small"));
         if (chosen)
-            head.getChildren().add(new Word("back to the best", () -> desk.editing().choose(Optional.empty())));
+            head.getChildren()
+                    .add(new Word("back to the best", () -> desk.editing().choose(Optional.empty())));
         ways.getChildren().setAll(head, flow);
         Say.show(
                 ways,
@@ -185,8 +189,7 @@ public final class RecipePlace extends VBox {
         gauge.land(c.worstMiss());
         gauge.getStyleClass().add("in-card");
         boolean meets = c.outlook().meets();
-        Label chance =
-                Say.label(meets ? Words.times(c.chance()) + " in 100" : "✕ misses", meets ? "lands" : "missed");
+        Label chance = Say.label(meets ? Words.times(c.chance()) + " in 100" : "✕ misses", meets ? "lands" : "missed");
         VBox inside = new VBox(
                 Say.label(Words.capital(c.title()), "strong"),
                 Say.label(c.weighings() + " weighings", "quiet", "small"),

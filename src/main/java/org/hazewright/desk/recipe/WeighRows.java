@@ -100,7 +100,8 @@ final class WeighRows extends VBox {
 
     private static double volumeMl(Recipe recipe) {
         double ml = 0;
-        for (var e : recipe.massesG().entrySet()) ml += e.getValue() / e.getKey().densityGPerMl();
+        for (var e : recipe.massesG().entrySet())
+            ml += e.getValue() / e.getKey().densityGPerMl();
         return ml;
     }
 
@@ -109,7 +110,8 @@ final class WeighRows extends VBox {
         Ingredient i = item.ingredient();
         int loads = balance.loads(item.massG());
         if (loads > 1) notes.add("in " + loads + " loads");
-        if (item.stock().isEmpty() && i.form() == Form.LIQUID) notes.add(Words.volume(item.massG() / i.densityGPerMl()));
+        if (item.stock().isEmpty() && i.form() == Form.LIQUID)
+            notes.add(Words.volume(item.massG() / i.densityGPerMl()));
         i.making().addBelowC().ifPresent(c -> notes.add("below " + Figures.plain(c) + " °C"));
         if (i.making().addLast()) notes.add("last");
         if (i.settles()) notes.add("settles: keep stirring");

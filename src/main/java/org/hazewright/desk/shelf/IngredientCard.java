@@ -36,20 +36,27 @@ final class IngredientCard extends VBox {
         getChildren().clear();
         room.chosenProperty()
                 .get()
-                .ifPresentOrElse(this::show, () -> getChildren()
-                        .add(Say.wrapped("Choose an ingredient to see what is known of it.", "quiet")));
+                .ifPresentOrElse(
+                        this::show,
+                        () -> getChildren()
+                                .add(Say.wrapped("Choose an ingredient to see what is known of it.", "quiet")));
     }
 
     private void show(Ingredient i) {
         List<Node> all = new ArrayList<>();
         all.add(Say.wrapped(i.name(), "headline"));
         String mixes = i.families().stream().map(Family::word).sorted().collect(Collectors.joining(", "));
-        all.add(Say.wrapped(i.part().word() + " · " + (i.part() == org.hazewright.shelf.Part.BASE ? mixes : "mixes into " + mixes)
-                + " · " + i.form().word() + (i.isBlend() ? "" : " · " + Figures.plain(i.densityGPerMl()) + " g/mL"), "quiet"));
+        all.add(Say.wrapped(
+                i.part().word() + " · " + (i.part() == org.hazewright.shelf.Part.BASE ? mixes : "mixes into " + mixes)
+                        + " · " + i.form().word()
+                        + (i.isBlend() ? "" : " · " + Figures.plain(i.densityGPerMl()) + " g/mL"),
+                "quiet"));
         i.lot().ifPresent(l -> {
             String dates = l.expires().map(d -> ", use by " + d).orElse("");
             boolean late = l.expiredOn(LocalDate.now());
-            all.add(Say.wrapped((late ? "✕ " : "") + "lot " + l.number() + dates + (late ? ", past its date" : ""), late ? "missed" : "quiet"));
+            all.add(Say.wrapped(
+                    (late ? "✕ " : "") + "lot " + l.number() + dates + (late ? ", past its date" : ""),
+                    late ? "missed" : "quiet"));
         });
         Word star = new Word(room.favourite(i.id()) ? "★ favourite" : "☆ make it a favourite", () -> {
             room.favourite(i.id(), !room.favourite(i.id()));
@@ -74,15 +81,22 @@ final class IngredientCard extends VBox {
                     + percent(i.uncertainty().scattering()) + " (k = 1)"));
         } else {
             all.add(Say.heading("What it is mixed of"));
-            i.blend().forEach(p -> all.add(Say.wrapped(Figures.plain(Math.round(1e4 * p.massFraction()) / 100.0) + " % " + p.ingredient())));
+            i.blend()
+                    .forEach(p -> all.add(Say.wrapped(
+                            Figures.plain(Math.round(1e4 * p.massFraction()) / 100.0) + " % " + p.ingredient())));
         }
-        i.maxGPerMl().ifPresent(v -> all.add(Say.wrapped("at most " + Figures.plain(v) + " g in a mL of phantom", "quiet")));
+        i.maxGPerMl()
+                .ifPresent(v -> all.add(Say.wrapped("at most " + Figures.plain(v) + " g in a mL of phantom", "quiet")));
         i.pricePerG().ifPresent(v -> all.add(Say.wrapped("price " + Figures.plain(v) + " per g", "quiet")));
         all.add(Say.heading("Where its figures are from"));
-        all.add(Say.wrapped(i.source().basis().word() + (i.source().citation().isEmpty() ? "" : ": " + i.source().citation())));
+        all.add(Say.wrapped(i.source().basis().word()
+                + (i.source().citation().isEmpty() ? "" : ": " + i.source().citation())));
         section(all, "Handling", i.handling());
         section(all, "Mind", i.cautions());
-        section(all, "Not with", i.conflicts().stream().map(c -> c.with() + ": " + c.why()).toList());
+        section(
+                all,
+                "Not with",
+                i.conflicts().stream().map(c -> c.with() + ": " + c.why()).toList());
         lot.of(i);
         all.add(lot);
         getChildren().setAll(all);

@@ -73,11 +73,13 @@ final class IngredientForm extends VBox {
         choice(grid, "figures are", Source.Basis.values(), basis, b -> basis = b);
         ask(grid, "citation", "who, where, when", 20);
 
-        Word choose = new Word("choose a CSV file…", () -> chooser.open("Table of absorption", "Tables", ".csv", ".txt", ".tsv")
-                        .ifPresent(p -> {
-                            table = Optional.of(p);
-                            tableSaid.setText(p.getFileName().toString());
-                        }))
+        Word choose = new Word(
+                        "choose a CSV file…",
+                        () -> chooser.open("Table of absorption", "Tables", ".csv", ".txt", ".tsv")
+                                .ifPresent(p -> {
+                                    table = Optional.of(p);
+                                    tableSaid.setText(p.getFileName().toString());
+                                }))
                 .styled("strong");
         HBox file = new HBox(choose, tableSaid);
         file.getStyleClass().add("gap-s");
@@ -97,7 +99,9 @@ final class IngredientForm extends VBox {
         getChildren()
                 .addAll(
                         Say.label("A new ingredient", "headline"),
-                        Say.wrapped("The table has the wavelength in nm in its first column and the value in its second, base e.", "quiet"),
+                        Say.wrapped(
+                                "The table has the wavelength in nm in its first column and the value in its second, base e.",
+                                "quiet"),
                         grid,
                         wrong,
                         add,
@@ -109,10 +113,13 @@ final class IngredientForm extends VBox {
     }
 
     private Field ask(GridPane grid, String what, String prompt, int columns) {
-        Field f = new Field(() -> typed.getOrDefault(what, ""), text -> {
-                    typed.put(what, text);
-                    return Optional.empty();
-                }, true)
+        Field f = new Field(
+                        () -> typed.getOrDefault(what, ""),
+                        text -> {
+                            typed.put(what, text);
+                            return Optional.empty();
+                        },
+                        true)
                 .named(what)
                 .styled("boxed")
                 .columns(columns);

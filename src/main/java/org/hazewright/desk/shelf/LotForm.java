@@ -11,8 +11,8 @@ import org.hazewright.desk.model.ShelfRoom;
 import org.hazewright.desk.parts.Field;
 import org.hazewright.desk.parts.Say;
 import org.hazewright.desk.parts.Word;
-import org.hazewright.shelf.Ingredient;
 import org.hazewright.files.LotWriter;
+import org.hazewright.shelf.Ingredient;
 
 /** Puts a new bottle of an ingredient on the shelf. */
 final class LotForm extends VBox {
@@ -51,10 +51,13 @@ final class LotForm extends VBox {
     }
 
     private void ask(GridPane grid, String what, String prompt) {
-        Field f = new Field(() -> typed.getOrDefault(what, ""), text -> {
-                    typed.put(what, text);
-                    return Optional.empty();
-                }, true)
+        Field f = new Field(
+                        () -> typed.getOrDefault(what, ""),
+                        text -> {
+                            typed.put(what, text);
+                            return Optional.empty();
+                        },
+                        true)
                 .named("lot: " + what)
                 .styled("boxed")
                 .columns(10);

@@ -91,10 +91,13 @@ public final class ShelfView extends BorderPane {
     }
 
     private Node left() {
-        Field find = new Field(() -> room.findProperty().get(), text -> {
-                    room.findProperty().set(text);
-                    return Optional.empty();
-                }, true)
+        Field find = new Field(
+                        () -> room.findProperty().get(),
+                        text -> {
+                            room.findProperty().set(text);
+                            return Optional.empty();
+                        },
+                        true)
                 .named("find an ingredient")
                 .styled("boxed");
         find.setPromptText("find");
@@ -113,14 +116,20 @@ public final class ShelfView extends BorderPane {
 
     private void add() {
         if (room.own()) {
-            right.getChildren().setAll(new IngredientForm(room, chooser, () -> right.getChildren().setAll(card)));
+            right.getChildren()
+                    .setAll(new IngredientForm(
+                            room, chooser, () -> right.getChildren().setAll(card)));
             return;
         }
         VBox ask = new VBox(
                 Say.label("The shelf of the program is not written into", "headline"),
-                Say.wrapped("Make a shelf of your own first: a copy of this one in a folder that you choose. It is used from"
-                        + " then on."),
-                new Word("choose a folder…", () -> chooser.folder("Choose an empty folder for your shelf").ifPresent(room::makeOwn))
+                Say.wrapped(
+                        "Make a shelf of your own first: a copy of this one in a folder that you choose. It is used from"
+                                + " then on."),
+                new Word(
+                                "choose a folder…",
+                                () -> chooser.folder("Choose an empty folder for your shelf")
+                                        .ifPresent(room::makeOwn))
                         .styled("strong"));
         ask.getStyleClass().add("gap-m");
         right.getChildren().setAll(ask);
@@ -206,7 +215,9 @@ public final class ShelfView extends BorderPane {
             new ComparePlot(room.linesProperty().get(), scatters, look.palette(), w, h, look.em())
                     .draw(new CanvasPen(canvas.getGraphicsContext2D()));
             setAccessibleText((scatters ? "reduced scattering of " : "absorption of ")
-                    + Words.join(room.linesProperty().get().stream().map(l -> Words.shortName(l.ingredient())).toList()));
+                    + Words.join(room.linesProperty().get().stream()
+                            .map(l -> Words.shortName(l.ingredient()))
+                            .toList()));
         }
     }
 }

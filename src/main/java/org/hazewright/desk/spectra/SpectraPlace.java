@@ -60,7 +60,14 @@ public final class SpectraPlace extends VBox {
         Label dot1 = Say.quiet("·");
         Label dot2 = Say.quiet("·");
         HBox head = new HBox(
-                4, Say.place("Spectra"), Say.spring(), sharing, dot1, range, dot2, new Word("save picture…", savePicture));
+                4,
+                Say.place("Spectra"),
+                Say.spring(),
+                sharing,
+                dot1,
+                range,
+                dot2,
+                new Word("save picture…", savePicture));
         head.setAlignment(javafx.geometry.Pos.BASELINE_LEFT);
         VBox.setVgrow(surface, Priority.ALWAYS);
         getChildren().addAll(head, surface);
@@ -79,8 +86,8 @@ public final class SpectraPlace extends VBox {
         sharing.setText(shares ? "hide shares" : "show shares");
         double[] r = range();
         range.setText(Figures.plain(r[0]) + "–" + Figures.plain(r[1]) + " nm");
-        range.setAccessibleText(
-                "wavelengths drawn: " + range.getText() + (whole ? ", press for those around the targets" : ", press for all"));
+        range.setAccessibleText("wavelengths drawn: " + range.getText()
+                + (whole ? ", press for those around the targets" : ", press for all"));
         surface.redraw();
     }
 
@@ -105,7 +112,8 @@ public final class SpectraPlace extends VBox {
     public SpectraPlot picture(org.hazewright.desk.look.Palette palette, double w, double h, double em) {
         double[] r = range();
         return new SpectraPlot(
-                SpectraPlot.boxes(desk.edits().now(), desk.solving().shownProperty().get()),
+                SpectraPlot.boxes(
+                        desk.edits().now(), desk.solving().shownProperty().get()),
                 desk.solving().curvesProperty().get(),
                 new SpectraPlot.View(r[0], r[1], !whole, shares, Double.NaN, Optional.empty()),
                 Optional.empty(),
@@ -180,7 +188,8 @@ public final class SpectraPlace extends VBox {
                     SpectraPlot.boxes(
                             desk.edits().now(), desk.solving().shownProperty().get()),
                     desk.solving().curvesProperty().get(),
-                    new SpectraPlot.View(r[0], r[1], !whole, shares, pointerNm, isFocused() || dragging ? held : Optional.empty()),
+                    new SpectraPlot.View(
+                            r[0], r[1], !whole, shares, pointerNm, isFocused() || dragging ? held : Optional.empty()),
                     hold,
                     look.palette(),
                     w,
@@ -269,5 +278,4 @@ public final class SpectraPlace extends VBox {
             point(held.get().nm());
         }
     }
-
 }
