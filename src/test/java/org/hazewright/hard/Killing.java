@@ -36,7 +36,10 @@ public final class Killing {
     }
 
     public static void main(String[] args) throws Exception {
-        int kept = run(Path.of(args[0]).toAbsolutePath(), Integer.parseInt(args[1]), Long.parseLong(args[2]),
+        int kept = run(
+                Path.of(args[0]).toAbsolutePath(),
+                Integer.parseInt(args[1]),
+                Long.parseLong(args[2]),
                 args.length > 3 ? Integer.parseInt(args[3]) : 1);
         System.out.println(kept + " acknowledged batches, none lost, after " + args[1] + " kills.");
     }
@@ -117,7 +120,8 @@ public final class Killing {
             BatchReader.read(folder.resolve(id + ".batch.toml"), Seeds.shelf());
         }
         for (Path file : Seeds.files(folder))
-            if (file.toString().endsWith(".batch.toml")) BatchReader.read(file, Seeds.shelf()); // whole, acknowledged or not
+            if (file.toString().endsWith(".batch.toml"))
+                BatchReader.read(file, Seeds.shelf()); // whole, acknowledged or not
     }
 
     /** Batches in the logbook and in the records that wait beside it. */
