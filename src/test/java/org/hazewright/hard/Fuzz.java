@@ -4,6 +4,7 @@ import java.io.File;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.nio.file.StandardCopyOption;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.concurrent.TimeUnit;
@@ -50,9 +51,15 @@ public final class Fuzz {
         Path corpus = Files.createDirectories(folder.resolve("corpus"));
         Path dictionary = Files.writeString(folder.resolve("words.dict"), Seeds.dictionary(things, door));
         Path log = folder.resolve("log.txt");
+        for (Path old : files(folder, "found-").toList())
+            Files.move(
+                    old,
+                    Files.createDirectories(folder.resolve("earlier")).resolve(old.getFileName()),
+                    StandardCopyOption.REPLACE_EXISTING);
         Process engine = new ProcessBuilder(
                         Path.of(System.getProperty("java.home"), "bin", "java").toString(),
                         "-Xmx512m",
+                        "-da:org.tomlj...", // its own assertions; the program is never run with them
                         "-Ddoor=" + door,
                         "-Djava.awt.headless=true",
                         "-cp",

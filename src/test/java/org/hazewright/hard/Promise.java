@@ -34,7 +34,7 @@ final class Promise {
         String end = message.strip();
         if (":,;(".indexOf(end.charAt(end.length() - 1)) >= 0)
             throw new AssertionError("A refusal that breaks off: " + message);
-        if (MACHINE.matcher(message).matches() && !MACHINE.matcher(input).matches())
+        if (MACHINE.matcher(message).matches() && !MACHINE.matcher(input).matches() && !input.contains("null"))
             throw new AssertionError("A refusal in the words of a machine: " + message);
     }
 
