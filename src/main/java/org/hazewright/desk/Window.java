@@ -116,9 +116,15 @@ public final class Window {
         });
     }
 
+    /** How a file is opened with the program that the system has for it. */
+    public void opensOutside(Consumer<Path> opener) {
+        desk.opensOutside(opener);
+    }
+
     public void show() {
         stage.show();
-        desk.edits().nowProperty().addListener(new javafx.beans.value.ChangeListener<>() {
+        if (desk.edits().now() != null) brief.focusFirst();
+        else desk.edits().nowProperty().addListener(new javafx.beans.value.ChangeListener<>() {
             @Override
             public void changed(javafx.beans.value.ObservableValue<? extends Draft> p, Draft before, Draft now) {
                 desk.edits().nowProperty().removeListener(this);

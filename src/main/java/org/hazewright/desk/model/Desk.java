@@ -7,6 +7,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.function.Consumer;
 import java.util.function.Function;
 import javafx.beans.property.ReadOnlyObjectProperty;
 import javafx.beans.property.ReadOnlyObjectWrapper;
@@ -49,6 +50,7 @@ public final class Desk {
     private final Work.Lane preparing;
     private final ReadOnlyObjectWrapper<Optional<MadeBatch>> made = new ReadOnlyObjectWrapper<>(Optional.empty());
     private final ReadOnlyObjectWrapper<Optional<AtBalance>> weighing = new ReadOnlyObjectWrapper<>(Optional.empty());
+    private Optional<Consumer<Path>> outside = Optional.empty();
     private volatile Tissue.Spectra spectra;
 
     public Desk(Work work, Optional<Path> shelfFolder, Remembered remembered) {
@@ -285,7 +287,7 @@ public final class Desk {
                     remembered.used(file);
                     weighing.set(Optional.empty());
                     made.set(Optional.of(new MadeBatch(this, file, batch)));
-                    MadeBatch.tell(notices, recorded);
+                    MadeBatch.tell(this, recorded);
                 },
                 failure -> notices.tell(Notice.wrong("balance", Papers.words(failure))));
     }
@@ -328,7 +330,8 @@ public final class Desk {
                     SafeFile.write(named, bytes, SafeFile.Overwrite.REPLACE);
                     return named;
                 },
-                written -> notices.tell(Notice.told("sheet", "Saved: " + written + ".")),
+                written -> notices.tell(
+                        new Notice(Notice.Kind.TOLD, "sheet", "Saved: " + written + ".", showing(written))),
                 failure -> notices.tell(Notice.wrong("sheet", Papers.words(failure))));
     }
 
@@ -355,6 +358,16 @@ public final class Desk {
         Tissue.Spectra known = spectra;
         if (known == null) spectra = known = papers.spectra().get();
         return known;
+    }
+
+    /** Says how a file is opened with another program. */
+    public void opensOutside(Consumer<Path> opener) {
+        outside = Optional.of(opener);
+    }
+
+    /** A way to see a file that was written; none where no other program can be asked. */
+    List<Notice.Way> showing(Path file) {
+        return outside.map(o -> List.of(new Notice.Way("show it", () -> o.accept(file)))).orElse(List.of());
     }
 
     public Work work() {
