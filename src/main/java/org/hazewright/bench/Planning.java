@@ -89,6 +89,9 @@ final class Planning {
 
     /** The ways that the wish allows; never none. */
     private List<Dose> wished(List<Dose> ways) {
+        Dose undiluted = Dose.neat(ways.get(0).ingredient(), ways.get(0).massG());
+        if (wish == StockPlan.Wish.NO_NEW_STOCK && SharedStocks.neatEnough(undiluted, balance))
+            return List.of(undiluted);
         boolean hand = wish == StockPlan.Wish.STOCK_IN_HAND || wish == StockPlan.Wish.NO_NEW_STOCK;
         if (!hand) return ways;
         List<Dose> inHand = ways.stream().filter(Dose::inHand).toList();

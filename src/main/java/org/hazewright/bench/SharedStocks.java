@@ -19,10 +19,11 @@ import org.hazewright.shelf.Ingredient;
 /**
  * Stocks that several mixtures draw from, each made once in an amount that covers all of its draws.
  *
- * <p>For every ingredient one way of dosing is chosen for all mixtures: neat, one stock, or two in series with each mixture drawing
- * from whichever suits it. A way costs the squared half-widths that its weighings add over all mixtures, first-order, and {@value
- * #PER_WEIGHING} for each weighing that makes a stock; a dose below the balance's smallest load costs {@value #UNWEIGHABLE} more.
- * Ratios are those of a single recipe's stocks; the grams that go in are the smallest round ones that leave a tenth to spare and can be weighed well.
+ * <p>For every ingredient one way of dosing is chosen for all mixtures, but for those that weigh it well neat: neat, one stock, or
+ * two in series with each mixture drawing from whichever suits it. A way costs the squared half-widths that its weighings add
+ * over all mixtures, first-order, and {@value #PER_WEIGHING} for each weighing that makes a stock; a dose below the balance's
+ * smallest load costs {@value #UNWEIGHABLE} more. Ratios are those of a single recipe's stocks; the grams that go in are the
+ * smallest round ones that leave a tenth to spare and can be weighed well.
  */
 final class SharedStocks {
     private static final int[] RATIOS = {10, 20, 50, 100, 200, 500, 1000};
@@ -34,6 +35,13 @@ final class SharedStocks {
     private static final double GOOD = 0.002;
     private static final double PER_WEIGHING = 0.01;
     private static final double UNWEIGHABLE = 10;
+
+    /** A neat dose this good, one part in a thousand, is never drawn from a stock: it would only bring bulk. */
+    private static final double NEAT_ENOUGH = 1e-3;
+
+    static boolean neatEnough(Dose neat, Balance balance) {
+        return Dilutions.weighable(neat.massG(), balance) && neat.relativeUncertainty(balance) <= NEAT_ENOUGH;
+    }
 
     /** One mixture to be made: what it holds, and the model that judges it. */
     record Need(Contents contents, Frozen frozen) {}
@@ -113,6 +121,8 @@ final class SharedStocks {
         double[] drawn = new double[stocks.size()];
         for (int n = 0; n < from.length; n++) {
             double most = Double.POSITIVE_INFINITY;
+            from[n] = -1;
+            if (neatEnough(dose(i, with.get(n), stocks, -1), balance)) continue;
             for (int level = stocks.isEmpty() ? -1 : 0; level < stocks.size(); level++) {
                 double cost = cost(i, with.get(n), stocks, level);
                 if (cost < most) {

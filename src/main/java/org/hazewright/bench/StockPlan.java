@@ -34,7 +34,7 @@ public record StockPlan(
         FEWEST_WEIGHINGS,
         /** Stocks in hand are used for whatever they hold. */
         STOCK_IN_HAND,
-        /** The same, and no new stock is made. */
+        /** The same but for what is weighed neat to one part in a thousand, and no new stock is made. */
         NO_NEW_STOCK
     }
 

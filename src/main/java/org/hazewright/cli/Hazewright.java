@@ -36,6 +36,7 @@ import picocli.CommandLine.Spec;
             BatchCommand.class,
             CorrectCommand.class,
             LotCommand.class,
+            TargetsCommand.class,
             ParticlesCommand.class,
         },
         footer = {

@@ -1,10 +1,14 @@
 package org.hazewright.desk;
 
 import java.nio.file.Path;
+import java.time.LocalDate;
 import java.util.List;
 import java.util.Optional;
+import java.util.function.Consumer;
 import javafx.scene.Node;
+import javafx.scene.Parent;
 import javafx.scene.Scene;
+import javafx.scene.control.ScrollPane;
 import javafx.scene.input.Clipboard;
 import javafx.scene.input.ClipboardContent;
 import javafx.scene.input.KeyCode;
@@ -28,15 +32,22 @@ import org.hazewright.desk.model.Draft;
 import org.hazewright.desk.model.Edits;
 import org.hazewright.desk.model.Notice;
 import org.hazewright.desk.model.ShelfState;
+import org.hazewright.desk.model.Shown;
+import org.hazewright.desk.paper.PdfPaper;
+import org.hazewright.desk.paper.Printing;
+import org.hazewright.desk.paper.RecipePaper;
 import org.hazewright.desk.parts.Chooser;
 import org.hazewright.desk.parts.Hint;
 import org.hazewright.desk.parts.NoticeBar;
 import org.hazewright.desk.parts.Say;
 import org.hazewright.desk.parts.SystemChooser;
 import org.hazewright.desk.parts.Word;
+import org.hazewright.desk.pen.Pen;
 import org.hazewright.desk.readings.ReadingsPlace;
 import org.hazewright.desk.recipe.RecipePlace;
+import org.hazewright.desk.shelf.ShelfView;
 import org.hazewright.desk.spectra.SpectraPlace;
+import org.hazewright.desk.spectra.SpectraPlot;
 
 /** The window: Brief, Spectra, Recipe and Readings side by side in the order of the work. */
 public final class Window {
@@ -51,9 +62,12 @@ public final class Window {
     private final SpectraPlace spectra;
     private final BriefPlace brief;
     private final RecipePlace recipe;
+    private final ReadingsPlace readings;
     private final Deeds deeds = new Doing();
     private BalanceView balance;
     private BatchView batch;
+    private boolean shelfOpen;
+    private boolean keysOpen;
     private Node atDesk = new StackPane();
     private final Head head;
 
@@ -68,6 +82,7 @@ public final class Window {
         look.scaleProperty().addListener((p, before, now) -> desk.remembered().keep("letters", now.toString()));
         brief = new BriefPlace(desk, deeds::shelf);
         spectra = new SpectraPlace(desk, look, deeds::savePicture);
+        readings = new ReadingsPlace(desk.foreseeing(), look, desk.remembered());
         recipe = new RecipePlace(desk, deeds::print, deeds::saveSheet, deeds::copyGrams);
         head = new Head(desk, look, deeds);
         places.setTop(new VBox(head, new NoticeBar(desk.notices())));
@@ -101,9 +116,15 @@ public final class Window {
         });
     }
 
+    /** How a file is opened with the program that the system has for it. */
+    public void opensOutside(Consumer<Path> opener) {
+        desk.opensOutside(opener);
+    }
+
     public void show() {
         stage.show();
-        desk.edits().nowProperty().addListener(new javafx.beans.value.ChangeListener<>() {
+        if (desk.edits().now() != null) brief.focusFirst();
+        else desk.edits().nowProperty().addListener(new javafx.beans.value.ChangeListener<>() {
             @Override
             public void changed(javafx.beans.value.ObservableValue<? extends Draft> p, Draft before, Draft now) {
                 desk.edits().nowProperty().removeListener(this);
@@ -135,10 +156,10 @@ public final class Window {
         desktop.setId("places");
         brief.getStyleClass().add("brief-width");
         recipe.getStyleClass().add("recipe-width");
-        VBox middle = new VBox(
-                new Hint(desk.remembered(), "drag", "Drag an amber box, or type on the left: the recipe follows."),
-                spectra);
-        middle.getChildren().add(new ReadingsPlace(desk.foreseeing(), look, desk.remembered()));
+        brief.getChildren().add(0, hint("wish", "Say here what is wanted."));
+        recipe.getChildren().add(0, hint("weigh", "These grams give it. When they look right, stand at the balance."));
+        VBox middle = new VBox(hint("drag", "Drag an amber box, or type on the left: the recipe follows."), spectra);
+        middle.getChildren().add(readings);
         middle.getStyleClass().add("middle");
         VBox.setVgrow(spectra, Priority.ALWAYS);
         desktop.setLeft(brief);
@@ -146,6 +167,10 @@ public final class Window {
         desktop.setRight(recipe);
         atDesk = desktop;
         turn();
+    }
+
+    private Hint hint(String name, String words) {
+        return new Hint(desk.remembered(), name, words);
     }
 
     private Node noShelf(ShelfState shelf) {
@@ -190,13 +215,41 @@ public final class Window {
             batch = new BatchView(desk.madeProperty().get().get(), desk::leaveBatch);
             center(batch, false);
             batch.requestFocus();
+        } else if (shelfOpen) {
+            ShelfView view = new ShelfView(
+                    desk.shelfRoom(),
+                    ShelfState.place(desk.shelfProperty().get().folder()),
+                    look,
+                    chooser,
+                    () -> shelf(false));
+            center(view, false);
+            view.requestFocus();
+        } else if (keysOpen) {
+            KeysView view = new KeysView(() -> keys(false));
+            center(view, false);
+            view.requestFocus();
         } else center(atDesk, true);
+    }
+
+    private void shelf(boolean open) {
+        shelfOpen = open;
+        turn();
+    }
+
+    private void keys(boolean open) {
+        keysOpen = open;
+        turn();
     }
 
     /** Puts one view in the window; the head belongs to the desk. */
     private void center(Node view, boolean head) {
         places.setCenter(view);
         Say.show(this.head, head);
+    }
+
+    /** Turns to the shelf. */
+    void openShelf() {
+        shelf(true);
     }
 
     /** The view of the batch that was looked at last; null before the first. */
@@ -221,6 +274,9 @@ public final class Window {
         on(scene, "Shortcut+Minus", () -> look.larger(false));
         on(scene, "F1", deeds::keys);
         on(scene, "Shortcut+Enter", deeds::balance);
+        on(scene, "Shortcut+L", deeds::shelf);
+        on(scene, "F6", () -> nextPlace(1));
+        on(scene, "Shift+F6", () -> nextPlace(-1));
         scene.addEventFilter(javafx.scene.input.KeyEvent.KEY_PRESSED, e -> {
             boolean undo = new KeyCodeCombination(KeyCode.Z, KeyCombination.SHORTCUT_DOWN).match(e);
             boolean redo =
@@ -273,7 +329,7 @@ public final class Window {
     }
 
     private void saveThen(Runnable then) {
-        Optional<org.hazewright.desk.model.Shown> shown =
+        Optional<Shown> shown =
                 Optional.ofNullable(desk.solving().shownProperty().get());
         if (desk.papers().save(shown, then)) return;
         chooser.save("Save the brief", desk.edits().now().name() + ".brief.toml", "Briefs", ".brief.toml")
@@ -358,7 +414,35 @@ public final class Window {
 
         @Override
         public void saveSheet() {
-            desk.notices().tell(Notice.wrong("sheet", "Sheets are not made here yet."));
+            if (settled().isEmpty()) return;
+            chooser.save(
+                            "Save the recipe's sheet",
+                            desk.edits().now().name() + ".xlsx",
+                            "Workbooks and PDF",
+                            ".xlsx",
+                            ".pdf")
+                    .ifPresent(p -> {
+                        Consumer<Pen> plots = spectraOnPaper();
+                        desk.saveSheet(p, shown -> pdf(shown, plots));
+                    });
+        }
+
+        private byte[] pdf(Shown shown, Consumer<Pen> plots) {
+            try (PdfPaper paper = new PdfPaper(shown.outlook().brief().title())) {
+                new RecipePaper(paper, shown.outlook(), shown.answer(), LocalDate.now()).draw(plots);
+                return paper.bytes();
+            }
+        }
+
+        /** Draws the spectra in the room that paper has for them. */
+        private Consumer<Pen> spectraOnPaper() {
+            SpectraPlot plot =
+                    spectra.picture(Palette.LIGHT, RecipePaper.spectraWidth(), RecipePaper.spectraHeight(), 9.5);
+            return plot::draw;
+        }
+
+        private Optional<Shown> settled() {
+            return Optional.ofNullable(desk.solving().shownProperty().get()).filter(s -> !s.following());
         }
 
         @Override
@@ -368,7 +452,14 @@ public final class Window {
 
         @Override
         public void print() {
-            desk.notices().tell(Notice.wrong("print", "Printing is not there yet."));
+            settled()
+                    .flatMap(s -> Printing.print(stage, s.outlook(), s.answer(), spectraOnPaper()))
+                    .ifPresent(words -> desk.notices()
+                            .tell(Notice.asked(
+                                    "print",
+                                    words,
+                                    new Notice.Way("save as PDF…", this::saveSheet),
+                                    new Notice.Way("leave it", () -> {}))));
         }
 
         @Override
@@ -388,7 +479,9 @@ public final class Window {
         }
 
         @Override
-        public void shelf() {}
+        public void shelf() {
+            Window.this.shelf(true);
+        }
 
         @Override
         public void dark(boolean yes) {
@@ -397,11 +490,31 @@ public final class Window {
         }
 
         @Override
-        public void keys() {}
+        public void keys() {
+            Window.this.keys(true);
+        }
     }
 
-    /** The places in the order that F6 visits them. */
-    List<Node> order() {
-        return List.of(brief, spectra, recipe);
+    /** Puts the focus into the next place; a place's own first field or the plots take it. */
+    private void nextPlace(int by) {
+        List<Node> order = List.of(brief, spectra.surface(), recipe, readings);
+        Node focused = stage.getScene().getFocusOwner();
+        int at = -1;
+        for (Node n = focused; n != null && at < 0; n = n.getParent()) at = order.indexOf(n);
+        Node next = order.get(Math.floorMod(at < 0 ? 0 : at + by, order.size()));
+        if (next == brief) brief.focusFirst();
+        else if (next.isFocusTraversable()) next.requestFocus();
+        else first(next).ifPresent(Node::requestFocus);
+    }
+
+    private static Optional<Node> first(Node in) {
+        if (in.isFocusTraversable() && in.isVisible() && !in.isDisabled() && !(in instanceof ScrollPane))
+            return Optional.of(in);
+        if (!(in instanceof Parent p) || !in.isVisible()) return Optional.empty();
+        for (Node child : p.getChildrenUnmodifiable()) {
+            Optional<Node> found = first(child);
+            if (found.isPresent()) return found;
+        }
+        return Optional.empty();
     }
 }

@@ -19,8 +19,8 @@ import org.hazewright.reading.Phantom;
 import org.hazewright.reading.SetUp;
 
 /**
- * What the set-ups that come with the program show on a recipe, as far as that is quick: by diffusion, transport and tables, never by
- * photon packets. {@code leftOut} says in sentences what is not here and why.
+ * What the set-ups that come with the program show on a recipe, as far as that is quick: by diffusion and tables, never by transport
+ * or photon packets. {@code leftOut} says in sentences what is not here and why.
  */
 public record InstrumentReadings(Phantom phantom, List<Foreseen> foreseen, List<String> leftOut) {
 
@@ -46,6 +46,10 @@ public record InstrumentReadings(Phantom phantom, List<Foreseen> foreseen, List<
                 .map(s -> {
                     Optional<String> gap = phantom.gap(s);
                     if (gap.isPresent()) return new Tried(null, s.title() + ": " + gap.get());
+                    if (s.kind() == SetUp.Kind.SLAB)
+                        return new Tried(
+                                null,
+                                s.title() + ": transport takes its time; the command hazewright readings has it.");
                     try {
                         SetUp placed = phantom.placed(s);
                         if (needsPackets(phantom, placed))

@@ -138,7 +138,13 @@ public final class Logbook {
         }
 
         void finish() {
-            LogbookLots.of(batches.all(), values.all()).forEach(lots::put);
+            List<Map<String, Object>> used = LogbookLots.of(
+                    batches.all(List.of(LogbookEntry.DATE, LogbookEntry.LOTS)),
+                    values.all(List.of(LogbookEntry.LOTS, LogbookEntry.MUA_RATIO, LogbookEntry.MUSP_RATIO)));
+            used.forEach(lots::put);
+            for (String lot : lots.keys()) // of a lot that was written down wrongly once, only the name is left
+            if (used.stream().noneMatch(row -> row.get(LogbookLots.LOT).equals(lot)))
+                    lots.clear(lot, LogbookLots.COLUMNS.subList(1, LogbookLots.COLUMNS.size()));
             LogbookCharts.follow(sheetOf(workbook, LogbookPages.CHARTS), values, lots);
         }
     }

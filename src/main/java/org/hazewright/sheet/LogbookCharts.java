@@ -52,6 +52,15 @@ final class LogbookCharts {
                 on.createDrawingPatriarch().createChart(new XSSFClientAnchor(0, 0, 0, 0, 0, row, 11, row + 19));
         chart.setTitleText(title);
         chart.setTitleOverlay(false);
+        chart.getTitle()
+                .getBody()
+                .getParagraphs()
+                .forEach(p -> p.getTextRuns().forEach(r -> {
+                    r.setLanguage(java.util.Locale.ENGLISH);
+                    r.setFontSize(10d);
+                    r.setBold(true);
+                }));
+        chart.displayBlanksAs(org.apache.poi.xddf.usermodel.chart.DisplayBlanks.GAP);
         chart.getOrAddLegend().setPosition(LegendPosition.BOTTOM);
         return chart;
     }
@@ -82,14 +91,14 @@ final class LogbookCharts {
             int y,
             String name,
             MarkerStyle marker,
-            boolean filled) {
+            boolean circle) {
         var s = (XDDFScatterChartData.Series) data.addSeries(cells(sheet, row, x), cells(sheet, row, y));
         s.setTitle(name, null);
         s.setSmooth(false);
         s.setLineProperties(noLine());
         s.setMarkerStyle(marker);
         s.setMarkerSize((short) 7);
-        mark(s.getCTScatterSer().getMarker(), filled);
+        mark(s.getCTScatterSer().getMarker(), circle);
     }
 
     private static void byLot(XSSFSheet on, XSSFSheet lots, int row) {
@@ -113,10 +122,10 @@ final class LogbookCharts {
         chart.plot(data);
     }
 
-    private static void mark(CTMarker marker, boolean filled) {
+    private static void mark(CTMarker marker, boolean circle) {
         XDDFShapeProperties shape = new XDDFShapeProperties();
-        String colour = filled ? Palette.TEAL : Palette.AMBER_TYPE;
-        shape.setFillProperties(filled ? solid(colour) : solid("FFFFFF"));
+        String colour = circle ? Palette.TEAL : Palette.AMBER_TYPE;
+        shape.setFillProperties(solid(colour));
         XDDFLineProperties line = new XDDFLineProperties(solid(colour));
         line.setWidth(1.25);
         shape.setLineProperties(line);

@@ -81,7 +81,7 @@ record LogbookEntry(Map<String, Object> batch, List<Map<String, Object>> values)
     static LogbookEntry of(Batch batch, String file) {
         Map<String, Object> row = new LinkedHashMap<>();
         Recipe made = batch.asMade();
-        String lots = lots(made);
+        String lots = batch.weighedCount() == 0 ? "" : lots(made);
         row.put(BATCH, batch.id());
         row.put(DATE, batch.on());
         row.put("title", batch.plan().title());
@@ -127,7 +127,7 @@ record LogbookEntry(Map<String, Object> batch, List<Map<String, Object>> values)
                 .map(b -> b.points().stream()
                         .map(p -> p.quantity().sign() + "(" + Figures.plain(p.wavelengthNm()) + ") "
                                 + Figures.significant(p.wantedPerCm(), 4))
-                        .collect(Collectors.joining(BETWEEN)))
+                        .collect(Collectors.joining("\n")))
                 .orElse("");
     }
 
@@ -136,14 +136,14 @@ record LogbookEntry(Map<String, Object> batch, List<Map<String, Object>> values)
                 .map(p -> p.point().quantity().sign() + "("
                         + Figures.plain(p.point().wavelengthNm()) + ") "
                         + Figures.withUncertainty(p.perCm(), p.uPerCm()))
-                .collect(Collectors.joining(BETWEEN));
+                .collect(Collectors.joining("\n"));
     }
 
     private static String measuredWords(Measurement m) {
         return m.values().stream()
                 .map(v -> v.quantity().sign() + "(" + Figures.plain(v.wavelengthNm()) + ") "
                         + Figures.withUncertainty(v.perCm(), v.uPerCm()))
-                .collect(Collectors.joining(BETWEEN));
+                .collect(Collectors.joining("\n"));
     }
 
     private static void measured(Batch batch, int number, String lots, List<Map<String, Object>> values) {

@@ -29,7 +29,7 @@ final class LogbookPages {
                 "Logbook",
                 "One row a batch, the newest last. Your own columns, notes, colours and pages stay as they are when a batch is added.",
                 LogbookEntry.BATCH_COLUMNS,
-                new int[] {150, 82, 170, 100, 100, 130, 250, 300, 300, 74, 90, 320, 230, 80, 76, 200, 220});
+                new int[] {104, 72, 116, 74, 70, 84, 112, 138, 138, 52, 60, 230, 150, 74, 60, 120, 130});
         formats(batches, LogbookEntry.BATCH_COLUMNS);
         Page values = table(
                 workbook,
@@ -56,7 +56,7 @@ final class LogbookPages {
         Page charts = new Page(workbook.createSheet("Charts"), looks);
         charts.text(0, 0, "Measured over predicted", Face.TITLE);
         charts.height(0, 24);
-        charts.text(1, 0, "1 is as predicted. Filled circles are µa, open diamonds are µs'.", Face.QUIET);
+        charts.text(1, 0, "1 is as predicted. Circles are µa, diamonds are µs'.", Face.QUIET);
         names.give(CHARTS, charts.address(0, 0));
         PrintSetup.onePage(charts.sheet, true);
         Page record = new Page(workbook.createSheet("Format"), looks);
@@ -114,8 +114,7 @@ final class LogbookPages {
             case "wanted", "± tolerance", "predicted", "± u predicted", "measured", "± u measured" ->
                 line.wrap().format("0.00000");
             case LogbookEntry.MUA_RATIO, LogbookEntry.MUSP_RATIO -> line.right().format("0.0000");
-            case "verdict", "predicted as made", "notes", LogbookEntry.LOTS -> line.wrap();
-            default -> column.startsWith("mean of") ? line.right().format("0.0000") : line;
+            default -> column.startsWith("mean of") ? line.right().format("0.0000") : line.wrap();
         };
     }
 }

@@ -112,6 +112,35 @@ final class LogbookTable {
             Integer column = columns.get(e.getKey());
             if (column != null) set(row, above, column, e.getValue());
         }
+        roomFor(row);
+    }
+
+    /** Makes a row high enough for its wrapped texts; never lower than somebody made it. */
+    private void roomFor(Row row) {
+        double needed = 0;
+        for (Cell c : row)
+            if (c.getCellType() == CellType.STRING && c.getCellStyle().getWrapText()) {
+                double points =
+                        workbook.getFontAt(c.getCellStyle().getFontIndex()).getFontHeightInPoints();
+                double width = 0.75 * sheet.getColumnWidthInPixels(c.getColumnIndex());
+                needed = Math.max(
+                        needed, TextLines.count(c.getStringCellValue(), points, false, width) * points * 1.32 + 2.5);
+            }
+        if (needed > row.getHeightInPoints()) row.setHeightInPoints((float) Math.min(400, Math.ceil(needed)));
+    }
+
+    /** The keys of all rows, in no order. */
+    java.util.Set<String> keys() {
+        return java.util.Set.copyOf(rows.keySet());
+    }
+
+    /** Empties cells of a row. */
+    void clear(String id, List<String> names) {
+        Row row = sheet.getRow(rows.get(id));
+        for (String name : names) {
+            Cell c = row.getCell(columns.get(name));
+            if (c != null) c.setBlank();
+        }
     }
 
     private void makeRoom(int at) {
@@ -152,15 +181,20 @@ final class LogbookTable {
 
     /** Every row as its cells by column: texts, numbers and dates; formulas by their last result. */
     List<Map<String, Object>> all() {
+        return all(List.copyOf(columns.keySet()));
+    }
+
+    /** The same of some columns only. */
+    List<Map<String, Object>> all(List<String> wanted) {
         List<Map<String, Object>> all = new ArrayList<>();
         for (int r = headRow + 1; r <= last; r++) {
             Row row = sheet.getRow(r);
             if (row == null || text(row, columns.get(key)).isEmpty()) continue;
             Map<String, Object> values = new LinkedHashMap<>();
-            columns.forEach((name, c) -> {
-                Object v = value(row.getCell(c));
+            for (String name : wanted) {
+                Object v = value(row.getCell(columns.get(name)));
                 if (v != null) values.put(name, v);
-            });
+            }
             all.add(values);
         }
         return all;

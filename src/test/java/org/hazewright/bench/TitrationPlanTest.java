@@ -25,6 +25,7 @@ import org.hazewright.mixture.Stock;
 import org.hazewright.optics.Refusal;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Shelf;
+import org.hazewright.shelf.Uncertainty;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
@@ -122,10 +123,12 @@ class TitrationPlanTest {
      * loads, coefficients, densities and volumes drawn here, by this test's own arithmetic. Standard error of a standard deviation
      * of so many draws is 0.35 %; 3 % leaves room for what is not linear.
      */
-    @Test
-    void uncertaintyIsThatOfManyTitrations() {
+    @ParameterizedTest
+    @ValueSource(booleans = {false, true})
+    void uncertaintyIsThatOfManyTitrations(boolean figuresKnown) {
         Titration titration = new Titration(true, 20, 0.5);
-        TitrationPlan plan = TitrationPlan.of(series("water", MUA, titration, 0.03), SHELF);
+        TitrationPlan plan =
+                TitrationPlan.of(series("water", MUA, titration, 0.03), figuresKnown ? wellKnown() : SHELF);
         SplittableRandom random = new SplittableRandom(7);
         int count = 40_000;
         int steps = plan.steps().size();
@@ -146,6 +149,16 @@ class TitrationPlanTest {
                 double u = Math.sqrt(squares[k][q] / count - mean * mean);
                 assertEquals(u, plan.steps().get(k).predicted().get(q).uPerCm(), 0.03 * u, "step " + k + ", " + q);
             }
+    }
+
+    /** The same bottles with their coefficients known, so that the balance is what matters. */
+    private static Shelf wellKnown() {
+        return new Shelf(
+                "known",
+                SHELF.ingredients().stream()
+                        .map(i -> i.withUncertainty(new Uncertainty(0, 0)))
+                        .toList(),
+                SHELF.materials());
     }
 
     private static List<Map<Ingredient, double[]>> kappa(TitrationPlan plan) {

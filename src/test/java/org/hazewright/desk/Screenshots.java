@@ -42,6 +42,21 @@ public final class Screenshots {
             Stagehand.ui(() -> window.look().paletteProperty().set(p));
             shoot(window, "desk", p, w);
         }
+        Stagehand.ui(() -> {
+            var room = window.desk().shelfRoom();
+            for (String id :
+                    List.of("ink-demo", "dye-blue-demo", "lipid-emulsion-20", "water", "microspheres-polystyrene-1000"))
+                room.compare(id, true);
+            room.choose(
+                    window.desk().shelfProperty().get().shelf().orElseThrow().require("lipid-emulsion-20"));
+            window.openShelf();
+        });
+        Stagehand.until(
+                "spectra", () -> window.desk().shelfRoom().linesProperty().get().size() == 5);
+        for (Palette p : new Palette[] {Palette.LIGHT, Palette.DARK}) {
+            Stagehand.ui(() -> window.look().paletteProperty().set(p));
+            shoot(window, "shelf", p, w);
+        }
         Stagehand.ui(() -> window.desk().standAtBalance());
         Stagehand.until(
                 "the balance", () -> window.desk().weighingProperty().get().isPresent());

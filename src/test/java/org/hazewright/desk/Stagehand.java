@@ -23,6 +23,7 @@ final class Stagehand {
 
     static synchronized void startToolkit() {
         if (started) return;
+        if (System.getProperty("headless.geometry") == null) System.setProperty("headless.geometry", "3840x2160-32");
         CountDownLatch up = new CountDownLatch(1);
         Platform.startup(up::countDown);
         try {

@@ -43,11 +43,11 @@ public final class BatchView extends BorderPane {
         table = new MeasuredTable(made);
         List.of(weighed, says, puts).forEach(v -> v.getStyleClass().add("gap-s"));
         setTop(head(leave));
-        setLeft(column("step-column", "side-left", Say.place("Weighed"), weighed, who()));
+        setLeft(column("batch-left", "side-left", Say.place("Weighed"), weighed, who()));
         VBox middle = new VBox(Say.place("Landing and measured values"), table, complaint);
         middle.getStyleClass().addAll("place", "gap-m");
         setCenter(scrolled(middle));
-        setRight(column("recipe-width", "side-right", Say.place("What it says"), says, puts));
+        setRight(column("batch-right", "side-right", Say.place("What it says"), says, puts));
         made.batchProperty().addListener((p, before, now) -> show());
         made.seenProperty().addListener((p, before, now) -> show());
         made.correctionProperty().addListener((p, before, now) -> puts());
@@ -132,8 +132,8 @@ public final class BatchView extends BorderPane {
         grid.addRow(
                 0,
                 Say.label("", "quiet"),
-                Say.label("planned g", "quiet", "small"),
-                Say.label("weighed g", "quiet", "small"));
+                Say.label("plan g", "quiet", "small"),
+                Say.label("real g", "quiet", "small"));
         List<Weighing> all = b.weighings();
         for (int n = 0; n < all.size(); n++) {
             Weighing w = all.get(n);

@@ -7,8 +7,8 @@ import java.util.Map;
 import java.util.Optional;
 import javafx.scene.control.Button;
 import javafx.scene.control.Label;
+import javafx.scene.layout.FlowPane;
 import javafx.scene.layout.GridPane;
-import javafx.scene.layout.HBox;
 import javafx.scene.layout.Region;
 import javafx.scene.layout.VBox;
 import org.hazewright.bench.Answer;
@@ -50,8 +50,8 @@ public final class MeasuredTable extends VBox {
                 small("lands"),
                 small("measured"),
                 small(""),
-                small("new value /cm"),
-                small("± standard uncertainty"));
+                small("new /cm"),
+                small("± u"));
         int row = 1;
         double before = Double.NaN;
         for (Point p : made.points()) {
@@ -71,9 +71,8 @@ public final class MeasuredTable extends VBox {
         Button take = new Button("Take these values");
         take.getStyleClass().setAll("plain");
         take.setOnAction(e -> take());
-        HBox line = new HBox(how, with, take);
-        line.getStyleClass().add("gap-m");
-        line.setAlignment(javafx.geometry.Pos.CENTER_LEFT);
+        FlowPane line = new FlowPane(how, with, take);
+        line.getStyleClass().add("cards");
         getChildren().addAll(grid, line);
         Say.show(line, !made.points().isEmpty());
         if (made.points().isEmpty())
@@ -86,7 +85,9 @@ public final class MeasuredTable extends VBox {
     }
 
     private static Label small(String text) {
-        return Say.label(text, "quiet", "small");
+        Label l = Say.label(text, "quiet", "small");
+        l.setMinWidth(Region.USE_PREF_SIZE);
+        return l;
     }
 
     private static Optional<String> keep(Runnable run) {
@@ -101,37 +102,32 @@ public final class MeasuredTable extends VBox {
     private void row(Point p, int row, boolean first) {
         Gauge gauge = new Gauge();
         Gauge measured = new Gauge();
-        gauge.getStyleClass().add("in-table");
-        measured.getStyleClass().add("in-table");
+        gauge.getStyleClass().add("in-batch");
+        measured.getStyleClass().add("in-batch");
         Label value = Say.label("", "lands");
         Label was = Say.label("");
         String where = Words.of(p);
         Field v = field("v " + key(p), "measured " + where + " in per cm");
         Field u = field("u " + key(p), "its standard uncertainty, " + where);
-        u.setPromptText("or 3 %");
+        u.setPromptText("3 %");
         gauges.put(key(p), gauge);
         measuredGauges.put(key(p), measured);
         values.put(key(p), value);
         last.put(key(p), was);
         for (Region r : List.of(value, was)) r.setMinWidth(Region.USE_PREF_SIZE);
-        grid.addRow(
-                row,
-                Say.label(first ? Figures.plain(p.wavelengthNm()) : "", "strong"),
-                Say.label(Words.sign(p.quantity()), "wanted"),
-                Say.label(Figures.significant(p.wantedPerCm(), 4), "wanted"),
-                value,
-                gauge,
-                was,
-                measured,
-                v,
-                u);
+        Label at = Say.label(first ? Figures.plain(p.wavelengthNm()) : "", "strong");
+        Label sign = Say.label(Words.sign(p.quantity()), "wanted");
+        Label wanted = Say.label(Figures.significant(p.wantedPerCm(), 4), "wanted");
+        for (Label l : List.of(at, sign, wanted)) l.setMinWidth(Region.USE_PREF_SIZE);
+        for (Region r : List.of(v, u)) r.setMinWidth(Region.USE_PREF_SIZE);
+        grid.addRow(row, at, sign, wanted, value, gauge, was, measured, v, u);
     }
 
     private Field field(String key, String name) {
         Field f = new Field(() -> typed.getOrDefault(key, ""), text -> keep(() -> typed.put(key, text)), true)
                 .named(name)
                 .styled("boxed")
-                .columns(6);
+                .columns(5);
         fields.put(key, f);
         return f;
     }
@@ -141,7 +137,9 @@ public final class MeasuredTable extends VBox {
         if (seen != null)
             for (Answer.Predicted p : seen.landing()) {
                 gauges.get(key(p.point())).land(p.miss());
-                values.get(key(p.point())).setText(Words.value(p.perCm(), p.uPerCm()));
+                values.get(key(p.point())).setText(Words.predicted(p));
+                values.get(key(p.point()))
+                        .setTooltip(new javafx.scene.control.Tooltip(Words.value(p.perCm(), p.uPerCm()) + " /cm"));
             }
         Batch b = made.batchProperty().get();
         if (b.measured().isEmpty()) {
@@ -156,7 +154,8 @@ public final class MeasuredTable extends VBox {
                             && (x.quantity() == Quantity.ABSORPTION) == (p.quantity() == Point.Quantity.MUA))
                     .findFirst();
             last.get(key(p))
-                    .setText(v.map(x -> Words.value(x.perCm(), x.uPerCm())).orElse("–"));
+                    .setText(v.map(x -> Figures.fixed(x.perCm(), Figures.decimalsFor(Math.max(x.uPerCm(), 1e-9))))
+                            .orElse("–"));
             Say.show(measuredGauges.get(key(p)), v.isPresent());
             v.ifPresent(x -> measuredGauges.get(key(p)).land(p.miss(x.perCm())));
         }

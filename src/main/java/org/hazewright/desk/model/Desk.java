@@ -7,6 +7,8 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.function.Consumer;
+import java.util.function.Function;
 import javafx.beans.property.ReadOnlyObjectProperty;
 import javafx.beans.property.ReadOnlyObjectWrapper;
 import org.hazewright.bench.Batch;
@@ -20,6 +22,7 @@ import org.hazewright.files.RecipeReader;
 import org.hazewright.files.SafeFile;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.sheet.Logbook;
+import org.hazewright.sheet.RecipeSheet;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Part;
 import org.hazewright.shelf.Shelf;
@@ -43,9 +46,11 @@ public final class Desk {
     private final Solving solving;
     private final Papers papers;
     private final Foreseeing foreseeing;
+    private final ShelfRoom shelfRoom;
     private final Work.Lane preparing;
     private final ReadOnlyObjectWrapper<Optional<MadeBatch>> made = new ReadOnlyObjectWrapper<>(Optional.empty());
     private final ReadOnlyObjectWrapper<Optional<AtBalance>> weighing = new ReadOnlyObjectWrapper<>(Optional.empty());
+    private Optional<Consumer<Path>> outside = Optional.empty();
     private volatile Tissue.Spectra spectra;
 
     public Desk(Work work, Optional<Path> shelfFolder, Remembered remembered) {
@@ -58,6 +63,7 @@ public final class Desk {
         papers = new Papers(work, edits, remembered, notices, () -> shelf.get().folder());
         edits.nowProperty().addListener((p, before, now) -> solve());
         foreseeing = new Foreseeing(this);
+        shelfRoom = new ShelfRoom(this);
     }
 
     private record Begun(ShelfState shelf, Brief brief) {}
@@ -281,7 +287,7 @@ public final class Desk {
                     remembered.used(file);
                     weighing.set(Optional.empty());
                     made.set(Optional.of(new MadeBatch(this, file, batch)));
-                    MadeBatch.tell(notices, recorded);
+                    MadeBatch.tell(this, recorded);
                 },
                 failure -> notices.tell(Notice.wrong("balance", Papers.words(failure))));
     }
@@ -312,6 +318,23 @@ public final class Desk {
                 failure -> notices.tell(Notice.wrong("balance", Papers.words(failure))));
     }
 
+    /** Writes the recipe's workbook, or with the ending .pdf its pages, on which {@code paper} draws. */
+    public void saveSheet(Path file, Function<Shown, byte[]> paper) {
+        Shown shown = solving.shownProperty().get();
+        boolean pdf = file.toString().toLowerCase(Locale.ROOT).endsWith(".pdf");
+        Path named =
+                pdf || file.toString().endsWith(".xlsx") ? file : file.resolveSibling(file.getFileName() + ".xlsx");
+        preparing.request(
+                (stop, progress) -> {
+                    byte[] bytes = pdf ? paper.apply(shown) : RecipeSheet.write(shown.answer(), LocalDate.now());
+                    SafeFile.write(named, bytes, SafeFile.Overwrite.REPLACE);
+                    return named;
+                },
+                written -> notices.tell(
+                        new Notice(Notice.Kind.TOLD, "sheet", "Saved: " + written + ".", showing(written))),
+                failure -> notices.tell(Notice.wrong("sheet", Papers.words(failure))));
+    }
+
     /** The weigh-out as a table for a spreadsheet, tabs between columns; empty when there is no recipe. */
     public Optional<String> copyText() {
         return Optional.ofNullable(solving.shownProperty().get()).map(s -> Tables.weighOut(s.outlook()));
@@ -335,6 +358,16 @@ public final class Desk {
         Tissue.Spectra known = spectra;
         if (known == null) spectra = known = papers.spectra().get();
         return known;
+    }
+
+    /** Says how a file is opened with another program. */
+    public void opensOutside(Consumer<Path> opener) {
+        outside = Optional.of(opener);
+    }
+
+    /** A way to see a file that was written; none where no other program can be asked. */
+    List<Notice.Way> showing(Path file) {
+        return outside.map(o -> List.of(new Notice.Way("show it", () -> o.accept(file)))).orElse(List.of());
     }
 
     public Work work() {
@@ -367,6 +400,10 @@ public final class Desk {
 
     public Papers papers() {
         return papers;
+    }
+
+    public ShelfRoom shelfRoom() {
+        return shelfRoom;
     }
 
     public Foreseeing foreseeing() {

@@ -241,7 +241,7 @@ public final class MadeBatch {
                     BatchWriter.write(file, batch, SafeFile.Overwrite.KEEP_PREVIOUS);
                     return Logbook.record(logbook(file), batch, file);
                 },
-                recorded -> tell(desk.notices(), recorded),
+                recorded -> tell(desk, recorded),
                 failure -> complaint.set(Papers.words(failure)));
     }
 
@@ -250,9 +250,15 @@ public final class MadeBatch {
         return batchFile.toAbsolutePath().resolveSibling("logbook.xlsx");
     }
 
-    static void tell(Notices notices, Logbook.Recorded recorded) {
-        notices.tell(recorded.waiting()
-                .map(why -> Notice.wrong("logbook", "The batch is written; the logbook has to wait. " + why))
-                .orElse(Notice.told("logbook", "Recorded in " + recorded.kept() + ".")));
+    static void tell(Desk desk, Logbook.Recorded recorded) {
+        desk.notices()
+                .tell(recorded.waiting()
+                        .map(why -> Notice.wrong(
+                                "logbook", "The batch is written; the logbook has to wait. " + why))
+                        .orElse(new Notice(
+                                Notice.Kind.TOLD,
+                                "logbook",
+                                "Recorded in " + recorded.kept() + ".",
+                                desk.showing(recorded.kept()))));
     }
 }

@@ -1,0 +1,445 @@
+package org.hazewright.desk;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertNotEquals;
+import static org.junit.jupiter.api.Assertions.assertNotNull;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.function.Predicate;
+import javafx.scene.Node;
+import javafx.scene.Parent;
+import javafx.scene.control.Button;
+import javafx.scene.control.Labeled;
+import javafx.scene.control.ScrollPane;
+import javafx.scene.input.KeyCode;
+import javafx.scene.layout.Region;
+import org.hazewright.brief.Brief;
+import org.hazewright.brief.Point;
+import org.hazewright.desk.model.AtBalance;
+import org.hazewright.desk.model.Draft;
+import org.hazewright.desk.model.Notice;
+import org.hazewright.desk.model.Shown;
+import org.hazewright.desk.parts.Field;
+import org.hazewright.desk.parts.Hint;
+import org.hazewright.desk.spectra.SpectraPlot;
+import org.hazewright.files.BriefReader;
+import org.hazewright.files.RecipeReader;
+import org.hazewright.files.ShelfReader;
+import org.hazewright.files.TissueSpectra;
+import org.hazewright.mixture.Recipe;
+import org.junit.jupiter.api.AfterEach;
+import org.junit.jupiter.api.BeforeEach;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+
+/** The window used as a person uses it, with keys and mouse, without a display. */
+class WindowTest {
+    @TempDir
+    Path folder;
+
+    private final PlannedChooser chooser = new PlannedChooser();
+    private Window window;
+    private Hand hand;
+
+    @BeforeEach
+    void toolkit() {
+        Stagehand.startToolkit();
+        hand = new Hand();
+    }
+
+    @AfterEach
+    void close() {
+        if (window != null) Stagehand.ui(() -> window.stage().close());
+    }
+
+    private void open(Optional<Path> file) {
+        window = Stagehand.open(folder.resolve("memory"), 1280, 800, file, Optional.of(chooser));
+        Stagehand.untilSettled(window);
+    }
+
+    private Path bath() {
+        Path file = folder.resolve("bath.brief.toml");
+        Brief demo = BriefReader.readShipped("wrist-bath");
+        org.hazewright.files.BriefWriter.write(
+                file,
+                demo,
+                List.of("the daily bath"),
+                TissueSpectra.of(null),
+                org.hazewright.files.SafeFile.Overwrite.NEVER);
+        return file;
+    }
+
+    private Shown shown() {
+        return Stagehand.onUi(() -> window.desk().solving().shownProperty().get());
+    }
+
+    private Draft draft() {
+        return Stagehand.onUi(() -> window.desk().edits().now());
+    }
+
+    private double wanted(double nm) {
+        return draft().row(nm).orElseThrow().muaPerCm().orElseThrow();
+    }
+
+    private List<Node> all(Predicate<Node> which) {
+        return Stagehand.onUi(() -> {
+            List<Node> found = new ArrayList<>();
+            collect(window.stage().getScene().getRoot(), which, found);
+            return found;
+        });
+    }
+
+    private static void collect(Node node, Predicate<Node> which, List<Node> found) {
+        if (!node.isVisible()) return;
+        if (which.test(node)) found.add(node);
+        if (node instanceof Parent p) p.getChildrenUnmodifiable().forEach(n -> collect(n, which, found));
+    }
+
+    private Button button(String text) {
+        return (Button) all(n -> n instanceof Button b
+                        && b.getText() != null
+                        && b.getText().contains(text))
+                .stream()
+                .findFirst()
+                .orElseThrow(() -> new AssertionError("There is no button “" + text + "”."));
+    }
+
+    private void focus(Node node) {
+        Stagehand.ui(node::requestFocus);
+        Stagehand.pulse();
+    }
+
+    private Field wantedField(double nm, Point.Quantity q) {
+        return Stagehand.onUi(() -> window.brief().wantedField(nm, q));
+    }
+
+    @Test
+    void onTheFirstDayADemoIsSolvedAndHintsGoAway() {
+        open(Optional.empty());
+        assertNotNull(shown());
+        assertEquals("forearm-block", draft().name());
+        List<Node> hints = all(n -> n instanceof Hint);
+        assertEquals(3, hints.size(), "hints");
+        for (Node h : hints) Stagehand.ui(((Hint) h)::putAway);
+        assertTrue(all(n -> n instanceof Hint).isEmpty());
+        Stagehand.ui(() -> window.stage().close());
+        open(Optional.empty());
+        assertTrue(all(n -> n instanceof Hint).isEmpty(), "hints that were put away came back");
+    }
+
+    @Test
+    void aTypedTargetMovesTheRecipeAndAWrongOneIsSaidInWords() {
+        open(Optional.of(bath()));
+        double before = wanted(690);
+        Recipe first = shown().recipe();
+        Field field = wantedField(690, Point.Quantity.MUA);
+        focus(field);
+        hand.typeOver("0.13");
+        hand.press(KeyCode.ENTER);
+        Stagehand.untilSettled(window);
+        assertEquals(0.13, wanted(690));
+        assertNotEquals(first.massesG(), shown().recipe().massesG());
+        assertEquals(
+                0.13,
+                shown().outlook().predicted().get(0).point().wantedPerCm(),
+                "the recipe belongs to the brief that is shown");
+
+        hand.typeOver("0.1x");
+        hand.press(KeyCode.ENTER);
+        String words = Stagehand.onUi(() -> field.errorProperty().get());
+        assertTrue(words.contains("x"), words);
+        assertEquals(
+                1,
+                all(n -> n instanceof Labeled l
+                                && l.getText() != null
+                                && l.getText().contains(words))
+                        .size(),
+                "said beside the field");
+        assertEquals(0.1, wanted(690), "the last value that made sense holds");
+        hand.press(KeyCode.ESCAPE);
+        assertEquals("", Stagehand.onUi(() -> field.errorProperty().get()));
+
+        hand.press(KeyCode.CONTROL, KeyCode.Z);
+        hand.press(KeyCode.CONTROL, KeyCode.Z);
+        Stagehand.untilSettled(window);
+        assertEquals(before, wanted(690));
+        assertEquals(first.massesG(), shown().recipe().massesG());
+        hand.press(KeyCode.CONTROL, KeyCode.SHIFT, KeyCode.Z);
+        assertEquals(0.13, wanted(690));
+    }
+
+    @Test
+    void aDraggedBoxTakesTheRecipeAlongAndUndoBringsBothBack() {
+        open(Optional.of(bath()));
+        double before = wanted(830);
+        Recipe first = shown().recipe();
+        SpectraPlot plot = Stagehand.onUi(() -> window.spectra().plot());
+        Region surface = window.spectra().surface();
+        double x = plot.xOf(830);
+        double y = plot.yOf(Point.Quantity.MUA, before);
+        double to = plot.yOf(Point.Quantity.MUA, before * 1.15);
+        List<Boolean> followed = new ArrayList<>();
+        Stagehand.ui(() ->
+                window.desk().solving().shownProperty().addListener((p, was, now) -> followed.add(now.following())));
+        hand.drag(surface, x, y, x, to);
+        assertEquals(before * 1.15, wanted(830), 0.01 * before);
+        assertTrue(followed.contains(true), "the recipe did not follow during the drag");
+        Stagehand.untilSettled(window);
+        assertNotEquals(first.massesG(), shown().recipe().massesG());
+        hand.press(KeyCode.CONTROL, KeyCode.Z);
+        Stagehand.untilSettled(window);
+        assertEquals(before, wanted(830), "one drag is one step of undo");
+        assertEquals(first.massesG(), shown().recipe().massesG());
+    }
+
+    @Test
+    void keysMoveATargetToo() {
+        open(Optional.of(bath()));
+        double before = wanted(690);
+        focus(window.spectra().surface());
+        hand.press(KeyCode.UP);
+        assertEquals(before * 1.01, wanted(690), 1e-9);
+        hand.press(KeyCode.RIGHT);
+        hand.press(KeyCode.DOWN);
+        assertEquals(before * 1.01, wanted(690), 1e-9);
+        assertTrue(wanted(830) < 0.105);
+    }
+
+    @Test
+    void anotherWayCanBeChosenAndGivenUp() {
+        open(Optional.of(bath()));
+        Recipe best = shown().recipe();
+        List<Node> cards = all(n -> n.getStyleClass().contains("way"));
+        assertFalse(cards.isEmpty(), "no other ways are offered");
+        Stagehand.ui(((Button) cards.get(0))::fire);
+        Stagehand.untilSettled(window);
+        assertNotEquals(Shown.key(best), Shown.key(shown().recipe()));
+        Stagehand.ui(button("back to the best")::fire);
+        Stagehand.untilSettled(window);
+        assertEquals(Shown.key(best), Shown.key(shown().recipe()));
+    }
+
+    @Test
+    void whatIsSavedComesBackAndNothingIsOverwrittenUnasked() throws Exception {
+        Path file = bath();
+        byte[] original = Files.readAllBytes(file);
+        open(Optional.of(file));
+        focus(wantedField(690, Point.Quantity.MUA));
+        hand.typeOver("0.11");
+        hand.press(KeyCode.ENTER);
+        Path side = folder.resolve(".bath.brief.toml.unsaved");
+        Stagehand.until("autosave", () -> Files.exists(side));
+        assertEquals(
+                new String(original, StandardCharsets.UTF_8),
+                Files.readString(file),
+                "the brief itself was written unasked");
+        Stagehand.untilSettled(window);
+        hand.press(KeyCode.CONTROL, KeyCode.S);
+        Stagehand.until("saved", () -> !window.desk().papers().changedProperty().get());
+        assertFalse(Files.exists(side), "the side file outlived the save");
+        assertEquals(
+                new String(original, StandardCharsets.UTF_8),
+                Files.readString(folder.resolve("bath.brief.toml.previous")));
+        assertTrue(Files.readString(file).startsWith("# the daily bath\n"), "comments at the top are kept");
+
+        Brief back = BriefReader.read(file, TissueSpectra.of(null));
+        assertEquals(0.11, back.targets().get(0).muaPerCm().orElseThrow());
+        Recipe recipe = RecipeReader.read(folder.resolve("bath.recipe.toml"), ShelfReader.readShipped());
+        assertEquals(back.sha256(), recipe.briefSha256(), "the recipe answers to the brief as saved");
+        Stagehand.ui(() -> window.stage().close());
+        open(Optional.of(file));
+        assertEquals(0.11, wanted(690));
+    }
+
+    @Test
+    void unsavedChangesAreOfferedAfterACrash() throws Exception {
+        Path file = bath();
+        open(Optional.of(file));
+        focus(wantedField(690, Point.Quantity.MUA));
+        hand.typeOver("0.12");
+        hand.press(KeyCode.ENTER);
+        Stagehand.until("autosave", () -> Files.exists(folder.resolve(".bath.brief.toml.unsaved")));
+        Stagehand.ui(() -> window.stage().close()); // the program ends without asking
+        open(Optional.of(file));
+        assertEquals(0.1, wanted(690));
+        Stagehand.until(
+                "the offer",
+                () -> window.desk().notices().all().stream()
+                        .anyMatch(n -> n.strand().equals("unsaved")));
+        Stagehand.ui(button("take them up")::fire);
+        assertEquals(0.12, wanted(690));
+    }
+
+    @Test
+    void aWrongWeighingMovesTheLaterStepsAndACrashLosesNothing() {
+        open(Optional.of(bath()));
+        hand.press(KeyCode.CONTROL, KeyCode.ENTER);
+        Stagehand.until(
+                "the balance", () -> window.desk().weighingProperty().get().isPresent());
+        AtBalance at =
+                Stagehand.onUi(() -> window.desk().weighingProperty().get().orElseThrow());
+        toStep(at, "Lipid");
+        AtBalance.Now before = Stagehand.onUi(() -> at.nowProperty().get());
+        double wanted = before.line().wantedG();
+        List<Double> later = later(before);
+        focus(window.balance().field());
+        String over =
+                String.format(java.util.Locale.ROOT, "%.3f", wanted * 1.04).replace('.', ',') + " g";
+        hand.type(over);
+        hand.press(KeyCode.ENTER);
+        AtBalance.Now after = Stagehand.onUi(() -> at.nowProperty().get());
+        assertEquals(before.at() + 1, after.at(), "Enter goes on");
+        assertEquals(wanted * 1.04, after.lines().get(before.at()).weighedG(), 6e-4);
+        assertNotEquals(later, later(after), "later steps stayed as planned");
+
+        Stagehand.until("kept", () -> Files.exists(batchFile()));
+        Stagehand.pulse();
+        Stagehand.ui(() -> window.stage().close()); // the crash
+        open(Optional.empty());
+        Stagehand.until(
+                "the offer",
+                () -> window.desk().notices().all().stream()
+                        .anyMatch(n -> n.strand().equals("balance")));
+        Stagehand.ui(button("go on weighing")::fire);
+        Stagehand.until(
+                "the balance", () -> window.desk().weighingProperty().get().isPresent());
+        AtBalance.Now again = Stagehand.onUi(() -> window.desk()
+                .weighingProperty()
+                .get()
+                .orElseThrow()
+                .nowProperty()
+                .get());
+        assertEquals(after.at(), again.at(), "it goes on at the same step");
+        assertEquals(later(after), later(again));
+
+        AtBalance second =
+                Stagehand.onUi(() -> window.desk().weighingProperty().get().orElseThrow());
+        Stagehand.ui(() -> {
+            while (!second.nowProperty().get().over()) {
+                AtBalance.Line line = second.nowProperty().get().line();
+                second.enter(line.weighs() ? second.loadWantedG() + " g" : "");
+            }
+        });
+        Stagehand.pulse();
+        hand.press(KeyCode.ENTER);
+        Stagehand.until("the batch", () -> window.desk().madeProperty().get().isPresent());
+        assertTrue(Files.exists(folder.resolve("logbook.xlsx")), "the batch is not in a logbook beside the brief");
+    }
+
+    private Path batchFile() {
+        try (var files = Files.list(folder)) {
+            return files.filter(p -> p.toString().endsWith(".batch.toml"))
+                    .findFirst()
+                    .orElse(folder.resolve("none"));
+        } catch (java.io.IOException e) {
+            throw new IllegalStateException(e);
+        }
+    }
+
+    private static List<Double> later(AtBalance.Now now) {
+        return now
+                .lines()
+                .subList(Math.min(now.at(), now.lines().size()), now.lines().size())
+                .stream()
+                .filter(AtBalance.Line::weighs)
+                .map(AtBalance.Line::wantedG)
+                .toList();
+    }
+
+    private void toStep(AtBalance at, String name) {
+        Stagehand.ui(() -> {
+            while (!at.nowProperty().get().line().name().startsWith(name)) {
+                AtBalance.Line line = at.nowProperty().get().line();
+                at.enter(line.weighs() ? at.loadWantedG() + " g" : "");
+            }
+        });
+        Stagehand.pulse();
+    }
+
+    @Test
+    void sheetsAndPicturesAreWritten() throws Exception {
+        open(Optional.of(bath()));
+        for (String name : List.of("bath.xlsx", "bath.pdf")) {
+            chooser.next(folder.resolve(name));
+            Stagehand.ui(button("Save sheet")::fire);
+            Stagehand.until(name, () -> Files.exists(folder.resolve(name)));
+        }
+        assertEquals(
+                "%PDF", new String(Files.readAllBytes(folder.resolve("bath.pdf")), 0, 4, StandardCharsets.US_ASCII));
+        for (String name : List.of("bath.png", "bath.svg")) {
+            chooser.next(folder.resolve(name));
+            Stagehand.ui(button("save picture")::fire);
+            assertTrue(Files.size(folder.resolve(name)) > 2000, name);
+        }
+        assertNotNull(javax.imageio.ImageIO.read(folder.resolve("bath.png").toFile()));
+        javax.xml.parsers.DocumentBuilderFactory.newInstance()
+                .newDocumentBuilder()
+                .parse(folder.resolve("bath.svg").toFile());
+    }
+
+    @Test
+    void anEmptyShelfIsExplained() throws Exception {
+        Path empty = Files.createDirectory(folder.resolve("empty"));
+        Stagehand.ui(() -> {});
+        window = Stagehand.onUi(() -> {
+            var desk = new org.hazewright.desk.model.Desk(
+                    org.hazewright.desk.model.Work.threaded(javafx.application.Platform::runLater),
+                    Optional.of(empty),
+                    org.hazewright.desk.model.Remembered.in(folder.resolve("memory"), folder.resolve("work")));
+            Window w = new Window(
+                    new javafx.stage.Stage(), desk, new org.hazewright.desk.look.Look(), Optional.of(chooser));
+            desk.begin(Optional.empty());
+            w.show();
+            return w;
+        });
+        Stagehand.until(
+                "words", () -> window.desk().shelfProperty().get().problem().isPresent());
+        Stagehand.pulse();
+        Stagehand.ui(button("use the shelf of the program")::fire);
+        Stagehand.untilSettled(window);
+        assertNotNull(shown());
+    }
+
+    @Test
+    void everythingThatTakesTheFocusHasAName() {
+        open(Optional.of(bath()));
+        named("desk");
+        Stagehand.ui(() -> window.openShelf());
+        Stagehand.pulse();
+        named("shelf");
+    }
+
+    private void named(String where) {
+        for (Node n : all(Node::isFocusTraversable)) {
+            if (n instanceof ScrollPane) continue;
+            String name = Stagehand.onUi(() ->
+                    n.getAccessibleText() != null && !n.getAccessibleText().isBlank()
+                            ? n.getAccessibleText()
+                            : n instanceof Labeled l && l.getText() != null ? l.getText() : "");
+            assertFalse(name.isBlank(), where + ": " + n + " has no name for a screen reader");
+        }
+    }
+
+    @Test
+    void closingWithChangesAsksFirst() {
+        open(Optional.of(bath()));
+        focus(wantedField(690, Point.Quantity.MUA));
+        hand.typeOver("0.14");
+        hand.press(KeyCode.ENTER);
+        Stagehand.ui(() -> javafx.event.Event.fireEvent(
+                window.stage(),
+                new javafx.stage.WindowEvent(window.stage(), javafx.stage.WindowEvent.WINDOW_CLOSE_REQUEST)));
+        assertTrue(Stagehand.onUi(() -> window.stage().isShowing()));
+        assertTrue(Stagehand.onUi(
+                () -> window.desk().notices().all().stream().anyMatch(n -> n.kind() == Notice.Kind.ASKED)));
+        Stagehand.ui(button("close without saving")::fire);
+        assertFalse(Stagehand.onUi(() -> window.stage().isShowing()));
+    }
+}
