@@ -6,6 +6,8 @@ import java.nio.channels.FileChannel;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.AccessDeniedException;
 import java.nio.file.AtomicMoveNotSupportedException;
+import java.nio.file.DirectoryIteratorException;
+import java.nio.file.DirectoryStream;
 import java.nio.file.FileAlreadyExistsException;
 import java.nio.file.FileSystemException;
 import java.nio.file.Files;
@@ -17,6 +19,8 @@ import java.nio.file.ReadOnlyFileSystemException;
 import java.nio.file.StandardCopyOption;
 import java.nio.file.StandardOpenOption;
 import java.nio.file.attribute.PosixFileAttributeView;
+import java.time.Duration;
+import java.time.Instant;
 import java.util.Arrays;
 import java.util.Locale;
 import java.util.concurrent.ThreadLocalRandom;
@@ -26,9 +30,12 @@ import java.util.concurrent.ThreadLocalRandom;
  * synced, then moved over it.
  *
  * <p>A folder that is missing is made. A link is followed and kept. A target that is a folder, a device or write-protected is
- * left alone, as is everything else when a {@link WriteFailure} is thrown.
+ * left alone, as is everything else when a {@link WriteFailure} is thrown. What a killed program left of the same target is swept
+ * ten minutes later, with the next write.
  */
 public final class SafeFile {
+    private static final Duration LEFT_BEHIND = Duration.ofMinutes(10);
+
     private SafeFile() {}
 
     /** What happens to a file that is already there. */
@@ -55,6 +62,7 @@ public final class SafeFile {
             if (policy == Overwrite.KEEP_PREVIOUS && holds(end, bytes)) return;
             Path folder = end.toAbsolutePath().getParent();
             Files.createDirectories(folder);
+            sweepLeftovers(folder, end.getFileName().toString());
             temporary = folder.resolve("." + end.getFileName() + "."
                     + Long.toString(ThreadLocalRandom.current().nextLong(1L << 40), 36) + ".part");
             writeSynced(temporary, bytes);
@@ -86,6 +94,22 @@ public final class SafeFile {
         if (!Files.isWritable(target))
             throw new WriteFailure(target + " is write-protected and was not touched; choose another name.");
         return target.toRealPath();
+    }
+
+    /** Temporary files of this target that a killed program left; a younger one may be another program's at work. */
+    private static void sweepLeftovers(Path folder, String name) throws IOException {
+        Instant old = Instant.now().minus(LEFT_BEHIND);
+        try (DirectoryStream<Path> all = Files.newDirectoryStream(
+                folder,
+                p -> p.getFileName().toString().startsWith("." + name + ".")
+                        && p.getFileName().toString().endsWith(".part"))) {
+            for (Path p : all)
+                if (Files.getLastModifiedTime(p, LinkOption.NOFOLLOW_LINKS)
+                        .toInstant()
+                        .isBefore(old)) deleteQuietly(p);
+        } catch (DirectoryIteratorException | NoSuchFileException | AccessDeniedException e) {
+            return; // a folder that may be written and not listed, or a file that another program swept
+        }
     }
 
     private static void writeSynced(Path temporary, byte[] bytes) throws IOException {

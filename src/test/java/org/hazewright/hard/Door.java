@@ -124,7 +124,9 @@ enum Door {
             if (!STATUSES.contains(ran.status()))
                 throw new AssertionError("Exit status " + ran.status() + "\n" + ran.err());
             if (ran.status() == 2 || ran.status() == 4)
-                Promise.wellSaid(ran.out().startsWith("{") ? "JSON." + ran.err() : ran.out() + ran.err(), String.join("\n", words));
+                Promise.wellSaid(
+                        ran.out().startsWith("{") ? "JSON." + ran.err() : ran.out() + ran.err(),
+                        String.join("\n", words));
             Promise.nothingHalfWritten(Path.of(""));
         }
     };
