@@ -81,11 +81,11 @@ final class Candidates {
             }
         }
         Candidates candidates = new Candidates(base, parts, chosen, leftOut);
-        candidates.refuseWithoutScatterer(brief, shelf, nm);
+        candidates.refuseWithoutScatterer(brief, shelf);
         return candidates;
     }
 
-    private void refuseWithoutScatterer(Brief brief, Shelf shelf, double[] nm) {
+    private void refuseWithoutScatterer(Brief brief, Shelf shelf) {
         boolean wanted =
                 brief.points().stream().anyMatch(p -> p.quantity() == Point.Quantity.MUSP && p.wantedPerCm() > 0);
         if (!wanted) return;
