@@ -158,6 +158,7 @@ public final class Window {
         recipe.getStyleClass().add("recipe-width");
         brief.getChildren().add(0, hint("wish", "Say here what is wanted."));
         recipe.getChildren().add(0, hint("weigh", "These grams give it. When they look right, stand at the balance."));
+        readings.narrowWhen(spectra.widthProperty());
         VBox middle = new VBox(hint("drag", "Drag an amber box, or type on the left: the recipe follows."), spectra);
         middle.getChildren().add(readings);
         middle.getStyleClass().add("middle");
@@ -212,7 +213,7 @@ public final class Window {
             center(balance, false);
             balance.focusField();
         } else if (desk.madeProperty().get().isPresent()) {
-            batch = new BatchView(desk.madeProperty().get().get(), desk::leaveBatch);
+            batch = new BatchView(desk.madeProperty().get().get(), chooser, desk::leaveBatch);
             center(batch, false);
             batch.requestFocus();
         } else if (shelfOpen) {
@@ -364,13 +365,16 @@ public final class Window {
     private final class Doing implements Deeds {
         @Override
         public void open() {
-            chooser.open("Open", BRIEFS, ".brief.toml", ".recipe.toml", ".batch.toml", ".toml")
+            chooser.open("Open", BRIEFS, ".brief.toml", ".recipe.toml", ".batch.toml", ".toml", ".csv", ".xlsx")
                     .ifPresent(this::open);
         }
 
         @Override
         public void open(Path file) {
-            ifSaved(() -> desk.open(file));
+            String name = file.getFileName().toString().toLowerCase(java.util.Locale.ROOT);
+            boolean replaces = name.endsWith(".toml") && !name.endsWith(".batch.toml");
+            if (replaces) ifSaved(() -> desk.open(file));
+            else desk.open(file);
         }
 
         /** Runs at once when nothing would be lost, else asks first. */

@@ -41,6 +41,7 @@ public final class BriefPlace extends VBox {
     private final MenuButton base = new MenuButton();
     private final Word balance = new Word("", () -> {});
     private final TargetTable table;
+    private final TissuePanel tissuePanel;
     private final VBox balancePanel = new VBox();
     private List<Object> offered = List.of();
 
@@ -50,13 +51,8 @@ public final class BriefPlace extends VBox {
         table = new TargetTable(desk);
         TissuePanel tissue = new TissuePanel(desk);
         Say.show(tissue, false);
-        Word fromTissue = new Word("from tissue-like values…", () -> {
-            boolean open = !tissue.isVisible();
-            Say.show(tissue, open);
-            if (open
-                    && desk.edits().now() != null
-                    && desk.edits().now().tissue().isEmpty()) tissue.fill();
-        });
+        tissuePanel = tissue;
+        Word fromTissue = new Word("from tissue-like values…", this::openTissue);
         VBox all = new VBox(particulars(), table, adding(fromTissue), tissue, new ShelfList(desk, openShelf));
         all.getStyleClass().add("gap-l");
         ScrollPane scroll = new ScrollPane(all);
@@ -237,6 +233,11 @@ public final class BriefPlace extends VBox {
                                 .round(new java.math.MathContext(6))
                                 .doubleValue()) + " mg"
                 : Figures.plain(g) + " g";
+    }
+
+    /** Opens or closes the panel that fills the table from a composition. */
+    public void openTissue() {
+        Say.show(tissuePanel, !tissuePanel.isVisible());
     }
 
     /** Puts the cursor where a wish can be typed. */
