@@ -37,6 +37,7 @@ public final class BatchView extends BorderPane {
     private final VBox weighed = new VBox();
     private final VBox says = new VBox();
     private final VBox puts = new VBox();
+    private final VBox teaches = new VBox();
     private final Label complaint = Say.wrapped("", "error-line");
     private final MeasuredTable table;
 
@@ -45,7 +46,7 @@ public final class BatchView extends BorderPane {
         this.made = made;
         getStyleClass().add("balance-view");
         table = new MeasuredTable(made, chooser);
-        List.of(weighed, says, puts).forEach(v -> v.getStyleClass().add("gap-s"));
+        List.of(weighed, says, puts, teaches).forEach(v -> v.getStyleClass().add("gap-s"));
         setTop(head(leave));
         boolean heated = made.batchProperty().get().plan().base().making().meltC().isPresent();
         Node heating = heating();
@@ -54,7 +55,7 @@ public final class BatchView extends BorderPane {
         VBox middle = new VBox(Say.place("Landing and measured values"), table, complaint);
         middle.getStyleClass().addAll("place", "gap-m");
         setCenter(scrolled(middle));
-        setRight(column("batch-right", "side-right", Say.place("What it says"), says, puts));
+        setRight(column("batch-right", "side-right", Say.place("What it says"), says, puts, teaches));
         made.batchProperty().addListener((p, before, now) -> show());
         made.seenProperty().addListener((p, before, now) -> show());
         made.correctionProperty().addListener((p, before, now) -> puts());
@@ -194,10 +195,11 @@ public final class BatchView extends BorderPane {
                                 .add(Say.wrapped(
                                         "Nothing is measured yet. Type values beside the targets when it was.",
                                         "quiet")));
+        teaches.getChildren().clear();
         if (!seen.beliefs().isEmpty()) {
-            says.getChildren().add(Say.heading("What it teaches of the bottles"));
+            teaches.getChildren().add(Say.heading("What it teaches of the bottles"));
             for (MadeBatch.Belief b : seen.beliefs()) {
-                says.getChildren()
+                teaches.getChildren()
                         .add(Say.wrapped(
                                 Words.capital(b.words()) + ": " + Figures.withUncertainty(b.factor(), b.uAfter())
                                         + " times its file, known to " + Figures.significant(100 * b.uAfter(), 2)
@@ -208,7 +210,7 @@ public final class BatchView extends BorderPane {
                     .map(MadeBatch.Belief::ingredient)
                     .distinct()
                     .filter(made::canLearn)
-                    .forEach(id -> says.getChildren().add(keep(id)));
+                    .forEach(id -> teaches.getChildren().add(keep(id)));
         }
     }
 
