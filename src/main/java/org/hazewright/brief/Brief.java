@@ -3,6 +3,7 @@ package org.hazewright.brief;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import org.hazewright.optics.Figures;
 import org.hazewright.optics.Refusal;
 
 /**
@@ -29,6 +30,9 @@ public record Brief(
         Optional<Tissue> tissue,
         Optional<String> sha256) {
 
+    private static final double MOST_ML = 1e6;
+    private static final int MOST_LOADS = 1000;
+
     public Brief {
         bases = List.copyOf(bases);
         targets = List.copyOf(targets);
@@ -41,6 +45,13 @@ public record Brief(
                     "The brief has no targets; give at least one [[target]] with wavelength_nm and mua_per_cm or"
                             + " musp_per_cm, or a [tissue].");
         Refusal.positive("batch_ml", batchMl);
+        if (batchMl > MOST_ML)
+            throw new Refusal("The batch is " + Figures.plain(batchMl) + " mL; it may be at most "
+                    + Figures.plain(MOST_ML) + " mL, a cubic metre.");
+        if (batchMl > MOST_LOADS * balance.capacityG())
+            throw new Refusal("A batch of " + Figures.plain(batchMl) + " mL takes more than " + MOST_LOADS
+                    + " loads on a balance of " + Figures.plain(balance.capacityG())
+                    + " g capacity; check the unit of either, or make it in parts.");
         Refusal.within("overage", overage, 0, 2);
         Refusal.within("temperature_c", temperatureC, 0, 100);
     }

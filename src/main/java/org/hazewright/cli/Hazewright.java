@@ -7,6 +7,8 @@ import java.nio.file.Path;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 import org.hazewright.desk.Opening;
 import org.hazewright.files.WriteFailure;
 import org.hazewright.optics.Refusal;
@@ -121,7 +123,15 @@ public final class Hazewright implements Runnable {
                     return REFUSED;
                 })
                 .setExecutionExceptionHandler((problem, command, parsed) -> status(problem, err));
-        int status = line.execute(args);
+        int status;
+        try {
+            status = line.execute(args);
+        } catch (OutOfMemoryError | StackOverflowError tooMuch) {
+            err.println(
+                    "hazewright: this needs more memory than the program has; nothing was overwritten. Ask for less, or give it"
+                            + " more: java -Xmx4g -jar …");
+            status = FAULT;
+        }
         out.flush();
         err.flush();
         return status;
@@ -150,9 +160,21 @@ public final class Hazewright implements Runnable {
         return order.indexOf(one) >= order.indexOf(other) ? one : other;
     }
 
+    private static final Pattern CANNOT_CONVERT =
+            Pattern.compile("(?s)(.*?): cannot convert '(.*)' to (?:interface |class )?(\\S+) \\(.*\\)");
+
+    private static String kind(String type) {
+        return type.endsWith("Path")
+                ? "the name of a file"
+                : type.endsWith("LocalDate") ? "a date such as 2026-03-02" : "a value for it";
+    }
+
     /** Picocli's message without its bracketed details, ended with where to look. */
     private static String plain(CommandLine.ParameterException problem) {
         String text = problem.getMessage().strip();
+        Matcher unread = CANNOT_CONVERT.matcher(text);
+        if (unread.matches())
+            text = unread.group(1) + ": '" + unread.group(2) + "' is not " + kind(unread.group(3)) + ".";
         String command = problem.getCommandLine().getCommandSpec().qualifiedName();
         return text + (text.endsWith(".") ? "" : ".") + " See: " + command + " --help";
     }

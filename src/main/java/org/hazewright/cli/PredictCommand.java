@@ -55,7 +55,7 @@ final class PredictCommand implements Callable<Integer> {
     @Option(
             names = "--picture",
             paramLabel = "FILE",
-            description = "Draw both spectra with their 95 % band and each ingredient's share, as .png or .svg.")
+            description = "Draw both spectra with their 95 %% band and each ingredient's share, as .png or .svg.")
     private Path picture;
 
     @Override

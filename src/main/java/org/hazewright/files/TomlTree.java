@@ -30,7 +30,9 @@ final class TomlTree {
         try {
             result = Toml.parse(file.text(), TomlVersion.V1_0_0);
         } catch (RuntimeException e) { // the parser's own faults must not reach a person as a stack trace
-            throw Place.whole(file.path()).refusal("The file cannot be read as TOML (" + e.getMessage() + ").");
+            throw Place.whole(file.path())
+                    .refusal(
+                            "The file cannot be read as TOML; compare it with one that the program wrote, or begin anew.");
         }
         if (result.hasErrors()) throw syntax(file, result.errors());
         return page(result, new Place(file.path(), 1, 1), "");

@@ -50,18 +50,18 @@ final class SafeWorkbook {
         } catch (IOException | InvalidFormatException | RuntimeException e) {
             throw refusal(
                     file,
-                    "The workbook is damaged and could not be read (" + firstLine(e)
-                            + "). Open it in a spreadsheet program, save it anew as .xlsx, and try again.");
+                    "The workbook is damaged and could not be read. Open it in a spreadsheet program, save it anew as .xlsx, and"
+                            + " try again.",
+                    e);
         }
     }
 
-    private static String firstLine(Exception e) {
-        String text = e.getMessage() == null ? e.getClass().getSimpleName() : e.getMessage();
-        return text.lines().findFirst().orElse("no reason given");
+    static FileRefusal refusal(Path file, String complaint) {
+        return refusal(file, complaint, null);
     }
 
-    static FileRefusal refusal(Path file, String complaint) {
-        return new FileRefusal(file.toString(), 0, 0, complaint);
+    private static FileRefusal refusal(Path file, String complaint, Exception cause) {
+        return new FileRefusal(file.toString(), 0, 0, complaint, cause);
     }
 
     private static void check(Path file, long mostUnpacked) {
@@ -73,9 +73,13 @@ final class SafeWorkbook {
             head(file);
             archive(file, mostUnpacked);
         } catch (ZipException e) {
-            throw refusal(file, "The workbook is damaged: its archive cannot be read (" + firstLine(e) + ").");
+            throw refusal(
+                    file,
+                    "The workbook is damaged: its archive cannot be unpacked. Take the version before it, or save it anew"
+                            + " as .xlsx.",
+                    e);
         } catch (IOException e) {
-            throw refusal(file, "The file could not be read (" + firstLine(e) + ").");
+            throw refusal(file, "The file could not be read; look whether its disk and its permissions allow it.", e);
         }
     }
 

@@ -259,7 +259,7 @@ public final class ReadingsPlace extends VBox {
         wanted.setText(
                 Double.isNaN(b.wanted()) ? "" : "wanted " + Figures.plain(Math.rint(1000 * b.wanted()) / 10) + " %");
         Say.show(wanted, !wanted.getText().isEmpty());
-        bloodSaid.setText("Hb " + Figures.withUncertainty(b.umolPerL(), b.uUmolPerL()) + " µmol/L");
+        bloodSaid.setText("Hb " + Figures.significant(b.umolPerL(), 3) + " µM");
         saturation.setTooltip(new Tooltip("What an oximeter would believe that reads µa at the targets' wavelengths."));
     }
 

@@ -4,10 +4,10 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.Map;
+import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.ValueSource;
-import org.junit.jupiter.api.Test;
 
 /**
  * Contrast by the Web Content Accessibility Guidelines 2.2 (W3C Recommendation, 2023): relative luminance and contrast ratio as they
@@ -44,10 +44,12 @@ class PaletteReferenceTest {
         Map<String, String> letters = Map.of(
                 "ink", p.ink(), "slate", p.slate(), "amber text", p.amberText(), "teal", p.teal(), "brick", p.brick());
         Map<String, String> grounds = Map.of("milk", p.milk(), "paper", p.paper(), "wash", p.wash());
-        letters.forEach((letter, colour) -> grounds.forEach((ground, under) -> assertTrue(
-                contrast(colour, under) >= 4.5, letter + " on " + ground + ": " + contrast(colour, under))));
+        letters.forEach((letter, colour) -> grounds.forEach((ground, under) ->
+                assertTrue(contrast(colour, under) >= 4.5, letter + " on " + ground + ": " + contrast(colour, under))));
         for (String share : p.shares())
-            assertTrue(contrast(p.slate(), share) >= 4.5, "slate on the share " + share + ": " + contrast(p.slate(), share));
+            assertTrue(
+                    contrast(p.slate(), share) >= 4.5,
+                    "slate on the share " + share + ": " + contrast(p.slate(), share));
         assertTrue(contrast(p.ink(), p.tealSoft()) >= 4.5, "ink on a hint");
         assertTrue(contrast(p.milk(), p.ink()) >= 4.5, "letters of the button");
         assertTrue(contrast(p.milk(), p.teal()) >= 4.5, "tick on a done step");
@@ -64,7 +66,18 @@ class PaletteReferenceTest {
 
     @Test
     void theStyleSheetIsToldEveryColour() {
-        for (String name : new String[] {"-milk", "-paper", "-wash", "-line", "-ink", "-slate", "-amber", "-amber-text", "-teal", "-teal-soft", "-brick"})
-            assertTrue(Palette.LIGHT.css().contains(name + ":#"), name);
+        for (String name : new String[] {
+            "-milk",
+            "-paper",
+            "-wash",
+            "-line",
+            "-ink",
+            "-slate",
+            "-amber",
+            "-amber-text",
+            "-teal",
+            "-teal-soft",
+            "-brick"
+        }) assertTrue(Palette.LIGHT.css().contains(name + ":#"), name);
     }
 }

@@ -42,13 +42,18 @@ class AtBalanceTest {
 
     private AtBalance at(Batch batch, List<Weighed> kept) {
         return new AtBalance(
-                AtBalance.Prepared.of(batch, SHELF, kept), new WeighingLog(folder.resolve("b1.batch.toml")), Work.sameThread());
+                AtBalance.Prepared.of(batch, SHELF, kept),
+                new WeighingLog(folder.resolve("b1.batch.toml")),
+                Work.sameThread());
     }
 
     private static void go(AtBalance at, double factor) {
         AtBalance.Line line = at.nowProperty().get().line();
         String text = line.weighs() ? String.format(Locale.ROOT, "%.3f g", at.loadWantedG() * factor) : "";
-        if (!at.enter(text)) assertTrue(at.enter(text), "asked once more, it is taken: " + at.complaintProperty().get());
+        if (!at.enter(text))
+            assertTrue(
+                    at.enter(text),
+                    "asked once more, it is taken: " + at.complaintProperty().get());
     }
 
     @ParameterizedTest
@@ -91,14 +96,17 @@ class AtBalanceTest {
             double factor = 1 + 0.15 * (random.nextDouble() - 0.5);
             int weighing = 0;
             while (!at.nowProperty().get().over()) {
-                boolean weighs = at.nowProperty().get().line().weighs() && at.loads().isEmpty();
+                boolean weighs =
+                        at.nowProperty().get().line().weighs() && at.loads().isEmpty();
                 go(at, weighs && weighing++ == slip ? factor : 1);
             }
             Recipe blind = at.batch().plan();
             Recipe slipped = withSlip(blind, at, slip);
             double replanned = Outlook.of(answer.brief(), at.made(), 0).worstMiss();
             double asPlanned = Outlook.of(answer.brief(), slipped, 0).worstMiss();
-            assertTrue(replanned <= Math.max(1, asPlanned + 0.02), replanned + " after re-planning, " + asPlanned + " without");
+            assertTrue(
+                    replanned <= Math.max(1, asPlanned + 0.02),
+                    replanned + " after re-planning, " + asPlanned + " without");
         }
     }
 

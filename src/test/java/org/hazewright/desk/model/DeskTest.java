@@ -33,10 +33,15 @@ class DeskTest {
 
     @BeforeEach
     void bath() {
-        desk = new Desk(Work.sameThread(), Optional.empty(), Remembered.in(folder.resolve("memory"), folder.resolve("work")));
+        desk = new Desk(
+                Work.sameThread(), Optional.empty(), Remembered.in(folder.resolve("memory"), folder.resolve("work")));
         Path file = folder.resolve("bath.brief.toml");
         BriefWriter.write(
-                file, BriefReader.readShipped("wrist-bath"), List.of(), TissueSpectra.of(null), SafeFile.Overwrite.NEVER);
+                file,
+                BriefReader.readShipped("wrist-bath"),
+                List.of(),
+                TissueSpectra.of(null),
+                SafeFile.Overwrite.NEVER);
         desk.begin(Optional.of(file));
     }
 
@@ -66,7 +71,9 @@ class DeskTest {
             Brief moved = desk.papers().brief();
             assertTrue(follower.suits(moved));
             if (!Shown.key(shown().recipe()).equals(way)) continue;
-            double[] followed = follower.to(moved, 0).predicted().stream().mapToDouble(p -> p.miss()).toArray();
+            double[] followed = follower.to(moved, 0).predicted().stream()
+                    .mapToDouble(p -> p.miss())
+                    .toArray();
             for (int j = 0; j < followed.length; j++)
                 assertEquals(
                         shown().outlook().predicted().get(j).miss(),
@@ -120,7 +127,8 @@ class DeskTest {
                 e.readability("0"),
                 e.maxScatterers("99"),
                 e.toggleBase("water"));
-        for (Optional<String> words : refused) assertTrue(words.isPresent() && words.get().length() > 10, words.toString());
+        for (Optional<String> words : refused)
+            assertTrue(words.isPresent() && words.get().length() > 10, words.toString());
         assertEquals(start, desk.edits().now());
         assertTrue(e.remove(690).isEmpty());
         assertTrue(e.remove(830).isPresent(), "the last wavelength stays");
@@ -141,7 +149,12 @@ class DeskTest {
         Brief brief = BriefReader.readShipped(name);
         Draft draft = Draft.of(brief);
         Path file = folder.resolve(name + ".brief.toml");
-        BriefWriter.write(file, draft.brief(Optional.empty()), List.of("note"), TissueSpectra.of(null), SafeFile.Overwrite.REPLACE);
+        BriefWriter.write(
+                file,
+                draft.brief(Optional.empty()),
+                List.of("note"),
+                TissueSpectra.of(null),
+                SafeFile.Overwrite.REPLACE);
         Brief back = BriefReader.read(file, TissueSpectra.of(null));
         assertEquals(brief.targets(), back.targets());
         assertEquals(brief.moulds(), back.moulds());
@@ -163,12 +176,14 @@ class DeskTest {
                 editing.addWavelength(Double.toString(nm), null);
                 editing.drag(nm, Point.Quantity.MUA, random.nextDouble());
                 if (random.nextBoolean()) editing.wanted(nm, Point.Quantity.MUSP, "");
-                if (random.nextBoolean()) editing.allowed(nm, Point.Quantity.MUA, (1 + random.nextInt(40)) / 1000.0 + " /cm");
+                if (random.nextBoolean())
+                    editing.allowed(nm, Point.Quantity.MUA, (1 + random.nextInt(40)) / 1000.0 + " /cm");
                 if (random.nextBoolean()) editing.weight(nm, Integer.toString(1 + random.nextInt(5)));
                 d = edits.now();
             }
             Path file = folder.resolve("random.brief.toml");
-            BriefWriter.write(file, d.brief(Optional.empty()), List.of(), TissueSpectra.of(null), SafeFile.Overwrite.REPLACE);
+            BriefWriter.write(
+                    file, d.brief(Optional.empty()), List.of(), TissueSpectra.of(null), SafeFile.Overwrite.REPLACE);
             Brief back = BriefReader.read(file, TissueSpectra.of(null));
             assertEquals(d.brief(Optional.empty()).targets(), back.targets());
         }
@@ -195,7 +210,9 @@ class DeskTest {
         Files.copy(folder.resolve("bath.recipe.toml"), lonely);
         List<String> way = Shown.key(shown().recipe());
         desk.open(folder.resolve("bath.recipe.toml"));
-        assertEquals(Optional.of(folder.resolve("bath.brief.toml")), desk.papers().openProperty().get().file());
+        assertEquals(
+                Optional.of(folder.resolve("bath.brief.toml")),
+                desk.papers().openProperty().get().file());
         desk.open(lonely);
         assertEquals(Optional.empty(), desk.papers().openProperty().get().file());
         assertEquals(way, Shown.key(shown().recipe()));
@@ -209,7 +226,8 @@ class DeskTest {
         for (String line : lines) assertEquals(4, line.split("\t", -1).length, line);
         assertEquals(
                 shown().recipe().items().get(0).massG(),
-                Double.parseDouble(lines[lines.length - shown().recipe().items().size()].split("\t")[3]),
+                Double.parseDouble(
+                        lines[lines.length - shown().recipe().items().size()].split("\t")[3]),
                 1e-9);
     }
 
