@@ -97,7 +97,12 @@ public final class Window {
                                 "This is a fault of the program, not of your files; nothing was overwritten. " + f))));
         desk.weighingProperty().addListener((p, before, now) -> turn());
         desk.madeProperty().addListener((p, before, now) -> turn());
-        Scene scene = new Scene(whole, 1440, 900);
+        Scene scene = new Scene(
+                whole, desk.remembered().number("window.width", 1440), desk.remembered().number("window.height", 900));
+        stage.setOnHidden(e -> {
+            desk.remembered().keep("window.width", Double.toString(scene.getWidth()));
+            desk.remembered().keep("window.height", Double.toString(scene.getHeight()));
+        });
         look.dress(scene);
         keys(scene);
         drops(scene);
@@ -253,6 +258,11 @@ public final class Window {
         shelf(true);
     }
 
+    /** Turns back from the shelf. */
+    void closeShelf() {
+        shelf(false);
+    }
+
     /** The view of the batch that was looked at last; null before the first. */
     public BatchView batch() {
         return batch;
@@ -270,6 +280,7 @@ public final class Window {
         on(scene, "Shortcut+Shift+S", deeds::saveAs);
         on(scene, "Shortcut+P", deeds::print);
         on(scene, "Shortcut+G", deeds::copyGrams);
+        on(scene, "Shortcut+T", deeds::copyTargets);
         on(scene, "Shortcut+Plus", () -> look.larger(true));
         on(scene, "Shortcut+Equals", () -> look.larger(true));
         on(scene, "Shortcut+Minus", () -> look.larger(false));
@@ -468,13 +479,20 @@ public final class Window {
 
         @Override
         public void copyGrams() {
-            desk.copyText().ifPresent(text -> {
-                ClipboardContent content = new ClipboardContent();
-                content.putString(text);
-                Clipboard.getSystemClipboard().setContent(content);
-                desk.notices()
-                        .tell(Notice.told("copied", "The grams are on the clipboard; paste them into a spreadsheet."));
-            });
+            copy(desk.copyText(), "The grams are");
+        }
+
+        @Override
+        public void copyTargets() {
+            copy(desk.copyTargets(), "The targets are");
+        }
+
+        private void copy(Optional<String> text, String what) {
+            if (text.isEmpty()) return;
+            ClipboardContent content = new ClipboardContent();
+            content.putString(text.get());
+            Clipboard.getSystemClipboard().setContent(content);
+            desk.notices().tell(Notice.told("copied", what + " on the clipboard; paste them into a spreadsheet."));
         }
 
         @Override

@@ -98,14 +98,15 @@ public final class BriefPlace extends VBox {
         HBox amount = new HBox(batch, Say.label("mL +"), overage, Say.label("% extra"));
         amount.setAlignment(Pos.BASELINE_LEFT);
         grid.addRow(1, Say.quiet("Batch"), amount);
-        VBox moulds = new VBox();
-        desk.edits().nowProperty().addListener((p, before, now) -> {
-            if (before != null && now != null && before.moulds().equals(now.moulds())) return;
-            moulds.getChildren().clear();
-            if (now != null && !now.moulds().isEmpty())
-                moulds.getChildren().add(Say.wrapped("for " + moulds(now.moulds()), "quiet", "small"));
-        });
-        grid.add(moulds, 1, 2);
+        MouldPanel moulds = new MouldPanel(desk);
+        Say.show(moulds, false);
+        Word filling = new Word("", () -> Say.show(moulds, !moulds.isVisible()));
+        filling.getStyleClass().add("small");
+        filling.setMinWidth(0);
+        desk.edits().nowProperty().addListener((p, before, now) -> filling.setText(
+                now == null || now.moulds().isEmpty() ? "for moulds…" : "for " + moulds(now.moulds())));
+        grid.add(filling, 1, 2);
+        grid.add(moulds, 0, 8, 2, 1);
         grid.add(new ErrorLine(batch, overage), 0, 3, 2, 1);
 
         Field temperature =

@@ -383,6 +383,11 @@ public final class Desk {
         return Optional.ofNullable(solving.shownProperty().get()).map(s -> Tables.weighOut(s.outlook()));
     }
 
+    /** The targets with their predictions as a table for a spreadsheet; empty when there is no recipe. */
+    public Optional<String> copyTargets() {
+        return Optional.ofNullable(solving.shownProperty().get()).map(s -> Tables.targets(s.outlook()));
+    }
+
     /** Opens a file by what its name says it is. */
     public void open(Path file) {
         String name = file.getFileName().toString().toLowerCase(Locale.ROOT);

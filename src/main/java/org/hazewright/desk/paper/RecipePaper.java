@@ -84,7 +84,7 @@ public final class RecipePaper {
         pen.text("made by", LEFT, BOTTOM + 18, SIZE, false, c.slate(), Pen.Align.LEFT);
         pen.line(LEFT + 44, BOTTOM + 20, LEFT + 190, BOTTOM + 20, c.slate(), 0.6);
         pen.text("on", LEFT + 204, BOTTOM + 18, SIZE, false, c.slate(), Pen.Align.LEFT);
-        pen.line(LEFT + 282, BOTTOM + 20, LEFT + 320, BOTTOM + 20, c.slate(), 0.6);
+        pen.line(LEFT + 222, BOTTOM + 20, LEFT + 320, BOTTOM + 20, c.slate(), 0.6);
     }
 
     public static double spectraWidth() {
