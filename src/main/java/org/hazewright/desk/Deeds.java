@@ -22,6 +22,8 @@ interface Deeds {
 
     void copyGrams();
 
+    void copyTargets();
+
     void balance();
 
     void shelf();

@@ -145,6 +145,7 @@ final class Head extends HBox {
                         undo(),
                         redo(),
                         item("Copy grams", "Shortcut+G", deeds::copyGrams),
+                        item("Copy targets", "Shortcut+T", deeds::copyTargets),
                         new SeparatorMenuItem(),
                         dark,
                         item("Larger letters", "Shortcut+Plus", () -> look.larger(true)),

@@ -97,7 +97,12 @@ public final class Window {
                                 "This is a fault of the program, not of your files; nothing was overwritten. " + f))));
         desk.weighingProperty().addListener((p, before, now) -> turn());
         desk.madeProperty().addListener((p, before, now) -> turn());
-        Scene scene = new Scene(whole, 1440, 900);
+        Scene scene = new Scene(
+                whole, desk.remembered().number("window.width", 1440), desk.remembered().number("window.height", 900));
+        stage.setOnHidden(e -> {
+            desk.remembered().keep("window.width", Double.toString(scene.getWidth()));
+            desk.remembered().keep("window.height", Double.toString(scene.getHeight()));
+        });
         look.dress(scene);
         keys(scene);
         drops(scene);
@@ -158,6 +163,7 @@ public final class Window {
         recipe.getStyleClass().add("recipe-width");
         brief.getChildren().add(0, hint("wish", "Say here what is wanted."));
         recipe.getChildren().add(0, hint("weigh", "These grams give it. When they look right, stand at the balance."));
+        readings.narrowWhen(spectra.widthProperty());
         VBox middle = new VBox(hint("drag", "Drag an amber box, or type on the left: the recipe follows."), spectra);
         middle.getChildren().add(readings);
         middle.getStyleClass().add("middle");
@@ -212,7 +218,7 @@ public final class Window {
             center(balance, false);
             balance.focusField();
         } else if (desk.madeProperty().get().isPresent()) {
-            batch = new BatchView(desk.madeProperty().get().get(), desk::leaveBatch);
+            batch = new BatchView(desk.madeProperty().get().get(), chooser, desk::leaveBatch);
             center(batch, false);
             batch.requestFocus();
         } else if (shelfOpen) {
@@ -252,6 +258,11 @@ public final class Window {
         shelf(true);
     }
 
+    /** Turns back from the shelf. */
+    void closeShelf() {
+        shelf(false);
+    }
+
     /** The view of the batch that was looked at last; null before the first. */
     public BatchView batch() {
         return batch;
@@ -269,6 +280,7 @@ public final class Window {
         on(scene, "Shortcut+Shift+S", deeds::saveAs);
         on(scene, "Shortcut+P", deeds::print);
         on(scene, "Shortcut+G", deeds::copyGrams);
+        on(scene, "Shortcut+T", deeds::copyTargets);
         on(scene, "Shortcut+Plus", () -> look.larger(true));
         on(scene, "Shortcut+Equals", () -> look.larger(true));
         on(scene, "Shortcut+Minus", () -> look.larger(false));
@@ -364,13 +376,16 @@ public final class Window {
     private final class Doing implements Deeds {
         @Override
         public void open() {
-            chooser.open("Open", BRIEFS, ".brief.toml", ".recipe.toml", ".batch.toml", ".toml")
+            chooser.open("Open", BRIEFS, ".brief.toml", ".recipe.toml", ".batch.toml", ".toml", ".csv", ".xlsx")
                     .ifPresent(this::open);
         }
 
         @Override
         public void open(Path file) {
-            ifSaved(() -> desk.open(file));
+            String name = file.getFileName().toString().toLowerCase(java.util.Locale.ROOT);
+            boolean replaces = name.endsWith(".toml") && !name.endsWith(".batch.toml");
+            if (replaces) ifSaved(() -> desk.open(file));
+            else desk.open(file);
         }
 
         /** Runs at once when nothing would be lost, else asks first. */
@@ -464,13 +479,20 @@ public final class Window {
 
         @Override
         public void copyGrams() {
-            desk.copyText().ifPresent(text -> {
-                ClipboardContent content = new ClipboardContent();
-                content.putString(text);
-                Clipboard.getSystemClipboard().setContent(content);
-                desk.notices()
-                        .tell(Notice.told("copied", "The grams are on the clipboard; paste them into a spreadsheet."));
-            });
+            copy(desk.copyText(), "The grams are");
+        }
+
+        @Override
+        public void copyTargets() {
+            copy(desk.copyTargets(), "The targets are");
+        }
+
+        private void copy(Optional<String> text, String what) {
+            if (text.isEmpty()) return;
+            ClipboardContent content = new ClipboardContent();
+            content.putString(text.get());
+            Clipboard.getSystemClipboard().setContent(content);
+            desk.notices().tell(Notice.told("copied", what + " on the clipboard; paste them into a spreadsheet."));
         }
 
         @Override

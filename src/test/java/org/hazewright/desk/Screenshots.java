@@ -8,9 +8,14 @@ import java.util.List;
 import java.util.Optional;
 import javafx.application.Platform;
 import javafx.scene.image.WritableImage;
+import org.hazewright.brief.Point;
 import org.hazewright.desk.look.Palette;
 import org.hazewright.desk.model.AtBalance;
 import org.hazewright.desk.model.MadeBatch;
+import org.hazewright.files.BriefReader;
+import org.hazewright.files.BriefWriter;
+import org.hazewright.files.SafeFile;
+import org.hazewright.files.TissueSpectra;
 
 /** Makes pictures of every view at two sizes in both themes: see DEVELOPERS.md for the command. */
 public final class Screenshots {
@@ -24,7 +29,7 @@ public final class Screenshots {
         Path out = Path.of(args.length > 0 ? args[0] : "target/screenshots");
         Files.createDirectories(out);
         Screenshots s = new Screenshots(out);
-        double[][] sizes = {{1280, 720}, {1920, 1080}};
+        double[][] sizes = args.length > 1 && args[1].equals("4k") ? new double[][] {{3840, 2160}} : new double[][] {{1280, 720}, {1920, 1080}};
         try {
             for (double[] size : sizes) s.size(size[0], size[1]);
         } finally {
@@ -99,6 +104,29 @@ public final class Screenshots {
         for (Palette p : new Palette[] {Palette.LIGHT, Palette.DARK}) {
             Stagehand.ui(() -> window.look().paletteProperty().set(p));
             shoot(window, "batch", p, w);
+        }
+        Stagehand.ui(() -> window.stage().close());
+        trouble(w, h);
+    }
+
+    /** A brief that no recipe meets, a field that is wrong, a panel that is open. */
+    private void trouble(double w, double h) throws IOException {
+        Path memory = Files.createTempDirectory("memory");
+        Path file = memory.resolve("window.brief.toml");
+        BriefWriter.write(
+                file, BriefReader.readShipped("clear-window"), List.of(), TissueSpectra.of(null), SafeFile.Overwrite.NEVER);
+        Window window = Stagehand.open(memory, w, h, Optional.of(file), Optional.empty());
+        Stagehand.untilSettled(window);
+        Stagehand.ui(() -> {
+            var field = window.brief().wantedField(760, Point.Quantity.MUA);
+            field.requestFocus();
+            field.setText("0.1x");
+            field.fireEvent(new javafx.event.ActionEvent());
+            window.brief().openTissue();
+        });
+        for (Palette p : new Palette[] {Palette.LIGHT, Palette.DARK}) {
+            Stagehand.ui(() -> window.look().paletteProperty().set(p));
+            shoot(window, "misses", p, w);
         }
         Stagehand.ui(() -> window.stage().close());
     }

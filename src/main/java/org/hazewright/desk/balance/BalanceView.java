@@ -22,6 +22,7 @@ import org.hazewright.desk.model.AtBalance;
 import org.hazewright.desk.model.Typed;
 import org.hazewright.desk.model.Words;
 import org.hazewright.desk.parts.Say;
+import org.hazewright.desk.parts.StillCaret;
 import org.hazewright.desk.parts.Word;
 import org.hazewright.optics.Figures;
 import org.hazewright.optics.Refusal;
@@ -55,6 +56,7 @@ public final class BalanceView extends BorderPane {
         getStyleClass().add("balance-view");
         Label reading = Say.label("reads", "reads-label");
         reads.getStyleClass().setAll("text-input", "text-field", "reads");
+        StillCaret.in(reads);
         reads.setAccessibleText("grams that the balance shows");
         HBox.setHgrow(reads, Priority.ALWAYS);
         readsBox = new HBox(reading, reads);

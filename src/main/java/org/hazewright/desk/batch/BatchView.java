@@ -1,6 +1,7 @@
 package org.hazewright.desk.batch;
 
 import java.util.List;
+import java.util.Optional;
 import java.util.OptionalDouble;
 import javafx.geometry.Pos;
 import javafx.scene.Node;
@@ -10,6 +11,7 @@ import javafx.scene.control.ScrollPane;
 import javafx.scene.input.KeyCode;
 import javafx.scene.input.KeyEvent;
 import javafx.scene.layout.BorderPane;
+import javafx.scene.layout.FlowPane;
 import javafx.scene.layout.GridPane;
 import javafx.scene.layout.HBox;
 import javafx.scene.layout.Priority;
@@ -20,6 +22,8 @@ import org.hazewright.bench.Correction;
 import org.hazewright.bench.Weighing;
 import org.hazewright.desk.model.MadeBatch;
 import org.hazewright.desk.model.Words;
+import org.hazewright.desk.parts.Chooser;
+import org.hazewright.desk.parts.ErrorLine;
 import org.hazewright.desk.parts.Field;
 import org.hazewright.desk.parts.Say;
 import org.hazewright.desk.parts.Word;
@@ -33,21 +37,25 @@ public final class BatchView extends BorderPane {
     private final VBox weighed = new VBox();
     private final VBox says = new VBox();
     private final VBox puts = new VBox();
+    private final VBox teaches = new VBox();
     private final Label complaint = Say.wrapped("", "error-line");
     private final MeasuredTable table;
 
     /** @param leave goes back to the desk */
-    public BatchView(MadeBatch made, Runnable leave) {
+    public BatchView(MadeBatch made, Chooser chooser, Runnable leave) {
         this.made = made;
         getStyleClass().add("balance-view");
-        table = new MeasuredTable(made);
-        List.of(weighed, says, puts).forEach(v -> v.getStyleClass().add("gap-s"));
+        table = new MeasuredTable(made, chooser);
+        List.of(weighed, says, puts, teaches).forEach(v -> v.getStyleClass().add("gap-s"));
         setTop(head(leave));
-        setLeft(column("batch-left", "side-left", Say.place("Weighed"), weighed, who()));
+        boolean heated = made.batchProperty().get().plan().base().making().meltC().isPresent();
+        Node heating = heating();
+        Say.show(heating, heated);
+        setLeft(column("batch-left", "side-left", Say.place("Weighed"), weighed, heating, who()));
         VBox middle = new VBox(Say.place("Landing and measured values"), table, complaint);
         middle.getStyleClass().addAll("place", "gap-m");
         setCenter(scrolled(middle));
-        setRight(column("batch-right", "side-right", Say.place("What it says"), says, puts));
+        setRight(column("batch-right", "side-right", Say.place("What it says"), says, puts, teaches));
         made.batchProperty().addListener((p, before, now) -> show());
         made.seenProperty().addListener((p, before, now) -> show());
         made.correctionProperty().addListener((p, before, now) -> puts());
@@ -96,7 +104,7 @@ public final class BatchView extends BorderPane {
                 .named("who made it")
                 .styled("boxed");
         who.setPromptText("name or initials");
-        Field note = new Field(() -> "", text -> text.isBlank() ? java.util.Optional.empty() : made.note(text), false)
+        Field note = new Field(() -> "", text -> text.isBlank() ? Optional.empty() : made.note(text), false)
                 .named("a note on this batch")
                 .styled("boxed");
         note.setPromptText("a note, then Enter");
@@ -187,16 +195,74 @@ public final class BatchView extends BorderPane {
                                 .add(Say.wrapped(
                                         "Nothing is measured yet. Type values beside the targets when it was.",
                                         "quiet")));
+        teaches.getChildren().clear();
         if (!seen.beliefs().isEmpty()) {
-            says.getChildren().add(Say.heading("What it teaches of the bottles"));
-            for (MadeBatch.Belief b : seen.beliefs())
-                says.getChildren()
+            teaches.getChildren().add(Say.heading("What it teaches of the bottles"));
+            for (MadeBatch.Belief b : seen.beliefs()) {
+                teaches.getChildren()
                         .add(Say.wrapped(
                                 Words.capital(b.words()) + ": " + Figures.withUncertainty(b.factor(), b.uAfter())
                                         + " times its file, known to " + Figures.significant(100 * b.uAfter(), 2)
                                         + " % in place of "
                                         + Figures.significant(100 * b.uBefore(), 2) + " %."));
+            }
+            seen.beliefs().stream()
+                    .map(MadeBatch.Belief::ingredient)
+                    .distinct()
+                    .filter(made::canLearn)
+                    .forEach(id -> teaches.getChildren().add(keep(id)));
         }
+    }
+
+    /** Asks for a lot's number to keep a bottle's new figures under. */
+    private Node keep(String ingredient) {
+        Field number = new Field(() -> "", text -> text.isBlank() ? Optional.empty() : made.learn(ingredient, text), false)
+                .named("keep what was learned of " + ingredient + " as a lot: its number")
+                .styled("boxed")
+                .columns(7);
+        number.setPromptText("lot number");
+        FlowPane line = new FlowPane(Say.quiet("keep as a lot of " + ingredient + ":"), number);
+        line.getStyleClass().add("flow");
+        return new VBox(line, new ErrorLine(number));
+    }
+
+    private Node heating() {
+        String[] typed = {"", "", ""};
+        Field before = gram(typed, 0, "vessel before heating in g", "before");
+        Field after = gram(typed, 1, "vessel after heating in g", "after");
+        Field back = gram(typed, 2, "water given back in g", "given back");
+        Button take = new Button("Take");
+        take.getStyleClass().setAll("plain");
+        take.setAccessibleText("take the vessel's weights");
+        take.setOnAction(e -> made.heating(typed[0], typed[1], typed[2]));
+        FlowPane line = new FlowPane(before, after, back, take);
+        line.getStyleClass().add("cards");
+        VBox box = new VBox(Say.wrapped("Vessel with lid before and after heating, and water given back, in g", "quiet"), line);
+        box.getStyleClass().add("gap-xs");
+        Label now = Say.wrapped("", "quiet", "small");
+        Runnable tell = () -> {
+            now.setText(made.batchProperty().get().heating()
+                    .map(h -> "lost " + Figures.significant(h.lostG(), 4) + " g, missing in the end "
+                            + Figures.significant(h.missingG(), 3) + " g")
+                    .orElse(""));
+            Say.show(now, !now.getText().isEmpty());
+        };
+        made.batchProperty().addListener((p, was, is) -> tell.run());
+        tell.run();
+        box.getChildren().add(now);
+        return box;
+    }
+
+    private static Field gram(String[] typed, int k, String name, String prompt) {
+        Field f = new Field(() -> typed[k], text -> {
+                    typed[k] = text;
+                    return Optional.empty();
+                }, true)
+                .named(name)
+                .styled("boxed")
+                .columns(6);
+        f.setPromptText(prompt);
+        return f;
     }
 
     private void puts() {

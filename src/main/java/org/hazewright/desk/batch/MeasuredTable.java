@@ -17,9 +17,11 @@ import org.hazewright.bench.Measurement;
 import org.hazewright.brief.Point;
 import org.hazewright.desk.model.MadeBatch;
 import org.hazewright.desk.model.Words;
+import org.hazewright.desk.parts.Chooser;
 import org.hazewright.desk.parts.Field;
 import org.hazewright.desk.parts.Gauge;
 import org.hazewright.desk.parts.Say;
+import org.hazewright.desk.parts.Word;
 import org.hazewright.learning.MeasuredValue;
 import org.hazewright.learning.Quantity;
 import org.hazewright.optics.Figures;
@@ -37,7 +39,7 @@ public final class MeasuredTable extends VBox {
     private String method = "";
     private String instrument = "";
 
-    MeasuredTable(MadeBatch made) {
+    MeasuredTable(MadeBatch made, Chooser chooser) {
         this.made = made;
         getStyleClass().add("gap-m");
         grid.getStyleClass().add("measured-grid");
@@ -71,7 +73,9 @@ public final class MeasuredTable extends VBox {
         Button take = new Button("Take these values");
         take.getStyleClass().setAll("plain");
         take.setOnAction(e -> take());
-        FlowPane line = new FlowPane(how, with, take);
+        Word fromFile = new Word("from a file…", () -> chooser.open("Measured values", "Tables", ".csv", ".txt", ".xlsx")
+                .ifPresent(p -> made.measuredFrom(p, method, instrument)));
+        FlowPane line = new FlowPane(how, with, take, fromFile);
         line.getStyleClass().add("cards");
         getChildren().addAll(grid, line);
         Say.show(line, !made.points().isEmpty());

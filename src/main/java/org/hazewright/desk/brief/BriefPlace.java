@@ -41,6 +41,7 @@ public final class BriefPlace extends VBox {
     private final MenuButton base = new MenuButton();
     private final Word balance = new Word("", () -> {});
     private final TargetTable table;
+    private final TissuePanel tissuePanel;
     private final VBox balancePanel = new VBox();
     private List<Object> offered = List.of();
 
@@ -50,13 +51,8 @@ public final class BriefPlace extends VBox {
         table = new TargetTable(desk);
         TissuePanel tissue = new TissuePanel(desk);
         Say.show(tissue, false);
-        Word fromTissue = new Word("from tissue-like values…", () -> {
-            boolean open = !tissue.isVisible();
-            Say.show(tissue, open);
-            if (open
-                    && desk.edits().now() != null
-                    && desk.edits().now().tissue().isEmpty()) tissue.fill();
-        });
+        tissuePanel = tissue;
+        Word fromTissue = new Word("from tissue-like values…", this::openTissue);
         VBox all = new VBox(particulars(), table, adding(fromTissue), tissue, new ShelfList(desk, openShelf));
         all.getStyleClass().add("gap-l");
         ScrollPane scroll = new ScrollPane(all);
@@ -102,14 +98,15 @@ public final class BriefPlace extends VBox {
         HBox amount = new HBox(batch, Say.label("mL +"), overage, Say.label("% extra"));
         amount.setAlignment(Pos.BASELINE_LEFT);
         grid.addRow(1, Say.quiet("Batch"), amount);
-        VBox moulds = new VBox();
-        desk.edits().nowProperty().addListener((p, before, now) -> {
-            if (before != null && now != null && before.moulds().equals(now.moulds())) return;
-            moulds.getChildren().clear();
-            if (now != null && !now.moulds().isEmpty())
-                moulds.getChildren().add(Say.wrapped("for " + moulds(now.moulds()), "quiet", "small"));
-        });
-        grid.add(moulds, 1, 2);
+        MouldPanel moulds = new MouldPanel(desk);
+        Say.show(moulds, false);
+        Word filling = new Word("", () -> Say.show(moulds, !moulds.isVisible()));
+        filling.getStyleClass().add("small");
+        filling.setMinWidth(0);
+        desk.edits().nowProperty().addListener((p, before, now) -> filling.setText(
+                now == null || now.moulds().isEmpty() ? "for moulds…" : "for " + moulds(now.moulds())));
+        grid.add(filling, 1, 2);
+        grid.add(moulds, 0, 8, 2, 1);
         grid.add(new ErrorLine(batch, overage), 0, 3, 2, 1);
 
         Field temperature =
@@ -237,6 +234,11 @@ public final class BriefPlace extends VBox {
                                 .round(new java.math.MathContext(6))
                                 .doubleValue()) + " mg"
                 : Figures.plain(g) + " g";
+    }
+
+    /** Opens or closes the panel that fills the table from a composition. */
+    public void openTissue() {
+        Say.show(tissuePanel, !tissuePanel.isVisible());
     }
 
     /** Puts the cursor where a wish can be typed. */

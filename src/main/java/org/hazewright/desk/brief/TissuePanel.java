@@ -6,6 +6,7 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.stream.Collectors;
+import javafx.scene.control.Button;
 import javafx.scene.control.Label;
 import javafx.scene.layout.GridPane;
 import javafx.scene.layout.VBox;
@@ -21,6 +22,8 @@ import org.hazewright.optics.Refusal;
 
 /** A composition that fills the table of targets while it is typed. */
 final class TissuePanel extends VBox {
+    private static final String HOW = "Fills the table as you type. µs′ follows (λ/500 nm) to the minus scatter power.";
+
     private final Desk desk;
     private final Map<String, Field> fields = new LinkedHashMap<>();
     private final Map<String, String> texts = new LinkedHashMap<>();
@@ -35,12 +38,15 @@ final class TissuePanel extends VBox {
         ask(grid, "wavelengths", "nm", "690, 760, 830");
         ask(grid, "haemoglobin", "µmol/L", "60");
         ask(grid, "oxygen saturation", "%", "70");
-        ask(grid, "water", "% of volume", "60");
-        ask(grid, "fat", "% of volume", "20");
+        ask(grid, "water", "% vol", "60");
+        ask(grid, "fat", "% vol", "20");
         ask(grid, "µs′ at 500 nm", "/cm", "15");
         ask(grid, "scatter power", "", "1.1");
-        said.setText("Fills the table as you type. µs′ follows (λ/500 nm) to the minus scatter power.");
-        getChildren().addAll(Say.label("Tissue-like values", "strong"), grid, said);
+        said.setText(HOW);
+        Button fill = new Button("Fill the table");
+        fill.getStyleClass().setAll("plain");
+        fill.setOnAction(e -> fill());
+        getChildren().addAll(Say.label("Tissue-like values", "strong"), grid, fill, said);
         desk.edits().nowProperty().addListener((p, before, now) -> {
             if (before == null || now == null || before.tissue() != now.tissue()) take(now);
         });
@@ -52,10 +58,14 @@ final class TissuePanel extends VBox {
         Field field = new Field(() -> texts.get(what), text -> typed(what, text), true)
                 .named(what + (unit.isEmpty() ? "" : " in " + unit))
                 .styled("boxed")
-                .columns(what.equals("wavelengths") ? 12 : 6);
+                .columns(what.equals("wavelengths") ? 11 : 5);
         fields.put(what, field);
-        int at = 2 * grid.getRowCount();
-        grid.addRow(at, Say.quiet(what), field, Say.label(unit, "quiet", "small"));
+        int at = grid.getRowCount();
+        Label name = Say.quiet(what);
+        Label of = Say.label(unit, "quiet", "small");
+        name.setMinWidth(USE_PREF_SIZE);
+        of.setMinWidth(USE_PREF_SIZE);
+        grid.addRow(at, name, field, of);
         grid.add(new ErrorLine(field), 0, at + 1, 3, 1);
     }
 
@@ -104,8 +114,9 @@ final class TissuePanel extends VBox {
     }
 
     /** Fills the table with what stands here. */
-    void fill() {
-        typed("haemoglobin", texts.get("haemoglobin"));
+    private void fill() {
+        Optional<String> wrong = typed("haemoglobin", texts.get("haemoglobin"));
+        said.setText(wrong.map(w -> "✕ " + w).orElse(HOW));
     }
 
     private static Tissue tissue(Map<String, String> t) {

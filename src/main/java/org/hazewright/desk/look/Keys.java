@@ -20,7 +20,8 @@ public final class Keys {
             new Key("Ctrl+Z, Ctrl+Shift+Z", "undo, redo; at the balance: one step back"),
             new Key("Ctrl+O, Ctrl+S, Ctrl+Shift+S", "open, save, save as"),
             new Key("Ctrl+N", "new brief"),
-            new Key("Ctrl+P, Ctrl+G", "print, copy the grams"),
+            new Key("Ctrl+P", "print"),
+            new Key("Ctrl+G, Ctrl+T", "copy the grams, copy the targets, for a spreadsheet"),
             new Key("Ctrl++, Ctrl+−", "larger, smaller letters"),
             new Key("F1", "this list"));
 }

@@ -162,6 +162,12 @@ public final class BriefEditing {
         return new BigDecimal(v).round(new MathContext(digits)).doubleValue();
     }
 
+    /** Takes the targets of a table in place of those that are there. */
+    public Optional<String> targets(List<Target> targets, String from) {
+        return attempt("targets from " + from, "", d -> d.withRows(targets.stream().map(Row::of).toList())
+                .withTissue(Optional.empty()));
+    }
+
     // tissue-like values
 
     /** Fills rows at the composition's wavelengths; rows at other wavelengths that the last composition did not make stay. */

@@ -18,9 +18,11 @@ import org.hazewright.brief.SearchLimits;
 import org.hazewright.brief.Tissue;
 import org.hazewright.files.BatchWriter;
 import org.hazewright.files.BriefReader;
+import org.hazewright.files.CoefficientTable;
 import org.hazewright.files.RecipeReader;
 import org.hazewright.files.SafeFile;
 import org.hazewright.mixture.Recipe;
+import org.hazewright.sheet.FilledIn;
 import org.hazewright.sheet.Logbook;
 import org.hazewright.sheet.RecipeSheet;
 import org.hazewright.shelf.Ingredient;
@@ -172,6 +174,47 @@ public final class Desk {
                                     "No brief beside " + file.getFileName()
                                             + " answers to it; the targets here are what it gives, and its ingredients are kept to."));
                 },
+                failure -> notices.tell(Notice.wrong("open", Papers.words(failure))));
+    }
+
+    /** Takes targets from a table of coefficients. */
+    private void openTable(Path file) {
+        if (edits.now() == null) return;
+        preparing.request(
+                (stop, progress) -> CoefficientTable.read(file, null),
+                table -> {
+                    String wrong = editing.targets(table.targets(0.05, 0.05), file.getFileName().toString())
+                            .orElse("");
+                    notices.tell(
+                            wrong.isEmpty()
+                                    ? Notice.told(
+                                            "open",
+                                            "Targets taken from " + file.getFileName() + ": "
+                                                    + String.join("; ", table.understood()) + ". Undo brings the old ones back.")
+                                    : Notice.wrong("open", wrong));
+                },
+                failure -> notices.tell(Notice.wrong("open", Papers.words(failure))));
+    }
+
+    /** Makes a batch of a sheet that was filled in at the balance; it must be the sheet of the recipe on the desk. */
+    private void openSheet(Path file) {
+        Shown shown = solving.shownProperty().get();
+        if (shown == null || shown.following() || shelf.get().shelf().isEmpty()) {
+            notices.tell(Notice.wrong("open", "A sheet belongs to a recipe; open its brief first."));
+            return;
+        }
+        Shelf on = shelf.get().shelf().get();
+        Path folder = papers.folder();
+        String name = edits.now().name();
+        preparing.request(
+                (stop, progress) -> {
+                    FilledIn sheet = FilledIn.read(file);
+                    Started fresh = Started.anew(shown, folder, name, remembered.text("who", ""), on);
+                    Batch batch = sheet.into(fresh.prepared().batch(), file);
+                    BatchWriter.write(fresh.log().file(), batch, SafeFile.Overwrite.NEVER);
+                    return fresh.log().file();
+                },
+                this::openBatch,
                 failure -> notices.tell(Notice.wrong("open", Papers.words(failure))));
     }
 
@@ -340,17 +383,24 @@ public final class Desk {
         return Optional.ofNullable(solving.shownProperty().get()).map(s -> Tables.weighOut(s.outlook()));
     }
 
+    /** The targets with their predictions as a table for a spreadsheet; empty when there is no recipe. */
+    public Optional<String> copyTargets() {
+        return Optional.ofNullable(solving.shownProperty().get()).map(s -> Tables.targets(s.outlook()));
+    }
+
     /** Opens a file by what its name says it is. */
     public void open(Path file) {
         String name = file.getFileName().toString().toLowerCase(Locale.ROOT);
         if (name.endsWith(".batch.toml")) openBatch(file);
         else if (name.endsWith(".recipe.toml")) openRecipe(file);
         else if (name.endsWith(".toml")) papers.open(file);
+        else if (name.endsWith(".csv") || name.endsWith(".tsv") || name.endsWith(".txt")) openTable(file);
+        else if (name.endsWith(".xlsx")) openSheet(file);
         else
             notices.tell(Notice.wrong(
                     "open",
                     file.getFileName() + " is none of the files that open here: a brief (.brief.toml), a recipe"
-                            + " (.recipe.toml) or a batch (.batch.toml)."));
+                            + " (.recipe.toml), a batch (.batch.toml), a sheet that was filled in (.xlsx), or a table of targets (.csv)."));
     }
 
     /** Spectra for tissue-like values and oximeters, read when first asked for; on any thread. */

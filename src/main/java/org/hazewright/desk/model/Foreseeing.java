@@ -10,6 +10,9 @@ import org.hazewright.optics.Refusal;
 
 /** Keeps {@link Foreseen} up with the recipe while its place is open. */
 public final class Foreseeing {
+    /** While a recipe follows a drag the readings follow more slowly: they are pictures, and the processor has more urgent work. */
+    private static final long BETWEEN_MS = 150;
+
     private final Desk desk;
     private final Work.Lane lane;
     private final BooleanProperty open = new SimpleBooleanProperty(false);
@@ -81,7 +84,8 @@ public final class Foreseeing {
         if (!open.get() || shown == null) return;
         Outlook o = shown.outlook();
         Foreseen.Asked what = asked;
-        lane.request(
+        lane.requestAfter(
+                shown.following() ? BETWEEN_MS : 0,
                 (stop, progress) -> Foreseen.of(o, what, desk.spectra(), stop),
                 found -> {
                     foreseen.set(found);

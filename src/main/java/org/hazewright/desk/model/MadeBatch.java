@@ -4,7 +4,9 @@ import java.nio.file.Path;
 import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.function.UnaryOperator;
 import javafx.beans.property.ReadOnlyBooleanProperty;
 import javafx.beans.property.ReadOnlyObjectProperty;
@@ -19,6 +21,8 @@ import org.hazewright.bench.Measurement;
 import org.hazewright.brief.Brief;
 import org.hazewright.brief.Point;
 import org.hazewright.files.BatchWriter;
+import org.hazewright.files.CoefficientTable;
+import org.hazewright.files.LotWriter;
 import org.hazewright.files.SafeFile;
 import org.hazewright.learning.Factor;
 import org.hazewright.learning.Factors;
@@ -26,12 +30,17 @@ import org.hazewright.learning.LotUpdate;
 import org.hazewright.learning.MeasuredBatch;
 import org.hazewright.learning.MeasuredValue;
 import org.hazewright.learning.Method;
+import org.hazewright.learning.NewLot;
 import org.hazewright.learning.Quantity;
 import org.hazewright.learning.Verdict;
 import org.hazewright.mixture.Mixture;
 import org.hazewright.mixture.Sweep;
 import org.hazewright.optics.Refusal;
+import org.hazewright.sheet.FirstPage;
 import org.hazewright.sheet.Logbook;
+import org.hazewright.shelf.Ingredient;
+import org.hazewright.shelf.Lot;
+import org.hazewright.shelf.Source;
 
 /**
  * A batch that was made: where it lands, what was measured of it, what that says of the bottles, and what would put it right.
@@ -44,12 +53,16 @@ public final class MadeBatch {
     /** A measured value as it was typed: value and standard uncertainty in 1/cm, either may be blank. */
     public record Entry(double wavelengthNm, Point.Quantity quantity, String value, String u) {}
 
-    /** What is now believed of a bottle's figure over what its file says, with its standard uncertainty before and after. */
-    public record Belief(String words, double factor, double uBefore, double uAfter) {}
+    /**
+     * What is now believed of a bottle's figure over what its file says, with its standard uncertainty before and after.
+     *
+     * @param ingredient whose figure it is
+     */
+    public record Belief(String ingredient, String words, double factor, double uBefore, double uAfter) {}
 
     /** All that follows from the batch as it stands. */
     public record Seen(
-            List<Answer.Predicted> landing, double chance, Optional<Verdict> verdict, List<Belief> beliefs) {}
+            List<Answer.Predicted> landing, double chance, Optional<Verdict> verdict, List<Belief> beliefs, Factors after) {}
 
     private final Desk desk;
     private final Path file;
@@ -57,6 +70,7 @@ public final class MadeBatch {
     private final Work.Lane seeing;
     private final Work.Lane writing;
     private final Work.Lane correcting;
+    private final Work.Lane reading;
     private final ReadOnlyObjectWrapper<Seen> seen = new ReadOnlyObjectWrapper<>();
     private final ReadOnlyObjectWrapper<Optional<Correction>> correction =
             new ReadOnlyObjectWrapper<>(Optional.empty());
@@ -69,6 +83,7 @@ public final class MadeBatch {
         seeing = desk.work().lane(Work.Haste.INTERRUPT);
         writing = desk.work().lane(Work.Haste.FINISH);
         correcting = desk.work().lane(Work.Haste.INTERRUPT);
+        reading = desk.work().lane(Work.Haste.INTERRUPT);
         edits.nowProperty().addListener((p, before, now) -> {
             correction.set(Optional.empty());
             look();
@@ -132,7 +147,7 @@ public final class MadeBatch {
             landing = l.predicted();
             chance = l.chance();
         }
-        if (batch.measured().isEmpty()) return new Seen(landing, chance, Optional.empty(), List.of());
+        if (batch.measured().isEmpty()) return new Seen(landing, chance, Optional.empty(), List.of(), Factors.none());
         Measurement last = batch.measured().get(batch.measured().size() - 1);
         MeasuredBatch measured = batch.measuredBatch(last);
         Verdict verdict = Verdict.of(Factors.none(), measured);
@@ -142,9 +157,9 @@ public final class MadeBatch {
             double before = update.before().u(f);
             double after = update.after().u(f);
             if (f.kind() == Factor.Kind.METHOD || !(before > 0) || after > 0.9 * before) continue;
-            beliefs.add(new Belief(f.words(), update.after().mean(f), before, after));
+            beliefs.add(new Belief(f.name(), f.words(), update.after().mean(f), before, after));
         }
-        return new Seen(landing, chance, Optional.of(verdict), beliefs);
+        return new Seen(landing, chance, Optional.of(verdict), beliefs, update.after());
     }
 
     private Optional<String> attempt(String what, UnaryOperator<Batch> edit) {
@@ -201,6 +216,49 @@ public final class MadeBatch {
             return b.withMeasured(new Measurement(
                     LocalDate.now(), new Method(how, 0, 0), instrument.strip(), b.correctionCount(), values));
         });
+    }
+
+    /** Takes measured values from a table, CSV or the first page of a workbook; values must state their uncertainty. */
+    public void measuredFrom(Path table, String method, String instrument) {
+        String how = method.isBlank() ? "measured" : method.strip();
+        reading.request(
+                (stop, progress) -> {
+                    boolean workbook = table.toString().toLowerCase(Locale.ROOT).endsWith(".xlsx");
+                    CoefficientTable read = workbook
+                            ? CoefficientTable.of(table.toString(), FirstPage.cells(table), null)
+                            : CoefficientTable.read(table, null);
+                    return read.measured(OptionalDouble.empty());
+                },
+                values -> attempt(
+                        "measured values",
+                        b -> b.withMeasured(new Measurement(
+                                LocalDate.now(), new Method(how, 0, 0), instrument.strip(), b.correctionCount(), values))),
+                failure -> complaint.set(Papers.words(failure)));
+    }
+
+    /** Whether a bottle's new figures can be kept as a lot of their own. */
+    public boolean canLearn(String ingredient) {
+        return parent(ingredient).filter(LotWriter::canBeLot).isPresent();
+    }
+
+    private Optional<Ingredient> parent(String id) {
+        return edits.now().asMade().massesG().keySet().stream()
+                .filter(i -> i.id().equals(id))
+                .findFirst();
+    }
+
+    /** Keeps what the batch taught of a bottle as a lot on the shelf. */
+    public Optional<String> learn(String ingredient, String number) {
+        if (number.isBlank()) return Optional.of("Type the number that stands on the bottle.");
+        Ingredient bottle = parent(ingredient).orElseThrow();
+        Measurement m = edits.now().measured().get(edits.now().measured().size() - 1);
+        NewLot lot = new NewLot(
+                LotWriter.id(bottle.kind(), number.strip()),
+                new Lot(bottle.kind(), number.strip(), Optional.empty(), Optional.empty(), Optional.empty()),
+                new Source(
+                        Source.Basis.MEASURED,
+                        "Learned from batch " + edits.now().id() + ", " + m.method().name() + " of " + m.on() + "."));
+        return desk.shelfRoom().addLearned(bottle, lot, seen.get().after());
     }
 
     private static double number(String where, String text) {

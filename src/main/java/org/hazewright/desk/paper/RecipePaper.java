@@ -150,20 +150,20 @@ public final class RecipePaper {
             stage = s.stage();
             boolean weighs = s.weighing().isPresent();
             double textRight = weighs ? RIGHT - 168 : RIGHT;
-            List<String> lines = new ArrayList<>(lines(s.text(), textRight - LEFT - 22, SIZE, false));
+            List<String> lines = new ArrayList<>(lines(s.text(), textRight - LEFT - 28, SIZE, false));
             String mind = s.cautions().stream().map(t -> "Mind: " + t).collect(Collectors.joining(" "));
-            List<String> minds = mind.isEmpty() ? List.of() : lines(mind, textRight - LEFT - 22, SIZE - 1, false);
+            List<String> minds = mind.isEmpty() ? List.of() : lines(mind, textRight - LEFT - 28, SIZE - 1, false);
             double tall = Math.max(weighs ? 24 : 0, lines.size() * LINE + minds.size() * (LINE - 1.5)) + 4;
             room(tall);
             pen.box(LEFT, y - 7.5, 8.5, 8.5, 1, null, 1, c.slate(), 0.8);
-            pen.text(Integer.toString(++n), LEFT + 17, y, SIZE - 1, false, c.slate(), Pen.Align.RIGHT);
+            pen.text(Integer.toString(++n), LEFT + 23, y, SIZE - 1, false, c.slate(), Pen.Align.RIGHT);
             double at = y;
             for (String line : lines) {
-                pen.text(line, LEFT + 22, at, SIZE, false, c.ink(), Pen.Align.LEFT);
+                pen.text(line, LEFT + 28, at, SIZE, false, c.ink(), Pen.Align.LEFT);
                 at += LINE;
             }
             for (String line : minds) {
-                pen.text(line, LEFT + 22, at, SIZE - 1, false, c.amberText(), Pen.Align.LEFT);
+                pen.text(line, LEFT + 28, at, SIZE - 1, false, c.amberText(), Pen.Align.LEFT);
                 at += LINE - 1.5;
             }
             if (weighs) {

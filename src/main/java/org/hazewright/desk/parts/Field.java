@@ -40,6 +40,7 @@ public final class Field extends TextField {
         this.take = take;
         this.live = live;
         getStyleClass().add("field");
+        StillCaret.in(this);
         textProperty().addListener((p, before, now) -> {
             if (showing) return;
             typed = true;

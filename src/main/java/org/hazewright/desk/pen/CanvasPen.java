@@ -91,9 +91,12 @@ public final class CanvasPen implements Pen {
 
     @Override
     public void clip(double x, double y, double w, double h) {
+        // whole px: the toolkit clips to such a rectangle directly, to any other through a mask of the whole canvas
+        double left = Math.rint(x);
+        double top = Math.rint(y);
         g.save();
         g.beginPath();
-        g.rect(x, y, w, h);
+        g.rect(left, top, Math.rint(x + w) - left, Math.rint(y + h) - top);
         g.clip();
     }
 

@@ -1,9 +1,9 @@
 package org.hazewright.desk.readings;
 
-import java.util.List;
 import java.util.Optional;
 import java.util.function.Function;
 import java.util.function.Supplier;
+import javafx.beans.property.ReadOnlyDoubleProperty;
 import javafx.geometry.Pos;
 import javafx.scene.Node;
 import javafx.scene.control.Label;
@@ -263,8 +263,11 @@ public final class ReadingsPlace extends VBox {
         saturation.setTooltip(new Tooltip("What an oximeter would believe that reads µa at the targets' wavelengths."));
     }
 
-    /** The cards, for a window that has no room for all of them. */
-    public List<Node> cards() {
-        return cards.getChildren();
+    /** Leaves the slab out where there is no room for four pictures. */
+    public void narrowWhen(ReadOnlyDoubleProperty width) {
+        Runnable fit = () -> Say.show(cards.getChildren().get(2), width.get() > 48 * look.em());
+        width.addListener((p, was, is) -> fit.run());
+        look.emProperty().addListener((p, was, is) -> fit.run());
+        fit.run();
     }
 }

@@ -1,5 +1,6 @@
 package org.hazewright.desk.shelf;
 
+import java.util.ArrayList;
 import java.util.List;
 import org.hazewright.desk.look.Palette;
 import org.hazewright.desk.model.Curves;
@@ -36,7 +37,7 @@ final class ComparePlot {
 
     void draw(Pen pen) {
         double left = 4.2 * em;
-        double right = w - 0.8 * em;
+        double right = w - 1.4 * em;
         double top = 0.3 * em;
         double bottom = h - 2.4 * em;
         double most = 0;
@@ -66,7 +67,8 @@ final class ComparePlot {
             pen.text(power(decade), left - 0.5 * em, y + 0.32 * em, 0.92 * em, false, palette.slate(), Pen.Align.RIGHT);
         }
         pen.clip(left, top, right - left, bottom - top);
-        String[] ink = {palette.teal(), palette.ink(), palette.amber(), palette.brick(), palette.slate()};
+        List<Label> labels = new ArrayList<>();
+        String[] ink = {palette.teal(), palette.ink(), palette.amberText(), palette.brick(), palette.slate()};
         for (int n = 0; n < lines.size(); n++) {
             ShelfRoom.Line l = lines.get(n);
             double[] v = values(l);
@@ -81,15 +83,37 @@ final class ComparePlot {
             if (count < 2) continue;
             String colour = ink[n % ink.length];
             pen.line(x, y, count, colour, 0.15 * em, DASHES[n % DASHES.length]);
-            int at = (int) (count * (0.12 + 0.16 * (n % 5)));
-            String name = Words.shortName(l.ingredient());
-            double wide = pen.width(name, 0.92 * em, false);
-            double nx = Math.min(right - wide - 0.4 * em, x[at]);
-            double ny = Math.max(top + 3 * em, y[at] - 0.5 * em);
-            pen.box(nx - 3, ny - 0.9 * em, wide + 6, 1.2 * em, 3, palette.paper(), 0.85, null, 0);
-            pen.text(name, nx, ny, 0.92 * em, false, colour, Pen.Align.LEFT);
+            labels.add(new Label(Words.shortName(l.ingredient()), colour, x, y, count));
         }
         pen.unclip();
+        List<double[]> taken = new ArrayList<>();
+        for (Label label : labels) name(pen, label, left, right, top, bottom, taken);
+    }
+
+    /** A line's name, waiting for a place. */
+    private record Label(String name, String colour, double[] x, double[] y, int count) {}
+
+    /** Writes a name along its line where no other name stands; left out when there is no such place. */
+    private void name(
+            Pen pen, Label l, double left, double right, double top, double bottom, List<double[]> taken) {
+        double size = 0.92 * em;
+        double wide = pen.width(l.name(), size, false);
+        for (double share = 0.04; share < 1; share += 0.06) {
+            int at = (int) (l.count() * share);
+            for (double up : new double[] {-0.6 * em, 1.4 * em}) {
+                double nx = l.x()[at];
+                double ny = l.y()[at] + up;
+                double[] box = {nx - 3, ny - 0.9 * em, nx + wide + 3, ny + 0.35 * em};
+                if (box[2] > right - 4 || box[1] < top + 1.9 * em || box[3] > bottom - 2 || box[0] < left + 2) continue;
+                boolean free = taken.stream()
+                        .noneMatch(t -> box[0] < t[2] && t[0] < box[2] && box[1] < t[3] && t[1] < box[3]);
+                if (!free) continue;
+                taken.add(box);
+                pen.box(box[0], box[1], box[2] - box[0], box[3] - box[1], 3, palette.paper(), 0.8, null, 0);
+                pen.text(l.name(), nx, ny, size, false, l.colour(), Pen.Align.LEFT);
+                return;
+            }
+        }
     }
 
     private void wavelengths(Pen pen, double left, double right, double bottom) {

@@ -76,7 +76,7 @@ public final class SpectraPlot {
         this.w = w;
         this.ends = ends(hold);
         double left = 3.9 * em;
-        double right = w - 0.9 * em;
+        double right = w - 1.4 * em;
         double bottom = h - 2.7 * em;
         double gap = 1.1 * em;
         double half = (bottom - 0.2 * em - gap) / 2;
