@@ -13,7 +13,9 @@ import java.util.List;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 import java.util.stream.Stream;
+import org.hazewright.bench.Cautions;
 import org.junit.jupiter.api.DynamicTest;
+import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.TestFactory;
 import org.junit.jupiter.api.io.TempDir;
 
@@ -58,6 +60,12 @@ class ReadmeTest {
         StringWriter out = new StringWriter();
         Hazewright.run(new PrintWriter(out), new PrintWriter(out), args.toArray(String[]::new));
         return out.toString().replace("\r\n", "\n").replace(folder + "/", "");
+    }
+
+    @Test
+    void cautionsAreThoseOfTheSheet() throws IOException {
+        String flowing = Files.readString(README).replaceAll("\\s+", " ");
+        for (String caution : Cautions.GENERAL) assertTrue(flowing.contains("- " + caution), caution);
     }
 
     private static void copyDemo() throws IOException {
