@@ -39,8 +39,8 @@ import picocli.CommandLine.Spec;
 @Command(
         name = "readings",
         description = {
-            "Foresees what instruments show: reflectance at distances, slopes, modulated and pulsed light, slabs,",
-            "collimated beams, oximeters. Each reading names its model and says where that is not to be trusted.",
+            "Foresees what instruments will show on a recipe, a batch or a medium of given coefficients.",
+            "Reflectance at distances, slopes, modulated and pulsed light, slabs, collimated beams, oximeters; each names its model.",
             "Example: hazewright readings out/wrist-bath.recipe.toml --setup two-distance-probe",
             "Example: hazewright readings --medium mua_per_cm=0.1,musp_per_cm=10,g=0.8,n=1.4 --setup slab-10-mm"
         })

@@ -71,7 +71,8 @@ class ReadmeTest {
     private static void copyDemo() throws IOException {
         Path demo = Path.of("recipes-demo");
         try (Stream<Path> files = Files.walk(demo)) {
-            for (Path file : files.filter(f -> f.toString().matches(".*\\.(toml|csv)")).toList()) {
+            for (Path file :
+                    files.filter(f -> f.toString().matches(".*\\.(toml|csv)")).toList()) {
                 Path to = folder.resolve(file.toString());
                 Files.createDirectories(to.getParent());
                 Files.copy(file, to);
