@@ -31,6 +31,8 @@ class ArchitectureTest {
             .definedBy("org.hazewright.bench..")
             .layer("learning")
             .definedBy("org.hazewright.learning..")
+            .layer("transport")
+            .definedBy("org.hazewright.transport..")
             .layer("reading")
             .definedBy("org.hazewright.reading..")
             .layer("files")
@@ -55,13 +57,25 @@ class ArchitectureTest {
             .mayOnlyAccessLayers("optics", "shelf", "mixture", "brief", "design", "learning")
             .whereLayer("learning")
             .mayOnlyAccessLayers("optics", "shelf", "mixture")
+            .whereLayer("transport")
+            .mayOnlyAccessLayers("optics")
             .whereLayer("reading")
-            .mayOnlyAccessLayers("optics", "shelf", "mixture")
+            .mayOnlyAccessLayers("optics", "shelf", "mixture", "transport")
             .whereLayer("files")
-            .mayOnlyAccessLayers("optics", "shelf", "mixture", "brief", "design", "bench", "learning", "reading")
+            .mayOnlyAccessLayers(
+                    "optics", "shelf", "mixture", "brief", "design", "bench", "learning", "transport", "reading")
             .whereLayer("sheet")
             .mayOnlyAccessLayers(
-                    "optics", "shelf", "mixture", "brief", "design", "bench", "learning", "reading", "files")
+                    "optics",
+                    "shelf",
+                    "mixture",
+                    "brief",
+                    "design",
+                    "bench",
+                    "learning",
+                    "transport",
+                    "reading",
+                    "files")
             .whereLayer("cli")
             .mayNotBeAccessedByAnyLayer()
             .whereLayer("desk")

@@ -4,7 +4,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import org.hazewright.optics.Refusal;
-import org.hazewright.reading.Medium;
+import org.hazewright.transport.Medium;
 import org.hazewright.reading.Spread;
 import org.hazewright.shelf.Nearest;
 

@@ -6,7 +6,7 @@ import java.util.List;
 import java.util.Locale;
 import org.hazewright.optics.Figures;
 import org.hazewright.reading.Foreseen;
-import org.hazewright.reading.Medium;
+import org.hazewright.transport.Medium;
 import org.hazewright.reading.Phantom;
 import org.hazewright.reading.Quantity;
 import org.hazewright.reading.Reading;

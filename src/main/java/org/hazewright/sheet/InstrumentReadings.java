@@ -12,7 +12,7 @@ import org.hazewright.mixture.Recipe;
 import org.hazewright.optics.Refusal;
 import org.hazewright.reading.Adapted;
 import org.hazewright.reading.Body;
-import org.hazewright.reading.DiffusionRange;
+import org.hazewright.transport.DiffusionRange;
 import org.hazewright.reading.Foreseen;
 import org.hazewright.reading.Foresight;
 import org.hazewright.reading.Phantom;

@@ -8,7 +8,7 @@ import java.util.TreeSet;
 import org.hazewright.bench.Answer;
 import org.hazewright.optics.Figures;
 import org.hazewright.reading.Foreseen;
-import org.hazewright.reading.Medium;
+import org.hazewright.transport.Medium;
 import org.hazewright.reading.Quantity;
 import org.hazewright.reading.Reading;
 import org.hazewright.reading.SetUp;
