@@ -37,6 +37,8 @@ class ArchitectureTest {
             .definedBy("org.hazewright.reading..")
             .layer("files")
             .definedBy("org.hazewright.files..")
+            .layer("picture")
+            .definedBy("org.hazewright.picture..")
             .layer("sheet")
             .definedBy("org.hazewright.sheet..")
             .layer("cli")
@@ -64,6 +66,9 @@ class ArchitectureTest {
             .whereLayer("files")
             .mayOnlyAccessLayers(
                     "optics", "shelf", "mixture", "brief", "design", "bench", "learning", "transport", "reading")
+            .whereLayer("picture")
+            .mayOnlyAccessLayers(
+                    "optics", "shelf", "mixture", "brief", "design", "bench", "learning", "transport", "reading")
             .whereLayer("sheet")
             .mayOnlyAccessLayers(
                     "optics",
@@ -75,7 +80,8 @@ class ArchitectureTest {
                     "learning",
                     "transport",
                     "reading",
-                    "files")
+                    "files",
+                    "picture")
             .whereLayer("cli")
             .mayNotBeAccessedByAnyLayer()
             .whereLayer("desk")
@@ -91,6 +97,10 @@ class ArchitectureTest {
     @ArchTest
     static final ArchRule javafxOnlyInDesk =
             only("javafx..", "org.hazewright.desk..", "the core runs without a toolkit");
+
+    @ArchTest
+    static final ArchRule picturesOnlyInPicture =
+            only("org.jfree..", "org.hazewright.picture..", "files of pictures are drawn in one room");
 
     @ArchTest
     static final ArchRule poiOnlyInSheet =

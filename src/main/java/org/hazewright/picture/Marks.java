@@ -1,4 +1,4 @@
-package org.hazewright.sheet;
+package org.hazewright.picture;
 
 import java.awt.BasicStroke;
 import java.awt.Color;
@@ -11,17 +11,10 @@ final class Marks {
     /** Coverage factor of a 95 % interval of a normal quantity (JCGM 100:2008, table G.1). */
     static final double K95 = 1.96;
 
-    private static final String[] BY_WAVELENGTH = {Palette.TEAL, Palette.AMBER, Palette.INK, "7A5C99", "6B8E23"};
-
     private Marks() {}
 
-    /** Wavelengths are told apart by colour, and by the number written beside them. */
     static Color of(int wavelength) {
-        return Canvas.colour(hex(wavelength));
-    }
-
-    static String hex(int wavelength) {
-        return BY_WAVELENGTH[wavelength % BY_WAVELENGTH.length];
+        return Canvas.colour(Palette.ofWavelength(wavelength));
     }
 
     static void point(Graphics2D g, double x, double y, Color colour, boolean trusted) {

@@ -1,4 +1,4 @@
-package org.hazewright.sheet;
+package org.hazewright.picture;
 
 import java.awt.BasicStroke;
 import java.awt.Color;

@@ -1,4 +1,4 @@
-package org.hazewright.sheet;
+package org.hazewright.picture;
 
 import java.awt.Graphics2D;
 import java.awt.geom.Rectangle2D;
@@ -49,7 +49,7 @@ final class TimePlot implements ReadingPicture.Panel {
         int place = 0;
         for (Reading r : curves) {
             int w = nm.indexOf(r.wavelengthNm());
-            draw(g, frame, r, Marks.hex(w), scale);
+            draw(g, frame, r, Palette.ofWavelength(w), scale);
             g.setColor(Marks.of(w));
             String key = (atEvery ? "" : Figures.plain(r.wavelengthNm()) + " nm, ") + Figures.plain(r.distanceMm())
                     + " mm" + (r.insideRange() ? "" : ", doubtful");

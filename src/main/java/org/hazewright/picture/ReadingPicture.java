@@ -1,4 +1,4 @@
-package org.hazewright.sheet;
+package org.hazewright.picture;
 
 import java.awt.Font;
 import java.awt.Graphics2D;

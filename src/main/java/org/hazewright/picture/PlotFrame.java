@@ -1,4 +1,4 @@
-package org.hazewright.sheet;
+package org.hazewright.picture;
 
 import java.awt.BasicStroke;
 import java.awt.Font;
@@ -43,7 +43,7 @@ record PlotFrame(Rectangle2D area, double x0, double x1, double y0, double y1) {
 
     private void yGrid(Graphics2D g) {
         g.setFont(g.getFont().deriveFont(Font.PLAIN, 11f));
-        double step = roundStep((y1 - y0) / 6);
+        double step = RoundStep.over(y1 - y0);
         int decimals = Math.max(
                 0, java.math.BigDecimal.valueOf(step).stripTrailingZeros().scale());
         for (double y = Math.ceil(y0 / step - 1e-9) * step; y <= y1 * (1 + 1e-9); y += step) {
@@ -56,7 +56,7 @@ record PlotFrame(Rectangle2D area, double x0, double x1, double y0, double y1) {
 
     private void xTicks(Graphics2D g, boolean xNumbers, String xUnit) {
         g.setFont(g.getFont().deriveFont(Font.PLAIN, 11f));
-        double xStep = roundStep((x1 - x0) / 7);
+        double xStep = RoundStep.over(x1 - x0);
         for (double x = Math.ceil(x0 / xStep - 1e-9) * xStep; x <= x1 * (1 + 1e-9); x += xStep) {
             g.setColor(Canvas.colour(Palette.RULE));
             g.draw(new Line2D.Double(px(x), area.getMaxY(), px(x), area.getMaxY() + 4));
@@ -119,12 +119,5 @@ record PlotFrame(Rectangle2D area, double x0, double x1, double y0, double y1) {
 
     static void centre(Graphics2D g, String text, double x, double y) {
         g.drawString(text, (float) (x - g.getFontMetrics().stringWidth(text) / 2.0), (float) y);
-    }
-
-    /** 1, 2, 2.5 or 5 times a power of ten, not below the wanted step. */
-    static double roundStep(double wanted) {
-        double power = Math.pow(10, Math.floor(Math.log10(wanted)));
-        double lead = wanted / power;
-        return power * (lead <= 1 ? 1 : lead <= 2 ? 2 : lead <= 2.5 ? 2.5 : lead <= 5 ? 5 : 10);
     }
 }

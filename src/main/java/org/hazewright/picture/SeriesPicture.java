@@ -1,4 +1,4 @@
-package org.hazewright.sheet;
+package org.hazewright.picture;
 
 import java.awt.BasicStroke;
 import java.awt.Color;
@@ -67,10 +67,10 @@ public final class SeriesPicture {
         Panel(int left, int width, double x0, double x1, double y1, String title, String xTitle) {
             this.left = left;
             this.width = width;
-            double xUnit = SpectrumChart.unit(x1 - x0);
+            double xUnit = RoundStep.over(x1 - x0);
             this.x0 = Math.floor(x0 / xUnit) * xUnit;
             this.x1 = Math.ceil(x1 / xUnit) * xUnit;
-            double yUnit = SpectrumChart.unit(y1);
+            double yUnit = RoundStep.over(y1);
             this.y1 = Math.ceil(1.02 * y1 / yUnit) * yUnit;
             text(title, left, 30, 17, true, Palette.INK);
             text(xTitle, left + width / 2 - 8 * xTitle.length() / 2, top + height + 52, 14, false, Palette.QUIET);
