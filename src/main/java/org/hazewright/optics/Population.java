@@ -7,8 +7,10 @@ import java.util.List;
  * Many spheres of one material: what they do to light per unit of their volume fraction.
  *
  * <p>N = 1/(π⟨D³⟩/6) spheres per unit volume for a volume fraction of 1; µs = N⟨C_sca⟩, µs' = N⟨C_sca(1 − g)⟩, µa = N⟨C_abs⟩,
- * averaged over the distribution by number. Each average has a relative error of at most 1e-6, by an estimate that {@link
- * #average} gives; a distribution that cannot be averaged so well is refused. What was computed is remembered by value (sizes,
+ * averaged over the distribution by number to a relative error of 1e-6, by an estimate that {@link #average} gives. For clear
+ * spheres of high contrast (relative index 1.3 and more at size parameters of 10 and more) that are not all of one size the
+ * estimate may be larger, up to 1e-4 or so, since their resonances are narrower than any affordable step; worse than 1e-3 is
+ * refused. What was computed is remembered by value (sizes,
  * indices, wavelength), so asking again costs nothing. Safe for threads.
  *
  * <p>The host does not absorb: its own absorption is added by volume elsewhere. Particle index n + ik, wavelengths in nm in
