@@ -27,11 +27,7 @@ final class LogNormalQuadrature extends SizeQuadrature {
     private static final double TAIL = 1e-6;
     private static final double TAILS_LOST = 3e-7;
 
-    /** Binomial coefficients of the sixteenth difference, and the sum of their squares. */
-    private static final double[] SIXTEENTH = {
-        1, -16, 120, -560, 1820, -4368, 8008, -11440, 12870, -11440, 8008, -4368, 1820, -560, 120, -16, 1
-    };
-
+    /** Sum of the squares of the binomial coefficients in a sixteenth difference. */
     private static final double SQUARES = 601080390;
 
     /** First step as a length in x, and its limits as parts of σ. */
@@ -79,16 +75,20 @@ final class LogNormalQuadrature extends SizeQuadrature {
         this.scatteringMiddle = 2 * ((n - 1) * (n - 1) + k * k);
 
         // where the integrands are: rough cross sections on a coarse grid
-        int grid = 48;
+        int grid = 40;
         double low = sigma * sigma - 6 * sigma;
         double high = 6 * sigma * sigma + 6 * sigma;
         double[][] rough = new double[3][grid + 1];
         double[] most = new double[3];
         double top = 0;
+        // in equal steps of t a power of e grows by a factor, and a Gaussian by a factor that does so itself
+        double stride = (high - low) / grid;
+        double growth = Math.exp(stride);
+        double narrowing = Math.exp(-stride * stride / (sigma * sigma));
+        double rise = Math.exp(2 * stride - (2 * low * stride + stride * stride) / (2 * sigma * sigma));
+        double x = medianNm * sizePerNm * Math.exp(low);
+        double area = Math.exp(-low * low / (2 * sigma * sigma) + 2 * low);
         for (int i = 0; i <= grid; i++) {
-            double t = low + (high - low) * i / grid;
-            double x = medianNm * sizePerNm * Math.exp(t);
-            double area = Math.exp(-t * t / (2 * sigma * sigma) + 2 * t);
             double scattering = area
                     / (1 / (scatteringSmall * x * x * x * x + 1e-300) + 1 / (scatteringMiddle * x * x + 1e-300) + 0.5);
             rough[0][i] = scattering;
@@ -96,6 +96,9 @@ final class LogNormalQuadrature extends SizeQuadrature {
             rough[2][i] = area * Math.min(x, 1);
             if (scattering > most[0]) top = x;
             for (int j = 0; j < 3; j++) most[j] = Math.max(most[j], rough[j][i]);
+            x *= growth;
+            area *= rise;
+            rise *= narrowing;
         }
         int first = 0;
         while (first < grid && rough[1][first] < TAIL * most[1] && (!absorbing || rough[2][first] < TAIL * most[2]))
@@ -158,7 +161,7 @@ final class LogNormalQuadrature extends SizeQuadrature {
 
     /** Known values with fresh ones between them; all fresh when nothing is known. */
     private static double[] between(double[] known, double[] fresh) {
-        if (known.length == 0) return fresh.clone();
+        if (known.length == 0) return fresh;
         double[] out = new double[2 * known.length];
         for (int i = 0; i < known.length; i++) {
             out[2 * i] = known[i];
@@ -221,18 +224,27 @@ final class LogNormalQuadrature extends SizeQuadrature {
     private static double roughness(double[] value, double[] density, double step, double average) {
         int inner = value.length - 16;
         if (inner <= 0) return Double.POSITIVE_INFINITY;
-        double[] jump = new double[inner];
-        for (int k = 0; k <= 16; k++) addScaled(SIXTEENTH[k] * Math.exp(-FLATTEN * (k - 8) * step), value, k, jump);
+        double[] jump = new double[value.length];
+        double ratio = Math.exp(-FLATTEN * step);
+        double flat = 1;
+        for (int i = 0; i < jump.length; i++) {
+            jump[i] = value[i] * flat;
+            flat *= ratio;
+        }
+        for (int i = 1; i <= 4; i++) fourthDifference(jump, jump.length - 4 * i);
+        double unflat = step / (average * Math.pow(ratio, 8));
+        double back = 1 / ratio;
         double sum = 0;
         for (int i = 0; i < inner; i++) {
-            double term = jump[i] * density[i + 8];
+            double term = jump[i] * density[i + 8] * unflat;
             sum += term * term;
+            unflat *= back;
         }
-        return step * Math.sqrt(sum / SQUARES) / average;
+        return Math.sqrt(sum / SQUARES);
     }
 
-    private static void addScaled(double factor, double[] value, int from, double[] sum) {
-        for (int i = 0; i < sum.length; i++) sum[i] += factor * value[i + from];
+    private static void fourthDifference(double[] v, int count) {
+        for (int i = 0; i < count; i++) v[i] = v[i] - 4 * v[i + 1] + 6 * v[i + 2] - 4 * v[i + 3] + v[i + 4];
     }
 
     @Override

@@ -1,6 +1,7 @@
 package org.hazewright.optics;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 
 /**
@@ -145,12 +146,12 @@ public record Population(SizeDistribution sizes) {
         int place = 0;
         for (int w = 0; w < waiting.size(); w++) {
             Key key = keys.get(waiting.get(w));
-            for (double diameter : wanted.get(w)) {
-                x[place] = Math.PI * diameter * key.hostIndex / key.wavelengthNm;
-                n[place] = key.particle.n() / key.hostIndex;
-                k[place] = key.particle.k() / key.hostIndex;
-                place++;
-            }
+            double sizePerNm = Math.PI * key.hostIndex / key.wavelengthNm;
+            double[] diameters = wanted.get(w);
+            int end = place + diameters.length;
+            Arrays.fill(n, place, end, key.particle.n() / key.hostIndex);
+            Arrays.fill(k, place, end, key.particle.k() / key.hostIndex);
+            for (double diameter : diameters) x[place++] = sizePerNm * diameter;
         }
         double[] sca = new double[count];
         double[] abs = new double[count];
