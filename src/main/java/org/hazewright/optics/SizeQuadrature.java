@@ -12,7 +12,7 @@ abstract class SizeQuadrature {
     static final double WANTED = 1e-6;
 
     /** An average stops here even if its error is larger than wanted. */
-    static final int MOST_SPHERES = 160_000;
+    static final int MOST_SPHERES = 80_000;
 
     static final int FIGURES = 3;
 
