@@ -104,7 +104,8 @@ class HonestErrorTest {
             double error = Math.max(
                     Math.abs(ours.optics().musPerCm() / brute.mus - 1),
                     Math.abs(ours.optics().muspPerCm() / brute.musp - 1));
-            if (c.particle.k() > 0) error = Math.max(error, Math.abs(ours.optics().muaPerCm() / brute.mua - 1));
+            if (c.particle.k() > 0)
+                error = Math.max(error, Math.abs(ours.optics().muaPerCm() / brute.mua - 1));
             if (error > ours.relativeError()) above++;
             assertTrue(
                     error <= FACTOR * ours.relativeError(),
@@ -116,30 +117,42 @@ class HonestErrorTest {
 
     @Test
     void emulsionsKeepTheMillionth() {
-        hold(150, 12_000, 1e-6, r -> new Case(
-                new SizeDistribution.LogNormal(between(r, 100, 400), between(r, 1.2, 1.8)),
-                Index.real(between(r, 1.45, 1.50)),
-                between(r, 1.33, 1.40),
-                between(r, 400, 1100)));
+        hold(
+                150,
+                12_000,
+                1e-6,
+                r -> new Case(
+                        new SizeDistribution.LogNormal(between(r, 100, 400), between(r, 1.2, 1.8)),
+                        Index.real(between(r, 1.45, 1.50)),
+                        between(r, 1.33, 1.40),
+                        between(r, 400, 1100)));
     }
 
     /** Ripples about as far apart as the first spheres: the case where two coarse rules agree by chance. */
     @Test
     void narrowDistributions() {
-        hold(150, 12_000, 1e-6, r -> new Case(
-                new SizeDistribution.LogNormal(between(r, 200, 2500), 1 + logBetween(r, 0.001, 0.1)),
-                Index.real(between(r, 1.4, 1.6)),
-                between(r, 1.33, 1.5),
-                between(r, 400, 1100)));
+        hold(
+                150,
+                12_000,
+                1e-6,
+                r -> new Case(
+                        new SizeDistribution.LogNormal(between(r, 200, 2500), 1 + logBetween(r, 0.001, 0.1)),
+                        Index.real(between(r, 1.4, 1.6)),
+                        between(r, 1.33, 1.5),
+                        between(r, 400, 1100)));
     }
 
     @Test
     void absorbingParticles() {
-        hold(100, 12_000, 1e-6, r -> new Case(
-                new SizeDistribution.LogNormal(logBetween(r, 30, 500), between(r, 1.1, 1.9)),
-                new Index(between(r, 1.3, 2.3), logBetween(r, 0.02, 1)),
-                between(r, 1.33, 1.5),
-                between(r, 400, 1100)));
+        hold(
+                100,
+                12_000,
+                1e-6,
+                r -> new Case(
+                        new SizeDistribution.LogNormal(logBetween(r, 30, 500), between(r, 1.1, 1.9)),
+                        new Index(between(r, 1.3, 2.3), logBetween(r, 0.02, 1)),
+                        between(r, 1.33, 1.5),
+                        between(r, 400, 1100)));
     }
 
     @Test
@@ -165,11 +178,15 @@ class HonestErrorTest {
     /** Titania in water or silicone: resonances that no affordable step resolves; nothing is refused, and the error is stated. */
     @Test
     void clearDensePigments() {
-        hold(12, 600_000, 1e-3, r -> new Case(
-                new SizeDistribution.LogNormal(between(r, 150, 400), between(r, 1.3, 1.9)),
-                Index.real(2.7),
-                r.nextBoolean() ? 1.33 : 1.41,
-                between(r, 400, 1100)));
+        hold(
+                12,
+                600_000,
+                1e-3,
+                r -> new Case(
+                        new SizeDistribution.LogNormal(between(r, 150, 400), between(r, 1.3, 1.9)),
+                        Index.real(2.7),
+                        r.nextBoolean() ? 1.33 : 1.41,
+                        between(r, 400, 1100)));
     }
 
     /** Crowding of such a pigment is computed on fewer sizes, and still goes to the dilute value when dilute. */

@@ -150,7 +150,9 @@ public class MieBenchmark {
         Map<String, Double> times = new LinkedHashMap<>();
         for (String line : new String(run.getInputStream().readAllBytes()).split("\n"))
             if (line.contains("="))
-                times.put(line.split("=")[0].trim(), Double.parseDouble(line.split("=")[1].trim().split(" ")[0]));
+                times.put(
+                        line.split("=")[0].trim(),
+                        Double.parseDouble(line.split("=")[1].trim().split(" ")[0]));
         if (run.waitFor() != 0 || times.size() != 5) throw new IOException("the C program failed");
         return times;
     }
@@ -159,7 +161,8 @@ public class MieBenchmark {
     private static void forkWithThisClasspath() {
         if (MieBenchmark.class.getClassLoader() instanceof URLClassLoader loader) {
             List<String> places = new ArrayList<>();
-            for (URL url : loader.getURLs()) places.add(Path.of(java.net.URI.create(url.toString())).toString());
+            for (URL url : loader.getURLs())
+                places.add(Path.of(java.net.URI.create(url.toString())).toString());
             System.setProperty("java.class.path", String.join(java.io.File.pathSeparator, places));
         }
     }
