@@ -7,11 +7,11 @@ import java.util.List;
 import java.util.Map;
 import org.hazewright.brief.Brief;
 import org.hazewright.brief.Point;
-import org.hazewright.design.ConvexProgramme;
 import org.hazewright.design.Frozen;
 import org.hazewright.mixture.Mixture;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.mixture.Sweep;
+import org.hazewright.search.ConvexProgramme;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Shelf;
 

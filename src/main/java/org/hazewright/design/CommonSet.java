@@ -15,6 +15,11 @@ import java.util.function.DoubleConsumer;
 import java.util.stream.IntStream;
 import org.hazewright.brief.Brief;
 import org.hazewright.optics.Refusal;
+import org.hazewright.search.ConvexProgramme;
+import org.hazewright.search.SetProblem;
+import org.hazewright.search.SetResult;
+import org.hazewright.search.SetSearch;
+import org.hazewright.search.SetSolution;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Shelf;
 

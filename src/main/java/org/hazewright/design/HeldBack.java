@@ -7,6 +7,11 @@ import java.util.function.BooleanSupplier;
 import org.hazewright.brief.Brief;
 import org.hazewright.brief.Point;
 import org.hazewright.optics.Figures;
+import org.hazewright.search.LeastWorstMiss;
+import org.hazewright.search.LimitProof;
+import org.hazewright.search.SetProblem;
+import org.hazewright.search.SetSearch;
+import org.hazewright.search.SetSolution;
 import org.hazewright.shelf.Ingredient;
 
 /**

@@ -1,4 +1,4 @@
-package org.hazewright.design;
+package org.hazewright.search;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
@@ -6,15 +6,15 @@ import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.List;
-import org.hazewright.design.LimitProof.Loosening;
-import org.hazewright.design.LimitProof.Pull;
-import org.hazewright.design.LimitProof.Relaxation;
-import org.hazewright.design.SetProblem.Candidate;
-import org.hazewright.design.SetProblem.Conflict;
-import org.hazewright.design.SetProblem.Group;
-import org.hazewright.design.SetProblem.Limits;
-import org.hazewright.design.SetProblem.Point;
 import org.hazewright.optics.Refusal;
+import org.hazewright.search.LimitProof.Loosening;
+import org.hazewright.search.LimitProof.Pull;
+import org.hazewright.search.LimitProof.Relaxation;
+import org.hazewright.search.SetProblem.Candidate;
+import org.hazewright.search.SetProblem.Conflict;
+import org.hazewright.search.SetProblem.Group;
+import org.hazewright.search.SetProblem.Limits;
+import org.hazewright.search.SetProblem.Point;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.EnumSource;

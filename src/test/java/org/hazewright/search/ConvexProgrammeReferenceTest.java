@@ -1,4 +1,4 @@
-package org.hazewright.design;
+package org.hazewright.search;
 
 import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
@@ -6,14 +6,14 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.Arrays;
 import java.util.List;
-import org.hazewright.design.ConvexProgramme.Limit;
-import org.hazewright.design.ConvexProgramme.Side;
-import org.hazewright.design.ConvexProgramme.Solution;
-import org.hazewright.design.ConvexProgramme.Status;
-import org.hazewright.design.SetProblem.Candidate;
-import org.hazewright.design.SetProblem.Group;
-import org.hazewright.design.SetProblem.Limits;
-import org.hazewright.design.SetProblem.Point;
+import org.hazewright.search.ConvexProgramme.Limit;
+import org.hazewright.search.ConvexProgramme.Side;
+import org.hazewright.search.ConvexProgramme.Solution;
+import org.hazewright.search.ConvexProgramme.Status;
+import org.hazewright.search.SetProblem.Candidate;
+import org.hazewright.search.SetProblem.Group;
+import org.hazewright.search.SetProblem.Limits;
+import org.hazewright.search.SetProblem.Point;
 import org.junit.jupiter.api.Test;
 
 /** Quadratic and Chebyshev problems with published solutions, all small enough to be confirmed by hand. */

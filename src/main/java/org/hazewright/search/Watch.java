@@ -1,8 +1,8 @@
-package org.hazewright.design;
+package org.hazewright.search;
 
 import java.util.function.BooleanSupplier;
 import java.util.function.Consumer;
-import org.hazewright.design.SetSearch.Progress;
+import org.hazewright.search.SetSearch.Progress;
 
 /** What a running search shares with whoever waits for it: how far it is, the best so far, and whether to stop. */
 final class Watch {

@@ -1,4 +1,4 @@
-package org.hazewright.design;
+package org.hazewright.search;
 
 /**
  * How many admissible sets there are: products of binomials over the groups, summed over the ways to choose among the

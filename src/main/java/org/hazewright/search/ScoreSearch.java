@@ -1,8 +1,8 @@
-package org.hazewright.design;
+package org.hazewright.search;
 
 import java.util.Arrays;
 import java.util.List;
-import org.hazewright.design.TopSets.Entry;
+import org.hazewright.search.TopSets.Entry;
 
 /**
  * The sets of least score, with or without the tolerances as limits.

@@ -1,13 +1,13 @@
-package org.hazewright.design;
+package org.hazewright.search;
 
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
 import java.util.function.BooleanSupplier;
-import org.hazewright.design.SetProblem.Candidate;
-import org.hazewright.design.SetProblem.Group;
-import org.hazewright.design.SetProblem.Limits;
 import org.hazewright.optics.Refusal;
+import org.hazewright.search.SetProblem.Candidate;
+import org.hazewright.search.SetProblem.Group;
+import org.hazewright.search.SetProblem.Limits;
 
 /**
  * Why no set comes closer than the best possible worst miss, and what would help.

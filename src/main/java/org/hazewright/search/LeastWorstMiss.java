@@ -1,4 +1,4 @@
-package org.hazewright.design;
+package org.hazewright.search;
 
 /**
  * The amounts whose worst miss max_j |Σ a_ij c_i − r_j|/τ_j is least, with the proof that no others do better.

@@ -1,4 +1,4 @@
-package org.hazewright.design;
+package org.hazewright.search;
 
 import java.util.ArrayList;
 import java.util.List;

@@ -1,16 +1,16 @@
-package org.hazewright.design;
+package org.hazewright.search;
 
 import java.util.ArrayList;
 import java.util.List;
 import java.util.function.BooleanSupplier;
 import java.util.function.Consumer;
-import org.hazewright.design.ConvexProgramme.Limit;
-import org.hazewright.design.ConvexProgramme.Status;
-import org.hazewright.design.SetProblem.Candidate;
-import org.hazewright.design.SetProblem.Point;
-import org.hazewright.design.SetSolution.Binding;
-import org.hazewright.design.SetSolution.Stop;
 import org.hazewright.optics.Refusal;
+import org.hazewright.search.ConvexProgramme.Limit;
+import org.hazewright.search.ConvexProgramme.Status;
+import org.hazewright.search.SetProblem.Candidate;
+import org.hazewright.search.SetProblem.Point;
+import org.hazewright.search.SetSolution.Binding;
+import org.hazewright.search.SetSolution.Stop;
 
 /**
  * The exact search over all admissible sets of a {@link SetProblem}.

@@ -1,13 +1,13 @@
-package org.hazewright.design;
+package org.hazewright.search;
 
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Random;
 import java.util.concurrent.TimeUnit;
-import org.hazewright.design.SetProblem.Candidate;
-import org.hazewright.design.SetProblem.Group;
-import org.hazewright.design.SetProblem.Limits;
-import org.hazewright.design.SetProblem.Point;
+import org.hazewright.search.SetProblem.Candidate;
+import org.hazewright.search.SetProblem.Group;
+import org.hazewright.search.SetProblem.Limits;
+import org.hazewright.search.SetProblem.Point;
 import org.openjdk.jmh.annotations.Benchmark;
 import org.openjdk.jmh.annotations.BenchmarkMode;
 import org.openjdk.jmh.annotations.Fork;

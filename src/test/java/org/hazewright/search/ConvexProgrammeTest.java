@@ -1,4 +1,4 @@
-package org.hazewright.design;
+package org.hazewright.search;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
@@ -17,12 +17,12 @@ import org.apache.commons.math3.optim.linear.NonNegativeConstraint;
 import org.apache.commons.math3.optim.linear.Relationship;
 import org.apache.commons.math3.optim.linear.SimplexSolver;
 import org.apache.commons.math3.optim.nonlinear.scalar.GoalType;
-import org.hazewright.design.ConvexProgramme.Binding;
-import org.hazewright.design.ConvexProgramme.Limit;
-import org.hazewright.design.ConvexProgramme.Side;
-import org.hazewright.design.ConvexProgramme.Solution;
-import org.hazewright.design.ConvexProgramme.Status;
 import org.hazewright.optics.Refusal;
+import org.hazewright.search.ConvexProgramme.Binding;
+import org.hazewright.search.ConvexProgramme.Limit;
+import org.hazewright.search.ConvexProgramme.Side;
+import org.hazewright.search.ConvexProgramme.Solution;
+import org.hazewright.search.ConvexProgramme.Status;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;

@@ -1,10 +1,10 @@
-package org.hazewright.design;
+package org.hazewright.search;
 
 import java.util.Arrays;
-import org.hazewright.design.SetProblem.Candidate;
-import org.hazewright.design.SetProblem.Conflict;
-import org.hazewright.design.SetProblem.Group;
-import org.hazewright.design.SetProblem.Point;
+import org.hazewright.search.SetProblem.Candidate;
+import org.hazewright.search.SetProblem.Conflict;
+import org.hazewright.search.SetProblem.Group;
+import org.hazewright.search.SetProblem.Point;
 
 /**
  * The problem laid out for the search: usable candidates side by side, group after group, and the two Gram matrices.

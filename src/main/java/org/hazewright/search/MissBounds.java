@@ -1,4 +1,4 @@
-package org.hazewright.design;
+package org.hazewright.search;
 
 /**
  * Proofs that some sets cannot come closer than a certain worst miss, each taken from the dual of a set already solved.

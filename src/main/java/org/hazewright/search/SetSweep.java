@@ -1,4 +1,4 @@
-package org.hazewright.design;
+package org.hazewright.search;
 
 /**
  * Walks through every admissible set once, with the unlimited least squares of each at hand.

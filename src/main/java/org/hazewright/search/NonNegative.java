@@ -1,4 +1,4 @@
-package org.hazewright.design;
+package org.hazewright.search;
 
 /**
  * A quick question about least squares with amounts that cannot be negative: does xᵀHx − 2bᵀx + start stay at or above a

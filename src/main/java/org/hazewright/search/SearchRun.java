@@ -1,11 +1,11 @@
-package org.hazewright.design;
+package org.hazewright.search;
 
 import java.util.ArrayList;
 import java.util.List;
 import java.util.function.BooleanSupplier;
 import java.util.function.Consumer;
-import org.hazewright.design.SetSearch.Progress;
-import org.hazewright.design.TopSets.Entry;
+import org.hazewright.search.SetSearch.Progress;
+import org.hazewright.search.TopSets.Entry;
 
 /**
  * One search, in three stages: least scores without the tolerances; least worst miss; least scores within the tolerances,

@@ -1,4 +1,4 @@
-package org.hazewright.design;
+package org.hazewright.search;
 
 import java.util.ArrayList;
 import java.util.Arrays;
@@ -19,9 +19,9 @@ import org.apache.commons.math3.optim.linear.NonNegativeConstraint;
 import org.apache.commons.math3.optim.linear.Relationship;
 import org.apache.commons.math3.optim.linear.SimplexSolver;
 import org.apache.commons.math3.optim.nonlinear.scalar.GoalType;
-import org.hazewright.design.SetProblem.Candidate;
-import org.hazewright.design.SetProblem.Group;
-import org.hazewright.design.SetProblem.Point;
+import org.hazewright.search.SetProblem.Candidate;
+import org.hazewright.search.SetProblem.Group;
+import org.hazewright.search.SetProblem.Point;
 
 /**
  * The search done the long way, with the linear algebra and the simplex method of Commons Math: every set, every choice of

@@ -1,13 +1,13 @@
-package org.hazewright.design;
+package org.hazewright.search;
 
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Random;
-import org.hazewright.design.SetProblem.Candidate;
-import org.hazewright.design.SetProblem.Conflict;
-import org.hazewright.design.SetProblem.Group;
-import org.hazewright.design.SetProblem.Limits;
-import org.hazewright.design.SetProblem.Point;
+import org.hazewright.search.SetProblem.Candidate;
+import org.hazewright.search.SetProblem.Conflict;
+import org.hazewright.search.SetProblem.Group;
+import org.hazewright.search.SetProblem.Limits;
+import org.hazewright.search.SetProblem.Point;
 
 /**
  * Seeded search problems that look like shelves: absorbers with bands, scatterers with power laws, columns thinned by what
