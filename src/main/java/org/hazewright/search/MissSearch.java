@@ -41,7 +41,7 @@ final class MissSearch {
 
     /** Searches, beginning with sets (of positions) that are likely to be good. */
     LeastWorstMiss run(List<int[]> known) {
-        for (int[] set : known) attempt(set, set.length);
+        for (int[] set : known) if (!bounds.exclude(set, set.length, wanted())) attempt(set, set.length);
         if (!watch.stops(0) && least.value() > NONE) {
             for (int i = 0; i < columns.size; i++) scratch[i] = i;
             programme.solve(scratch, columns.size);
