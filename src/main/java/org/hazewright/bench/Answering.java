@@ -44,6 +44,9 @@ public final class Answering {
     /** Fewer weighings of the same set are offered when they land at least this often as the best does. */
     private static final double WORTH_FEWER = 0.5;
 
+    /** Where nothing meets every tolerance, another way may miss by so much more than the best. */
+    private static final double WORTH_SHOWING = 1.2;
+
     /** How far tolerances are narrowed, step by step, until the rounded grams stay inside. */
     private static final double[] EDGES = {1, 0.999, 0.995, 0.98, 0.95, 0.9};
 
@@ -204,7 +207,7 @@ public final class Answering {
                 Math.min(finding.bestPossibleWorstMiss(), outlook.worstMiss()),
                 outlook.chance(),
                 outlook.budget(),
-                finding.limits(),
+                exact == finding.best() ? finding.limits() : design.heldBack(exact),
                 others,
                 finding.leftOut(),
                 new Answer.SearchCount(finding.admissible(), finding.solved(), finding.cut(), finding.proven()),
@@ -252,6 +255,8 @@ public final class Answering {
             for (Way way : ways.subList(1, ways.size())) {
                 if (others.size() == most) break;
                 if (ways.stream().anyMatch(other -> other != way && other.beats(way))) continue;
+                if (!way.planned.meets() && way.planned.worstMiss() > WORTH_SHOWING * best.planned.worstMiss())
+                    continue;
                 boolean fewer = way.weighings() < best.weighings() && way.planned.option() == best.planned.option();
                 if (fewer && way.chance < WORTH_FEWER * best.chance) continue;
                 others.add(new Answer.Alternative(
