@@ -17,6 +17,7 @@ import org.hazewright.bench.Warning;
 import org.hazewright.bench.Weighing;
 import org.hazewright.brief.Balance;
 import org.hazewright.brief.Brief;
+import org.hazewright.brief.Mould;
 import org.hazewright.brief.Tissue;
 import org.hazewright.mixture.Cause;
 import org.hazewright.mixture.Item;
@@ -55,6 +56,7 @@ final class DesignText {
                         ? " + " + Figures.plain(100 * brief.overage()) + " % = "
                                 + Figures.significant(brief.volumeMl(), 5) + " mL"
                         : "")
+                + (brief.moulds().isEmpty() ? "" : " for " + Mould.words(brief.moulds()))
                 + ", at " + Figures.plain(brief.temperatureC()) + " °C");
         out.println();
         out.println(verdict(answer));

@@ -14,6 +14,7 @@ import org.hazewright.bench.Warning;
 import org.hazewright.bench.Warnings;
 import org.hazewright.brief.Balance;
 import org.hazewright.brief.Brief;
+import org.hazewright.brief.Mould;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.mixture.Stock;
 import org.hazewright.optics.Figures;
@@ -42,7 +43,8 @@ final class SeriesText {
         out.println(plan.series().title());
         out.println(plan.base().name() + ", " + plan.phantoms().size() + " phantoms of "
                 + Figures.significant(first.volumeMl(), 5) + " mL each"
-                + (first.overage() > 0 ? " (" + Figures.plain(100 * first.overage()) + " % to spare)" : "") + ", at "
+                + (first.overage() > 0 ? " (" + Figures.plain(100 * first.overage()) + " % to spare)" : "")
+                + (first.moulds().isEmpty() ? "" : " for " + Mould.words(first.moulds())) + ", at "
                 + Figures.plain(first.temperatureC()) + " °C");
         out.println();
         out.println(verdict(plan));

@@ -66,7 +66,9 @@ public final class TitrationSheet {
                 plan.base().name() + ", " + plan.steps().size() + " phantoms in one vessel that holds "
                         + Grams.plain(plan.vesselMl()) + " mL and room to stir, at "
                         + Figures.plain(plan.start().temperatureC()) + " °C",
-                "By plan " + inside + " of " + plan.steps().size() + " steps lie inside every tolerance."
+                "By plan " + inside + " of " + plan.steps().size()
+                        + " steps lie inside every tolerance; all together land "
+                        + Figures.fixed(100 * plan.chanceOfAll(), 0) + " times in 100."
                         + (plan.proven() ? "" : " The search was stopped: not proven."),
                 plan.meets());
         mix.stocks(plan.stocks(), plan.leftovers());
