@@ -64,7 +64,8 @@ public final class Answering {
         this.inHand = inHand(brief, shelf);
     }
 
-    private static List<Stock> inHand(Brief brief, Shelf shelf) {
+    /** The dilutions that a brief says stand on the bench, in making order. */
+    static List<Stock> inHand(Brief brief, Shelf shelf) {
         Map<String, Stock> stocks = new LinkedHashMap<>();
         for (StockInHand s : brief.stocksInHand()) {
             Ingredient holds = s.from().isPresent()

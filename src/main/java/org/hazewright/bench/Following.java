@@ -54,6 +54,8 @@ public final class Following {
             if (ours.get(j).quantity() != theirs.get(j).quantity()
                     || ours.get(j).wavelengthNm() != theirs.get(j).wavelengthNm()) return false;
         return changed.temperatureC() == recipe.temperatureC()
+                && Answering.inHand(changed, shelf).stream()
+                        .allMatch(s -> sweep.covers(List.of(s.diluent())) || !added.contains(s.ingredient()))
                 && added.stream().noneMatch(i -> changed.limits().avoid().contains(i.id()))
                 && baseParts.keySet().stream().allMatch(sweepKnows());
     }
@@ -75,7 +77,8 @@ public final class Following {
                 concentrations,
                 changed.volumeMl(),
                 changed.temperatureC(),
-                changed.sha256());
+                changed.sha256(),
+                Answering.inHand(changed, shelf));
         Recipe rounded = StockPlan.of(
                         contents,
                         changed.balance(),
