@@ -7,6 +7,11 @@ import java.util.Map;
 import java.util.Optional;
 import org.hazewright.brief.Brief;
 import org.hazewright.mixture.Mixture;
+import org.hazewright.search.ConvexProgramme;
+import org.hazewright.search.LeastWorstMiss;
+import org.hazewright.search.SetProblem;
+import org.hazewright.search.SetSearch;
+import org.hazewright.search.SetSolution;
 import org.hazewright.shelf.Ingredient;
 
 /**
