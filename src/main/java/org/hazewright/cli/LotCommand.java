@@ -83,7 +83,7 @@ final class LotCommand implements Runnable {
     @Command(
             name = "fit",
             description = {
-                "Fits a dilution series, read in collimated transmission or as absorbance, and writes a lot file with a picture.",
+                "Fits a dilution series, read in collimated transmission or as absorbance, and writes a lot file with a picture beside it.",
                 "Columns: concentration_g_per_ml or mass_fraction, path_mm, wavelength_nm, transmission or absorbance, and u.",
                 "Example: hazewright lot fit ink-series.csv --of ink-demo --number 03 --out ingredients"
             })
@@ -178,17 +178,11 @@ final class LotCommand implements Runnable {
             Path folder = folder(out, shared);
             List<Path> written = new ArrayList<>(LotWriter.write(folder, lot, fit.warnings()));
             System.setProperty("java.awt.headless", "true");
-            Path picture = series.resolveSibling(name(series) + ".png");
+            Path picture = folder.resolve(lot.id() + "-series.png");
             SafeFile.write(picture, SeriesPicture.png(fit), SafeFile.Overwrite.KEEP_PREVIOUS);
             written.add(picture);
             print(fit, strength, written);
             return Hazewright.DONE;
-        }
-
-        private static String name(Path file) {
-            String n = file.getFileName().toString();
-            int dot = n.lastIndexOf('.');
-            return dot > 0 ? n.substring(0, dot) : n;
         }
 
         private void print(DilutionFit fit, String strength, List<Path> written) {
