@@ -2,7 +2,6 @@ package org.hazewright.files;
 
 import java.nio.file.Path;
 import java.time.Duration;
-import java.time.Instant;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
@@ -11,7 +10,7 @@ import java.util.Locale;
 /**
  * How long a cold program takes to read and check the whole shipped shelf: each figure is a process of its own, timed from before
  * the first read until the shelf stands; the start of the virtual machine is stated apart. Without arguments it starts 11 processes
- * with and 11 without the quick compiler alone, and prints the least and the median.
+ * as they are and 11 with the quick compiler only, and prints the least and the median of each.
  */
 public final class ShelfColdStart {
     private static final int RUNS = 11;
@@ -20,28 +19,26 @@ public final class ShelfColdStart {
 
     public static void main(String[] args) throws Exception {
         if (args.length > 0) {
-            once();
+            once(Long.parseLong(args[0]));
             return;
         }
         report("plain", List.of());
         report("-XX:TieredStopAtLevel=1", List.of("-XX:TieredStopAtLevel=1"));
     }
 
-    private static void once() {
-        Instant entered = Instant.now();
+    private static void once(long launchedMs) {
+        long entered = System.currentTimeMillis();
         Duration before = cpu();
         long start = System.nanoTime();
         int size = ShelfReader.readShipped().ingredients().size();
         double wall = (System.nanoTime() - start) / 1e6;
         Duration used = cpu().minus(before);
-        Duration machine =
-                Duration.between(ProcessHandle.current().info().startInstant().orElse(entered), entered);
         System.out.printf(
                 Locale.ROOT,
                 "%.1f %d %d %d%n",
                 wall,
                 used.toMillis(),
-                machine.toMillis(),
+                entered - launchedMs,
                 size);
     }
 
@@ -56,7 +53,10 @@ public final class ShelfColdStart {
             command.add(Path.of(System.getProperty("java.home"), "bin", "java").toString());
             command.addAll(options);
             command.addAll(List.of(
-                    "-cp", System.getProperty("java.class.path"), ShelfColdStart.class.getName(), "once"));
+                    "-cp",
+                    System.getProperty("java.class.path"),
+                    ShelfColdStart.class.getName(),
+                    Long.toString(System.currentTimeMillis())));
             Process process = new ProcessBuilder(command)
                     .redirectError(ProcessBuilder.Redirect.INHERIT)
                     .start();
