@@ -134,7 +134,9 @@ final class BatchCommand implements Runnable {
             Optional<Brief> wanted = wanted(plan);
             LocalDate day = day(on, "--on");
             String name = name();
-            Path in = folder != null ? folder : Optional.ofNullable(recipe.getParent()).orElse(Path.of(""));
+            Path in = folder != null
+                    ? folder
+                    : Optional.ofNullable(recipe.getParent()).orElse(Path.of(""));
             String chosen = id != null ? id : free(in, name + "-" + day);
             if (!chosen.matches("[\\p{L}\\p{N}][\\p{L}\\p{N}._ -]{0,79}"))
                 throw new Refusal(

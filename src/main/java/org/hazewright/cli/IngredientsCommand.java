@@ -257,7 +257,11 @@ final class IngredientsCommand implements Callable<Integer> {
             String range = ", " + Figures.plain(s.fromNm()) + " to " + Figures.plain(s.toNm()) + " nm";
             if (s instanceof Scattering.MieParticles m)
                 return "Mie, " + m.particle().name() + ", " + percent(m.volumeFraction()) + " by volume"
-                        + (m.magnitude() == 1 ? "" : ", magnitude " + Figures.plain(m.magnitude()) + " of Mie") + range;
+                        + (m.magnitude() == 1 ? "" : ", magnitude " + Figures.plain(m.magnitude()) + " of Mie")
+                        + (m.absorptionMagnitude() == 1
+                                ? ""
+                                : ", own absorption " + Figures.plain(m.absorptionMagnitude()) + " of Mie")
+                        + range;
             return (s instanceof Scattering.PowerLaw ? "power law" : "table") + range;
         }
 

@@ -21,6 +21,7 @@ import java.util.Optional;
  */
 final class PlainToml {
     private static final int DEEPEST = 8;
+    private static final int LONGEST_NUMBER = 30;
     private static final NotPlain NOT_PLAIN = new NotPlain();
 
     private final String text;
@@ -122,7 +123,8 @@ final class PlainToml {
         if (many) take(']');
         Table opened = Table.at(parent.title().isEmpty() ? key : parent.title() + "." + key, at);
         if (!many) parent.put(key, opened, at);
-        else if (parent.values().get(key) instanceof Tables tables) tables.list().add(opened);
+        else if (parent.values().get(key) instanceof Tables tables)
+            tables.list().add(opened);
         else parent.put(key, new Tables(new ArrayList<>(List.of(opened))), at);
         return opened;
     }
@@ -208,6 +210,7 @@ final class PlainToml {
         int from = i;
         while (i < text.length() && "+-.eE0123456789".indexOf(text.charAt(i)) >= 0) i++;
         String s = text.substring(from, i);
+        if (s.length() > LONGEST_NUMBER) throw NOT_PLAIN;
         if (s.length() == 10 && s.charAt(4) == '-' && s.charAt(7) == '-') return day(s);
         int digits = s.startsWith("+") || s.startsWith("-") ? 1 : 0;
         int end = digits(s, digits);
@@ -225,7 +228,7 @@ final class PlainToml {
             int exponent = end + 1;
             if (exponent < s.length() && (s.charAt(exponent) == '+' || s.charAt(exponent) == '-')) exponent++;
             end = digits(s, exponent);
-            if (end == exponent) throw NOT_PLAIN;
+            if (end == exponent || end - exponent > 2) throw NOT_PLAIN; // beyond 99 it may not fit a double
         }
         if (end != s.length()) throw NOT_PLAIN;
         return Double.valueOf(s);

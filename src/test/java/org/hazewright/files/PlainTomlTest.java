@@ -26,13 +26,17 @@ class PlainTomlTest {
 
     private static String written(TomlPage.Entry e) {
         StringBuilder s = new StringBuilder("@").append(spot(e.at())).append(' ');
-        if (e.value() instanceof TomlPage page) return s.append('{').append(written(page)).append('}').toString();
+        if (e.value() instanceof TomlPage page)
+            return s.append('{').append(written(page)).append('}').toString();
         if (e.value() instanceof List<?> list) {
             s.append('[');
             for (Object item : list) s.append(written((TomlPage.Entry) item)).append(',');
             return s.append(']').toString();
         }
-        return s.append(e.value().getClass().getSimpleName()).append(' ').append(e.value()).toString();
+        return s.append(e.value().getClass().getSimpleName())
+                .append(' ')
+                .append(e.value())
+                .toString();
     }
 
     private static String spot(Place at) {
@@ -100,12 +104,18 @@ class PlainTomlTest {
                 "a = 01",
                 "a = 1_000",
                 "a = 0x1F",
+                "a = 1e400",
+                "a = 1e-400",
+                "a = 0.0000000000000000000000000000000000001",
                 "a = .5",
                 "a = 5.",
                 "a = inf",
                 "a = 'x'",
                 "a = \"\"\"x\"\"\"",
                 "a = \"\\n\"",
+                "a = \"\"\"\"",
+                "a = \"x\u0001\"",
+                "# \u0001",
                 "a = 2026-02-30",
                 "a = 2026-02-03T10:00:00",
                 "a = 2026-02-03 10:00:00",

@@ -33,13 +33,7 @@ public final class ShelfColdStart {
         int size = ShelfReader.readShipped().ingredients().size();
         double wall = (System.nanoTime() - start) / 1e6;
         Duration used = cpu().minus(before);
-        System.out.printf(
-                Locale.ROOT,
-                "%.1f %d %d %d%n",
-                wall,
-                used.toMillis(),
-                entered - launchedMs,
-                size);
+        System.out.printf(Locale.ROOT, "%.1f %d %d %d%n", wall, used.toMillis(), entered - launchedMs, size);
     }
 
     private static Duration cpu() {
@@ -60,7 +54,8 @@ public final class ShelfColdStart {
             Process process = new ProcessBuilder(command)
                     .redirectError(ProcessBuilder.Redirect.INHERIT)
                     .start();
-            String[] printed = new String(process.getInputStream().readAllBytes()).strip().split(" ");
+            String[] printed =
+                    new String(process.getInputStream().readAllBytes()).strip().split(" ");
             if (process.waitFor() != 0) throw new IllegalStateException("the process failed");
             for (int i = 0; i < seen.length; i++) seen[i][run] = Double.parseDouble(printed[i]);
         }
