@@ -114,7 +114,8 @@ final class LogbookPages {
             case "wanted", "± tolerance", "predicted", "± u predicted", "measured", "± u measured" ->
                 line.wrap().format("0.00000");
             case LogbookEntry.MUA_RATIO, LogbookEntry.MUSP_RATIO -> line.right().format("0.0000");
-            default -> column.startsWith("mean of") ? line.right().format("0.0000") : line.wrap();
+            // Words stand off from the number before them.
+            default -> column.startsWith("mean of") ? line.right().format("0.0000") : line.wrap().indent();
         };
     }
 }
