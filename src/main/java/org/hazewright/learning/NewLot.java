@@ -16,6 +16,11 @@ import org.hazewright.shelf.Uncertainty;
  */
 public record NewLot(String id, Lot lot, Source source) {
 
+    /** With its parent's figures, known as well as is said. */
+    public Ingredient of(Ingredient parent, Uncertainty u) {
+        return made(parent, u, parent.absorption(), parent.scattering());
+    }
+
     /** Of an absorber: its extinction as fitted, {@code g} of the scattered share. */
     public Ingredient absorber(Ingredient parent, DilutionFit fit, double g) {
         Uncertainty fitted = fit.uncertainty();

@@ -115,7 +115,10 @@ final class LogbookPages {
                 line.wrap().format("0.00000");
             case LogbookEntry.MUA_RATIO, LogbookEntry.MUSP_RATIO -> line.right().format("0.0000");
             // Words stand off from the number before them.
-            default -> column.startsWith("mean of") ? line.right().format("0.0000") : line.wrap().indent();
+            default ->
+                column.startsWith("mean of")
+                        ? line.right().format("0.0000")
+                        : line.wrap().indent();
         };
     }
 }
