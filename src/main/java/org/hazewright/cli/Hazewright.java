@@ -133,6 +133,8 @@ public final class Hazewright implements Runnable {
                 .setColorScheme(CommandLine.Help.defaultColorScheme(CommandLine.Help.Ansi.OFF))
                 .setUsageHelpWidth(100)
                 .setCaseInsensitiveEnumValuesAllowed(true)
+                .registerConverter(Double.class, Hazewright::number)
+                .registerConverter(double.class, Hazewright::number)
                 .setParameterExceptionHandler((problem, given) -> {
                     err.println("hazewright: " + plain(problem));
                     return REFUSED;
@@ -150,6 +152,15 @@ public final class Hazewright implements Runnable {
         out.flush();
         err.flush();
         return status;
+    }
+
+    private static Double number(String text) {
+        try {
+            return Double.valueOf(text);
+        } catch (NumberFormatException e) {
+            throw new CommandLine.TypeConversionException("'" + text
+                    + "' is not a number; write digits with a decimal point and without a unit, such as 0.3");
+        }
     }
 
     /** Says what went wrong, in words for a person, and gives its exit status. */

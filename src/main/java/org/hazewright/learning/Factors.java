@@ -174,7 +174,7 @@ public final class Factors {
 
     private double relativeU(Factor f) {
         if (!(mean(f) > 0))
-            throw new Refusal("The data put " + f.words() + " at " + Figures.number(mean(f))
+            throw new Refusal("The data put " + f.words() + " at " + Rounded.number(mean(f))
                     + " times its file's figure, which cannot be. Check the batch and its measured values.");
         return Math.min(1, u(f) / mean(f));
     }

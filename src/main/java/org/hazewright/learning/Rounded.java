@@ -4,8 +4,8 @@ import java.math.BigDecimal;
 import java.math.MathContext;
 
 /** Numbers inside sentences: few digits, decimal point, no thousands. */
-final class Figures {
-    private Figures() {}
+final class Rounded {
+    private Rounded() {}
 
     /** Three significant digits: 0.0123, 41.2, 1230, 3.2e-7. */
     static String number(double value) {
