@@ -31,10 +31,14 @@ class ArchitectureTest {
             .definedBy("org.hazewright.bench..")
             .layer("learning")
             .definedBy("org.hazewright.learning..")
+            .layer("transport")
+            .definedBy("org.hazewright.transport..")
             .layer("reading")
             .definedBy("org.hazewright.reading..")
             .layer("files")
             .definedBy("org.hazewright.files..")
+            .layer("picture")
+            .definedBy("org.hazewright.picture..")
             .layer("sheet")
             .definedBy("org.hazewright.sheet..")
             .layer("cli")
@@ -55,13 +59,29 @@ class ArchitectureTest {
             .mayOnlyAccessLayers("optics", "shelf", "mixture", "brief", "design", "learning")
             .whereLayer("learning")
             .mayOnlyAccessLayers("optics", "shelf", "mixture")
+            .whereLayer("transport")
+            .mayOnlyAccessLayers("optics")
             .whereLayer("reading")
-            .mayOnlyAccessLayers("optics", "shelf", "mixture")
+            .mayOnlyAccessLayers("optics", "shelf", "mixture", "transport")
             .whereLayer("files")
-            .mayOnlyAccessLayers("optics", "shelf", "mixture", "brief", "design", "bench", "learning", "reading")
+            .mayOnlyAccessLayers(
+                    "optics", "shelf", "mixture", "brief", "design", "bench", "learning", "transport", "reading")
+            .whereLayer("picture")
+            .mayOnlyAccessLayers(
+                    "optics", "shelf", "mixture", "brief", "design", "bench", "learning", "transport", "reading")
             .whereLayer("sheet")
             .mayOnlyAccessLayers(
-                    "optics", "shelf", "mixture", "brief", "design", "bench", "learning", "reading", "files")
+                    "optics",
+                    "shelf",
+                    "mixture",
+                    "brief",
+                    "design",
+                    "bench",
+                    "learning",
+                    "transport",
+                    "reading",
+                    "files",
+                    "picture")
             .whereLayer("cli")
             .mayNotBeAccessedByAnyLayer()
             .whereLayer("desk")
@@ -77,6 +97,10 @@ class ArchitectureTest {
     @ArchTest
     static final ArchRule javafxOnlyInDesk =
             only("javafx..", "org.hazewright.desk..", "the core runs without a toolkit");
+
+    @ArchTest
+    static final ArchRule picturesOnlyInPicture =
+            only("org.jfree..", "org.hazewright.picture..", "files of pictures are drawn in one room");
 
     @ArchTest
     static final ArchRule poiOnlyInSheet =

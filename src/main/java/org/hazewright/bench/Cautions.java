@@ -6,14 +6,13 @@ import java.util.List;
 public final class Cautions {
     private Cautions() {}
 
-    /** Holds for every recipe. */
+    /** Holds for every recipe: sheets, window and README have these words from here. */
     public static final List<String> GENERAL = List.of(
             "Safety data sheets and the rules of your workplace come before anything written here.",
             "This is not a medical device. A phantom checks an instrument; what it means for patients is decided by the person who is"
                     + " responsible for the clinical calibration.",
-            "Nothing made from this recipe may be swallowed, injected or put on a patient. Label it so, and keep it away from food"
-                    + " and medicines.",
-            "Measure the finished phantom before relying on it: the prediction is as good as the figures of its ingredients.",
+            "A phantom may not be swallowed, injected or put on a patient. Label it so, and keep it away from food and medicines.",
+            "Measure the finished phantom before relying on it: a prediction is as good as the figures of its ingredients.",
             "When a laser is used to measure it, the rules for laser safety at your workplace hold.");
 
     static final String POWDER =

@@ -30,7 +30,7 @@ import picocli.CommandLine.Spec;
 @Command(
         name = "design",
         description = {
-            "Finds the best recipe for a brief, prints it, and writes NAME.recipe.toml and NAME.xlsx.",
+            "Finds the best recipe for a brief, prints it, and writes the recipe and its sheet.",
             "Several briefs are worked side by side; one that fails does not stop the rest.",
             "Example: hazewright design recipes-demo/wrist-bath.brief.toml --out out"
         })

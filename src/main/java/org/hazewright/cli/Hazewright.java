@@ -4,12 +4,14 @@ import java.io.PrintWriter;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.Collection;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 import org.hazewright.desk.Opening;
+import org.hazewright.files.FaultReport;
 import org.hazewright.files.WriteFailure;
 import org.hazewright.optics.Refusal;
 import org.hazewright.shelf.Nearest;
@@ -24,7 +26,6 @@ import picocli.CommandLine.Spec;
 @Command(
         name = "hazewright",
         description = "Recipes for tissue phantoms: from wanted µa and µs' to grams on a balance.",
-        mixinStandardHelpOptions = true,
         versionProvider = Hazewright.Version.class,
         synopsisSubcommandLabel = "COMMAND",
         subcommands = {
@@ -63,6 +64,18 @@ public final class Hazewright implements Runnable {
     private CommandSpec spec;
 
     @Option(
+            names = {"-h", "--help"},
+            usageHelp = true,
+            description = "Show this help and end.")
+    private boolean help;
+
+    @Option(
+            names = {"-V", "--version"},
+            versionHelp = true,
+            description = "Show the version and end.")
+    private boolean version;
+
+    @Option(
             names = "--ingredients",
             paramLabel = "DIR",
             description =
@@ -79,8 +92,7 @@ public final class Hazewright implements Runnable {
     @Override
     public void run() {
         if (file != null && !file.toString().endsWith(".toml"))
-            throw new CommandLine.ParameterException(
-                    spec.commandLine(), "There is no command \"" + file + "\"." + perhaps(file.toString()));
+            throw new CommandLine.ParameterException(spec.commandLine(), noCommand());
         if (file != null && !Files.isRegularFile(file))
             throw new Refusal("There is no file " + file + "; name a brief, a recipe or a batch.");
         Shared shelf = new Shared();
@@ -88,10 +100,13 @@ public final class Hazewright implements Runnable {
         Opening.open(Optional.ofNullable(shelf.shelfFolder()), Optional.ofNullable(file));
     }
 
-    private String perhaps(String word) {
-        return Nearest.to(word, spec.subcommands().keySet())
-                .map(n -> " Perhaps \"" + n + "\" is meant.")
-                .orElse("");
+    private String noCommand() {
+        return "There is no command \"" + file + "\"."
+                + perhaps(file.toString(), spec.subcommands().keySet());
+    }
+
+    private static String perhaps(String word, Collection<String> known) {
+        return Nearest.to(word, known).map(n -> " Perhaps " + n + " is meant.").orElse("");
     }
 
     public static void main(String[] args) {
@@ -147,10 +162,7 @@ public final class Hazewright implements Runnable {
             err.println("hazewright: " + problem.getMessage());
             return REFUSED;
         }
-        err.println(
-                "hazewright: this is a fault of the program, not of your files; nothing was overwritten. Please report it with"
-                        + " the lines below.");
-        problem.printStackTrace(err);
+        err.println("hazewright: " + FaultReport.of(problem));
         return FAULT;
     }
 
@@ -169,14 +181,27 @@ public final class Hazewright implements Runnable {
                 : type.endsWith("LocalDate") ? "a date such as 2026-03-02" : "a value for it";
     }
 
-    /** Picocli's message without its bracketed details, ended with where to look. */
+    /** Picocli's message without its bracketed details, with the word that was perhaps meant, and where to look. */
     private static String plain(CommandLine.ParameterException problem) {
+        CommandSpec command = problem.getCommandLine().getCommandSpec();
         String text = problem.getMessage().strip();
         Matcher unread = CANNOT_CONVERT.matcher(text);
         if (unread.matches())
             text = unread.group(1) + ": '" + unread.group(2) + "' is not " + kind(unread.group(3)) + ".";
-        String command = problem.getCommandLine().getCommandSpec().qualifiedName();
-        return text + (text.endsWith(".") ? "" : ".") + " See: " + command + " --help";
+        if (problem instanceof CommandLine.UnmatchedArgumentException unmatched) text = unmatched(unmatched, command);
+        return text + (text.endsWith(".") ? "" : ".") + " See: " + command.qualifiedName() + " --help";
+    }
+
+    private static String unmatched(CommandLine.UnmatchedArgumentException problem, CommandSpec command) {
+        String word = problem.getUnmatched().get(0);
+        if (word.startsWith("-"))
+            return "There is no option " + word + "."
+                    + perhaps(word, command.optionsMap().keySet());
+        if (command.userObject() instanceof Hazewright top && top.file != null) return top.noCommand();
+        if (!command.subcommands().isEmpty())
+            return "There is no command \"" + word + "\"."
+                    + perhaps(word, command.subcommands().keySet());
+        return "\"" + word + "\" is one word too many.";
     }
 
     /** The version in the jar's manifest. */

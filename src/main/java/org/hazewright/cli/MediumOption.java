@@ -4,9 +4,9 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import org.hazewright.optics.Refusal;
-import org.hazewright.reading.Medium;
 import org.hazewright.reading.Spread;
 import org.hazewright.shelf.Nearest;
+import org.hazewright.transport.Medium;
 
 /** A medium typed on the command line: {@code mua_per_cm=0.1,musp_per_cm=10,g=0.8,n=1.4}, with u_mua_per_cm and u_musp_per_cm if known. */
 record MediumOption(Medium medium, Spread spread) {

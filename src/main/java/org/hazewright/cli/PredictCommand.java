@@ -14,7 +14,7 @@ import org.hazewright.mixture.Mixture;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.optics.Figures;
 import org.hazewright.optics.Refusal;
-import org.hazewright.sheet.SpectraPicture;
+import org.hazewright.picture.SpectraPicture;
 import org.hazewright.shelf.Shelf;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;

@@ -19,6 +19,7 @@ import org.hazewright.mixture.Mixture;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.optics.Figures;
 import org.hazewright.optics.Refusal;
+import org.hazewright.picture.ReadingPicture;
 import org.hazewright.reading.Adapted;
 import org.hazewright.reading.Body;
 import org.hazewright.reading.Foreseen;
@@ -26,7 +27,6 @@ import org.hazewright.reading.Foresight;
 import org.hazewright.reading.Phantom;
 import org.hazewright.reading.SetUp;
 import org.hazewright.sheet.InstrumentReadings;
-import org.hazewright.sheet.ReadingPicture;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
@@ -39,8 +39,8 @@ import picocli.CommandLine.Spec;
 @Command(
         name = "readings",
         description = {
-            "Foresees what instruments show: reflectance at distances, slopes, modulated and pulsed light, slabs,",
-            "collimated beams, oximeters. Each reading names its model and says where that is not to be trusted.",
+            "Foresees what instruments will show on a recipe, a batch or a medium of given coefficients.",
+            "Reflectance at distances, slopes, modulated and pulsed light, slabs, collimated beams, oximeters; each names its model.",
             "Example: hazewright readings out/wrist-bath.recipe.toml --setup two-distance-probe",
             "Example: hazewright readings --medium mua_per_cm=0.1,musp_per_cm=10,g=0.8,n=1.4 --setup slab-10-mm"
         })

@@ -6,12 +6,12 @@ import java.util.List;
 import java.util.Locale;
 import org.hazewright.optics.Figures;
 import org.hazewright.reading.Foreseen;
-import org.hazewright.reading.Medium;
 import org.hazewright.reading.Phantom;
 import org.hazewright.reading.Quantity;
 import org.hazewright.reading.Reading;
 import org.hazewright.reading.SetUp;
 import org.hazewright.reading.Spread;
+import org.hazewright.transport.Medium;
 
 /** Readings as a person reads them: a table for each set-up, a plain word where a model is not to be trusted, notes below. */
 final class ReadingsText {

@@ -29,8 +29,8 @@ import picocli.CommandLine.Spec;
 @Command(
         name = "series",
         description = {
-            "Plans a set of phantoms with one list of bottles and shared stocks, or a titration in one vessel; prints it, and",
-            "writes NAME.series.xlsx and one recipe for each phantom.",
+            "Plans a set of phantoms with one list of bottles and shared stocks, or a titration in one vessel.",
+            "Prints it, and writes NAME.series.xlsx and one recipe for each phantom.",
             "Example: hazewright series recipes-demo/oximeter-set.brief.toml --out out"
         })
 final class SeriesCommand implements Callable<Integer> {

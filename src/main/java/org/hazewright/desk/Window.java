@@ -48,6 +48,7 @@ import org.hazewright.desk.recipe.RecipePlace;
 import org.hazewright.desk.shelf.ShelfView;
 import org.hazewright.desk.spectra.SpectraPlace;
 import org.hazewright.desk.spectra.SpectraPlot;
+import org.hazewright.files.FaultReport;
 
 /** The window: Brief, Spectra, Recipe and Readings side by side in the order of the work. */
 public final class Window {
@@ -91,14 +92,14 @@ public final class Window {
         desk.shelfProperty().addListener((p, before, now) -> lay());
         desk.solving()
                 .faultProperty()
-                .addListener((p, before, now) -> now.ifPresent(f -> desk.notices()
-                        .tell(Notice.wrong(
-                                "fault",
-                                "This is a fault of the program, not of your files; nothing was overwritten. " + f))));
+                .addListener((p, before, now) ->
+                        now.ifPresent(f -> desk.notices().tell(Notice.wrong("fault", FaultReport.of(f)))));
         desk.weighingProperty().addListener((p, before, now) -> turn());
         desk.madeProperty().addListener((p, before, now) -> turn());
         Scene scene = new Scene(
-                whole, desk.remembered().number("window.width", 1440), desk.remembered().number("window.height", 900));
+                whole,
+                desk.remembered().number("window.width", 1440),
+                desk.remembered().number("window.height", 900));
         stage.setOnHidden(e -> {
             desk.remembered().keep("window.width", Double.toString(scene.getWidth()));
             desk.remembered().keep("window.height", Double.toString(scene.getHeight()));
@@ -129,13 +130,14 @@ public final class Window {
     public void show() {
         stage.show();
         if (desk.edits().now() != null) brief.focusFirst();
-        else desk.edits().nowProperty().addListener(new javafx.beans.value.ChangeListener<>() {
-            @Override
-            public void changed(javafx.beans.value.ObservableValue<? extends Draft> p, Draft before, Draft now) {
-                desk.edits().nowProperty().removeListener(this);
-                brief.focusFirst();
-            }
-        });
+        else
+            desk.edits().nowProperty().addListener(new javafx.beans.value.ChangeListener<>() {
+                @Override
+                public void changed(javafx.beans.value.ObservableValue<? extends Draft> p, Draft before, Draft now) {
+                    desk.edits().nowProperty().removeListener(this);
+                    brief.focusFirst();
+                }
+            });
     }
 
     private void lay() {

@@ -10,11 +10,11 @@ import java.util.List;
 import java.util.Set;
 import java.util.stream.Stream;
 import org.hazewright.optics.Refusal;
-import org.hazewright.reading.Convention;
-import org.hazewright.reading.Response;
+import org.hazewright.transport.Convention;
+import org.hazewright.transport.Response;
 import org.hazewright.reading.SetUp;
 import org.hazewright.reading.SetUp.Kind;
-import org.hazewright.reading.TimeAxis;
+import org.hazewright.transport.TimeAxis;
 import org.hazewright.shelf.Nearest;
 
 /**

@@ -12,6 +12,15 @@ import org.apache.commons.math3.linear.RealVector;
 import org.apache.commons.math3.stat.regression.SimpleRegression;
 import org.apache.commons.math3.util.Pair;
 import org.hazewright.optics.Refusal;
+import org.hazewright.transport.Convention;
+import org.hazewright.transport.Diffusion;
+import org.hazewright.transport.FrequencySignal;
+import org.hazewright.transport.Medium;
+import org.hazewright.transport.Response;
+import org.hazewright.transport.Side;
+import org.hazewright.transport.TimeCurve;
+import org.hazewright.transport.TimeMoments;
+import org.hazewright.transport.TimeSignal;
 
 /**
  * The µa and µs' that a set-up's own analysis reports from what it measures; beside the true ones they show the method's bias.

@@ -2,6 +2,8 @@ package org.hazewright.reading;
 
 import java.util.List;
 import java.util.Locale;
+import org.hazewright.transport.Collimated;
+import org.hazewright.transport.Medium;
 
 /** Readings of a collimated beam through a slab or cuvette. */
 final class CollimatedReadings {

@@ -3,6 +3,17 @@ package org.hazewright.reading;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import org.hazewright.transport.Boundary;
+import org.hazewright.transport.Convention;
+import org.hazewright.transport.Diffusion;
+import org.hazewright.transport.DiffusionRange;
+import org.hazewright.transport.Medium;
+import org.hazewright.transport.PacketRun;
+import org.hazewright.transport.PacketTally;
+import org.hazewright.transport.PhotonPackets;
+import org.hazewright.transport.Ring;
+import org.hazewright.transport.Side;
+import org.hazewright.transport.TimeAxis;
 
 /**
  * For one medium and one set-up with distances: which model answers at which distance, and why.

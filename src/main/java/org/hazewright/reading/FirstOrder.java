@@ -2,6 +2,7 @@ package org.hazewright.reading;
 
 import java.util.function.Function;
 import java.util.function.ToDoubleFunction;
+import org.hazewright.transport.Medium;
 
 /**
  * First-order propagation of u(µa) and u(µs') into a quantity by central differences, the two taken as independent.

@@ -4,6 +4,8 @@ import java.util.function.BooleanSupplier;
 import java.util.function.DoubleConsumer;
 import java.util.function.DoubleFunction;
 import org.hazewright.optics.Refusal;
+import org.hazewright.transport.Medium;
+import org.hazewright.transport.PacketRun;
 
 /**
  * What readings are foreseen from: the phantom's medium and its uncertainty at each wavelength (nm), and how to run packets.

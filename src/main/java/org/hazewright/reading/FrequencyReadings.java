@@ -3,6 +3,11 @@ package org.hazewright.reading;
 import java.util.List;
 import java.util.Locale;
 import org.hazewright.optics.Refusal;
+import org.hazewright.transport.FrequencySignal;
+import org.hazewright.transport.Medium;
+import org.hazewright.transport.PacketTally;
+import org.hazewright.transport.Side;
+import org.hazewright.transport.TimeAxis;
 
 /** Modulation and phase at distances, and the µa and µs' that their analysis reports. */
 final class FrequencyReadings {

@@ -14,6 +14,8 @@ import org.hazewright.mixture.Mixture;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.optics.Refusal;
 import org.hazewright.optics.Spectrum;
+import org.hazewright.transport.Medium;
+import org.hazewright.transport.SideWalls;
 
 /**
  * A phantom as instruments meet it: a recipe's medium with its uncertainty at each wavelength (nm), or one medium for all, and the

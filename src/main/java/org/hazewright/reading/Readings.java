@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.function.DoubleFunction;
 import org.hazewright.optics.Refusal;
+import org.hazewright.transport.Medium;
 
 /**
  * Everything that a set-up will show on a phantom.

@@ -2,6 +2,9 @@ package org.hazewright.reading;
 
 import java.util.List;
 import org.hazewright.optics.Refusal;
+import org.hazewright.transport.Convention;
+import org.hazewright.transport.Response;
+import org.hazewright.transport.TimeAxis;
 
 /**
  * A measurement as it will be set up: what is read, at which wavelengths and distances, and by which model it is foreseen.

@@ -5,6 +5,15 @@ import java.util.List;
 import java.util.Locale;
 import java.util.function.Function;
 import java.util.function.ToDoubleFunction;
+import org.hazewright.transport.AddingDoubling;
+import org.hazewright.transport.Collimated;
+import org.hazewright.transport.Convention;
+import org.hazewright.transport.Diffusion;
+import org.hazewright.transport.DiffusionRange;
+import org.hazewright.transport.Medium;
+import org.hazewright.transport.PacketTally;
+import org.hazewright.transport.PhotonPackets;
+import org.hazewright.transport.SlabLight;
 
 /** Total reflectance and transmittance of a slab, as integrating spheres see them. */
 final class SlabReadings {

@@ -3,6 +3,9 @@ package org.hazewright.reading;
 import java.util.List;
 import java.util.Locale;
 import org.hazewright.optics.Refusal;
+import org.hazewright.transport.Medium;
+import org.hazewright.transport.PacketTally;
+import org.hazewright.transport.SteadySignal;
 
 /** Steady diffuse reflectance at distances; attenuation against the first distance; and what the slope method makes of it. */
 final class SteadyReadings {

@@ -4,6 +4,13 @@ import java.util.List;
 import java.util.Locale;
 import java.util.function.DoubleUnaryOperator;
 import org.hazewright.optics.Refusal;
+import org.hazewright.transport.Medium;
+import org.hazewright.transport.Response;
+import org.hazewright.transport.Side;
+import org.hazewright.transport.TimeAxis;
+import org.hazewright.transport.TimeCurve;
+import org.hazewright.transport.TimeMoments;
+import org.hazewright.transport.TimeSignal;
 
 /** The curve of a short pulse at distances, its mean time and variance, and the µa and µs' that a fit reports. */
 final class TimeReadings {

@@ -1,11 +1,8 @@
 /**
- * What an instrument will show on a phantom: diffusion, slabs, photon packets, oximeter.
+ * What an instrument will show on a phantom: signals at distances, slopes, modulated and pulsed light, slabs, oximeters.
  *
- * <p>From the optical coefficients of a homogeneous medium ({@link org.hazewright.reading.Medium}) and a set-up ({@link
- * org.hazewright.reading.SetUp}) to readings that name their model and say whether it may be trusted there. Knows no files,
- * and grams only in {@link org.hazewright.reading.Phantom}. Inside, lengths are mm and times ps; coefficients are 1/cm at the
- * borders and 1/mm within. Start with
- * {@link org.hazewright.reading.Readings}; the physics is in {@link org.hazewright.reading.Diffusion}, {@link
- * org.hazewright.reading.AddingDoubling} and {@link org.hazewright.reading.PhotonPackets}.
+ * <p>From the optical coefficients of a medium and a set-up ({@link org.hazewright.reading.SetUp}) to readings that name their model
+ * and say whether it may be trusted there. Knows no files, and grams only in {@link org.hazewright.reading.Phantom}. Start with
+ * {@link org.hazewright.reading.Readings}; how light gets there is the work of {@code transport}.
  */
 package org.hazewright.reading;

@@ -1,6 +1,7 @@
 package org.hazewright.sheet;
 
 import org.apache.poi.ss.usermodel.HorizontalAlignment;
+import org.hazewright.picture.Palette;
 
 /**
  * How a cell looks: type, colours, number format, rules, and whether a person may type into it.

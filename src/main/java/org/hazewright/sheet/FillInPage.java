@@ -20,6 +20,7 @@ import org.hazewright.brief.Balance;
 import org.hazewright.brief.Point.Quantity;
 import org.hazewright.mixture.Item;
 import org.hazewright.mixture.Stock;
+import org.hazewright.picture.Palette;
 
 /**
  * The sheet to fill in at the balance: grams as weighed, lots, who and when. Its predictions are live: any spreadsheet program

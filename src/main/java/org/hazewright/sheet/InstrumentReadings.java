@@ -12,11 +12,11 @@ import org.hazewright.mixture.Recipe;
 import org.hazewright.optics.Refusal;
 import org.hazewright.reading.Adapted;
 import org.hazewright.reading.Body;
-import org.hazewright.reading.DiffusionRange;
 import org.hazewright.reading.Foreseen;
 import org.hazewright.reading.Foresight;
 import org.hazewright.reading.Phantom;
 import org.hazewright.reading.SetUp;
+import org.hazewright.transport.DiffusionRange;
 
 /**
  * What the set-ups that come with the program show on a recipe, as far as that is quick: by diffusion and tables, never by transport

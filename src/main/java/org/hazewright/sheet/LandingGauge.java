@@ -1,6 +1,7 @@
 package org.hazewright.sheet;
 
 import org.apache.poi.xssf.usermodel.XSSFRichTextString;
+import org.hazewright.picture.Palette;
 
 /**
  * Where a prediction lands in its tolerance, drawn in letters: a bracket for the tolerance, a point for the prediction, an arrow

@@ -9,6 +9,7 @@ import org.apache.poi.xssf.usermodel.XSSFCellStyle;
 import org.apache.poi.xssf.usermodel.XSSFColor;
 import org.apache.poi.xssf.usermodel.XSSFFont;
 import org.apache.poi.xssf.usermodel.XSSFWorkbook;
+import org.hazewright.picture.Palette;
 
 /** The cell styles and fonts of one workbook, each made once: a workbook holds a limited number of them. */
 final class Looks {

@@ -6,6 +6,7 @@ import org.apache.poi.xssf.usermodel.XSSFClientAnchor;
 import org.apache.poi.xssf.usermodel.XSSFFormulaEvaluator;
 import org.apache.poi.xssf.usermodel.XSSFSheet;
 import org.apache.poi.xssf.usermodel.XSSFWorkbook;
+import org.hazewright.picture.Palette;
 
 /** A small workbook with one of everything, written to nowhere: what it touches is loaded and needs no loading again. */
 final class Readiness {

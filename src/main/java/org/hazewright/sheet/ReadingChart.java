@@ -26,6 +26,8 @@ import org.apache.poi.xssf.usermodel.XSSFChart;
 import org.apache.poi.xssf.usermodel.XSSFClientAnchor;
 import org.apache.poi.xssf.usermodel.XSSFSheet;
 import org.hazewright.optics.Figures;
+import org.hazewright.picture.Palette;
+import org.hazewright.picture.RoundStep;
 
 /** A native chart of readings: curves and points over a distance or a time, or bars of shares. */
 final class ReadingChart {
@@ -48,7 +50,7 @@ final class ReadingChart {
     void scatter(List<Series> all, double x0, double x1, double y0, double y1, boolean decades) {
         XDDFValueAxis x = chart.createValueAxis(AxisPosition.BOTTOM);
         XDDFValueAxis y = chart.createValueAxis(AxisPosition.LEFT);
-        double step = SpectrumChart.unit(x1 - x0);
+        double step = RoundStep.over(x1 - x0);
         x.setMinimum(x0);
         x.setMaximum(Math.ceil(x1 / step) * step);
         x.setMajorUnit(step);
@@ -59,7 +61,7 @@ final class ReadingChart {
             y.setMaximum(y1);
             y.setNumberFormat("0E+00");
         } else {
-            double unit = SpectrumChart.unit(y1 - y0);
+            double unit = RoundStep.over(y1 - y0);
             y.setMaximum(Math.ceil(y1 / unit) * unit);
             y.setMajorUnit(unit);
             y.setNumberFormat(unit < 1e-3 ? "0.0E+00" : Face.numberFormat(Figures.decimalsFor(unit * 10)));

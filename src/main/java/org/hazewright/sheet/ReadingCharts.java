@@ -6,6 +6,7 @@ import java.util.Optional;
 import java.util.function.Predicate;
 import org.apache.poi.ss.util.CellRangeAddress;
 import org.hazewright.optics.Figures;
+import org.hazewright.picture.Palette;
 import org.hazewright.reading.Foreseen;
 import org.hazewright.reading.Quantity;
 import org.hazewright.reading.Reading;
@@ -75,8 +76,8 @@ final class ReadingCharts {
                     low = Math.min(low, r.value());
                 }
             int rows = Math.max(most(f.line(), q, f), most(f.readings(), q, f));
-            if (!line.isEmpty()) series.add(column("", line, rows, Marks.hex(w), false));
-            series.add(column(Figures.plain(nm) + " nm", points, rows, Marks.hex(w), true));
+            if (!line.isEmpty()) series.add(column("", line, rows, Palette.ofWavelength(w), false));
+            series.add(column(Figures.plain(nm) + " nm", points, rows, Palette.ofWavelength(w), true));
         }
         if (series.isEmpty()) return;
         double most = f.setUp().distancesMm().stream().mapToDouble(x -> x).max().orElse(1);
@@ -162,7 +163,7 @@ final class ReadingCharts {
             }
             int w = f.setUp().wavelengthsNm().indexOf(r.wavelengthNm());
             String name = Figures.plain(r.wavelengthNm()) + " nm, " + Figures.plain(r.distanceMm()) + " mm";
-            series.add(cells(name, "ps", x, y, count, Marks.hex(w), false));
+            series.add(cells(name, "ps", x, y, count, Palette.ofWavelength(w), false));
         }
         if (series.isEmpty()) return;
         next(f.setUp().title() + ": " + unit + " over ps").scatter(series, 0, end, 0, 1.05 * high, false);
@@ -186,7 +187,7 @@ final class ReadingCharts {
                     name,
                     new CellRangeAddress(1, 2, names, names),
                     new CellRangeAddress(1, 2, dataColumn, dataColumn),
-                    Marks.hex(w),
+                    Palette.ofWavelength(w),
                     false));
             dataColumn++;
         }

@@ -7,12 +7,13 @@ import java.util.Map;
 import java.util.TreeSet;
 import org.hazewright.bench.Answer;
 import org.hazewright.optics.Figures;
+import org.hazewright.picture.Palette;
 import org.hazewright.reading.Foreseen;
-import org.hazewright.reading.Medium;
 import org.hazewright.reading.Quantity;
 import org.hazewright.reading.Reading;
 import org.hazewright.reading.SetUp;
 import org.hazewright.reading.Spread;
+import org.hazewright.transport.Medium;
 
 /** What instruments will show on the recipe: a row for each reading, its wavelengths side by side, charts below, notes last. */
 final class ReadingsPage {

@@ -17,6 +17,7 @@ import org.hazewright.brief.Point.Quantity;
 import org.hazewright.mixture.Item;
 import org.hazewright.mixture.Stock;
 import org.hazewright.optics.Figures;
+import org.hazewright.picture.Palette;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Source;
 

@@ -16,6 +16,7 @@ import org.hazewright.bench.Warnings;
 import org.hazewright.brief.Brief;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.optics.Figures;
+import org.hazewright.picture.Palette;
 import org.hazewright.shelf.Ingredient;
 
 /**

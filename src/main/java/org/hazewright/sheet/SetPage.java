@@ -12,6 +12,7 @@ import org.hazewright.mixture.Item;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.mixture.Stock;
 import org.hazewright.optics.Figures;
+import org.hazewright.picture.Palette;
 import org.hazewright.shelf.Form;
 import org.hazewright.shelf.Ingredient;
 

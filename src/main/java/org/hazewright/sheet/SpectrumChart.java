@@ -28,6 +28,8 @@ import org.apache.poi.xssf.usermodel.XSSFSheet;
 import org.hazewright.bench.Answer.Predicted;
 import org.hazewright.brief.Point.Quantity;
 import org.hazewright.optics.Figures;
+import org.hazewright.picture.Palette;
+import org.hazewright.picture.RoundStep;
 import org.openxmlformats.schemas.drawingml.x2006.chart.CTErrBars;
 import org.openxmlformats.schemas.drawingml.x2006.chart.CTNumData;
 import org.openxmlformats.schemas.drawingml.x2006.chart.CTNumDataSource;
@@ -70,7 +72,7 @@ final class SpectrumChart {
         x.setMajorUnit(step);
         x.setNumberFormat("0");
         double top = top();
-        double unit = unit(top);
+        double unit = RoundStep.over(top);
         y.setMinimum(0.0);
         y.setMaximum(Math.ceil(top / unit) * unit);
         y.setMajorUnit(unit);
@@ -178,14 +180,6 @@ final class SpectrumChart {
                     wanted,
                     Math.max(p.perCm(), p.point().wantedPerCm() + p.point().tolerancePerCm()));
         return 1.03 * (wanted > 0 ? Math.max(wanted, Math.min(line, HEADROOM * wanted)) : line);
-    }
-
-    /** A round step, 1, 2 or 5 times a power of ten, that gives three to seven lines up to {@code top}. */
-    static double unit(double top) {
-        double decade = Math.pow(10, Math.floor(Math.log10(top / 3)));
-        double unit = decade;
-        for (double figure : new double[] {2, 5}) if (top / (figure * decade) >= 3) unit = figure * decade;
-        return unit;
     }
 
     static void type(XDDFTextBody body, double points, boolean bold, String colour) {

@@ -7,6 +7,7 @@ import org.hazewright.bench.Grams;
 import org.hazewright.bench.Step;
 import org.hazewright.bench.Weighing;
 import org.hazewright.brief.Balance;
+import org.hazewright.picture.Palette;
 
 /** The order of work, step by step, each with its handling and cautions and a place for a tick. */
 final class StepsPage {

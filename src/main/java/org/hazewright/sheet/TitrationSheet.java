@@ -17,6 +17,7 @@ import org.hazewright.bench.Step;
 import org.hazewright.bench.TitrationPlan;
 import org.hazewright.bench.Warnings;
 import org.hazewright.optics.Figures;
+import org.hazewright.picture.Palette;
 import org.hazewright.shelf.Ingredient;
 
 /**

@@ -5,6 +5,17 @@ import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import org.hazewright.optics.Refusal;
+import org.hazewright.transport.Convention;
+import org.hazewright.transport.Diffusion;
+import org.hazewright.transport.FrequencySignal;
+import org.hazewright.transport.Medium;
+import org.hazewright.transport.Response;
+import org.hazewright.transport.Side;
+import org.hazewright.transport.SteadySignal;
+import org.hazewright.transport.TimeAxis;
+import org.hazewright.transport.TimeCurve;
+import org.hazewright.transport.TimeMoments;
+import org.hazewright.transport.TimeSignal;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;

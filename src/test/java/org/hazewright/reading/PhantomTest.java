@@ -16,6 +16,7 @@ import org.hazewright.mixture.Recipe;
 import org.hazewright.optics.Refusal;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Shelf;
+import org.hazewright.transport.Medium;
 import org.junit.jupiter.api.Test;
 
 class PhantomTest {

@@ -12,6 +12,16 @@ import java.util.Arrays;
 import java.util.List;
 import org.hazewright.optics.Refusal;
 import org.hazewright.optics.Spectrum;
+import org.hazewright.transport.Collimated;
+import org.hazewright.transport.Diffusion;
+import org.hazewright.transport.DiffusionRange;
+import org.hazewright.transport.Medium;
+import org.hazewright.transport.Response;
+import org.hazewright.transport.Side;
+import org.hazewright.transport.SteadySignal;
+import org.hazewright.transport.TimeAxis;
+import org.hazewright.transport.TimeMoments;
+import org.hazewright.transport.TimeSignal;
 import org.junit.jupiter.api.Test;
 
 class ReadingsTest {

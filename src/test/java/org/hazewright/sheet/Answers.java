@@ -393,7 +393,7 @@ final class Answers {
                                 + " mask, and read the safety data sheet."),
                 new Source(
                         Source.Basis.PUBLISHED,
-                        "1 g/L gives µs' 8-10 /cm near 800 nm in resin (teaching note of a laser centre)."),
+                        "1 g/L gives µs' 8-10 /cm near 800 nm in resin (a recipe that a laser centre hands out)."),
                 new Uncertainty(0, 0.12),
                 Optional.empty(),
                 Optional.of(new Scattering.PowerLaw(9000, 800, 0.8, 0.6, 450, 1000, 1)),

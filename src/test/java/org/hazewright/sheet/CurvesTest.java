@@ -6,6 +6,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import java.util.Arrays;
 import java.util.SplittableRandom;
 import org.hazewright.bench.Answer;
+import org.hazewright.picture.RoundStep;
 import org.junit.jupiter.api.Test;
 
 /** The spectra reach as far as every ingredient's figures and no further, and pass through the targets. */
@@ -39,7 +40,7 @@ class CurvesTest {
         SplittableRandom random = new SplittableRandom(3);
         for (int k = 0; k < 2000; k++) {
             double top = Math.pow(10, 8 * random.nextDouble() - 4);
-            double unit = SpectrumChart.unit(top);
+            double unit = RoundStep.over(top);
             double lines = top / unit;
             assertTrue(lines >= 3 && lines < 8, top + " by " + unit);
             double figure = unit / Math.pow(10, Math.floor(Math.log10(unit) + 1e-9));

@@ -14,14 +14,14 @@ import org.hazewright.mixture.Coefficients;
 import org.hazewright.mixture.Mixture;
 import org.hazewright.optics.Refusal;
 import org.hazewright.reading.Foresight;
-import org.hazewright.reading.Medium;
+import org.hazewright.transport.Medium;
 import org.hazewright.reading.Oximeter;
 import org.hazewright.reading.Quantity;
 import org.hazewright.reading.Reading;
 import org.hazewright.reading.Readings;
 import org.hazewright.reading.SetUp;
 import org.hazewright.reading.Spread;
-import org.hazewright.reading.TimeAxis;
+import org.hazewright.transport.TimeAxis;
 
 /**
  * What instruments would show on the recipe, for pictures: diffuse reflectance over distance, a short pulse's curve, a slab's totals, and the

@@ -19,6 +19,7 @@ import org.hazewright.brief.Brief;
 import org.hazewright.brief.Tissue;
 import org.hazewright.files.BriefReader;
 import org.hazewright.files.BriefWriter;
+import org.hazewright.files.FaultReport;
 import org.hazewright.files.RecipeWriter;
 import org.hazewright.files.SafeFile;
 import org.hazewright.files.TissueSpectra;
@@ -287,6 +288,6 @@ public final class Papers {
 
     static String words(Throwable failure) {
         if (failure instanceof Refusal || failure instanceof WriteFailure) return failure.getMessage();
-        return "This is a fault of the program: " + failure + ". Nothing was overwritten.";
+        return FaultReport.of(failure);
     }
 }

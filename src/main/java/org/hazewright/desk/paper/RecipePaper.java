@@ -6,7 +6,9 @@ import java.util.List;
 import java.util.Locale;
 import java.util.function.Consumer;
 import java.util.stream.Collectors;
+import java.util.stream.Stream;
 import org.hazewright.bench.Answer;
+import org.hazewright.bench.Cautions;
 import org.hazewright.bench.Grams;
 import org.hazewright.bench.Outlook;
 import org.hazewright.bench.Sensitivity;
@@ -76,7 +78,10 @@ public final class RecipePaper {
         steps(steps, balance);
         landing();
         section("What holds it back", answer.limits());
-        section("Mind", Warnings.of(recipe, day).stream().map(Warning::text).toList());
+        section(
+                "Mind",
+                Stream.concat(Warnings.of(recipe, day).stream().map(Warning::text), Cautions.GENERAL.stream())
+                        .toList());
         if (y + spectraHeight() + 40 > BOTTOM) newPage();
         heading("Spectra");
         spectra.accept(new Shifted(pen, LEFT, y));

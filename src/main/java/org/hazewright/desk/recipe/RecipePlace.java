@@ -1,5 +1,6 @@
 package org.hazewright.desk.recipe;
 
+import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
@@ -17,7 +18,10 @@ import javafx.scene.layout.HBox;
 import javafx.scene.layout.Priority;
 import javafx.scene.layout.Region;
 import javafx.scene.layout.VBox;
+import org.hazewright.bench.Cautions;
 import org.hazewright.bench.Outlook;
+import org.hazewright.bench.Warning;
+import org.hazewright.bench.Warnings;
 import org.hazewright.desk.model.Desk;
 import org.hazewright.desk.model.Shown;
 import org.hazewright.desk.model.Words;
@@ -40,12 +44,13 @@ public final class RecipePlace extends VBox {
     private final VBox causes = new VBox();
     private final VBox limits = new VBox();
     private final VBox ways = new VBox();
+    private final VBox mind = new VBox();
     private boolean following;
 
     public RecipePlace(Desk desk, Runnable print, Runnable saveSheet, Runnable copyGrams) {
         this.desk = desk;
         getStyleClass().addAll("place", "side-right");
-        VBox all = new VBox(verdict, weighing, causes, limits, ways);
+        VBox all = new VBox(verdict, weighing, causes, limits, ways, mind);
         all.getStyleClass().add("gap-l");
         ScrollPane scroll = new ScrollPane(all);
         scroll.setFitToWidth(true);
@@ -61,7 +66,7 @@ public final class RecipePlace extends VBox {
         foot.setAlignment(Pos.BASELINE_LEFT);
         getStyleClass().add("gap-m");
         getChildren().addAll(Say.place("Recipe"), scroll, foot);
-        List.of(causes, limits, ways).forEach(box -> box.getStyleClass().add("gap-s"));
+        List.of(causes, limits, ways, mind).forEach(box -> box.getStyleClass().add("gap-s"));
 
         desk.solving().shownProperty().addListener((p, before, now) -> show(now));
         desk.solving().cardsProperty().addListener((p, before, now) -> ways());
@@ -76,7 +81,7 @@ public final class RecipePlace extends VBox {
     }
 
     private void showAll(boolean yes) {
-        List.of(weighing, causes, limits, ways).forEach(box -> Say.show(box, yes));
+        List.of(weighing, causes, limits, ways, mind).forEach(box -> Say.show(box, yes));
     }
 
     private void problem() {
@@ -111,6 +116,15 @@ public final class RecipePlace extends VBox {
         causes(o);
         limits(shown);
         ways();
+        mind(o.recipe());
+    }
+
+    private void mind(Recipe recipe) {
+        mind.getChildren().setAll(Say.heading("Mind"));
+        for (Warning w : Warnings.of(recipe, LocalDate.now()))
+            mind.getChildren().add(Say.wrapped(w.text()));
+        for (String caution : Cautions.GENERAL) mind.getChildren().add(Say.wrapped(caution, "quiet", "small"));
+        Say.show(mind, true);
     }
 
     private void causes(Outlook o) {

@@ -1,7 +1,0 @@
-package org.hazewright.reading;
-
-/** Where the light is picked up: on the surface the beam enters, or on the far surface of a slab. */
-public enum Side {
-    REFLECTANCE,
-    TRANSMITTANCE
-}
