@@ -99,7 +99,8 @@ public final class Day {
 
     private boolean live(int designs, int batches) throws Exception {
         settled();
-        System.out.println("designs  ms/design  ms/edit  batches  ms/batch  heap MiB  resident MiB  threads  files open");
+        System.out.println(
+                "designs  ms/design  ms/edit  batches  ms/batch  heap MiB  resident MiB  threads  files open");
         int made = 0;
         for (int hundred = 0; hundred < designs / 100; hundred++) {
             long commands = 0;
@@ -128,8 +129,7 @@ public final class Day {
     }
 
     private static String brief(double ml, double mua, double musp) {
-        return String.format(
-                Locale.ROOT, BRIEF, Figures.plain(ml), mua, musp, mua * 1.05, musp * 0.81);
+        return String.format(Locale.ROOT, BRIEF, Figures.plain(ml), mua, musp, mua * 1.05, musp * 0.81);
     }
 
     private double between(double a, double b) {
@@ -173,7 +173,8 @@ public final class Day {
                         && !s.lookingForWaysProperty().get();
             });
             if (rests) return;
-            if (System.nanoTime() > end) throw new IllegalStateException("The window came to no recipe in five minutes.");
+            if (System.nanoTime() > end)
+                throw new IllegalStateException("The window came to no recipe in five minutes.");
         }
     }
 
@@ -184,8 +185,8 @@ public final class Day {
         List<String> words = new ArrayList<>(List.of("batch", "weigh", file.toString()));
         for (int n = 0; n < batch.weighings().size(); n++) {
             double grams = batch.weighings().get(n).massG() * between(0.998, 1.002);
-            words.addAll(List.of(
-                    "--item", Integer.toString(n + 1), "--grams", String.format(Locale.ROOT, "%.3f", grams)));
+            words.addAll(
+                    List.of("--item", Integer.toString(n + 1), "--grams", String.format(Locale.ROOT, "%.3f", grams)));
         }
         run(words.toArray(new String[0]));
         run(
@@ -195,8 +196,7 @@ public final class Day {
                 "--method",
                 "slab fit",
                 "--value",
-                String.format(
-                        Locale.ROOT, "690,%.4f,0.002,%.3f,0.1", between(0.05, 0.3), between(5, 20)));
+                String.format(Locale.ROOT, "690,%.4f,0.002,%.3f,0.1", between(0.05, 0.3), between(5, 20)));
     }
 
     private void run(String... words) {
@@ -246,9 +246,11 @@ public final class Day {
 
     private boolean verdict(int made) {
         int tenth = Math.max(1, heapMib.size() / 10);
-        double early = median(heapMib.subList(Math.min(tenth, heapMib.size() - 1), Math.min(2 * tenth, heapMib.size())));
+        double early =
+                median(heapMib.subList(Math.min(tenth, heapMib.size() - 1), Math.min(2 * tenth, heapMib.size())));
         double late = median(heapMib.subList(heapMib.size() - tenth, heapMib.size()));
-        double earlyMs = median(designMs.subList(Math.min(tenth, designMs.size() - 1), Math.min(2 * tenth, designMs.size())));
+        double earlyMs =
+                median(designMs.subList(Math.min(tenth, designMs.size() - 1), Math.min(2 * tenth, designMs.size())));
         double lateMs = median(designMs.subList(designMs.size() - tenth, designMs.size()));
         System.out.printf(
                 Locale.ROOT,
@@ -257,7 +259,8 @@ public final class Day {
                 late,
                 earlyMs,
                 lateMs);
-        int recorded = made == 0 ? 0 : Logbook.batches(folder.resolve("logbook.xlsx")).size();
+        int recorded =
+                made == 0 ? 0 : Logbook.batches(folder.resolve("logbook.xlsx")).size();
         System.out.println(recorded + " of " + made + " batches stand in the logbook; " + refused.size() + " refused.");
         refused.stream().limit(5).forEach(System.out::println);
         return recorded == made && refused.isEmpty() && late <= 1.1 * early + 8;
