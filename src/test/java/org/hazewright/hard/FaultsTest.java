@@ -26,6 +26,7 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 
 /** Files that vanish while they are read or written, clocks that jump, and what a killed program left, said by the next one. */
+@SuppressWarnings("try") // what goes on beside a test is only begun and ended
 class FaultsTest {
     @TempDir
     Path folder;
@@ -52,9 +53,13 @@ class FaultsTest {
         }
 
         @Override
-        public void close() throws InterruptedException {
+        public void close() {
             stop = true;
-            thread.join();
+            try {
+                thread.join();
+            } catch (InterruptedException e) {
+                Thread.currentThread().interrupt();
+            }
         }
     }
 
@@ -65,7 +70,7 @@ class FaultsTest {
         Seeds.lay(things);
         Path shelf = things.resolve("shelf");
         List<Path> moving = List.of(shelf.resolve("ink-demo.toml"), shelf.resolve("spectra/water-absorption.csv"));
-        try (Beside mover = new Beside(() -> {
+        try (Beside unused = new Beside(() -> {
             for (Path p : moving) {
                 Path away = folder.resolve("away");
                 Files.move(p, away, StandardCopyOption.ATOMIC_MOVE);
@@ -85,7 +90,7 @@ class FaultsTest {
         Path target = folder.resolve("recipe.toml");
         byte[] old = "# old\n".getBytes(StandardCharsets.UTF_8);
         byte[] fresh = "# fresh\n".repeat(20_000).getBytes(StandardCharsets.UTF_8);
-        try (Beside sweeper = new Beside(() -> {
+        try (Beside unused = new Beside(() -> {
             try (DirectoryStream<Path> parts = Files.newDirectoryStream(folder, "*.part")) {
                 for (Path p : parts) Files.deleteIfExists(p);
             }
