@@ -22,6 +22,7 @@ import org.hazewright.files.BatchReader;
 import org.hazewright.files.BatchTable;
 import org.hazewright.files.BriefReader;
 import org.hazewright.files.CoefficientTable;
+import org.hazewright.files.FileNames;
 import org.hazewright.files.RecipeReader;
 import org.hazewright.files.SafeFile;
 import org.hazewright.learning.MeasuredValue;
@@ -140,6 +141,10 @@ final class BatchCommand implements Runnable {
             if (!chosen.matches("[\\p{L}\\p{N}][\\p{L}\\p{N}._ -]{0,79}"))
                 throw new Refusal(
                         "--id is \"" + chosen + "\"; use letters, digits, dots, hyphens, underscores and blanks.");
+            if (!FileNames.everywhere(chosen))
+                throw new Refusal(
+                        "--id is \"" + chosen + "\", which is no name for a file on every system: some keep it for a"
+                                + " device, or take no dot or blank at the end. Choose another.");
             Path file = in.resolve(chosen + ".batch.toml");
             if (Files.exists(file))
                 throw new Refusal(

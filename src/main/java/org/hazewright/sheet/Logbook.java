@@ -219,7 +219,10 @@ public final class Logbook {
     // Files beside the logbook.
 
     private static Path pendingFor(Path logbook, LogbookEntry entry) {
-        String id = entry.batch().get(LogbookEntry.BATCH).toString().replaceAll("[^A-Za-z0-9._-]", "_");
+        String own = entry.batch().get(LogbookEntry.BATCH).toString();
+        String id = own.replaceAll("[^A-Za-z0-9._-]", "_");
+        if (!id.equals(own))
+            id += "-" + Integer.toHexString(own.hashCode()); // two names may differ in such letters only
         return logbook.resolveSibling(stem(logbook) + ".waiting." + id + ".xlsx");
     }
 

@@ -16,6 +16,8 @@ import java.nio.file.attribute.FileTime;
 import java.time.Duration;
 import java.time.Instant;
 import java.util.List;
+import java.util.Set;
+import java.util.stream.Collectors;
 import java.util.stream.Stream;
 import org.hazewright.cli.OneLine;
 import org.hazewright.files.SafeFile;
@@ -165,6 +167,23 @@ class FaultsTest {
         try (Stream<Path> all = Files.list(folder)) {
             assertFalse(all.anyMatch(p -> p.toString().contains("waiting")));
         }
+    }
+
+    /** Two batches whose names differ in letters that not every file name takes wait beside each other. */
+    @Test
+    void namesAlikeWaitApart() throws Exception {
+        batch("B1");
+        Files.writeString(folder.resolve("~$logbook.xlsx"), "open");
+        String recipe = folder.resolve("wrist-bath.recipe.toml").toString();
+        for (String id : new String[] {"Größe", "Gräße", "Gr__e"})
+            assertEquals(4, OneLine.run("batch", "open", recipe, "--id", id).status());
+        Files.delete(folder.resolve("~$logbook.xlsx"));
+        assertEquals(0, OneLine.run("batch", "open", recipe, "--id", "B2").status());
+        assertEquals(
+                Set.of("B1", "B2", "Größe", "Gräße", "Gr__e"),
+                Logbook.batches(folder.resolve("logbook.xlsx")).stream()
+                        .map(row -> row.get("batch").toString())
+                        .collect(Collectors.toSet()));
     }
 
     /** A brief, a recipe, a batch or a sheet that is gone by the time it is read. */
