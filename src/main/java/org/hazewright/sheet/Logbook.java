@@ -83,7 +83,11 @@ public final class Logbook {
                 lock.release();
             }
         } catch (IOException e) {
-            return keep(logbook, pending, entry, "its folder could not be used (" + e.getMessage() + ")");
+            return keep(
+                    logbook,
+                    pending,
+                    entry,
+                    "its folder or its lock file, ." + logbook.getFileName() + ".lock, cannot be used");
         }
     }
 

@@ -33,7 +33,7 @@ import org.hazewright.sheet.Logbook;
  * the window, and after them one batch is opened, weighed and measured into the day's logbook. Every hundred designs it says how long they
  * took and how much memory is in use after a collection.
  *
- * <p>{@code Day FOLDER DESIGNS BATCHES}; exit status 0 when everything was answered, every batch stands in the logbook and memory is flat:
+ * <p>{@code Day FOLDER DESIGNS BATCHES}, in a new folder within that one; exit status 0 when everything was answered, every batch stands in the logbook and memory is flat:
  * in the last tenth of the day at most a tenth and 8 MiB above the second tenth.
  */
 public final class Day {
@@ -70,9 +70,8 @@ public final class Day {
     }
 
     public static void main(String[] args) throws Exception {
-        Path folder = Files.createDirectories(Path.of(args[0])).toAbsolutePath();
-        if (!Seeds.files(folder).isEmpty())
-            throw new IllegalArgumentException(folder + " is not empty; a day begins with an empty folder.");
+        Path folder = Files.createTempDirectory(
+                Files.createDirectories(Path.of(args[0]).toAbsolutePath()), "day-");
         int designs = Integer.parseInt(args[1]);
         int batches = Integer.parseInt(args[2]);
         Day day = new Day(folder, open(folder));
