@@ -59,7 +59,7 @@ public final class Mutation {
                         "--timestampedReports=false",
                         "--threads=2",
                         "--timeoutConst=2000",
-                        "--jvmArgs=-Xmx1g")
+                        "--jvmArgs=-Xmx1g,-Djunit.jupiter.extensions.autodetection.enabled=true")
                 .redirectErrorStream(true)
                 .start();
         StringBuilder said = new StringBuilder();
