@@ -1,5 +1,6 @@
 package org.hazewright.hard;
 
+import com.sun.management.OperatingSystemMXBean;
 import java.io.IOException;
 import java.lang.management.ManagementFactory;
 import java.nio.file.Files;
@@ -31,7 +32,8 @@ import org.hazewright.sheet.Logbook;
 /**
  * A long day in one Java machine, with the window open all the time: of every ten designs nine come by the command and one from an edit in
  * the window, and after them one batch is opened, weighed and measured into the day's logbook. Every hundred designs it says how long they
- * took and how much memory is in use after a collection.
+ * took, by the clock and by the processor (which other work on the machine does not stretch), and how much memory is in use after a
+ * collection.
  *
  * <p>{@code Day FOLDER DESIGNS BATCHES}, in a new folder within that one; exit status 0 when everything was answered, every batch stands in the logbook and memory is flat:
  * in the last tenth of the day at most a tenth and 8 MiB above the second tenth.
@@ -56,6 +58,9 @@ public final class Day {
             [shelf]
             use = ["lipid-emulsion-20", "ink-demo", "dye-blue-demo"]
             """;
+
+    private static final OperatingSystemMXBean SYSTEM =
+            (OperatingSystemMXBean) ManagementFactory.getOperatingSystemMXBean();
 
     private final Path folder;
     private final Window window;
@@ -99,10 +104,11 @@ public final class Day {
     private boolean live(int designs, int batches) throws Exception {
         settled();
         System.out.println(
-                "designs  ms/design  ms/edit  batches  ms/batch  heap MiB  resident MiB  threads  files open");
+                "designs  ms/design  processor  ms/edit  batches  ms/batch  heap MiB  resident MiB  threads  files open");
         int made = 0;
         for (int hundred = 0; hundred < designs / 100; hundred++) {
             long commands = 0;
+            long processor = 0;
             long edits = 0;
             long weighed = 0;
             int before = made;
@@ -116,13 +122,20 @@ public final class Day {
                     for (; made < due; made++) batch("B" + (made + 1));
                     weighed += System.nanoTime() - start;
                 } else {
+                    long spent = SYSTEM.getProcessCpuTime();
                     design();
+                    processor += SYSTEM.getProcessCpuTime() - spent;
                     commands += System.nanoTime() - start;
                 }
             }
-            designMs.add(commands * 1e-6 / 90);
+            designMs.add(processor * 1e-6 / 90);
             heapMib.add(heapMib());
-            say(hundred + 1, edits * 1e-6 / 10, made, made == before ? 0 : weighed * 1e-6 / (made - before));
+            say(
+                    hundred + 1,
+                    commands * 1e-6 / 90,
+                    edits * 1e-6 / 10,
+                    made,
+                    made == before ? 0 : weighed * 1e-6 / (made - before));
         }
         return verdict(made);
     }
@@ -204,11 +217,12 @@ public final class Day {
         if (ran.status() != 0 && ran.status() != 3) refused.add(String.join(" ", words) + "\n" + ran.err());
     }
 
-    private void say(int hundreds, double msAnEdit, int made, double msABatch) throws IOException {
+    private void say(int hundreds, double msADesign, double msAnEdit, int made, double msABatch) throws IOException {
         System.out.printf(
                 Locale.ROOT,
-                "%7d  %9.1f  %7.0f  %7d  %8.0f  %8.1f  %12d  %7d  %10d%n",
+                "%7d  %9.1f  %9.1f  %7.0f  %7d  %8.0f  %8.1f  %12d  %7d  %10d%n",
                 100 * hundreds,
+                msADesign,
                 designMs.get(designMs.size() - 1),
                 msAnEdit,
                 made,
@@ -253,7 +267,7 @@ public final class Day {
         double lateMs = median(designMs.subList(designMs.size() - tenth, designMs.size()));
         System.out.printf(
                 Locale.ROOT,
-                "Medians of the second and of the last tenth: heap %.1f and %.1f MiB, %.1f and %.1f ms a design.%n",
+                "Medians of the second and of the last tenth: heap %.1f and %.1f MiB, %.1f and %.1f ms of processor time a design.%n",
                 early,
                 late,
                 earlyMs,
