@@ -103,10 +103,8 @@ public final class BriefPlace extends VBox {
         Word filling = new Word("", () -> Say.show(moulds, !moulds.isVisible()));
         filling.getStyleClass().add("small");
         filling.setMinWidth(0);
-        desk.edits()
-                .nowProperty()
-                .addListener((p, before, now) -> filling.setText(
-                        now == null || now.moulds().isEmpty() ? "for moulds…" : "for " + moulds(now.moulds())));
+        desk.edits().nowProperty().addListener((p, before, now) -> filling.setText(
+                now == null || now.moulds().isEmpty() ? "for moulds…" : "for " + moulds(now.moulds())));
         grid.add(filling, 1, 2);
         grid.add(moulds, 0, 8, 2, 1);
         grid.add(new ErrorLine(batch, overage), 0, 3, 2, 1);

@@ -183,17 +183,14 @@ public final class Desk {
         preparing.request(
                 (stop, progress) -> CoefficientTable.read(file, null),
                 table -> {
-                    String wrong = editing.targets(
-                                    table.targets(0.05, 0.05),
-                                    file.getFileName().toString())
+                    String wrong = editing.targets(table.targets(0.05, 0.05), file.getFileName().toString())
                             .orElse("");
                     notices.tell(
                             wrong.isEmpty()
                                     ? Notice.told(
                                             "open",
                                             "Targets taken from " + file.getFileName() + ": "
-                                                    + String.join("; ", table.understood())
-                                                    + ". Undo brings the old ones back.")
+                                                    + String.join("; ", table.understood()) + ". Undo brings the old ones back.")
                                     : Notice.wrong("open", wrong));
                 },
                 failure -> notices.tell(Notice.wrong("open", Papers.words(failure))));
@@ -400,11 +397,10 @@ public final class Desk {
         else if (name.endsWith(".csv") || name.endsWith(".tsv") || name.endsWith(".txt")) openTable(file);
         else if (name.endsWith(".xlsx")) openSheet(file);
         else
-            notices.tell(
-                    Notice.wrong(
-                            "open",
-                            file.getFileName() + " is none of the files that open here: a brief (.brief.toml), a recipe"
-                                    + " (.recipe.toml), a batch (.batch.toml), a sheet that was filled in (.xlsx), or a table of targets (.csv)."));
+            notices.tell(Notice.wrong(
+                    "open",
+                    file.getFileName() + " is none of the files that open here: a brief (.brief.toml), a recipe"
+                            + " (.recipe.toml), a batch (.batch.toml), a sheet that was filled in (.xlsx), or a table of targets (.csv)."));
     }
 
     /** Spectra for tissue-like values and oximeters, read when first asked for; on any thread. */
@@ -421,8 +417,7 @@ public final class Desk {
 
     /** A way to see a file that was written; none where no other program can be asked. */
     List<Notice.Way> showing(Path file) {
-        return outside.map(o -> List.of(new Notice.Way("show it", () -> o.accept(file))))
-                .orElse(List.of());
+        return outside.map(o -> List.of(new Notice.Way("show it", () -> o.accept(file)))).orElse(List.of());
     }
 
     public Work work() {
