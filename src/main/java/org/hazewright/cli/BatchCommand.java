@@ -28,6 +28,7 @@ final class BatchCommand implements Runnable {
     private CommandSpec spec;
 
     @Option(names = "--help", usageHelp = true, description = "Show this help and end.")
+    @SuppressWarnings("unused") // the parser asks it
     private boolean help;
 
     @Override

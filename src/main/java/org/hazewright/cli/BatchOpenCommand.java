@@ -12,6 +12,7 @@ import java.util.stream.Stream;
 import org.hazewright.bench.Batch;
 import org.hazewright.brief.Brief;
 import org.hazewright.files.BriefReader;
+import org.hazewright.files.FileNames;
 import org.hazewright.files.RecipeReader;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.optics.Refusal;
@@ -79,6 +80,10 @@ final class BatchOpenCommand implements Callable<Integer> {
         if (!chosen.matches("[\\p{L}\\p{N}][\\p{L}\\p{N}._ -]{0,79}"))
             throw new Refusal(
                     "--id is \"" + chosen + "\"; use letters, digits, dots, hyphens, underscores and blanks.");
+        if (!FileNames.everywhere(chosen))
+            throw new Refusal("--id is \"" + chosen
+                    + "\", which is no name for a file on every system: some keep it for a device, or take no dot or blank at"
+                    + " the end. Choose another.");
         Path file = in.resolve(chosen + ".batch.toml");
         if (Files.exists(file))
             throw new Refusal(

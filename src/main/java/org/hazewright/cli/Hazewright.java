@@ -67,12 +67,14 @@ public final class Hazewright implements Runnable {
             names = {"-h", "--help"},
             usageHelp = true,
             description = "Show this help and end.")
+    @SuppressWarnings("unused") // the parser asks it
     private boolean help;
 
     @Option(
             names = {"-V", "--version"},
             versionHelp = true,
             description = "Show the version and end.")
+    @SuppressWarnings("unused") // the parser asks it
     private boolean version;
 
     @Option(

@@ -43,6 +43,7 @@ import picocli.CommandLine.Spec;
         })
 final class IngredientsCommand implements Callable<Integer> {
     @Mixin
+    @SuppressWarnings("unused") // its options are taken before a subcommand too
     private Shared shared;
 
     @Spec

@@ -32,8 +32,7 @@ final class Recording {
             return Hazewright.UNWRITABLE;
         }
         if (!shared.json && !shared.quiet)
-            out.println("Recorded: " + book
-                    + (recorded.merged() > 0 ? " (and " + recorded.merged() + " that waited beside it)" : ""));
+            out.println("Recorded: " + book + (recorded.found().isEmpty() ? "" : " (" + recorded.found() + ")"));
         return Hazewright.DONE;
     }
 }

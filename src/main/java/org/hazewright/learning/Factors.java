@@ -48,10 +48,11 @@ public final class Factors {
         int n = factors.size();
         if (n == 0) return;
         double[][] scaled = new double[n][n];
-        for (int i = 0; i < n; i++) {
+        for (int i = 0; i < n; i++)
             if (!(covariance[i][i] >= 0) || Double.isInfinite(covariance[i][i]))
                 throw new Refusal("The variance of " + factors.get(i).words() + " is " + covariance[i][i]
                         + "; it must be 0 or above.");
+        for (int i = 0; i < n; i++) {
             for (int j = 0; j < n; j++) {
                 double size = Math.sqrt(covariance[i][i] * covariance[j][j]);
                 if (!(Math.abs(covariance[i][j] - covariance[j][i]) <= 1e-9 * size + Double.MIN_NORMAL))

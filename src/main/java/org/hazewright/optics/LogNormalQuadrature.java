@@ -41,7 +41,6 @@ final class LogNormalQuadrature extends SizeQuadrature {
 
     private final double medianNm;
     private final double sigma;
-    private final double sizePerNm;
     private final double scatteringSmall;
     private final double scatteringMiddle;
     private final boolean absorbing;
@@ -66,7 +65,6 @@ final class LogNormalQuadrature extends SizeQuadrature {
     LogNormalQuadrature(SizeDistribution.LogNormal sizes, double sizePerNm, double n, double k) {
         this.medianNm = sizes.numberMedianDiameterNm();
         this.sigma = Math.log(sizes.geometricStandardDeviation());
-        this.sizePerNm = sizePerNm;
         this.absorbing = k > 0;
         // |(m² − 1)/(m² + 2)|² and |m − 1|²
         double re = n * n - k * k;

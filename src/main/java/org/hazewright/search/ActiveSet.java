@@ -255,12 +255,6 @@ final class ActiveSet {
         }
     }
 
-    private double limitOf(int code) {
-        if (code < n) return lower[code];
-        if (code < 2 * n) return -upper[code - n];
-        return (code & 1) == 1 ? -high[rowOf(code)] : low[rowOf(code)];
-    }
-
     private double slack(int code) {
         if (code < n) return x[code] - lower[code];
         if (code < 2 * n) return upper[code - n] - x[code - n];

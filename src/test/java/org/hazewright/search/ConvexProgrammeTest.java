@@ -38,7 +38,7 @@ class ConvexProgrammeTest {
         int optimal = 0;
         int infeasible = 0;
         for (int seed = 0; seed < 1000; seed++) {
-            Random random = new Random(seed * 7 + (long) spread);
+            Random random = new Random(seed * 7L + (long) spread);
             ConvexProgramme p = random(random, spread);
             Solution s = p.solve();
             String which = "spread " + spread + " seed " + seed;

@@ -17,8 +17,6 @@ class SetSearchBruteForceTest {
     @ParameterizedTest
     @EnumSource(RandomProblems.Twist.class)
     void findsWhatExhaustionFinds(RandomProblems.Twist twist) {
-        int met = 0;
-        int missed = 0;
         for (int seed = 1; seed <= 12; seed++) {
             double loose = new double[] {0.5, 2, 6, 20}[seed % 4];
             SetProblem problem = RandomProblems.of(twist, 7, 2, 3, loose, seed);
@@ -38,10 +36,8 @@ class SetSearchBruteForceTest {
             for (int[] set : sets) judged.add(new Judged(set, BruteForce.leastScore(problem, set, true)));
             judged.removeIf(j -> j.score == Double.POSITIVE_INFINITY);
             assertEquals(!judged.isEmpty(), found.meets(), which + " meets, worst miss " + worst);
-            if (judged.isEmpty()) {
-                missed++;
+            if (judged.isEmpty())
                 for (int[] set : sets) judged.add(new Judged(set, BruteForce.leastScore(problem, set, false)));
-            } else met++;
             judged.sort(Comparator.comparingDouble(Judged::score));
             double alone = BruteForce.leastScore(problem, new int[0], false);
             double grain = 1e-7 * judged.get(0).score + 1e-9 * alone;

@@ -316,7 +316,8 @@ public final class MadeBatch {
                         .orElse(new Notice(
                                 Notice.Kind.TOLD,
                                 "logbook",
-                                "Recorded in " + recorded.kept() + ".",
+                                "Recorded in " + recorded.kept()
+                                        + (recorded.found().isEmpty() ? "" : " (" + recorded.found() + ")") + ".",
                                 desk.showing(recorded.kept()))));
     }
 }
