@@ -133,6 +133,7 @@ public final class Desk {
                         Optional.empty(),
                         SearchLimits.USUAL,
                         Balance.USUAL,
+                        List.of(),
                         Optional.empty())
                 .brief(Optional.empty()));
     }
