@@ -21,7 +21,13 @@ final class OwnMachine {
 
     /** The heap holds the shelf, the recipe and the kept angular patterns several times over; see the command that measures memory. */
     private static final List<String> SET_UP =
-            List.of("-Xmx256m", "-XX:+UseSerialGC", "-XX:TieredStopAtLevel=1", "-XX:-UsePerfData", "-D" + THERE + "=here");
+            List.of(
+            "-Xmx176m",
+            "-XX:+UseG1GC",
+            "-XX:MaxGCPauseMillis=12",
+            "-XX:TieredStopAtLevel=1",
+            "-XX:-UsePerfData",
+            "-D" + THERE + "=here");
 
     private OwnMachine() {}
 

@@ -10,8 +10,8 @@ import java.util.function.ToLongFunction;
  * program's memory has room for. Safe for threads.
  */
 final class BoundedCache<K, V> {
-    /** A number takes 8 bytes, and no cache more than an eighth of the memory that the program may have. */
-    private static final long SHARE_OF_MEMORY = 8 * 8;
+    /** A number takes 8 bytes, and no cache more than a sixteenth of the memory that the program may have. */
+    private static final long SHARE_OF_MEMORY = 8 * 16;
 
     private final Map<K, V> known = new LinkedHashMap<>(64, 0.75f, true);
     private final long limit;
