@@ -50,7 +50,9 @@ public final class Opening {
     /** The shelf that a person made their own. */
     private static Optional<Path> kept(Remembered remembered) {
         String folder = remembered.text("shelf", "");
-        return folder.isEmpty() ? Optional.empty() : Optional.of(Path.of(folder)).filter(java.nio.file.Files::isDirectory);
+        return folder.isEmpty()
+                ? Optional.empty()
+                : Optional.of(Path.of(folder)).filter(java.nio.file.Files::isDirectory);
     }
 
     /** Shows the window to someone when it opens: for measuring. */
@@ -91,7 +93,8 @@ public final class Opening {
         @Override
         public void start(Stage stage) {
             Window window = new Window(stage, desk, new Look(), Optional.empty());
-            window.opensOutside(path -> getHostServices().showDocument(path.toUri().toString()));
+            window.opensOutside(
+                    path -> getHostServices().showDocument(path.toUri().toString()));
             ui.begin();
             window.show();
             watcher.accept(window);

@@ -20,8 +20,7 @@ final class OwnMachine {
     private static final String THERE = "hazewright.window";
 
     /** The heap holds the shelf, the recipe and the kept angular patterns several times over; see the command that measures memory. */
-    private static final List<String> SET_UP =
-            List.of(
+    private static final List<String> SET_UP = List.of(
             "-Xmx176m",
             "-XX:+UseG1GC",
             "-XX:MaxGCPauseMillis=12",
@@ -62,7 +61,8 @@ final class OwnMachine {
         command.addAll(given.stream().filter(a -> a.startsWith("-D")).toList());
         command.addAll(SET_UP);
         command.addAll(List.of("-cp", System.getProperty("java.class.path"), "org.hazewright.cli.Hazewright"));
-        shelfFolder.ifPresent(folder -> command.addAll(List.of("--ingredients", folder.toAbsolutePath().toString())));
+        shelfFolder.ifPresent(folder ->
+                command.addAll(List.of("--ingredients", folder.toAbsolutePath().toString())));
         first.ifPresent(file -> command.add(file.toAbsolutePath().toString()));
         return command;
     }

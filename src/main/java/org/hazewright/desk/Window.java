@@ -24,6 +24,7 @@ import javafx.stage.Stage;
 import org.hazewright.desk.balance.BalanceView;
 import org.hazewright.desk.batch.BatchView;
 import org.hazewright.desk.brief.BriefPlace;
+import org.hazewright.desk.logbook.LogbookView;
 import org.hazewright.desk.look.Look;
 import org.hazewright.desk.look.Palette;
 import org.hazewright.desk.model.AtBalance;
@@ -68,6 +69,7 @@ public final class Window {
     private BalanceView balance;
     private BatchView batch;
     private boolean shelfOpen;
+    private boolean logbookOpen;
     private boolean keysOpen;
     private Node atDesk = new StackPane();
     private final Head head;
@@ -232,6 +234,10 @@ public final class Window {
                     () -> shelf(false));
             center(view, false);
             view.requestFocus();
+        } else if (logbookOpen) {
+            LogbookView view = new LogbookView(desk.logbookRoom(), desk.logbookRoom()::open, () -> logbook(false));
+            center(view, false);
+            view.requestFocus();
         } else if (keysOpen) {
             KeysView view = new KeysView(() -> keys(false));
             center(view, false);
@@ -241,6 +247,12 @@ public final class Window {
 
     private void shelf(boolean open) {
         shelfOpen = open;
+        turn();
+    }
+
+    private void logbook(boolean open) {
+        logbookOpen = open;
+        if (open) desk.logbookRoom().read();
         turn();
     }
 
@@ -258,6 +270,11 @@ public final class Window {
     /** Turns to the shelf. */
     void openShelf() {
         shelf(true);
+    }
+
+    /** Turns to the logbook. */
+    void openLogbook() {
+        logbook(true);
     }
 
     /** Turns back from the shelf. */
@@ -289,6 +306,7 @@ public final class Window {
         on(scene, "F1", deeds::keys);
         on(scene, "Shortcut+Enter", deeds::balance);
         on(scene, "Shortcut+L", deeds::shelf);
+        on(scene, "Shortcut+J", deeds::logbook);
         on(scene, "F6", () -> nextPlace(1));
         on(scene, "Shift+F6", () -> nextPlace(-1));
         scene.addEventFilter(javafx.scene.input.KeyEvent.KEY_PRESSED, e -> {
@@ -505,6 +523,11 @@ public final class Window {
         @Override
         public void shelf() {
             Window.this.shelf(true);
+        }
+
+        @Override
+        public void logbook() {
+            Window.this.logbook(true);
         }
 
         @Override

@@ -29,7 +29,9 @@ public final class Screenshots {
         Path out = Path.of(args.length > 0 ? args[0] : "target/screenshots");
         Files.createDirectories(out);
         Screenshots s = new Screenshots(out);
-        double[][] sizes = args.length > 1 && args[1].equals("4k") ? new double[][] {{3840, 2160}} : new double[][] {{1280, 720}, {1920, 1080}};
+        double[][] sizes = args.length > 1 && args[1].equals("4k")
+                ? new double[][] {{3840, 2160}}
+                : new double[][] {{1280, 720}, {1920, 1080}};
         try {
             for (double[] size : sizes) s.size(size[0], size[1]);
         } finally {
@@ -114,7 +116,11 @@ public final class Screenshots {
         Path memory = Files.createTempDirectory("memory");
         Path file = memory.resolve("window.brief.toml");
         BriefWriter.write(
-                file, BriefReader.readShipped("clear-window"), List.of(), TissueSpectra.of(null), SafeFile.Overwrite.NEVER);
+                file,
+                BriefReader.readShipped("clear-window"),
+                List.of(),
+                TissueSpectra.of(null),
+                SafeFile.Overwrite.NEVER);
         Window window = Stagehand.open(memory, w, h, Optional.of(file), Optional.empty());
         Stagehand.untilSettled(window);
         Stagehand.ui(() -> {

@@ -363,6 +363,92 @@ class WindowTest {
         Stagehand.pulse();
     }
 
+    /** Only what stands on the screen is read and pressed: no file, no menu, no key but Enter. */
+    @Test
+    void aStrangerDesignsTheDemoWeighsItAndFindsItInTheLogbook() {
+        open(Optional.empty());
+        focus(wantedField(690, Point.Quantity.MUA));
+        hand.typeOver("0.12");
+        hand.press(KeyCode.ENTER);
+        Stagehand.untilSettled(window);
+        assertTrue(said("headline").startsWith("Lands inside every tolerance"), said("headline"));
+        hand.click(button("Stand at the balance"));
+        Stagehand.until(
+                "the balance", () -> window.desk().weighingProperty().get().isPresent());
+        Stagehand.pulse();
+        int steps = 0;
+        while (all(n -> n instanceof Button b
+                        && b.getText() != null
+                        && b.getText().startsWith("Record this batch"))
+                .isEmpty()) {
+            assertTrue(++steps < 100, "the steps do not end");
+            List<Node> grams = all(n -> n.getStyleClass().contains("step-grams"));
+            if (!grams.isEmpty()) hand.type(((Labeled) grams.get(0)).getText());
+            hand.press(KeyCode.ENTER);
+        }
+        assertTrue(steps >= 7, "seven things are weighed");
+        hand.click(button("Record this batch"));
+        Stagehand.until("the batch", () -> window.desk().madeProperty().get().isPresent());
+        Stagehand.pulse();
+        hand.click(button("back to the desk"));
+        hand.click(button("Logbook"));
+        Stagehand.until(
+                "the logbook",
+                () -> window.desk().logbookRoom().pagesProperty().get().isPresent());
+        Stagehand.pulse();
+        assertTrue(shows("Forearm block"), "the batch's title is not in the logbook");
+        String landing = said("logbook-landing");
+        assertTrue(landing.matches("lands \\d+ times in 100"), landing);
+        hand.click(button("forearm-block-" + java.time.LocalDate.now()));
+        Stagehand.until("the batch", () -> window.desk().madeProperty().get().isPresent());
+        Stagehand.pulse();
+        assertTrue(shows("Batch forearm-block-" + java.time.LocalDate.now()));
+    }
+
+    private String said(String styleClass) {
+        return ((Labeled) all(n -> n.getStyleClass().contains(styleClass)).get(0)).getText();
+    }
+
+    private boolean shows(String text) {
+        return !all(n -> n instanceof Labeled l && text.equals(l.getText())).isEmpty();
+    }
+
+    @Test
+    void stocksInHandAreKeptEditedAndTakenBack() throws Exception {
+        Path file = bath();
+        Files.writeString(file, Files.readString(file) + """
+
+                        [[stock_in_hand]]
+                        id = "ink-1-20"
+                        ingredient = "ink-demo"
+                        ingredient_g = 1
+                        diluent = "water"
+                        diluent_g = 19
+                        """);
+        open(Optional.of(file));
+        assertEquals(1, draft().stocks().size());
+        assertTrue(
+                shown().recipe().stocks().stream().anyMatch(s -> s.id().equals("ink-1-20")),
+                "the recipe does not use what stands ready");
+        hand.click(button("ink-1-20"));
+        hand.click(all(n -> "remove the stock ink-1-20".equals(n.getAccessibleText()))
+                .get(0));
+        assertTrue(draft().stocks().isEmpty());
+        hand.press(KeyCode.CONTROL, KeyCode.Z);
+        assertEquals("ink-1-20", draft().stocks().get(0).id());
+        focus(wantedField(690, Point.Quantity.MUA));
+        hand.typeOver("0.11");
+        hand.press(KeyCode.ENTER);
+        Stagehand.untilSettled(window);
+        hand.press(KeyCode.CONTROL, KeyCode.S);
+        Stagehand.until("saved", () -> !window.desk().papers().changedProperty().get());
+        assertEquals(
+                List.of("ink-1-20"),
+                BriefReader.read(file, TissueSpectra.of(null)).stocksInHand().stream()
+                        .map(org.hazewright.brief.StockInHand::id)
+                        .toList());
+    }
+
     @Test
     void sheetsAndPicturesAreWritten() throws Exception {
         open(Optional.of(bath()));
@@ -414,6 +500,12 @@ class WindowTest {
         Stagehand.ui(() -> window.openShelf());
         Stagehand.pulse();
         named("shelf");
+        Stagehand.ui(() -> {
+            window.closeShelf();
+            window.openLogbook();
+        });
+        Stagehand.pulse();
+        named("logbook");
     }
 
     private void named(String where) {

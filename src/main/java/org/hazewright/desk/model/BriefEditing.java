@@ -165,8 +165,10 @@ public final class BriefEditing {
 
     /** Takes the targets of a table in place of those that are there. */
     public Optional<String> targets(List<Target> targets, String from) {
-        return attempt("targets from " + from, "", d -> d.withRows(targets.stream().map(Row::of).toList())
-                .withTissue(Optional.empty()));
+        return attempt(
+                "targets from " + from,
+                "",
+                d -> d.withRows(targets.stream().map(Row::of).toList()).withTissue(Optional.empty()));
     }
 
     // tissue-like values

@@ -49,6 +49,7 @@ public final class Desk {
     private final Papers papers;
     private final Foreseeing foreseeing;
     private final ShelfRoom shelfRoom;
+    private final LogbookRoom logbookRoom;
     private final Work.Lane preparing;
     private final ReadOnlyObjectWrapper<Optional<MadeBatch>> made = new ReadOnlyObjectWrapper<>(Optional.empty());
     private final ReadOnlyObjectWrapper<Optional<AtBalance>> weighing = new ReadOnlyObjectWrapper<>(Optional.empty());
@@ -66,6 +67,7 @@ public final class Desk {
         edits.nowProperty().addListener((p, before, now) -> solve());
         foreseeing = new Foreseeing(this);
         shelfRoom = new ShelfRoom(this);
+        logbookRoom = new LogbookRoom(this);
     }
 
     private record Begun(ShelfState shelf, Brief brief) {}
@@ -184,14 +186,17 @@ public final class Desk {
         preparing.request(
                 (stop, progress) -> CoefficientTable.read(file, null),
                 table -> {
-                    String wrong = editing.targets(table.targets(0.05, 0.05), file.getFileName().toString())
+                    String wrong = editing.targets(
+                                    table.targets(0.05, 0.05),
+                                    file.getFileName().toString())
                             .orElse("");
                     notices.tell(
                             wrong.isEmpty()
                                     ? Notice.told(
                                             "open",
                                             "Targets taken from " + file.getFileName() + ": "
-                                                    + String.join("; ", table.understood()) + ". Undo brings the old ones back.")
+                                                    + String.join("; ", table.understood())
+                                                    + ". Undo brings the old ones back.")
                                     : Notice.wrong("open", wrong));
                 },
                 failure -> notices.tell(Notice.wrong("open", Papers.words(failure))));
@@ -398,10 +403,11 @@ public final class Desk {
         else if (name.endsWith(".csv") || name.endsWith(".tsv") || name.endsWith(".txt")) openTable(file);
         else if (name.endsWith(".xlsx")) openSheet(file);
         else
-            notices.tell(Notice.wrong(
-                    "open",
-                    file.getFileName() + " is none of the files that open here: a brief (.brief.toml), a recipe"
-                            + " (.recipe.toml), a batch (.batch.toml), a sheet that was filled in (.xlsx), or a table of targets (.csv)."));
+            notices.tell(
+                    Notice.wrong(
+                            "open",
+                            file.getFileName() + " is none of the files that open here: a brief (.brief.toml), a recipe"
+                                    + " (.recipe.toml), a batch (.batch.toml), a sheet that was filled in (.xlsx), or a table of targets (.csv)."));
     }
 
     /** Spectra for tissue-like values and oximeters, read when first asked for; on any thread. */
@@ -418,7 +424,8 @@ public final class Desk {
 
     /** A way to see a file that was written; none where no other program can be asked. */
     List<Notice.Way> showing(Path file) {
-        return outside.map(o -> List.of(new Notice.Way("show it", () -> o.accept(file)))).orElse(List.of());
+        return outside.map(o -> List.of(new Notice.Way("show it", () -> o.accept(file))))
+                .orElse(List.of());
     }
 
     public Work work() {
@@ -455,6 +462,10 @@ public final class Desk {
 
     public ShelfRoom shelfRoom() {
         return shelfRoom;
+    }
+
+    public LogbookRoom logbookRoom() {
+        return logbookRoom;
     }
 
     public Foreseeing foreseeing() {

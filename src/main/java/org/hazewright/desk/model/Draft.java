@@ -58,7 +58,8 @@ public record Draft(
         rows.forEach(Row::target);
         for (int k = 0; k < stocks.size(); k++) {
             StockInHand stock = stocks.get(k);
-            List<String> earlier = stocks.subList(0, k).stream().map(StockInHand::id).toList();
+            List<String> earlier =
+                    stocks.subList(0, k).stream().map(StockInHand::id).toList();
             if (earlier.contains(stock.id()))
                 throw new Refusal("Two stocks are called “" + stock.id() + "”; give each its own name.");
             stock.from().filter(from -> !earlier.contains(from)).ifPresent(from -> {
@@ -135,7 +136,19 @@ public record Draft(
 
     public Draft withTitle(String t) {
         return new Draft(
-                name, t.strip(), bases, batchMl, moulds, overage, temperatureC, rows, tissue, limits, balance, stocks, chosen);
+                name,
+                t.strip(),
+                bases,
+                batchMl,
+                moulds,
+                overage,
+                temperatureC,
+                rows,
+                tissue,
+                limits,
+                balance,
+                stocks,
+                chosen);
     }
 
     /** Choosing another base gives up a recipe that was chosen. */
@@ -159,7 +172,19 @@ public record Draft(
     /** A batch said in mL takes the place of moulds. */
     public Draft withBatchMl(double ml) {
         return new Draft(
-                name, title, bases, ml, List.of(), overage, temperatureC, rows, tissue, limits, balance, stocks, chosen);
+                name,
+                title,
+                bases,
+                ml,
+                List.of(),
+                overage,
+                temperatureC,
+                rows,
+                tissue,
+                limits,
+                balance,
+                stocks,
+                chosen);
     }
 
     public Draft withMoulds(List<Mould> m) {
@@ -181,32 +206,50 @@ public record Draft(
     }
 
     public Draft withOverage(double o) {
-        return new Draft(name, title, bases, batchMl, moulds, o, temperatureC, rows, tissue, limits, balance, stocks, chosen);
+        return new Draft(
+                name, title, bases, batchMl, moulds, o, temperatureC, rows, tissue, limits, balance, stocks, chosen);
     }
 
     public Draft withTemperatureC(double t) {
-        return new Draft(name, title, bases, batchMl, moulds, overage, t, rows, tissue, limits, balance, stocks, chosen);
+        return new Draft(
+                name, title, bases, batchMl, moulds, overage, t, rows, tissue, limits, balance, stocks, chosen);
     }
 
     public Draft withTissue(Optional<Tissue> t) {
-        return new Draft(name, title, bases, batchMl, moulds, overage, temperatureC, rows, t, limits, balance, stocks, chosen);
+        return new Draft(
+                name, title, bases, batchMl, moulds, overage, temperatureC, rows, t, limits, balance, stocks, chosen);
     }
 
     public Draft withLimits(SearchLimits l) {
         return new Draft(
-                name, title, bases, batchMl, moulds, overage, temperatureC, rows, tissue, l, balance, stocks, Optional.empty());
+                name,
+                title,
+                bases,
+                batchMl,
+                moulds,
+                overage,
+                temperatureC,
+                rows,
+                tissue,
+                l,
+                balance,
+                stocks,
+                Optional.empty());
     }
 
     public Draft withBalance(Balance b) {
-        return new Draft(name, title, bases, batchMl, moulds, overage, temperatureC, rows, tissue, limits, b, stocks, chosen);
+        return new Draft(
+                name, title, bases, batchMl, moulds, overage, temperatureC, rows, tissue, limits, b, stocks, chosen);
     }
 
     /** A stock that holds another is not given up before it. */
     public Draft withStocks(List<StockInHand> s) {
-        return new Draft(name, title, bases, batchMl, moulds, overage, temperatureC, rows, tissue, limits, balance, s, chosen);
+        return new Draft(
+                name, title, bases, batchMl, moulds, overage, temperatureC, rows, tissue, limits, balance, s, chosen);
     }
 
     public Draft withChosen(Optional<List<String>> c) {
-        return new Draft(name, title, bases, batchMl, moulds, overage, temperatureC, rows, tissue, limits, balance, stocks, c);
+        return new Draft(
+                name, title, bases, batchMl, moulds, overage, temperatureC, rows, tissue, limits, balance, stocks, c);
     }
 }

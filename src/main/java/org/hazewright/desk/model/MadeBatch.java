@@ -62,7 +62,11 @@ public final class MadeBatch {
 
     /** All that follows from the batch as it stands. */
     public record Seen(
-            List<Answer.Predicted> landing, double chance, Optional<Verdict> verdict, List<Belief> beliefs, Factors after) {}
+            List<Answer.Predicted> landing,
+            double chance,
+            Optional<Verdict> verdict,
+            List<Belief> beliefs,
+            Factors after) {}
 
     private final Desk desk;
     private final Path file;
@@ -232,7 +236,11 @@ public final class MadeBatch {
                 values -> attempt(
                         "measured values",
                         b -> b.withMeasured(new Measurement(
-                                LocalDate.now(), new Method(how, 0, 0), instrument.strip(), b.correctionCount(), values))),
+                                LocalDate.now(),
+                                new Method(how, 0, 0),
+                                instrument.strip(),
+                                b.correctionCount(),
+                                values))),
                 failure -> complaint.set(Papers.words(failure)));
     }
 
@@ -257,7 +265,8 @@ public final class MadeBatch {
                 new Lot(bottle.kind(), number.strip(), Optional.empty(), Optional.empty(), Optional.empty()),
                 new Source(
                         Source.Basis.MEASURED,
-                        "Learned from batch " + edits.now().id() + ", " + m.method().name() + " of " + m.on() + "."));
+                        "Learned from batch " + edits.now().id() + ", "
+                                + m.method().name() + " of " + m.on() + "."));
         return desk.shelfRoom().addLearned(bottle, lot, seen.get().after());
     }
 
@@ -311,12 +320,11 @@ public final class MadeBatch {
     static void tell(Desk desk, Logbook.Recorded recorded) {
         desk.notices()
                 .tell(recorded.waiting()
-                        .map(why -> Notice.wrong(
-                                "logbook", "The batch is written; the logbook has to wait. " + why))
+                        .map(why -> Notice.wrong("logbook", "The batch is written; the logbook has to wait. " + why))
                         .orElse(new Notice(
                                 Notice.Kind.TOLD,
                                 "logbook",
-                                "Recorded in " + recorded.kept() + ".",
+                                "Recorded in the logbook, " + recorded.kept() + ".",
                                 desk.showing(recorded.kept()))));
     }
 }
