@@ -228,6 +228,7 @@ public final class Window {
         } else if (shelfOpen) {
             ShelfView view = new ShelfView(
                     desk.shelfRoom(),
+                    desk.adding(),
                     ShelfState.place(desk.shelfProperty().get().folder()),
                     look,
                     chooser,

@@ -50,6 +50,7 @@ public final class Desk {
     private final Foreseeing foreseeing;
     private final ShelfRoom shelfRoom;
     private final LogbookRoom logbookRoom;
+    private final Adding adding;
     private final Work.Lane preparing;
     private final ReadOnlyObjectWrapper<Optional<MadeBatch>> made = new ReadOnlyObjectWrapper<>(Optional.empty());
     private final ReadOnlyObjectWrapper<Optional<AtBalance>> weighing = new ReadOnlyObjectWrapper<>(Optional.empty());
@@ -68,6 +69,7 @@ public final class Desk {
         foreseeing = new Foreseeing(this);
         shelfRoom = new ShelfRoom(this);
         logbookRoom = new LogbookRoom(this);
+        adding = new Adding(this);
     }
 
     private record Begun(ShelfState shelf, Brief brief) {}
@@ -462,6 +464,10 @@ public final class Desk {
 
     public ShelfRoom shelfRoom() {
         return shelfRoom;
+    }
+
+    public Adding adding() {
+        return adding;
     }
 
     public LogbookRoom logbookRoom() {

@@ -267,7 +267,7 @@ public final class MadeBatch {
                         Source.Basis.MEASURED,
                         "Learned from batch " + edits.now().id() + ", "
                                 + m.method().name() + " of " + m.on() + "."));
-        return desk.shelfRoom().addLearned(bottle, lot, seen.get().after());
+        return desk.adding().addLearned(bottle, lot, seen.get().after());
     }
 
     private static double number(String where, String text) {

@@ -125,7 +125,7 @@ final class ComparePlot {
 
     private static String power(double decade) {
         int d = (int) decade;
-        if (d >= -3 && d <= 4) return d >= 0 ? Long.toString((long) Math.pow(10, d)) : "0." + "0".repeat(-d - 1) + "1";
+        if (d >= -3 && d <= 5) return d >= 0 ? Long.toString((long) Math.pow(10, d)) : "0." + "0".repeat(-d - 1) + "1";
         return "1e" + d;
     }
 }

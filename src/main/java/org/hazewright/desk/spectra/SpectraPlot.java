@@ -221,7 +221,7 @@ public final class SpectraPlot {
         pen.box(left, top, width, height, 0, palette.paper(), 1, null, 0);
         pen.clip(left, top, width, height);
         gaps(pen, top, height);
-        if (view.shares()) shares(pen, q);
+        List<Band> named = view.shares() ? shares(pen, q) : List.of();
         pen.unclip();
         double step = Scale.step(s.high() - s.low(), 4);
         for (double v : s.ticks(4)) {
@@ -237,6 +237,7 @@ public final class SpectraPlot {
                     Pen.Align.RIGHT);
         }
         pen.clip(left, top, width, height);
+        for (Band b : named) label(pen, s, inside(), b);
         prediction(pen, q);
         for (Box b : boxes) if (b.quantity() == q) box(pen, b);
         pen.unclip();
@@ -260,10 +261,11 @@ public final class SpectraPlot {
         }
     }
 
-    private void shares(Pen pen, Point.Quantity q) {
-        if (curves == null) return;
+    /** Draws the shares; gives those to be named. */
+    private List<Band> shares(Pen pen, Point.Quantity q) {
+        if (curves == null) return List.of();
         int[] in = inside();
-        if (in.length < 2) return;
+        if (in.length < 2) return List.of();
         double[] below = new double[in.length];
         Scale s = scale(q);
         int tint = 0;
@@ -293,7 +295,7 @@ public final class SpectraPlot {
             labels.add(new Band(Words.shortName(share.ingredient()), below.clone(), part));
             for (int k = 0; k < in.length; k++) below[k] += part[in[k]];
         }
-        for (Band b : labels) label(pen, s, in, b);
+        return labels;
     }
 
     /** A share as it is stacked: what lies below it and its own part, 1/cm. */
