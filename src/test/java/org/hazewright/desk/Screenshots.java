@@ -64,6 +64,7 @@ public final class Screenshots {
             Stagehand.ui(() -> window.look().paletteProperty().set(p));
             shoot(window, "shelf", p, w);
         }
+        Stagehand.ui(window::closeShelf);
         Stagehand.ui(() -> window.desk().standAtBalance());
         Stagehand.until(
                 "the balance", () -> window.desk().weighingProperty().get().isPresent());
@@ -106,6 +107,17 @@ public final class Screenshots {
         for (Palette p : new Palette[] {Palette.LIGHT, Palette.DARK}) {
             Stagehand.ui(() -> window.look().paletteProperty().set(p));
             shoot(window, "batch", p, w);
+        }
+        Stagehand.ui(() -> {
+            window.desk().leaveBatch();
+            window.openLogbook();
+        });
+        Stagehand.until(
+                "the logbook",
+                () -> window.desk().logbookRoom().pagesProperty().get().isPresent());
+        for (Palette p : new Palette[] {Palette.LIGHT, Palette.DARK}) {
+            Stagehand.ui(() -> window.look().paletteProperty().set(p));
+            shoot(window, "logbook", p, w);
         }
         Stagehand.ui(() -> window.stage().close());
         trouble(w, h);
