@@ -6,12 +6,14 @@ import java.util.Optional;
 import java.util.function.Consumer;
 import javafx.geometry.Pos;
 import javafx.scene.Node;
+import javafx.scene.control.Label;
 import javafx.scene.control.ScrollPane;
 import javafx.scene.input.KeyCode;
 import javafx.scene.input.KeyEvent;
 import javafx.scene.layout.BorderPane;
 import javafx.scene.layout.GridPane;
 import javafx.scene.layout.HBox;
+import javafx.scene.layout.Priority;
 import javafx.scene.layout.VBox;
 import org.hazewright.desk.model.LogbookRoom;
 import org.hazewright.desk.model.Notice;
@@ -40,10 +42,14 @@ public final class LogbookView extends BorderPane {
         head.getStyleClass().addAll("head", "gap-m");
         head.setAlignment(Pos.BASELINE_LEFT);
         setTop(head);
-        books.getStyleClass().addAll("place", "gap-l");
+        books.getStyleClass().add("gap-l");
         ScrollPane scroll = new ScrollPane(books);
         scroll.setFitToWidth(true);
-        setCenter(scroll);
+        scroll.setHbarPolicy(ScrollPane.ScrollBarPolicy.NEVER);
+        VBox.setVgrow(scroll, Priority.ALWAYS);
+        VBox place = new VBox(scroll);
+        place.getStyleClass().add("place");
+        setCenter(place);
         room.pagesProperty().addListener((p, before, now) -> show(now));
         addEventFilter(KeyEvent.KEY_PRESSED, e -> {
             if (e.getCode() != KeyCode.ESCAPE) return;
@@ -88,25 +94,32 @@ public final class LogbookView extends BorderPane {
         for (LogbookRoom.Line l : pages.lines())
             grid.addRow(
                     grid.getRowCount(),
-                    Say.label(l.on().map(Object::toString).orElse("")),
+                    whole(l.on().map(Object::toString).orElse("")),
                     batch(l),
-                    Say.label(l.title()),
-                    Say.label(l.who()),
-                    Say.label(l.state()),
-                    Say.label(l.landing(), "logbook-landing"),
+                    whole(l.title()),
+                    whole(l.who()),
+                    whole(l.state()),
+                    whole(l.landing(), "logbook-landing"),
                     Say.wrapped(l.verdict()));
         box.getChildren().add(grid);
         return box;
     }
 
     private Node batch(LogbookRoom.Line l) {
-        if (l.file().isEmpty()) return Say.label(l.batch());
+        if (l.file().isEmpty()) return whole(l.batch());
         return new Word(l.batch(), () -> openBatch.accept(l.file().get()))
                 .named("open the batch " + l.batch())
                 .styled("strong");
     }
 
+    /** Text that is never cut; the last column gives way. */
+    private static Label whole(String text, String... classes) {
+        Label label = Say.label(text, classes);
+        label.setMinWidth(USE_PREF_SIZE);
+        return label;
+    }
+
     private static Node quiet(String text) {
-        return Say.label(text, "quiet", "small");
+        return whole(text, "quiet", "small");
     }
 }

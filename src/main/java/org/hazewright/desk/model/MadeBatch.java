@@ -161,7 +161,12 @@ public final class MadeBatch {
             double before = update.before().u(f);
             double after = update.after().u(f);
             if (f.kind() == Factor.Kind.METHOD || !(before > 0) || after > 0.9 * before) continue;
-            beliefs.add(new Belief(f.name(), f.words(), update.after().mean(f), before, after));
+            beliefs.add(new Belief(
+                    f.name(),
+                    Words.named(f.words(), batch.plan()),
+                    update.after().mean(f),
+                    before,
+                    after));
         }
         return new Seen(landing, chance, Optional.of(verdict), beliefs, update.after());
     }

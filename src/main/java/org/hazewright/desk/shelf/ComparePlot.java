@@ -38,7 +38,7 @@ final class ComparePlot {
     void draw(Pen pen) {
         double left = 4.2 * em;
         double right = w - 1.4 * em;
-        double top = 0.3 * em;
+        double top = 0.7 * em;
         double bottom = h - 2.4 * em;
         double most = 0;
         double least = Double.POSITIVE_INFINITY;
