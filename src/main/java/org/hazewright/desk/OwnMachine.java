@@ -41,12 +41,9 @@ final class OwnMachine {
             Process window = new ProcessBuilder(command(java.get(), given, shelfFolder, first))
                     .inheritIO()
                     .start();
-            return OptionalInt.of(window.waitFor());
+            return OptionalInt.of(window.onExit().join().exitValue());
         } catch (IOException none) {
             return OptionalInt.empty();
-        } catch (InterruptedException e) {
-            Thread.currentThread().interrupt();
-            return OptionalInt.of(0);
         }
     }
 
