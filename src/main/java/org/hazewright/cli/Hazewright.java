@@ -8,6 +8,7 @@ import java.util.Collection;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.concurrent.Callable;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 import org.hazewright.desk.Opening;
@@ -45,7 +46,7 @@ import picocli.CommandLine.Spec;
             "Exit status: 0 done; 2 input refused; 3 done, but no recipe from this shelf meets every",
             "tolerance (the closest is still written); 4 output could not be written.",
         })
-public final class Hazewright implements Runnable {
+public final class Hazewright implements Callable<Integer> {
     /** Exit statuses; 1 is a fault of the program itself. */
     static final int DONE = 0;
 
@@ -92,14 +93,14 @@ public final class Hazewright implements Runnable {
 
     /** Without a command: opens the window. */
     @Override
-    public void run() {
+    public Integer call() {
         if (file != null && !file.toString().endsWith(".toml"))
             throw new CommandLine.ParameterException(spec.commandLine(), noCommand());
         if (file != null && !Files.isRegularFile(file))
             throw new Refusal("There is no file " + file + "; name a brief, a recipe or a batch.");
         Shared shelf = new Shared();
         shelf.ingredients = ingredients;
-        Opening.open(Optional.ofNullable(shelf.shelfFolder()), Optional.ofNullable(file));
+        return Opening.open(Optional.ofNullable(shelf.shelfFolder()), Optional.ofNullable(file));
     }
 
     private String noCommand() {

@@ -28,6 +28,8 @@ interface Deeds {
 
     void shelf();
 
+    void logbook();
+
     void dark(boolean yes);
 
     void keys();

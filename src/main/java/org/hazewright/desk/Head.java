@@ -62,7 +62,16 @@ final class Head extends HBox {
                         () -> desk.solving().shownProperty().get() == null,
                         desk.solving().shownProperty()));
         state.setMinWidth(Region.USE_PREF_SIZE);
-        getChildren().addAll(title, state, busy(), Say.spring(), file, new Word("Shelf", deeds::shelf), balance);
+        getChildren()
+                .addAll(
+                        title,
+                        state,
+                        busy(),
+                        Say.spring(),
+                        file,
+                        new Word("Shelf", deeds::shelf),
+                        new Word("Logbook", deeds::logbook),
+                        balance);
         desk.solving().shownProperty().addListener((p, before, now) -> state(now));
         desk.solving()
                 .problemProperty()

@@ -2,6 +2,7 @@ package org.hazewright.desk;
 
 import java.nio.file.Path;
 import java.util.Optional;
+import java.util.OptionalInt;
 import java.util.function.Consumer;
 import javafx.application.Application;
 import javafx.application.Platform;
@@ -10,11 +11,15 @@ import org.hazewright.desk.look.Look;
 import org.hazewright.desk.model.Desk;
 import org.hazewright.desk.model.Remembered;
 import org.hazewright.desk.model.Work;
+import org.hazewright.optics.Refusal;
 
 /** Opens the window and comes back when it is closed. */
 public final class Opening {
     /** The desk waits here for the toolkit: both begin at once, and the search runs while the toolkit starts. */
     private static Desk desk;
+
+    private static final String NO_DISPLAY =
+            "There is no display to open the window on. Start it on a desktop, or work with the commands: hazewright --help lists them.";
 
     private static Work work;
     private static Waiting ui;
@@ -22,9 +27,16 @@ public final class Opening {
 
     private Opening() {}
 
-    /** Works from the shelf of a folder, or with nothing from that of the program; begins with a file, or the demo. */
-    public static void open(Optional<Path> shelfFolder, Optional<Path> first) {
-        open(shelfFolder, first, Remembered.in(Remembered.usualFolder(), Remembered.usualWorkFolder()));
+    /** Works from the shelf of a folder, or with nothing from that of the program; begins with a file, or the demo. Gives the exit status. */
+    public static int open(Optional<Path> shelfFolder, Optional<Path> first) {
+        OptionalInt elsewhere = OwnMachine.run(shelfFolder, first);
+        if (elsewhere.isPresent()) return elsewhere.getAsInt();
+        try {
+            open(shelfFolder, first, Remembered.in(Remembered.usualFolder(), Remembered.usualWorkFolder()));
+        } catch (UnsupportedOperationException none) {
+            throw new Refusal(NO_DISPLAY);
+        }
+        return 0;
     }
 
     static void open(Optional<Path> shelfFolder, Optional<Path> first, Remembered remembered) {
@@ -38,7 +50,9 @@ public final class Opening {
     /** The shelf that a person made their own. */
     private static Optional<Path> kept(Remembered remembered) {
         String folder = remembered.text("shelf", "");
-        return folder.isEmpty() ? Optional.empty() : Optional.of(Path.of(folder)).filter(java.nio.file.Files::isDirectory);
+        return folder.isEmpty()
+                ? Optional.empty()
+                : Optional.of(Path.of(folder)).filter(java.nio.file.Files::isDirectory);
     }
 
     /** Shows the window to someone when it opens: for measuring. */
@@ -79,7 +93,8 @@ public final class Opening {
         @Override
         public void start(Stage stage) {
             Window window = new Window(stage, desk, new Look(), Optional.empty());
-            window.opensOutside(path -> getHostServices().showDocument(path.toUri().toString()));
+            window.opensOutside(
+                    path -> getHostServices().showDocument(path.toUri().toString()));
             ui.begin();
             window.show();
             watcher.accept(window);

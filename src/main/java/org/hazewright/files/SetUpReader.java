@@ -10,12 +10,12 @@ import java.util.List;
 import java.util.Set;
 import java.util.stream.Stream;
 import org.hazewright.optics.Refusal;
-import org.hazewright.transport.Convention;
-import org.hazewright.transport.Response;
 import org.hazewright.reading.SetUp;
 import org.hazewright.reading.SetUp.Kind;
-import org.hazewright.transport.TimeAxis;
 import org.hazewright.shelf.Nearest;
+import org.hazewright.transport.Convention;
+import org.hazewright.transport.Response;
+import org.hazewright.transport.TimeAxis;
 
 /**
  * A set-up file, {@code NAME.setup.toml}, to a {@link SetUp}; and the set-ups that come with the program, by name.

@@ -24,7 +24,9 @@ public final class ColdStart {
             boolean[] said = {false};
             scene.addPostLayoutPulseListener(() -> {
                 var solving = window.desk().solving();
-                if (said[0] || solving.shownProperty().get() == null || solving.curvesProperty().get() == null) return;
+                if (said[0]
+                        || solving.shownProperty().get() == null
+                        || solving.curvesProperty().get() == null) return;
                 said[0] = true;
                 say("solved and drawn after %.2f s", since());
                 if (idle) idle();
@@ -36,7 +38,9 @@ public final class ColdStart {
     }
 
     private static double since() {
-        return (System.currentTimeMillis() - ManagementFactory.getRuntimeMXBean().getStartTime()) / 1000.0;
+        return (System.currentTimeMillis()
+                        - ManagementFactory.getRuntimeMXBean().getStartTime())
+                / 1000.0;
     }
 
     private static void idle() {

@@ -24,6 +24,8 @@ class DeskArchitectureTest {
             .that()
             .haveSimpleName("SpectraPlot")
             .or()
+            .haveSimpleName("SharesBelow")
+            .or()
             .haveSimpleName("ComparePlot")
             .or()
             .haveSimpleName("RecipePaper")

@@ -29,7 +29,9 @@ public final class Screenshots {
         Path out = Path.of(args.length > 0 ? args[0] : "target/screenshots");
         Files.createDirectories(out);
         Screenshots s = new Screenshots(out);
-        double[][] sizes = args.length > 1 && args[1].equals("4k") ? new double[][] {{3840, 2160}} : new double[][] {{1280, 720}, {1920, 1080}};
+        double[][] sizes = args.length > 1 && args[1].equals("4k")
+                ? new double[][] {{3840, 2160}}
+                : new double[][] {{1280, 720}, {1920, 1080}};
         try {
             for (double[] size : sizes) s.size(size[0], size[1]);
         } finally {
@@ -62,6 +64,7 @@ public final class Screenshots {
             Stagehand.ui(() -> window.look().paletteProperty().set(p));
             shoot(window, "shelf", p, w);
         }
+        Stagehand.ui(window::closeShelf);
         Stagehand.ui(() -> window.desk().standAtBalance());
         Stagehand.until(
                 "the balance", () -> window.desk().weighingProperty().get().isPresent());
@@ -105,6 +108,17 @@ public final class Screenshots {
             Stagehand.ui(() -> window.look().paletteProperty().set(p));
             shoot(window, "batch", p, w);
         }
+        Stagehand.ui(() -> {
+            window.desk().leaveBatch();
+            window.openLogbook();
+        });
+        Stagehand.until(
+                "the logbook",
+                () -> window.desk().logbookRoom().pagesProperty().get().isPresent());
+        for (Palette p : new Palette[] {Palette.LIGHT, Palette.DARK}) {
+            Stagehand.ui(() -> window.look().paletteProperty().set(p));
+            shoot(window, "logbook", p, w);
+        }
         Stagehand.ui(() -> window.stage().close());
         trouble(w, h);
     }
@@ -114,7 +128,11 @@ public final class Screenshots {
         Path memory = Files.createTempDirectory("memory");
         Path file = memory.resolve("window.brief.toml");
         BriefWriter.write(
-                file, BriefReader.readShipped("clear-window"), List.of(), TissueSpectra.of(null), SafeFile.Overwrite.NEVER);
+                file,
+                BriefReader.readShipped("clear-window"),
+                List.of(),
+                TissueSpectra.of(null),
+                SafeFile.Overwrite.NEVER);
         Window window = Stagehand.open(memory, w, h, Optional.of(file), Optional.empty());
         Stagehand.untilSettled(window);
         Stagehand.ui(() -> {

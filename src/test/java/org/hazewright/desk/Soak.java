@@ -31,9 +31,10 @@ public final class Soak {
                 switch (random.nextInt(10)) {
                     case 0 -> shelf(window, random);
                     case 1 -> balance(window);
-                    case 2 -> Stagehand.ui(() -> {
-                        for (int k = 0; k < 5; k++) window.desk().edits().undo();
-                    });
+                    case 2 ->
+                        Stagehand.ui(() -> {
+                            for (int k = 0; k < 5; k++) window.desk().edits().undo();
+                        });
                     default -> drag(window, random);
                 }
                 deeds++;
@@ -79,7 +80,8 @@ public final class Soak {
     private static void balance(Window window) throws InterruptedException {
         Stagehand.untilSettled(window);
         Stagehand.ui(() -> window.desk().standAtBalance());
-        Stagehand.until("the balance", () -> window.desk().weighingProperty().get().isPresent());
+        Stagehand.until(
+                "the balance", () -> window.desk().weighingProperty().get().isPresent());
         for (int k = 0; k < 10; k++) {
             Stagehand.ui(() -> {
                 AtBalance at = window.desk().weighingProperty().get().orElseThrow();
@@ -95,7 +97,11 @@ public final class Soak {
         var heap = ManagementFactory.getMemoryMXBean().getHeapMemoryUsage();
         Path status = Path.of("/proc/self/status");
         String resident = Files.exists(status)
-                ? Files.readAllLines(status).stream().filter(l -> l.startsWith("VmRSS")).findFirst().orElse("").replaceAll("\\s+", " ")
+                ? Files.readAllLines(status).stream()
+                        .filter(l -> l.startsWith("VmRSS"))
+                        .findFirst()
+                        .orElse("")
+                        .replaceAll("\\s+", " ")
                 : "";
         System.out.println(String.format(
                 Locale.ROOT,

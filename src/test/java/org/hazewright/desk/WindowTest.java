@@ -363,6 +363,195 @@ class WindowTest {
         Stagehand.pulse();
     }
 
+    /** Only what stands on the screen is read and pressed: no file, no menu, no key but Enter. */
+    @Test
+    void aStrangerDesignsTheDemoWeighsItAndFindsItInTheLogbook() {
+        open(Optional.empty());
+        focus(wantedField(690, Point.Quantity.MUA));
+        hand.typeOver("0.12");
+        hand.press(KeyCode.ENTER);
+        Stagehand.untilSettled(window);
+        assertTrue(said("headline").startsWith("Lands inside every tolerance"), said("headline"));
+        hand.click(button("Stand at the balance"));
+        Stagehand.until(
+                "the balance", () -> window.desk().weighingProperty().get().isPresent());
+        Stagehand.pulse();
+        int steps = 0;
+        while (all(n -> n instanceof Button b
+                        && b.getText() != null
+                        && b.getText().startsWith("Record this batch"))
+                .isEmpty()) {
+            assertTrue(++steps < 100, "the steps do not end");
+            List<Node> grams = all(n -> n.getStyleClass().contains("step-grams"));
+            if (!grams.isEmpty()) hand.type(((Labeled) grams.get(0)).getText());
+            hand.press(KeyCode.ENTER);
+        }
+        assertTrue(steps >= 7, "seven things are weighed");
+        hand.click(button("Record this batch"));
+        Stagehand.until("the batch", () -> window.desk().madeProperty().get().isPresent());
+        Stagehand.pulse();
+        hand.click(button("back to the desk"));
+        hand.click(button("Logbook"));
+        Stagehand.until(
+                "the logbook",
+                () -> window.desk().logbookRoom().pagesProperty().get().isPresent());
+        Stagehand.pulse();
+        assertTrue(shows("Forearm block"), "the batch's title is not in the logbook");
+        String landing = said("logbook-landing");
+        assertTrue(landing.matches("lands \\d+ times in 100"), landing);
+        hand.click(button("forearm-block-" + java.time.LocalDate.now()));
+        Stagehand.until("the batch", () -> window.desk().madeProperty().get().isPresent());
+        Stagehand.pulse();
+        assertTrue(shows("Batch forearm-block-" + java.time.LocalDate.now()));
+    }
+
+    private String said(String styleClass) {
+        return ((Labeled) all(n -> n.getStyleClass().contains(styleClass)).get(0)).getText();
+    }
+
+    private boolean shows(String text) {
+        return !all(n -> n instanceof Labeled l && text.equals(l.getText())).isEmpty();
+    }
+
+    @Test
+    void stocksInHandAreKeptEditedAndTakenBack() throws Exception {
+        Path file = bath();
+        Files.writeString(file, Files.readString(file) + """
+
+                        [[stock_in_hand]]
+                        id = "ink-1-20"
+                        ingredient = "ink-demo"
+                        ingredient_g = 1
+                        diluent = "water"
+                        diluent_g = 19
+                        """);
+        open(Optional.of(file));
+        assertEquals(1, draft().stocks().size());
+        assertTrue(
+                shown().recipe().stocks().stream().anyMatch(s -> s.id().equals("ink-1-20")),
+                "the recipe does not use what stands ready");
+        hand.click(button("ink-1-20"));
+        hand.click(all(n -> "remove the stock ink-1-20".equals(n.getAccessibleText()))
+                .get(0));
+        assertTrue(draft().stocks().isEmpty());
+        hand.press(KeyCode.CONTROL, KeyCode.Z);
+        assertEquals("ink-1-20", draft().stocks().get(0).id());
+        focus(wantedField(690, Point.Quantity.MUA));
+        hand.typeOver("0.11");
+        hand.press(KeyCode.ENTER);
+        Stagehand.untilSettled(window);
+        hand.press(KeyCode.CONTROL, KeyCode.S);
+        Stagehand.until("saved", () -> !window.desk().papers().changedProperty().get());
+        assertEquals(
+                List.of("ink-1-20"),
+                BriefReader.read(file, TissueSpectra.of(null)).stocksInHand().stream()
+                        .map(org.hazewright.brief.StockInHand::id)
+                        .toList());
+    }
+
+    private void drop(Path file) {
+        assertTrue(Stagehand.onUi(() -> window.drop(List.of(file.toFile()))));
+    }
+
+    @Test
+    void droppedFilesOpenAsWhatTheyAre() throws Exception {
+        Path file = bath();
+        open(Optional.empty());
+        assertFalse(Stagehand.onUi(() -> window.drop(List.of())));
+        drop(file);
+        Stagehand.until("the brief", () -> window.desk().edits().now().name().equals("bath"));
+        Stagehand.untilSettled(window);
+        hand.press(KeyCode.CONTROL, KeyCode.S);
+        Path recipe = folder.resolve("bath.recipe.toml");
+        Stagehand.until("saved", () -> Files.exists(recipe));
+        assertEquals(
+                file.toAbsolutePath(),
+                Stagehand.onUi(() -> window.desk().remembered().recent().get(0)));
+
+        Path table = folder.resolve("wanted.csv");
+        Files.writeString(table, "wavelength_nm,mua_per_cm,musp_per_cm\n700,0.2,11\n800,0.15,9\n");
+        drop(table);
+        Stagehand.until("the table", () -> window.desk().edits().now().row(700).isPresent());
+        hand.press(KeyCode.CONTROL, KeyCode.Z);
+        assertTrue(draft().row(690).isPresent(), "undo brings the targets back");
+        Stagehand.untilSettled(window);
+
+        drop(recipe);
+        Stagehand.until(
+                "the recipe's brief",
+                () -> window.desk().papers().openProperty().get().file().isPresent());
+        Path sheet = folder.resolve("bath.xlsx");
+        chooser.next(sheet);
+        Stagehand.untilSettled(window);
+        Stagehand.ui(button("Save sheet")::fire);
+        Stagehand.until("the sheet", () -> Files.exists(sheet));
+        drop(sheet);
+        Stagehand.until(
+                "an answer to a sheet that nobody filled in, or its batch",
+                () -> window.desk().weighingProperty().get().isPresent()
+                        || window.desk().madeProperty().get().isPresent()
+                        || window.desk().notices().all().stream()
+                                .anyMatch(n -> n.strand().equals("open")));
+        drop(folder.resolve("holiday.mp3"));
+        assertTrue(window.desk().notices().all().stream().anyMatch(n -> n.text().contains("holiday.mp3")));
+    }
+
+    /** Seven dilutions of a bottle of invented strength; Beer and Lambert's law gives that strength back by hand. */
+    @Test
+    void aDilutionSeriesMakesALot() throws Exception {
+        StringBuilder rows = new StringBuilder("mass_fraction,path_mm,wavelength_nm,absorbance,u\n");
+        for (int nm = 600; nm <= 900; nm += 50)
+            for (int k = 0; k <= 6; k++) {
+                double absorbance = 0.12 * k * Math.pow(nm / 600.0, -1.2) + 0.0004 * ((k * 7 + nm / 50) % 3 - 1);
+                rows.append(String.format(java.util.Locale.ROOT, "%.6f,10,%d,%.5f,0.001%n", 2e-5 * k, nm, absorbance));
+            }
+        Path series = folder.resolve("series.csv");
+        Files.writeString(series, rows.toString());
+        open(Optional.empty());
+        Path own = folder.resolve("shelf");
+        Stagehand.ui(() -> window.desk().adding().makeOwn(own));
+        Stagehand.until("a shelf of one's own", () -> window.desk().adding().own());
+        Stagehand.untilSettled(window);
+        Stagehand.ui(() -> {
+            window.openShelf();
+            window.desk()
+                    .shelfRoom()
+                    .choose(window.desk()
+                            .shelfProperty()
+                            .get()
+                            .shelf()
+                            .orElseThrow()
+                            .require("ink-demo"));
+        });
+        Stagehand.pulse();
+        Stagehand.ui(button("add a lot of it")::fire);
+        Stagehand.pulse();
+        focus(all(n -> "lot: number".equals(n.getAccessibleText())).get(0));
+        hand.type("07");
+        chooser.next(series);
+        Stagehand.ui(button("measured as a dilution series")::fire);
+        Stagehand.until(
+                "the fit", () -> window.desk().adding().fittedProperty().get().isPresent());
+        Stagehand.pulse();
+        Stagehand.ui(button("Put this measured lot on the shelf")::fire);
+        Stagehand.until(
+                "the lot",
+                () -> window.desk().shelfProperty().get().shelf().stream()
+                        .flatMap(s -> s.ingredients().stream())
+                        .anyMatch(i ->
+                                i.lot().filter(l -> l.number().equals("07")).isPresent()));
+        var lot = window.desk().shelfProperty().get().shelf().orElseThrow().ingredients().stream()
+                .filter(i -> i.lot().filter(l -> l.number().equals("07")).isPresent())
+                .findFirst()
+                .orElseThrow();
+        // Beer and Lambert: absorbance × ln 10 / path over concentration; 0.12 per 2e-5 by mass in water of 0.998 g/mL,
+        // 1 cm
+        double slope = 0.12 * Math.log(10) / (2e-5 * 0.998);
+        var at = org.hazewright.mixture.MassSpecific.of(lot, 600, 22, 1.333, 0);
+        double extinction = at.kappaA() / (1 - lot.absorption().orElseThrow().albedo());
+        assertEquals(slope, extinction, 0.02 * slope);
+    }
+
     @Test
     void sheetsAndPicturesAreWritten() throws Exception {
         open(Optional.of(bath()));
@@ -414,6 +603,12 @@ class WindowTest {
         Stagehand.ui(() -> window.openShelf());
         Stagehand.pulse();
         named("shelf");
+        Stagehand.ui(() -> {
+            window.closeShelf();
+            window.openLogbook();
+        });
+        Stagehand.pulse();
+        named("logbook");
     }
 
     private void named(String where) {

@@ -125,8 +125,8 @@ class SuspectsTest {
         Verdict close = Verdict.of(Factors.none(), one);
         double off = 0.01 * mua / Math.hypot(close.rows().get(0).uPredictedPerCm(), 0.01 * mua);
         assertEquals(
-                "Measured and predicted agree: one value, off by " + Figures.number(off)
-                        + " standard uncertainties (probability " + Figures.probability(upper(off * off, 1)) + ").",
+                "Measured and predicted agree: one value, off by " + Rounded.number(off)
+                        + " standard uncertainties (probability " + Rounded.probability(upper(off * off, 1)) + ").",
                 close.sentence());
         Verdict far = Verdict.of(Factors.none(), batch(new Random(3), 1.3, 0.6, 620, 700, 780, 860));
         assertEquals(Verdict.Outcome.NO_SINGLE_FACTOR, far.outcome(), far.sentence());
@@ -134,7 +134,7 @@ class SuspectsTest {
         assertTrue(
                 far.sentence()
                         .endsWith("No single ingredient explains it. The nearest, "
-                                + nearest.factor().words() + ", leaves χ² " + Figures.number(nearest.left())
+                                + nearest.factor().words() + ", leaves χ² " + Rounded.number(nearest.left())
                                 + ". Perhaps a slip at the balance, something not recorded, or stated uncertainties that"
                                 + " are too small."),
                 far.sentence());

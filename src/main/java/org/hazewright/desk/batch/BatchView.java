@@ -48,7 +48,8 @@ public final class BatchView extends BorderPane {
         table = new MeasuredTable(made, chooser);
         List.of(weighed, says, puts, teaches).forEach(v -> v.getStyleClass().add("gap-s"));
         setTop(head(leave));
-        boolean heated = made.batchProperty().get().plan().base().making().meltC().isPresent();
+        boolean heated =
+                made.batchProperty().get().plan().base().making().meltC().isPresent();
         Node heating = heating();
         Say.show(heating, heated);
         setLeft(column("batch-left", "side-left", Say.place("Weighed"), weighed, heating, who()));
@@ -216,7 +217,8 @@ public final class BatchView extends BorderPane {
 
     /** Asks for a lot's number to keep a bottle's new figures under. */
     private Node keep(String ingredient) {
-        Field number = new Field(() -> "", text -> text.isBlank() ? Optional.empty() : made.learn(ingredient, text), false)
+        Field number = new Field(
+                        () -> "", text -> text.isBlank() ? Optional.empty() : made.learn(ingredient, text), false)
                 .named("keep what was learned of " + ingredient + " as a lot: its number")
                 .styled("boxed")
                 .columns(7);
@@ -237,11 +239,14 @@ public final class BatchView extends BorderPane {
         take.setOnAction(e -> made.heating(typed[0], typed[1], typed[2]));
         FlowPane line = new FlowPane(before, after, back, take);
         line.getStyleClass().add("cards");
-        VBox box = new VBox(Say.wrapped("Vessel with lid before and after heating, and water given back, in g", "quiet"), line);
+        VBox box = new VBox(
+                Say.wrapped("Vessel with lid before and after heating, and water given back, in g", "quiet"), line);
         box.getStyleClass().add("gap-xs");
         Label now = Say.wrapped("", "quiet", "small");
         Runnable tell = () -> {
-            now.setText(made.batchProperty().get().heating()
+            now.setText(made.batchProperty()
+                    .get()
+                    .heating()
                     .map(h -> "lost " + Figures.significant(h.lostG(), 4) + " g, missing in the end "
                             + Figures.significant(h.missingG(), 3) + " g")
                     .orElse(""));
@@ -254,10 +259,13 @@ public final class BatchView extends BorderPane {
     }
 
     private static Field gram(String[] typed, int k, String name, String prompt) {
-        Field f = new Field(() -> typed[k], text -> {
-                    typed[k] = text;
-                    return Optional.empty();
-                }, true)
+        Field f = new Field(
+                        () -> typed[k],
+                        text -> {
+                            typed[k] = text;
+                            return Optional.empty();
+                        },
+                        true)
                 .named(name)
                 .styled("boxed")
                 .columns(6);

@@ -73,8 +73,10 @@ public final class MeasuredTable extends VBox {
         Button take = new Button("Take these values");
         take.getStyleClass().setAll("plain");
         take.setOnAction(e -> take());
-        Word fromFile = new Word("from a file…", () -> chooser.open("Measured values", "Tables", ".csv", ".txt", ".xlsx")
-                .ifPresent(p -> made.measuredFrom(p, method, instrument)));
+        Word fromFile = new Word(
+                "from a file…",
+                () -> chooser.open("Measured values", "Tables", ".csv", ".txt", ".xlsx")
+                        .ifPresent(p -> made.measuredFrom(p, method, instrument)));
         FlowPane line = new FlowPane(how, with, take, fromFile);
         line.getStyleClass().add("cards");
         getChildren().addAll(grid, line);

@@ -40,6 +40,7 @@ public final class BriefPlace extends VBox {
     private final List<Field> fields = new ArrayList<>();
     private final MenuButton base = new MenuButton();
     private final Word balance = new Word("", () -> {});
+    private final Word inHand = new Word("", () -> {});
     private final TargetTable table;
     private final TissuePanel tissuePanel;
     private final VBox balancePanel = new VBox();
@@ -103,8 +104,10 @@ public final class BriefPlace extends VBox {
         Word filling = new Word("", () -> Say.show(moulds, !moulds.isVisible()));
         filling.getStyleClass().add("small");
         filling.setMinWidth(0);
-        desk.edits().nowProperty().addListener((p, before, now) -> filling.setText(
-                now == null || now.moulds().isEmpty() ? "for moulds…" : "for " + moulds(now.moulds())));
+        desk.edits()
+                .nowProperty()
+                .addListener((p, before, now) -> filling.setText(
+                        now == null || now.moulds().isEmpty() ? "for moulds…" : "for " + moulds(now.moulds())));
         grid.add(filling, 1, 2);
         grid.add(moulds, 0, 8, 2, 1);
         grid.add(new ErrorLine(batch, overage), 0, 3, 2, 1);
@@ -121,6 +124,14 @@ public final class BriefPlace extends VBox {
         grid.addRow(6, Say.quiet("Balance"), balance);
         balancePanel();
         grid.add(balancePanel, 0, 7, 2, 1);
+
+        StockPanel stocks = new StockPanel(desk);
+        Say.show(stocks, false);
+        inHand.setOnAction(e -> Say.show(stocks, !stocks.isVisible()));
+        inHand.getStyleClass().add("strong-text");
+        inHand.setMinWidth(0);
+        grid.addRow(9, Say.quiet("Stocks"), inHand);
+        grid.add(stocks, 0, 10, 2, 1);
         return grid;
     }
 
@@ -191,6 +202,8 @@ public final class BriefPlace extends VBox {
                 + Figures.plain(b.capacityG()) + " g");
         balance.setAccessibleText("Balance: last digit " + small(b.readabilityG()) + ", smallest load "
                 + small(b.smallestLoadG()) + ", capacity " + Figures.plain(b.capacityG()) + " g; press to change");
+        inHand.setText(StockPanel.inWords(draft));
+        inHand.setAccessibleText("Stocks in hand: " + inHand.getText() + "; press to change");
         Optional<Shelf> shelf = desk.shelfProperty().get().shelf();
         String names = draft.bases().stream()
                 .map(id -> shelf.flatMap(s -> s.find(id)).map(Words::shortName).orElse(id))

@@ -64,18 +64,29 @@ final class MouldPanel extends VBox {
 
     private VBox row(int k, Mould.Shape shape) {
         boolean box = shape == Mould.Shape.BOX;
-        Field count = field(k, Mould::count, (m, v) -> new Mould(m.shape(), m.lengthMm(), m.widthMm(), m.heightMm(), whole(v)), "count");
+        Field count = field(
+                k,
+                Mould::count,
+                (m, v) -> new Mould(m.shape(), m.lengthMm(), m.widthMm(), m.heightMm(), whole(v)),
+                "count");
         Field length = field(
                 k,
                 Mould::lengthMm,
                 (m, v) -> new Mould(m.shape(), v, box ? m.widthMm() : v, m.heightMm(), m.count()),
                 box ? "length in mm" : "diameter in mm");
-        Field width = field(k, Mould::widthMm, (m, v) -> new Mould(m.shape(), m.lengthMm(), v, m.heightMm(), m.count()), "width in mm");
-        Field height = field(k, Mould::heightMm, (m, v) -> new Mould(m.shape(), m.lengthMm(), m.widthMm(), v, m.count()), "height in mm");
+        Field width = field(
+                k,
+                Mould::widthMm,
+                (m, v) -> new Mould(m.shape(), m.lengthMm(), v, m.heightMm(), m.count()),
+                "width in mm");
+        Field height = field(
+                k,
+                Mould::heightMm,
+                (m, v) -> new Mould(m.shape(), m.lengthMm(), m.widthMm(), v, m.count()),
+                "height in mm");
         HBox line = new HBox(count, Say.quiet(box ? "boxes" : "cylinders ⌀"), length);
         if (box) line.getChildren().addAll(Say.quiet("×"), width);
-        line.getChildren()
-                .addAll(Say.quiet("×"), height, new Word("×", () -> remove(k)).named("remove this mould"));
+        line.getChildren().addAll(Say.quiet("×"), height, new Word("×", () -> remove(k)).named("remove this mould"));
         line.setAlignment(Pos.BASELINE_LEFT);
         return new VBox(line, new ErrorLine(count, length, width, height));
     }

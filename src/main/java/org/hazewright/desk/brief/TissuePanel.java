@@ -65,7 +65,11 @@ final class TissuePanel extends VBox {
         Label of = Say.label(unit, "quiet", "small");
         name.setMinWidth(USE_PREF_SIZE);
         of.setMinWidth(USE_PREF_SIZE);
-        grid.addRow(at, name, field, of);
+        grid.addRow(at, name, field);
+        if (what.equals("wavelengths")) {
+            name.setText("at, nm");
+            GridPane.setColumnSpan(field, 2);
+        } else grid.add(of, 2, at);
         grid.add(new ErrorLine(field), 0, at + 1, 3, 1);
     }
 

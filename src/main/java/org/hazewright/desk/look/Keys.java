@@ -13,7 +13,7 @@ public final class Keys {
             new Key("F6, Shift+F6", "next place, place before"),
             new Key("Tab, Shift+Tab", "next field, field before"),
             new Key("Ctrl+Enter", "stand at the balance"),
-            new Key("Ctrl+L", "the shelf"),
+            new Key("Ctrl+L, Ctrl+J", "the shelf, the logbook"),
             new Key("Esc", "back to the desk; in a field: the value as it was"),
             new Key("← → in the spectra", "choose a target"),
             new Key("↑ ↓ in the spectra", "move what is wanted by 1 %, with Shift by 0.1 %"),

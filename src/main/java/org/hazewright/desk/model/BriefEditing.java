@@ -11,6 +11,7 @@ import org.hazewright.brief.Balance;
 import org.hazewright.brief.Mould;
 import org.hazewright.brief.Point;
 import org.hazewright.brief.SearchLimits;
+import org.hazewright.brief.StockInHand;
 import org.hazewright.brief.Target;
 import org.hazewright.brief.Tissue;
 import org.hazewright.optics.Figures;
@@ -164,8 +165,10 @@ public final class BriefEditing {
 
     /** Takes the targets of a table in place of those that are there. */
     public Optional<String> targets(List<Target> targets, String from) {
-        return attempt("targets from " + from, "", d -> d.withRows(targets.stream().map(Row::of).toList())
-                .withTissue(Optional.empty()));
+        return attempt(
+                "targets from " + from,
+                "",
+                d -> d.withRows(targets.stream().map(Row::of).toList()).withTissue(Optional.empty()));
     }
 
     // tissue-like values
@@ -302,6 +305,37 @@ public final class BriefEditing {
 
     private static double grams(String text) {
         return text.strip().endsWith("mg") ? Typed.number(text, "mg") / 1000 : Typed.number(text, "g");
+    }
+
+    // stocks in hand
+
+    /** Takes a stock in hand away. */
+    public Optional<String> removeStock(String id) {
+        return attempt(
+                "the stock " + id,
+                "",
+                d -> d.withStocks(
+                        d.stocks().stream().filter(s -> !s.id().equals(id)).toList()));
+    }
+
+    /** Puts a stock in hand, all as typed: {@code of} is an ingredient's id or an earlier stock's, {@code diluent} an ingredient's. */
+    public Optional<String> addStock(String id, String of, String ofG, String diluent, String diluentG) {
+        return attempt("the stock " + id, "", d -> {
+            String name = id.strip();
+            if (!name.matches("[a-z0-9][a-z0-9-]*"))
+                throw new Refusal("Name the stock with small letters, digits and hyphens, such as ink-1-100.");
+            boolean diluted = d.stocks().stream().anyMatch(s -> s.id().equals(of));
+            StockInHand stock = new StockInHand(
+                    name,
+                    diluted ? Optional.empty() : Optional.of(of),
+                    diluted ? Optional.of(of) : Optional.empty(),
+                    grams(ofG),
+                    diluent,
+                    grams(diluentG));
+            List<StockInHand> more = new ArrayList<>(d.stocks());
+            more.add(stock);
+            return d.withStocks(more);
+        });
     }
 
     // other ways

@@ -18,11 +18,7 @@ import org.hazewright.brief.SearchLimits;
 import org.hazewright.brief.Tissue;
 import org.hazewright.files.BatchWriter;
 import org.hazewright.files.BriefReader;
-import org.hazewright.files.CoefficientTable;
-import org.hazewright.files.RecipeReader;
 import org.hazewright.files.SafeFile;
-import org.hazewright.mixture.Recipe;
-import org.hazewright.sheet.FilledIn;
 import org.hazewright.sheet.Logbook;
 import org.hazewright.sheet.RecipeSheet;
 import org.hazewright.shelf.Ingredient;
@@ -49,6 +45,9 @@ public final class Desk {
     private final Papers papers;
     private final Foreseeing foreseeing;
     private final ShelfRoom shelfRoom;
+    private final LogbookRoom logbookRoom;
+    private final Adding adding;
+    private final Incoming incoming;
     private final Work.Lane preparing;
     private final ReadOnlyObjectWrapper<Optional<MadeBatch>> made = new ReadOnlyObjectWrapper<>(Optional.empty());
     private final ReadOnlyObjectWrapper<Optional<AtBalance>> weighing = new ReadOnlyObjectWrapper<>(Optional.empty());
@@ -66,6 +65,9 @@ public final class Desk {
         edits.nowProperty().addListener((p, before, now) -> solve());
         foreseeing = new Foreseeing(this);
         shelfRoom = new ShelfRoom(this);
+        logbookRoom = new LogbookRoom(this);
+        adding = new Adding(this);
+        incoming = new Incoming(this, work);
     }
 
     private record Begun(ShelfState shelf, Brief brief) {}
@@ -133,6 +135,7 @@ public final class Desk {
                         Optional.empty(),
                         SearchLimits.USUAL,
                         Balance.USUAL,
+                        List.of(),
                         Optional.empty())
                 .brief(Optional.empty()));
     }
@@ -144,78 +147,6 @@ public final class Desk {
                 .map(Ingredient::id)
                 .findFirst()
                 .orElse("water");
-    }
-
-    private record FoundRecipe(Recipe recipe, Optional<Path> brief) {}
-
-    /** Opens the brief that a recipe answers to when it lies beside it; else a brief that wants what the recipe gives. */
-    private void openRecipe(Path file) {
-        if (shelf.get().shelf().isEmpty()) return;
-        Shelf on = shelf.get().shelf().get();
-        preparing.request(
-                (stop, progress) -> {
-                    Recipe recipe = RecipeReader.read(file, on);
-                    return new FoundRecipe(recipe, Recipes.briefBeside(file, recipe, papers.spectra()));
-                },
-                found -> {
-                    if (found.brief().isPresent()) {
-                        papers.open(found.brief().get());
-                        return;
-                    }
-                    remembered.used(file);
-                    papers.startWith(Recipes.asBrief(found.recipe(), Recipes.nameOf(file)));
-                    edits.edit(
-                            edits.now().withChosen(Optional.of(Shown.key(found.recipe()))),
-                            "keeping to the recipe's ingredients",
-                            "");
-                    notices.tell(
-                            Notice.told(
-                                    "open",
-                                    "No brief beside " + file.getFileName()
-                                            + " answers to it; the targets here are what it gives, and its ingredients are kept to."));
-                },
-                failure -> notices.tell(Notice.wrong("open", Papers.words(failure))));
-    }
-
-    /** Takes targets from a table of coefficients. */
-    private void openTable(Path file) {
-        if (edits.now() == null) return;
-        preparing.request(
-                (stop, progress) -> CoefficientTable.read(file, null),
-                table -> {
-                    String wrong = editing.targets(table.targets(0.05, 0.05), file.getFileName().toString())
-                            .orElse("");
-                    notices.tell(
-                            wrong.isEmpty()
-                                    ? Notice.told(
-                                            "open",
-                                            "Targets taken from " + file.getFileName() + ": "
-                                                    + String.join("; ", table.understood()) + ". Undo brings the old ones back.")
-                                    : Notice.wrong("open", wrong));
-                },
-                failure -> notices.tell(Notice.wrong("open", Papers.words(failure))));
-    }
-
-    /** Makes a batch of a sheet that was filled in at the balance; it must be the sheet of the recipe on the desk. */
-    private void openSheet(Path file) {
-        Shown shown = solving.shownProperty().get();
-        if (shown == null || shown.following() || shelf.get().shelf().isEmpty()) {
-            notices.tell(Notice.wrong("open", "A sheet belongs to a recipe; open its brief first."));
-            return;
-        }
-        Shelf on = shelf.get().shelf().get();
-        Path folder = papers.folder();
-        String name = edits.now().name();
-        preparing.request(
-                (stop, progress) -> {
-                    FilledIn sheet = FilledIn.read(file);
-                    Started fresh = Started.anew(shown, folder, name, remembered.text("who", ""), on);
-                    Batch batch = sheet.into(fresh.prepared().batch(), file);
-                    BatchWriter.write(fresh.log().file(), batch, SafeFile.Overwrite.NEVER);
-                    return fresh.log().file();
-                },
-                this::openBatch,
-                failure -> notices.tell(Notice.wrong("open", Papers.words(failure))));
     }
 
     // at the balance
@@ -244,21 +175,6 @@ public final class Desk {
                 },
                 this::turn,
                 failure -> notices.tell(Notice.wrong("balance", Papers.words(failure))));
-    }
-
-    private record Started(AtBalance.Prepared prepared, WeighingLog log) {
-        static Started again(WeighingLog log, Shelf on) {
-            return new Started(AtBalance.Prepared.of(log.batch(on), on, log.entries()), log);
-        }
-
-        static Started anew(Shown shown, Path folder, String name, String who, Shelf on) {
-            LocalDate today = LocalDate.now();
-            Path file = Recipes.freeName(folder, name + "-" + today, ".batch.toml");
-            String id = file.getFileName().toString().replace(".batch.toml", "");
-            Batch batch =
-                    Batch.open(id, shown.recipe(), Optional.of(shown.outlook().brief()), who, today);
-            return new Started(AtBalance.Prepared.of(batch, on, List.of()), new WeighingLog(file));
-        }
     }
 
     private void turn(Started started) {
@@ -294,7 +210,7 @@ public final class Desk {
     }
 
     /** Opens a batch's file: at the balance while it is being weighed, else as a batch that is made. */
-    private void openBatch(Path file) {
+    void openBatch(Path file) {
         if (shelf.get().shelf().isEmpty()) return;
         Shelf on = shelf.get().shelf().get();
         preparing.request(
@@ -390,17 +306,7 @@ public final class Desk {
 
     /** Opens a file by what its name says it is. */
     public void open(Path file) {
-        String name = file.getFileName().toString().toLowerCase(Locale.ROOT);
-        if (name.endsWith(".batch.toml")) openBatch(file);
-        else if (name.endsWith(".recipe.toml")) openRecipe(file);
-        else if (name.endsWith(".toml")) papers.open(file);
-        else if (name.endsWith(".csv") || name.endsWith(".tsv") || name.endsWith(".txt")) openTable(file);
-        else if (name.endsWith(".xlsx")) openSheet(file);
-        else
-            notices.tell(Notice.wrong(
-                    "open",
-                    file.getFileName() + " is none of the files that open here: a brief (.brief.toml), a recipe"
-                            + " (.recipe.toml), a batch (.batch.toml), a sheet that was filled in (.xlsx), or a table of targets (.csv)."));
+        incoming.open(file);
     }
 
     /** Spectra for tissue-like values and oximeters, read when first asked for; on any thread. */
@@ -417,7 +323,8 @@ public final class Desk {
 
     /** A way to see a file that was written; none where no other program can be asked. */
     List<Notice.Way> showing(Path file) {
-        return outside.map(o -> List.of(new Notice.Way("show it", () -> o.accept(file)))).orElse(List.of());
+        return outside.map(o -> List.of(new Notice.Way("show it", () -> o.accept(file))))
+                .orElse(List.of());
     }
 
     public Work work() {
@@ -454,6 +361,14 @@ public final class Desk {
 
     public ShelfRoom shelfRoom() {
         return shelfRoom;
+    }
+
+    public Adding adding() {
+        return adding;
+    }
+
+    public LogbookRoom logbookRoom() {
+        return logbookRoom;
     }
 
     public Foreseeing foreseeing() {

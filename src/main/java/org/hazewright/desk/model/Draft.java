@@ -8,6 +8,7 @@ import org.hazewright.brief.Balance;
 import org.hazewright.brief.Brief;
 import org.hazewright.brief.Mould;
 import org.hazewright.brief.SearchLimits;
+import org.hazewright.brief.StockInHand;
 import org.hazewright.brief.Tissue;
 import org.hazewright.optics.Figures;
 import org.hazewright.optics.Refusal;
@@ -18,6 +19,7 @@ import org.hazewright.optics.Refusal;
  *
  * @param rows by wavelength, each wavelength once
  * @param tissue the composition that rows were filled from, for editing it again
+ * @param stocks dilutions that stand made already, in making order
  * @param chosen the labels of the recipe that a person chose over the best one; empty for the best
  */
 public record Draft(
@@ -32,11 +34,13 @@ public record Draft(
         Optional<Tissue> tissue,
         SearchLimits limits,
         Balance balance,
+        List<StockInHand> stocks,
         Optional<List<String>> chosen) {
 
     public Draft {
         bases = List.copyOf(bases);
         moulds = List.copyOf(moulds);
+        stocks = List.copyOf(stocks);
         rows = rows.stream()
                 .sorted(Comparator.comparingDouble(Row::wavelengthNm))
                 .toList();
@@ -52,6 +56,16 @@ public record Draft(
         if (!(temperatureC >= 0 && temperatureC <= 100))
             throw new Refusal("The temperature lies between 0 and 100 °C.");
         rows.forEach(Row::target);
+        for (int k = 0; k < stocks.size(); k++) {
+            StockInHand stock = stocks.get(k);
+            List<String> earlier =
+                    stocks.subList(0, k).stream().map(StockInHand::id).toList();
+            if (earlier.contains(stock.id()))
+                throw new Refusal("Two stocks are called “" + stock.id() + "”; give each its own name.");
+            stock.from().filter(from -> !earlier.contains(from)).ifPresent(from -> {
+                throw new Refusal("The stock “" + stock.id() + "” was diluted from “" + from + "”, which is not here.");
+            });
+        }
     }
 
     public static Draft of(Brief b) {
@@ -67,6 +81,7 @@ public record Draft(
                 b.tissue(),
                 b.limits(),
                 b.balance(),
+                b.stocksInHand(),
                 Optional.empty());
     }
 
@@ -83,6 +98,7 @@ public record Draft(
                 moulds,
                 limits,
                 balance,
+                stocks,
                 tissue,
                 sha256);
     }
@@ -110,17 +126,29 @@ public record Draft(
 
     public Draft withRows(List<Row> r) {
         return new Draft(
-                name, title, bases, batchMl, moulds, overage, temperatureC, r, tissue, limits, balance, chosen);
+                name, title, bases, batchMl, moulds, overage, temperatureC, r, tissue, limits, balance, stocks, chosen);
     }
 
     public Draft withName(String n) {
         return new Draft(
-                n, title, bases, batchMl, moulds, overage, temperatureC, rows, tissue, limits, balance, chosen);
+                n, title, bases, batchMl, moulds, overage, temperatureC, rows, tissue, limits, balance, stocks, chosen);
     }
 
     public Draft withTitle(String t) {
         return new Draft(
-                name, t.strip(), bases, batchMl, moulds, overage, temperatureC, rows, tissue, limits, balance, chosen);
+                name,
+                t.strip(),
+                bases,
+                batchMl,
+                moulds,
+                overage,
+                temperatureC,
+                rows,
+                tissue,
+                limits,
+                balance,
+                stocks,
+                chosen);
     }
 
     /** Choosing another base gives up a recipe that was chosen. */
@@ -137,13 +165,26 @@ public record Draft(
                 tissue,
                 limits,
                 balance,
+                stocks,
                 Optional.empty());
     }
 
     /** A batch said in mL takes the place of moulds. */
     public Draft withBatchMl(double ml) {
         return new Draft(
-                name, title, bases, ml, List.of(), overage, temperatureC, rows, tissue, limits, balance, chosen);
+                name,
+                title,
+                bases,
+                ml,
+                List.of(),
+                overage,
+                temperatureC,
+                rows,
+                tissue,
+                limits,
+                balance,
+                stocks,
+                chosen);
     }
 
     public Draft withMoulds(List<Mould> m) {
@@ -160,31 +201,55 @@ public record Draft(
                 tissue,
                 limits,
                 balance,
+                stocks,
                 chosen);
     }
 
     public Draft withOverage(double o) {
-        return new Draft(name, title, bases, batchMl, moulds, o, temperatureC, rows, tissue, limits, balance, chosen);
+        return new Draft(
+                name, title, bases, batchMl, moulds, o, temperatureC, rows, tissue, limits, balance, stocks, chosen);
     }
 
     public Draft withTemperatureC(double t) {
-        return new Draft(name, title, bases, batchMl, moulds, overage, t, rows, tissue, limits, balance, chosen);
+        return new Draft(
+                name, title, bases, batchMl, moulds, overage, t, rows, tissue, limits, balance, stocks, chosen);
     }
 
     public Draft withTissue(Optional<Tissue> t) {
-        return new Draft(name, title, bases, batchMl, moulds, overage, temperatureC, rows, t, limits, balance, chosen);
+        return new Draft(
+                name, title, bases, batchMl, moulds, overage, temperatureC, rows, t, limits, balance, stocks, chosen);
     }
 
     public Draft withLimits(SearchLimits l) {
         return new Draft(
-                name, title, bases, batchMl, moulds, overage, temperatureC, rows, tissue, l, balance, Optional.empty());
+                name,
+                title,
+                bases,
+                batchMl,
+                moulds,
+                overage,
+                temperatureC,
+                rows,
+                tissue,
+                l,
+                balance,
+                stocks,
+                Optional.empty());
     }
 
     public Draft withBalance(Balance b) {
-        return new Draft(name, title, bases, batchMl, moulds, overage, temperatureC, rows, tissue, limits, b, chosen);
+        return new Draft(
+                name, title, bases, batchMl, moulds, overage, temperatureC, rows, tissue, limits, b, stocks, chosen);
+    }
+
+    /** A stock that holds another is not given up before it. */
+    public Draft withStocks(List<StockInHand> s) {
+        return new Draft(
+                name, title, bases, batchMl, moulds, overage, temperatureC, rows, tissue, limits, balance, s, chosen);
     }
 
     public Draft withChosen(Optional<List<String>> c) {
-        return new Draft(name, title, bases, batchMl, moulds, overage, temperatureC, rows, tissue, limits, balance, c);
+        return new Draft(
+                name, title, bases, batchMl, moulds, overage, temperatureC, rows, tissue, limits, balance, stocks, c);
     }
 }

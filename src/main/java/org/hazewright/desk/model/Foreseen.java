@@ -14,13 +14,13 @@ import org.hazewright.mixture.Coefficients;
 import org.hazewright.mixture.Mixture;
 import org.hazewright.optics.Refusal;
 import org.hazewright.reading.Foresight;
-import org.hazewright.transport.Medium;
 import org.hazewright.reading.Oximeter;
 import org.hazewright.reading.Quantity;
 import org.hazewright.reading.Reading;
 import org.hazewright.reading.Readings;
 import org.hazewright.reading.SetUp;
 import org.hazewright.reading.Spread;
+import org.hazewright.transport.Medium;
 import org.hazewright.transport.TimeAxis;
 
 /**

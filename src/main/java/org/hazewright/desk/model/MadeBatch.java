@@ -62,7 +62,11 @@ public final class MadeBatch {
 
     /** All that follows from the batch as it stands. */
     public record Seen(
-            List<Answer.Predicted> landing, double chance, Optional<Verdict> verdict, List<Belief> beliefs, Factors after) {}
+            List<Answer.Predicted> landing,
+            double chance,
+            Optional<Verdict> verdict,
+            List<Belief> beliefs,
+            Factors after) {}
 
     private final Desk desk;
     private final Path file;
@@ -157,7 +161,12 @@ public final class MadeBatch {
             double before = update.before().u(f);
             double after = update.after().u(f);
             if (f.kind() == Factor.Kind.METHOD || !(before > 0) || after > 0.9 * before) continue;
-            beliefs.add(new Belief(f.name(), f.words(), update.after().mean(f), before, after));
+            beliefs.add(new Belief(
+                    f.name(),
+                    Words.named(f.words(), batch.plan()),
+                    update.after().mean(f),
+                    before,
+                    after));
         }
         return new Seen(landing, chance, Optional.of(verdict), beliefs, update.after());
     }
@@ -232,7 +241,11 @@ public final class MadeBatch {
                 values -> attempt(
                         "measured values",
                         b -> b.withMeasured(new Measurement(
-                                LocalDate.now(), new Method(how, 0, 0), instrument.strip(), b.correctionCount(), values))),
+                                LocalDate.now(),
+                                new Method(how, 0, 0),
+                                instrument.strip(),
+                                b.correctionCount(),
+                                values))),
                 failure -> complaint.set(Papers.words(failure)));
     }
 
@@ -257,8 +270,9 @@ public final class MadeBatch {
                 new Lot(bottle.kind(), number.strip(), Optional.empty(), Optional.empty(), Optional.empty()),
                 new Source(
                         Source.Basis.MEASURED,
-                        "Learned from batch " + edits.now().id() + ", " + m.method().name() + " of " + m.on() + "."));
-        return desk.shelfRoom().addLearned(bottle, lot, seen.get().after());
+                        "Learned from batch " + edits.now().id() + ", "
+                                + m.method().name() + " of " + m.on() + "."));
+        return desk.adding().addLearned(bottle, lot, seen.get().after());
     }
 
     private static double number(String where, String text) {
@@ -311,12 +325,11 @@ public final class MadeBatch {
     static void tell(Desk desk, Logbook.Recorded recorded) {
         desk.notices()
                 .tell(recorded.waiting()
-                        .map(why -> Notice.wrong(
-                                "logbook", "The batch is written; the logbook has to wait. " + why))
+                        .map(why -> Notice.wrong("logbook", "The batch is written; the logbook has to wait. " + why))
                         .orElse(new Notice(
                                 Notice.Kind.TOLD,
                                 "logbook",
-                                "Recorded in " + recorded.kept()
+                                "Recorded in the logbook, " + recorded.kept()
                                         + (recorded.found().isEmpty() ? "" : " (" + recorded.found() + ")") + ".",
                                 desk.showing(recorded.kept()))));
     }

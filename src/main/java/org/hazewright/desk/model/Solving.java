@@ -222,6 +222,7 @@ public final class Solving {
                 b.moulds(),
                 only,
                 b.balance(),
+                b.stocksInHand(),
                 b.tissue(),
                 b.sha256());
     }

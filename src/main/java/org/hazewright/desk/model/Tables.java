@@ -35,7 +35,15 @@ public final class Tables {
     /** What is wanted and what is predicted, in 1/cm; the miss in half-widths. */
     public static String targets(Outlook o) {
         StringBuilder text = new StringBuilder();
-        line(text, "wavelength_nm", "quantity", "wanted_per_cm", "tolerance_per_cm", "predicted_per_cm", "u_per_cm", "miss");
+        line(
+                text,
+                "wavelength_nm",
+                "quantity",
+                "wanted_per_cm",
+                "tolerance_per_cm",
+                "predicted_per_cm",
+                "u_per_cm",
+                "miss");
         for (Answer.Predicted p : o.predicted())
             line(
                     text,

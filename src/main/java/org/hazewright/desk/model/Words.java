@@ -132,4 +132,14 @@ public final class Words {
                 ? sentence
                 : sentence.substring(0, 1).toUpperCase(Locale.ROOT) + sentence.substring(1);
     }
+
+    /** A cause's name with the ingredient's name in place of its id. */
+    public static String named(String cause, Recipe recipe) {
+        for (Ingredient i : recipe.massesG().keySet()) {
+            if (cause.equals(i.id()) || cause.startsWith(i.id() + " "))
+                return shortName(i) + cause.substring(i.id().length());
+            if (cause.equals("weighing " + i.id())) return "weighing " + shortName(i);
+        }
+        return cause;
+    }
 }

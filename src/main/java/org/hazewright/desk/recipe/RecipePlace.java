@@ -29,7 +29,6 @@ import org.hazewright.desk.parts.Gauge;
 import org.hazewright.desk.parts.Say;
 import org.hazewright.desk.parts.Word;
 import org.hazewright.mixture.Recipe;
-import org.hazewright.shelf.Ingredient;
 
 /** The place Recipe. */
 public final class RecipePlace extends VBox {
@@ -141,7 +140,7 @@ public final class RecipePlace extends VBox {
         for (Outlook.CauseShare c : shares) {
             if (c.share() < LEAST_SHARE || n == MOST_CAUSES) break;
             String percent = Math.round(100 * c.share()) + " %";
-            Label who = Say.wrapped(named(c.name(), o.recipe()), "quiet");
+            Label who = Say.wrapped(Words.named(c.name(), o.recipe()), "quiet");
             who.setAccessibleText(who.getText() + ", " + percent);
             Region filled = new Region();
             filled.getStyleClass().add("bar");
@@ -153,16 +152,6 @@ public final class RecipePlace extends VBox {
         }
         causes.getChildren().setAll(Say.heading("What could move it"), grid);
         Say.show(causes, n > 0);
-    }
-
-    /** A cause's name with the ingredient's name in place of its id. */
-    private static String named(String cause, Recipe recipe) {
-        for (Ingredient i : recipe.massesG().keySet()) {
-            if (cause.equals(i.id()) || cause.startsWith(i.id() + " "))
-                return Words.shortName(i) + cause.substring(i.id().length());
-            if (cause.equals("weighing " + i.id())) return "weighing " + Words.shortName(i);
-        }
-        return cause;
     }
 
     private void limits(Shown shown) {

@@ -38,7 +38,7 @@ final class ComparePlot {
     void draw(Pen pen) {
         double left = 4.2 * em;
         double right = w - 1.4 * em;
-        double top = 0.3 * em;
+        double top = 0.7 * em;
         double bottom = h - 2.4 * em;
         double most = 0;
         double least = Double.POSITIVE_INFINITY;
@@ -94,8 +94,7 @@ final class ComparePlot {
     private record Label(String name, String colour, double[] x, double[] y, int count) {}
 
     /** Writes a name along its line where no other name stands; left out when there is no such place. */
-    private void name(
-            Pen pen, Label l, double left, double right, double top, double bottom, List<double[]> taken) {
+    private void name(Pen pen, Label l, double left, double right, double top, double bottom, List<double[]> taken) {
         double size = 0.92 * em;
         double wide = pen.width(l.name(), size, false);
         for (double share = 0.04; share < 1; share += 0.06) {
@@ -105,8 +104,8 @@ final class ComparePlot {
                 double ny = l.y()[at] + up;
                 double[] box = {nx - 3, ny - 0.9 * em, nx + wide + 3, ny + 0.35 * em};
                 if (box[2] > right - 4 || box[1] < top + 1.9 * em || box[3] > bottom - 2 || box[0] < left + 2) continue;
-                boolean free = taken.stream()
-                        .noneMatch(t -> box[0] < t[2] && t[0] < box[2] && box[1] < t[3] && t[1] < box[3]);
+                boolean free =
+                        taken.stream().noneMatch(t -> box[0] < t[2] && t[0] < box[2] && box[1] < t[3] && t[1] < box[3]);
                 if (!free) continue;
                 taken.add(box);
                 pen.box(box[0], box[1], box[2] - box[0], box[3] - box[1], 3, palette.paper(), 0.8, null, 0);
@@ -126,7 +125,7 @@ final class ComparePlot {
 
     private static String power(double decade) {
         int d = (int) decade;
-        if (d >= -3 && d <= 4) return d >= 0 ? Long.toString((long) Math.pow(10, d)) : "0." + "0".repeat(-d - 1) + "1";
+        if (d >= -3 && d <= 5) return d >= 0 ? Long.toString((long) Math.pow(10, d)) : "0." + "0".repeat(-d - 1) + "1";
         return "1e" + d;
     }
 }

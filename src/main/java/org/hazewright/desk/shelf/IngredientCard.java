@@ -23,9 +23,9 @@ final class IngredientCard extends VBox {
     private final ShelfRoom room;
     private final LotForm lot;
 
-    IngredientCard(ShelfRoom room) {
+    IngredientCard(ShelfRoom room, LotForm lot) {
         this.room = room;
-        this.lot = new LotForm(room);
+        this.lot = lot;
         getStyleClass().add("gap-s");
         room.chosenProperty().addListener((p, before, now) -> show());
         room.doubtsProperty().addListener((p, before, now) -> show());

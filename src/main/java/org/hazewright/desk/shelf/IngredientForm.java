@@ -18,7 +18,7 @@ import javafx.scene.layout.FlowPane;
 import javafx.scene.layout.GridPane;
 import javafx.scene.layout.HBox;
 import javafx.scene.layout.VBox;
-import org.hazewright.desk.model.ShelfRoom;
+import org.hazewright.desk.model.Adding;
 import org.hazewright.desk.parts.Chooser;
 import org.hazewright.desk.parts.Field;
 import org.hazewright.desk.parts.Say;
@@ -31,7 +31,7 @@ import org.hazewright.shelf.Source;
 
 /** Puts a new ingredient on the shelf, by form and from a file of figures. */
 final class IngredientForm extends VBox {
-    private final ShelfRoom room;
+    private final Adding adding;
     private final Map<String, String> typed = new LinkedHashMap<>();
     private final Set<Family> families = EnumSet.of(Family.LIQUID, Family.GEL);
     private final Label wrong = Say.wrapped("", "error-line");
@@ -42,8 +42,8 @@ final class IngredientForm extends VBox {
     private IngredientWriter.Basis tableBasis = IngredientWriter.Basis.NEAT;
     private Optional<Path> table = Optional.empty();
 
-    IngredientForm(ShelfRoom room, Chooser chooser, Runnable done) {
-        this.room = room;
+    IngredientForm(Adding adding, Chooser chooser, Runnable done) {
+        this.adding = adding;
         getStyleClass().add("gap-s");
         GridPane grid = new GridPane();
         grid.getStyleClass().add("form");
@@ -155,7 +155,7 @@ final class IngredientForm extends VBox {
     }
 
     private void add(Runnable done) {
-        Optional<String> words = room.add(new ShelfRoom.Entry(
+        Optional<String> words = adding.add(new Adding.Entry(
                 typed("id"),
                 typed("name"),
                 part,

@@ -17,6 +17,7 @@ import javafx.scene.layout.Priority;
 import javafx.scene.layout.Region;
 import javafx.scene.layout.VBox;
 import org.hazewright.desk.look.Look;
+import org.hazewright.desk.model.Adding;
 import org.hazewright.desk.model.ShelfRoom;
 import org.hazewright.desk.model.Words;
 import org.hazewright.desk.parts.Chooser;
@@ -32,6 +33,7 @@ public final class ShelfView extends BorderPane {
     private final ShelfRoom room;
     private final Look look;
     private final Chooser chooser;
+    private final Adding adding;
     private final VBox list = new VBox();
     private final Plot absorption = new Plot(false);
     private final Plot scattering = new Plot(true);
@@ -39,12 +41,13 @@ public final class ShelfView extends BorderPane {
     private final IngredientCard card;
     private final Label checked = Say.wrapped("", "quiet", "small");
 
-    public ShelfView(ShelfRoom room, String place, Look look, Chooser chooser, Runnable leave) {
+    public ShelfView(ShelfRoom room, Adding adding, String place, Look look, Chooser chooser, Runnable leave) {
         this.room = room;
+        this.adding = adding;
         this.look = look;
         this.chooser = chooser;
         getStyleClass().add("balance-view");
-        card = new IngredientCard(room);
+        card = new IngredientCard(room, new LotForm(adding, chooser));
         setTop(head(place, leave));
         setLeft(left());
         VBox middle = new VBox(Say.place("Side by side"), absorption, scattering);
@@ -115,10 +118,10 @@ public final class ShelfView extends BorderPane {
     }
 
     private void add() {
-        if (room.own()) {
+        if (adding.own()) {
             right.getChildren()
                     .setAll(new IngredientForm(
-                            room, chooser, () -> right.getChildren().setAll(card)));
+                            adding, chooser, () -> right.getChildren().setAll(card)));
             return;
         }
         VBox ask = new VBox(
@@ -129,7 +132,7 @@ public final class ShelfView extends BorderPane {
                 new Word(
                                 "choose a folder…",
                                 () -> chooser.folder("Choose an empty folder for your shelf")
-                                        .ifPresent(room::makeOwn))
+                                        .ifPresent(adding::makeOwn))
                         .styled("strong"));
         ask.getStyleClass().add("gap-m");
         right.getChildren().setAll(ask);

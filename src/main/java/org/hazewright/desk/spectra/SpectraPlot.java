@@ -219,7 +219,8 @@ public final class SpectraPlot {
         pen.box(left, top, width, height, 0, palette.paper(), 1, null, 0);
         pen.clip(left, top, width, height);
         gaps(pen, top, height);
-        if (view.shares()) shares(pen, q);
+        SharesBelow below = new SharesBelow(curves, nm, s, view, palette, em);
+        List<SharesBelow.Band> named = view.shares() ? below.draw(pen, q) : List.of();
         pen.unclip();
         double step = Scale.step(s.high() - s.low(), 4);
         for (double v : s.ticks(4)) {
@@ -235,6 +236,7 @@ public final class SpectraPlot {
                     Pen.Align.RIGHT);
         }
         pen.clip(left, top, width, height);
+        named.forEach(b -> below.name(pen, b));
         prediction(pen, q);
         for (Box b : boxes) if (b.quantity() == q) box(pen, b);
         pen.unclip();
@@ -258,103 +260,12 @@ public final class SpectraPlot {
         }
     }
 
-    private void shares(Pen pen, Point.Quantity q) {
-        if (curves == null) return;
-        int[] in = inside();
-        if (in.length < 2) return;
-        double[] below = new double[in.length];
-        Scale s = scale(q);
-        int tint = 0;
-        List<Band> labels = new ArrayList<>();
-        for (Curves.Share share : curves.shares()) {
-            double[] part = q == Point.Quantity.MUA ? share.mua() : share.musp();
-            double most = 0;
-            for (int k : in) most = Math.max(most, part[k]);
-            if (most <= 0.004 * (s.high() - s.low())) continue;
-            String colour = palette.shares().get(tint++ % palette.shares().size());
-            for (int[] run : runs(in)) {
-                int n = run[1] - run[0] + 1;
-                double[] x = new double[2 * n];
-                double[] y = new double[2 * n];
-                for (int k = 0; k < n; k++) {
-                    int at = run[0] + k;
-                    x[k] = nm.px(curves.nm(in[at]));
-                    y[k] = s.px(below[at] + part[in[at]]);
-                    x[2 * n - 1 - k] = x[k];
-                    y[2 * n - 1 - k] = s.px(below[at]);
-                }
-                pen.area(x, y, 2 * n, colour, 1);
-                double[] edgeX = java.util.Arrays.copyOf(x, n);
-                double[] edgeY = java.util.Arrays.copyOf(y, n);
-                pen.line(edgeX, edgeY, n, palette.line(), 1);
-            }
-            labels.add(new Band(Words.shortName(share.ingredient()), below.clone(), part));
-            for (int k = 0; k < in.length; k++) below[k] += part[in[k]];
-        }
-        for (Band b : labels) label(pen, s, in, b);
-    }
-
-    /** A share as it is stacked: what lies below it and its own part, 1/cm. */
-    private record Band(String name, double[] below, double[] part) {}
-
-    /** A share's name at the place where it has most room; left out where it would not fit. */
-    private void label(Pen pen, Scale s, int[] in, Band b) {
-        double size = 0.9 * em;
-        String name = b.name().length() > 26 ? b.name().replaceFirst(",.*", "") : b.name();
-        double half = pen.width(name, size, false) / 2 + 0.3 * em;
-        double best = 1.25 * em;
-        double bestX = Double.NaN;
-        double bestY = 0;
-        for (int k : in) {
-            double x = nm.px(curves.nm(k));
-            if (x - half < nm.at0() || x + half > nm.at1()) continue;
-            double top = s.at1();
-            double bottom = s.at0();
-            for (int j = 0; j < in.length; j++) {
-                if (Math.abs(nm.px(curves.nm(in[j])) - x) > half) continue;
-                top = Math.max(top, s.px(b.below()[j] + b.part()[in[j]]));
-                bottom = Math.min(bottom, s.px(b.below()[j]));
-            }
-            if (bottom - top > best) {
-                best = bottom - top;
-                bestX = x;
-                bestY = (top + bottom) / 2;
-            }
-        }
-        if (!Double.isNaN(bestX))
-            pen.text(name, bestX, bestY + 0.32 * em, size, false, palette.slate(), Pen.Align.CENTRE);
-    }
-
-    /** Indices of the curve inside the range drawn. */
-    private int[] inside() {
-        List<Integer> in = new ArrayList<>();
-        for (int k = 0; k < curves.size(); k++)
-            if (curves.nm(k) >= view.fromNm() && curves.nm(k) <= view.toNm()) in.add(k);
-        return in.stream().mapToInt(Integer::intValue).toArray();
-    }
-
-    /** First and last place of each stretch without a gap. */
-    private List<int[]> runs(int[] in) {
-        List<int[]> runs = new ArrayList<>();
-        int from = 0;
-        for (int k = 1; k <= in.length; k++) {
-            boolean broken = k == in.length;
-            if (!broken)
-                for (Curves.Gap g : curves.gaps())
-                    broken |= g.fromNm() >= curves.nm(in[k - 1]) - 1e-9 && g.toNm() <= curves.nm(in[k]) + 1e-9;
-            if (broken) {
-                runs.add(new int[] {from, k - 1});
-                from = k;
-            }
-        }
-        return runs;
-    }
-
     private void prediction(Pen pen, Point.Quantity q) {
         if (curves == null) return;
-        int[] in = inside();
         Scale s = scale(q);
-        for (int[] run : runs(in)) {
+        SharesBelow drawn = new SharesBelow(curves, nm, s, view, palette, em);
+        int[] in = drawn.inside();
+        for (int[] run : drawn.runs(in)) {
             int n = run[1] - run[0] + 1;
             if (n < 2) continue;
             double[] x = new double[2 * n];
