@@ -120,7 +120,7 @@ static double workload(double xmax, double n, double k)
     return best / 20000;
 }
 
-/* Cauchy forms of Michels et al., Opt. Express 16, 5907, 2008; log-normal, number median 200 nm, GSD 1.6 */
+/* Cauchy forms of Michels et al., Opt. Express 16, 5907, 2008; log-normal, number median 195 nm, GSD 1.465 */
 static double spectrum(void)
 {
     double best = 1e300, total = 0;
@@ -129,13 +129,13 @@ static double spectrum(void)
         for (int w = 0; w < 71; w++) {
             double nm = 400 + 10 * w, l2 = 1 / (nm * nm);
             double tail = 1.154e4 * l2 - 1.132e9 * l2 * l2, host = 1.311 + tail, oil = 1.451 + tail;
-            double s = log(1.6), from = 2 * s * s - 5 * s, to = 6 * s * s + 5 * s, h = (to - from) / 199, musp = 0;
+            double s = log(1.465), from = 2 * s * s - 5 * s, to = 6 * s * s + 5 * s, h = (to - from) / 199, musp = 0;
             for (int r = 0; r < 200; r++) {
-                double t = from + h * r, d = 200 * exp(t);
+                double t = from + h * r, d = 195 * exp(t);
                 result q = sphere_real(M_PI * d * host / nm, oil / host);
                 musp += h * exp(-t * t / (2 * s * s)) * d * d * q.qsca * (1 - q.g);
             }
-            total += musp * 6e7 * M_PI / 4 / (s * sqrt(2 * M_PI)) / (M_PI * 8e6 * exp(4.5 * s * s));
+            total += musp * 6e7 * M_PI / 4 / (s * sqrt(2 * M_PI)) / (M_PI * 7.414875e6 * exp(4.5 * s * s));
         }
         best = fmin(best, now() - start);
     }

@@ -31,7 +31,6 @@ public final class Correcting {
     private static final int HALVINGS = 7;
 
     private final Batch batch;
-    private final Shelf shelf;
     private final List<Point> points;
     private final Recipe made;
     private final Pouring pouring;
@@ -42,7 +41,6 @@ public final class Correcting {
 
     private Correcting(Batch batch, Shelf shelf) {
         this.batch = batch;
-        this.shelf = shelf;
         Brief brief = batch.brief()
                 .orElseThrow(() -> new Refusal("The batch " + batch.id()
                         + " does not say what is wanted, so nothing can be corrected; open it with its brief, or add [[target]]"

@@ -22,7 +22,6 @@ import java.util.Optional;
 final class PlainToml {
     private static final int DEEPEST = 8;
     private static final int LONGEST_NUMBER = 30;
-    private static final NotPlain NOT_PLAIN = new NotPlain();
 
     private final String text;
     private final String path;
@@ -56,7 +55,7 @@ final class PlainToml {
         }
 
         void put(String key, Object value, Place at) {
-            if (values.putIfAbsent(key, value) != null) throw NOT_PLAIN;
+            if (values.putIfAbsent(key, value) != null) throw new NotPlain();
             places.put(key, at);
         }
 
@@ -113,7 +112,7 @@ final class PlainToml {
             if (value instanceof Table table) parent = table;
             else if (value instanceof Tables tables)
                 parent = tables.list().get(tables.list().size() - 1);
-            else throw NOT_PLAIN;
+            else throw new NotPlain();
             i++;
             blanks();
             key = key();
@@ -139,7 +138,7 @@ final class PlainToml {
     }
 
     private Object value(String title, Place keyAt, int depth) {
-        if (depth > DEEPEST) throw NOT_PLAIN;
+        if (depth > DEEPEST) throw new NotPlain();
         return switch (peek()) {
             case '"' -> string();
             case '[' -> array(title, depth);
@@ -151,7 +150,7 @@ final class PlainToml {
     }
 
     private Object word(String word, Object value) {
-        if (!text.startsWith(word, i)) throw NOT_PLAIN;
+        if (!text.startsWith(word, i)) throw new NotPlain();
         i += word.length();
         return value;
     }
@@ -160,11 +159,11 @@ final class PlainToml {
         int from = ++i;
         while (peek() != '"') {
             char c = text.charAt(i);
-            if (c == '\\' || control(c) || Character.isSurrogate(c)) throw NOT_PLAIN;
+            if (c == '\\' || control(c) || Character.isSurrogate(c)) throw new NotPlain();
             i++;
         }
         String string = text.substring(from, i++);
-        if (string.isEmpty() && i < text.length() && text.charAt(i) == '"') throw NOT_PLAIN;
+        if (string.isEmpty() && i < text.length() && text.charAt(i) == '"') throw new NotPlain();
         return string;
     }
 
@@ -187,7 +186,7 @@ final class PlainToml {
     private TomlPage inline(String title, Place at, int depth) {
         Map<String, TomlPage.Entry> entries = new LinkedHashMap<>();
         Home home = (key, value, place) -> {
-            if (entries.putIfAbsent(key, new TomlPage.Entry(value, place)) != null) throw NOT_PLAIN;
+            if (entries.putIfAbsent(key, new TomlPage.Entry(value, place)) != null) throw new NotPlain();
         };
         i++;
         blanks();
@@ -210,41 +209,42 @@ final class PlainToml {
         int from = i;
         while (i < text.length() && "+-.eE0123456789".indexOf(text.charAt(i)) >= 0) i++;
         String s = text.substring(from, i);
-        if (s.length() > LONGEST_NUMBER) throw NOT_PLAIN;
+        if (s.length() > LONGEST_NUMBER) throw new NotPlain();
         if (s.length() == 10 && s.charAt(4) == '-' && s.charAt(7) == '-') return day(s);
         int digits = s.startsWith("+") || s.startsWith("-") ? 1 : 0;
         int end = digits(s, digits);
-        if (end == digits || end - digits > 1 && s.charAt(digits) == '0') throw NOT_PLAIN;
+        if (end == digits || end - digits > 1 && s.charAt(digits) == '0') throw new NotPlain();
         if (end == s.length()) {
-            if (end - digits > 18) throw NOT_PLAIN;
+            if (end - digits > 18) throw new NotPlain();
             return Long.valueOf(s);
         }
         if (s.charAt(end) == '.') {
             int fraction = end + 1;
             end = digits(s, fraction);
-            if (end == fraction) throw NOT_PLAIN;
+            if (end == fraction) throw new NotPlain();
         }
         if (end < s.length() && (s.charAt(end) == 'e' || s.charAt(end) == 'E')) {
             int exponent = end + 1;
             if (exponent < s.length() && (s.charAt(exponent) == '+' || s.charAt(exponent) == '-')) exponent++;
             end = digits(s, exponent);
-            if (end == exponent || end - exponent > 2) throw NOT_PLAIN; // beyond 99 it may not fit a double
+            if (end == exponent || end - exponent > 2) throw new NotPlain(); // beyond 99 it may not fit a double
         }
-        if (end != s.length()) throw NOT_PLAIN;
+        if (end != s.length()) throw new NotPlain();
         return Double.valueOf(s);
     }
 
     private LocalDate day(String s) {
-        if (i < text.length() && " ,]}\n".indexOf(text.charAt(i)) < 0) throw NOT_PLAIN; // a time may follow
-        if (text.startsWith(" ", i) && i + 1 < text.length() && Character.isDigit(text.charAt(i + 1))) throw NOT_PLAIN;
-        if (digits(s, 0) != 4 || digits(s, 5) != 7 || digits(s, 8) != 10) throw NOT_PLAIN;
+        if (i < text.length() && " ,]}\n".indexOf(text.charAt(i)) < 0) throw new NotPlain(); // a time may follow
+        if (text.startsWith(" ", i) && i + 1 < text.length() && Character.isDigit(text.charAt(i + 1)))
+            throw new NotPlain();
+        if (digits(s, 0) != 4 || digits(s, 5) != 7 || digits(s, 8) != 10) throw new NotPlain();
         try {
             return LocalDate.of(
                     Integer.parseInt(s.substring(0, 4)),
                     Integer.parseInt(s.substring(5, 7)),
                     Integer.parseInt(s.substring(8)));
         } catch (DateTimeException e) {
-            throw NOT_PLAIN;
+            throw new NotPlain();
         }
     }
 
@@ -257,7 +257,7 @@ final class PlainToml {
     private String key() {
         int from = i;
         while (i < text.length() && bare(text.charAt(i))) i++;
-        if (i == from) throw NOT_PLAIN;
+        if (i == from) throw new NotPlain();
         return text.substring(from, i);
     }
 
@@ -292,7 +292,7 @@ final class PlainToml {
         if (i == text.length() || text.charAt(i) != '#') return;
         while (i < text.length() && text.charAt(i) != '\n') {
             char c = text.charAt(i++);
-            if (control(c) || Character.isSurrogate(c)) throw NOT_PLAIN;
+            if (control(c) || Character.isSurrogate(c)) throw new NotPlain();
         }
     }
 
@@ -305,12 +305,12 @@ final class PlainToml {
     }
 
     private char peek() {
-        if (i == text.length()) throw NOT_PLAIN;
+        if (i == text.length()) throw new NotPlain();
         return text.charAt(i);
     }
 
     private void take(char c) {
-        if (peek() != c) throw NOT_PLAIN;
+        if (peek() != c) throw new NotPlain();
         i++;
     }
 
