@@ -51,6 +51,7 @@ public final class Installer {
                     "--file-associations", "src/installer/brief.properties", "--file-associations", "src/installer/recipe.properties",
                     "--file-associations", "src/installer/batch.properties", "--resource-dir", "src/installer",
                     "--linux-shortcut", "--linux-menu-group", "Science", "--linux-app-category", "science",
+                    "--linux-package-deps", "libgtk-3-0, libxxf86vm1, libgl1", "--license-file", "target/classes/META-INF/THIRD-PARTY.txt",
                     "--linux-deb-maintainer", "workshop@example.org");
             try (Stream<Path> made = Files.list(OUT)) {
                 made.filter(p -> p.toString().endsWith(".deb")).forEach(p -> System.out.println("Debian package: " + p));

@@ -25,6 +25,8 @@ class ArchitectureTest {
             .definedBy("org.hazewright.mixture..")
             .layer("brief")
             .definedBy("org.hazewright.brief..")
+            .layer("search")
+            .definedBy("org.hazewright.search..")
             .layer("design")
             .definedBy("org.hazewright.design..")
             .layer("bench")
@@ -53,10 +55,12 @@ class ArchitectureTest {
             .mayOnlyAccessLayers("optics", "shelf")
             .whereLayer("brief")
             .mayOnlyAccessLayers("optics", "shelf")
+            .whereLayer("search")
+            .mayOnlyAccessLayers("optics")
             .whereLayer("design")
-            .mayOnlyAccessLayers("optics", "shelf", "mixture", "brief")
+            .mayOnlyAccessLayers("optics", "shelf", "mixture", "brief", "search")
             .whereLayer("bench")
-            .mayOnlyAccessLayers("optics", "shelf", "mixture", "brief", "design", "learning")
+            .mayOnlyAccessLayers("optics", "shelf", "mixture", "brief", "search", "design", "learning")
             .whereLayer("learning")
             .mayOnlyAccessLayers("optics", "shelf", "mixture")
             .whereLayer("transport")
@@ -65,16 +69,35 @@ class ArchitectureTest {
             .mayOnlyAccessLayers("optics", "shelf", "mixture", "transport")
             .whereLayer("files")
             .mayOnlyAccessLayers(
-                    "optics", "shelf", "mixture", "brief", "design", "bench", "learning", "transport", "reading")
+                    "optics",
+                    "shelf",
+                    "mixture",
+                    "brief",
+                    "search",
+                    "design",
+                    "bench",
+                    "learning",
+                    "transport",
+                    "reading")
             .whereLayer("picture")
             .mayOnlyAccessLayers(
-                    "optics", "shelf", "mixture", "brief", "design", "bench", "learning", "transport", "reading")
+                    "optics",
+                    "shelf",
+                    "mixture",
+                    "brief",
+                    "search",
+                    "design",
+                    "bench",
+                    "learning",
+                    "transport",
+                    "reading")
             .whereLayer("sheet")
             .mayOnlyAccessLayers(
                     "optics",
                     "shelf",
                     "mixture",
                     "brief",
+                    "search",
                     "design",
                     "bench",
                     "learning",

@@ -4,7 +4,7 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import org.hazewright.brief.Point;
-import org.hazewright.design.ConvexProgramme;
+import org.hazewright.search.ConvexProgramme;
 
 /**
  * The best grams to pour onto what is in a vessel, for a given added volume: nothing can be taken out.

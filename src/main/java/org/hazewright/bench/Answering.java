@@ -17,9 +17,7 @@ import org.hazewright.design.Design;
 import org.hazewright.design.Finding;
 import org.hazewright.design.Option;
 import org.hazewright.design.Score;
-import org.hazewright.mixture.Budget;
 import org.hazewright.mixture.Coefficients;
-import org.hazewright.mixture.Draws;
 import org.hazewright.mixture.Mixture;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.mixture.Stock;
@@ -37,14 +35,17 @@ public final class Answering {
     /** Draws behind the chance that is printed: its standard error is at most 0.25 in 100. */
     public static final int DRAWS = 40_000;
 
-    private static final int DRAWS_OF_ALTERNATIVES = 4_000;
-    private static final long SEED = 1;
+    /** Draws behind the chance while a brief is being edited, and behind that of alternatives: at most 0.8 in 100. */
+    public static final int DRAWS_WHILE_EDITING = 4_000;
 
     /** Sets for which other ways of dosing are tried. */
     private static final int LEADING = 3;
 
     /** Fewer weighings of the same set are offered when they land at least this often as the best does. */
     private static final double WORTH_FEWER = 0.5;
+
+    /** Where nothing meets every tolerance, another way may miss by so much more than the best. */
+    private static final double WORTH_SHOWING = 1.2;
 
     /** How far tolerances are narrowed, step by step, until the rounded grams stay inside. */
     private static final double[] EDGES = {1, 0.999, 0.995, 0.98, 0.95, 0.9};
@@ -53,15 +54,18 @@ public final class Answering {
     private final Shelf shelf;
     private final Design design;
     private final List<Stock> inHand;
+    private final int draws;
 
-    private Answering(Brief brief, Shelf shelf, BooleanSupplier stop, DoubleConsumer progress) {
+    private Answering(Brief brief, Shelf shelf, int draws, BooleanSupplier stop, DoubleConsumer progress) {
         this.brief = brief;
         this.shelf = shelf;
+        this.draws = draws;
         this.design = new Design(brief, shelf, stop, progress);
         this.inHand = inHand(brief, shelf);
     }
 
-    private static List<Stock> inHand(Brief brief, Shelf shelf) {
+    /** The dilutions that a brief says stand on the bench, in making order. */
+    static List<Stock> inHand(Brief brief, Shelf shelf) {
         Map<String, Stock> stocks = new LinkedHashMap<>();
         for (StockInHand s : brief.stocksInHand()) {
             Ingredient holds = s.from().isPresent()
@@ -87,7 +91,15 @@ public final class Answering {
     }
 
     public static Answer to(Brief brief, Shelf shelf, int alternatives, BooleanSupplier stop, DoubleConsumer progress) {
-        return new Answering(brief, shelf, stop, progress).answer(alternatives);
+        return new Answering(brief, shelf, DRAWS, stop, progress).answer(alternatives);
+    }
+
+    /**
+     * The answer while a brief is being edited: the same search, proof, stocks and first-order uncertainties, no other ways, and
+     * the chance and its intervals from {@value #DRAWS_WHILE_EDITING} draws only.
+     */
+    public static Answer whileEditing(Brief brief, Shelf shelf, BooleanSupplier stop) {
+        return new Answering(brief, shelf, DRAWS_WHILE_EDITING, stop, share -> {}).answer(0);
     }
 
     /** An option made weighable. */
@@ -179,59 +191,28 @@ public final class Answering {
 
     private Answer assemble(Finding finding, Planned offered, List<Answer.Alternative> others) {
         Recipe recipe = offered.recipe();
-        Mixture mixture = Mixture.of(recipe);
-        double[] nm = brief.wavelengthsNm();
-        double capacity = brief.balance().capacityG();
-        Budget budget = Budget.of(recipe, nm, capacity);
-        Draws draws = Draws.of(recipe, nm, capacity, DRAWS, SEED);
-        double[] values = values(mixture);
-        List<Answer.Predicted> predicted = new ArrayList<>();
+        Outlook outlook = Outlook.of(brief, recipe, draws);
         double bias = 0;
-        double worst = 0;
-        for (int j = 0; j < values.length; j++) {
-            Point p = brief.points().get(j);
-            boolean scattering = p.quantity() == Point.Quantity.MUSP;
-            int at = java.util.Arrays.binarySearch(nm, p.wavelengthNm());
-            double u = (scattering ? budget.uMuspPerCm() : budget.uMuaPerCm())[at];
-            double[] interval = draws.interval95(scattering, at);
-            double miss = p.miss(values[j]);
-            bias += p.weight() * miss * miss;
-            worst = Math.max(worst, Math.abs(miss));
-            predicted.add(new Answer.Predicted(p, values[j], u, interval[0], interval[1], miss));
-        }
+        for (Answer.Predicted p : outlook.predicted()) bias += p.point().weight() * p.miss() * p.miss();
         Score score =
                 new Score(bias, offered.score().ingredient(), offered.score().weighing());
         Option exact = offered.option();
         return new Answer(
                 brief,
                 recipe,
-                mixture,
-                predicted,
+                Mixture.of(recipe),
+                outlook.predicted(),
                 score,
                 new Answer.Exact(exact.score(), exact.concentrationGPerMl()),
-                worst,
-                Math.min(finding.bestPossibleWorstMiss(), worst),
-                chance(draws, nm),
-                budget,
-                finding.limits(),
+                outlook.worstMiss(),
+                Math.min(finding.bestPossibleWorstMiss(), outlook.worstMiss()),
+                outlook.chance(),
+                outlook.budget(),
+                exact == finding.best() ? finding.limits() : design.heldBack(exact),
                 others,
                 finding.leftOut(),
                 new Answer.SearchCount(finding.admissible(), finding.solved(), finding.cut(), finding.proven()),
                 offered.plan().notes());
-    }
-
-    private double chance(Draws draws, double[] nm) {
-        double[] low = new double[2 * nm.length];
-        double[] high = new double[2 * nm.length];
-        java.util.Arrays.fill(low, Double.NaN);
-        java.util.Arrays.fill(high, Double.NaN);
-        for (Point p : brief.points()) {
-            int at = java.util.Arrays.binarySearch(nm, p.wavelengthNm())
-                    + (p.quantity() == Point.Quantity.MUSP ? nm.length : 0);
-            low[at] = p.wantedPerCm() - p.tolerancePerCm();
-            high[at] = p.wantedPerCm() + p.tolerancePerCm();
-        }
-        return draws.shareInside(low, high);
     }
 
     /** Plans worth offering beside the best: none beaten by another in score, weighings, cost and chance at once. */
@@ -263,18 +244,20 @@ public final class Answering {
         List<Answer.Alternative> others(int most) {
             if (most == 0) return List.of();
             List<Way> ways = new ArrayList<>();
-            double[] nm = brief.wavelengthsNm();
             List<Planned> all = new ArrayList<>(planned);
             all.addAll(otherDosing());
             for (Planned p : all) {
-                Draws draws = Draws.of(p.recipe(), nm, brief.balance().capacityG(), DRAWS_OF_ALTERNATIVES, SEED);
-                ways.add(new Way(p, chance(draws, nm), cost(p.plan())));
+                double chance =
+                        Outlook.of(brief, p.recipe(), DRAWS_WHILE_EDITING).chance();
+                ways.add(new Way(p, chance, cost(p.plan())));
             }
             Way best = ways.get(0);
             List<Answer.Alternative> others = new ArrayList<>();
             for (Way way : ways.subList(1, ways.size())) {
                 if (others.size() == most) break;
                 if (ways.stream().anyMatch(other -> other != way && other.beats(way))) continue;
+                if (!way.planned.meets() && way.planned.worstMiss() > WORTH_SHOWING * best.planned.worstMiss())
+                    continue;
                 boolean fewer = way.weighings() < best.weighings() && way.planned.option() == best.planned.option();
                 if (fewer && way.chance < WORTH_FEWER * best.chance) continue;
                 others.add(new Answer.Alternative(

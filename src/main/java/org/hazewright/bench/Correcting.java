@@ -1,7 +1,6 @@
 package org.hazewright.bench;
 
 import java.util.ArrayList;
-import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
@@ -14,10 +13,7 @@ import org.hazewright.mixture.Mixture;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.mixture.Stock;
 import org.hazewright.mixture.Sweep;
-import org.hazewright.optics.Figures;
 import org.hazewright.optics.Refusal;
-import org.hazewright.shelf.Family;
-import org.hazewright.shelf.Form;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Shelf;
 
@@ -38,6 +34,7 @@ public final class Correcting {
     private final Shelf shelf;
     private final List<Point> points;
     private final Recipe made;
+    private final Pouring pouring;
     private final Learned learned;
     private final Sweep sweep;
     private final double vesselMl;
@@ -52,6 +49,7 @@ public final class Correcting {
                         + " tables to its file."));
         points = brief.points();
         made = batch.asMade();
+        pouring = new Pouring(batch, made, shelf);
         learned = Learned.of(batch);
         Mixture mixture = Mixture.of(made);
         vesselMl = mixture.volumeMl();
@@ -84,10 +82,6 @@ public final class Correcting {
         return learned.landing(recipe, points, own, batch.balance().capacityG());
     }
 
-    /** Something that can be poured: out of a bottle or a stock, or fresh base. */
-    private record Pourable(
-            String label, Map<Ingredient, Double> perG, Optional<Stock> stock, Optional<Stock> toMake) {}
-
     private record Try(List<Stock> stocks, List<Item> items, Recipe after, double addedMl, Learned.Landing landing) {}
 
     private Correction find(double wanted, double capacityMl) {
@@ -100,11 +94,18 @@ public final class Correcting {
         Search inside = new Search(wanted, capacityMl - vesselMl);
         inside.run();
         if (inside.enough != null)
-            return correction(Correction.Outcome.ADD, inside.enough, wanted, reasonToAdd(inside.enough));
+            return correction(
+                    Correction.Outcome.ADD, inside.enough, wanted, CorrectionWords.toAdd(now, inside.enough.addedMl()));
         Search roomy = new Search(wanted, 10 * vesselMl);
         roomy.run();
         Try best = inside.best == null ? new Try(List.of(), List.of(), made, 0, now) : inside.best;
         return correction(Correction.Outcome.START_AGAIN, best, wanted, reasonToStart(best, roomy, capacityMl));
+    }
+
+    private String reasonToStart(Try best, Search roomy, double capacityMl) {
+        return roomy.enough != null
+                ? CorrectionWords.noRoom(now, roomy.enough.addedMl(), capacityMl - vesselMl)
+                : CorrectionWords.noUse(now, best.landing());
     }
 
     private final class Search {
@@ -164,7 +165,7 @@ public final class Correcting {
     }
 
     private Optional<Try> attempt(double addedMl, Set<String> known, boolean leaveOut) {
-        List<Pourable> pourables = pourables(known, leaveOut);
+        List<Pourable> pourables = pouring.list(known, leaveOut);
         Optional<double[]> grams = additions(pourables).best(addedMl);
         if (grams.isEmpty()) return Optional.empty();
         Set<String> small = new LinkedHashSet<>(known);
@@ -204,64 +205,6 @@ public final class Correcting {
         double[] vessel =
                 now.predicted().stream().mapToDouble(p -> p.perCm() * vesselMl).toArray();
         return new Additions(points, vessel, vesselMl, kappa, ml);
-    }
-
-    /** Fresh base, every stock that an item was drawn from, and every other ingredient that went in neat; the small ones left out or diluted. */
-    private List<Pourable> pourables(Set<String> small, boolean leaveOut) {
-        List<Pourable> list = new ArrayList<>();
-        Map<Ingredient, Double> base = new LinkedHashMap<>();
-        for (var part : shelf.partsOf(made.base()).entrySet()) base.put(asUsed(part.getKey()), part.getValue());
-        list.add(new Pourable("base", base, Optional.empty(), Optional.empty()));
-        Set<String> seen = new LinkedHashSet<>();
-        for (Item i : made.items()) {
-            if (i.stock().isEmpty() && batch.isBasePart(i.ingredient()) || !seen.add(i.label())) continue;
-            Optional<Stock> from = i.stock().map(made::stock);
-            Pourable p = from.isPresent()
-                    ? new Pourable(i.label(), made.contentPerG(i.stock().get()), from, Optional.empty())
-                    : new Pourable(i.label(), Map.of(i.ingredient(), 1.0), Optional.empty(), Optional.empty());
-            boolean tooLittle = small.contains(p.label());
-            if (tooLittle && leaveOut) continue;
-            list.add(tooLittle ? diluted(p, i.ingredient(), from) : p);
-        }
-        return list;
-    }
-
-    /** The lot of an ingredient that is in the vessel, so that its coefficients are those of the vessel. */
-    private Ingredient asUsed(Ingredient i) {
-        for (Ingredient used : sweepIngredients())
-            if (used.equals(i) || used.kind().equals(i.id())) return used;
-        throw new Refusal("The vessel holds no " + i.id() + ", a part of the base "
-                + made.base().id() + ", so no fresh base can be added to it.");
-    }
-
-    private Set<Ingredient> sweepIngredients() {
-        return made.massesG().keySet();
-    }
-
-    /** A bottle diluted a hundred times, a stock ten times more, so that the balance can weigh it. */
-    private Pourable diluted(Pourable p, Ingredient what, Optional<Stock> from) {
-        Ingredient liquid = shelf.partsOf(made.base()).keySet().stream()
-                .filter(i -> i.form() == Form.LIQUID)
-                .findFirst()
-                .map(this::asUsed)
-                .orElseThrow(() -> new Refusal("Too little " + p.label()
-                        + " to weigh would be needed, and the base has no liquid to dilute it in."));
-        int ratio = from.isPresent() ? 10 : 100;
-        double grams =
-                batch.balance().rounded(Math.max(0.5, 25 * batch.balance().smallestLoadG()));
-        Stock s = new Stock(
-                p.label() + "-1-" + ratio + "-correction-" + (batch.correctionCount() + 1),
-                what,
-                from.isPresent() ? from.get().lot() : what.lot().map(l -> l.number()),
-                grams,
-                liquid,
-                batch.balance().rounded((ratio - 1) * grams),
-                from.map(Stock::id));
-        Map<Ingredient, Double> perG = new LinkedHashMap<>();
-        double share = s.ingredientG() / s.totalG();
-        p.perG().forEach((i, g) -> perG.merge(i, g * share, Double::sum));
-        perG.merge(liquid, 1 - share, Double::sum);
-        return new Pourable(p.label(), perG, Optional.of(s), Optional.of(s));
     }
 
     private Try rounded(List<Pourable> pourables, double[] grams) {
@@ -313,30 +256,8 @@ public final class Correcting {
                 t.landing(),
                 wanted,
                 reason,
-                notes(t),
+                CorrectionWords.notes(made, t.items()),
                 fresh());
-    }
-
-    private List<String> notes(Try t) {
-        List<String> notes = new ArrayList<>();
-        Family family = made.base().family();
-        if (!t.items().isEmpty() && family == Family.GEL)
-            notes.add(
-                    "A gel that has set must be melted again before anything is stirred in; weigh the vessel before and after.");
-        if (!t.items().isEmpty() && (family == Family.SILICONE || family == Family.RESIN))
-            notes.add(
-                    "Only before it cures: what has cured cannot be corrected. Keep to the pot life that the data sheet gives.");
-        for (Leftover l : Leftover.of(made)) {
-            double drawn = t.items().stream()
-                    .filter(i -> i.stock().filter(l.stock()::equals).isPresent())
-                    .mapToDouble(Item::massG)
-                    .sum();
-            if (drawn > l.leftG())
-                notes.add("Of the stock " + l.stock() + " " + Grams.plain(drawn) + " g are needed and "
-                        + Grams.plain(Math.max(0, l.leftG()))
-                        + " g are left; make it again in the same ratio, or add less.");
-        }
-        return notes;
     }
 
     private Correction.Fresh fresh() {
@@ -362,45 +283,5 @@ public final class Correcting {
         Recipe p = batch.plan();
         return new Recipe(
                 p.title(), p.base(), p.temperatureC(), p.weighingUncertaintyG(), p.briefSha256(), p.stocks(), items);
-    }
-
-    private String reasonToAdd(Try t) {
-        return "It is off most in " + words(worst(now)) + ". Adding " + Figures.significant(t.addedMl(), 3)
-                + " mL is the least that gives the wanted chance.";
-    }
-
-    private String reasonToStart(Try best, Search roomy, double capacityMl) {
-        String off = "What is off most is " + words(worst(now)) + ". ";
-        if (roomy.enough != null)
-            return off + "To put it right " + Figures.significant(roomy.enough.addedMl(), 3)
-                    + " mL would have to be added, and the vessel has room for "
-                    + Figures.significant(capacityMl - vesselMl, 3) + " mL.";
-        double reached = best.landing().chance();
-        String most =
-                reached > now.chance() ? "At best adding reaches " + percent(reached) + ", " : "Adding does not help: ";
-        double sure = best.landing().predicted().stream()
-                .mapToDouble(p -> p.uPerCm() / p.point().tolerancePerCm())
-                .max()
-                .orElse(0);
-        if (best.landing().worstMiss() <= 1 && sure > 0.4)
-            return off + most + "because what is in the vessel is not known well enough ("
-                    + Figures.significant(sure, 2)
-                    + " of a half-width is uncertain). Measure it, or measure it better, before pouring it away.";
-        return off + most + "because " + words(worst(best.landing())) + " stays, and nothing can be taken out.";
-    }
-
-    private static Answer.Predicted worst(Learned.Landing landing) {
-        return landing.predicted().stream()
-                .max((a, b) -> Double.compare(Math.abs(a.miss()), Math.abs(b.miss())))
-                .orElseThrow();
-    }
-
-    private static String words(Answer.Predicted p) {
-        return p.point().quantity().sign() + " at " + Grams.plain(p.point().wavelengthNm()) + " nm, "
-                + Figures.significant(Math.abs(p.miss()), 2) + " half-widths too " + (p.miss() > 0 ? "high" : "low");
-    }
-
-    private static String percent(double chance) {
-        return Figures.significant(100 * chance, 2) + " in 100";
     }
 }

@@ -7,11 +7,11 @@ import java.util.List;
 import java.util.Map;
 import org.hazewright.brief.Brief;
 import org.hazewright.brief.Point;
-import org.hazewright.design.ConvexProgramme;
 import org.hazewright.design.Frozen;
 import org.hazewright.mixture.Mixture;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.mixture.Sweep;
+import org.hazewright.search.ConvexProgramme;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Shelf;
 
@@ -54,6 +54,8 @@ public final class Following {
             if (ours.get(j).quantity() != theirs.get(j).quantity()
                     || ours.get(j).wavelengthNm() != theirs.get(j).wavelengthNm()) return false;
         return changed.temperatureC() == recipe.temperatureC()
+                && Answering.inHand(changed, shelf).stream()
+                        .allMatch(s -> sweep.covers(List.of(s.diluent())) || !added.contains(s.ingredient()))
                 && added.stream().noneMatch(i -> changed.limits().avoid().contains(i.id()))
                 && baseParts.keySet().stream().allMatch(sweepKnows());
     }
@@ -75,7 +77,8 @@ public final class Following {
                 concentrations,
                 changed.volumeMl(),
                 changed.temperatureC(),
-                changed.sha256());
+                changed.sha256(),
+                Answering.inHand(changed, shelf));
         Recipe rounded = StockPlan.of(
                         contents,
                         changed.balance(),

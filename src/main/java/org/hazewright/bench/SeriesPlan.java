@@ -249,9 +249,12 @@ public record SeriesPlan(
         String bottles = found.best().ids().isEmpty()
                 ? "no bottle but the base"
                 : String.join(", ", found.best().ids());
-        String why = "One list of bottles for the set: " + bottles + ". Of " + found.compared()
-                + (found.compared() == 1 ? " set" : " sets") + " that " + (found.compared() == 1 ? "leads" : "lead")
-                + " for any phantom it brings " + inside + " of " + all + " inside every tolerance";
+        String why = "One list of bottles for the set: " + bottles + "; it brings " + inside + " of " + all
+                + " inside every tolerance. "
+                + (found.ofAll()
+                        ? "Of the " + found.compared() + " sets of bottles that the brief allows none does better"
+                        : "It is the best of the " + found.compared()
+                                + " sets that lead for any phantom; that no other set does better for all is not proven");
         if (found.next().isPresent()) {
             CommonSet.Way next = found.next().get();
             why += "; the next best (" + (next.ids().isEmpty() ? "the base alone" : String.join(", ", next.ids()))

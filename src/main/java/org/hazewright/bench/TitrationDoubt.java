@@ -3,8 +3,10 @@ package org.hazewright.bench;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.LinkedHashMap;
+import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
+import java.util.Set;
 import java.util.function.Function;
 import org.hazewright.brief.Balance;
 import org.hazewright.brief.Titration;
@@ -56,32 +58,41 @@ final class TitrationDoubt {
         return states;
     }
 
-    /** Standard uncertainties at each step, 1/cm: µa at each wavelength, then µs'. */
-    List<double[]> uPerCm() {
+    /**
+     * What one standard uncertainty of each cause adds at each step, 1/cm, the causes independent of one another and in the same
+     * order at every step: [cause][µa at each wavelength, then µs'].
+     */
+    List<double[][]> effectsPerCm() {
         List<Vessel> states = run(planned, planned.waterBackG, titration, water);
-        List<double[]> variance = new ArrayList<>();
-        for (int k = 0; k < states.size(); k++) variance.add(ofFigures(states.get(k), sweeps.get(k)));
+        List<List<double[]>> effects = ofFigures(states);
         for (Weighing w : Weighing.of(planned.start))
-            if (w.role() == Weighing.Role.ITEM) add(variance, w.massG(), by -> startMoved(w, by));
+            if (w.role() == Weighing.Role.ITEM) add(effects, w.massG(), by -> startMoved(w, by));
         for (Weighing w : Weighing.of(planned.titrant))
-            if (w.role() == Weighing.Role.ITEM) add(variance, w.massG(), by -> titrantMoved(w, by));
-        stocks().values().forEach(w -> add(variance, w.massG(), by -> stockMoved(w, by)));
+            if (w.role() == Weighing.Role.ITEM) add(effects, w.massG(), by -> titrantMoved(w, by));
+        stocks().values().forEach(w -> add(effects, w.massG(), by -> stockMoved(w, by)));
         for (int k = 0; k < planned.addedG.size(); k++) {
             int step = k;
             add(
-                    variance,
+                    effects,
                     planned.addedG.get(k),
                     by -> new Loads(
                             planned.start, planned.titrant, moved(planned.addedG, step, by), planned.waterBackG));
             if (planned.waterBackG.get(k) > 0)
                 add(
-                        variance,
+                        effects,
                         planned.waterBackG.get(k),
                         by -> new Loads(
                                 planned.start, planned.titrant, planned.addedG, moved(planned.waterBackG, step, by)));
         }
-        variance.forEach(v -> Arrays.setAll(v, j -> Math.sqrt(v[j])));
-        return variance;
+        return effects.stream().map(e -> e.toArray(double[][]::new)).toList();
+    }
+
+    /** Standard uncertainties, 1/cm, of what causes do together. */
+    static double[] uPerCm(double[][] effects) {
+        double[] u = new double[effects[0].length];
+        for (double[] e : effects) for (int j = 0; j < u.length; j++) u[j] += square(e[j]);
+        Arrays.setAll(u, j -> Math.sqrt(u[j]));
+        return u;
     }
 
     /** Loads of stocks, each once, although bath and titrant may both draw from one. */
@@ -121,19 +132,18 @@ final class TitrationDoubt {
     }
 
     /** Adds what one load's standard uncertainty does, by a central difference. */
-    private void add(List<double[]> variance, double massG, Function<Double, Loads> moved) {
+    private void add(List<List<double[]>> effects, double massG, Function<Double, Loads> moved) {
         double u = balance.standardUncertaintyG() * Math.sqrt(balance.loads(massG));
         double step = Math.min(u, massG / 2);
         if (!(step > 0)) return;
         List<Vessel> up = run(moved.apply(step), planned.waterBackG, titration, water);
         List<Vessel> down = run(moved.apply(-step), planned.waterBackG, titration, water);
-        for (int k = 0; k < variance.size(); k++) {
+        for (int k = 0; k < effects.size(); k++) {
             double[] high = values(up.get(k), sweeps.get(k));
             double[] low = values(down.get(k), sweeps.get(k));
-            for (int j = 0; j < high.length; j++) {
-                double effect = (high[j] - low[j]) / (2 * step) * u;
-                variance.get(k)[j] += effect * effect;
-            }
+            double[] effect = new double[high.length];
+            for (int j = 0; j < high.length; j++) effect[j] = (high[j] - low[j]) / (2 * step) * u;
+            effects.get(k).add(effect);
         }
     }
 
@@ -145,23 +155,43 @@ final class TitrationDoubt {
         return both;
     }
 
-    private static double[] ofFigures(Vessel v, Sweep sweep) {
-        double[] mu = values(v, sweep);
+    /**
+     * Coefficients, densities and the finished volume at each step. Where an ingredient's scattering goes with its absorption
+     * (correlation r), the second is split in a part that follows the first and one of its own.
+     */
+    private List<List<double[]>> ofFigures(List<Vessel> states) {
+        Set<Ingredient> all = new LinkedHashSet<>();
+        states.forEach(v -> all.addAll(v.massesG().keySet()));
+        List<List<double[]>> effects = new ArrayList<>();
+        for (int k = 0; k < states.size(); k++) {
+            Vessel v = states.get(k);
+            double[] mu = values(v, sweeps.get(k));
+            List<double[]> here = new ArrayList<>();
+            for (Ingredient i : all) ofIngredient(i, v, sweeps.get(k), mu, here);
+            here.add(Arrays.stream(mu).map(x -> x * Budget.VOLUME).toArray());
+            effects.add(here);
+        }
+        return effects;
+    }
+
+    private static void ofIngredient(Ingredient i, Vessel v, Sweep sweep, double[] mu, List<double[]> effects) {
         int n = mu.length / 2;
-        double[] variance = new double[mu.length];
-        double whole = v.volumeMl();
-        for (Ingredient i : v.massesG().keySet()) {
+        double[] withAbsorption = new double[2 * n];
+        double[] alone = new double[2 * n];
+        double[] density = new double[2 * n];
+        if (v.massesG().containsKey(i)) {
             double[] a = sweep.muaShare(i, v.massesG());
             double[] s = sweep.muspShare(i, v.massesG());
-            double share = v.massesG().get(i) / i.densityGPerMl() / whole;
+            double r = i.uncertainty().correlation();
             for (int j = 0; j < n; j++) {
-                variance[j] += square(a[j] * i.uncertainty().absorption());
-                variance[n + j] += square(s[j] * i.uncertainty().scattering());
+                withAbsorption[j] = a[j] * i.uncertainty().absorption();
+                withAbsorption[n + j] = s[j] * i.uncertainty().scattering() * r;
+                alone[n + j] = s[j] * i.uncertainty().scattering() * Math.sqrt(1 - r * r);
             }
-            for (int j = 0; j < mu.length; j++) variance[j] += square(mu[j] * share * Budget.DENSITY);
+            double share = v.massesG().get(i) / i.densityGPerMl() / v.volumeMl();
+            for (int j = 0; j < mu.length; j++) density[j] = mu[j] * share * Budget.DENSITY;
         }
-        for (int j = 0; j < mu.length; j++) variance[j] += square(mu[j] * Budget.VOLUME);
-        return variance;
+        effects.addAll(List.of(withAbsorption, alone, density));
     }
 
     private static double square(double x) {

@@ -40,6 +40,7 @@ import org.hazewright.shelf.Shelf;
  * @param titrant what is added, as a recipe; a tenth more than is used
  * @param steps the first phantom, then one for every other
  * @param vesselMl the largest volume that is in the vessel at any time
+ * @param chanceOfAll that every step lands inside every tolerance
  */
 public record TitrationPlan(
         Series series,
@@ -49,6 +50,7 @@ public record TitrationPlan(
         Recipe start,
         Recipe titrant,
         List<Step> steps,
+        double chanceOfAll,
         double vesselMl,
         Map<Ingredient, Double> buyG,
         List<String> notes,
@@ -70,6 +72,8 @@ public record TitrationPlan(
      * @param waterBackG water given back before adding
      * @param addG titrant to add, 0 for the first
      * @param contentG all that is in the vessel afterwards
+     * @param chance that every target of this step lies inside its tolerance, first-order ({@link Landings}), earlier errors
+     *     included
      */
     public record Step(
             String name,
@@ -79,7 +83,8 @@ public record TitrationPlan(
             double addG,
             double contentG,
             double contentMl,
-            List<Answer.Predicted> predicted) {
+            List<Answer.Predicted> predicted,
+            double chance) {
         public Step {
             predicted = List.copyOf(predicted);
         }
@@ -237,7 +242,8 @@ public record TitrationPlan(
             Recipe start = SeriesPlan.drawing(bathPlan.recipe(), stocks);
             Recipe added = SeriesPlan.drawing(titrantPlan.recipe(), stocks);
             List<Double> doses = doses(start, added);
-            List<Step> steps = steps(start, added, doses);
+            Run run = run(start, added, doses);
+            List<Step> steps = run.steps;
             double largest = steps.stream().mapToDouble(Step::contentMl).max().orElse(0);
             List<Recipe> both = List.of(start, added);
             Map<Ingredient, Double> buy = SeriesPlan.buy(stocks, both);
@@ -251,6 +257,7 @@ public record TitrationPlan(
                     start,
                     added,
                     steps,
+                    run.chanceOfAll,
                     largest,
                     buy,
                     notes(steps, List.of(bathPlan, titrantPlan)),
@@ -303,7 +310,9 @@ public record TitrationPlan(
             return doses;
         }
 
-        private List<Step> steps(Recipe start, Recipe titrant, List<Double> doses) {
+        private record Run(List<Step> steps, double chanceOfAll) {}
+
+        private Run run(Recipe start, Recipe titrant, List<Double> doses) {
             List<Double> back = new ArrayList<>(
                     java.util.Collections.nCopies(doses.size(), balance.rounded(titration.evaporationGPerStep())));
             TitrationDoubt.Loads loads = new TitrationDoubt.Loads(start, titrant, doses, back);
@@ -313,7 +322,15 @@ public record TitrationPlan(
                 Brief b = briefs.get(k);
                 sweeps.add(Sweep.of(new Mixture(states.get(k).massesG(), b.temperatureC()), b.wavelengthsNm()));
             }
-            List<double[]> u = new TitrationDoubt(loads, titration, water, balance, sweeps).uPerCm();
+            List<double[][]> effects = new TitrationDoubt(loads, titration, water, balance, sweeps).effectsPerCm();
+            List<List<Answer.Predicted>> predicted = new ArrayList<>();
+            List<Landings.Doubt> doubts = new ArrayList<>();
+            for (int k = 0; k < states.size(); k++) {
+                predicted.add(
+                        predicted(briefs.get(k), states.get(k), sweeps.get(k), TitrationDoubt.uPerCm(effects.get(k))));
+                doubts.add(doubt(briefs.get(k), predicted.get(k), effects.get(k)));
+            }
+            Landings landings = Landings.of(doubts);
             List<Step> steps = new ArrayList<>();
             for (int k = 0; k < states.size(); k++) {
                 Vessel v = states.get(k);
@@ -326,9 +343,25 @@ public record TitrationPlan(
                         k == 0 ? 0 : doses.get(k - 1),
                         v.massG(),
                         v.volumeMl(),
-                        predicted(b, v, sweeps.get(k), u.get(k))));
+                        predicted.get(k),
+                        landings.each()[k]));
             }
-            return steps;
+            return new Run(steps, landings.all());
+        }
+
+        /** A step's misses, and what moves them, in half-widths. */
+        private static Landings.Doubt doubt(Brief b, List<Answer.Predicted> predicted, double[][] effects) {
+            double[] nm = b.wavelengthsNm();
+            double[] misses = new double[predicted.size()];
+            double[][] moved = new double[effects.length][misses.length];
+            for (int j = 0; j < misses.length; j++) {
+                Point p = predicted.get(j).point();
+                int at = Arrays.binarySearch(nm, p.wavelengthNm())
+                        + (p.quantity() == Point.Quantity.MUSP ? nm.length : 0);
+                misses[j] = predicted.get(j).miss();
+                for (int c = 0; c < moved.length; c++) moved[c][j] = effects[c][at] / p.tolerancePerCm();
+            }
+            return new Landings.Doubt(misses, moved);
         }
 
         private static List<Answer.Predicted> predicted(Brief b, Vessel v, Sweep sweep, double[] u) {

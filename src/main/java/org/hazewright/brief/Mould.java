@@ -1,5 +1,8 @@
 package org.hazewright.brief;
 
+import java.util.List;
+import java.util.stream.Collectors;
+import org.hazewright.optics.Figures;
 import org.hazewright.optics.Refusal;
 
 /** A mould to fill, inner sizes in mm: a box (length, width, height) or a cylinder (diameter, height), {@code count} of it. */
@@ -25,6 +28,19 @@ public record Mould(Shape shape, double lengthMm, double widthMm, double heightM
     public double volumeMl() {
         double areaMm2 = shape == Shape.BOX ? lengthMm * widthMm : Math.PI / 4 * lengthMm * lengthMm;
         return count * areaMm2 * heightMm / 1000;
+    }
+
+    /** As a person says it: {@code 2 moulds of 120 × 80 × 20 mm}, inner sizes. */
+    public String words() {
+        String sizes = shape == Shape.BOX
+                ? Figures.plain(lengthMm) + " × " + Figures.plain(widthMm) + " × " + Figures.plain(heightMm) + " mm"
+                : Figures.plain(lengthMm) + " mm across and " + Figures.plain(heightMm) + " mm high";
+        return (count == 1 ? "a mould of " : count + " moulds of ") + sizes;
+    }
+
+    /** Several, joined; empty for none. */
+    public static String words(List<Mould> moulds) {
+        return moulds.stream().map(Mould::words).collect(Collectors.joining(" and "));
     }
 
     /** The way that light would go through: the shortest inner size. */

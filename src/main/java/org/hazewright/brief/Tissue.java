@@ -53,10 +53,15 @@ public record Tissue(
                         * molPerL
                         * (saturation * spectra.oxyEpsilon().at(nm)
                                 + (1 - saturation) * spectra.deoxyEpsilon().at(nm));
+        return haemoglobin + bloodlessPerCm(nm, spectra);
+    }
+
+    /** Absorption of its water and fat alone at a wavelength in nm, 1/cm. */
+    public double bloodlessPerCm(double nm, Spectra spectra) {
         double water =
                 waterFraction == 0 ? 0 : waterFraction * spectra.waterMua().at(nm);
         double fat = fatFraction == 0 ? 0 : fatFraction * spectra.fatMua().at(nm);
-        return haemoglobin + water + fat;
+        return water + fat;
     }
 
     /** Targets with relative tolerances {@code muaTolerance} and {@code muspTolerance}. */

@@ -7,6 +7,7 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.concurrent.Callable;
 import org.hazewright.bench.Answer;
 import org.hazewright.bench.Answering;
@@ -17,6 +18,8 @@ import org.hazewright.files.RecipeWriter;
 import org.hazewright.files.SafeFile;
 import org.hazewright.files.WriteFailure;
 import org.hazewright.optics.Refusal;
+import org.hazewright.reading.HaemoglobinEquivalent;
+import org.hazewright.sheet.InstrumentReadings;
 import org.hazewright.sheet.RecipeSheet;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
@@ -73,7 +76,7 @@ final class DesignCommand implements Callable<Integer> {
     }
 
     /** A brief answered, with the files that were written. */
-    private record Done(Answer answer, List<Path> written) {
+    private record Done(Answer answer, Optional<HaemoglobinEquivalent> blood, List<Path> written) {
         int status() {
             return answer.meets() ? Hazewright.DONE : Hazewright.MISSES;
         }
@@ -85,7 +88,8 @@ final class DesignCommand implements Callable<Integer> {
     private Done done(Path brief, LongWork work, LocalDate today) {
         Brief wanted = BriefReader.read(brief, shared.tissueSpectra());
         Answer answer = answer(wanted, work);
-        return new Done(answer, write(answer, today, folder(brief)));
+        Optional<HaemoglobinEquivalent> blood = InstrumentReadings.haemoglobin(answer, shared.tissueSpectra());
+        return new Done(answer, blood, write(answer, today, folder(brief)));
     }
 
     /** A brief that names its bottles needs only those; when it is refused, the whole shelf says best what would mend it. */
@@ -154,7 +158,7 @@ final class DesignCommand implements Callable<Integer> {
             if (o.problem == null) {
                 results.add(Json.object()
                         .with("brief", o.brief.toString())
-                        .withAll(DesignJson.of(o.done.answer))
+                        .withAll(DesignJson.of(o.done.answer, o.done.blood))
                         .fields());
                 status = Hazewright.worse(status, o.done.status());
                 continue;
@@ -177,9 +181,9 @@ final class DesignCommand implements Callable<Integer> {
     }
 
     private int print(Done done, LocalDate today, PrintWriter text) {
-        if (shared.json) DesignJson.of(done.answer).print(text);
+        if (shared.json) DesignJson.of(done.answer, done.blood).print(text);
         else {
-            new DesignText(done.answer, shared.units, text).print(Warnings.of(done.answer.recipe(), today));
+            new DesignText(done.answer, done.blood, shared.units, text).print(Warnings.of(done.answer.recipe(), today));
             if (!shared.quiet) done.written.forEach(p -> text.println("Written: " + p));
         }
         return done.status();

@@ -3,6 +3,7 @@ package org.hazewright.cli;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import org.hazewright.bench.Answer;
 import org.hazewright.brief.Brief;
 import org.hazewright.brief.Point;
@@ -11,12 +12,26 @@ import org.hazewright.design.Score;
 import org.hazewright.mixture.Item;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.mixture.Stock;
+import org.hazewright.reading.HaemoglobinEquivalent;
 
 /** An answer as the JSON document of {@code design --json}; coefficients always in 1/cm. */
 final class DesignJson {
     private DesignJson() {}
 
-    static Json of(Answer answer) {
+    /** {@code blood} is what the recipe comes to as blood, for a tissue-like brief. */
+    static Json of(Answer answer, Optional<HaemoglobinEquivalent> blood) {
+        Json json = of(answer);
+        blood.ifPresent(h -> json.with(
+                "haemoglobin_equivalent",
+                Json.object()
+                        .with("haemoglobin_umol_per_l", h.umolPerL())
+                        .with("u_haemoglobin_umol_per_l", h.uUmolPerL())
+                        .with("saturation", h.saturation())
+                        .with("u_saturation", h.uSaturation())));
+        return json;
+    }
+
+    private static Json of(Answer answer) {
         Brief brief = answer.brief();
         Recipe recipe = answer.recipe();
         List<Map<String, Object>> exactItems = new ArrayList<>();

@@ -6,6 +6,7 @@ import java.util.Comparator;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 import java.util.Set;
 import org.hazewright.bench.Answer;
 import org.hazewright.bench.Answering;
@@ -16,11 +17,14 @@ import org.hazewright.bench.Warning;
 import org.hazewright.bench.Weighing;
 import org.hazewright.brief.Balance;
 import org.hazewright.brief.Brief;
+import org.hazewright.brief.Mould;
+import org.hazewright.brief.Tissue;
 import org.hazewright.mixture.Cause;
 import org.hazewright.mixture.Item;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.mixture.Stock;
 import org.hazewright.optics.Figures;
+import org.hazewright.reading.HaemoglobinEquivalent;
 import org.hazewright.shelf.Form;
 import org.hazewright.shelf.Ingredient;
 
@@ -33,9 +37,12 @@ final class DesignText {
     private final Shared.Units units;
     private final PrintWriter out;
     private final Balance balance;
+    private final Optional<HaemoglobinEquivalent> blood;
 
-    DesignText(Answer answer, Shared.Units units, PrintWriter out) {
+    /** {@code blood} is what the recipe comes to as blood, for a tissue-like brief. */
+    DesignText(Answer answer, Optional<HaemoglobinEquivalent> blood, Shared.Units units, PrintWriter out) {
         this.answer = answer;
+        this.blood = blood;
         this.units = units;
         this.out = out;
         this.balance = answer.brief().balance();
@@ -49,12 +56,14 @@ final class DesignText {
                         ? " + " + Figures.plain(100 * brief.overage()) + " % = "
                                 + Figures.significant(brief.volumeMl(), 5) + " mL"
                         : "")
+                + (brief.moulds().isEmpty() ? "" : " for " + Mould.words(brief.moulds()))
                 + ", at " + Figures.plain(brief.temperatureC()) + " °C");
         out.println();
         out.println(verdict(answer));
         stocks();
         weighing();
         targets();
+        blood.ifPresent(this::blood);
         causes();
         slips();
         section("What holds it back", answer.limits());
@@ -162,6 +171,20 @@ final class DesignText {
         out.println("  miss: in half-widths of the tolerance; u: standard uncertainty (k = 1)");
     }
 
+    private void blood(HaemoglobinEquivalent h) {
+        Tissue wanted = answer.brief().tissue().orElseThrow();
+        int decimals = Figures.decimalsFor(h.uUmolPerL());
+        int shares = Figures.decimalsFor(100 * h.uSaturation());
+        wrapped("As blood: its absorption, less the tissue's water and fat, is that of "
+                        + Figures.fixed(h.umolPerL(), decimals) + " ± " + Figures.fixed(h.uUmolPerL(), decimals)
+                        + " µmol/L of haemoglobin at a saturation of "
+                        + Figures.fixed(100 * h.saturation(), shares) + " ± "
+                        + Figures.fixed(100 * h.uSaturation(), shares) + " %; the brief says "
+                        + Figures.plain(wanted.haemoglobinUmolPerL()) + " µmol/L at "
+                        + Figures.significant(100 * wanted.saturation(), 3) + " %.")
+                .forEach(line -> out.println("  " + line));
+    }
+
     /** Shares of the summed variance in units of tolerance, largest first. */
     private void causes() {
         record Share(String name, double share) {}
@@ -240,7 +263,10 @@ final class DesignText {
         for (Answer.Alternative a : answer.alternatives()) {
             Set<String> what = new LinkedHashSet<>();
             a.recipe().items().forEach(i -> what.add(i.label()));
-            table.row(a.why(), times(a.chance()) + " in 100", a.weighings() + " weighings", String.join(", ", what));
+            String lands = a.worstMiss() > 1
+                    ? "worst miss " + Figures.significant(a.worstMiss(), 3)
+                    : times(a.chance()) + " in 100";
+            table.row(a.why(), lands, a.weighings() + " weighings", String.join(", ", what));
         }
         table.print(out);
     }

@@ -68,12 +68,14 @@ public final class Hazewright implements Callable<Integer> {
             names = {"-h", "--help"},
             usageHelp = true,
             description = "Show this help and end.")
+    @SuppressWarnings("unused") // the parser asks it
     private boolean help;
 
     @Option(
             names = {"-V", "--version"},
             versionHelp = true,
             description = "Show the version and end.")
+    @SuppressWarnings("unused") // the parser asks it
     private boolean version;
 
     @Option(
@@ -134,6 +136,8 @@ public final class Hazewright implements Callable<Integer> {
                 .setColorScheme(CommandLine.Help.defaultColorScheme(CommandLine.Help.Ansi.OFF))
                 .setUsageHelpWidth(100)
                 .setCaseInsensitiveEnumValuesAllowed(true)
+                .registerConverter(Double.class, Hazewright::number)
+                .registerConverter(double.class, Hazewright::number)
                 .setParameterExceptionHandler((problem, given) -> {
                     err.println("hazewright: " + plain(problem));
                     return REFUSED;
@@ -151,6 +155,15 @@ public final class Hazewright implements Callable<Integer> {
         out.flush();
         err.flush();
         return status;
+    }
+
+    private static Double number(String text) {
+        try {
+            return Double.valueOf(text);
+        } catch (NumberFormatException e) {
+            throw new CommandLine.TypeConversionException("'" + text
+                    + "' is not a number; write digits with a decimal point and without a unit, such as 0.3");
+        }
     }
 
     /** Says what went wrong, in words for a person, and gives its exit status. */

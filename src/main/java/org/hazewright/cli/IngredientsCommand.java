@@ -7,7 +7,10 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Set;
+import java.util.TreeSet;
 import java.util.concurrent.Callable;
+import java.util.function.Predicate;
 import org.hazewright.files.FileRefusal;
 import org.hazewright.files.ShelfReader;
 import org.hazewright.mixture.MassSpecific;
@@ -40,6 +43,7 @@ import picocli.CommandLine.Spec;
         })
 final class IngredientsCommand implements Callable<Integer> {
     @Mixin
+    @SuppressWarnings("unused") // its options are taken before a subcommand too
     private Shared shared;
 
     @Spec
@@ -78,22 +82,41 @@ final class IngredientsCommand implements Callable<Integer> {
                         .print(out);
                 return Hazewright.DONE;
             }
-            for (Part part : Part.values()) {
-                List<Ingredient> of = shelf.ingredients().stream()
-                        .filter(i -> i.part() == part)
-                        .toList();
-                if (of.isEmpty()) continue;
-                out.println(part.word()
-                        + (part == Part.BASE ? "s, and what family they are" : "s, and what they mix into"));
-                TextTable table = new TextTable("  ", "llll");
-                for (Ingredient i : of)
-                    table.row(i.id(), i.name(), families(i), i.source().basis().word());
-                table.print(out);
-                out.println();
-            }
+            Set<String> madeInto = madeIntoBases(shelf);
+            for (Part part : Part.values())
+                group(
+                        part.word() + (part == Part.BASE ? "s, and what family they are" : "s, and what they mix into"),
+                        shelf,
+                        i -> i.part() == part && !madeInto.contains(i.id()),
+                        out);
+            group(
+                    "parts of bases and powders to make them, and what they mix into",
+                    shelf,
+                    i -> madeInto.contains(i.id()),
+                    out);
             out.println(shelf.ingredients().size() + " ingredients on the shelf " + shelf.place()
                     + ". One of them: hazewright ingredients show ID");
             return Hazewright.DONE;
+        }
+
+        /** What is no base itself and stands in the blend of one. */
+        private static Set<String> madeIntoBases(Shelf shelf) {
+            Set<String> found = new TreeSet<>();
+            for (Ingredient base : shelf.ingredients())
+                for (BlendPart p : base.blend())
+                    if (shelf.require(p.ingredient()).part() == Part.MODIFIER) found.add(p.ingredient());
+            return found;
+        }
+
+        private static void group(String heading, Shelf shelf, Predicate<Ingredient> which, PrintWriter out) {
+            List<Ingredient> of = shelf.ingredients().stream().filter(which).toList();
+            if (of.isEmpty()) return;
+            out.println(heading);
+            TextTable table = new TextTable("  ", "llll");
+            for (Ingredient i : of)
+                table.row(i.id(), i.name(), families(i), i.source().basis().word());
+            table.print(out);
+            out.println();
         }
 
         private static Json row(Ingredient i) {
@@ -235,7 +258,11 @@ final class IngredientsCommand implements Callable<Integer> {
             String range = ", " + Figures.plain(s.fromNm()) + " to " + Figures.plain(s.toNm()) + " nm";
             if (s instanceof Scattering.MieParticles m)
                 return "Mie, " + m.particle().name() + ", " + percent(m.volumeFraction()) + " by volume"
-                        + (m.magnitude() == 1 ? "" : ", magnitude " + Figures.plain(m.magnitude()) + " of Mie") + range;
+                        + (m.magnitude() == 1 ? "" : ", magnitude " + Figures.plain(m.magnitude()) + " of Mie")
+                        + (m.absorptionMagnitude() == 1
+                                ? ""
+                                : ", own absorption " + Figures.plain(m.absorptionMagnitude()) + " of Mie")
+                        + range;
             return (s instanceof Scattering.PowerLaw ? "power law" : "table") + range;
         }
 

@@ -24,7 +24,7 @@ final class Recording {
         BatchWriter.write(file, batch, SafeFile.Overwrite.KEEP_PREVIOUS);
         if (!shared.json && !shared.quiet) out.println("Written: " + file);
         if (none) return Hazewright.DONE;
-        Path book = logbook != null ? logbook : file.toAbsolutePath().resolveSibling("logbook.xlsx");
+        Path book = logbook != null ? logbook : file.resolveSibling("logbook.xlsx");
         Logbook.Recorded recorded = Logbook.record(book, batch, file);
         if (recorded.waiting().isPresent()) {
             err.println("hazewright: The batch itself is written. "
@@ -32,13 +32,7 @@ final class Recording {
             return Hazewright.UNWRITABLE;
         }
         if (!shared.json && !shared.quiet)
-            out.println("Recorded: " + shown(book)
-                    + (recorded.merged() > 0 ? " (and " + recorded.merged() + " that waited beside it)" : ""));
+            out.println("Recorded: " + book + (recorded.found().isEmpty() ? "" : " (" + recorded.found() + ")"));
         return Hazewright.DONE;
-    }
-
-    private static Path shown(Path book) {
-        Path here = Path.of("").toAbsolutePath();
-        return book.isAbsolute() && book.startsWith(here) ? here.relativize(book) : book;
     }
 }

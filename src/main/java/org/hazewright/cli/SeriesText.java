@@ -5,6 +5,7 @@ import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
+import java.util.Map;
 import org.hazewright.bench.Answer;
 import org.hazewright.bench.Leftover;
 import org.hazewright.bench.SeriesPlan;
@@ -13,10 +14,12 @@ import org.hazewright.bench.Warning;
 import org.hazewright.bench.Warnings;
 import org.hazewright.brief.Balance;
 import org.hazewright.brief.Brief;
+import org.hazewright.brief.Mould;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.mixture.Stock;
 import org.hazewright.optics.Figures;
 import org.hazewright.shelf.Form;
+import org.hazewright.shelf.Ingredient;
 
 /** A set of phantoms as text: stocks, one weighing table, where each phantom lands, what to buy. */
 final class SeriesText {
@@ -40,14 +43,15 @@ final class SeriesText {
         out.println(plan.series().title());
         out.println(plan.base().name() + ", " + plan.phantoms().size() + " phantoms of "
                 + Figures.significant(first.volumeMl(), 5) + " mL each"
-                + (first.overage() > 0 ? " (" + Figures.plain(100 * first.overage()) + " % to spare)" : "") + ", at "
+                + (first.overage() > 0 ? " (" + Figures.plain(100 * first.overage()) + " % to spare)" : "")
+                + (first.moulds().isEmpty() ? "" : " for " + Mould.words(first.moulds())) + ", at "
                 + Figures.plain(first.temperatureC()) + " °C");
         out.println();
         out.println(verdict(plan));
         stocks(out, plan.stocks(), plan.leftovers(), balance);
         table();
         targets();
-        buy();
+        buy(out, plan.buyG(), balance);
         List<String> mind = new ArrayList<>(plan.notes());
         Warnings.of(fullest(plan), day).stream().map(Warning::text).forEach(mind::add);
         section(out, "Mind", mind);
@@ -168,16 +172,15 @@ final class SeriesText {
                 + Figures.fixed(units.of(x.point().wantedPerCm()), decimals) + ") ± " + Figures.fixed(u, decimals);
     }
 
-    private void buy() {
+    static void buy(PrintWriter out, Map<Ingredient, Double> buyG, Balance balance) {
         out.println();
         out.println("To have at hand, stocks included");
         TextTable table = new TextTable("  ", "lrrl");
-        plan.buyG()
-                .forEach((i, g) -> table.row(
-                        i.id(),
-                        grams(g, balance),
-                        i.form() == Form.LIQUID ? Figures.significant(g / i.densityGPerMl(), 4) + " mL" : "",
-                        i.name()));
+        buyG.forEach((i, g) -> table.row(
+                i.id(),
+                grams(g, balance),
+                i.form() == Form.LIQUID ? Figures.significant(g / i.densityGPerMl(), 4) + " mL" : "",
+                i.name()));
         table.print(out);
     }
 

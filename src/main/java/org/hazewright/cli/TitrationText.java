@@ -37,7 +37,8 @@ final class TitrationText {
         long inside = plan.steps().stream().filter(TitrationPlan.Step::meets).count();
         out.println(
                 inside == plan.steps().size()
-                        ? "By plan every step lies inside every tolerance."
+                        ? "By plan every step lies inside every tolerance; all of them together land "
+                                + DesignText.times(plan.chanceOfAll()) + " in 100."
                         : "By plan " + inside + " of " + plan.steps().size() + " steps lie inside every tolerance.");
         SeriesText.stocks(out, plan.stocks(), plan.leftovers(), balance);
         recipe("Mix the bath, " + plan.steps().get(0).name(), plan.start());
@@ -45,6 +46,7 @@ final class TitrationText {
                 "Mix the titrant, of which " + SeriesText.grams(plan.titrantUsedG(), balance) + " are used",
                 plan.titrant());
         steps();
+        SeriesText.buy(out, plan.buyG(), balance);
         List<String> mind = new ArrayList<>(plan.notes());
         Warnings.of(plan.titrant(), day).stream().map(Warning::text).forEach(mind::add);
         SeriesText.section(out, "Mind", mind);
@@ -80,7 +82,7 @@ final class TitrationText {
         head.addAll(List.of("add titrant g", "in vessel g", "mL"));
         points.forEach(p -> head.add(
                 p.point().quantity().sign() + " " + Figures.plain(p.point().wavelengthNm())));
-        head.add("worst miss");
+        head.addAll(List.of("worst miss", "lands"));
         TextTable table = new TextTable("  ", "l" + "r".repeat(head.size() - 1));
         table.row(head.toArray(String[]::new));
         for (TitrationPlan.Step s : plan.steps()) {
@@ -92,6 +94,7 @@ final class TitrationText {
             cells.add(Figures.fixed(s.contentMl(), 1));
             for (Answer.Predicted p : points) cells.add(figures(s, p));
             cells.add(Figures.fixed(s.worstMiss(), 2) + (s.meets() ? "" : " OUTSIDE"));
+            cells.add(DesignText.times(s.chance()) + " in 100");
             table.row(cells.toArray(String[]::new));
         }
         table.print(out);
@@ -132,6 +135,7 @@ final class TitrationText {
                     .with("add_titrant_g", s.addG())
                     .with("content_g", s.contentG())
                     .with("content_ml", s.contentMl())
+                    .with("chance_within_tolerance", s.chance())
                     .with("predicted", predicted)
                     .fields());
         }
@@ -141,6 +145,7 @@ final class TitrationText {
                 .with("title", plan.series().title())
                 .with("base", plan.base().id())
                 .with("vessel_ml", plan.vesselMl())
+                .with("chance_all_within_tolerance", plan.chanceOfAll())
                 .with("stocks", DesignJson.stocks(plan.stocks()))
                 .with("bath", DesignJson.items(plan.start()))
                 .with("titrant", DesignJson.items(plan.titrant()))

@@ -12,6 +12,7 @@ import org.hazewright.mixture.Coefficients;
 import org.hazewright.mixture.MassSpecific;
 import org.hazewright.mixture.Mixture;
 import org.hazewright.optics.Crowding;
+import org.hazewright.search.SetProblem;
 import org.hazewright.shelf.Conflict;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Scattering;

@@ -15,22 +15,23 @@ import java.util.function.DoubleConsumer;
 import java.util.stream.IntStream;
 import org.hazewright.brief.Brief;
 import org.hazewright.optics.Refusal;
+import org.hazewright.search.SetProblem;
+import org.hazewright.search.SetResult;
+import org.hazewright.search.SetSearch;
+import org.hazewright.search.SetSolution;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Shelf;
 
 /**
  * One list of bottles for a whole series of phantoms.
  *
- * <p>Every phantom is searched by itself ({@link SetSearch}); every set that leads for any of them is then solved for all of them,
- * and the {@value #FINALISTS} best of each base are settled on the full model ({@link FixedPoint}). Best is the set with which
- * most phantoms lie inside every tolerance, then the one of least Σ (bias + ingredient), every bottle charged {@value
- * #PER_WEIGHING} squared half-widths for each phantom that holds it. The balance's own part is left out: stocks that the whole
- * series shares take care of it. A phantom may hold less of the set than all of it, never more.
+ * <p>Every phantom is searched by itself ({@link SetSearch}), the sets of ingredients are ranked by what they do for all of them
+ * ({@link SetsForAll}), and the best of each base are settled on the full model ({@link FixedPoint}). Best is the set with which
+ * most phantoms lie inside every tolerance, then the one of least score. The balance's own part is left out of it: stocks that the
+ * whole series shares take care of that. A phantom may hold less of the set than all of it, never more.
  */
 public final class CommonSet {
     private static final int RUNNERS_UP = 8;
-    private static final int FINALISTS = 3;
-    private static final double PER_WEIGHING = 0.01;
 
     private final List<Brief> briefs;
     private final Shelf shelf;
@@ -54,7 +55,7 @@ public final class CommonSet {
             return options.stream()
                     .mapToDouble(o -> o.score().bias()
                             + o.score().ingredient()
-                            + PER_WEIGHING * o.concentrationGPerMl().size())
+                            + SetsForAll.PER_WEIGHING * o.concentrationGPerMl().size())
                     .sum();
         }
     }
@@ -64,7 +65,8 @@ public final class CommonSet {
      *
      * @param best the set that suits the series best
      * @param own by phantom, where it misses with that set and meets every tolerance with a set of its own: that set
-     * @param compared how many sets were solved for the whole series
+     * @param compared how many sets were solved for the whole series, or shown not to be among its best
+     * @param ofAll whether those are all that the brief allows
      * @param proven whether every phantom's own search came to its end
      */
     public record Found(
@@ -72,6 +74,7 @@ public final class CommonSet {
             Map<Integer, Option> own,
             Optional<Way> next,
             int compared,
+            boolean ofAll,
             Map<String, String> leftOut,
             boolean proven) {}
 
@@ -81,12 +84,22 @@ public final class CommonSet {
     }
 
     /** One phantom in one base. */
-    private record Cell(
-            Brief brief, Candidates candidates, BriefColumns columns, SetProblem problem, SetResult result) {
+    record Cell(
+            Brief brief,
+            Candidates candidates,
+            BriefColumns columns,
+            SetProblem problem,
+            SetSearch search,
+            SetResult result) {
         int[] positions(Set<String> ids) {
             return IntStream.range(0, candidates.ingredients.size())
                     .filter(i -> ids.contains(candidates.ingredients.get(i).id()))
                     .toArray();
+        }
+
+        /** Of all candidates, in their order. */
+        List<String> ids() {
+            return candidates.ingredients.stream().map(Ingredient::id).toList();
         }
 
         Set<String> ids(SetSolution s) {
@@ -96,9 +109,6 @@ public final class CommonSet {
         }
     }
 
-    /** A set solved for all phantoms on straightened coefficients. */
-    private record Screened(Set<String> ids, int meeting, double score, List<SetSolution> solutions) {}
-
     private Found find() {
         List<Way> ways = new ArrayList<>();
         Map<Integer, Option> own = new TreeMap<>();
@@ -106,6 +116,7 @@ public final class CommonSet {
         List<String> refused = new ArrayList<>();
         int compared = 0;
         boolean proven = true;
+        boolean ofAll = true;
         List<List<Cell>> cellsOfBases = new ArrayList<>();
         for (String base : briefs.get(0).bases()) {
             List<Cell> cells;
@@ -127,14 +138,10 @@ public final class CommonSet {
                 sets.add(c.ids(c.result.best()));
                 c.result.runnersUp().forEach(s -> sets.add(c.ids(s)));
             }
-            compared += sets.size();
-            List<Screened> screened = sets.parallelStream()
-                    .map(ids -> screen(ids, cells))
-                    .sorted(Comparator.comparingInt((Screened s) -> -s.meeting)
-                            .thenComparingDouble(Screened::score)
-                            .thenComparing(s -> String.join(",", s.ids)))
-                    .toList();
-            for (Screened s : screened.subList(0, Math.min(FINALISTS, screened.size()))) ways.add(settle(s, cells));
+            SetsForAll ranking = new SetsForAll(cells, stop);
+            for (SetsForAll.Screened screened : ranking.best(sets)) ways.add(settle(screened, cells));
+            compared += ranking.compared;
+            ofAll &= ranking.exhausted;
         }
         if (ways.isEmpty()) throw new Refusal(String.join(" ", refused));
         ways.sort(Comparator.comparingLong((Way w) -> -w.meeting()).thenComparingDouble(Way::score));
@@ -151,7 +158,7 @@ public final class CommonSet {
             if (alone.meets()) own.put(k, alone);
         }
         Optional<Way> next = ways.stream().filter(w -> !w.ids.equals(best.ids)).findFirst();
-        return new Found(best, own, next, compared, leftOut, proven);
+        return new Found(best, own, next, compared, ofAll, leftOut, proven);
     }
 
     private List<Cell> search(String base) {
@@ -161,37 +168,20 @@ public final class CommonSet {
                     Candidates candidates = Candidates.of(brief, shelf, base);
                     BriefColumns columns = new BriefColumns(brief, shelf, candidates);
                     SetProblem problem = columns.everything();
-                    SetResult result = new SetSearch(problem).run(RUNNERS_UP, stop, p -> {});
+                    SetSearch search = new SetSearch(problem);
+                    SetResult result = search.run(RUNNERS_UP, stop, p -> {});
                     progress.accept(0.9 * done.incrementAndGet() / briefs.size());
-                    return new Cell(brief, candidates, columns, problem, result);
+                    return new Cell(brief, candidates, columns, problem, search, result);
                 })
                 .toList();
     }
 
-    private static Screened screen(Set<String> ids, List<Cell> cells) {
-        int meeting = 0;
-        double score = 0;
-        List<SetSolution> solutions = new ArrayList<>();
-        for (Cell c : cells) {
-            SetSearch search = new SetSearch(c.problem);
-            int[] set = c.positions(ids);
-            SetSolution s = search.solve(set, true);
-            if (s.status() == ConvexProgramme.Status.INFEASIBLE) s = search.solve(set, false);
-            else meeting++;
-            int used = 0;
-            for (double a : s.amounts()) if (a > 0) used++;
-            score += s.bias() + s.ingredient() + PER_WEIGHING * used;
-            solutions.add(s);
-        }
-        return new Screened(ids, meeting, score, solutions);
-    }
-
-    private static Way settle(Screened s, List<Cell> cells) {
+    private static Way settle(SetsForAll.Screened s, List<Cell> cells) {
         List<Option> options = IntStream.range(0, cells.size())
                 .parallel()
-                .mapToObj(k -> settled(cells.get(k), s.solutions.get(k)))
+                .mapToObj(k -> settled(cells.get(k), s.solutions().get(k)))
                 .toList();
-        return new Way(cells.get(0).candidates.base, s.ids, options);
+        return new Way(cells.get(0).candidates.base, s.ids(), options);
     }
 
     private static Option settled(Cell c, SetSolution s) {

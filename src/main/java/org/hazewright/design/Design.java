@@ -13,6 +13,12 @@ import java.util.function.BooleanSupplier;
 import java.util.function.DoubleConsumer;
 import org.hazewright.brief.Brief;
 import org.hazewright.optics.Refusal;
+import org.hazewright.search.ConvexProgramme;
+import org.hazewright.search.LeastWorstMiss;
+import org.hazewright.search.SetProblem;
+import org.hazewright.search.SetResult;
+import org.hazewright.search.SetSearch;
+import org.hazewright.search.SetSolution;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Shelf;
 
@@ -30,6 +36,8 @@ public final class Design {
     private final Shelf shelf;
     private final BooleanSupplier stop;
     private final DoubleConsumer progress;
+    private final List<Searched> searched = new ArrayList<>();
+    private double bestPossible = Double.POSITIVE_INFINITY;
 
     /** {@code stop} is asked now and then; {@code progress} is told the share done, 0 to 1. */
     public Design(Brief brief, Shelf shelf, BooleanSupplier stop, DoubleConsumer progress) {
@@ -54,9 +62,8 @@ public final class Design {
         List<Option> options = new ArrayList<>();
         Map<String, String> leftOut = new TreeMap<>();
         List<String> refused = new ArrayList<>();
-        List<Searched> searched = new ArrayList<>();
-        double bestPossible = Double.POSITIVE_INFINITY;
-        Searched leading = null;
+        searched.clear();
+        bestPossible = Double.POSITIVE_INFINITY;
         int done = 0;
         for (String base : brief.bases()) {
             Searched s;
@@ -82,16 +89,23 @@ public final class Design {
                 .thenComparingDouble(o -> o.score().total())
                 .thenComparing(o -> o.ids().size())
                 .thenComparing(o -> String.join(",", new java.util.TreeSet<>(o.ids()))));
-        for (Searched s : searched) if (s.candidates.base.equals(options.get(0).base())) leading = s;
-        List<String> limits = stop.getAsBoolean()
-                ? List.of() // whoever stops the search does not wait for more of them
-                : new HeldBack(brief, leading, options.get(0), bestPossible, stop).sentences();
+        List<String> limits = heldBack(options.get(0));
         long admissible =
                 searched.stream().mapToLong(s -> s.result.admissible()).sum();
         long solved = searched.stream().mapToLong(s -> s.result.solved()).sum();
         long cut = searched.stream().mapToLong(s -> s.result.cut()).sum();
         boolean proven = searched.stream().allMatch(s -> s.result.proven());
         return new Finding(brief, shelf, options, bestPossible, limits, leftOut, admissible, solved, cut, proven);
+    }
+
+    /** What holds back an option that was found, in sentences; none once the search is stopped, since nobody waits for more then. */
+    public List<String> heldBack(Option option) {
+        if (stop.getAsBoolean()) return List.of();
+        Searched own = searched.stream()
+                .filter(s -> s.candidates.base.equals(option.base()))
+                .findFirst()
+                .orElseThrow();
+        return new HeldBack(brief, own, option, bestPossible, stop).sentences();
     }
 
     /** The same option again with every tolerance narrowed to {@code edge} of itself: room for rounding. */

@@ -7,6 +7,11 @@ import java.util.Map;
 import java.util.Optional;
 import org.hazewright.brief.Brief;
 import org.hazewright.mixture.Mixture;
+import org.hazewright.search.ConvexProgramme;
+import org.hazewright.search.LeastWorstMiss;
+import org.hazewright.search.SetProblem;
+import org.hazewright.search.SetSearch;
+import org.hazewright.search.SetSolution;
 import org.hazewright.shelf.Ingredient;
 
 /**
@@ -85,7 +90,7 @@ final class FixedPoint {
             if (change > FAR && round > 0) slopes = columns.slopes(now, members);
         }
         double[] amounts = members.stream().mapToDouble(now::get).toArray();
-        return Optional.of(option(now, members, amounts, problem));
+        return Optional.of(option(members, amounts, problem));
     }
 
     /** Whether a step goes back more than half of the one before: the straightened model overshoots, and strides are halved. */
@@ -100,7 +105,7 @@ final class FixedPoint {
         return along < -0.5 * size;
     }
 
-    private Option option(Map<Ingredient, Double> now, List<Ingredient> members, double[] amounts, SetProblem problem) {
+    private Option option(List<Ingredient> members, double[] amounts, SetProblem problem) {
         Map<Ingredient, Double> used = new LinkedHashMap<>();
         double ingredient = 0;
         double weighing = 0;

@@ -7,6 +7,11 @@ import java.util.function.BooleanSupplier;
 import org.hazewright.brief.Brief;
 import org.hazewright.brief.Point;
 import org.hazewright.optics.Figures;
+import org.hazewright.search.LeastWorstMiss;
+import org.hazewright.search.LimitProof;
+import org.hazewright.search.SetProblem;
+import org.hazewright.search.SetSearch;
+import org.hazewright.search.SetSolution;
 import org.hazewright.shelf.Ingredient;
 
 /**
@@ -132,8 +137,9 @@ final class HeldBack {
             if (Math.abs(best.misses()[j]) > Math.abs(best.misses()[worst])) worst = j;
         double miss = best.misses()[worst];
         if (Math.abs(miss) < NOTABLE) return;
-        sentences.add(capital(name(points.get(worst))) + " is planned " + widths(Math.abs(miss))
-                + " of its half-width too " + (miss > 0 ? "high" : "low") + ", the largest miss.");
+        sentences.add("Even in the best amounts of these ingredients " + name(points.get(worst)) + " lies "
+                + widths(Math.abs(miss)) + " of its half-width too " + (miss > 0 ? "high" : "low")
+                + ", before rounding to the balance.");
         for (SetProblem.Group group : SetProblem.Group.values()) {
             SetProblem p = searched.problem();
             long available = p.candidates().stream()

@@ -1,20 +1,41 @@
 package org.hazewright.files;
 
+import java.util.Optional;
+import java.util.Set;
 import org.hazewright.optics.Spectrum;
 import org.hazewright.shelf.Absorption;
+import org.hazewright.shelf.Scattering;
 
 /**
  * The {@code [absorption]} table of an ingredient.
  *
  * <p>The column's name says the basis: {@code mua_per_cm} of the neat ingredient, {@code mua_cm2_per_g}, or {@code
  * epsilon10_l_per_mol_cm}. For the last, a pure substance holds 1/molar mass mol/g, and a solution of {@code mol_per_l} holds
- * mol_per_l/1000/density mol/g.
+ * mol_per_l/1000/density mol/g. {@code magnitude}, with a table or alone, multiplies what particles absorb by their own index.
  */
 final class AbsorptionReader {
     private AbsorptionReader() {}
 
-    static Absorption read(TomlPage table, double densityGPerMl, ShelfFolder folder) {
-        table.refuseUnknown("table", "albedo", "g", "molar_mass_g_per_mol", "mol_per_l");
+    /** The table's absorption; empty when only the magnitude of the particles' own is given. */
+    static Optional<Absorption> read(TomlPage table, double densityGPerMl, ShelfFolder folder) {
+        if (table.keys().equals(Set.of("magnitude"))) return Optional.empty();
+        table.refuseUnknown("table", "albedo", "g", "molar_mass_g_per_mol", "mol_per_l", "magnitude");
+        return Optional.of(ofTable(table, densityGPerMl, folder));
+    }
+
+    /** The scattering with the magnitude of its particles' own absorption, where {@code [absorption]} gives one. */
+    static Optional<Scattering> magnified(TomlPage table, Optional<Scattering> scattering) {
+        if (!table.has("magnitude")) return scattering;
+        double magnitude = table.positive("magnitude");
+        if (scattering.orElse(null) instanceof Scattering.MieParticles mie)
+            return Optional.of(mie.absorbing(magnitude));
+        throw table.refusal(
+                "magnitude",
+                "[absorption] magnitude multiplies what particles absorb by their own index, and there is no [scattering] with"
+                        + " model = \"mie\". Take the line out; a table is multiplied in its own numbers.");
+    }
+
+    private static Absorption ofTable(TomlPage table, double densityGPerMl, ShelfFolder folder) {
         String path = table.text("table");
         CsvTable csv = folder.table(path, table.at("table"));
         csv.refuseUnknown("wavelength_nm", "mua_per_cm", "mua_cm2_per_g", "epsilon10_l_per_mol_cm");

@@ -16,6 +16,12 @@ final class Ids {
                     key,
                     "The " + key + " \"" + id + "\" cannot be used; use letters, digits, dots, hyphens and underscores,"
                             + " beginning with a letter or a digit.");
+        if (!FileNames.everywhere(id))
+            throw page.refusal(
+                    key,
+                    "The " + key + " \"" + id
+                            + "\" is no name for a file on every system: some keep it for a device, or"
+                            + " take no dot at the end. Choose another.");
         return id;
     }
 

@@ -84,9 +84,12 @@ final class IngredientReader {
                     "least_share is for a base, and here part = \"" + part.word() + "\". Take the line out.");
         double leastShare = page.within("least_share", 0, 1, 0);
         Optional<Absorption> absorption =
-                page.table("absorption").map(table -> AbsorptionReader.read(table, density, folder));
-        Optional<Scattering> scattering = page.table("scattering")
+                page.table("absorption").flatMap(table -> AbsorptionReader.read(table, density, folder));
+        Optional<Scattering> modelled = page.table("scattering")
                 .map(table -> ScatteringReader.read(table, density, folder, materials::require));
+        Optional<Scattering> scattering = page.table("absorption")
+                .map(table -> AbsorptionReader.magnified(table, modelled))
+                .orElse(modelled);
         Uncertainty uncertainty = uncertainty(isBlend, absorption, scattering);
         Optional<Material> index = index(id, part, families, isBlend);
         return page.at()

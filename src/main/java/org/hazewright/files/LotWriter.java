@@ -58,6 +58,10 @@ public final class LotWriter {
             number(out, "albedo", a.albedo());
             number(out, "g", a.g());
         }
+        if (lot.scattering().orElse(null) instanceof Scattering.MieParticles mie && mie.absorptionMagnitude() != 1) {
+            if (lot.absorption().isEmpty()) out.append("\n[absorption]\n");
+            number(out, "magnitude", mie.absorptionMagnitude());
+        }
         lot.scattering().ifPresent(s -> {
             out.append("\n[scattering]\n");
             number(out, "magnitude", magnitude(s));

@@ -31,10 +31,13 @@ import java.util.concurrent.ThreadLocalRandom;
  *
  * <p>A folder that is missing is made. A link is followed and kept. A target that is a folder, a device or write-protected is
  * left alone, as is everything else when a {@link WriteFailure} is thrown. What a killed program left of the same target is swept
- * ten minutes later, with the next write.
+ * ten minutes later, with the next write; a temporary file that somebody else takes away is written anew.
  */
 public final class SafeFile {
     private static final Duration LEFT_BEHIND = Duration.ofMinutes(10);
+
+    /** How often a write begins anew when its temporary file was taken away. */
+    private static final int TRIES = 5;
 
     private SafeFile() {}
 
@@ -56,23 +59,36 @@ public final class SafeFile {
     }
 
     public static void write(Path target, byte[] bytes, Overwrite policy) {
+        try {
+            for (int attempt = 1; !written(target, bytes, policy, attempt == TRIES); attempt++) {}
+        } catch (IOException | ReadOnlyFileSystemException | SecurityException e) {
+            throw new WriteFailure(plain(target, e), e);
+        }
+    }
+
+    /** False when the temporary file was taken away while it was written: swept by a program whose clock is ahead of ours. */
+    private static boolean written(Path target, byte[] bytes, Overwrite policy, boolean last) throws IOException {
         Path temporary = null;
         try {
             Path end = checked(target, policy);
-            if (policy == Overwrite.KEEP_PREVIOUS && holds(end, bytes)) return;
+            if (policy == Overwrite.KEEP_PREVIOUS && holds(end, bytes)) return true;
             Path folder = end.toAbsolutePath().getParent();
             Files.createDirectories(folder);
             sweepLeftovers(folder, end.getFileName().toString());
             temporary = folder.resolve("." + end.getFileName() + "."
                     + Long.toString(ThreadLocalRandom.current().nextLong(1L << 40), 36) + ".part");
-            writeSynced(temporary, bytes);
-            copyPermissions(end, temporary);
-            if (policy == Overwrite.KEEP_PREVIOUS && Files.exists(end)) keepPrevious(end);
-            move(temporary, end, policy);
+            try {
+                writeSynced(temporary, bytes);
+                copyPermissions(end, temporary);
+                if (policy == Overwrite.KEEP_PREVIOUS && Files.exists(end)) keepPrevious(end);
+                move(temporary, end, policy);
+            } catch (NoSuchFileException gone) {
+                if (last || !Files.isDirectory(folder)) throw gone;
+                return false;
+            }
             temporary = null;
             syncFolder(folder);
-        } catch (IOException | ReadOnlyFileSystemException | SecurityException e) {
-            throw new WriteFailure(plain(target, e), e);
+            return true;
         } finally {
             deleteQuietly(temporary);
         }
@@ -188,6 +204,8 @@ public final class SafeFile {
                     + "a part of its path, or the file itself, is already there as something else. Choose another name.";
         if (e instanceof NoSuchFileException && folder != null && !Files.isDirectory(folder, LinkOption.NOFOLLOW_LINKS))
             return start + "its folder is not there and could not be made. Choose another folder.";
+        if (e instanceof NoSuchFileException)
+            return start + "another program takes its temporary file away. Write to a folder of your own.";
         if (lower.contains("name too long")) return start + "its name is too long. Choose a shorter one.";
         return start + reason + ".";
     }

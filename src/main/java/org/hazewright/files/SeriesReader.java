@@ -22,6 +22,8 @@ import org.hazewright.brief.Titration;
  * called by a letter for µs' and a number for µa: A1, A2, … B1. A {@code [[phantom]]} has a name, and one target's values, or
  * {@code [[phantom.target]]} entries, or a {@code [phantom.tissue]}. A {@code [titration]} says that they are made in one vessel, in
  * that order.
+ *
+ * <p>A {@code [[target]]} beside the grid or the rows is wanted of every phantom: a quantity or a wavelength that they leave open.
  */
 public final class SeriesReader {
     private static final int MOST_PHANTOMS = 400;
@@ -32,6 +34,9 @@ public final class SeriesReader {
     private final Supplier<Tissue.Spectra> spectra;
     private final Tolerance tolerance;
 
+    /** Wanted of every phantom. */
+    private final List<Target> common;
+
     private SeriesReader(TextFile text, String name, Supplier<Tissue.Spectra> spectra) {
         this.text = text;
         this.page = TomlPage.of(text);
@@ -39,9 +44,14 @@ public final class SeriesReader {
         this.spectra = spectra;
         page.requireFormat();
         List<String> known = new ArrayList<>(BriefReader.SHARED_KEYS);
-        known.addAll(List.of("series", "phantom", "titration"));
+        known.addAll(List.of("series", "phantom", "titration", "target"));
+        if (page.has("tissue"))
+            throw page.refusal(
+                    "tissue",
+                    "A [tissue] belongs to one phantom; write it as [phantom.tissue] below the [[phantom]] that is to be like it.");
         page.refuseUnknown(known);
         this.tolerance = Tolerance.read(page);
+        this.common = TargetReader.read(page, Optional.empty(), spectra, tolerance);
     }
 
     /** {@code spectra} is asked only for phantoms with a tissue. */
@@ -153,7 +163,29 @@ public final class SeriesReader {
 
     private Brief brief(String own, List<Target> targets, Optional<Tissue> tissue) {
         String title = page.text("title", name) + ", " + own;
-        return BriefReader.shared(page, name + "-" + own, title, text.sha256(), targets, tissue);
+        List<Target> all = new ArrayList<>(targets);
+        for (Target shared : common) {
+            int at = 0;
+            while (at < targets.size() && targets.get(at).wavelengthNm() != shared.wavelengthNm()) at++;
+            if (at == targets.size()) all.add(shared);
+            else {
+                refuseTwice(shared, targets.get(at), own);
+                all.set(at, TargetReader.over(shared, targets.get(at)));
+            }
+        }
+        return BriefReader.shared(page, name + "-" + own, title, text.sha256(), all, tissue);
+    }
+
+    private void refuseTwice(Target shared, Target own, String phantom) {
+        boolean mua = shared.muaPerCm().isPresent() && own.muaPerCm().isPresent();
+        boolean musp = shared.muspPerCm().isPresent() && own.muspPerCm().isPresent();
+        if (!mua && !musp) return;
+        String what = (mua ? "µa" : "µs'") + " at " + TomlPage.plain(own.wavelengthNm()) + " nm";
+        throw page.refusal(
+                "target",
+                "A [[target]] beside the set is wanted of every phantom, and the phantom " + phantom + " has its own "
+                        + what + " already; take " + what
+                        + " out of one of them, or give the target another wavelength.");
     }
 
     private static Titration titration(TomlPage table) {

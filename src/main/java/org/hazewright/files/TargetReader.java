@@ -124,15 +124,16 @@ final class TargetReader {
                 .forEach(target -> byWavelength.put(target.wavelengthNm(), target));
     }
 
-    private static Target over(Target tissue, Target explicit) {
+    /** Each quantity that the explicit target names, and of the other target what it leaves open; they share a wavelength. */
+    static Target over(Target other, Target explicit) {
         boolean ownMua = explicit.muaPerCm().isPresent();
         boolean ownMusp = explicit.muspPerCm().isPresent();
         return new Target(
                 explicit.wavelengthNm(),
-                ownMua ? explicit.muaPerCm() : tissue.muaPerCm(),
-                ownMusp ? explicit.muspPerCm() : tissue.muspPerCm(),
-                ownMua ? explicit.muaTolerancePerCm() : tissue.muaTolerancePerCm(),
-                ownMusp ? explicit.muspTolerancePerCm() : tissue.muspTolerancePerCm(),
+                ownMua ? explicit.muaPerCm() : other.muaPerCm(),
+                ownMusp ? explicit.muspPerCm() : other.muspPerCm(),
+                ownMua ? explicit.muaTolerancePerCm() : other.muaTolerancePerCm(),
+                ownMusp ? explicit.muspTolerancePerCm() : other.muspTolerancePerCm(),
                 explicit.weight());
     }
 }

@@ -59,6 +59,14 @@ final class TomlPage {
         return entries.containsKey(key);
     }
 
+    String title() {
+        return title;
+    }
+
+    Map<String, Entry> entries() {
+        return entries;
+    }
+
     Set<String> keys() {
         return entries.keySet();
     }

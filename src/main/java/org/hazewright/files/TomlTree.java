@@ -25,7 +25,12 @@ final class TomlTree {
 
     private TomlTree() {}
 
+    /** Plain files by {@link PlainToml}, all others by the library, which is slow to start. */
     static TomlPage parse(TextFile file) {
+        return PlainToml.parse(file).orElseGet(() -> byLibrary(file));
+    }
+
+    static TomlPage byLibrary(TextFile file) {
         TomlParseResult result;
         try {
             result = Toml.parse(file.text(), TomlVersion.V1_0_0);

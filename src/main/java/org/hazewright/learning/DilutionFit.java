@@ -33,8 +33,8 @@ public final class DilutionFit {
         for (Extinction e : wavelengths)
             if (!(e.cm2PerG() > 0))
                 throw new Refusal(
-                        "The dilution series of " + series.ingredient() + " at " + Figures.plain(e.wavelengthNm())
-                                + " nm gives an extinction of " + Figures.number(e.cm2PerG())
+                        "The dilution series of " + series.ingredient() + " at " + Rounded.plain(e.wavelengthNm())
+                                + " nm gives an extinction of " + Rounded.number(e.cm2PerG())
                                 + " cm2/g: readings do not fall with concentration. Check which column is which.");
         double mean = meanPairCovariance();
         double squares = 0;
@@ -150,7 +150,7 @@ public final class DilutionFit {
             MassSpecific k = MassSpecific.of(ingredient, e.wavelengthNm(), temperatureC, hostIndex, 0);
             double modelled = k.kappaA() + k.kappaMus();
             if (!(modelled > 0))
-                throw new Refusal(ingredient.id() + " has no extinction at " + Figures.plain(e.wavelengthNm())
+                throw new Refusal(ingredient.id() + " has no extinction at " + Rounded.plain(e.wavelengthNm())
                         + " nm by its own figures, so measured over modelled has no meaning.");
             double ratio = e.cm2PerG() / modelled;
             double u = Math.max(e.uCm2PerG() / modelled, 1e-9 * ratio);

@@ -25,7 +25,7 @@ public record DilutionReading(
         Refusal.positive("Path length of a cell in mm", pathMm);
         Refusal.positive("Wavelength in nm", wavelengthNm);
         String where =
-                " at " + Figures.number(concentrationGPerMl) + " g/mL and " + Figures.plain(wavelengthNm) + " nm";
+                " at " + Rounded.number(concentrationGPerMl) + " g/mL and " + Rounded.plain(wavelengthNm) + " nm";
         if (signal == Signal.TRANSMISSION && !(value > 0 && value <= 1.5))
             throw new Refusal(
                     "The transmission T/T0" + where + " is " + value + "; it must lie above 0 and at most 1.5"

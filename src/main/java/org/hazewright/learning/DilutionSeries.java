@@ -58,12 +58,12 @@ public record DilutionSeries(
         double depth = albedo * r.opticalDepth();
         if (depth <= SCATTERING_DEPTH_REFUSED) return;
         double smaller = SCATTERING_DEPTH_WARNED / depth;
-        throw new Refusal("The dilution of " + ingredient + " at " + Figures.number(r.concentrationGPerMl())
+        throw new Refusal("The dilution of " + ingredient + " at " + Rounded.number(r.concentrationGPerMl())
                 + " g/mL in a cell of "
-                + Figures.plain(r.pathMm()) + " mm has a scattering depth of " + Figures.number(depth) + " at "
-                + Figures.plain(r.wavelengthNm()) + " nm; above " + Figures.number(SCATTERING_DEPTH_REFUSED)
-                + " scattered light drowns the beam. Take a cell of at most " + Figures.number(r.pathMm() * smaller)
-                + " mm, dilute below " + Figures.number(r.concentrationGPerMl() * smaller)
+                + Rounded.plain(r.pathMm()) + " mm has a scattering depth of " + Rounded.number(depth) + " at "
+                + Rounded.plain(r.wavelengthNm()) + " nm; above " + Rounded.number(SCATTERING_DEPTH_REFUSED)
+                + " scattered light drowns the beam. Take a cell of at most " + Rounded.number(r.pathMm() * smaller)
+                + " mm, dilute below " + Rounded.number(r.concentrationGPerMl() * smaller)
                 + " g/mL, or leave this reading out.");
     }
 
@@ -93,7 +93,7 @@ public record DilutionSeries(
             Optional<Linearity> linearity = Linearity.of(c, mu, w);
             return new Extinction(nm, list, line, linearity, albedo);
         } catch (Refusal refusal) {
-            throw new Refusal("The dilution series of " + ingredient + " at " + Figures.plain(nm)
+            throw new Refusal("The dilution series of " + ingredient + " at " + Rounded.plain(nm)
                     + " nm cannot be fitted. " + refusal.getMessage());
         }
     }

@@ -23,7 +23,7 @@ final class DilutionWarnings {
                 e -> e.line().scattersMoreThanStated(),
                 Comparator.comparingDouble(e -> e.line().residualScale()),
                 e -> "readings scatter more than their stated uncertainties, up to "
-                        + Figures.number(e.line().residualScale())
+                        + Rounded.number(e.line().residualScale())
                         + " times; the uncertainty of the result was enlarged by that");
         gather(
                 out,
@@ -33,8 +33,8 @@ final class DilutionWarnings {
                 Comparator.comparingDouble(
                         e -> Math.abs(e.line().intercept()) / e.line().uIntercept()),
                 e -> "the line misses zero at no concentration, at most by "
-                        + Figures.number(e.line().intercept()) + " ± "
-                        + Figures.number(e.line().uIntercept())
+                        + Rounded.number(e.line().intercept()) + " ± "
+                        + Rounded.number(e.line().uIntercept())
                         + " 1/cm: blank and cell are not alike. The slope is used, so a constant offset does no harm");
         gather(
                 out,
@@ -44,9 +44,9 @@ final class DilutionWarnings {
                 Comparator.comparingDouble(e -> -e.linearity().orElseThrow().pValue()),
                 e -> {
                     Linearity l = e.linearity().orElseThrow();
-                    return "the line bends, most clearly by " + Figures.number(l.bend()) + " 1/cm at "
-                            + Figures.plain(e.wavelengthNm()) + " nm (F-test, probability "
-                            + Figures.probability(l.pValue()) + "): "
+                    return "the line bends, most clearly by " + Rounded.number(l.bend()) + " 1/cm at "
+                            + Rounded.plain(e.wavelengthNm()) + " nm (F-test, probability "
+                            + Rounded.probability(l.pValue()) + "): "
                             + (l.bend() < 0
                                     ? "the thick end reads too clear, by scattered or stray light. Dilute further"
                                     : "check the dilutions");
@@ -64,8 +64,8 @@ final class DilutionWarnings {
                 false,
                 e -> e.largestScatteringDepth() > DilutionSeries.SCATTERING_DEPTH_WARNED,
                 Comparator.comparingDouble(Extinction::largestScatteringDepth),
-                e -> "the scattering depth reaches " + Figures.number(e.largestScatteringDepth()) + ", above "
-                        + Figures.number(DilutionSeries.SCATTERING_DEPTH_WARNED)
+                e -> "the scattering depth reaches " + Rounded.number(e.largestScatteringDepth()) + ", above "
+                        + Rounded.number(DilutionSeries.SCATTERING_DEPTH_WARNED)
                         + ": part of the scattered light is read as transmitted and the extinction comes out low");
         gather(
                 out,
@@ -73,8 +73,8 @@ final class DilutionWarnings {
                 false,
                 e -> e.largestAbsorbance() > DilutionSeries.ABSORBANCE_WARNED,
                 Comparator.comparingDouble(Extinction::largestAbsorbance),
-                e -> "the absorbance reaches " + Figures.number(e.largestAbsorbance()) + ", above "
-                        + Figures.number(DilutionSeries.ABSORBANCE_WARNED) + ", where stray light counts");
+                e -> "the absorbance reaches " + Rounded.number(e.largestAbsorbance()) + ", above "
+                        + Rounded.number(DilutionSeries.ABSORBANCE_WARNED) + ", where stray light counts");
         outliers(out, all);
         if (all.size() == 1)
             out.add("With one wavelength, errors of the dilutions cannot be told from errors of the readings.");
@@ -109,15 +109,15 @@ final class DilutionWarnings {
                 largestChange.merge(p.x(), change, (a, b) -> Math.abs(a) >= Math.abs(b) ? a : b);
             }
         at.forEach((c, list) ->
-                out.add("The dilution of " + Figures.number(c) + " g/mL lies off the line of the others at "
+                out.add("The dilution of " + Rounded.number(c) + " g/mL lies off the line of the others at "
                         + where(list, all) + "; it was kept. Without it the extinction would change by up to "
-                        + Figures.percent(largestChange.get(c)) + "."));
+                        + Rounded.percent(largestChange.get(c)) + "."));
     }
 
     private static String where(List<Extinction> hits, List<Extinction> all) {
         if (hits.size() == all.size() && all.size() > 1) return "all wavelengths";
         String list =
-                hits.stream().limit(4).map(e -> Figures.plain(e.wavelengthNm())).collect(Collectors.joining(", "));
+                hits.stream().limit(4).map(e -> Rounded.plain(e.wavelengthNm())).collect(Collectors.joining(", "));
         if (hits.size() > 4) return hits.size() + " of " + all.size() + " wavelengths (" + list + ", …)";
         return list + " nm";
     }

@@ -54,8 +54,8 @@ public record Drift(
                         + before.on() + ".");
             // A file keeps few digits: a hair more is the same, and a step is known no better than a thousandth of u.
             if (now.u() > before.u() * 1.001)
-                throw new Refusal("The uncertainty of " + factor.words() + " grows from " + Figures.number(before.u())
-                        + " to " + Figures.number(now.u()) + " on " + now.on()
+                throw new Refusal("The uncertainty of " + factor.words() + " grows from " + Rounded.number(before.u())
+                        + " to " + Rounded.number(now.u()) + " on " + now.on()
                         + ": these are not updates of one another. Start the history anew there.");
             double least = Math.max(1e-3 * before.u(), 1e-9);
             double variance = Math.max(before.u() * before.u() - now.u() * now.u(), least * least);
@@ -83,12 +83,12 @@ public record Drift(
     }
 
     public String sentence() {
-        String moved = Figures.percent(Math.abs(move)) + (move < 0 ? " down" : " up") + " from " + first + " to " + last
+        String moved = Rounded.percent(Math.abs(move)) + (move < 0 ? " down" : " up") + " from " + first + " to " + last
                 + " in "
                 + steps + (steps == 1 ? " step" : " steps") + ", where a steady lot would move by about "
-                + Figures.percent(uMove);
+                + Rounded.percent(uMove);
         if (!drifting()) return factor.words() + " is steady: " + moved + ".";
         return factor.words() + (oneWay ? " drifts: " : " jumps about: ") + moved + " (probability "
-                + Figures.probability(Math.min(pJumps, pTrend)) + "). Measure the bottle again or take a fresh one.";
+                + Rounded.probability(Math.min(pJumps, pTrend)) + "). Measure the bottle again or take a fresh one.";
     }
 }

@@ -48,10 +48,11 @@ public final class Factors {
         int n = factors.size();
         if (n == 0) return;
         double[][] scaled = new double[n][n];
-        for (int i = 0; i < n; i++) {
+        for (int i = 0; i < n; i++)
             if (!(covariance[i][i] >= 0) || Double.isInfinite(covariance[i][i]))
                 throw new Refusal("The variance of " + factors.get(i).words() + " is " + covariance[i][i]
                         + "; it must be 0 or above.");
+        for (int i = 0; i < n; i++) {
             for (int j = 0; j < n; j++) {
                 double size = Math.sqrt(covariance[i][i] * covariance[j][j]);
                 if (!(Math.abs(covariance[i][j] - covariance[j][i]) <= 1e-9 * size + Double.MIN_NORMAL))
@@ -174,7 +175,7 @@ public final class Factors {
 
     private double relativeU(Factor f) {
         if (!(mean(f) > 0))
-            throw new Refusal("The data put " + f.words() + " at " + Figures.number(mean(f))
+            throw new Refusal("The data put " + f.words() + " at " + Rounded.number(mean(f))
                     + " times its file's figure, which cannot be. Check the batch and its measured values.");
         return Math.min(1, u(f) / mean(f));
     }

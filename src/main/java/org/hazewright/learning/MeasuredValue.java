@@ -9,7 +9,7 @@ import org.hazewright.optics.Refusal;
 public record MeasuredValue(Quantity quantity, double wavelengthNm, double perCm, double uPerCm) {
     public MeasuredValue {
         Refusal.positive("Wavelength in nm", wavelengthNm);
-        String what = "Measured " + quantity.sign() + " at " + Figures.plain(wavelengthNm) + " nm in 1/cm";
+        String what = "Measured " + quantity.sign() + " at " + Rounded.plain(wavelengthNm) + " nm in 1/cm";
         if (!Double.isFinite(perCm)) throw new Refusal(what + " is " + perCm + "; it must be a number.");
         Refusal.positive(
                 "Standard uncertainty of " + what.substring(0, 1).toLowerCase(java.util.Locale.ROOT)

@@ -16,6 +16,11 @@ import org.hazewright.shelf.Uncertainty;
  */
 public record NewLot(String id, Lot lot, Source source) {
 
+    /** With its parent's figures, known as well as is said. */
+    public Ingredient of(Ingredient parent, Uncertainty u) {
+        return made(parent, u, parent.absorption(), parent.scattering());
+    }
+
     /** Of an absorber: its extinction as fitted, {@code g} of the scattered share. */
     public Ingredient absorber(Ingredient parent, DilutionFit fit, double g) {
         Uncertainty fitted = fit.uncertainty();
@@ -39,32 +44,34 @@ public record NewLot(String id, Lot lot, Source source) {
 
     /**
      * Of any ingredient after an update: its figures multiplied by the factors' means, its uncertainties theirs. A table of extinction E
-     * with albedo a becomes E ((1 − a) θa + a θs) with albedo a θs over that, so that both shares are multiplied by their own factor.
+     * with albedo a becomes E ((1 − a) θa + a θs) with albedo a θs over that, so that both shares are multiplied by their own factor; what particles absorb
+     * by their own index is multiplied by θa.
      */
     public Ingredient learned(Ingredient parent, Factors after) {
         Uncertainty u = after.uncertainty(parent);
         double ofA = after.mean(Factor.of(parent, Quantity.ABSORPTION));
         double ofS = after.mean(Factor.of(parent, Quantity.SCATTERING));
-        refuseOwnAbsorption(parent, ofA);
         Optional<Absorption> absorption = parent.absorption().map(a -> {
             double whole = (1 - a.albedo()) * ofA + a.albedo() * ofS;
             return new Absorption(a.table(), a.basis(), a.perTableUnit() * whole, a.albedo() * ofS / whole, a.g());
         });
-        return made(parent, u, absorption, parent.scattering().map(s -> s.scaled(ofS)));
+        return made(parent, u, absorption, parent.scattering().map(s -> learned(s, ofA, ofS)));
     }
 
-    /** Particles that absorb by their own index have no figure that a lot could multiply. */
-    private static void refuseOwnAbsorption(Ingredient parent, double factor) {
-        if (!(parent.scattering().orElse(null) instanceof Scattering.MieParticles mie) || Math.abs(factor - 1) < 1e-12)
-            return;
+    private static Scattering learned(Scattering s, double ofA, double ofS) {
+        Scattering scaled = s.scaled(ofS);
+        if (!(scaled instanceof Scattering.MieParticles mie) || !absorbs(mie)) return scaled;
+        return mie.absorbing(ofA);
+    }
+
+    /** Whether particles absorb by their own index, at nine wavelengths of its range. */
+    private static boolean absorbs(Scattering.MieParticles mie) {
         var index = mie.particle().index();
-        for (int i = 0; i <= 8; i++) {
-            double nm = index.fromNm() + (index.toNm() - index.fromNm()) * i / 8;
-            if (index.at(nm, 20).k() > 0)
-                throw new Refusal("The data multiply the absorption of " + parent.id() + " by " + Figures.number(factor)
-                        + ", but its particles absorb by their own refractive index, which a lot's file cannot multiply. Give "
-                        + parent.id() + " an [absorption] table in place of an absorbing particle.");
-        }
+        for (int i = 0; i <= 8; i++)
+            if (index.at(index.fromNm() + (index.toNm() - index.fromNm()) * i / 8, 20)
+                            .k()
+                    > 0) return true;
+        return false;
     }
 
     private Ingredient made(

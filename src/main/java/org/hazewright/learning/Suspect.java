@@ -26,10 +26,10 @@ public record Suspect(
     /** For a sentence: "ink-demo absorption, 12 % above its file's figure (2.4 of its standard uncertainties)". */
     String words() {
         double off = estimate - 1;
-        String size = factor.words() + ", " + Figures.percent(Math.abs(off)) + (off < 0 ? " below " : " above ")
+        String size = factor.words() + ", " + Rounded.percent(Math.abs(off)) + (off < 0 ? " below " : " above ")
                 + (factor.kind() == Factor.Kind.METHOD ? "true" : "its file's figure");
         return Double.isInfinite(inStandardUncertainties)
                 ? size + " (held to be exact until now)"
-                : size + " (" + Figures.number(Math.abs(inStandardUncertainties)) + " of its standard uncertainties)";
+                : size + " (" + Rounded.number(Math.abs(inStandardUncertainties)) + " of its standard uncertainties)";
     }
 }

@@ -145,13 +145,13 @@ public record Verdict(
 
     private static String evidence(double chi2, double pTogether, double pLeaning, List<Comparison> rows) {
         if (rows.size() == 1)
-            return "one value, off by " + Figures.number(rows.get(0).inStandardUncertainties())
-                    + " standard uncertainties (probability " + Figures.probability(pTogether) + ")";
-        String together = rows.size() + " values, χ² " + Figures.number(chi2) + " where about " + rows.size()
-                + " is expected (probability " + Figures.probability(pTogether) + ")";
+            return "one value, off by " + Rounded.number(rows.get(0).inStandardUncertainties())
+                    + " standard uncertainties (probability " + Rounded.probability(pTogether) + ")";
+        String together = rows.size() + " values, χ² " + Rounded.number(chi2) + " where about " + rows.size()
+                + " is expected (probability " + Rounded.probability(pTogether) + ")";
         boolean onlyLeaning = pTogether >= StraightLine.LEVEL / 2 && pLeaning < StraightLine.LEVEL / 2;
         return onlyLeaning
-                ? together + ", but they lean one way together (probability " + Figures.probability(pLeaning) + ")"
+                ? together + ", but they lean one way together (probability " + Rounded.probability(pLeaning) + ")"
                 : together;
     }
 
@@ -160,13 +160,13 @@ public record Verdict(
             String nearest = suspects.isEmpty()
                     ? ""
                     : " The nearest, " + suspects.get(0).factor().words() + ", leaves χ² "
-                            + Figures.number(suspects.get(0).left()) + ".";
+                            + Rounded.number(suspects.get(0).left()) + ".";
             return "No single ingredient explains it." + nearest
                     + " Perhaps a slip at the balance, something not recorded, or stated uncertainties that are too small.";
         }
         if (named.size() == 1)
             return "The data blame " + named.get(0).words() + "; χ² falls to "
-                    + Figures.number(named.get(0).left()) + ".";
+                    + Rounded.number(named.get(0).left()) + ".";
         return "These values cannot tell which of " + named.size() + ": "
                 + named.stream().map(Suspect::words).collect(Collectors.joining("; or ")) + ".";
     }

@@ -17,6 +17,9 @@ import org.hazewright.optics.Refusal;
 public final class Draws {
     private static final int BLOCK = 2048;
 
+    /** Where a tail is looked through for an interval's end, in standard uncertainties: 5 to 6 in 100 of a normal lie beyond. */
+    private static final double TAIL = 1.6;
+
     private final int count;
     private final int wavelengths;
     private final double[][] values; // [2 · wavelengths][count], µa first
@@ -128,12 +131,23 @@ public final class Draws {
 
     /** Ends of the interval that holds 95 % of the draws, 2.5 % left out on either side, 1/cm. */
     public double[] interval95(boolean scattering, int wavelength) {
-        double[] work = of(scattering, wavelength).clone();
-        KthSelector order = new KthSelector(); // two order statistics are had without sorting the rest
+        double[] all = of(scattering, wavelength);
+        double mean = mean(scattering, wavelength);
+        double u = standardUncertainty(scattering, wavelength);
+        int low = (int) Math.floor(0.025 * (count - 1));
+        int high = (int) Math.ceil(0.975 * (count - 1));
+        double[] below = Arrays.stream(all).filter(v -> v < mean - TAIL * u).toArray();
+        double[] above = Arrays.stream(all).filter(v -> v > mean + TAIL * u).toArray();
+        int rank = high - (count - above.length); // of the upper end among what lies above
         return new double[] {
-            order.select(work, null, (int) Math.floor(0.025 * (count - 1))),
-            order.select(work, null, (int) Math.ceil(0.975 * (count - 1)))
+            low < below.length ? ordered(below, low) : ordered(all.clone(), low),
+            rank >= 0 ? ordered(above, rank) : ordered(all.clone(), high)
         };
+    }
+
+    /** An order statistic is had without sorting the rest. */
+    private static double ordered(double[] work, int rank) {
+        return new KthSelector().select(work, null, rank);
     }
 
     /**

@@ -43,7 +43,7 @@ public record MassSpecific(double kappaA, double kappaMus, double kappaMusp) {
                 ParticleOptics p =
                         mie.population().perVolumeFraction(particle, hostIndex, nm, particleFraction, crowding);
                 double mlPerG = mie.volumeFraction() / i.densityGPerMl();
-                kappaA += mlPerG * p.muaPerCm();
+                kappaA += mlPerG * p.muaPerCm() * mie.absorptionMagnitude();
                 kappaMus += mlPerG * p.musPerCm() * mie.magnitude();
                 kappaMusp += mlPerG * p.muspPerCm() * mie.magnitude();
             } else if (s instanceof Scattering.PowerLaw law) {

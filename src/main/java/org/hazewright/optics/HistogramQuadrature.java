@@ -45,6 +45,9 @@ final class HistogramQuadrature extends SizeQuadrature {
 
     private static final int POINTS = 15;
 
+    /** No average is better than the spheres in it. */
+    private static final double ROUNDING = 1e-10;
+
     /** A stretch of one bin; {@code density} is the number of particles in it per nm. */
     private static final class Panel {
         final double low;
@@ -126,9 +129,11 @@ final class HistogramQuadrature extends SizeQuadrature {
                 averages[j] += panel.average[j];
                 errors[j] += panel.error[j];
             }
-        error = worst(errors, averages);
+        error = Math.max(worst(errors, averages), ROUNDING);
         open = new ArrayList<>();
-        if (error <= WANTED) return;
+        if (error <= WANTED || POINTS * settled.size() > MOST_SPHERES / 2) {
+            return;
+        }
         double share = WANTED / settled.size();
         List<Panel> good = new ArrayList<>();
         for (Panel panel : settled) {
@@ -142,7 +147,6 @@ final class HistogramQuadrature extends SizeQuadrature {
         }
         settled.clear();
         settled.addAll(good);
-        if ((settled.size() + open.size()) * POINTS > MOST_SPHERES) throw doesNotSettle();
     }
 
     @Override

@@ -8,7 +8,7 @@ package org.hazewright.optics;
  * addresses few arrays, each cut into sections of {@value #LANES} numbers at constant offsets. A block keeps ψ, F and K of all
  * its orders between the downward and the upward pass.
  *
- * <p>Spheres of a block share the number of orders (that of the largest), so they should be of similar size: {@link #fits}
+ * <p>Spheres of a block share the number of orders (that of the largest), so they should be of similar size: {@link #leastBeside}
  * says how similar they must be for ψ and χ to stay within the range of double precision. Not for use by two threads at once.
  */
 final class MieLanes {

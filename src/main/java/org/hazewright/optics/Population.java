@@ -1,15 +1,21 @@
 package org.hazewright.optics;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 
 /**
  * Many spheres of one material: what they do to light per unit of their volume fraction.
  *
  * <p>N = 1/(π⟨D³⟩/6) spheres per unit volume for a volume fraction of 1; µs = N⟨C_sca⟩, µs' = N⟨C_sca(1 − g)⟩, µa = N⟨C_abs⟩,
- * averaged over the distribution by number. Each average has a relative error of at most 1e-6, by an estimate that {@link
- * #average} gives; a distribution that cannot be averaged so well is refused. What was computed is remembered by value (sizes,
- * indices, wavelength), so asking again costs nothing. Safe for threads.
+ * averaged over the distribution by number to a relative error of 1e-6, by an estimate that {@link #average} gives.
+ *
+ * <p>Where 1e-6 is not reached: clear or weakly absorbing spheres of high contrast (relative index 1.3 and more at size
+ * parameters of 10 and more) of many sizes have resonances narrower than any affordable step, and the average ends at {@value
+ * SizeQuadrature#MOST_SPHERES} spheres with the error that {@link PopulationAverage#relativeError} says, typically 1e-5.
+ * Nothing is refused for it. Crowding of such a population is a ratio over some 2000 of its sizes.
+ *
+ * <p>What was computed is remembered by value (sizes, indices, wavelength), so asking again costs nothing. Safe for threads.
  *
  * <p>The host does not absorb: its own absorption is added by volume elsewhere. Particle index n + ik, wavelengths in nm in
  * vacuum, host index real; the domain is that of {@link Mie}.
@@ -19,6 +25,11 @@ public record Population(SizeDistribution sizes) {
 
     /** Figures of one population at one wavelength, with the rule over sizes that gave them. */
     private record Figures(PopulationAverage average, double[] diametersNm, double[] weights) {}
+
+    private static final HardSpheres ALONE = new HardSpheres(0);
+
+    /** Sizes kept of a log-normal rule for the angular patterns, which serve only as a ratio to the same spheres alone. */
+    private static final int MOST_PATTERNS = 2000;
 
     // in numbers kept: about 16 MB and 120 MB
     private static final BoundedCache<Key, Figures> DILUTE =
@@ -65,8 +76,13 @@ public record Population(SizeDistribution sizes) {
             Key key = new Key(sizes, particle, hostIndex, wavelengthNm);
             ParticleOptics dilute = figures(key).average.optics();
             if (volumeFraction == 0) return dilute;
-            double[] scattered = crowded(key).scattered(spheres);
-            return new ParticleOptics(scattered[0], scattered[1], dilute.muaPerCm());
+            CrowdedSpheres crowded = crowded(key);
+            double[] scattered = crowded.scattered(spheres);
+            double[] alone = crowded.scattered(ALONE);
+            return new ParticleOptics(
+                    dilute.musPerCm() * scattered[0] / alone[0],
+                    dilute.muspPerCm() * scattered[1] / alone[1],
+                    dilute.muaPerCm());
         }
         ParticleOptics dilute = perVolumeFraction(particle, hostIndex, wavelengthNm);
         if (crowding instanceof Crowding.None) return dilute;
@@ -107,16 +123,26 @@ public record Population(SizeDistribution sizes) {
             double[] averages = rules[i].averages();
             double perCm = perCm(key.sizes);
             double[] diameters = rules[i].diametersNm();
+            double[] weights = rules[i].weights();
+            // every s-th node of an equal-step rule is a rule again
+            int every = key.sizes instanceof SizeDistribution.LogNormal ? 1 + diameters.length / MOST_PATTERNS : 1;
             out[i] = new Figures(
                     new PopulationAverage(
                             new ParticleOptics(averages[0] * perCm, averages[1] * perCm, averages[2] * perCm),
                             rules[i].relativeError(),
                             diameters.length),
-                    diameters,
-                    rules[i].weights());
+                    everyOf(diameters, every, 1),
+                    everyOf(weights, every, every));
             DILUTE.put(key, out[i]);
         }
         return List.of(out);
+    }
+
+    private static double[] everyOf(double[] values, int every, double factor) {
+        if (every == 1) return values;
+        double[] out = new double[values.length / every];
+        for (int i = 0; i < out.length; i++) out[i] = factor * values[i * every];
+        return out;
     }
 
     private static SizeQuadrature begin(Key key) {
@@ -143,12 +169,12 @@ public record Population(SizeDistribution sizes) {
         int place = 0;
         for (int w = 0; w < waiting.size(); w++) {
             Key key = keys.get(waiting.get(w));
-            for (double diameter : wanted.get(w)) {
-                x[place] = Math.PI * diameter * key.hostIndex / key.wavelengthNm;
-                n[place] = key.particle.n() / key.hostIndex;
-                k[place] = key.particle.k() / key.hostIndex;
-                place++;
-            }
+            double sizePerNm = Math.PI * key.hostIndex / key.wavelengthNm;
+            double[] diameters = wanted.get(w);
+            int end = place + diameters.length;
+            Arrays.fill(n, place, end, key.particle.n() / key.hostIndex);
+            Arrays.fill(k, place, end, key.particle.k() / key.hostIndex);
+            for (double diameter : diameters) x[place++] = sizePerNm * diameter;
         }
         double[] sca = new double[count];
         double[] abs = new double[count];

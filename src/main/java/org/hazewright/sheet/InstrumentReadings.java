@@ -1,6 +1,7 @@
 package org.hazewright.sheet;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Supplier;
@@ -14,6 +15,8 @@ import org.hazewright.reading.Adapted;
 import org.hazewright.reading.Body;
 import org.hazewright.reading.Foreseen;
 import org.hazewright.reading.Foresight;
+import org.hazewright.reading.HaemoglobinEquivalent;
+import org.hazewright.reading.Oximeter;
 import org.hazewright.reading.Phantom;
 import org.hazewright.reading.SetUp;
 import org.hazewright.transport.DiffusionRange;
@@ -72,6 +75,29 @@ public record InstrumentReadings(Phantom phantom, List<Foreseen> foreseen, List<
             else leftOut.add(t.leftOut());
         }
         return new InstrumentReadings(phantom, foreseen, leftOut);
+    }
+
+    /**
+     * What a recipe for a tissue-like brief comes to as blood: its µa less the brief's water and fat, at the brief's tissue
+     * wavelengths. Empty for other briefs, and where those wavelengths cannot tell the two haemoglobins apart.
+     */
+    public static Optional<HaemoglobinEquivalent> haemoglobin(Answer answer, Supplier<Tissue.Spectra> tables) {
+        if (answer.brief().tissue().isEmpty()) return Optional.empty();
+        Tissue tissue = answer.brief().tissue().get();
+        Tissue.Spectra read = tables.get();
+        double[] nm = tissue.wavelengthsNm();
+        double[] mua =
+                Arrays.stream(nm).map(at -> answer.mixture().at(at).muaPerCm()).toArray();
+        Oximeter oximeter = new Oximeter(
+                "the brief's tissue, its water and fat taken off",
+                read.oxyEpsilon(),
+                read.deoxyEpsilon(),
+                at -> tissue.bloodlessPerCm(at, read));
+        try {
+            return Optional.of(HaemoglobinEquivalent.of(oximeter, nm, mua, answer.budget()));
+        } catch (Refusal alike) {
+            return Optional.empty();
+        }
     }
 
     private static Foresight running(Phantom phantom, SetUp setUp, Supplier<Tissue.Spectra> tables) {

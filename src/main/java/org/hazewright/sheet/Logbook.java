@@ -44,8 +44,19 @@ public final class Logbook {
      * @param kept the file that holds the record now
      * @param waiting why it is not in the logbook yet; empty when it is
      * @param merged records of before that were taken over as well
+     * @param cutOff half-written files of programs that were killed, removed now
      */
-    public record Recorded(Path kept, Optional<String> waiting, int merged) {}
+    public record Recorded(Path kept, Optional<String> waiting, int merged, int cutOff) {
+        /** What was found of before, for a person; empty when there was nothing. */
+        public String found() {
+            List<String> found = new ArrayList<>();
+            if (merged > 0) found.add("with " + merged + " that waited beside it");
+            if (cutOff > 0)
+                found.add((cutOff == 1 ? "a write" : cutOff + " writes")
+                        + " of it had been cut off before; what was half-written is removed, the logbook was whole");
+            return String.join("; ", found);
+        }
+    }
 
     /** Records a batch; {@code batchFile} is its own file. The record is on disk when this returns. */
     public static Recorded record(Path logbook, Batch batch, Path batchFile) {
@@ -72,12 +83,16 @@ public final class Logbook {
                 lock.release();
             }
         } catch (IOException e) {
-            return keep(logbook, pending, entry, "its folder could not be used (" + e.getMessage() + ")");
+            return keep(
+                    logbook,
+                    pending,
+                    entry,
+                    "its folder or its lock file, ." + logbook.getFileName() + ".lock, cannot be used");
         }
     }
 
     private static Recorded append(Path logbook, Path pending, LogbookEntry entry) throws IOException {
-        sweepLeftovers(logbook);
+        int cutOff = sweepLeftovers(logbook);
         for (int attempt = 0; attempt < 3; attempt++) {
             Stamp before = Stamp.of(logbook);
             List<Path> waiting = waiting(logbook);
@@ -106,7 +121,7 @@ public final class Logbook {
                 Files.deleteIfExists(p);
                 if (!p.equals(pending)) merged++;
             }
-            return new Recorded(logbook, Optional.empty(), merged);
+            return new Recorded(logbook, Optional.empty(), merged, cutOff);
         }
         return keep(logbook, pending, entry, "somebody else keeps saving it");
     }
@@ -201,13 +216,17 @@ public final class Logbook {
                 Optional.of("The logbook " + logbook + " was not changed: " + why
                         + (why.endsWith(".") ? "" : ".") + " The record is kept in " + pending
                         + " and goes into the logbook with the next one."),
+                0,
                 0);
     }
 
     // Files beside the logbook.
 
     private static Path pendingFor(Path logbook, LogbookEntry entry) {
-        String id = entry.batch().get(LogbookEntry.BATCH).toString().replaceAll("[^A-Za-z0-9._-]", "_");
+        String own = entry.batch().get(LogbookEntry.BATCH).toString();
+        String id = own.replaceAll("[^A-Za-z0-9._-]", "_");
+        if (!id.equals(own))
+            id += "-" + Integer.toHexString(own.hashCode()); // two names may differ in such letters only
         return logbook.resolveSibling(stem(logbook) + ".waiting." + id + ".xlsx");
     }
 
@@ -235,13 +254,15 @@ public final class Logbook {
     }
 
     /** Half-written files of commands that were killed; only who holds the lock makes such files. */
-    private static void sweepLeftovers(Path logbook) throws IOException {
+    private static int sweepLeftovers(Path logbook) throws IOException {
         String start = "." + logbook.getFileName() + ".";
+        int swept = 0;
         try (Stream<Path> all = Files.list(logbook.toAbsolutePath().getParent())) {
             for (Path p : all.filter(f -> f.getFileName().toString().startsWith(start)
                             && f.getFileName().toString().endsWith(".part"))
-                    .toList()) Files.deleteIfExists(p);
+                    .toList()) if (Files.deleteIfExists(p)) swept++;
         }
+        return swept;
     }
 
     private static FileLock locked(FileChannel channel) throws IOException {

@@ -1,6 +1,7 @@
 package org.hazewright.sheet;
 
 import java.util.List;
+import org.apache.poi.ss.usermodel.HorizontalAlignment;
 import org.apache.poi.ss.util.CellRangeAddress;
 import org.apache.poi.xssf.usermodel.XSSFWorkbook;
 
@@ -83,7 +84,7 @@ final class LogbookPages {
         page.text(0, 0, title, Face.TITLE);
         page.height(0, 24);
         page.text(1, 0, sentence, Face.QUIET);
-        for (int c = 0; c < columns.size(); c++) page.text(HEAD, c, columns.get(c), Face.HEAD.wrap());
+        for (int c = 0; c < columns.size(); c++) page.text(HEAD, c, columns.get(c), head(columns.get(c)));
         page.height(HEAD, 26);
         page.sheet.createFreezePane(1, HEAD + 1);
         page.sheet.setAutoFilter(new CellRangeAddress(HEAD, 20_000, 0, columns.size() - 1));
@@ -103,10 +104,19 @@ final class LogbookPages {
         }
     }
 
+    /** A heading stands where its column's entries do. */
+    private static Face head(String column) {
+        Face below = face(column);
+        Face head = Face.HEAD.wrap();
+        if (below.align() == HorizontalAlignment.RIGHT) return head.right();
+        return below.indented() ? head.indent() : head;
+    }
+
     private static Face face(String column) {
         Face line = Face.TEXT.points(9);
         return switch (column) {
-            case LogbookEntry.DATE, "first used", "last used" -> line.left().format("yyyy-mm-dd");
+            case LogbookEntry.DATE, "last used" -> line.left().format("yyyy-mm-dd");
+            case "first used" -> line.left().indent().format("yyyy-mm-dd");
             case "nm", "corrections", "batches", "values" -> line.right().format("0.##");
             case "volume mL" -> line.right().format("0.0");
             case "worst miss" -> line.right().format("0.00");
@@ -114,6 +124,8 @@ final class LogbookPages {
             case "wanted", "± tolerance", "predicted", "± u predicted", "measured", "± u measured" ->
                 line.wrap().format("0.00000");
             case LogbookEntry.MUA_RATIO, LogbookEntry.MUSP_RATIO -> line.right().format("0.0000");
+            // These stand off from the number before them.
+            case "verdict", "method", "quantity", "notes" -> line.wrap().indent();
             default -> column.startsWith("mean of") ? line.right().format("0.0000") : line.wrap();
         };
     }

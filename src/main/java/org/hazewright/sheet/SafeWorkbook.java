@@ -13,6 +13,10 @@ import java.util.zip.ZipFile;
 import org.apache.poi.openxml4j.exceptions.InvalidFormatException;
 import org.apache.poi.openxml4j.opc.OPCPackage;
 import org.apache.poi.openxml4j.util.ZipSecureFile;
+import org.apache.poi.ss.usermodel.Cell;
+import org.apache.poi.ss.usermodel.CellType;
+import org.apache.poi.ss.usermodel.Row;
+import org.apache.poi.ss.usermodel.Sheet;
 import org.apache.poi.util.IOUtils;
 import org.apache.poi.xssf.usermodel.XSSFWorkbook;
 import org.hazewright.files.FileRefusal;
@@ -46,7 +50,9 @@ final class SafeWorkbook {
     static XSSFWorkbook open(Path file, long mostUnpacked) {
         check(file, mostUnpacked);
         try (InputStream in = Files.newInputStream(file)) {
-            return new XSSFWorkbook(OPCPackage.open(in));
+            XSSFWorkbook workbook = new XSSFWorkbook(OPCPackage.open(in));
+            readEveryCell(workbook);
+            return workbook;
         } catch (IOException | InvalidFormatException | RuntimeException e) {
             throw refusal(
                     file,
@@ -54,6 +60,21 @@ final class SafeWorkbook {
                             + " try again.",
                     e);
         }
+    }
+
+    /** Cells that are not what they say, a number of letters or a text that is nowhere, show only when they are asked. */
+    private static void readEveryCell(XSSFWorkbook workbook) {
+        for (Sheet sheet : workbook)
+            for (Row row : sheet)
+                for (Cell cell : row) {
+                    boolean formula = cell.getCellType() == CellType.FORMULA;
+                    switch (formula ? cell.getCachedFormulaResultType() : cell.getCellType()) {
+                        case NUMERIC -> cell.getNumericCellValue();
+                        case STRING -> cell.getStringCellValue();
+                        case BOOLEAN -> cell.getBooleanCellValue();
+                        default -> {}
+                    }
+                }
     }
 
     static FileRefusal refusal(Path file, String complaint) {

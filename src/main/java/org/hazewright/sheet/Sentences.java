@@ -12,6 +12,7 @@ import org.hazewright.bench.Grams;
 import org.hazewright.bench.Outlook;
 import org.hazewright.bench.Weighing;
 import org.hazewright.brief.Brief;
+import org.hazewright.brief.Mould;
 import org.hazewright.optics.Figures;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Making;
@@ -73,6 +74,7 @@ final class Sentences {
         if (brief.overage() > 0)
             amount +=
                     " (" + Grams.plain(brief.batchMl()) + " mL and " + Grams.plain(100 * brief.overage()) + " % more)";
+        if (!brief.moulds().isEmpty()) amount += " for " + Mould.words(brief.moulds());
         return answer.recipe().base().name() + " · " + amount + " · " + Grams.plain(brief.temperatureC())
                 + " °C · balance reads to "
                 + Figures.fixed(brief.balance().readabilityG(), brief.balance().decimals())

@@ -14,6 +14,7 @@ import org.hazewright.bench.SeriesPlan;
 import org.hazewright.bench.SeriesPlan.Phantom;
 import org.hazewright.bench.Warnings;
 import org.hazewright.brief.Brief;
+import org.hazewright.brief.Mould;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.optics.Figures;
 import org.hazewright.picture.Palette;
@@ -68,8 +69,9 @@ public final class SeriesSheet {
     private String summary() {
         Brief first = plan.phantoms().get(0).brief();
         return plan.base().name() + ", " + plan.phantoms().size() + " phantoms of "
-                + Figures.significant(first.volumeMl(), 5) + " mL each, at " + Figures.plain(first.temperatureC())
-                + " °C"
+                + Figures.significant(first.volumeMl(), 5) + " mL each"
+                + (first.moulds().isEmpty() ? "" : " for " + Mould.words(first.moulds())) + ", at "
+                + Figures.plain(first.temperatureC()) + " °C"
                 + first.sha256().map(sha -> " · brief " + sha.substring(0, 12)).orElse("");
     }
 

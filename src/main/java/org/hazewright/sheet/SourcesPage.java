@@ -106,6 +106,8 @@ final class SourcesPage {
                     + "; no crowding correction";
         else how = "table; no crowding correction";
         String scale = s.magnitude() == 1 ? "" : "; measured magnitude " + Grams.plain(s.magnitude()) + " times that";
+        if (s instanceof Scattering.MieParticles mie && mie.absorptionMagnitude() != 1)
+            scale += "; measured absorption " + Grams.plain(mie.absorptionMagnitude()) + " times that of Mie";
         return " Scattering: " + how + scale + ".";
     }
 

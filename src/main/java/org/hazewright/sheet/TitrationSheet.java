@@ -25,7 +25,7 @@ import org.hazewright.shelf.Ingredient;
  * sources. Equal input gives equal bytes.
  */
 public final class TitrationSheet {
-    private static final int LAST = 9;
+    private static final int LAST = 10;
 
     private final TitrationPlan plan;
     private final LocalDate day;
@@ -66,7 +66,9 @@ public final class TitrationSheet {
                 plan.base().name() + ", " + plan.steps().size() + " phantoms in one vessel that holds "
                         + Grams.plain(plan.vesselMl()) + " mL and room to stir, at "
                         + Figures.plain(plan.start().temperatureC()) + " °C",
-                "By plan " + inside + " of " + plan.steps().size() + " steps lie inside every tolerance."
+                "By plan " + inside + " of " + plan.steps().size()
+                        + " steps lie inside every tolerance; all together land "
+                        + Figures.fixed(100 * plan.chanceOfAll(), 0) + " times in 100."
                         + (plan.proven() ? "" : " The search was stopped: not proven."),
                 plan.meets());
         mix.stocks(plan.stocks(), plan.leftovers());
@@ -106,6 +108,7 @@ public final class TitrationSheet {
             "in vessel g",
             "mL",
             "worst miss",
+            "lands, in 100",
             "done"
         };
         for (int c = 0; c < heads.length; c++)
@@ -135,7 +138,8 @@ public final class TitrationSheet {
                     s.meets()
                             ? SetPage.LINE.right()
                             : SetPage.LINE.bolder().ink(Palette.BRICK).right());
-            page.cell(row, 8, SetPage.LINE.fillIn());
+            page.text(row, 8, Figures.fixed(100 * s.chance(), 0), SetPage.LINE.right());
+            page.cell(row, 9, SetPage.LINE.fillIn());
             for (int j = 0; j < points.size() && j < s.predicted().size(); j++) {
                 Predicted p = s.predicted().get(j);
                 String format = Face.numberFormat(Sentences.decimals(p));

@@ -24,16 +24,29 @@ public sealed interface Scattering {
     /**
      * Spheres of a material, by Mie theory.
      *
-     * <p>{@code volumeFraction} is the particles' share of the ingredient's volume as bought, in (0, 1].
+     * <p>{@code volumeFraction} is the particles' share of the ingredient's volume as bought, in (0, 1]; {@code absorptionMagnitude}
+     * is measured absorption over what their own index gives by Mie, 1 unless a lot was measured.
      */
     record MieParticles(
-            Material particle, double volumeFraction, SizeDistribution sizes, Crowding crowding, double magnitude)
+            Material particle,
+            double volumeFraction,
+            SizeDistribution sizes,
+            Crowding crowding,
+            double magnitude,
+            double absorptionMagnitude)
             implements Scattering {
         public MieParticles {
             if (!(volumeFraction > 0 && volumeFraction <= 1))
                 throw new Refusal(
                         "Particle volume fraction is " + volumeFraction + "; it must lie above 0 and at most 1.");
             Refusal.positive("Magnitude of scattering", magnitude);
+            Refusal.positive("Magnitude of absorption", absorptionMagnitude);
+        }
+
+        /** With the absorption that Mie gives. */
+        public MieParticles(
+                Material particle, double volumeFraction, SizeDistribution sizes, Crowding crowding, double magnitude) {
+            this(particle, volumeFraction, sizes, crowding, magnitude, 1);
         }
 
         public Population population() {
@@ -52,7 +65,12 @@ public sealed interface Scattering {
 
         @Override
         public Scattering scaled(double factor) {
-            return new MieParticles(particle, volumeFraction, sizes, crowding, magnitude * factor);
+            return new MieParticles(particle, volumeFraction, sizes, crowding, magnitude * factor, absorptionMagnitude);
+        }
+
+        /** The same particles, their own absorption multiplied. */
+        public MieParticles absorbing(double factor) {
+            return new MieParticles(particle, volumeFraction, sizes, crowding, magnitude, absorptionMagnitude * factor);
         }
     }
 

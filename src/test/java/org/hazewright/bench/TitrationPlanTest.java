@@ -13,6 +13,7 @@ import java.util.OptionalDouble;
 import java.util.SplittableRandom;
 import org.hazewright.brief.Balance;
 import org.hazewright.brief.Brief;
+import org.hazewright.brief.Point;
 import org.hazewright.brief.SearchLimits;
 import org.hazewright.brief.Series;
 import org.hazewright.brief.Target;
@@ -35,6 +36,10 @@ class TitrationPlanTest {
     private static final double[] MUA = {0.05, 0.10, 0.15, 0.20, 0.25};
 
     private static Series series(String base, double[] mua, Titration titration, double balanceU) {
+        return series(base, mua, titration, balanceU, 0.05);
+    }
+
+    private static Series series(String base, double[] mua, Titration titration, double balanceU, double tolerance) {
         List<Brief> phantoms = new ArrayList<>();
         for (int k = 0; k < mua.length; k++)
             phantoms.add(new Brief(
@@ -44,7 +49,13 @@ class TitrationPlanTest {
                     1000,
                     0,
                     22,
-                    List.of(new Target(800, OptionalDouble.of(mua[k]), OptionalDouble.of(10), 0.05 * mua[k], 0.6, 1)),
+                    List.of(new Target(
+                            800,
+                            OptionalDouble.of(mua[k]),
+                            OptionalDouble.of(10),
+                            tolerance * mua[k],
+                            12 * tolerance,
+                            1)),
                     List.of(),
                     new SearchLimits(List.of("ink-demo", "lipid-emulsion-20"), List.of(), 1, 1, 0, 0),
                     new Balance(0.001, balanceU, 0.020, 620),
@@ -121,28 +132,47 @@ class TitrationPlanTest {
     /**
      * The uncertainty of each step against the titration made 40 000 times on paper, on a coarse balance so that weighing matters:
      * loads, coefficients, densities and volumes drawn here, by this test's own arithmetic. Standard error of a standard deviation
-     * of so many draws is 0.35 %; 3 % leaves room for what is not linear.
+     * of so many draws is 0.35 %; 3 % leaves room for what is not linear. Chances are shares of the same draws, each step's own and
+     * that of all; 0.02 is four standard errors of the plan's 10 000 draws.
      */
     @ParameterizedTest
     @ValueSource(booleans = {false, true})
     void uncertaintyIsThatOfManyTitrations(boolean figuresKnown) {
         Titration titration = new Titration(true, 20, 0.5);
         TitrationPlan plan =
-                TitrationPlan.of(series("water", MUA, titration, 0.03), figuresKnown ? wellKnown() : SHELF);
+                TitrationPlan.of(series("water", MUA, titration, 0.03, 0.03), figuresKnown ? wellKnown() : SHELF);
         SplittableRandom random = new SplittableRandom(7);
         int count = 40_000;
         int steps = plan.steps().size();
         double[][] sum = new double[steps][2];
         double[][] squares = new double[steps][2];
+        int[] landed = new int[steps];
+        int together = 0;
         List<Map<Ingredient, double[]>> kappa = kappa(plan);
         for (int n = 0; n < count; n++) {
             double[][] mu = draw(plan, random, kappa);
-            for (int k = 0; k < steps; k++)
+            int now = 0;
+            for (int k = 0; k < steps; k++) {
+                boolean inside = true;
                 for (int q = 0; q < 2; q++) {
                     sum[k][q] += mu[k][q];
                     squares[k][q] += mu[k][q] * mu[k][q];
+                    Point p = plan.steps().get(k).predicted().get(q).point();
+                    inside &= Math.abs(mu[k][q] - p.wantedPerCm()) <= p.tolerancePerCm();
                 }
+                if (inside) landed[k]++;
+                now += inside ? 1 : 0;
+            }
+            if (now == steps) together++;
         }
+        boolean telling = false;
+        for (int k = 0; k < steps; k++) {
+            double share = (double) landed[k] / count;
+            telling |= share > 0.1 && share < 0.9;
+            assertEquals(share, plan.steps().get(k).chance(), 0.02, "chance of step " + k);
+        }
+        assertTrue(telling || figuresKnown, "at least one chance is far from 0 and 1");
+        assertEquals((double) together / count, plan.chanceOfAll(), 0.02, "chance of all");
         for (int k = 0; k < steps; k++)
             for (int q = 0; q < 2; q++) {
                 double mean = sum[k][q] / count;

@@ -146,7 +146,7 @@ class SeriesCommandTest {
     void aBriefOfOnePhantomIsSentToDesign() throws IOException {
         Ran ran = series(BATH);
         assertEquals(2, ran.status);
-        assertTrue(ran.err.contains("target"), ran.err);
+        assertTrue(ran.err.contains("use the command design"), ran.err);
     }
 
     @Test

@@ -157,7 +157,7 @@ class MutationTest {
                     10 + i,
                     f -> {
                         ShelfReader.Lenient lenient = ShelfReader.readLenient(folder);
-                        for (FileRefusal refusal : lenient.refusals()) wellSaid(refusal, folder);
+                        for (FileRefusal refusal : lenient.refusals()) wellSaid(refusal);
                         return lenient;
                     },
                     ROUNDS / 10);
@@ -202,7 +202,7 @@ class MutationTest {
         try {
             assertNotNull(reading.of(file));
         } catch (FileRefusal refusal) {
-            wellSaid(refusal, file.getParent());
+            wellSaid(refusal);
         } catch (Refusal refusal) {
             fail("A refusal without a place: " + refusal.getMessage() + "\n" + text, refusal);
         } catch (RuntimeException | StackOverflowError other) {
@@ -210,7 +210,7 @@ class MutationTest {
         }
     }
 
-    private static void wellSaid(FileRefusal refusal, Path folder) {
+    private static void wellSaid(FileRefusal refusal) {
         String message = refusal.getMessage();
         assertTrue(message.startsWith(refusal.path()), message);
         assertTrue(refusal.line() >= 0 && refusal.column() >= 0, message);

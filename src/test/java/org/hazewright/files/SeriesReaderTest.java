@@ -119,10 +119,40 @@ class SeriesReaderTest {
         assertEquals(Optional.of(new Titration(true, 5, 0.2)), series.titration());
     }
 
+    @Test
+    void aTargetBesideTheSetIsWantedOfEveryPhantom() {
+        Series grid = read(GRID + "[[target]]\nwavelength_nm = 690\nmusp_per_cm = 12\nmusp_tolerance = 0.1\n");
+        Target shared = new Target(690, OptionalDouble.empty(), OptionalDouble.of(12), 0, 0.1 * 12, 1);
+        for (Brief b : grid.phantoms())
+            assertEquals(
+                    List.of(800.0, 690.0),
+                    b.targets().stream().map(Target::wavelengthNm).toList());
+        for (Brief b : grid.phantoms()) assertEquals(shared, b.targets().get(1));
+        Series row = read(HEAD + "[series]\nwavelengths_nm = [690, 830]\nmua_per_cm = [0.1, 0.2]\n[[target]]\n"
+                + "wavelength_nm = 830\nmusp_per_cm = 8\n");
+        assertEquals(
+                List.of(
+                        new Target(690, OptionalDouble.of(0.2), OptionalDouble.empty(), 0.05 * 0.2, 0, 1),
+                        new Target(830, OptionalDouble.of(0.2), OptionalDouble.of(8), 0.05 * 0.2, 0.05 * 8, 1)),
+                row.phantoms().get(1).targets(),
+                "one that only names the other quantity joins the phantom's own");
+    }
+
     static Stream<Mistake> mistakes() {
         return Stream.of(
                 of("▶" + HEAD, "no phantoms", "use the command design"),
-                of(HEAD + "▶[[target]]\nwavelength_nm = 690\n", "The key target is not known"),
+                of(
+                        "▶" + HEAD + "[[target]]\nwavelength_nm = 690\nmua_per_cm = 0.1\n",
+                        "no phantoms",
+                        "use the command design"),
+                of(GRID + "▶[[target]]\nwavelength_nm = 690\n", "neither mua_per_cm nor musp_per_cm"),
+                of(
+                        GRID + "▶[[target]]\nwavelength_nm = 800\nmua_per_cm = 0.1\n",
+                        "A1 has its own µa at 800 nm already"),
+                of(
+                        ROWS + "▶[[target]]\nwavelength_nm = 830\nmua_per_cm = 0.1\n",
+                        "dark has its own µa at 830 nm already"),
+                of(GRID + "▶[tissue]\nsaturation = 0.5\n", "write it as [phantom.tissue]"),
                 of(GRID + "▶[[phantom]]\nname = \"x\"\n", "keep one of them"),
                 of(GRID.replace("wavelengths_nm = [800]", "wavelengths_nm = [▶0.8]"), "100 or above"),
                 of(GRID.replace("wavelengths_nm = [800]", "▶wavelengths_nm = []"), "at least one number"),

@@ -9,10 +9,15 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Set;
 import org.hazewright.cli.OneLine;
+import org.hazewright.desk.model.Remembered;
+import org.hazewright.desk.model.Weighed;
+import org.hazewright.desk.model.WeighingLog;
 import org.hazewright.files.BatchReader;
 import org.hazewright.files.BatchWriter;
 import org.hazewright.files.BriefReader;
+import org.hazewright.files.CoefficientTable;
 import org.hazewright.files.CsvTable;
+import org.hazewright.files.DilutionReader;
 import org.hazewright.files.RecipeReader;
 import org.hazewright.files.SeriesReader;
 import org.hazewright.files.SetUpReader;
@@ -20,9 +25,11 @@ import org.hazewright.files.ShelfReader;
 import org.hazewright.files.SizeTable;
 import org.hazewright.files.SphereTable;
 import org.hazewright.files.TissueSpectra;
+import org.hazewright.learning.DilutionFit;
 import org.hazewright.sheet.FilledIn;
 import org.hazewright.sheet.FirstPage;
 import org.hazewright.sheet.Logbook;
+import org.hazewright.shelf.Ingredient;
 
 /**
  * The ways in: each reads bytes that may be anything, and keeps the {@link Promise}.
@@ -95,6 +102,53 @@ enum Door {
             read(bytes, () -> CsvTable.read(file));
             read(bytes, () -> SizeTable.read(file));
             read(bytes, () -> SphereTable.read(file));
+        }
+    },
+    /** Wanted or measured coefficients as people have them in tables: any heading, separator and unit. */
+    COEFFICIENTS {
+        @Override
+        void open(Path things, byte[] bytes) {
+            Path file = laid(things, "fuzzed.csv", bytes);
+            read(bytes, () -> CoefficientTable.read(file, null));
+            read(bytes, () -> CoefficientTable.read(file, "mm"));
+        }
+    },
+    /** A dilution series, read and fitted. */
+    DILUTION {
+        @Override
+        void open(Path things, byte[] bytes) {
+            Path file = laid(things, "fuzzed.csv", bytes);
+            Ingredient ink = Seeds.shelf().require("ink-demo");
+            read(bytes, () -> {
+                DilutionFit fit = DilutionReader.read(file, new DilutionReader.About(ink, 0.998, 0.15, 0.02, 0.01))
+                        .fit();
+                fit.warnings().forEach(w -> Promise.wellSaid(w, ""));
+                fit.uncertainty();
+            });
+        }
+    },
+    /** The absorption of haemoglobin in a shelf, from which tissue-like targets are made. */
+    TISSUE {
+        @Override
+        void open(Path things, byte[] bytes) {
+            Path shelf = things.resolve("shelf-of-tables");
+            laid(shelf.resolve("spectra"), "haemoglobin-oxy-molar.csv", bytes);
+            read(bytes, () -> TissueSpectra.read(shelf));
+        }
+    },
+    /** What the window keeps for itself: its settings, and where a weighing stands. Whatever is wrong there is as if it were not. */
+    WINDOW {
+        @Override
+        void open(Path things, byte[] bytes) {
+            laid(things, "desk.properties", bytes);
+            Remembered memory = Remembered.in(things, things);
+            memory.recent();
+            memory.favourites();
+            memory.inHandG();
+            if (!Double.isFinite(memory.number("width", 1))) throw new AssertionError("A size that is no number.");
+            laid(things, ".fuzzed.steps", bytes);
+            for (Weighed w : new WeighingLog(things.resolve("fuzzed.batch.toml")).entries())
+                if (!(w.massG() >= 0) || Double.isInfinite(w.massG())) throw new AssertionError("A load of " + w);
         }
     },
     /** A recipe sheet with one part replaced: the part's name on the first line, then the part. */

@@ -7,6 +7,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import static org.junit.jupiter.api.Assumptions.assumeTrue;
 
 import java.io.IOException;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
@@ -81,7 +82,7 @@ class FullDiskTest {
         OneLine ran = OneLine.run("design", "recipes-demo/wrist-bath.brief.toml", "--out", file.toString(), "--quiet");
         assertEquals(4, ran.status(), ran.toString());
         Promise.wellSaid(ran.err(), "");
-        assertArrayEquals("mine".getBytes(), Files.readAllBytes(file));
+        assertArrayEquals("mine".getBytes(StandardCharsets.UTF_8), Files.readAllBytes(file));
     }
 
     /** What was acknowledged is in its own file and in the logbook or beside it. */

@@ -75,6 +75,7 @@ public final class Fuzz {
                         "-dict=" + dictionary,
                         "-max_len=40000",
                         "-timeout=" + HANGS_S,
+                        "-report_slow_units=" + HANGS_S,
                         "-rss_limit_mb=0",
                         "-max_total_time=" + seconds,
                         corpus.toString(),

@@ -68,6 +68,32 @@ final class Seeds {
         parts(things, Door.LOGBOOK, logbook);
         seed(things, Door.TABLE, "sizes", "diameter_nm,weight\n100,1\n200,3.5\n400,1e-1\n");
         seed(things, Door.TABLE, "spheres", "size_parameter,index,absorption_index\n1,1.5,0\n10,1.33,0.01\n");
+        seed(
+                things,
+                Door.COEFFICIENTS,
+                "commas",
+                "# measured\nwavelength (nm),µa /cm,u(µa),µs' (1/cm),± µs'\n690,0.1,0.002,10.0,0.2\n830,1.05e-1,0.002,8.1,0.2\n");
+        seed(things, Door.COEFFICIENTS, "semicolons", "nm;mua_per_mm;musp_per_mm\n690,5;0,01;1,0\n830;0,0105;0,81\n");
+        seed(
+                things,
+                Door.DILUTION,
+                "ink",
+                "concentration_g_per_ml,path_mm,wavelength_nm,transmission,u\n0,10,700,1,0.001\n0.0001,10,700,0.5,0.001\n"
+                        + "0.0002,10,700,0.25,0.001\n0.0003,10,700,0.125,0.001\n0.0001,10,800,0.6,0.001\n0.0002,10,800,0.36,0.001\n"
+                        + "0.0003,10,800,0.22,0.001\n0.0004,10,800,0.13,0.001\n");
+        seed(
+                things,
+                Door.DILUTION,
+                "absorbance",
+                "mass_fraction,path_mm,wavelength_nm,absorbance\n0,10,700,0\n1e-4,10,700,0.3\n"
+                        + "2e-4,5,700,0.3\n3e-4,10,700,0.9\n");
+        seed(things, Door.TISSUE, "oxy", Files.readString(Path.of("ingredients/spectra/haemoglobin-oxy-molar.csv")));
+        seed(
+                things,
+                Door.WINDOW,
+                "settings",
+                "recent.0=/tmp/a.brief.toml\nwidth=1280\nfavourites=ink-demo water\nin-hand.ink-demo=12.5\ndark=yes\n");
+        seed(things, Door.WINDOW, "steps", "step.0=done\nstep.1=open 12.5 3.25\nstep.2=done 0.5\n");
         commands(things);
     }
 

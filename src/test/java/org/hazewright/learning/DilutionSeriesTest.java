@@ -114,10 +114,8 @@ class DilutionSeriesTest {
                     readings.add(transmission(C[i], 10, w, Math.exp(-depth)));
                 }
             DilutionFit fit = new DilutionSeries("ink-demo", 1, 0, 0, 0, readings).fit();
-            double mean = 0;
             double product = 0;
             double square = 0;
-            for (Extinction e : fit.wavelengths()) mean += (e.cm2PerG() / 6000 - 1) / nm.length;
             for (Extinction e : fit.wavelengths()) {
                 double d = e.cm2PerG() / 6000 - 1;
                 square += d * d / nm.length;

@@ -96,7 +96,7 @@ class NewLotTest {
     }
 
     @Test
-    void particlesThatAbsorbByTheirIndexCannotBeMultiplied() {
+    void particlesThatAbsorbByTheirIndexAreMultipliedToo() {
         Material carbon = new Material("carbon", "carbon", new ConstantIndex("carbon", 1.8, 0.6, 400, 1000), MEASURED);
         Ingredient black = DemoIngredients.of(
                 "black-demo",
@@ -107,9 +107,12 @@ class NewLotTest {
                 Optional.of(new Scattering.MieParticles(
                         carbon, 1, new SizeDistribution.Single(80), new Crowding.None(), 1)),
                 Optional.empty());
-        Refusal refusal = assertThrows(Refusal.class, () -> LOT.learned(black, factors(black, 1.1, 1)));
-        assertTrue(refusal.getMessage().contains("[absorption]"));
-        LOT.learned(black, factors(black, 1, 1.1));
+        Ingredient lot = LOT.learned(black, factors(black, 1.1, 0.9));
+        MassSpecific before = MassSpecific.of(black, 700, 22, 1.33, 0);
+        MassSpecific after = MassSpecific.of(lot, 700, 22, 1.33, 0);
+        assertTrue(before.kappaA() > 0);
+        assertEquals(1.1 * before.kappaA(), after.kappaA(), 1e-12 * after.kappaA());
+        assertEquals(0.9 * before.kappaMusp(), after.kappaMusp(), 1e-12 * after.kappaMusp());
     }
 
     @Test

@@ -65,4 +65,27 @@ class MieManyDigitsReferenceTest {
         }
         assertTrue(weak > 20, "weak absorbers in the table: " + weak);
     }
+
+    /** Spheres computed side by side keep the same promise: the whole table at once, each row among eight neighbours of its size. */
+    @Test
+    void sideBySide() throws IOException {
+        List<Row> rows = rows();
+        int copies = 9;
+        double[][] v = new double[6][rows.size() * copies];
+        for (int i = 0; i < v[0].length; i++) {
+            Row r = rows.get(i / copies);
+            v[0][i] = Math.min(Mie.X_MAX, r.x * (1 + 1e-3 * (i % copies)));
+            v[1][i] = r.n;
+            v[2][i] = r.k;
+        }
+        Mie.spheres(v[0], v[1], v[2], v[3], v[4], v[5]);
+        for (int i = 0; i < rows.size(); i++) {
+            Row r = rows.get(i);
+            double tolerance = r.x <= 1000 ? 1e-10 : 1e-8;
+            assertEquals(r.qSca, v[3][i * copies], tolerance * r.qSca, "Q_sca of " + r);
+            double size = Math.max(Math.abs(r.g), Math.min(1e-3, r.x * r.x));
+            assertEquals(r.g, v[5][i * copies], tolerance * size, "g of " + r);
+            assertEquals(r.qAbs, v[4][i * copies], 10 * tolerance * r.qAbs, "Q_abs of " + r);
+        }
+    }
 }

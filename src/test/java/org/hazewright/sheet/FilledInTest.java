@@ -7,6 +7,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
 import java.io.OutputStream;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.time.LocalDate;
@@ -159,7 +160,7 @@ class FilledInTest {
 
     @Test
     void whatIsNoWorkbookOfOursIsNotOpened() throws IOException {
-        refused("PDF".getBytes(), "not a workbook");
+        refused("PDF".getBytes(StandardCharsets.UTF_8), "not a workbook");
         refused(new byte[] {(byte) 0xd0, (byte) 0xcf, 0x11, (byte) 0xe0, 0, 0, 0, 0}, "old workbook");
         Path good = sheet(s -> {});
         byte[] bytes = Files.readAllBytes(good);
@@ -183,7 +184,7 @@ class FilledInTest {
         var out = new java.io.ByteArrayOutputStream();
         try (ZipOutputStream zip = new ZipOutputStream(out)) {
             zip.putNextEntry(new ZipEntry(name));
-            zip.write(text.getBytes());
+            zip.write(text.getBytes(StandardCharsets.UTF_8));
         }
         return out.toByteArray();
     }

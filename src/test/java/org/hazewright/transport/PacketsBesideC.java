@@ -1,6 +1,7 @@
 package org.hazewright.transport;
 
 import java.io.IOException;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
@@ -70,7 +71,9 @@ public final class PacketsBesideC {
                         Long.toString(packets),
                         "1")
                 .start();
-        String[] words = new String(p.getInputStream().readAllBytes()).trim().split(" ");
+        String[] words = new String(p.getInputStream().readAllBytes(), StandardCharsets.UTF_8)
+                .trim()
+                .split(" ");
         if (!p.waitFor(10, TimeUnit.MINUTES)) throw new IOException("the C program does not end");
         return Double.parseDouble(words[0]);
     }

@@ -245,7 +245,7 @@ public final class Adding {
             Uncertainty u = new Uncertainty(
                     uAbsorption.isBlank() ? parent.uncertainty().absorption() : share("absorption", uAbsorption),
                     uScattering.isBlank() ? parent.uncertainty().scattering() : share("scattering", uScattering));
-            Ingredient made = asLot(parent, LotWriter.id(parent.kind(), number.strip()), lot, source, u);
+            Ingredient made = new NewLot(LotWriter.id(parent.kind(), number.strip()), lot, source).of(parent, u);
             write(() -> LotWriter.write(desk.shelfProperty().get().folder().orElseThrow(), made, List.of()), made.id());
             return Optional.empty();
         } catch (Refusal refusal) {
@@ -262,31 +262,6 @@ public final class Adding {
         } catch (Refusal refusal) {
             return Optional.of(refusal.getMessage());
         }
-    }
-
-    private static Ingredient asLot(Ingredient p, String id, Lot lot, Source source, Uncertainty u) {
-        return new Ingredient(
-                id,
-                p.name(),
-                p.part(),
-                p.families(),
-                p.form(),
-                p.densityGPerMl(),
-                p.maxGPerMl(),
-                p.pricePerG(),
-                p.settles(),
-                p.leastShare(),
-                p.handling(),
-                p.conflicts(),
-                p.cautions(),
-                source,
-                u,
-                p.absorption(),
-                p.scattering(),
-                p.index(),
-                p.blend(),
-                p.making(),
-                Optional.of(lot));
     }
 
     private static Optional<LocalDate> day(String text) {

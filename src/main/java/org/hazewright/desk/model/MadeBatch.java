@@ -329,7 +329,8 @@ public final class MadeBatch {
                         .orElse(new Notice(
                                 Notice.Kind.TOLD,
                                 "logbook",
-                                "Recorded in the logbook, " + recorded.kept() + ".",
+                                "Recorded in the logbook, " + recorded.kept()
+                                        + (recorded.found().isEmpty() ? "" : " (" + recorded.found() + ")") + ".",
                                 desk.showing(recorded.kept()))));
     }
 }

@@ -79,7 +79,8 @@ public final class Remembered {
 
     public double number(String key, double otherwise) {
         try {
-            return Double.parseDouble(text(key, ""));
+            double value = Double.parseDouble(text(key, ""));
+            return Double.isFinite(value) ? value : otherwise;
         } catch (NumberFormatException e) {
             return otherwise;
         }

@@ -21,6 +21,8 @@ import org.hazewright.shelf.Shelf;
  * plain lines {@code step.N=done|open load load …}. Both are written whole after every step.
  */
 public final class WeighingLog {
+    private static final double MOST_G = 1e9;
+
     private final Path file;
 
     /** For a batch's file, {@code ID.batch.toml}; it need not be there yet. */
@@ -78,6 +80,8 @@ public final class WeighingLog {
         if (line == null) return Weighed.NOTHING;
         String[] words = line.strip().split("\\s+");
         List<Double> loads = Arrays.stream(words).skip(1).map(Double::valueOf).toList();
+        if (loads.stream().anyMatch(g -> !(g >= 0 && g <= MOST_G)))
+            throw new IllegalArgumentException("no load: " + line);
         return new Weighed(loads, words[0].equals("done"));
     }
 

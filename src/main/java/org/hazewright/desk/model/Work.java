@@ -81,7 +81,7 @@ public final class Work implements AutoCloseable {
             this.haste = haste;
         }
 
-        private final class Ticket {
+        private static final class Ticket {
             private volatile boolean stop;
 
             synchronized void stop() {

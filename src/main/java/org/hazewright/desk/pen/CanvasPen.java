@@ -42,7 +42,7 @@ public final class CanvasPen implements Pen {
     public void line(double[] x, double[] y, int count, String colour, double width, double... dash) {
         g.setStroke(colour(colour, 1));
         g.setLineWidth(width);
-        g.setLineDashes(dash.length == 0 ? null : dash);
+        g.setLineDashes(dash);
         g.setLineCap(StrokeLineCap.BUTT);
         g.strokePolyline(x, y, count);
         g.setLineDashes((double[]) null);

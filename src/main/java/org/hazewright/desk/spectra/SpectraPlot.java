@@ -49,7 +49,6 @@ public final class SpectraPlot {
     private final View view;
     private final Palette palette;
     private final double em;
-    private final double w;
     private final Scale nm;
     private final Scale mua;
     private final Scale musp;
@@ -73,7 +72,6 @@ public final class SpectraPlot {
         this.view = view;
         this.palette = palette;
         this.em = em;
-        this.w = w;
         this.ends = ends(hold);
         double left = 3.9 * em;
         double right = w - 1.4 * em;
