@@ -49,6 +49,10 @@ public final class Window {
     private final KeysAndDrops keysAndDrops;
     private BalanceView balance;
     private BatchView batch;
+    /** Views that listen to what outlives them are made once, when first wanted. */
+    private ShelfView shelfView;
+
+    private LogbookView logbookView;
     private boolean shelfOpen;
     private boolean logbookOpen;
     private boolean keysOpen;
@@ -177,19 +181,15 @@ public final class Window {
             center(batch, false);
             batch.requestFocus();
         } else if (shelfOpen) {
-            ShelfView view = new ShelfView(
-                    desk.shelfRoom(),
-                    desk.adding(),
-                    ShelfState.place(desk.shelfProperty().get().folder()),
-                    look,
-                    chooser,
-                    () -> shelf(false));
-            center(view, false);
-            view.requestFocus();
+            if (shelfView == null)
+                shelfView = new ShelfView(desk.shelfRoom(), desk.adding(), look, chooser, () -> shelf(false));
+            center(shelfView, false);
+            shelfView.requestFocus();
         } else if (logbookOpen) {
-            LogbookView view = new LogbookView(desk.logbookRoom(), desk.logbookRoom()::open, () -> logbook(false));
-            center(view, false);
-            view.requestFocus();
+            if (logbookView == null)
+                logbookView = new LogbookView(desk.logbookRoom(), desk.logbookRoom()::open, () -> logbook(false));
+            center(logbookView, false);
+            logbookView.requestFocus();
         } else if (keysOpen) {
             KeysView view = new KeysView(() -> keys(false));
             center(view, false);

@@ -496,6 +496,36 @@ class WindowTest {
         assertTrue(window.desk().notices().all().stream().anyMatch(n -> n.text().contains("holiday.mp3")));
     }
 
+    @Test
+    void viewsThatWereLeftAreForgotten() throws Exception {
+        open(Optional.of(bath()));
+        List<java.lang.ref.WeakReference<Node>> left = new ArrayList<>();
+        for (int k = 0; k < 3; k++) {
+            Stagehand.ui(() -> window.openShelf());
+            Stagehand.pulse();
+            left.add(new java.lang.ref.WeakReference<>(
+                    all(n -> n.getClass().getSimpleName().equals("ShelfView")).get(0)));
+            Stagehand.ui(() -> window.closeShelf());
+            Stagehand.ui(() -> window.desk().standAtBalance());
+            Stagehand.until(
+                    "the balance", () -> window.desk().weighingProperty().get().isPresent());
+            Stagehand.pulse();
+            left.add(new java.lang.ref.WeakReference<>(
+                    all(n -> n.getClass().getSimpleName().equals("BalanceView")).get(0)));
+            Stagehand.ui(() -> window.desk().leaveBalance());
+        }
+        // the window keeps one of each kind
+        Stagehand.until("the garbage to be collected", () -> {
+            System.gc();
+            return left.stream()
+                            .map(java.lang.ref.WeakReference::get)
+                            .filter(java.util.Objects::nonNull)
+                            .distinct()
+                            .count()
+                    <= 2;
+        });
+    }
+
     /** Seven dilutions of a bottle of invented strength; Beer and Lambert's law gives that strength back by hand. */
     @Test
     void aDilutionSeriesMakesALot() throws Exception {

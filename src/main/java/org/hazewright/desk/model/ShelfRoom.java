@@ -51,6 +51,11 @@ public final class ShelfRoom {
         });
     }
 
+    /** The shelf that is looked through. */
+    public ReadOnlyObjectProperty<ShelfState> shelfProperty() {
+        return desk.shelfProperty();
+    }
+
     public StringProperty findProperty() {
         return find;
     }

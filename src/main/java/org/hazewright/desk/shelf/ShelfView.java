@@ -19,6 +19,7 @@ import javafx.scene.layout.VBox;
 import org.hazewright.desk.look.Look;
 import org.hazewright.desk.model.Adding;
 import org.hazewright.desk.model.ShelfRoom;
+import org.hazewright.desk.model.ShelfState;
 import org.hazewright.desk.model.Words;
 import org.hazewright.desk.parts.Chooser;
 import org.hazewright.desk.parts.Field;
@@ -28,7 +29,7 @@ import org.hazewright.desk.pen.CanvasPen;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Part;
 
-/** The view of the shelf: what is on it, how it compares, what is known of it. */
+/** The view of the shelf: what is on it, how it compares, what is known of it. One for the life of the window, as it listens to the room. */
 public final class ShelfView extends BorderPane {
     private final ShelfRoom room;
     private final Look look;
@@ -39,16 +40,17 @@ public final class ShelfView extends BorderPane {
     private final Plot scattering = new Plot(true);
     private final VBox right = new VBox();
     private final IngredientCard card;
+    private final Label place = Say.quiet("");
     private final Label checked = Say.wrapped("", "quiet", "small");
 
-    public ShelfView(ShelfRoom room, Adding adding, String place, Look look, Chooser chooser, Runnable leave) {
+    public ShelfView(ShelfRoom room, Adding adding, Look look, Chooser chooser, Runnable leave) {
         this.room = room;
         this.adding = adding;
         this.look = look;
         this.chooser = chooser;
         getStyleClass().add("balance-view");
         card = new IngredientCard(room, new LotForm(adding, chooser));
-        setTop(head(place, leave));
+        setTop(head(leave));
         setLeft(left());
         VBox middle = new VBox(Say.place("Side by side"), absorption, scattering);
         middle.getStyleClass().addAll("place", "gap-s");
@@ -62,6 +64,7 @@ public final class ShelfView extends BorderPane {
         setRight(side);
         right.getChildren().setAll(card);
         room.findProperty().addListener((p, before, now) -> list());
+        room.shelfProperty().addListener((p, before, now) -> list());
         room.chosenProperty().addListener((p, before, now) -> {
             right.getChildren().setAll(card);
             list();
@@ -78,9 +81,9 @@ public final class ShelfView extends BorderPane {
         doubts();
     }
 
-    private Node head(String place, Runnable leave) {
-        HBox head = new HBox(
-                Say.label("Shelf", "title"), Say.quiet(place), Say.spring(), new Word("Esc: back to the desk", leave));
+    private Node head(Runnable leave) {
+        HBox head =
+                new HBox(Say.label("Shelf", "title"), place, Say.spring(), new Word("Esc: back to the desk", leave));
         head.getStyleClass().addAll("head", "gap-m");
         head.setAlignment(Pos.BASELINE_LEFT);
         return head;
@@ -139,6 +142,7 @@ public final class ShelfView extends BorderPane {
     }
 
     private void list() {
+        place.setText(ShelfState.place(room.shelfProperty().get().folder()));
         List<Node> all = new ArrayList<>();
         for (Part part : new Part[] {Part.ABSORBER, Part.SCATTERER, Part.MODIFIER, Part.BASE}) {
             List<Ingredient> found = room.found(part);
