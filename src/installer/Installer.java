@@ -65,7 +65,7 @@ public final class Installer {
                         tool("jdeps"), "--ignore-missing-deps", "--multi-release", "17", "--print-module-deps", JAR.toString())
                 .redirectError(ProcessBuilder.Redirect.INHERIT)
                 .start();
-        String found = new String(jdeps.getInputStream().readAllBytes()).strip();
+        String found = new String(jdeps.getInputStream().readAllBytes(), java.nio.charset.StandardCharsets.UTF_8).strip();
         if (jdeps.waitFor() != 0) throw new IOException("jdeps ended with " + jdeps.exitValue() + ": " + found);
         return found + ",jdk.zipfs,jdk.charsets";
     }

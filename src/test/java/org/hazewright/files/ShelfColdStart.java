@@ -1,5 +1,6 @@
 package org.hazewright.files;
 
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
 import java.time.Duration;
 import java.util.ArrayList;
@@ -54,8 +55,9 @@ public final class ShelfColdStart {
             Process process = new ProcessBuilder(command)
                     .redirectError(ProcessBuilder.Redirect.INHERIT)
                     .start();
-            String[] printed =
-                    new String(process.getInputStream().readAllBytes()).strip().split(" ");
+            String[] printed = new String(process.getInputStream().readAllBytes(), StandardCharsets.UTF_8)
+                    .strip()
+                    .split(" ");
             if (process.waitFor() != 0) throw new IllegalStateException("the process failed");
             for (int i = 0; i < seen.length; i++) seen[i][run] = Double.parseDouble(printed[i]);
         }

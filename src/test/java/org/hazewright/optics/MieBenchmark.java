@@ -3,6 +3,7 @@ package org.hazewright.optics;
 import java.io.IOException;
 import java.net.URL;
 import java.net.URLClassLoader;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
@@ -148,7 +149,7 @@ public class MieBenchmark {
     private static Map<String, Double> peer(Path program) throws IOException, InterruptedException {
         Process run = new ProcessBuilder(program.toString()).start();
         Map<String, Double> times = new LinkedHashMap<>();
-        for (String line : new String(run.getInputStream().readAllBytes()).split("\n"))
+        for (String line : new String(run.getInputStream().readAllBytes(), StandardCharsets.UTF_8).split("\n"))
             if (line.contains("="))
                 times.put(
                         line.split("=")[0].trim(),
