@@ -55,6 +55,7 @@ abstract class SetSweep {
     private final double[] fitted;
     private final double[] leanFitted;
     private final double[] unit;
+    private final double[][] choices;
 
     /** {@code charge}: what each candidate adds to the score by being there, by position. */
     SetSweep(Columns columns, Columns.Gram gram, double[] charge, Watch watch) {
@@ -74,6 +75,7 @@ abstract class SetSweep {
         leanFitted = new double[most];
         unit = new double[most];
         leanPull = new double[most + 1][n];
+        choices = choices(n, most);
     }
 
     /** Takes in multipliers: the second objective's linear term and start, and its charges by position. */
@@ -178,9 +180,10 @@ abstract class SetSweep {
             int next = count < columns.most[columns.group[i]] ? i + 1 : columns.groupEnd[i];
             if (next >= n || blocked(depth, i)) continue;
             member[depth] = i;
-            double work = choices(n - next, most - depth - 1) * spent / (1000 + gone);
+            double sets = choices[n - next][most - depth - 1];
+            double work = sets * spent / (1000 + gone);
             if (work > 1 && hopeless(depth + 1, next, work)) {
-                considered += choices(n - next, most - depth - 1);
+                considered += sets;
                 continue;
             }
             double z = extend(depth, i, next);
@@ -198,15 +201,13 @@ abstract class SetSweep {
         }
     }
 
-    /** Sets of 1 to {@code most} out of {@code from}. */
-    private static double choices(int from, int most) {
-        double sum = 0;
-        double ways = 1;
-        for (int k = 1; k <= Math.min(from, most); k++) {
-            ways = ways * (from - k + 1) / k;
-            sum += ways;
-        }
-        return sum;
+    /** Sets of 1 to {@code together} out of {@code from}, in row {@code from} and column {@code together}. */
+    private static double[][] choices(int most, int together) {
+        double[][] sets = new double[most + 1][together + 1];
+        // those without the last, those with it, and it alone
+        for (int from = 1; from <= most; from++)
+            for (int k = 1; k <= together; k++) sets[from][k] = sets[from - 1][k] + sets[from - 1][k - 1] + 1;
+        return sets;
     }
 
     private boolean blocked(int depth, int i) {
