@@ -3,7 +3,7 @@ package org.hazewright.cli;
 import java.io.PrintWriter;
 import java.nio.file.Path;
 import java.util.concurrent.Callable;
-import org.hazewright.bench.Batch;
+import org.hazewright.batch.Batch;
 import org.hazewright.files.BatchReader;
 import org.hazewright.files.BatchTable;
 import org.hazewright.files.SafeFile;

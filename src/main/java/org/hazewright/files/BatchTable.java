@@ -2,8 +2,8 @@ package org.hazewright.files;
 
 import java.util.List;
 import java.util.OptionalDouble;
-import org.hazewright.bench.Batch;
-import org.hazewright.bench.Measurement;
+import org.hazewright.batch.Batch;
+import org.hazewright.batch.Measurement;
 import org.hazewright.bench.Weighing;
 import org.hazewright.brief.Point;
 import org.hazewright.learning.MeasuredValue;

@@ -1,4 +1,4 @@
-package org.hazewright.bench;
+package org.hazewright.batch;
 
 import java.time.LocalDate;
 import java.util.ArrayList;
@@ -6,6 +6,8 @@ import java.util.Collections;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import org.hazewright.bench.Grams;
+import org.hazewright.bench.Weighing;
 import org.hazewright.brief.Balance;
 import org.hazewright.brief.Brief;
 import org.hazewright.brief.SearchLimits;
