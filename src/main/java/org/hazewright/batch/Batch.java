@@ -111,6 +111,16 @@ public record Batch(
                 plan.briefSha256()));
     }
 
+    /** Corrections of which something is weighed. */
+    public int correctionsBegun() {
+        int begun = 0;
+        List<Weighing> all = weighings();
+        for (int n = 0; n < all.size(); n++)
+            if (weighed(n) && all.get(n).role() == Weighing.Role.ITEM)
+                begun = Math.max(begun, corrections.get(all.get(n).place()));
+        return begun;
+    }
+
     public List<Weighing> weighings() {
         return Weighing.of(plan);
     }
@@ -263,9 +273,20 @@ public record Batch(
         return with(plan, weighedG, corrections, Optional.of(h), measured, notes);
     }
 
+    /**
+     * With measured values. They count for what was in the vessel: a correction of which nothing is weighed is not in it yet. Refused
+     * before anything is weighed.
+     */
     public Batch withMeasured(Measurement m) {
+        if (weighedCount() == 0)
+            throw new Refusal("Nothing of the batch " + id
+                    + " is weighed yet, so there is nothing that measured values could be set against. Record its grams first,"
+                    + " typed or from the filled-in sheet, then what was measured.");
         List<Measurement> all = new ArrayList<>(measured);
-        all.add(m);
+        all.add(
+                m.correction() <= correctionsBegun()
+                        ? m
+                        : new Measurement(m.on(), m.method(), m.instrument(), correctionsBegun(), m.values()));
         return with(plan, weighedG, corrections, heating, all, notes);
     }
 

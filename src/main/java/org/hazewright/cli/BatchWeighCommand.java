@@ -118,6 +118,7 @@ final class BatchWeighCommand implements Callable<Integer> {
         BatchText text = new BatchText(planned, shared.units, out);
         text.weighings();
         text.landing(planned.asMade());
+        text.lots(shelf);
         return status;
     }
 

@@ -11,7 +11,7 @@ import org.hazewright.optics.Spectrum;
  *
  * <p>What it asks about: densities outside 0.6 to 6 g/mL; spectra that jump by more than a factor of {@value #JUMP} between
  * neighbours at most 20 nm apart; an uncertainty of 0 for a figure that is used, or one below 0.2 %; lots of an unknown ingredient
- * and lots past their date; conflicts with nobody; tables that end within the range people ask for most, 650 to 900 nm.
+ * and lots past their date or drifting; conflicts with nobody; tables that end within the range people ask for most, 650 to 900 nm.
  */
 public final class Inspection {
     static final double JUMP = 4;
@@ -48,6 +48,7 @@ public final class Inspection {
                             i.id(),
                             "lot " + lot.number() + " is past its date, "
                                     + lot.expires().orElseThrow() + "."));
+                lot.drift().ifPresent(d -> doubts.add(new Doubt(i.id(), "lot " + lot.number() + " is drifting: " + d)));
             });
             if (i.blend().isEmpty()
                     && i.absorption().isEmpty()
