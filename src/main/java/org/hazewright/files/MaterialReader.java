@@ -5,10 +5,9 @@ import org.hazewright.optics.CauchyIndex;
 import org.hazewright.optics.ConstantIndex;
 import org.hazewright.optics.IapwsWater;
 import org.hazewright.optics.Index;
-import org.hazewright.optics.PoleIndex;
 import org.hazewright.optics.RefractiveIndex;
 import org.hazewright.optics.Refusal;
-import org.hazewright.optics.SellmeierIndex;
+import org.hazewright.optics.ResonanceIndex;
 import org.hazewright.optics.TableIndex;
 import org.hazewright.shelf.Material;
 
@@ -55,23 +54,20 @@ final class MaterialReader {
                 double to = page.positive("to_nm");
                 return checked(page, page.holding("from_nm", () -> new CauchyIndex(name, a, b, c, from, to)));
             }
-            case "sellmeier": {
+            case "sellmeier", "pole": {
                 known(page, "a", "b", "c", "from_nm", "to_nm");
                 double a = page.number("a");
                 double[] b = page.numbers("b");
                 double[] c = page.numbers("c");
                 double from = page.positive("from_nm");
                 double to = page.positive("to_nm");
-                return checked(page, page.holding("c", () -> new SellmeierIndex(name, a, b, c, from, to)));
-            }
-            case "pole": {
-                known(page, "a", "b", "c", "from_nm", "to_nm");
-                double a = page.number("a");
-                double[] b = page.numbers("b");
-                double[] c = page.numbers("c");
-                double from = page.positive("from_nm");
-                double to = page.positive("to_nm");
-                return checked(page, page.holding("c", () -> new PoleIndex(name, a, b, c, from, to)));
+                return checked(
+                        page,
+                        page.holding(
+                                "c",
+                                () -> form.equals("pole")
+                                        ? ResonanceIndex.pole(name, a, b, c, from, to)
+                                        : ResonanceIndex.sellmeier(name, a, b, c, from, to)));
             }
             default: {
                 known(page, "from_nm", "to_nm");
