@@ -189,6 +189,23 @@ class HonestErrorTest {
                         between(r, 400, 1100)));
     }
 
+    /**
+     * The same with a little absorption, as of titania in the blue: a resonance adds to what is absorbed as well as to what is scattered, and
+     * from k = 1e-4 on it is damped.
+     */
+    @Test
+    void weaklyAbsorbingDensePigments() {
+        hold(
+                24,
+                600_000,
+                5e-2,
+                r -> new Case(
+                        new SizeDistribution.LogNormal(between(r, 150, 400), between(r, 1.3, 1.9)),
+                        new Index(between(r, 2.2, 2.9), logBetween(r, 1e-7, 1e-2)),
+                        r.nextBoolean() ? 1.33 : 1.41,
+                        between(r, 400, 1100)));
+    }
+
     /** Crowding of such a pigment is computed on fewer sizes, and still goes to the dilute value when dilute. */
     @Test
     void crowdedDensePigment() {
