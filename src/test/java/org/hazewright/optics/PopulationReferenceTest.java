@@ -77,8 +77,7 @@ class PopulationReferenceTest {
     void smallSpheresLoseThePackingFactor(double phi) {
         Population tiny = new Population(new SizeDistribution.Single(4));
         ParticleOptics alone = tiny.perVolumeFraction(Index.real(1.47), 1.33, 800);
-        ParticleOptics crowded =
-                tiny.perVolumeFraction(Index.real(1.47), 1.33, 800, phi, new Crowding.PercusYevick());
+        ParticleOptics crowded = tiny.perVolumeFraction(Index.real(1.47), 1.33, 800, phi, new Crowding.PercusYevick());
         double packing = Math.pow(1 - phi, 4) / Math.pow(1 + 2 * phi, 2);
         assertEquals(packing, crowded.muspPerCm() / alone.muspPerCm(), 1e-3 * packing);
         assertEquals(packing, crowded.musPerCm() / alone.musPerCm(), 1e-3 * packing);
@@ -88,9 +87,8 @@ class PopulationReferenceTest {
     @Test
     void eachSizeSeesItsOwnNeighbours() {
         double phi = 0.2;
-        SizeDistribution both = new SizeDistribution.Histogram(new double[] {199.9, 200.1, 399.9, 400.1}, new double[] {
-            2, 0, 1
-        });
+        SizeDistribution both =
+                new SizeDistribution.Histogram(new double[] {199.9, 200.1, 399.9, 400.1}, new double[] {2, 0, 1});
         double expected = 0;
         double volumes = 2 * Math.pow(200, 3) + Math.pow(400, 3);
         for (double d : new double[] {200, 400})
@@ -140,7 +138,8 @@ class PopulationReferenceTest {
         double alone = population.perVolumeFraction(Index.real(1.58), 1.33, 633).muspPerCm();
         assertEquals(
                 (1 - 1.2 * 0.03) * alone,
-                population.perVolumeFraction(Index.real(1.58), 1.33, 633, 0.03, measured)
+                population
+                        .perVolumeFraction(Index.real(1.58), 1.33, 633, 0.03, measured)
                         .muspPerCm(),
                 1e-12 * alone);
     }

@@ -28,8 +28,8 @@ class RefractiveIndexReferenceTest {
     static final ResonanceIndex RUTILE_O =
             ResonanceIndex.pole("rutile, ordinary", 5.913, new double[] {0.2441}, new double[] {0.0803}, 430, 1530);
 
-    static final ResonanceIndex RUTILE_E =
-            ResonanceIndex.pole("rutile, extraordinary", 7.197, new double[] {0.3322}, new double[] {0.0843}, 430, 1530);
+    static final ResonanceIndex RUTILE_E = ResonanceIndex.pole(
+            "rutile, extraordinary", 7.197, new double[] {0.3322}, new double[] {0.0843}, 430, 1530);
 
     /** Michels et al., Opt. Express 16, 5907, 2008. */
     static final CauchyIndex WATER_MICHELS = new CauchyIndex("water", 1.311, 1.154e4, -1.132e9, 350, 1100);
@@ -127,7 +127,8 @@ class RefractiveIndexReferenceTest {
     @Test
     void poleInsideTheRangeIsRefused() {
         Refusal refusal = assertThrows(
-                Refusal.class, () -> ResonanceIndex.sellmeier("glass", 1, new double[] {1}, new double[] {0.25}, 400, 700));
+                Refusal.class,
+                () -> ResonanceIndex.sellmeier("glass", 1, new double[] {1}, new double[] {0.25}, 400, 700));
         assertTrue(refusal.getMessage().contains("500 nm"), refusal.getMessage());
     }
 
