@@ -155,6 +155,20 @@ class HonestErrorTest {
                         between(r, 400, 1100)));
     }
 
+    /** Absorption in proportion to the volume: the large tail counts for more than it does for scattering. */
+    @Test
+    void weaklyAbsorbingParticles() {
+        hold(
+                100,
+                12_000,
+                1e-6,
+                r -> new Case(
+                        new SizeDistribution.LogNormal(logBetween(r, 30, 400), between(r, 1.1, 1.9)),
+                        new Index(between(r, 1.40, 1.65), logBetween(r, 1e-7, 0.02)),
+                        between(r, 1.33, 1.41),
+                        between(r, 400, 1100)));
+    }
+
     @Test
     void histograms() {
         hold(100, 12_000, 1e-6, r -> {
@@ -197,8 +211,8 @@ class HonestErrorTest {
     @Test
     void weaklyAbsorbingDensePigments() {
         hold(
-                24,
-                600_000,
+                16,
+                300_000,
                 1e-2,
                 r -> new Case(
                         new SizeDistribution.LogNormal(between(r, 150, 400), between(r, 1.3, 1.9)),
