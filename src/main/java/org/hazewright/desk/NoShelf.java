@@ -38,7 +38,7 @@ final class NoShelf extends StackPane {
                         .styled("strong"));
         box.getChildren().add(ways);
         box.getStyleClass().addAll("place", "gap-m");
-        box.setMaxWidth(720);
+        box.getStyleClass().add("no-shelf");
         getChildren().add(box);
     }
 }

@@ -15,6 +15,7 @@ import java.util.OptionalInt;
  *
  * <p>The program as it was started waits for it, so that a terminal behaves as ever. Whoever starts Java with {@code -Xmx} has said how much
  * memory there shall be: then the window opens in the machine as it is. So it does where no Java launcher is found beside the running one.
+ * The installed program bounds its commands in other words ({@code src/installer}), so that its window comes here too.
  */
 final class OwnMachine {
     private static final String THERE = "hazewright.window";
@@ -34,7 +35,7 @@ final class OwnMachine {
     static OptionalInt run(Optional<Path> shelfFolder, Optional<Path> first) {
         if (System.getProperty(THERE) != null) return OptionalInt.empty();
         List<String> given = ManagementFactory.getRuntimeMXBean().getInputArguments();
-        if (given.stream().anyMatch(a -> a.startsWith("-Xmx") || a.startsWith("-agentlib"))) return OptionalInt.empty();
+        if (opensHere(given)) return OptionalInt.empty();
         try {
             Optional<Path> java = launcher(Path.of(System.getProperty("java.home"), "bin"));
             if (java.isEmpty()) return OptionalInt.empty();
@@ -45,6 +46,11 @@ final class OwnMachine {
         } catch (IOException none) {
             return OptionalInt.empty();
         }
+    }
+
+    /** Whether the machine was started in words that the window is to open in it. */
+    static boolean opensHere(List<String> given) {
+        return given.stream().anyMatch(a -> a.startsWith("-Xmx") || a.startsWith("-agentlib"));
     }
 
     private static Optional<Path> launcher(Path bin) {

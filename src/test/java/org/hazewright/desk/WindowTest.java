@@ -14,7 +14,6 @@ import java.util.List;
 import java.util.Optional;
 import java.util.function.Predicate;
 import javafx.scene.Node;
-import javafx.scene.Parent;
 import javafx.scene.control.Button;
 import javafx.scene.control.Labeled;
 import javafx.scene.control.ScrollPane;
@@ -89,26 +88,11 @@ class WindowTest {
     }
 
     private List<Node> all(Predicate<Node> which) {
-        return Stagehand.onUi(() -> {
-            List<Node> found = new ArrayList<>();
-            collect(window.stage().getScene().getRoot(), which, found);
-            return found;
-        });
-    }
-
-    private static void collect(Node node, Predicate<Node> which, List<Node> found) {
-        if (!node.isVisible()) return;
-        if (which.test(node)) found.add(node);
-        if (node instanceof Parent p) p.getChildrenUnmodifiable().forEach(n -> collect(n, which, found));
+        return new Eyes(window).all(which);
     }
 
     private Button button(String text) {
-        return (Button) all(n -> n instanceof Button b
-                        && b.getText() != null
-                        && b.getText().contains(text))
-                .stream()
-                .findFirst()
-                .orElseThrow(() -> new AssertionError("There is no button “" + text + "”."));
+        return new Eyes(window).button(text);
     }
 
     private void focus(Node node) {

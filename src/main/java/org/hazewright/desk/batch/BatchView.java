@@ -3,6 +3,7 @@ package org.hazewright.desk.batch;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.Set;
 import javafx.geometry.Pos;
 import javafx.scene.Node;
 import javafx.scene.control.Button;
@@ -30,6 +31,7 @@ import org.hazewright.desk.parts.Word;
 import org.hazewright.mixture.Item;
 import org.hazewright.mixture.Stock;
 import org.hazewright.optics.Figures;
+import org.hazewright.shelf.Ingredient;
 
 /** The view of a batch: weighed on the left, landing and measured values in the middle, what they say on the right. */
 public final class BatchView extends BorderPane {
@@ -190,7 +192,7 @@ public final class BatchView extends BorderPane {
                 .ifPresentOrElse(
                         v -> {
                             says.getChildren().add(Say.heading("Measured against predicted"));
-                            says.getChildren().add(Say.wrapped(v.sentence()));
+                            says.getChildren().add(Say.wrapped(Words.spoken(v.sentence(), bottles())));
                         },
                         () -> says.getChildren()
                                 .add(Say.wrapped(
@@ -215,15 +217,24 @@ public final class BatchView extends BorderPane {
         }
     }
 
+    private Set<Ingredient> bottles() {
+        return made.batchProperty().get().asMade().massesG().keySet();
+    }
+
     /** Asks for a lot's number to keep a bottle's new figures under. */
     private Node keep(String ingredient) {
+        String bottle = bottles().stream()
+                .filter(i -> i.id().equals(ingredient))
+                .map(Words::inSentence)
+                .findFirst()
+                .orElse(ingredient);
         Field number = new Field(
                         () -> "", text -> text.isBlank() ? Optional.empty() : made.learn(ingredient, text), false)
-                .named("keep what was learned of " + ingredient + " as a lot: its number")
+                .named("keep what was learned of " + bottle + " as a lot: its number")
                 .styled("boxed")
                 .columns(7);
         number.setPromptText("lot number");
-        FlowPane line = new FlowPane(Say.quiet("keep as a lot of " + ingredient + ":"), number);
+        FlowPane line = new FlowPane(Say.wrapped("keep as a lot of " + bottle + ":", "quiet"), number);
         line.getStyleClass().add("flow");
         return new VBox(line, new ErrorLine(number));
     }
@@ -290,7 +301,7 @@ public final class BatchView extends BorderPane {
         }
         Correction c = made.correctionProperty().get().get();
         Batch b = made.batchProperty().get();
-        puts.getChildren().add(Say.wrapped(c.reason()));
+        puts.getChildren().add(Say.wrapped(Words.spoken(c.reason(), bottles())));
         for (Stock s : c.stocks())
             puts.getChildren()
                     .add(Say.wrapped("First make a stock: " + Words.grams(s.ingredientG(), b.balance()) + " g "
@@ -304,7 +315,7 @@ public final class BatchView extends BorderPane {
             row.setAlignment(Pos.BASELINE_LEFT);
             puts.getChildren().add(row);
         }
-        c.notes().forEach(n -> puts.getChildren().add(Say.wrapped("Mind: " + n, "quiet")));
+        c.notes().forEach(n -> puts.getChildren().add(Say.wrapped("Mind: " + Words.spoken(n, bottles()), "quiet")));
         if (c.outcome() == Correction.Outcome.ADD) {
             puts.getChildren()
                     .add(Say.wrapped(

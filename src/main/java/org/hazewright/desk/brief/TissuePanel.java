@@ -58,7 +58,7 @@ final class TissuePanel extends VBox {
         Field field = new Field(() -> texts.get(what), text -> typed(what, text), true)
                 .named(what + (unit.isEmpty() ? "" : " in " + unit))
                 .styled("boxed")
-                .columns(what.equals("wavelengths") ? 11 : 5);
+                .columns(what.equals("wavelengths") ? 15 : 5);
         fields.put(what, field);
         int at = grid.getRowCount();
         Label name = Say.quiet(what);

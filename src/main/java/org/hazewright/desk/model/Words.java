@@ -1,7 +1,11 @@
 package org.hazewright.desk.model;
 
+import java.util.Collection;
+import java.util.Comparator;
 import java.util.List;
 import java.util.Locale;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 import org.hazewright.bench.Answer;
 import org.hazewright.bench.Outlook;
 import org.hazewright.brief.Balance;
@@ -131,6 +135,22 @@ public final class Words {
         return sentence.isEmpty()
                 ? sentence
                 : sentence.substring(0, 1).toUpperCase(Locale.ROOT) + sentence.substring(1);
+    }
+
+    /**
+     * A sentence as the window says it: names in place of the ids that files and commands use, and the prime of µs′ as it is drawn. An id that
+     * is a plain word stays as it is.
+     */
+    public static String spoken(String sentence, Collection<Ingredient> known) {
+        String said = sentence.replace("µs'", "µs′");
+        List<Ingredient> longestFirst = known.stream()
+                .filter(i -> i.id().contains("-") && sentence.contains(i.id()))
+                .sorted(Comparator.comparing((Ingredient i) -> -i.id().length()))
+                .toList();
+        for (Ingredient i : longestFirst)
+            said = said.replaceAll(
+                    "(?<![\\w.-])" + Pattern.quote(i.id()) + "(?![\\w-])", Matcher.quoteReplacement(inSentence(i)));
+        return said;
     }
 
     /** A cause's name with the ingredient's name in place of its id. */

@@ -40,6 +40,7 @@ public final class ShelfView extends BorderPane {
     private final Plot scattering = new Plot(true);
     private final VBox right = new VBox();
     private final IngredientCard card;
+    private Optional<Ingredient> pressed = Optional.empty();
     private final Label place = Say.quiet("");
     private final Label checked = Say.wrapped("", "quiet", "small");
 
@@ -152,6 +153,7 @@ public final class ShelfView extends BorderPane {
         }
         if (all.isEmpty()) all.add(Say.wrapped("Nothing on this shelf is called that.", "quiet"));
         list.getChildren().setAll(all);
+        pressed = Optional.empty();
     }
 
     private Node row(Ingredient i) {
@@ -162,6 +164,7 @@ public final class ShelfView extends BorderPane {
         tick.setOnAction(e -> room.compare(i.id(), tick.isSelected()));
         boolean chosen = room.chosenProperty().get().filter(i::equals).isPresent();
         Word name = new Word((room.favourite(i.id()) ? "★ " : "") + Words.shortName(i), () -> {
+            pressed = Optional.of(i);
             room.choose(i);
         });
         name.setMinWidth(0);
@@ -174,6 +177,8 @@ public final class ShelfView extends BorderPane {
         grams.setMinWidth(Region.USE_PREF_SIZE);
         HBox row = new HBox(tick, name, grams);
         row.setAlignment(Pos.CENTER_LEFT);
+        if (pressed.filter(i::equals).isPresent()) // the list is made anew; whoever walks through it by keys stays where they are
+            javafx.application.Platform.runLater(name::requestFocus);
         return row;
     }
 
