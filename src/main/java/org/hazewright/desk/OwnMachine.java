@@ -21,8 +21,14 @@ final class OwnMachine {
     private static final String THERE = "hazewright.window";
 
     /** The heap holds the shelf, the recipe and the kept angular patterns several times over; see the command that measures memory. */
+    private static final String HEAP = "-Xmx176m";
+
+    /** Where there is no graphics processor, a window as large as 3840 × 2160 keeps 100 MiB of pixels in the heap. */
+    private static final String HEAP_OF_A_LARGE_WINDOW = "-Xmx288m";
+
+    private static final double LARGE_PX = 2600 * 1500;
+
     private static final List<String> SET_UP = List.of(
-            "-Xmx176m",
             "-XX:+UseG1GC",
             "-XX:MaxGCPauseMillis=12",
             "-XX:TieredStopAtLevel=1",
@@ -31,15 +37,15 @@ final class OwnMachine {
 
     private OwnMachine() {}
 
-    /** Runs the window elsewhere and comes back with its exit status when it is closed; empty when it has to open here. */
-    static OptionalInt run(Optional<Path> shelfFolder, Optional<Path> first) {
+    /** {@code windowPx} is how large the window was last. Runs the window elsewhere and comes back with its exit status when it is closed; empty when it has to open here. */
+    static OptionalInt run(Optional<Path> shelfFolder, Optional<Path> first, double windowPx) {
         if (System.getProperty(THERE) != null) return OptionalInt.empty();
         List<String> given = ManagementFactory.getRuntimeMXBean().getInputArguments();
         if (opensHere(given)) return OptionalInt.empty();
         try {
             Optional<Path> java = launcher(Path.of(System.getProperty("java.home"), "bin"));
             if (java.isEmpty()) return OptionalInt.empty();
-            Process window = new ProcessBuilder(command(java.get(), given, shelfFolder, first))
+            Process window = new ProcessBuilder(command(java.get(), given, shelfFolder, first, windowPx))
                     .inheritIO()
                     .start();
             return OptionalInt.of(window.onExit().join().exitValue());
@@ -59,9 +65,11 @@ final class OwnMachine {
         return Optional.empty();
     }
 
-    static List<String> command(Path java, List<String> given, Optional<Path> shelfFolder, Optional<Path> first) {
+    static List<String> command(
+            Path java, List<String> given, Optional<Path> shelfFolder, Optional<Path> first, double windowPx) {
         List<String> command = new ArrayList<>(List.of(java.toString()));
         command.addAll(given.stream().filter(a -> a.startsWith("-D")).toList());
+        command.add(windowPx > LARGE_PX ? HEAP_OF_A_LARGE_WINDOW : HEAP);
         command.addAll(SET_UP);
         command.addAll(List.of("-cp", System.getProperty("java.class.path"), "org.hazewright.cli.Hazewright"));
         shelfFolder.ifPresent(folder ->

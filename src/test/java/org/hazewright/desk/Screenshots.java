@@ -1,5 +1,6 @@
 package org.hazewright.desk;
 
+import java.awt.image.BufferedImage;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
@@ -7,9 +8,14 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import javafx.application.Platform;
+import javafx.geometry.Rectangle2D;
+import javafx.scene.Scene;
+import javafx.scene.SnapshotParameters;
 import javafx.scene.Node;
 import javafx.scene.control.ScrollPane;
+import javafx.scene.image.PixelFormat;
 import javafx.scene.image.WritableImage;
+import javax.imageio.ImageIO;
 import org.hazewright.brief.Point;
 import org.hazewright.desk.look.Palette;
 import org.hazewright.desk.model.AtBalance;
@@ -32,6 +38,12 @@ public final class Screenshots {
             new Size("3840", 3840, 2160, 1),
             new Size("large", 1440, 900, 1.5));
 
+    /** How much of a picture is copied at once, px. */
+    private static final int STRIP = 240;
+
+    /** Memory for a window without a display, that draws in software, and its picture; found by trying. */
+    private static final double BYTES_A_PIXEL = 32;
+
     private final Path out;
     private final Size size;
 
@@ -45,8 +57,12 @@ public final class Screenshots {
         Files.createDirectories(out);
         List<String> wanted = List.of(args);
         try {
-            for (Size size : SIZES)
-                if (wanted.isEmpty() || wanted.contains(size.name())) new Screenshots(out, size).all();
+            for (Size size : SIZES) {
+                if (!wanted.isEmpty() && !wanted.contains(size.name())) continue;
+                if (size.w() * size.h() * BYTES_A_PIXEL > Runtime.getRuntime().maxMemory())
+                    System.out.println("Left out: " + size.name() + " needs more memory, -Dmemory=400m");
+                else new Screenshots(out, size).all();
+            }
         } finally {
             Platform.exit();
         }
@@ -98,8 +114,11 @@ public final class Screenshots {
         Stagehand.until("a band", () -> at.bandProperty().get().isPresent());
         balance(window, at, "weigh");
         Stagehand.ui(() -> {
-            at.enter(Double.toString(at.loadWantedG() * 1.3) + " g");
+            String over = Double.toString(at.loadWantedG() * 1.3) + " g";
+            at.enter(over);
+            at.enter(over); // said twice, it counts
             while (!at.nowProperty().get().line().weighs()) at.enter("");
+            window.balance().field().clear();
         });
         Stagehand.until("a band", () -> at.bandProperty().get().isPresent());
         balance(window, at, "poured-over");
@@ -230,15 +249,32 @@ public final class Screenshots {
         shoot(window, "balance-" + what);
     }
 
+    /** Copies a strip of the scene: a whole one of 4K would not fit into the window's memory twice. */
+    private static void strip(Scene scene, int from, BufferedImage picture) {
+        int w = picture.getWidth();
+        int h = Math.min(STRIP, picture.getHeight() - from);
+        SnapshotParameters part = new SnapshotParameters();
+        part.setViewport(new Rectangle2D(0, from, w, h));
+        int[] pixels = new int[w * h];
+        scene.getRoot()
+                .snapshot(part, new WritableImage(w, h))
+                .getPixelReader()
+                .getPixels(0, 0, w, h, PixelFormat.getIntArgbInstance(), pixels, 0, w);
+        picture.setRGB(0, from, w, h, pixels, 0, w);
+    }
+
     private void shoot(Window window, String name) throws IOException {
         for (Palette p : new Palette[] {Palette.LIGHT, Palette.DARK}) {
             Stagehand.ui(() -> window.look().paletteProperty().set(p));
             Stagehand.pulse();
-            byte[] png = Stagehand.onUi(() -> {
-                WritableImage image = window.stage().getScene().snapshot(null);
-                return Pictures.bytes(image);
-            });
-            Files.write(out.resolve(name + "-" + size.name() + (p.dark() ? "-dark" : "-light") + ".png"), png);
+            BufferedImage picture =
+                    new BufferedImage((int) size.w(), (int) size.h(), BufferedImage.TYPE_INT_RGB);
+            for (int y = 0; y < size.h(); y += STRIP) {
+                int from = y;
+                Stagehand.ui(() -> strip(window.stage().getScene(), from, picture));
+            }
+            String file = name + "-" + size.name() + (p.dark() ? "-dark" : "-light") + ".png";
+            ImageIO.write(picture, "png", out.resolve(file).toFile());
         }
         Stagehand.ui(() -> window.look().paletteProperty().set(Palette.LIGHT));
     }

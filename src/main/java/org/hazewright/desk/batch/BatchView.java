@@ -26,6 +26,7 @@ import org.hazewright.desk.model.Words;
 import org.hazewright.desk.parts.Chooser;
 import org.hazewright.desk.parts.ErrorLine;
 import org.hazewright.desk.parts.Field;
+import org.hazewright.desk.parts.Room;
 import org.hazewright.desk.parts.Say;
 import org.hazewright.desk.parts.Word;
 import org.hazewright.mixture.Item;
@@ -54,11 +55,13 @@ public final class BatchView extends BorderPane {
                 made.batchProperty().get().plan().base().making().meltC().isPresent();
         Node heating = heating();
         Say.show(heating, heated);
-        setLeft(column("batch-left", "side-left", Say.place("Weighed"), weighed, heating, who()));
+        BorderPane columns = new BorderPane();
+        setCenter(new Room(columns, 99, 30));
+        columns.setLeft(column("batch-left", "side-left", Say.place("Weighed"), weighed, heating, who()));
         VBox middle = new VBox(Say.place("Landing and measured values"), table, complaint);
         middle.getStyleClass().addAll("place", "gap-m");
-        setCenter(scrolled(middle));
-        setRight(column("batch-right", "side-right", Say.place("What it says"), says, puts, teaches));
+        columns.setCenter(scrolled(middle));
+        columns.setRight(column("batch-right", "side-right", Say.place("What it says"), says, puts, teaches));
         made.batchProperty().addListener((p, before, now) -> show());
         made.seenProperty().addListener((p, before, now) -> show());
         made.correctionProperty().addListener((p, before, now) -> puts());
@@ -234,9 +237,8 @@ public final class BatchView extends BorderPane {
                 .styled("boxed")
                 .columns(7);
         number.setPromptText("lot number");
-        FlowPane line = new FlowPane(Say.wrapped("keep as a lot of " + bottle + ":", "quiet"), number);
-        line.getStyleClass().add("flow");
-        return new VBox(line, new ErrorLine(number));
+        number.setMaxWidth(USE_PREF_SIZE);
+        return new VBox(Say.wrapped("keep as a lot of " + bottle + ":", "quiet"), number, new ErrorLine(number));
     }
 
     private Node heating() {

@@ -1,9 +1,12 @@
 package org.hazewright.desk.model;
 
+import java.util.ArrayList;
 import java.util.Collection;
 import java.util.Comparator;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
+import java.util.Map;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 import org.hazewright.bench.Answer;
@@ -115,6 +118,21 @@ public final class Words {
         return Figures.fixed(
                 p.perCm(),
                 Figures.decimalsFor(Math.min(p.point().tolerancePerCm(), p.uPerCm() > 0 ? p.uPerCm() : 1e9)));
+    }
+
+    /** "µs′ at 690 and 730 nm lands high, µa at 830 nm lands low." – what lands outside its tolerance. */
+    public static String outside(List<Answer.Predicted> predicted) {
+        Map<String, List<String>> wavelengths = new LinkedHashMap<>();
+        for (Answer.Predicted p : predicted)
+            if (!p.inside())
+                wavelengths
+                        .computeIfAbsent(
+                                sign(p.point().quantity()) + " at %s nm lands too " + (p.miss() > 0 ? "high" : "low"),
+                                s -> new ArrayList<>())
+                        .add(Figures.plain(p.point().wavelengthNm()));
+        List<String> parts = new ArrayList<>();
+        wavelengths.forEach((words, nm) -> parts.add(words.replace("%s", join(nm))));
+        return join(parts) + ".";
     }
 
     /** "0.4 half-widths high, inside" – a landing said in words. */

@@ -213,9 +213,9 @@ public final class ReadingsPlace extends VBox {
         slabSaid.setText(
                 Figures.plain(f.asked().thicknessMm()) + " mm thick, through " + percent(s.through(), s.uThrough()));
         slabInWords.setText("Slab of " + Figures.plain(f.asked().thicknessMm()) + " mm: "
-                + Figures.significant(100 * s.reflected(), 2) + " % of the light comes back, "
-                + Figures.significant(100 * s.absorbed(), 2) + " % is absorbed, " + percent(s.through(), s.uThrough())
-                + " goes through.");
+                + Figures.significant(100 * s.reflected(), 2) + " % back, "
+                + Figures.significant(100 * s.absorbed(), 2) + " % absorbed, " + percent(s.through(), s.uThrough())
+                + " through");
         slab.show((pen, w, h) -> slab(pen, w, h, s));
         slab.setAccessibleText("slab, reflected " + percent(s.reflected(), s.uReflected()) + ", " + slabSaid.getText());
     }
@@ -265,7 +265,7 @@ public final class ReadingsPlace extends VBox {
         wanted.setText(
                 Double.isNaN(b.wanted()) ? "" : "wanted " + Figures.plain(Math.rint(1000 * b.wanted()) / 10) + " %");
         Say.show(wanted, !wanted.getText().isEmpty());
-        bloodSaid.setText(Figures.significant(b.umolPerL(), 3) + " µmol/L of haemoglobin");
+        bloodSaid.setText("Hb " + Figures.significant(b.umolPerL(), 3) + " µmol/L");
         saturation.setTooltip(new Tooltip("What an oximeter would believe that reads µa at the targets' wavelengths."));
     }
 
