@@ -16,7 +16,6 @@ import java.util.function.Predicate;
 import javafx.scene.Node;
 import javafx.scene.control.Button;
 import javafx.scene.control.Labeled;
-import javafx.scene.control.ScrollPane;
 import javafx.scene.input.KeyCode;
 import javafx.scene.layout.Region;
 import org.hazewright.brief.Brief;
@@ -608,32 +607,6 @@ class WindowTest {
         Stagehand.ui(button("use the shelf of the program")::fire);
         Stagehand.untilSettled(window);
         assertNotNull(shown());
-    }
-
-    @Test
-    void everythingThatTakesTheFocusHasAName() {
-        open(Optional.of(bath()));
-        named("desk");
-        Stagehand.ui(() -> window.openShelf());
-        Stagehand.pulse();
-        named("shelf");
-        Stagehand.ui(() -> {
-            window.closeShelf();
-            window.openLogbook();
-        });
-        Stagehand.pulse();
-        named("logbook");
-    }
-
-    private void named(String where) {
-        for (Node n : all(Node::isFocusTraversable)) {
-            if (n instanceof ScrollPane) continue;
-            String name = Stagehand.onUi(() ->
-                    n.getAccessibleText() != null && !n.getAccessibleText().isBlank()
-                            ? n.getAccessibleText()
-                            : n instanceof Labeled l && l.getText() != null ? l.getText() : "");
-            assertFalse(name.isBlank(), where + ": " + n + " has no name for a screen reader");
-        }
     }
 
     @Test
