@@ -14,10 +14,8 @@ import java.util.List;
 import java.util.Optional;
 import java.util.function.Predicate;
 import javafx.scene.Node;
-import javafx.scene.Parent;
 import javafx.scene.control.Button;
 import javafx.scene.control.Labeled;
-import javafx.scene.control.ScrollPane;
 import javafx.scene.input.KeyCode;
 import javafx.scene.layout.Region;
 import org.hazewright.brief.Brief;
@@ -89,26 +87,11 @@ class WindowTest {
     }
 
     private List<Node> all(Predicate<Node> which) {
-        return Stagehand.onUi(() -> {
-            List<Node> found = new ArrayList<>();
-            collect(window.stage().getScene().getRoot(), which, found);
-            return found;
-        });
-    }
-
-    private static void collect(Node node, Predicate<Node> which, List<Node> found) {
-        if (!node.isVisible()) return;
-        if (which.test(node)) found.add(node);
-        if (node instanceof Parent p) p.getChildrenUnmodifiable().forEach(n -> collect(n, which, found));
+        return new Eyes(window).all(which);
     }
 
     private Button button(String text) {
-        return (Button) all(n -> n instanceof Button b
-                        && b.getText() != null
-                        && b.getText().contains(text))
-                .stream()
-                .findFirst()
-                .orElseThrow(() -> new AssertionError("There is no button “" + text + "”."));
+        return new Eyes(window).button(text);
     }
 
     private void focus(Node node) {
@@ -624,32 +607,6 @@ class WindowTest {
         Stagehand.ui(button("use the shelf of the program")::fire);
         Stagehand.untilSettled(window);
         assertNotNull(shown());
-    }
-
-    @Test
-    void everythingThatTakesTheFocusHasAName() {
-        open(Optional.of(bath()));
-        named("desk");
-        Stagehand.ui(() -> window.openShelf());
-        Stagehand.pulse();
-        named("shelf");
-        Stagehand.ui(() -> {
-            window.closeShelf();
-            window.openLogbook();
-        });
-        Stagehand.pulse();
-        named("logbook");
-    }
-
-    private void named(String where) {
-        for (Node n : all(Node::isFocusTraversable)) {
-            if (n instanceof ScrollPane) continue;
-            String name = Stagehand.onUi(() ->
-                    n.getAccessibleText() != null && !n.getAccessibleText().isBlank()
-                            ? n.getAccessibleText()
-                            : n instanceof Labeled l && l.getText() != null ? l.getText() : "");
-            assertFalse(name.isBlank(), where + ": " + n + " has no name for a screen reader");
-        }
     }
 
     @Test

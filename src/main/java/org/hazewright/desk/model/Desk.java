@@ -60,7 +60,7 @@ public final class Desk {
         shelving = work.lane(Work.Haste.INTERRUPT);
         preparing = work.lane(Work.Haste.FINISH);
         shelf = new ReadOnlyObjectWrapper<>(ShelfState.reading(shelfFolder));
-        solving = new Solving(work);
+        solving = new Solving(work, this::spectra);
         papers = new Papers(work, edits, remembered, notices, () -> shelf.get().folder());
         edits.nowProperty().addListener((p, before, now) -> solve());
         foreseeing = new Foreseeing(this);
