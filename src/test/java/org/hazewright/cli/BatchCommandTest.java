@@ -184,13 +184,6 @@ class BatchCommandTest {
         assertFalse(run("batch", "show", batch).out.contains("expired"), "this shelf does not know the lot");
     }
 
-    private static void copy(Path from, Path to) throws IOException {
-        try (var all = Files.walk(from)) {
-            for (Path p : all.sorted().toList())
-                Files.copy(p, to.resolve(from.relativize(p).toString()));
-        }
-    }
-
     @Test
     void theBatchFileReadsBackEqual() {
         weighAsPlanned(1.02);
