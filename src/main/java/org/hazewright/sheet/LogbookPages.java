@@ -16,8 +16,8 @@ final class LogbookPages {
     static final String CHARTS = "logbook_charts";
     private static final int HEAD = 3;
 
-    /** In pixels; wider tables would be printed smaller than a person reads. */
-    private static final int WIDEST_ON_ONE_PAGE = 1250;
+    /** In pixels, hidden columns included; wider tables would be printed smaller than a person reads. */
+    private static final int WIDEST_ON_ONE_PAGE = 1550;
 
     private LogbookPages() {}
 
@@ -45,8 +45,10 @@ final class LogbookPages {
                 "Measured values",
                 "One row a measured number, in 1/cm, beside what was predicted of the batch as weighed.",
                 LogbookEntry.VALUE_COLUMNS,
-                new int[] {150, 82, 56, 66, 76, 84, 84, 92, 84, 92, 120, 120, 170, 230, 230});
+                new int[] {104, 80, 48, 66, 66, 80, 74, 88, 74, 96, 92, 92, 120, 190, 230});
         formats(values, VALUES, LogbookEntry.VALUE_COLUMNS);
+        values.sheet.setColumnHidden(
+                LogbookEntry.VALUE_COLUMNS.indexOf(LogbookEntry.KEY), true); // for the program only
         Page lots = table(
                 workbook,
                 looks,
@@ -87,13 +89,13 @@ final class LogbookPages {
         page.columns(widths);
         page.text(0, 0, title, Face.TITLE);
         page.height(0, 24);
-        page.text(1, 0, sentence, Face.QUIET);
+        boolean wide = Arrays.stream(widths).sum() > WIDEST_ON_ONE_PAGE;
+        page.text(1, wide ? 1 : 0, sentence, Face.QUIET); // the first column is printed again on the second page
         for (int c = 0; c < columns.size(); c++) page.text(HEAD, c, columns.get(c), head(face(columns.get(c), cell)));
         page.height(HEAD, 26);
         page.sheet.createFreezePane(1, HEAD + 1);
         page.sheet.setAutoFilter(new CellRangeAddress(HEAD, 20_000, 0, columns.size() - 1));
         names.give(cell, page.address(HEAD, 0));
-        boolean wide = Arrays.stream(widths).sum() > WIDEST_ON_ONE_PAGE;
         PrintSetup.pages(page.sheet, HEAD, wide ? 2 : 1);
         return page;
     }
