@@ -51,12 +51,12 @@ public final class LotWatch {
 
     static Optional<String> expired(Ingredient i, Lot lot, LocalDate day) {
         if (!lot.expiredOn(day)) return Optional.empty();
-        return Optional.of(i.name() + ", lot " + lot.number() + ", expired on "
+        return Optional.of(lot.named(i.name()) + ", expired on "
                 + lot.expires().orElseThrow()
                 + ". Use a fresh one, or measure it again before relying on its figures.");
     }
 
     static Optional<String> drifting(Ingredient i, Lot lot) {
-        return lot.drift().map(d -> i.name() + ", lot " + lot.number() + ", is drifting: " + d);
+        return lot.drift().map(d -> lot.named(i.name()) + ", is drifting: " + d);
     }
 }
