@@ -12,13 +12,13 @@ public final class LotDoubt {
     /** When its date has passed on that day. */
     public static Optional<String> expired(Ingredient i, Lot lot, LocalDate day) {
         if (!lot.expiredOn(day)) return Optional.empty();
-        return Optional.of(i.name() + ", lot " + lot.number() + ", expired on "
+        return Optional.of(lot.named(i.name()) + ", expired on "
                 + lot.expires().orElseThrow()
                 + ". Use a fresh one, or measure it again before relying on its figures.");
     }
 
     /** When its figures were seen to move from batch to batch. */
     public static Optional<String> drifting(Ingredient i, Lot lot) {
-        return lot.drift().map(d -> i.name() + ", lot " + lot.number() + ", is drifting: " + d);
+        return lot.drift().map(d -> lot.named(i.name()) + ", is drifting: " + d);
     }
 }

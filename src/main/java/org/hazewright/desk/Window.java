@@ -229,7 +229,8 @@ public final class Window {
 
     /** Puts the focus where it stood when the desk was left. */
     private void comeBack() {
-        if (focusAtDesk != null && focusAtDesk.getScene() != null && focusAtDesk.isVisible()) focusAtDesk.requestFocus();
+        if (focusAtDesk != null && focusAtDesk.getScene() != null && focusAtDesk.isVisible())
+            focusAtDesk.requestFocus();
         else if (atDesk instanceof NoShelf none) none.focusFirst();
         else if (desk.edits().now() != null) brief.focusFirst();
     }

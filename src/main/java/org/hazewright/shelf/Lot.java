@@ -30,6 +30,12 @@ public record Lot(
         return new Lot(of, number, received, opened, expires, Optional.of(sentence));
     }
 
+    /** The name of what is in the bottle with the lot's number behind it, once: a lot's file may have put it there. */
+    public String named(String name) {
+        String behind = ", lot " + number;
+        return name.endsWith(behind) ? name : name + behind;
+    }
+
     /** Whether the lot is past its date on a given day. */
     public boolean expiredOn(LocalDate day) {
         return expires.map(day::isAfter).orElse(false);

@@ -179,6 +179,7 @@ class BatchCommandTest {
         Ran show = run("batch", "show", batch, "--ingredients", shelf.toString());
         for (Ran ran : List.of(weigh, show)) {
             assertTrue(ran.out.contains("lot K3, expired on 2026-02-01"), ran.out);
+            assertFalse(ran.out.contains("lot K3, lot K3"), ran.out);
             assertTrue(ran.out.contains("lot K3, is drifting: absorption fell by 3 % in two months."), ran.out);
         }
         assertFalse(run("batch", "show", batch).out.contains("expired"), "this shelf does not know the lot");

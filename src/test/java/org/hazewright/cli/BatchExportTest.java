@@ -85,7 +85,7 @@ class BatchExportTest {
             int last = sheet.getRow(3).getLastCellNum();
             sheet.getRow(3).createCell(last).setCellValue("room");
             sheet.getRow(4).createCell(last).setCellValue("=2+2, \"cold\"");
-            XSSFSheet own = book.createSheet("Our notes / 2026");
+            XSSFSheet own = book.createSheet("Our notes, 2026");
             own.createRow(1).createCell(1).setCellValue("lamp changed");
             own.getRow(1).createCell(2).setCellValue(3.5);
             book.createSheet("Empty");

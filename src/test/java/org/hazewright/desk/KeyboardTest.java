@@ -125,7 +125,12 @@ class KeyboardTest {
                 });
                 Stagehand.until(
                         "the logbook",
-                        () -> t.window.desk().logbookRoom().pagesProperty().get().isPresent());
+                        () -> t.window
+                                .desk()
+                                .logbookRoom()
+                                .pagesProperty()
+                                .get()
+                                .isPresent());
             }
         },
         KEYS {
@@ -243,7 +248,8 @@ class KeyboardTest {
             Stagehand.ui(() -> window.stage().getScene().getRoot().requestFocus());
             Stagehand.pulse();
             int without = tealIn(area);
-            if (with <= without) hidden.add(Eyes.name(now) + " (" + now.getClass().getSimpleName() + ")");
+            if (with <= without)
+                hidden.add(Eyes.name(now) + " (" + now.getClass().getSimpleName() + ")");
             Stagehand.ui(now::requestFocus);
             hand.press(KeyCode.TAB);
         } while (focused() != first && reached.size() <= stops.size() + 5);
@@ -258,7 +264,8 @@ class KeyboardTest {
     /** Tab may come to one button of a group, the arrows to the others. */
     private static boolean inGroup(Node n, Set<Node> reached) {
         return n instanceof RadioButton b
-                && reached.stream().anyMatch(r -> r instanceof RadioButton o && o.getToggleGroup() == b.getToggleGroup());
+                && reached.stream()
+                        .anyMatch(r -> r instanceof RadioButton o && o.getToggleGroup() == b.getToggleGroup());
     }
 
     private Rectangle2D around(Node n) {
@@ -303,12 +310,17 @@ class KeyboardTest {
         hand.press(KeyCode.ENTER);
         assertEquals(
                 "carbon-black-powder",
-                Stagehand.onUi(() ->
-                        window.desk().shelfRoom().chosenProperty().get().orElseThrow().id()));
+                Stagehand.onUi(() -> window.desk()
+                        .shelfRoom()
+                        .chosenProperty()
+                        .get()
+                        .orElseThrow()
+                        .id()));
         assertEquals("Carbon black powder", Eyes.name(focused()));
         hand.press(KeyCode.TAB);
         hand.press(KeyCode.SPACE);
-        assertTrue(Stagehand.onUi(() -> !window.desk().shelfRoom().comparedProperty().get().isEmpty()));
+        assertTrue(Stagehand.onUi(
+                () -> !window.desk().shelfRoom().comparedProperty().get().isEmpty()));
     }
 
     @Test
@@ -358,8 +370,10 @@ class KeyboardTest {
             boolean seen = Stagehand.onUi(() -> {
                 Bounds b = now.localToScene(now.getBoundsInLocal());
                 return now instanceof ScrollPane
-                        || b.getMinX() < window.stage().getScene().getWidth() - 4 && b.getMaxX() > 4
-                                && b.getMinY() < window.stage().getScene().getHeight() - 4 && b.getMaxY() > 4;
+                        || b.getMinX() < window.stage().getScene().getWidth() - 4
+                                && b.getMaxX() > 4
+                                && b.getMinY() < window.stage().getScene().getHeight() - 4
+                                && b.getMaxY() > 4;
             });
             assertTrue(seen, Eyes.name(now) + " has the focus and lies outside the window");
         } while (focused() != first && ++stops < 150);

@@ -71,7 +71,9 @@ class LotWriterTest {
         Lot lot = new Lot(
                 "ink-demo", "K9", Optional.empty(), Optional.empty(), Optional.of(java.time.LocalDate.of(2026, 2, 1)));
         Factors after = new Factors(
-                List.of(Factor.of(ink, Quantity.ABSORPTION)), new double[] {1.02}, new double[][] {{0.0001}});
+                List.of(Factor.of(ink, Quantity.ABSORPTION), Factor.of(ink, Quantity.SCATTERING)),
+                new double[] {1.02, 1},
+                new double[][] {{0.0001, 0}, {0, 0.0004}});
         Source source = new Source(Source.Basis.MEASURED, "learned in a test");
         String drift = "absorption of \"it\" drifts: 3 % up.";
         LotWriter.write(
