@@ -41,7 +41,12 @@ final class PredictCommand implements Callable<Integer> {
     @Parameters(paramLabel = "RECIPE", description = "NAME.recipe.toml or NAME.batch.toml.")
     private Path recipe;
 
-    @Option(names = "--at", paramLabel = "NM", split = ",", description = "Wavelengths in nm, with commas between.")
+    @Option(
+            names = "--at",
+            paramLabel = "NM,NM,…",
+            hideParamSyntax = true,
+            split = ",",
+            description = "Wavelengths in nm, with commas between.")
     private double[] at;
 
     @Option(names = "--from", paramLabel = "NM", description = "First wavelength in nm of a range.")
