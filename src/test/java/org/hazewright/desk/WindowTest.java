@@ -182,6 +182,29 @@ class WindowTest {
         assertEquals(first.massesG(), shown().recipe().massesG());
     }
 
+    /** A notice that comes while a box is held moves the plot, not the value. */
+    @Test
+    void whatGrowsAroundThePlotLeavesAHeldBoxAlone() {
+        open(Optional.of(bath()));
+        double before = wanted(830);
+        SpectraPlot plot = Stagehand.onUi(() -> window.spectra().plot());
+        hand.grab(window.spectra().surface(), plot.xOf(830), plot.yOf(Point.Quantity.MUA, before));
+        hand.moveBy(0, -10);
+        double raised = wanted(830);
+        assertTrue(raised > before);
+        double top = Stagehand.onUi(
+                () -> window.spectra().surface().localToScreen(0, 0).getY());
+        Stagehand.ui(() -> window.desk().notices().tell(Notice.told("test", "something to be told")));
+        Stagehand.pulse();
+        assertTrue(
+                Stagehand.onUi(() -> window.spectra().surface().localToScreen(0, 0).getY()) > top + 10,
+                "the notice did not move the plot");
+        hand.moveBy(0, 2);
+        hand.moveBy(0, -2);
+        assertEquals(raised, wanted(830), 0.01 * raised);
+        hand.letGo();
+    }
+
     @Test
     void keysMoveATargetToo() {
         open(Optional.of(bath()));

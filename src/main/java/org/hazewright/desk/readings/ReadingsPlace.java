@@ -35,7 +35,7 @@ public final class ReadingsPlace extends VBox {
     private final Label distancesSaid = Say.wrapped("", "small");
     private final Label pulseSaid = Say.wrapped("", "small");
     private final Label slabSaid = Say.wrapped("", "small");
-    private final Label slabInWords = Say.wrapped("", "small");
+    private final Label slabInWords = Say.wrapped(" ", "small");
     private final Label saturation = Say.label("", "reads-as");
     private final Label saturationSaid = Say.wrapped("", "small");
     private final Label wanted = Say.label("", "wanted", "small");
@@ -206,7 +206,7 @@ public final class ReadingsPlace extends VBox {
         if (f.slab().isEmpty()) {
             slab.show((pen, w, h) -> {});
             slabSaid.setText("–");
-            slabInWords.setText("");
+            slabInWords.setText(" ");
             return;
         }
         Foreseen.Slab s = f.slab().get();
