@@ -130,7 +130,7 @@ class ArchitectureTest {
 
     @ArchTest
     static final ArchRule picturesOnlyInPicture =
-            only("org.jfree..", "org.hazewright.picture..", "files of pictures are drawn in one room");
+            only("org.apache.batik..", "org.hazewright.picture..", "files of pictures are drawn in one room");
 
     @ArchTest
     static final ArchRule poiOnlyInSheet =

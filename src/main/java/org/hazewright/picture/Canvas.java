@@ -2,6 +2,7 @@ package org.hazewright.picture;
 
 import java.awt.BasicStroke;
 import java.awt.Color;
+import java.awt.Dimension;
 import java.awt.Font;
 import java.awt.Graphics2D;
 import java.awt.RenderingHints;
@@ -9,12 +10,21 @@ import java.awt.image.BufferedImage;
 import java.io.ByteArrayOutputStream;
 import java.io.IOException;
 import java.io.UncheckedIOException;
-import java.nio.charset.StandardCharsets;
 import java.util.Locale;
 import java.util.function.Consumer;
 import javax.imageio.ImageIO;
+import javax.xml.parsers.DocumentBuilderFactory;
+import javax.xml.parsers.ParserConfigurationException;
+import javax.xml.transform.TransformerException;
+import javax.xml.transform.TransformerFactory;
+import javax.xml.transform.dom.DOMSource;
+import javax.xml.transform.stream.StreamResult;
+import org.apache.batik.svggen.SVGGeneratorContext;
+import org.apache.batik.svggen.SVGGraphics2D;
+import org.apache.batik.util.SVGConstants;
 import org.hazewright.optics.Refusal;
-import org.jfree.svg.SVGGraphics2D;
+import org.w3c.dom.Document;
+import org.w3c.dom.Element;
 
 /** Paper for a picture: the same strokes as PNG (two pixels a point) or as SVG, without a screen. */
 final class Canvas {
@@ -23,12 +33,7 @@ final class Canvas {
     /** The picture as bytes, in the format that the file's name ends with: .png or .svg. */
     static byte[] draw(String fileName, int width, int height, Consumer<Graphics2D> picture) {
         String name = fileName.toLowerCase(Locale.ROOT);
-        if (name.endsWith(".svg")) {
-            SVGGraphics2D g = new SVGGraphics2D(width, height);
-            prepare(g, width, height);
-            picture.accept(g);
-            return g.getSVGDocument().getBytes(StandardCharsets.UTF_8);
-        }
+        if (name.endsWith(".svg")) return svg(width, height, picture);
         if (!name.endsWith(".png"))
             throw new Refusal("A picture is written as .png or .svg; \"" + fileName + "\" ends with neither.");
         BufferedImage image = new BufferedImage(2 * width, 2 * height, BufferedImage.TYPE_INT_RGB);
@@ -47,6 +52,38 @@ final class Canvas {
             throw new UncheckedIOException(e);
         }
         return out.toByteArray();
+    }
+
+    private static byte[] svg(int width, int height, Consumer<Graphics2D> picture) {
+        SVGGeneratorContext how = SVGGeneratorContext.createDefault(emptyDocument());
+        how.setComment("Drawn by Hazewright");
+        SVGGraphics2D g = new SVGGraphics2D(how, false); // text stays text
+        g.setSVGCanvasSize(new Dimension(width, height));
+        prepare(g, width, height);
+        picture.accept(g);
+        Element root = g.getRoot();
+        root.setAttributeNS(null, "viewBox", "0 0 " + width + " " + height); // so that it can be made larger
+        ByteArrayOutputStream out = new ByteArrayOutputStream();
+        try {
+            // Not by the library's own writer, which names a document type that a viewer may look for on the network.
+            TransformerFactory.newDefaultInstance()
+                    .newTransformer()
+                    .transform(new DOMSource(root), new StreamResult(out));
+        } catch (TransformerException e) {
+            throw new IllegalStateException(e); // memory takes all
+        }
+        return out.toByteArray();
+    }
+
+    private static Document emptyDocument() {
+        try {
+            return DocumentBuilderFactory.newDefaultNSInstance()
+                    .newDocumentBuilder()
+                    .getDOMImplementation()
+                    .createDocument(SVGConstants.SVG_NAMESPACE_URI, SVGConstants.SVG_SVG_TAG, null);
+        } catch (ParserConfigurationException e) {
+            throw new IllegalStateException(e); // every Java has it
+        }
     }
 
     private static void prepare(Graphics2D g, int width, int height) {

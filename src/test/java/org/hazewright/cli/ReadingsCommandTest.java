@@ -343,7 +343,10 @@ class ReadingsCommandTest {
         Path svg = folder.resolve("p.svg");
         Ran ran = run("readings", "--medium", TISSUE, "--setup", "two-distance-probe", "--picture", svg.toString());
         assertEquals(0, ran.status, ran.err);
-        assertTrue(Files.readString(svg).contains("<svg"));
+        String drawn = Files.readString(svg);
+        assertTrue(drawn.contains("<svg") && drawn.contains("viewBox=\"0 0 "), "it can be made larger");
+        assertTrue(drawn.contains("<text"), "text stays text");
+        assertFalse(drawn.contains("<!DOCTYPE"), "a viewer looks for nothing on the network");
         assertTrue(ran.out.contains("Written: " + svg));
         refused(
                 "ends with neither",

@@ -157,6 +157,13 @@ enum Door {
         void open(Path things, byte[] bytes) {
             Path file = laid(things, "fuzzed.xlsx", Parts.replaced(things.resolve("seed.xlsx"), bytes));
             read(bytes, () -> FilledIn.read(file));
+        }
+    },
+    /** Somebody's workbook with a table on its first page, one part replaced. */
+    PAGE {
+        @Override
+        void open(Path things, byte[] bytes) {
+            Path file = laid(things, "fuzzed.xlsx", Parts.replaced(things.resolve("page.xlsx"), bytes));
             read(bytes, () -> FirstPage.cells(file));
         }
     },

@@ -36,16 +36,23 @@ public final class Killing {
     }
 
     public static void main(String[] args) throws Exception {
-        int kept = run(
+        Outcome kept = run(
                 Path.of(args[0]).toAbsolutePath(),
                 Integer.parseInt(args[1]),
                 Long.parseLong(args[2]),
                 args.length > 3 ? Integer.parseInt(args[3]) : 1);
-        System.out.println(kept + " acknowledged batches, none lost, after " + args[1] + " kills.");
+        System.out.println(kept.acknowledged() + " acknowledged batches, none lost, after " + args[1] + " kills; "
+                + kept.inDoubt() + " more recorded whole when the program was killed before it could say so.");
     }
 
-    /** How many batches were acknowledged; throws when one of them is lost or a file is broken. */
-    static int run(Path folder, int times, long seed, int writers) throws Exception {
+    /**
+     * @param acknowledged batches that the programs said were kept
+     * @param inDoubt batches in the logbook that nobody was told of
+     */
+    record Outcome(int acknowledged, int inDoubt) {}
+
+    /** What was kept; throws when an acknowledged batch is lost or a file is broken. */
+    static Outcome run(Path folder, int times, long seed, int writers) throws Exception {
         Files.createDirectories(folder);
         if (!Files.exists(folder.resolve("model.toml"))) {
             Path things = folder.resolve("things");
@@ -58,7 +65,9 @@ public final class Killing {
             killing.nothingLost();
         }
         killing.tidyAfterwards();
-        return killing.acknowledged.size();
+        Set<String> untold = new HashSet<>(killing.recorded());
+        untold.removeAll(killing.acknowledged);
+        return new Outcome(killing.acknowledged.size(), untold.size());
     }
 
     private void killOnce(int writers) throws IOException, InterruptedException {

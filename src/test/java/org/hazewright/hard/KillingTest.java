@@ -19,7 +19,7 @@ class KillingTest {
 
     @Test
     void whatWasAcknowledgedIsThere() throws Exception {
-        assertTrue(Killing.run(folder, 2, 1, 1) > 2);
+        assertTrue(Killing.run(folder, 2, 1, 1).acknowledged() > 2);
     }
 
     @Test
@@ -36,6 +36,6 @@ class KillingTest {
 
     @Test
     void twoProgramsShareALogbook() throws Exception {
-        assertTrue(Killing.run(folder, 2, 2, 2) > 2);
+        assertTrue(Killing.run(folder, 2, 2, 2).acknowledged() > 2);
     }
 }

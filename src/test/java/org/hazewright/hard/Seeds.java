@@ -13,6 +13,7 @@ import java.util.stream.Stream;
 import org.hazewright.cli.OneLine;
 import org.hazewright.files.BatchReader;
 import org.hazewright.files.ShelfReader;
+import org.hazewright.sheet.FilledIn;
 import org.hazewright.sheet.Logbook;
 import org.hazewright.shelf.Shelf;
 
@@ -58,13 +59,23 @@ final class Seeds {
                 + "[[measured.value]]\nwavelength_nm = 690\nmua_per_cm = 0.1\nu_mua_per_cm = 0.002\n";
         seed(things, Door.BATCH, "bath", batch);
         Files.writeString(things.resolve("bath.batch.toml"), batch);
-        Files.copy(things.resolve("bath.xlsx"), fresh(things.resolve("seed.xlsx")));
+        Files.write(
+                fresh(things.resolve("seed.xlsx")),
+                Parts.pages(things.resolve("bath.xlsx"), List.of("sheet_format", "weighed_g")));
+        FilledIn.read(things.resolve("seed.xlsx")); // good input: refused by nobody
+        Files.write(
+                fresh(things.resolve("page.xlsx")),
+                Parts.page(List.of(
+                        List.of("wavelength (nm)", "µa /cm", "u(µa)"),
+                        List.of(690, 0.1, 0.002),
+                        List.of(830, "1,05e-1", 0.002))));
         Path logbook = fresh(things.resolve("logbook.xlsx"));
         Logbook.record(
                 logbook,
                 BatchReader.read(things.resolve("bath.batch.toml"), shelf()),
                 things.resolve("bath.batch.toml"));
         parts(things, Door.SHEET, things.resolve("seed.xlsx"));
+        parts(things, Door.PAGE, things.resolve("page.xlsx"));
         parts(things, Door.LOGBOOK, logbook);
         seed(things, Door.TABLE, "sizes", "diameter_nm,weight\n100,1\n200,3.5\n400,1e-1\n");
         seed(things, Door.TABLE, "spheres", "size_parameter,index,absorption_index\n1,1.5,0\n10,1.33,0.01\n");
