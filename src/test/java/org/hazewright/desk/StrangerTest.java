@@ -14,7 +14,7 @@ import javafx.scene.Node;
 import javafx.scene.control.Labeled;
 import javafx.scene.image.WritableImage;
 import javafx.scene.input.KeyCode;
-import org.hazewright.bench.Batch;
+import org.hazewright.batch.Batch;
 import org.hazewright.brief.Point;
 import org.hazewright.desk.model.AtBalance;
 import org.hazewright.desk.spectra.SpectraPlot;
@@ -90,11 +90,18 @@ class StrangerTest {
         hand.click(eyes.button("look for the least addition"));
         Stagehand.until(
                 "a correction",
-                () -> window.desk().madeProperty().get().get().correctionProperty().get().isPresent());
+                () -> window.desk()
+                        .madeProperty()
+                        .get()
+                        .get()
+                        .correctionProperty()
+                        .get()
+                        .isPresent());
         picture("correction");
         hand.click(eyes.button("Weigh it in"));
         Stagehand.until(
-                "the balance again", () -> window.desk().weighingProperty().get().isPresent());
+                "the balance again",
+                () -> window.desk().weighingProperty().get().isPresent());
         Stagehand.pulse();
         picture("correcting");
         weighTheRest();
@@ -104,8 +111,8 @@ class StrangerTest {
                 "what it says",
                 () -> window.desk().madeProperty().get().get().seenProperty().get() != null);
         picture("corrected");
-        Batch made = Stagehand.onUi(
-                () -> window.desk().madeProperty().get().orElseThrow().batchProperty().get());
+        Batch made = Stagehand.onUi(() ->
+                window.desk().madeProperty().get().orElseThrow().batchProperty().get());
         assertEquals(1, made.correctionCount());
         assertTrue(made.weighedG().stream().allMatch(g -> g.isPresent()), "something was not weighed");
     }
@@ -125,8 +132,8 @@ class StrangerTest {
     }
 
     private double wanted() {
-        return Stagehand.onUi(
-                () -> window.desk().edits().now().row(690).orElseThrow().muaPerCm().orElseThrow());
+        return Stagehand.onUi(() ->
+                window.desk().edits().now().row(690).orElseThrow().muaPerCm().orElseThrow());
     }
 
     /** Types what the screen asks for, as a balance would; of the emulsion four per cent too much. */
@@ -180,7 +187,8 @@ class StrangerTest {
     private void measure() {
         List<Point> points = Stagehand.onUi(
                 () -> window.desk().madeProperty().get().orElseThrow().points());
-        Node first = eyes.all(n -> n.getAccessibleText() != null && n.getAccessibleText().startsWith("measured µa"))
+        Node first = eyes.all(n ->
+                        n.getAccessibleText() != null && n.getAccessibleText().startsWith("measured µa"))
                 .get(0);
         hand.click(first);
         for (Point p : points) {
@@ -190,14 +198,16 @@ class StrangerTest {
             hand.press(KeyCode.TAB);
         }
         hand.click(eyes.button("Take these values"));
-        Stagehand.until("a verdict", () -> window.desk()
-                .madeProperty()
-                .get()
-                .orElseThrow()
-                .seenProperty()
-                .get()
-                .verdict()
-                .isPresent());
+        Stagehand.until(
+                "a verdict",
+                () -> window.desk()
+                        .madeProperty()
+                        .get()
+                        .orElseThrow()
+                        .seenProperty()
+                        .get()
+                        .verdict()
+                        .isPresent());
         Stagehand.pulse();
     }
 
@@ -210,8 +220,10 @@ class StrangerTest {
     }
 
     private String text(String styleClass) {
-        return Stagehand.onUi(() ->
-                ((Labeled) eyes.all(n -> n.getStyleClass().contains(styleClass)).get(0)).getText().replace('\u00A0', ' '));
+        return Stagehand.onUi(() -> ((Labeled)
+                        eyes.all(n -> n.getStyleClass().contains(styleClass)).get(0))
+                .getText()
+                .replace('\u00A0', ' '));
     }
 
     private void picture(String name) throws Exception {
