@@ -72,10 +72,11 @@ final class DesignText {
         out.println();
         out.printf(
                 Locale.ROOT,
-                "Search: %,d sets of ingredients considered, %,d solved, %,d cut by a bound; the best is %s.%n",
+                "Search: %,d sets of ingredients considered, %,d solved, %,d %s; the best is %s.%n",
                 answer.search().admissible(),
                 answer.search().solved(),
                 answer.search().cut(),
+                answer.search().proven() ? "cut by a bound" : "cut by a bound or not reached",
                 answer.search().proven() ? "proven" : "not proven, the search was stopped");
     }
 

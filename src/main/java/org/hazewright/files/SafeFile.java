@@ -32,6 +32,9 @@ import java.util.concurrent.ThreadLocalRandom;
  * <p>A folder that is missing is made. A link is followed and kept. A target that is a folder, a device or write-protected is
  * left alone, as is everything else when a {@link WriteFailure} is thrown. What a killed program left of the same target is swept
  * ten minutes later, with the next write; a temporary file that somebody else takes away is written anew.
+ *
+ * <p>Where a drive cannot move a file over another in one step, the old one goes first; should the new one then not come, it is kept
+ * beside the place under its temporary name, and the failure says so.
  */
 public final class SafeFile {
     private static final Duration LEFT_BEHIND = Duration.ofMinutes(10);
@@ -77,11 +80,21 @@ public final class SafeFile {
             sweepLeftovers(folder, end.getFileName().toString());
             temporary = folder.resolve("." + end.getFileName() + "."
                     + Long.toString(ThreadLocalRandom.current().nextLong(1L << 40), 36) + ".part");
+            boolean there = Files.exists(end);
             try {
                 writeSynced(temporary, bytes);
                 copyPermissions(end, temporary);
                 if (policy == Overwrite.KEEP_PREVIOUS && Files.exists(end)) keepPrevious(end);
-                move(temporary, end, policy);
+                try {
+                    move(temporary, end, policy);
+                } catch (IOException half) {
+                    if (policy == Overwrite.NEVER || !there || Files.exists(end)) throw half;
+                    // Only where a move is not one step: the old file went first, and the new one did not come.
+                    Path kept = temporary;
+                    temporary = null;
+                    throw new WriteFailure(
+                            plain(target, half) + " What was to be written is kept whole in " + kept + ".", half);
+                }
             } catch (NoSuchFileException gone) {
                 if (last || !Files.isDirectory(folder)) throw gone;
                 return false;
