@@ -26,6 +26,12 @@ public final class Installer {
     private static final Path OUT = Path.of("target/installer");
     private static final Path JAR = Path.of("target/hazewright.jar");
 
+    /**
+     * The most memory that a command takes. Not written as -Xmx, which tells the window to open in the machine as it is: the installed
+     * window too shall start the machine that desk/OwnMachine sets up for it.
+     */
+    private static final String MOST_MEMORY = "-XX:MaxHeapSize=2g";
+
     public static void main(String[] args) throws Exception {
         String version = args[0];
         clear(OUT);
@@ -38,7 +44,7 @@ public final class Installer {
         List<String> image = new ArrayList<>(List.of(
                 tool("jpackage"), "--type", "app-image", "--name", "hazewright", "--app-version", version,
                 "--input", input.toString(), "--main-jar", "hazewright.jar", "--dest", OUT.toString(),
-                "--description", "Recipes for tissue phantoms", "--java-options", "-Xmx2g",
+                "--description", "Recipes for tissue phantoms", "--java-options", MOST_MEMORY,
                 "--add-modules", modules(), "--jlink-options", "--strip-debug --no-header-files --no-man-pages --compress=2"));
         boolean png = System.getProperty("os.name").startsWith("Linux");
         if (png) image.addAll(List.of("--icon", icon.toString()));

@@ -31,6 +31,8 @@ class ArchitectureTest {
             .definedBy("org.hazewright.design..")
             .layer("bench")
             .definedBy("org.hazewright.bench..")
+            .layer("batch")
+            .definedBy("org.hazewright.batch..")
             .layer("learning")
             .definedBy("org.hazewright.learning..")
             .layer("transport")
@@ -60,7 +62,9 @@ class ArchitectureTest {
             .whereLayer("design")
             .mayOnlyAccessLayers("optics", "shelf", "mixture", "brief", "search")
             .whereLayer("bench")
-            .mayOnlyAccessLayers("optics", "shelf", "mixture", "brief", "search", "design", "learning")
+            .mayOnlyAccessLayers("optics", "shelf", "mixture", "brief", "search", "design")
+            .whereLayer("batch")
+            .mayOnlyAccessLayers("optics", "shelf", "mixture", "brief", "search", "design", "bench", "learning")
             .whereLayer("learning")
             .mayOnlyAccessLayers("optics", "shelf", "mixture")
             .whereLayer("transport")
@@ -76,6 +80,7 @@ class ArchitectureTest {
                     "search",
                     "design",
                     "bench",
+                    "batch",
                     "learning",
                     "transport",
                     "reading")
@@ -88,6 +93,7 @@ class ArchitectureTest {
                     "search",
                     "design",
                     "bench",
+                    "batch",
                     "learning",
                     "transport",
                     "reading")
@@ -100,6 +106,7 @@ class ArchitectureTest {
                     "search",
                     "design",
                     "bench",
+                    "batch",
                     "learning",
                     "transport",
                     "reading",

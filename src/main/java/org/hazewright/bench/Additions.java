@@ -16,14 +16,14 @@ import org.hazewright.search.ConvexProgramme;
  * @param kappaCm2PerG of each pourable at each point
  * @param mlPerG volume of a gram of each pourable
  */
-record Additions(
+public record Additions(
         List<Point> points, double[] vesselPerCmMl, double vesselMl, double[][] kappaCm2PerG, double[] mlPerG) {
 
     /** Ties between pourables that do the same are broken towards equal volumes. */
     private static final double TIE = 1e-9;
 
     /** Grams of each pourable that together take {@code addedMl}; empty when the programme cannot be settled. */
-    Optional<double[]> best(double addedMl) {
+    public Optional<double[]> best(double addedMl) {
         int n = mlPerG.length;
         double volume = vesselMl + addedMl;
         double[][] quadratic = new double[n][n];

@@ -155,7 +155,7 @@ final class StepList {
 
     /** A name inside a sentence: one that has a comma gets a comma behind it, and a lot its number. */
     static String named(Ingredient i) {
-        String name = i.name() + i.lot().map(l -> ", lot " + l.number()).orElse("");
+        String name = i.lot().map(l -> l.named(i.name())).orElse(i.name());
         return name.contains(",") ? name + "," : name;
     }
 

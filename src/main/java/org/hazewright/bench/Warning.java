@@ -16,6 +16,8 @@ public record Warning(Kind kind, List<String> ingredients, String text) {
         /** Two ingredients that should not meet. */
         CONFLICT,
         EXPIRED,
+        /** The figures of a lot were seen to move. */
+        DRIFTING,
         SETTLING,
         /** No temperature suits the base and an ingredient. */
         TEMPERATURE,

@@ -19,7 +19,7 @@ import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Lot;
 
 /**
- * What a person should know before starting: ingredients that should not meet, lots past their date, what settles, and what can
+ * What a person should know before starting: ingredients that should not meet, lots past their date or drifting, what settles, and what can
  * hurt, the gravest first.
  *
  * <p>A conflict is looked up from both sides. What it names is an ingredient's id, the ingredient that a lot is of, or a plain word
@@ -43,7 +43,7 @@ public final class Warnings {
     public static List<Warning> of(Recipe recipe, LocalDate day) {
         Warnings w = new Warnings(recipe);
         w.conflicts();
-        w.expired(day);
+        w.lots(day);
         w.temperature();
         w.settling();
         w.hazards();
@@ -94,16 +94,14 @@ public final class Warnings {
                 .contains(word.toLowerCase(Locale.ROOT));
     }
 
-    private void expired(LocalDate day) {
+    private void lots(LocalDate day) {
         for (Ingredient i : present) {
-            if (i.lot().filter(l -> l.expiredOn(day)).isEmpty()) continue;
+            if (i.lot().isEmpty()) continue;
             Lot lot = i.lot().get();
-            warnings.add(new Warning(
-                    Warning.Kind.EXPIRED,
-                    List.of(i.id()),
-                    i.name() + ", lot " + lot.number() + ", expired on "
-                            + lot.expires().orElseThrow()
-                            + ". Use a fresh one, or measure it again before relying on its figures."));
+            LotDoubt.expired(i, lot, day)
+                    .ifPresent(s -> warnings.add(new Warning(Warning.Kind.EXPIRED, List.of(i.id()), s)));
+            LotDoubt.drifting(i, lot)
+                    .ifPresent(s -> warnings.add(new Warning(Warning.Kind.DRIFTING, List.of(i.id()), s)));
         }
     }
 

@@ -15,13 +15,15 @@ import picocli.CommandLine.Spec;
 /** One making of a recipe, recorded in its own file and in the logbook. */
 @Command(
         name = "batch",
-        description = "One making of a recipe: opened, weighed, measured, shown; recorded in the logbook workbook.",
+        description =
+                "One making of a recipe: opened, weighed, measured, shown; recorded in the logbook workbook and exported from it.",
         synopsisSubcommandLabel = "COMMAND",
         subcommands = {
             BatchOpenCommand.class,
             BatchWeighCommand.class,
             BatchMeasureCommand.class,
             BatchShowCommand.class,
+            BatchExportCommand.class,
         })
 final class BatchCommand implements Runnable {
     @Spec
@@ -33,7 +35,8 @@ final class BatchCommand implements Runnable {
 
     @Override
     public void run() {
-        throw new ParameterException(spec.commandLine(), "Say what to do with it: open, weigh, measure or show.");
+        throw new ParameterException(
+                spec.commandLine(), "Say what to do with it: open, weigh, measure, show or export.");
     }
 
     static LocalDate day(String text, String option) {

@@ -6,8 +6,9 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.OptionalDouble;
 import java.util.concurrent.Callable;
-import org.hazewright.bench.Batch;
-import org.hazewright.bench.Measurement;
+import org.hazewright.batch.Batch;
+import org.hazewright.batch.Measurement;
+import org.hazewright.batch.Unweighed;
 import org.hazewright.files.BatchReader;
 import org.hazewright.files.CoefficientTable;
 import org.hazewright.learning.MeasuredValue;
@@ -109,10 +110,14 @@ final class BatchMeasureCommand implements Callable<Integer> {
                 measured);
         Batch now = batch.withMeasured(m);
         BatchText text = new BatchText(now, shared.units, out);
-        text.verdict(m);
+        text.verdict(now.measured().get(now.measured().size() - 1));
         int status = recording.save(file, now, shared, out, err);
         if (shared.json) BatchJson.of(now).print(out);
-        else text.print();
+        else {
+            text.print();
+            text.lots(shelf);
+        }
+        for (String gap : Unweighed.of(now)) err.println("hazewright: " + gap);
         return status;
     }
 

@@ -9,7 +9,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.concurrent.Callable;
 import java.util.stream.Stream;
-import org.hazewright.bench.Batch;
+import org.hazewright.batch.Batch;
 import org.hazewright.brief.Brief;
 import org.hazewright.files.BriefReader;
 import org.hazewright.files.FileNames;

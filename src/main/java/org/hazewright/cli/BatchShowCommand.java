@@ -3,10 +3,11 @@ package org.hazewright.cli;
 import java.io.PrintWriter;
 import java.nio.file.Path;
 import java.util.concurrent.Callable;
-import org.hazewright.bench.Batch;
+import org.hazewright.batch.Batch;
+import org.hazewright.batch.LotWatch;
 import org.hazewright.files.BatchReader;
 import org.hazewright.files.BatchTable;
-import org.hazewright.files.SafeFile;
+import org.hazewright.shelf.Shelf;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
@@ -37,11 +38,17 @@ final class BatchShowCommand implements Callable<Integer> {
     @Override
     public Integer call() {
         PrintWriter out = spec.commandLine().getOut();
-        Batch batch = BatchReader.read(file, shared.shelf());
-        if (csv != null) SafeFile.write(csv, BatchTable.text(batch), SafeFile.Overwrite.KEEP_PREVIOUS);
-        if (shared.json) BatchJson.of(batch).print(out);
-        else new BatchText(batch, shared.units, out).print();
-        if (csv != null && !shared.json && !shared.quiet) out.println("Written: " + csv);
+        Shelf shelf = shared.shelf();
+        Batch batch = BatchReader.read(file, shelf);
+        String kept = csv == null ? "" : ExportedFile.write(csv, BatchTable.text(batch));
+        if (shared.json)
+            BatchJson.of(batch).with("minds", LotWatch.of(batch, shelf)).print(out);
+        else {
+            BatchText text = new BatchText(batch, shared.units, out);
+            text.print();
+            text.lots(shelf);
+        }
+        if (csv != null && !shared.json && !shared.quiet) out.println("Written: " + csv + kept);
         return Hazewright.DONE;
     }
 }

@@ -3,11 +3,12 @@ package org.hazewright.cli;
 import java.io.PrintWriter;
 import java.util.List;
 import java.util.Optional;
+import org.hazewright.batch.Batch;
+import org.hazewright.batch.Learned;
+import org.hazewright.batch.LotWatch;
+import org.hazewright.batch.Measurement;
 import org.hazewright.bench.Answer;
-import org.hazewright.bench.Batch;
 import org.hazewright.bench.Grams;
-import org.hazewright.bench.Learned;
-import org.hazewright.bench.Measurement;
 import org.hazewright.bench.Outlook;
 import org.hazewright.bench.Weighing;
 import org.hazewright.brief.Balance;
@@ -21,6 +22,7 @@ import org.hazewright.mixture.Mixture;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.mixture.Sweep;
 import org.hazewright.optics.Figures;
+import org.hazewright.shelf.Shelf;
 
 /** A batch as a page of text: what was weighed, where it lands, what was measured and what that says. */
 final class BatchText {
@@ -48,6 +50,11 @@ final class BatchText {
         landing(made);
         for (Measurement m : batch.measured()) measured(m);
         for (String note : batch.notes()) out.println("Note: " + note);
+    }
+
+    /** Lots that went in and should not be relied on. */
+    void lots(Shelf shelf) {
+        for (String s : LotWatch.of(batch, shelf)) out.println("Mind: " + s);
     }
 
     private static String missing(double g) {

@@ -4,10 +4,10 @@ import java.io.PrintWriter;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.concurrent.Callable;
-import org.hazewright.bench.Batch;
+import org.hazewright.batch.Batch;
+import org.hazewright.batch.Heating;
+import org.hazewright.batch.Replan;
 import org.hazewright.bench.Grams;
-import org.hazewright.bench.Heating;
-import org.hazewright.bench.Replan;
 import org.hazewright.bench.Weighing;
 import org.hazewright.files.BatchReader;
 import org.hazewright.optics.Refusal;
@@ -118,6 +118,7 @@ final class BatchWeighCommand implements Callable<Integer> {
         BatchText text = new BatchText(planned, shared.units, out);
         text.weighings();
         text.landing(planned.asMade());
+        text.lots(shelf);
         return status;
     }
 

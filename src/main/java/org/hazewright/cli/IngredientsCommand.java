@@ -7,6 +7,7 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.Set;
 import java.util.TreeSet;
 import java.util.concurrent.Callable;
@@ -22,6 +23,7 @@ import org.hazewright.shelf.Conflict;
 import org.hazewright.shelf.Family;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Inspection;
+import org.hazewright.shelf.Material;
 import org.hazewright.shelf.Part;
 import org.hazewright.shelf.Scattering;
 import org.hazewright.shelf.Shelf;
@@ -60,8 +62,8 @@ final class IngredientsCommand implements Callable<Integer> {
                 ", ", i.families().stream().map(Family::word).sorted().toList());
     }
 
-    /** One line an ingredient. */
-    @Command(name = "list", description = "Lists the shelf, one line an ingredient.")
+    /** One line an ingredient or material. */
+    @Command(name = "list", description = "Lists the shelf, one line an ingredient or material.")
     static final class ListCommand implements Callable<Integer> {
         @Mixin
         private Shared shared;
@@ -85,17 +87,21 @@ final class IngredientsCommand implements Callable<Integer> {
             Set<String> madeInto = madeIntoBases(shelf);
             for (Part part : Part.values())
                 group(
-                        part.word() + (part == Part.BASE ? "s, and what family they are" : "s, and what they mix into"),
+                        part.word() + "s",
+                        part == Part.BASE ? "family" : "mixes into",
                         shelf,
                         i -> i.part() == part && !madeInto.contains(i.id()),
                         out);
-            group(
-                    "parts of bases and powders to make them, and what they mix into",
-                    shelf,
-                    i -> madeInto.contains(i.id()),
-                    out);
-            out.println(shelf.ingredients().size() + " ingredients on the shelf " + shelf.place()
-                    + ". One of them: hazewright ingredients show ID");
+            group("parts of bases, and powders to make them", "mixes into", shelf, i -> madeInto.contains(i.id()), out);
+            out.println("materials of particles and hosts");
+            TextTable materials = new TextTable("  ", "lll").row("id", "name", "basis");
+            for (Material m : shelf.materials())
+                materials.row(m.id(), m.name(), m.source().basis().word());
+            materials.print(out);
+            out.println();
+            out.println(shelf.ingredients().size() + " ingredients and "
+                    + shelf.materials().size() + " materials on the shelf " + shelf.place()
+                    + ". One of them: hazewright ingredients show ID. Basis: what stands behind the weakest figure.");
             return Hazewright.DONE;
         }
 
@@ -108,11 +114,12 @@ final class IngredientsCommand implements Callable<Integer> {
             return found;
         }
 
-        private static void group(String heading, Shelf shelf, Predicate<Ingredient> which, PrintWriter out) {
+        private static void group(
+                String heading, String family, Shelf shelf, Predicate<Ingredient> which, PrintWriter out) {
             List<Ingredient> of = shelf.ingredients().stream().filter(which).toList();
             if (of.isEmpty()) return;
             out.println(heading);
-            TextTable table = new TextTable("  ", "llll");
+            TextTable table = new TextTable("  ", "llll").row("id", "name", family, "basis");
             for (Ingredient i : of)
                 table.row(i.id(), i.name(), families(i), i.source().basis().word());
             table.print(out);
@@ -132,7 +139,10 @@ final class IngredientsCommand implements Callable<Integer> {
     }
 
     /** One ingredient with its figures and sources. */
-    @Command(name = "show", description = "Shows one ingredient: figures, sources, handling and cautions.")
+    @Command(
+            name = "show",
+            description =
+                    "Shows one ingredient: figures, sources, handling and cautions; or a material's refractive index.")
     static final class ShowCommand implements Callable<Integer> {
         @Mixin
         private Shared shared;
@@ -140,14 +150,20 @@ final class IngredientsCommand implements Callable<Integer> {
         @Spec
         private CommandSpec spec;
 
-        @Parameters(paramLabel = "ID", description = "Id of the ingredient, as in the list.")
+        @Parameters(paramLabel = "ID", description = "Id of the ingredient or material, as in the list.")
         private String id;
 
         @Override
         public Integer call() {
             Shelf shelf = shared.shelf();
-            Ingredient i = shelf.require(id);
             PrintWriter out = spec.commandLine().getOut();
+            Optional<Material> material =
+                    shelf.materials().stream().filter(m -> m.id().equals(id)).findFirst();
+            if (shelf.find(id).isEmpty() && material.isPresent()) {
+                MaterialText.print(material.get(), shared.json, out);
+                return Hazewright.DONE;
+            }
+            Ingredient i = shelf.require(id);
             if (shared.json) json(i).print(out);
             else text(i, shelf, out);
             return Hazewright.DONE;
@@ -204,8 +220,10 @@ final class IngredientsCommand implements Callable<Integer> {
 
         private static void text(Ingredient i, Shelf shelf, PrintWriter out) {
             out.println(i.name());
-            out.println(i.id() + ", " + i.part().word() + (i.part() == Part.BASE ? " of the family " : " for ")
-                    + families(i) + ", " + i.form().word());
+            out.println(i.id() + ": "
+                    + (i.part() == Part.BASE
+                            ? "base of the family " + families(i)
+                            : i.part().word() + ", " + i.form().word() + ", mixes into " + families(i)));
             i.lot()
                     .ifPresent(l -> out.println("lot " + l.number() + " of " + l.of()
                             + l.expires().map(d -> ", good until " + d).orElse("")));
@@ -217,9 +235,7 @@ final class IngredientsCommand implements Callable<Integer> {
                             + (i.isBlend() ? ", from its parts" : ""));
             for (BlendPart p : i.blend())
                 facts.row("blend", Figures.plain(100 * p.massFraction()) + " % " + p.ingredient() + " by mass");
-            i.index()
-                    .ifPresent(
-                            m -> facts.row("index", m.name() + " (" + m.source().citation() + ")"));
+            i.index().ifPresent(m -> facts.row("index", "that of " + m.id() + MaterialText.near589(m)));
             i.maxGPerMl().ifPresent(v -> facts.row("at most", Figures.plain(v) + " g per mL of phantom"));
             i.pricePerG().ifPresent(v -> facts.row("price", Figures.plain(v) + " per g"));
             i.absorption()
@@ -235,7 +251,16 @@ final class IngredientsCommand implements Callable<Integer> {
             facts.row("basis", i.source().basis().word());
             facts.print(out);
             if (!i.isBlend()) coefficients(i, out);
-            list("Source", List.of(i.source().citation()), out);
+            List<String> sources = new ArrayList<>(List.of(i.source().citation()));
+            i.index()
+                    .ifPresent(m ->
+                            sources.add("Index of " + m.id() + ": " + m.source().citation()));
+            i.scattering().ifPresent(s -> {
+                if (s instanceof Scattering.MieParticles mie)
+                    sources.add("Index of " + mie.particle().id() + ": "
+                            + mie.particle().source().citation());
+            });
+            list("Sources", sources, out);
             list("Handling", i.handling(), out);
             List<String> conflicts = new ArrayList<>();
             for (Conflict c : i.conflicts())
@@ -270,11 +295,19 @@ final class IngredientsCommand implements Callable<Integer> {
             double[] nm = grid(i);
             if (nm.length == 0 || (i.absorption().isEmpty() && i.scattering().isEmpty())) return;
             out.println();
-            out.println("  Per g in a mL of phantom, cm²/g (particles alone in n = 1.33, 22 °C)");
-            TextTable table = new TextTable("  ", "rrrrr");
-            table.row("nm", "µa", "µs'", "µs", "g");
+            boolean scatters = i.scattering().isPresent()
+                    || i.absorption().map(a -> a.albedo() > 0).orElse(false);
+            out.println("  Per g in a mL of phantom, cm²/g"
+                    + (i.scattering().isPresent() ? " (particles alone in n = 1.33, 22 °C)" : ""));
+            TextTable table = new TextTable("  ", scatters ? "rrrrr" : "rr");
+            if (scatters) table.row("nm", "µa", "µs'", "µs", "g");
+            else table.row("nm", "µa");
             for (double x : nm) {
                 MassSpecific k = MassSpecific.of(i, x, 22, 1.33, 0);
+                if (!scatters) {
+                    table.row(Figures.plain(x), Figures.significant(k.kappaA(), 4));
+                    continue;
+                }
                 table.row(
                         Figures.plain(x),
                         Figures.significant(k.kappaA(), 4),

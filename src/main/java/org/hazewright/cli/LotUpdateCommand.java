@@ -9,8 +9,8 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.concurrent.Callable;
-import org.hazewright.bench.Batch;
-import org.hazewright.bench.Measurement;
+import org.hazewright.batch.Batch;
+import org.hazewright.batch.Measurement;
 import org.hazewright.files.BatchReader;
 import org.hazewright.files.LotWriter;
 import org.hazewright.learning.Drift;
@@ -24,6 +24,7 @@ import org.hazewright.learning.Quantity;
 import org.hazewright.optics.Figures;
 import org.hazewright.optics.Refusal;
 import org.hazewright.shelf.Ingredient;
+import org.hazewright.shelf.Lot;
 import org.hazewright.shelf.Shelf;
 import org.hazewright.shelf.Source;
 import picocli.CommandLine.Command;
@@ -127,7 +128,8 @@ final class LotUpdateCommand implements Callable<Integer> {
         List<Path> written = new ArrayList<>();
         List<String> flags = new ArrayList<>();
         for (Ingredient i : bottles) {
-            LotFlag.of(i, last, drifts).forEach(f -> flags.add(f.sentence()));
+            List<LotFlag> found = LotFlag.of(i, last, drifts);
+            found.forEach(f -> flags.add(f.sentence()));
             String old = i.lot().map(l -> l.number() + "-").orElse("");
             String fresh = number != null ? number : old + last;
             Source source = new Source(
@@ -141,8 +143,10 @@ final class LotUpdateCommand implements Callable<Integer> {
                                             .toList())
                             + " up to " + last
                             + ", beginning at the figures of " + i.id() + ".");
-            NewLot lot = new NewLot(LotWriter.id(i.kind(), fresh), LotCommand.lot(i, fresh), source);
-            written.addAll(LotWriter.write(folder, lot.learned(i, update.after()), flags(flags, i)));
+            Lot which = LotCommand.lot(i, fresh);
+            for (LotFlag f : found) if (f.kind() == LotFlag.Kind.DRIFTING) which = which.drifting(f.sentence());
+            NewLot lot = new NewLot(LotWriter.id(i.kind(), fresh), which, source);
+            written.addAll(LotWriter.write(folder, lot.learned(i, update.after()), notes(found)));
         }
         String tied = tied(update.after(), bottles);
         if (shared.json)
@@ -161,8 +165,8 @@ final class LotUpdateCommand implements Callable<Integer> {
         return Hazewright.DONE;
     }
 
-    private static List<String> flags(List<String> flags, Ingredient i) {
-        return flags.stream().filter(f -> f.startsWith(i.id())).toList();
+    private static List<String> notes(List<LotFlag> flags) {
+        return flags.stream().map(LotFlag::sentence).toList();
     }
 
     private static String factor(LotUpdate update, Ingredient i, Quantity q) {

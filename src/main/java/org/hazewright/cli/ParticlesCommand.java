@@ -35,13 +35,19 @@ import picocli.CommandLine.Spec;
             "Example: hazewright particles --size-parameter 10 --index 1.5"
         })
 final class ParticlesCommand implements Callable<Integer> {
+    /** Relative error of an average over sizes that goes without saying. */
+    private static final double WANTED = 1e-6;
+
     @Mixin
     private Shared shared;
 
     @Spec
     private CommandSpec spec;
 
-    @Parameters(arity = "0..1", paramLabel = "MATERIAL", description = "Material of the particles, by id.")
+    @Parameters(
+            arity = "0..1",
+            paramLabel = "MATERIAL",
+            description = "Material of the particles, by id: see ingredients list.")
     private String material;
 
     @Option(names = "--in", paramLabel = "HOST", description = "Material around them by id, or its index as a number.")
@@ -53,6 +59,7 @@ final class ParticlesCommand implements Callable<Integer> {
     @Option(
             names = "--lognormal-nm",
             paramLabel = "MEDIAN,GSD",
+            hideParamSyntax = true,
             split = ",",
             description = "Number median diameter and geometric standard deviation.")
     private double[] lognormal;
@@ -63,7 +70,12 @@ final class ParticlesCommand implements Callable<Integer> {
             description = "Sizing table: from_nm, to_nm, weight (by number).")
     private Path sizes;
 
-    @Option(names = "--at", paramLabel = "NM", split = ",", description = "Wavelengths in nm, with commas between.")
+    @Option(
+            names = "--at",
+            paramLabel = "NM,NM,…",
+            hideParamSyntax = true,
+            split = ",",
+            description = "Wavelengths in nm, with commas between.")
     private double[] at;
 
     @Option(
@@ -86,9 +98,10 @@ final class ParticlesCommand implements Callable<Integer> {
 
     @Option(
             names = "--index",
-            paramLabel = "N[,K]",
+            paramLabel = "N,K",
+            hideParamSyntax = true,
             split = ",",
-            description = "Its index relative to the host, n + ik.")
+            description = "Its index relative to the host, n + ik; N alone does not absorb.")
     private double[] index;
 
     @Option(
@@ -166,6 +179,7 @@ final class ParticlesCommand implements Callable<Integer> {
         Crowding model = crowding();
         Refusal.within("--volume-fraction", volumeFraction, 0, 1);
         List<Map<String, Object>> rows = new ArrayList<>();
+        double worst = 0;
         TextTable text = new TextTable("  ", "rrrrrr");
         String unit = " " + shared.units.sign();
         text.row("nm", "host n", "µs" + unit, "µs'" + unit, "µa" + unit, "g");
@@ -174,6 +188,9 @@ final class ParticlesCommand implements Callable<Integer> {
             double n = around.at(nm, temperatureC).n();
             ParticleOptics p =
                     population.perVolumeFraction(particle.at(nm, temperatureC), n, nm, volumeFraction, model);
+            worst = Math.max(
+                    worst,
+                    population.average(particle.at(nm, temperatureC), n, nm).relativeError());
             double mus = p.musPerCm() * volumeFraction;
             double musp = p.muspPerCm() * volumeFraction;
             double mua = p.muaPerCm() * volumeFraction;
@@ -200,6 +217,9 @@ final class ParticlesCommand implements Callable<Integer> {
         out.println(shelf.requireMaterial(material).name() + " in " + host + ", volume fraction "
                 + Figures.plain(volumeFraction) + ", crowding " + crowding);
         text.print(out);
+        if (worst > WANTED && !shared.quiet)
+            out.println("  Averages over sizes are known to " + Figures.significant(100 * worst, 1)
+                    + " % only: these spheres have resonances too narrow for more.");
     }
 
     private RefractiveIndex host(Shelf shelf) {

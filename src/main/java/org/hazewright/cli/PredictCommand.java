@@ -7,6 +7,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.concurrent.Callable;
 import org.hazewright.files.RecipeReader;
+import org.hazewright.files.RecipeTable;
 import org.hazewright.files.SafeFile;
 import org.hazewright.mixture.Budget;
 import org.hazewright.mixture.Coefficients;
@@ -40,7 +41,12 @@ final class PredictCommand implements Callable<Integer> {
     @Parameters(paramLabel = "RECIPE", description = "NAME.recipe.toml or NAME.batch.toml.")
     private Path recipe;
 
-    @Option(names = "--at", paramLabel = "NM", split = ",", description = "Wavelengths in nm, with commas between.")
+    @Option(
+            names = "--at",
+            paramLabel = "NM,NM,…",
+            hideParamSyntax = true,
+            split = ",",
+            description = "Wavelengths in nm, with commas between.")
     private double[] at;
 
     @Option(names = "--from", paramLabel = "NM", description = "First wavelength in nm of a range.")
@@ -58,6 +64,12 @@ final class PredictCommand implements Callable<Integer> {
             description = "Draw both spectra with their 95 %% band and each ingredient's share, as .png or .svg.")
     private Path picture;
 
+    @Option(names = "--csv", paramLabel = "FILE", description = "Also write these rows as a table, in 1/cm.")
+    private Path csv;
+
+    @Option(names = "--grams-csv", paramLabel = "FILE", description = "Also write what is weighed as a table.")
+    private Path gramsCsv;
+
     @Override
     public Integer call() {
         Shelf shelf = shared.shelf();
@@ -72,7 +84,14 @@ final class PredictCommand implements Callable<Integer> {
         if (shared.json) json(mixture, nm, uMua, uMusp).print(out);
         else text(made, mixture, nm, uMua, uMusp, out);
         if (picture != null) draw(made, mixture, out);
+        if (csv != null) table(csv, RecipeTable.coefficients(mixture, nm, uMua, uMusp), out);
+        if (gramsCsv != null) table(gramsCsv, RecipeTable.grams(made, mixture), out);
         return Hazewright.DONE;
+    }
+
+    private void table(Path file, String text, PrintWriter out) {
+        String kept = ExportedFile.write(file, text);
+        if (!shared.json && !shared.quiet) out.println("Written: " + file + kept);
     }
 
     /** The picture always shows a range: the one asked for, or all that the ingredients share, every 5 nm. */

@@ -2,7 +2,7 @@ package org.hazewright.cli;
 
 import java.io.PrintWriter;
 import java.nio.file.Path;
-import org.hazewright.bench.Batch;
+import org.hazewright.batch.Batch;
 import org.hazewright.files.BatchWriter;
 import org.hazewright.files.SafeFile;
 import org.hazewright.sheet.Logbook;

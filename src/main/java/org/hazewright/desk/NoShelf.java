@@ -12,6 +12,8 @@ import org.hazewright.desk.parts.Word;
 
 /** What stands in the window when there is no shelf to work from: why, and what can be done. */
 final class NoShelf extends StackPane {
+    private final HBox ways;
+
     NoShelf(Desk desk, ShelfState shelf, Chooser chooser) {
         VBox box = new VBox(
                 Say.label("There is no shelf to work from", "headline"),
@@ -22,7 +24,7 @@ final class NoShelf extends StackPane {
         for (String words :
                 shelf.refused().subList(0, Math.min(8, shelf.refused().size())))
             box.getChildren().add(Say.wrapped("✕ " + words, "missed"));
-        HBox ways = new HBox();
+        ways = new HBox();
         ways.getStyleClass().add("gap-m");
         if (shelf.folder().isPresent()) {
             ways.getChildren()
@@ -38,7 +40,11 @@ final class NoShelf extends StackPane {
                         .styled("strong"));
         box.getChildren().add(ways);
         box.getStyleClass().addAll("place", "gap-m");
-        box.setMaxWidth(720);
+        box.getStyleClass().add("no-shelf");
         getChildren().add(box);
+    }
+
+    void focusFirst() {
+        ways.getChildren().get(0).requestFocus();
     }
 }

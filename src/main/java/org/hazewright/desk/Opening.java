@@ -29,10 +29,12 @@ public final class Opening {
 
     /** Works from the shelf of a folder, or with nothing from that of the program; begins with a file, or the demo. Gives the exit status. */
     public static int open(Optional<Path> shelfFolder, Optional<Path> first) {
-        OptionalInt elsewhere = OwnMachine.run(shelfFolder, first);
+        Remembered remembered = Remembered.in(Remembered.usualFolder(), Remembered.usualWorkFolder());
+        double windowPx = remembered.number("window.width", 0) * remembered.number("window.height", 0);
+        OptionalInt elsewhere = OwnMachine.run(shelfFolder, first, windowPx);
         if (elsewhere.isPresent()) return elsewhere.getAsInt();
         try {
-            open(shelfFolder, first, Remembered.in(Remembered.usualFolder(), Remembered.usualWorkFolder()));
+            open(shelfFolder, first, remembered);
         } catch (UnsupportedOperationException none) {
             throw new Refusal(NO_DISPLAY);
         }

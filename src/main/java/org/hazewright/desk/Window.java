@@ -25,6 +25,7 @@ import org.hazewright.desk.model.ShelfState;
 import org.hazewright.desk.parts.Chooser;
 import org.hazewright.desk.parts.Hint;
 import org.hazewright.desk.parts.NoticeBar;
+import org.hazewright.desk.parts.Room;
 import org.hazewright.desk.parts.Say;
 import org.hazewright.desk.parts.SystemChooser;
 import org.hazewright.desk.readings.ReadingsPlace;
@@ -57,6 +58,9 @@ public final class Window {
     private boolean logbookOpen;
     private boolean keysOpen;
     private Node atDesk = new StackPane();
+    /** Where the focus stood when the desk was left. */
+    private Node focusAtDesk;
+
     private final Head head;
 
     /** A window on a stage of its own; call {@link #show}. */
@@ -146,9 +150,8 @@ public final class Window {
                                             + shelf.refused().get(0),
                             new Notice.Way("read it again", desk::readShelfAgain),
                             new Notice.Way("go on without", () -> {})));
-        if (atDesk.getId() != null) return;
+        if (atDesk instanceof Room) return;
         BorderPane desktop = new BorderPane();
-        desktop.setId("places");
         brief.getStyleClass().add("brief-width");
         recipe.getStyleClass().add("recipe-width");
         brief.getChildren().add(0, hint("wish", "Say here what is wanted."));
@@ -161,7 +164,7 @@ public final class Window {
         desktop.setLeft(brief);
         desktop.setCenter(middle);
         desktop.setRight(recipe);
-        atDesk = desktop;
+        atDesk = new Room(desktop, 99, 51);
         turn();
     }
 
@@ -174,6 +177,7 @@ public final class Window {
         Optional<AtBalance> weighing = desk.weighingProperty().get();
         if (weighing.isPresent()) {
             balance = new BalanceView(weighing.get(), desk::leaveBalance, desk::finishWeighing);
+            look.fit(balance, 84, 54);
             center(balance, false);
             balance.focusField();
         } else if (desk.madeProperty().get().isPresent()) {
@@ -215,8 +219,20 @@ public final class Window {
 
     /** Puts one view in the window; the head belongs to the desk. */
     private void center(Node view, boolean head) {
+        if (places.getCenter() == view) return;
+        Scene scene = whole.getScene();
+        if (places.getCenter() == atDesk && scene != null) focusAtDesk = scene.getFocusOwner();
         places.setCenter(view);
         Say.show(this.head, head);
+        if (head && scene != null) comeBack();
+    }
+
+    /** Puts the focus where it stood when the desk was left. */
+    private void comeBack() {
+        if (focusAtDesk != null && focusAtDesk.getScene() != null && focusAtDesk.isVisible())
+            focusAtDesk.requestFocus();
+        else if (atDesk instanceof NoShelf none) none.focusFirst();
+        else if (desk.edits().now() != null) brief.focusFirst();
     }
 
     /** Turns to the shelf. */

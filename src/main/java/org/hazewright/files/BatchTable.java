@@ -2,8 +2,8 @@ package org.hazewright.files;
 
 import java.util.List;
 import java.util.OptionalDouble;
-import org.hazewright.bench.Batch;
-import org.hazewright.bench.Measurement;
+import org.hazewright.batch.Batch;
+import org.hazewright.batch.Measurement;
 import org.hazewright.bench.Weighing;
 import org.hazewright.brief.Point;
 import org.hazewright.learning.MeasuredValue;
@@ -11,11 +11,10 @@ import org.hazewright.mixture.Coefficients;
 import org.hazewright.mixture.Mixture;
 
 /**
- * A batch as one CSV table: a row a weighing and a row a value, told apart by the first column. Coefficients are in 1/cm; texts
- * that a spreadsheet program would run as formulas begin with an apostrophe.
+ * A batch as one CSV table: a row a weighing and a row a value, told apart by the first column. Coefficients are in 1/cm.
  */
 public final class BatchTable {
-    private final StringBuilder out = new StringBuilder();
+    private final CsvText out = new CsvText();
 
     private BatchTable() {}
 
@@ -112,15 +111,6 @@ public final class BatchTable {
     }
 
     private void row(Object... cells) {
-        for (int k = 0; k < cells.length; k++) {
-            if (k > 0) out.append(',');
-            out.append(cells[k] instanceof String s ? quoted(s) : cells[k].toString());
-        }
-        out.append('\n');
-    }
-
-    private static String quoted(String s) {
-        String safe = !s.isEmpty() && "=+-@\t".indexOf(s.charAt(0)) >= 0 ? "'" + s : s;
-        return safe.matches("[^,\"\n\r]*") ? safe : '"' + safe.replace("\"", "\"\"") + '"';
+        out.row(List.of(cells));
     }
 }

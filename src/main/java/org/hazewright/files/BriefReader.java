@@ -37,7 +37,7 @@ public final class BriefReader {
     public static Brief read(Path file, Supplier<Tissue.Spectra> spectra) {
         TextFile text = TextFile.read(file);
         TomlPage page = TomlPage.of(text);
-        page.requireFormat();
+        page.requireFormat(FileKind.BRIEF);
         for (String key : new String[] {"series", "phantom", "titration"})
             if (page.has(key))
                 throw page.refusal(

@@ -18,7 +18,7 @@ public record Casting(Path brief, List<Mould> moulds, String sha256) {
     public static Casting read(Path brief) {
         TextFile text = TextFile.read(brief);
         TomlPage page = TomlPage.of(text);
-        page.requireFormat();
+        page.requireFormat(FileKind.BRIEF);
         return new Casting(brief, BriefReader.moulds(page), text.sha256());
     }
 

@@ -10,6 +10,7 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.TreeMap;
+import java.util.regex.Pattern;
 import org.hazewright.brief.Target;
 import org.hazewright.learning.MeasuredValue;
 import org.hazewright.learning.Quantity;
@@ -27,7 +28,7 @@ public final class CoefficientTable {
 
     /** What a column holds. */
     private enum Column {
-        WAVELENGTH("wavelength, nm"),
+        WAVELENGTH("wavelength"),
         MUA("µa"),
         MUSP("µs'"),
         U_MUA("standard uncertainty of µa"),
@@ -52,11 +53,15 @@ public final class CoefficientTable {
             OptionalDouble muaTolerance,
             OptionalDouble muspTolerance) {}
 
+    private static final Pattern MICROMETRES = Pattern.compile("(^|[^a-z])um($|[^a-z])|micromet|micron");
+    private static final Pattern PER_METRE = Pattern.compile("(/ ?|per[ _]?|[^a-zµμ])m($|[^a-z])|per[ _]?met(re|er)");
+
     private final String path;
     private final Map<Column, Integer> place = new EnumMap<>(Column.class);
     private final Map<Column, Double> toOurs = new EnumMap<>(Column.class);
     private final List<String> understood = new ArrayList<>();
     private final List<Row> rows = new ArrayList<>();
+    private final int width;
 
     private CoefficientTable(String path, List<List<String>> cells, String saidUnit, boolean commas) {
         this.path = path;
@@ -64,6 +69,7 @@ public final class CoefficientTable {
         while (head < cells.size() && cells.get(head).stream().allMatch(String::isBlank)) head++;
         if (head == cells.size())
             throw Place.whole(path).refusal("The table is empty; it needs a heading row, then numbers.");
+        width = cells.get(head).size();
         heading(cells.get(head), head + 1, saidUnit);
         TreeMap<Double, Integer> seen = new TreeMap<>();
         for (int r = head + 1; r < cells.size(); r++) {
@@ -124,12 +130,15 @@ public final class CoefficientTable {
                         1,
                         "Two columns hold the " + column.get().words + ": \""
                                 + head.get(before).strip() + "\" and \"" + raw + "\"; keep one, or rename the other.");
-            double factor = column.get() == Column.WAVELENGTH ? nanometres(raw) : perCm(raw, line, saidUnit);
+            boolean wavelength = column.get() == Column.WAVELENGTH;
+            double factor = wavelength ? nanometres(raw) : perCm(raw, line, saidUnit);
             toOurs.put(column.get(), factor);
             understood.add("\"" + raw + "\" is the " + column.get().words
-                    + (column.get() == Column.WAVELENGTH
-                            ? factor == 1 ? "" : " (from µm)"
-                            : factor == 1 ? " in 1/cm" : " in 1/mm, times 10 to 1/cm"));
+                    + (wavelength
+                            ? factor == 1 ? " in nm" : " in µm, times 1000 to nm"
+                            : factor == 1
+                                    ? " in 1/cm"
+                                    : factor == 10 ? " in 1/mm, times 10 to 1/cm" : " in 1/m, divided by 100 to 1/cm"));
         }
         if (!place.containsKey(Column.WAVELENGTH))
             throw new FileRefusal(
@@ -180,7 +189,7 @@ public final class CoefficientTable {
 
     private static double nanometres(String raw) {
         String s = raw.toLowerCase(Locale.ROOT).replace('μ', 'µ');
-        return s.contains("µm") || s.endsWith("_um") || s.contains("(um)") ? 1000 : 1;
+        return s.contains("µm") || MICROMETRES.matcher(s).find() ? 1000 : 1;
     }
 
     private double perCm(String raw, int line, String saidUnit) {
@@ -188,6 +197,7 @@ public final class CoefficientTable {
         boolean mm = s.contains("mm");
         boolean cm = s.contains("cm");
         if (mm != cm) return mm ? 10 : 1;
+        if (!mm && PER_METRE.matcher(s).find()) return 0.01;
         if (!mm && saidUnit != null) return saidUnit.equals("mm") ? 10 : 1;
         throw new FileRefusal(
                 path,
@@ -198,6 +208,15 @@ public final class CoefficientTable {
     }
 
     private Row row(List<String> cells, int line, boolean commas) {
+        for (int c = width; c < cells.size(); c++)
+            if (!commas && !cells.get(c).isBlank())
+                throw new FileRefusal(
+                        path,
+                        line,
+                        1,
+                        "This row has " + cells.size() + " cells and the heading has " + width
+                                + ". If a comma stands inside a number, write a decimal point there, or part the columns by"
+                                + " semicolons.");
         OptionalDouble nm = number(cells, Column.WAVELENGTH, line, commas);
         if (nm.isEmpty()) throw new FileRefusal(path, line, 1, "The wavelength is empty in this row.");
         if (!(nm.getAsDouble() >= 100 && nm.getAsDouble() <= 20_000))
@@ -206,7 +225,10 @@ public final class CoefficientTable {
                     line,
                     1,
                     "The wavelength is " + Figures.plain(nm.getAsDouble())
-                            + " nm; it must lie between 100 and 20000 nm.");
+                            + " nm; it must lie between 100 and 20000 nm."
+                            + (nm.getAsDouble() >= 0.1 && nm.getAsDouble() <= 20
+                                    ? " If it is in µm, write that into the heading: wavelength (µm)."
+                                    : ""));
         return new Row(
                 nm.getAsDouble(),
                 number(cells, Column.MUA, line, commas),

@@ -99,10 +99,7 @@ public final class CsvTable {
         for (String name : header)
             if (!Arrays.asList(known).contains(name))
                 throw atHeader()
-                        .refusal("The column " + name + " is not known here."
-                                + Nearest.to(name, Arrays.asList(known))
-                                        .map(n -> " Perhaps " + n + " is meant.")
-                                        .orElse(" Known here: " + String.join(", ", known) + "."));
+                        .refusal("The column " + name + " is not known here." + Meant.by(name, Arrays.asList(known)));
     }
 
     /** Which one of these columns the table has; none, or more than one, is refused. */

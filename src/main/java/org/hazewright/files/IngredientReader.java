@@ -265,8 +265,13 @@ final class IngredientReader {
             return Optional.empty();
         }
         TomlPage t = page.requireTable("lot");
-        t.refuseUnknown("number", "received", "opened", "expires");
+        t.refuseUnknown("number", "received", "opened", "expires", "drift");
         return Optional.of(new Lot(
-                page.text("lot_of"), t.text("number"), t.date("received"), t.date("opened"), t.date("expires")));
+                page.text("lot_of"),
+                t.text("number"),
+                t.date("received"),
+                t.date("opened"),
+                t.date("expires"),
+                t.has("drift") ? Optional.of(t.text("drift")) : Optional.empty()));
     }
 }

@@ -38,6 +38,8 @@ public final class LotWriter {
         which.received().ifPresent(d -> out.append("received = ").append(d).append('\n'));
         which.opened().ifPresent(d -> out.append("opened = ").append(d).append('\n'));
         which.expires().ifPresent(d -> out.append("expires = ").append(d).append('\n'));
+        which.drift()
+                .ifPresent(d -> out.append("drift = ").append(TomlText.text(d)).append('\n'));
         out.append("\n[source]\nbasis = ")
                 .append(TomlText.text(lot.source().basis().word()))
                 .append("\ncitation = ")

@@ -5,17 +5,18 @@ import org.hazewright.optics.CauchyIndex;
 import org.hazewright.optics.ConstantIndex;
 import org.hazewright.optics.IapwsWater;
 import org.hazewright.optics.Index;
-import org.hazewright.optics.PoleIndex;
 import org.hazewright.optics.RefractiveIndex;
 import org.hazewright.optics.Refusal;
-import org.hazewright.optics.SellmeierIndex;
+import org.hazewright.optics.ResonanceIndex;
 import org.hazewright.optics.TableIndex;
+import org.hazewright.optics.ThermoOpticIndex;
 import org.hazewright.shelf.Material;
 
 /**
  * A file of {@code materials/}: a refractive index by table or by formula, and its source.
  *
- * <p>Formulas state their validity range in {@code from_nm} and {@code to_nm}; a table's range is its own.
+ * <p>Formulas state their validity range in {@code from_nm} and {@code to_nm}; a table's range is its own. Either may say how the
+ * index moves with temperature.
  */
 final class MaterialReader {
     private MaterialReader() {}
@@ -24,7 +25,7 @@ final class MaterialReader {
         page.requireFormat();
         Ids.requireFileName(page, id);
         String name = page.text("name", id);
-        RefractiveIndex index = index(page, name, folder);
+        RefractiveIndex index = withTemperature(page, index(page, name, folder));
         return new Material(id, name, index, SourceReader.read(page.requireTable("source")));
     }
 
@@ -55,23 +56,20 @@ final class MaterialReader {
                 double to = page.positive("to_nm");
                 return checked(page, page.holding("from_nm", () -> new CauchyIndex(name, a, b, c, from, to)));
             }
-            case "sellmeier": {
+            case "sellmeier", "pole": {
                 known(page, "a", "b", "c", "from_nm", "to_nm");
                 double a = page.number("a");
                 double[] b = page.numbers("b");
                 double[] c = page.numbers("c");
                 double from = page.positive("from_nm");
                 double to = page.positive("to_nm");
-                return checked(page, page.holding("c", () -> new SellmeierIndex(name, a, b, c, from, to)));
-            }
-            case "pole": {
-                known(page, "a", "b", "c", "from_nm", "to_nm");
-                double a = page.number("a");
-                double[] b = page.numbers("b");
-                double[] c = page.numbers("c");
-                double from = page.positive("from_nm");
-                double to = page.positive("to_nm");
-                return checked(page, page.holding("c", () -> new PoleIndex(name, a, b, c, from, to)));
+                return checked(
+                        page,
+                        page.holding(
+                                "c",
+                                () -> form.equals("pole")
+                                        ? ResonanceIndex.pole(name, a, b, c, from, to)
+                                        : ResonanceIndex.sellmeier(name, a, b, c, from, to)));
             }
             default: {
                 known(page, "from_nm", "to_nm");
@@ -83,10 +81,19 @@ final class MaterialReader {
         }
     }
 
+    /** An index that says how it moves with temperature, in {@code dn_dt_per_c}, says at what temperature it holds, in {@code at_c}. */
+    private static RefractiveIndex withTemperature(TomlPage page, RefractiveIndex index) {
+        if (!page.has("dn_dt_per_c") && !page.has("at_c")) return index;
+        double dnPerC = page.number("dn_dt_per_c");
+        double measuredC = page.number("at_c");
+        return page.holding("dn_dt_per_c", () -> new ThermoOpticIndex(index, measuredC, dnPerC));
+    }
+
     private static void known(TomlPage page, String... ofForm) {
         java.util.List<String> all =
                 new java.util.ArrayList<>(java.util.List.of("format", "id", "name", "form", "source"));
         all.addAll(java.util.List.of(ofForm));
+        if (!page.text("form", "table").equals("iapws-water")) all.addAll(java.util.List.of("dn_dt_per_c", "at_c"));
         page.refuseUnknown(all);
     }
 

@@ -51,7 +51,7 @@ public final class RecipeReader {
     }
 
     private Recipe recipe() {
-        page.requireFormat();
+        page.requireFormat(batch ? FileKind.BATCH : FileKind.RECIPE);
         known(
                 page,
                 List.of(

@@ -42,7 +42,7 @@ public final class SeriesReader {
         this.page = TomlPage.of(text);
         this.name = name;
         this.spectra = spectra;
-        page.requireFormat();
+        page.requireFormat(FileKind.BRIEF);
         List<String> known = new ArrayList<>(BriefReader.SHARED_KEYS);
         known.addAll(List.of("series", "phantom", "titration", "target"));
         if (page.has("tissue"))

@@ -35,7 +35,7 @@ public final class SetUpReader {
     private SetUpReader(Path folder, TomlPage page) {
         this.folder = folder;
         this.page = page;
-        page.requireFormat();
+        page.requireFormat(FileKind.SET_UP);
         page.refuseUnknown(
                 "format",
                 "title",

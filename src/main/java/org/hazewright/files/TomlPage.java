@@ -12,7 +12,6 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.Set;
-import java.util.TreeSet;
 import java.util.function.Supplier;
 import org.hazewright.shelf.Nearest;
 
@@ -82,12 +81,14 @@ final class TomlPage {
 
     void refuseUnknown(Collection<String> known) {
         for (String key : entries.keySet())
-            if (!known.contains(key)) {
-                String hint = Nearest.to(key, known)
-                        .map(n -> " Perhaps " + n + " is meant.")
-                        .orElse(" Known here: " + String.join(", ", new TreeSet<>(known)) + ".");
-                throw refusal(key, "The key " + key + where() + " is not known." + hint);
-            }
+            if (!known.contains(key))
+                throw refusal(key, "The key " + key + where() + " is not known." + Meant.by(key, known));
+    }
+
+    /** Refuses a file that by its name is of another kind, or whose {@code format} is missing or not 1. */
+    void requireFormat(FileKind kind) {
+        kind.require(at);
+        requireFormat();
     }
 
     /** Refuses a file whose {@code format} is missing or not 1. */

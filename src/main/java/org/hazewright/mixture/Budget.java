@@ -126,10 +126,12 @@ public final class Budget {
         return out;
     }
 
+    /** What is not known, each independent of the others. */
     public List<Cause> causes() {
         return causes;
     }
 
+    /** The wavelengths in nm, in the order asked for. */
     public double[] wavelengthsNm() {
         return wavelengthsNm.clone();
     }

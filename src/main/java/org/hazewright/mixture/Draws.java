@@ -30,6 +30,10 @@ public final class Draws {
         this.values = values;
     }
 
+    /**
+     * {@code count} draws (100 to 10 000 000) of a recipe at wavelengths in nm. {@code capacityG} is the balance's: a mass above it takes several
+     * loads. The same {@code seed} gives the same draws.
+     */
     public static Draws of(Recipe recipe, double[] wavelengthsNm, double capacityG, int count, long seed) {
         return of(new Unknowns(recipe, wavelengthsNm, capacityG), count, seed);
     }
@@ -107,6 +111,7 @@ public final class Draws {
         }
     }
 
+    /** Number of draws. */
     public int count() {
         return count;
     }
@@ -115,6 +120,7 @@ public final class Draws {
         return values[scattering ? wavelengths + wavelength : wavelength];
     }
 
+    /** Mean of the draws of µs' ({@code scattering}) or µa at the wavelength of that place, 1/cm. */
     public double mean(boolean scattering, int wavelength) {
         double sum = 0;
         for (double v : of(scattering, wavelength)) sum += v;

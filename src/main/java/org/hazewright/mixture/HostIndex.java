@@ -1,8 +1,10 @@
 package org.hazewright.mixture;
 
+import java.util.Arrays;
 import java.util.Map;
 import org.hazewright.optics.Index;
 import org.hazewright.optics.LorentzLorenz;
+import org.hazewright.optics.Refusal;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Scattering;
 
@@ -11,7 +13,10 @@ import org.hazewright.shelf.Scattering;
  * have an index of their own.
  *
  * <p>(n² − 1)/(n² + 2) = Σ φ_i (n_i² − 1)/(n_i² + 2), volumes φ_i normalised over those parts. An ingredient without an index
- * takes no part. Particles are outside the host and inside the boundary.
+ * takes no part. Particles are outside the host and inside the boundary. Absorption indices k take no part in either.
+ *
+ * <p>Lorentz 1880 and Lorenz 1880, see {@link LorentzLorenz}. Wavelengths in nm, temperature in °C, volumes in mL; a mixture in which
+ * nothing has an index is a {@link Refusal}, and so is a wavelength that an index does not reach.
  */
 final class HostIndex {
     private HostIndex() {}
@@ -45,11 +50,10 @@ final class HostIndex {
         double total = 0;
         for (int k = 0; k < used; k++) total += volume[k];
         if (!(total > 0))
-            throw new org.hazewright.optics.Refusal(
-                    "Nothing in this mixture has a refractive index, so the host index is not"
-                            + " known; give the base an index = \"<material>\" in its ingredient file.");
+            throw new Refusal("Nothing in this mixture has a refractive index, so the host index is not"
+                    + " known; give the base an index = \"<material>\" in its ingredient file.");
         double[] fraction = new double[used];
         for (int k = 0; k < used; k++) fraction[k] = volume[k] / total;
-        return LorentzLorenz.mix(fraction, java.util.Arrays.copyOf(n, used));
+        return LorentzLorenz.mix(fraction, Arrays.copyOf(n, used));
     }
 }

@@ -13,10 +13,12 @@ public record Item(Ingredient ingredient, Optional<String> stock, Optional<Strin
         Refusal.notNegative("Grams of " + stock.orElse(ingredient.id()), massG);
     }
 
+    /** Grams of an ingredient as it is bought. */
     public static Item neat(Ingredient ingredient, double massG) {
         return new Item(ingredient, Optional.empty(), Optional.empty(), massG);
     }
 
+    /** Grams of a stock. */
     public static Item ofStock(Stock stock, double massG) {
         return new Item(stock.ingredient(), Optional.of(stock.id()), stock.lot(), massG);
     }

@@ -3,6 +3,7 @@ package org.hazewright.mixture;
 import org.hazewright.optics.Crowding;
 import org.hazewright.optics.Index;
 import org.hazewright.optics.ParticleOptics;
+import org.hazewright.optics.Refusal;
 import org.hazewright.shelf.Absorption;
 import org.hazewright.shelf.Ingredient;
 import org.hazewright.shelf.Scattering;
@@ -22,7 +23,8 @@ public record MassSpecific(double kappaA, double kappaMus, double kappaMusp) {
      * phantom (0 for the dilute limit).
      *
      * <p>A population of volume fraction φ = C f/ρ (C in g/mL, f the particles' share of the ingredient's volume, ρ its density)
-     * adds φ times its coefficients per unit volume fraction, so κ = f/ρ times those.
+     * adds φ times its coefficients per unit volume fraction, so κ = f/ρ times those. A {@link Refusal} names the ingredient or its table:
+     * outside the range of a table or formula, and above the limit of a crowding model.
      */
     public static MassSpecific of(
             Ingredient i, double nm, double temperatureC, double hostIndex, double particleFraction) {
@@ -40,8 +42,7 @@ public record MassSpecific(double kappaA, double kappaMus, double kappaMusp) {
             if (s instanceof Scattering.MieParticles mie) {
                 Index particle = mie.particle().index().at(nm, temperatureC);
                 Crowding crowding = particleFraction > 0 ? mie.crowding() : new Crowding.None();
-                ParticleOptics p =
-                        mie.population().perVolumeFraction(particle, hostIndex, nm, particleFraction, crowding);
+                ParticleOptics p = crowded(i, mie, particle, hostIndex, nm, particleFraction, crowding);
                 double mlPerG = mie.volumeFraction() / i.densityGPerMl();
                 kappaA += mlPerG * p.muaPerCm() * mie.absorptionMagnitude();
                 kappaMus += mlPerG * p.musPerCm() * mie.magnitude();
@@ -55,6 +56,22 @@ public record MassSpecific(double kappaA, double kappaMus, double kappaMusp) {
             }
         }
         return new MassSpecific(kappaA, kappaMus, kappaMusp);
+    }
+
+    /** What is refused is refused with the ingredient's name: in a mixture of several it is not plain whose limit is meant. */
+    private static ParticleOptics crowded(
+            Ingredient i,
+            Scattering.MieParticles mie,
+            Index particle,
+            double hostIndex,
+            double nm,
+            double particleFraction,
+            Crowding crowding) {
+        try {
+            return mie.population().perVolumeFraction(particle, hostIndex, nm, particleFraction, crowding);
+        } catch (Refusal refusal) {
+            throw new Refusal(i.id() + ": " + refusal.getMessage(), refusal);
+        }
     }
 
     /** Refuses a wavelength in nm that an ingredient's figures do not reach, naming the table and its range. */

@@ -23,6 +23,7 @@ public final class Mixture {
     private final double temperatureC;
     private final double volumeMl;
 
+    /** Grams of each ingredient, 0 or above, and the temperature in °C, 0 to 100, at which it is used; at least one mass above 0. */
     public Mixture(Map<Ingredient, Double> massesG, double temperatureC) {
         Map<Ingredient, Double> masses = new LinkedHashMap<>();
         Map<Ingredient, Double> volumes = new LinkedHashMap<>();
@@ -42,26 +43,32 @@ public final class Mixture {
         this.temperatureC = Refusal.within("Temperature in °C", temperatureC, 0, 100);
     }
 
+    /** What a recipe puts into the vessel, stocks resolved. */
     public static Mixture of(Recipe recipe) {
         return new Mixture(recipe.massesG(), recipe.temperatureC());
     }
 
+    /** Grams of each ingredient, in the order given. */
     public Map<Ingredient, Double> massesG() {
         return massesG;
     }
 
+    /** °C. */
     public double temperatureC() {
         return temperatureC;
     }
 
+    /** Σ m_i/ρ_i in mL. */
     public double volumeMl() {
         return volumeMl;
     }
 
+    /** Grams in all. */
     public double massG() {
         return massesG.values().stream().mapToDouble(Double::doubleValue).sum();
     }
 
+    /** Grams over volume, g/mL. */
     public double densityGPerMl() {
         return massG() / volumeMl;
     }
@@ -71,6 +78,7 @@ public final class Mixture {
         return massesG.getOrDefault(i, 0.0) / volumeMl;
     }
 
+    /** Index of what surrounds the particles at a wavelength in nm: Lorentz–Lorenz over the volumes, particles left out. */
     public double hostIndex(double nm) {
         return HostIndex.host(volumesMl, nm, temperatureC);
     }

@@ -49,6 +49,7 @@ public record Recipe(
             throw new Refusal("All items of the recipe \"" + title + "\" weigh 0 g.");
     }
 
+    /** The stock of that id; a {@link Refusal} when the recipe makes none. */
     public Stock stock(String id) {
         return stocks.stream()
                 .filter(s -> s.id().equals(id))

@@ -22,6 +22,7 @@ public record Stock(
         Refusal.positive("Grams of diluent in stock " + id, diluentG);
     }
 
+    /** Grams of stock made. */
     public double totalG() {
         return ingredientG + diluentG;
     }

@@ -63,6 +63,7 @@ public final class Sweep {
         return of(mixture, reached);
     }
 
+    /** The wavelengths in nm, in the order asked for. */
     public double[] wavelengthsNm() {
         return wavelengthsNm.clone();
     }

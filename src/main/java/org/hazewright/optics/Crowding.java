@@ -45,15 +45,17 @@ public sealed interface Crowding {
                             + "; it must stay above 0 up to its largest volume fraction.");
         }
 
+        /** a₁, a₂, …, without unit, φ being a fraction and not a percentage. */
         public double[] coefficients() {
             return coefficients.clone();
         }
 
+        /** The largest φ that was measured. */
         public double maxVolumeFraction() {
             return maxVolumeFraction;
         }
 
-        /** The factor on µs' at φ. */
+        /** The factor on µs' at φ, above 0; a φ below 0 or above the largest is a {@link Refusal} that names the limit. */
         public double factor(double volumeFraction) {
             Refusal.notNegative("Volume fraction of particles", volumeFraction);
             if (volumeFraction > maxVolumeFraction)

@@ -3,8 +3,9 @@ package org.hazewright.optics;
 /**
  * Hard spheres that cannot overlap scatter together: the Percus–Yevick structure factor.
  *
- * <p>S(q) of equal spheres of diameter d at volume fraction φ, with q d without unit, 0 ≤ φ ≤ 0.45; above it spheres begin to
- * order, the closed form no longer describes them, and the constructor refuses. S → 1 for φ → 0 and for q d → ∞;
+ * <p>S(q) of equal spheres of diameter d at volume fraction φ, with q d without unit, 0 ≤ φ ≤ 0.45; towards 0.49, where hard
+ * spheres begin to freeze (Hoover &amp; Ree, J. Chem. Phys. 49, 3609, 1968), the closed form overstates the peaks of S more and more, and
+ * the constructor refuses. S → 1 for φ → 0 and for q d → ∞;
  * S(0) = (1 − φ)⁴/(1 + 2φ)².
  *
  * <p>1/S(q) = 1 + 24 φ ∫₀¹ (α + βs + γs³) s² sin(q d s)/(q d s) ds with α = (1 + 2φ)²/(1 − φ)⁴,
@@ -12,6 +13,7 @@ package org.hazewright.optics;
  * 321, 1963, eq. 12.
  */
 public record HardSpheres(double volumeFraction) {
+    /** The largest φ for which the model is used. */
     public static final double MAX_VOLUME_FRACTION = 0.45;
 
     public HardSpheres {

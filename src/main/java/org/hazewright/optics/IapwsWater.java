@@ -47,7 +47,7 @@ public record IapwsWater() implements RefractiveIndex {
         return top / (1 + 16.879850e-3 * t);
     }
 
-    /** R9-97 eq. 1 for wavelength in nm, temperature in °C and density in kg/m³. */
+    /** R9-97 eq. 1, which is (n² − 1)/(n² + 2), solved for n; for wavelength in nm, temperature in °C and density in kg/m³. */
     static double index(double wavelengthNm, double temperatureC, double densityKgPerM3) {
         double rho = densityKgPerM3 / 1000;
         double t = (temperatureC + 273.15) / 273.15;

@@ -42,6 +42,8 @@ final class LogNormalQuadrature extends SizeQuadrature {
         double scatteringSmall = 8.0 / 3 * ((re - 1) * (re - 1) + im * im) / ((re + 2) * (re + 2) + im * im);
         double scatteringMiddle = 2 * ((n - 1) * (n - 1) + k * k);
 
+        double opaque = Math.max(
+                1, 1 / (4 * k)); // below this size light is absorbed throughout the sphere, above it on its face
         // where the integrands are: rough cross sections on a coarse grid
         LogNormalGrid coarse = LogNormalGrid.of(sizes, LEAST_PER_SIGMA);
         int count = coarse.count();
@@ -55,7 +57,7 @@ final class LogNormalQuadrature extends SizeQuadrature {
                     / (1 / (scatteringSmall * x * x * x * x + 1e-300) + 1 / (scatteringMiddle * x * x + 1e-300) + 0.5);
             rough[0][i] = scattering;
             rough[1][i] = scattering / (1 + x * x);
-            rough[2][i] = k > 0 ? area * Math.min(x, 1) : 0;
+            rough[2][i] = k > 0 ? area * Math.min(x, opaque) : 0;
             if (scattering > most[0]) top = x;
             for (int j = 0; j < 3; j++) most[j] = Math.max(most[j], rough[j][i]);
         }

@@ -4,7 +4,8 @@ package org.hazewright.optics;
  * Scattering and absorption efficiencies of one homogeneous sphere of any size: Mie's solution.
  *
  * <p>Size parameter x = πD n_h/λ and relative index m = n + ik of the sphere in a host that does not absorb, k ≥ 0. Domain:
- * 1e-4 ≤ x ≤ 2e4, 0.2 ≤ n ≤ 10, 0 ≤ k ≤ 10 (so |m| ≤ 10√2); outside it a {@link Refusal}. For coefficients and angles see
+ * 1e-4 ≤ x ≤ 2e4, 0.2 ≤ n ≤ 10, 0 ≤ k ≤ 10 (so |m| ≤ 10√2); outside it a {@link Refusal}. Relative error of Q_ext, Q_sca and g at most 1e-10 for
+ * x ≤ 1000 and 1e-8 above, and of Q_abs the same however weakly the sphere absorbs, against values of 30 digits. For coefficients and angles see
  * {@link MieSeries}, which also states the equations and their source.
  */
 public final class Mie {

@@ -163,6 +163,7 @@ public final class MieSeries {
         return new Efficiencies(qSca + qAbs, qSca, qAbs, sca > 0 ? 2 * asymmetry / sca : 0);
     }
 
+    /** Efficiencies of the sphere; error as {@link Mie} says. */
     public Efficiencies efficiencies() {
         return efficiencies;
     }
@@ -172,7 +173,10 @@ public final class MieSeries {
         return aRe.length - 2;
     }
 
-    /** |S1|² and |S2|² (no unit) at the cosine of the scattering angle: light polarised across and in the scattering plane. */
+    /**
+     * |S1|² and |S2|² (no unit) at the cosine of the scattering angle: light polarised across and in the scattering plane
+     * (Bohren &amp; Huffman 1983, eq. 4.74). A cosine outside [−1, 1] is a {@link Refusal}.
+     */
     public double[] intensities(double cosTheta) {
         Refusal.within("Cosine of the scattering angle", cosTheta, -1, 1);
         double s1Re = 0;
@@ -243,7 +247,7 @@ public final class MieSeries {
         out[1] = (backSumRe * backSumRe + backSumIm * backSumIm + backDifRe * backDifRe + backDifIm * backDifIm) / 2;
     }
 
-    /** Phase function for unpolarised light in 1/sr, ∫ p dΩ = 1 over all directions. */
+    /** Phase function for unpolarised light in 1/sr at the cosine of the scattering angle; ∫ p dΩ = 1 over all directions. */
     public double phaseFunction(double cosTheta) {
         double[] s = intensities(cosTheta);
         return (s[0] + s[1]) / (2 * Math.PI * x * x * efficiencies.qSca());

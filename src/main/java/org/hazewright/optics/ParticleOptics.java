@@ -8,6 +8,7 @@ package org.hazewright.optics;
  * it is the quantity that is integrated; {@link #g()} is 1 − µs'/µs.
  */
 public record ParticleOptics(double musPerCm, double muspPerCm, double muaPerCm) {
+    /** Mean cosine of the scattering angle, crowding included; 0 where nothing is scattered. */
     public double g() {
         return musPerCm > 0 ? 1 - muspPerCm / musPerCm : 0;
     }

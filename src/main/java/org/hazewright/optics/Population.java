@@ -12,8 +12,9 @@ import java.util.List;
  *
  * <p>Where 1e-6 is not reached: clear or weakly absorbing spheres of high contrast (relative index 1.3 and more at size
  * parameters of 10 and more) of many sizes have resonances narrower than any affordable step, and the average ends at {@value
- * SizeQuadrature#MOST_SPHERES} spheres with the error that {@link PopulationAverage#relativeError} says, typically 1e-5.
- * Nothing is refused for it. Crowding of such a population is a ratio over some 2000 of its sizes.
+ * SizeQuadrature#MOST_SPHERES} spheres with the error that {@link PopulationAverage#relativeError} says, typically 1e-5. Of
+ * spheres that absorb very weakly, µa is the worst of the three: it hangs on the few spheres at a resonance, and may be known to 1e-2 only at
+ * k = 1e-4 and to 0.2 at k = 1e-7, where a gram of titania in a litre adds some 1e-4 /cm. Nothing is refused for it. Crowding of such a population is a ratio over some 2000 of its sizes.
  *
  * <p>What was computed is remembered by value (sizes, indices, wavelength), so asking again costs nothing. Safe for threads.
  *

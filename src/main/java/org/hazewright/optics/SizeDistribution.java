@@ -28,7 +28,7 @@ public sealed interface SizeDistribution {
      * Log-normal by number: the logarithm of the diameter is normal with mean ln(median) and standard deviation ln(GSD).
      *
      * <p>Geometric standard deviation above 1 (1 would be {@link Single}) and at most 4. ⟨D³⟩ = median³ exp(4.5 ln²GSD)
-     * (Hatch & Choate, J. Franklin Inst. 207, 369, 1929).
+     * (Hatch &amp; Choate, J. Franklin Inst. 207, 369, 1929).
      */
     record LogNormal(double numberMedianDiameterNm, double geometricStandardDeviation) implements SizeDistribution {
         public LogNormal {
@@ -72,10 +72,12 @@ public sealed interface SizeDistribution {
             for (int i = 0; i < weights.length; i++) this.weights[i] /= sum;
         }
 
+        /** Edges in nm, ascending, one more than there are bins. */
         public double[] edgesNm() {
             return edgesNm.clone();
         }
 
+        /** Share of the particles in each bin, by number; they sum to 1. */
         public double[] weights() {
             return weights.clone();
         }

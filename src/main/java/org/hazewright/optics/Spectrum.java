@@ -35,18 +35,22 @@ public final class Spectrum {
         this.value = value.clone();
     }
 
+    /** The file, or the quantity, as messages name it. */
     public String name() {
         return name;
     }
 
+    /** First wavelength in nm. */
     public double fromNm() {
         return wavelengthNm[0];
     }
 
+    /** Last wavelength in nm. */
     public double toNm() {
         return wavelengthNm[wavelengthNm.length - 1];
     }
 
+    /** Whether a wavelength in nm lies within the table. */
     public boolean covers(double nm) {
         return nm >= fromNm() && nm <= toNm();
     }
@@ -63,10 +67,12 @@ public final class Spectrum {
         return value[right - 1] + t * (value[right] - value[right - 1]);
     }
 
+    /** The table's wavelengths in nm. */
     public double[] wavelengthsNm() {
         return wavelengthNm.clone();
     }
 
+    /** The table's values, in whatever unit it was made with. */
     public double[] values() {
         return value.clone();
     }

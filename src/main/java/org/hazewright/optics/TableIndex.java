@@ -11,6 +11,7 @@ public final class TableIndex implements RefractiveIndex {
     private final Spectrum n;
     private final Spectrum k;
 
+    /** {@code name} is the medium's, for messages. n and k without unit, over wavelengths in nm. */
     public TableIndex(String name, Spectrum n, Spectrum k) {
         double from = k == null ? n.fromNm() : Math.max(n.fromNm(), k.fromNm());
         double to = k == null ? n.toNm() : Math.min(n.toNm(), k.toNm());

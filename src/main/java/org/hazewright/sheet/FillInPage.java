@@ -129,12 +129,13 @@ final class FillInPage {
     }
 
     private static Face headFace(int column, boolean figures) {
+        if (column == FillInPlan.PLANNED && figures) return Face.HEAD.indent().right(); // clear of the box beside it
         if (figures) return Face.HEAD.right();
         return column == FillInPlan.NUMBER || column == FillInPlan.DONE ? Face.HEAD.centred() : Face.HEAD.indent();
     }
 
     private void input(int row, int labelColumn, String label, int column, Face face) {
-        page.text(row, labelColumn, label, Face.QUIET.right());
+        page.text(row, labelColumn, label, Face.QUIET.indent().right());
         page.text(row, column, "", face).setBlank();
     }
 
@@ -169,7 +170,7 @@ final class FillInPage {
                 FillInPlan.FROM,
                 w.from().isPresent() ? "stock" : lot(w).isEmpty() ? "bottle" : lot(w),
                 QUIET.indent());
-        page.number(row, FillInPlan.PLANNED, w.massG(), grams.bolder());
+        page.number(row, FillInPlan.PLANNED, w.massG(), grams.bolder().indent().right());
         page.cell(row, FillInPlan.WEIGHED, grams.points(11).bolder().fillIn());
         page.number(row, FillInPlan.LOW, s.lowG(), grams);
         page.number(row, FillInPlan.HIGH, s.highG(), grams);

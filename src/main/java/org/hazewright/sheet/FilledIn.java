@@ -13,13 +13,14 @@ import java.util.OptionalDouble;
 import org.apache.poi.ss.usermodel.Cell;
 import org.apache.poi.ss.usermodel.CellType;
 import org.apache.poi.ss.usermodel.DateUtil;
+import org.apache.poi.ss.usermodel.FormulaError;
 import org.apache.poi.ss.usermodel.Row;
 import org.apache.poi.ss.util.AreaReference;
 import org.apache.poi.ss.util.CellReference;
 import org.apache.poi.xssf.usermodel.XSSFName;
 import org.apache.poi.xssf.usermodel.XSSFSheet;
 import org.apache.poi.xssf.usermodel.XSSFWorkbook;
-import org.hazewright.bench.Batch;
+import org.hazewright.batch.Batch;
 import org.hazewright.bench.Weighing;
 import org.hazewright.optics.Figures;
 import org.hazewright.shelf.Nearest;
@@ -188,9 +189,10 @@ public record FilledIn(
                 Cell weighed = row.getCell(FillInPlan.WEIGHED);
                 if (!planned.containsKey(key)) {
                     if (!blank(weighed))
-                        problems.add(where(row, FillInPlan.WEIGHED) + " holds " + quoted(weighed)
-                                + " in a row that the recipe does not have. Clear it; what was added beyond the recipe is recorded as a"
-                                + " correction.");
+                        problems.add(
+                                where(row, FillInPlan.WEIGHED) + " holds " + quoted(weighed)
+                                        + " in a row that the recipe does not have. Clear it; more of something that the recipe has goes into the"
+                                        + " grams of its own row, and with anything else in it the batch is no longer this recipe.");
                     continue;
                 }
                 Integer before = seen.put(key, r);
@@ -297,7 +299,7 @@ public record FilledIn(
                 case STRING -> cell.getStringCellValue();
                 case NUMERIC -> Figures.plain(cell.getNumericCellValue());
                 case BOOLEAN -> cell.getBooleanCellValue() ? "TRUE" : "FALSE";
-                case ERROR -> "an error";
+                case ERROR -> FormulaError.forInt(cell.getErrorCellValue()).getString();
                 default -> "";
             };
             return s.replaceAll("\\p{Cntrl}", " ").strip();

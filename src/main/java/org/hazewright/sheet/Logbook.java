@@ -22,7 +22,7 @@ import org.apache.poi.ss.util.CellReference;
 import org.apache.poi.xssf.usermodel.XSSFName;
 import org.apache.poi.xssf.usermodel.XSSFSheet;
 import org.apache.poi.xssf.usermodel.XSSFWorkbook;
-import org.hazewright.bench.Batch;
+import org.hazewright.batch.Batch;
 import org.hazewright.files.SafeFile;
 import org.hazewright.optics.Refusal;
 
@@ -132,7 +132,7 @@ public final class Logbook {
         }
     }
 
-    private static final class Tables {
+    static final class Tables {
         private final XSSFWorkbook workbook;
         final LogbookTable batches;
         final LogbookTable values;
@@ -174,7 +174,7 @@ public final class Logbook {
         }
     }
 
-    private static void requireFormat(XSSFWorkbook workbook, Path file) {
+    static void requireFormat(XSSFWorkbook workbook, Path file) {
         CellReference at = at(workbook, LogbookPages.FORMAT_NAME);
         XSSFSheet sheet = at == null ? null : workbook.getSheet(at.getSheetName());
         Cell cell = sheet == null || sheet.getRow(at.getRow()) == null
@@ -196,7 +196,7 @@ public final class Logbook {
         return new AreaReference(found.getRefersToFormula(), workbook.getSpreadsheetVersion()).getFirstCell();
     }
 
-    private static XSSFSheet sheetOf(XSSFWorkbook workbook, String name) {
+    static XSSFSheet sheetOf(XSSFWorkbook workbook, String name) {
         CellReference at = at(workbook, name);
         return at == null ? null : workbook.getSheet(at.getSheetName());
     }
@@ -235,7 +235,7 @@ public final class Logbook {
         return name.endsWith(".xlsx") ? name.substring(0, name.length() - 5) : name;
     }
 
-    private static List<Path> waiting(Path logbook) throws IOException {
+    static List<Path> waiting(Path logbook) throws IOException {
         Path folder = logbook.toAbsolutePath().getParent();
         List<Path> found = new ArrayList<>();
         if (!Files.isDirectory(folder)) return found;

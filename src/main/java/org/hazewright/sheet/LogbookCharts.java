@@ -9,6 +9,7 @@ import org.apache.poi.xddf.usermodel.XDDFLineProperties;
 import org.apache.poi.xddf.usermodel.XDDFNoFillProperties;
 import org.apache.poi.xddf.usermodel.XDDFShapeProperties;
 import org.apache.poi.xddf.usermodel.XDDFSolidFillProperties;
+import org.apache.poi.xddf.usermodel.chart.AxisCrossBetween;
 import org.apache.poi.xddf.usermodel.chart.AxisCrosses;
 import org.apache.poi.xddf.usermodel.chart.AxisPosition;
 import org.apache.poi.xddf.usermodel.chart.ChartTypes;
@@ -107,6 +108,7 @@ final class LogbookCharts {
         XDDFCategoryAxis x = chart.createCategoryAxis(AxisPosition.BOTTOM);
         XDDFValueAxis y = chart.createValueAxis(AxisPosition.LEFT);
         look(x, y);
+        y.setCrossBetween(AxisCrossBetween.BETWEEN); // the first lot stands off the axis
         XDDFLineChartData data = (XDDFLineChartData) chart.createData(ChartTypes.LINE, x, y);
         data.setVaryColors(false);
         for (int k = 0; k < 2; k++) {

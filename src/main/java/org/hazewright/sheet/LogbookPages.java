@@ -1,5 +1,6 @@
 package org.hazewright.sheet;
 
+import java.util.Arrays;
 import java.util.List;
 import org.apache.poi.ss.usermodel.HorizontalAlignment;
 import org.apache.poi.ss.util.CellRangeAddress;
@@ -14,6 +15,9 @@ final class LogbookPages {
     static final String LOTS = "logbook_lots";
     static final String CHARTS = "logbook_charts";
     private static final int HEAD = 3;
+
+    /** In pixels, hidden columns included; wider tables would be printed smaller than a person reads. */
+    private static final int WIDEST_ON_ONE_PAGE = 1550;
 
     private LogbookPages() {}
 
@@ -30,8 +34,8 @@ final class LogbookPages {
                 "Logbook",
                 "One row a batch, the newest last. Your own columns, notes, colours and pages stay as they are when a batch is added.",
                 LogbookEntry.BATCH_COLUMNS,
-                new int[] {104, 72, 116, 74, 70, 84, 112, 138, 138, 52, 60, 230, 150, 74, 60, 120, 130});
-        formats(batches, LogbookEntry.BATCH_COLUMNS);
+                new int[] {104, 80, 116, 74, 70, 84, 120, 156, 156, 52, 60, 230, 150, 80, 64, 120, 130});
+        formats(batches, BATCHES, LogbookEntry.BATCH_COLUMNS);
         Page values = table(
                 workbook,
                 looks,
@@ -41,8 +45,10 @@ final class LogbookPages {
                 "Measured values",
                 "One row a measured number, in 1/cm, beside what was predicted of the batch as weighed.",
                 LogbookEntry.VALUE_COLUMNS,
-                new int[] {150, 82, 56, 66, 76, 84, 84, 92, 84, 92, 120, 120, 170, 230, 230});
-        formats(values, LogbookEntry.VALUE_COLUMNS);
+                new int[] {104, 80, 48, 66, 66, 80, 74, 88, 74, 96, 92, 92, 120, 190, 230});
+        formats(values, VALUES, LogbookEntry.VALUE_COLUMNS);
+        values.sheet.setColumnHidden(
+                LogbookEntry.VALUE_COLUMNS.indexOf(LogbookEntry.KEY), true); // for the program only
         Page lots = table(
                 workbook,
                 looks,
@@ -53,7 +59,7 @@ final class LogbookPages {
                 "Where each bottle was used, and measured over predicted where it was in; 1 is as predicted.",
                 LogbookLots.COLUMNS,
                 new int[] {210, 70, 82, 82, 64, 190, 190});
-        formats(lots, LogbookLots.COLUMNS);
+        formats(lots, LOTS, LogbookLots.COLUMNS);
         Page charts = new Page(workbook.createSheet("Charts"), looks);
         charts.text(0, 0, "Measured over predicted", Face.TITLE);
         charts.height(0, 24);
@@ -83,20 +89,21 @@ final class LogbookPages {
         page.columns(widths);
         page.text(0, 0, title, Face.TITLE);
         page.height(0, 24);
-        page.text(1, 0, sentence, Face.QUIET);
-        for (int c = 0; c < columns.size(); c++) page.text(HEAD, c, columns.get(c), head(columns.get(c)));
+        boolean wide = Arrays.stream(widths).sum() > WIDEST_ON_ONE_PAGE;
+        page.text(1, wide ? 1 : 0, sentence, Face.QUIET); // the first column is printed again on the second page
+        for (int c = 0; c < columns.size(); c++) page.text(HEAD, c, columns.get(c), head(face(columns.get(c), cell)));
         page.height(HEAD, 26);
         page.sheet.createFreezePane(1, HEAD + 1);
         page.sheet.setAutoFilter(new CellRangeAddress(HEAD, 20_000, 0, columns.size() - 1));
         names.give(cell, page.address(HEAD, 0));
-        PrintSetup.pages(page.sheet, true, HEAD);
+        PrintSetup.pages(page.sheet, HEAD, wide ? 2 : 1);
         return page;
     }
 
     /** Formats of whole columns, so that rows added later look alike. */
-    private static void formats(Page page, List<String> columns) {
+    private static void formats(Page page, String cell, List<String> columns) {
         for (int c = 0; c < columns.size(); c++) {
-            Face face = face(columns.get(c));
+            Face face = face(columns.get(c), cell);
             page.sheet.setDefaultColumnStyle(c, page.looks.of(face));
             for (int r : new int[] {0, 1}) { // the title's cells keep their own
                 if (page.sheet.getRow(r).getCell(c) == null && c > 0) page.cell(r, c, Face.TEXT);
@@ -105,14 +112,14 @@ final class LogbookPages {
     }
 
     /** A heading stands where its column's entries do. */
-    private static Face head(String column) {
-        Face below = face(column);
+    private static Face head(Face below) {
         Face head = Face.HEAD.wrap();
         if (below.align() == HorizontalAlignment.RIGHT) return head.right();
         return below.indented() ? head.indent() : head;
     }
 
-    private static Face face(String column) {
+    /** {@code page} is the name of its heading cell: what is wanted and measured is text on one page and numbers on another. */
+    private static Face face(String column, String page) {
         Face line = Face.TEXT.points(9);
         return switch (column) {
             case LogbookEntry.DATE, "last used" -> line.left().format("yyyy-mm-dd");
@@ -122,7 +129,9 @@ final class LogbookPages {
             case "worst miss" -> line.right().format("0.00");
             case "chance in 100" -> line.right().format("0.0");
             case "wanted", "± tolerance", "predicted", "± u predicted", "measured", "± u measured" ->
-                line.wrap().format("0.00000");
+                page.equals(VALUES)
+                        ? line.right().format("[>=1]0.000;0.00000")
+                        : line.wrap().indent();
             case LogbookEntry.MUA_RATIO, LogbookEntry.MUSP_RATIO -> line.right().format("0.0000");
             // These stand off from the number before them.
             case "verdict", "method", "quantity", "notes" -> line.wrap().indent();

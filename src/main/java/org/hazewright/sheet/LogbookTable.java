@@ -91,6 +91,14 @@ final class LogbookTable {
         return last;
     }
 
+    /** The names of all columns, people's own too, from left to right. */
+    List<String> columns() {
+        return columns.entrySet().stream()
+                .sorted(Map.Entry.comparingByValue())
+                .map(Map.Entry::getKey)
+                .toList();
+    }
+
     int column(String name) {
         return columns.get(name);
     }
@@ -200,7 +208,7 @@ final class LogbookTable {
         return all;
     }
 
-    private static Object value(Cell cell) {
+    static Object value(Cell cell) {
         if (cell == null) return null;
         CellType type = cell.getCellType() == CellType.FORMULA ? cell.getCachedFormulaResultType() : cell.getCellType();
         return switch (type) {

@@ -2,6 +2,7 @@ package org.hazewright.sheet;
 
 import org.apache.poi.ss.usermodel.PageMargin;
 import org.apache.poi.ss.usermodel.PaperSize;
+import org.apache.poi.ss.util.CellRangeAddress;
 import org.apache.poi.xssf.usermodel.XSSFSheet;
 
 /** How sheets go to paper: A4, with margins that fit Letter too, since whatever is chosen is scaled to fit. */
@@ -18,7 +19,14 @@ final class PrintSetup {
     /** As wide as the page, as many pages long as it takes, the rows up to {@code headRow} on each. */
     static void pages(XSSFSheet sheet, boolean landscape, int headRow) {
         fit(sheet, landscape, 0);
-        sheet.setRepeatingRows(new org.apache.poi.ss.util.CellRangeAddress(headRow, headRow, -1, -1));
+        sheet.setRepeatingRows(new CellRangeAddress(headRow, headRow, -1, -1));
+    }
+
+    /** A table so many landscape pages wide, as many long as it takes, its headings and its first column on each. */
+    static void pages(XSSFSheet sheet, int headRow, int pagesWide) {
+        pages(sheet, true, headRow);
+        sheet.getPrintSetup().setFitWidth((short) pagesWide);
+        if (pagesWide > 1) sheet.setRepeatingColumns(new CellRangeAddress(-1, -1, 0, 0));
     }
 
     private static void fit(XSSFSheet sheet, boolean landscape, int pagesHigh) {

@@ -52,16 +52,8 @@ final class SourcesPage {
                 page.text(row, 4, "", line);
                 page.text(row, 5, "", line);
             } else {
-                page.number(
-                        row,
-                        4,
-                        i.uncertainty().absorption(),
-                        line.format("0.0 %").right());
-                page.number(
-                        row,
-                        5,
-                        i.uncertainty().scattering(),
-                        line.format("0.0 %").right());
+                share(page, row, 4, i.uncertainty().absorption(), i.absorption().isPresent());
+                share(page, row, 5, i.uncertainty().scattering(), i.scattering().isPresent());
             }
             String words = i.source().citation() + model(i);
             page.text(row, LAST, words, line.indent());
@@ -91,6 +83,13 @@ final class SourcesPage {
         }
         page.sheet.createFreezePane(0, 4);
         PrintSetup.pages(page.sheet, true, 3);
+    }
+
+    /** A dash where there is nothing to be uncertain of. */
+    private static void share(Page page, int row, int column, double u, boolean figures) {
+        Face face = Face.WRAPPED.rule().format("0.0 %").right();
+        if (u == 0 && !figures) page.text(row, column, "—", face);
+        else page.number(row, column, u, face);
     }
 
     /** How the ingredient scatters, and by which model its particles crowd. */

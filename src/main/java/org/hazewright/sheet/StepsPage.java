@@ -40,12 +40,13 @@ final class StepsPage {
     }
 
     void heading(String title, String summary) {
-        page.columns(36, 290, 92, 250, 50);
+        page.columns(36, 286, 104, 242, 50);
         page.text(0, 0, title, Face.TITLE);
         page.height(0, 24);
         page.sentence(1, 0, DONE, summary, Face.QUIET);
         String[] heads = {"no", "do", "at, for", "mind", "done"};
-        for (int c = 0; c < heads.length; c++) page.text(2, c, heads[c], c == MIND ? Face.HEAD.indent() : Face.HEAD);
+        for (int c = 0; c < heads.length; c++)
+            page.text(2, c, heads[c], c == MIND || c == WHEN ? Face.HEAD.indent() : Face.HEAD);
         row = 3;
     }
 
@@ -81,7 +82,7 @@ final class StepsPage {
         page.number(row, 0, number, LINE.centred());
         page.text(row, TEXT, text, LINE);
         String when = when(s, weighings);
-        page.text(row, WHEN, when, SMALL);
+        page.text(row, WHEN, when, SMALL.indent());
         List<String> mind = new ArrayList<>(s.handling());
         s.cautions().forEach(c -> mind.add("Caution: " + c));
         String words = String.join("\n", mind);
@@ -89,7 +90,7 @@ final class StepsPage {
         page.cell(row, DONE, LINE.centred().fillIn());
         page.height(row, 16);
         page.roomFor(row, text, LINE, TEXT, TEXT);
-        page.roomFor(row, when, SMALL, WHEN, WHEN);
+        page.roomFor(row, when + "  ", SMALL, WHEN, WHEN);
         page.roomFor(row, words, SMALL, MIND, MIND);
     }
 

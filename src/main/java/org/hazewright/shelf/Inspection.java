@@ -10,8 +10,8 @@ import org.hazewright.optics.Spectrum;
  * A second look at a shelf whose files all read well: figures that are allowed and still look wrong.
  *
  * <p>What it asks about: densities outside 0.6 to 6 g/mL; spectra that jump by more than a factor of {@value #JUMP} between
- * neighbours at most 20 nm apart; an uncertainty of 0 for a figure that is used, or one below 0.2 %; lots of an unknown ingredient
- * and lots past their date; conflicts with nobody; tables that end within the range people ask for most, 650 to 900 nm.
+ * neighbours at most 20 nm apart, or at one row against both of its neighbours, however far they are; an uncertainty of 0 for a figure that is used, or one below 0.2 %; lots of an unknown ingredient
+ * and lots past their date or drifting; conflicts with nobody; tables that end within the range people ask for most, 650 to 900 nm.
  */
 public final class Inspection {
     static final double JUMP = 4;
@@ -48,6 +48,7 @@ public final class Inspection {
                             i.id(),
                             "lot " + lot.number() + " is past its date, "
                                     + lot.expires().orElseThrow() + "."));
+                lot.drift().ifPresent(d -> doubts.add(new Doubt(i.id(), "lot " + lot.number() + " is drifting: " + d)));
             });
             if (i.blend().isEmpty()
                     && i.absorption().isEmpty()
@@ -69,7 +70,9 @@ public final class Inspection {
         for (int k = 1; k < nm.length; k++) {
             double low = Math.min(v[k - 1], v[k]);
             double high = Math.max(v[k - 1], v[k]);
-            if (nm[k] - nm[k - 1] <= 20 && high > 0.02 * most && high > JUMP * low) {
+            boolean alone = k + 1 < nm.length
+                    && (v[k] > JUMP * Math.max(v[k - 1], v[k + 1]) || JUMP * v[k] < Math.min(v[k - 1], v[k + 1]));
+            if ((nm[k] - nm[k - 1] <= 20 || alone) && high > 0.02 * most && high > JUMP * low) {
                 doubts.add(new Doubt(
                         i.id(),
                         s.name() + " jumps from " + Figures.significant(v[k - 1], 3) + " to "

@@ -194,6 +194,10 @@ final class Bottles {
 
     /** The same ingredient as a numbered lot that expires on a day. */
     static Ingredient lotOf(Ingredient i, String number, LocalDate expires) {
+        return lotOf(i, new Lot(i.id(), number, Optional.empty(), Optional.empty(), Optional.of(expires)));
+    }
+
+    static Ingredient lotOf(Ingredient i, Lot lot) {
         return new Ingredient(
                 i.id() + "-lot",
                 i.name(),
@@ -215,7 +219,7 @@ final class Bottles {
                 i.index(),
                 i.blend(),
                 i.making(),
-                Optional.of(new Lot(i.id(), number, Optional.empty(), Optional.empty(), Optional.of(expires))));
+                Optional.of(lot));
     }
 
     /** An ingredient in few words. */

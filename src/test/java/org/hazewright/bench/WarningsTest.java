@@ -91,6 +91,17 @@ class WarningsTest {
     }
 
     @Test
+    void aDriftingLotIsTold() {
+        Ingredient ink = Bottles.lotOf(Bottles.INK, "L7", DAY);
+        assertTrue(of(Warning.Kind.DRIFTING, recipe(Bottles.WATER, ink)).isEmpty());
+        Ingredient moving =
+                Bottles.lotOf(Bottles.INK, ink.lot().orElseThrow().drifting("absorption of it drifts: 3 % up."));
+        String told =
+                of(Warning.Kind.DRIFTING, recipe(Bottles.WATER, moving)).get(0).text();
+        assertTrue(told.contains("lot L7") && told.endsWith("drifts: 3 % up."), told);
+    }
+
+    @Test
     void hazardsOfPowderAzideBloodHardenerAndHeatAreTold() {
         List<String> gel = texts(recipe(Bottles.GELATIN, Bottles.WATER, Bottles.AZIDE, Bottles.GELATIN_POWDER));
         assertTrue(gel.stream().anyMatch(t -> t.startsWith("Dust (Sodium azide; Gelatin powder)")), gel.toString());

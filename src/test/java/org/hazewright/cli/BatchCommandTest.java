@@ -12,7 +12,7 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Map;
-import org.hazewright.bench.Batch;
+import org.hazewright.batch.Batch;
 import org.hazewright.files.BatchReader;
 import org.hazewright.files.BatchWriter;
 import org.hazewright.files.ShelfReader;
@@ -114,6 +114,75 @@ class BatchCommandTest {
         Batch now = read();
         double share = now.weighings().get(water + 1).massG() / emulsion;
         assertEquals(1.1, share, 0.01, "ten per cent more water takes about ten per cent more emulsion");
+    }
+
+    @Test
+    void nothingIsMeasuredOfABatchOfWhichNothingIsWeighed() {
+        String[] measure = {"batch", "measure", batch, "--method", "fit", "--value", "690,0.1,0.002,10,0.1"};
+        Ran early = run(measure);
+        assertEquals(2, early.status, early.out);
+        assertTrue(early.err.contains("Nothing of the batch b-1 is weighed yet"), early.err);
+        assertEquals(List.of(), read().measured());
+        run("batch", "weigh", batch, "--item", "1", "--grams", "1.0", "--keep-plan");
+        Ran half = run(measure);
+        assertEquals(0, half.status, half.err);
+        assertTrue(half.err.contains("No grams are recorded at weighings 2 "), half.err);
+        weighAsPlanned(1);
+        assertFalse(run(measure).err.contains("No grams"));
+    }
+
+    /** Measured again before a correction is poured, the values count for what is in the vessel. */
+    @Test
+    void aCorrectionThatIsNotPouredYetIsNotMeasured() {
+        weighAsPlanned(1.1);
+        Ran ran = run("correct", batch, "--chance", "0.5", "--capacity-ml", "2000", "--record");
+        assertEquals(0, ran.status, ran.err);
+        Ran measured = run("batch", "measure", batch, "--method", "fit", "--value", "690,0.1,0.002,11,0.1");
+        assertTrue(measured.err.contains("Nothing of correction 1 is weighed yet"), measured.err);
+        assertFalse(measured.err.contains("No grams"), measured.err);
+        assertEquals(0, read().measured().get(0).correction());
+    }
+
+    @Test
+    void aLotPastItsDateIsToldByTheNumberWrittenDown() throws IOException {
+        Path shelf = folder.resolve("shelf");
+        copy(Path.of("ingredients"), shelf);
+        Files.writeString(shelf.resolve("ink-demo-lot-K3.toml"), """
+                format = 1
+                id = "ink-demo-lot-K3"
+                lot_of = "ink-demo"
+                [lot]
+                number = "K3"
+                expires = 2026-02-01
+                drift = "absorption fell by 3 % in two months."
+                [source]
+                basis = "invented"
+                [uncertainty]
+                absorption = 0.03
+                scattering = 0.05
+                """);
+        int ink = 0;
+        while (!read().weighings().get(ink).ingredient().kind().equals("ink-demo")) ink++;
+        Ran weigh = run(
+                "batch",
+                "weigh",
+                batch,
+                "--ingredients",
+                shelf.toString(),
+                "--item",
+                "" + (ink + 1),
+                "--grams",
+                "1.0",
+                "--lot",
+                (ink + 1) + "=k3");
+        assertEquals(0, weigh.status, weigh.err);
+        Ran show = run("batch", "show", batch, "--ingredients", shelf.toString());
+        for (Ran ran : List.of(weigh, show)) {
+            assertTrue(ran.out.contains("lot K3, expired on 2026-02-01"), ran.out);
+            assertFalse(ran.out.contains("lot K3, lot K3"), ran.out);
+            assertTrue(ran.out.contains("lot K3, is drifting: absorption fell by 3 % in two months."), ran.out);
+        }
+        assertFalse(run("batch", "show", batch).out.contains("expired"), "this shelf does not know the lot");
     }
 
     @Test

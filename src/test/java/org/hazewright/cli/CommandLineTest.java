@@ -201,6 +201,25 @@ class CommandLineTest {
     }
 
     @Test
+    void theListHoldsMaterialsAndShowKnowsThem() {
+        Ran list = run("ingredients", "list");
+        assertEquals(0, list.status, list.err);
+        assertTrue(list.out.contains("lipid-emulsion-20") && list.out.contains("fused-silica"), list.out);
+        Ran shown = run("ingredients", "show", "fused-silica");
+        assertEquals(0, shown.status, shown.err);
+        assertTrue(shown.out.contains("1.4533"), "Malitson (1965) at 800 nm, 1.45332: " + shown.out);
+        assertTrue(shown.out.contains("Malitson"), shown.out);
+    }
+
+    @Test
+    void anAverageThatDoesNotSettleSaysSo() {
+        String[] wide = {"particles", "tio2-rutile", "--in", "water", "--lognormal-nm", "300,1.9", "--at", "633"};
+        assertTrue(run(wide).out.contains("are known to 0.0"), run(wide).out);
+        wide[5] = "300,1.05";
+        assertFalse(run(wide).out.contains("are known to"), run(wide).out);
+    }
+
+    @Test
     void aBrokenShelfIsBlamedFileByFile() throws IOException {
         Path shelf = Files.createDirectories(folder.resolve("shelf"));
         Files.writeString(shelf.resolve("soup.toml"), "format = 1\nid = \"soup\"\nname = \n");

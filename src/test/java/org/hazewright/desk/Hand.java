@@ -57,6 +57,28 @@ final class Hand {
         Stagehand.pulse();
     }
 
+    /** Takes hold of a point of a node. */
+    void grab(Node in, double x, double y) {
+        Point2D at = Stagehand.onUi(() -> in.localToScreen(x, y));
+        Stagehand.ui(() -> robot.mouseMove(at));
+        Stagehand.pulse();
+        Stagehand.ui(() -> robot.mousePress(MouseButton.PRIMARY));
+        Stagehand.pulse();
+    }
+
+    /** Moves by so many px on the screen, in two steps. */
+    void moveBy(double dx, double dy) {
+        for (int k = 0; k < 2; k++) {
+            Stagehand.ui(() -> robot.mouseMove(robot.getMouseX() + dx / 2, robot.getMouseY() + dy / 2));
+            Stagehand.pulse();
+        }
+    }
+
+    void letGo() {
+        Stagehand.ui(() -> robot.mouseRelease(MouseButton.PRIMARY));
+        Stagehand.pulse();
+    }
+
     void click(Node node) {
         Bounds b = Stagehand.onUi(() -> node.localToScreen(node.getBoundsInLocal()));
         Stagehand.ui(() -> {

@@ -69,10 +69,20 @@ final class Stagehand {
 
     /** A window of so many px on the shelf of the program, with a memory of its own. */
     static Window open(Path memory, double w, double h, Optional<Path> file, Optional<Chooser> chooser) {
+        return open(memory, w, h, Optional.empty(), file, chooser);
+    }
+
+    /** The same on the shelf of a folder, with nothing to choose files with. */
+    static Window openOn(Path memory, double w, double h, Path shelf) {
+        return open(memory, w, h, Optional.of(shelf), Optional.empty(), Optional.of(new PlannedChooser()));
+    }
+
+    private static Window open(
+            Path memory, double w, double h, Optional<Path> shelf, Optional<Path> file, Optional<Chooser> chooser) {
         startToolkit();
         return onUi(() -> {
-            Desk desk = new Desk(
-                    Work.threaded(Platform::runLater), Optional.empty(), Remembered.in(memory, memory.resolve("work")));
+            Desk desk =
+                    new Desk(Work.threaded(Platform::runLater), shelf, Remembered.in(memory, memory.resolve("work")));
             Window window = new Window(new Stage(), desk, new Look(), chooser);
             window.stage().setWidth(w);
             window.stage().setHeight(h);

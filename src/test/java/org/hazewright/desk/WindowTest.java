@@ -14,10 +14,8 @@ import java.util.List;
 import java.util.Optional;
 import java.util.function.Predicate;
 import javafx.scene.Node;
-import javafx.scene.Parent;
 import javafx.scene.control.Button;
 import javafx.scene.control.Labeled;
-import javafx.scene.control.ScrollPane;
 import javafx.scene.input.KeyCode;
 import javafx.scene.layout.Region;
 import org.hazewright.brief.Brief;
@@ -89,26 +87,11 @@ class WindowTest {
     }
 
     private List<Node> all(Predicate<Node> which) {
-        return Stagehand.onUi(() -> {
-            List<Node> found = new ArrayList<>();
-            collect(window.stage().getScene().getRoot(), which, found);
-            return found;
-        });
-    }
-
-    private static void collect(Node node, Predicate<Node> which, List<Node> found) {
-        if (!node.isVisible()) return;
-        if (which.test(node)) found.add(node);
-        if (node instanceof Parent p) p.getChildrenUnmodifiable().forEach(n -> collect(n, which, found));
+        return new Eyes(window).all(which);
     }
 
     private Button button(String text) {
-        return (Button) all(n -> n instanceof Button b
-                        && b.getText() != null
-                        && b.getText().contains(text))
-                .stream()
-                .findFirst()
-                .orElseThrow(() -> new AssertionError("There is no button “" + text + "”."));
+        return new Eyes(window).button(text);
     }
 
     private void focus(Node node) {
@@ -197,6 +180,31 @@ class WindowTest {
         Stagehand.untilSettled(window);
         assertEquals(before, wanted(830), "one drag is one step of undo");
         assertEquals(first.massesG(), shown().recipe().massesG());
+    }
+
+    /** A notice that comes while a box is held moves the plot, not the value. */
+    @Test
+    void whatGrowsAroundThePlotLeavesAHeldBoxAlone() {
+        open(Optional.of(bath()));
+        double before = wanted(830);
+        SpectraPlot plot = Stagehand.onUi(() -> window.spectra().plot());
+        hand.grab(window.spectra().surface(), plot.xOf(830), plot.yOf(Point.Quantity.MUA, before));
+        hand.moveBy(0, -10);
+        double raised = wanted(830);
+        assertTrue(raised > before);
+        double top = Stagehand.onUi(
+                () -> window.spectra().surface().localToScreen(0, 0).getY());
+        Stagehand.ui(() -> window.desk().notices().tell(Notice.told("test", "something to be told")));
+        Stagehand.pulse();
+        assertTrue(
+                Stagehand.onUi(() ->
+                                window.spectra().surface().localToScreen(0, 0).getY())
+                        > top + 10,
+                "the notice did not move the plot");
+        hand.moveBy(0, 2);
+        hand.moveBy(0, -2);
+        assertEquals(raised, wanted(830), 0.01 * raised);
+        hand.letGo();
     }
 
     @Test
@@ -624,32 +632,6 @@ class WindowTest {
         Stagehand.ui(button("use the shelf of the program")::fire);
         Stagehand.untilSettled(window);
         assertNotNull(shown());
-    }
-
-    @Test
-    void everythingThatTakesTheFocusHasAName() {
-        open(Optional.of(bath()));
-        named("desk");
-        Stagehand.ui(() -> window.openShelf());
-        Stagehand.pulse();
-        named("shelf");
-        Stagehand.ui(() -> {
-            window.closeShelf();
-            window.openLogbook();
-        });
-        Stagehand.pulse();
-        named("logbook");
-    }
-
-    private void named(String where) {
-        for (Node n : all(Node::isFocusTraversable)) {
-            if (n instanceof ScrollPane) continue;
-            String name = Stagehand.onUi(() ->
-                    n.getAccessibleText() != null && !n.getAccessibleText().isBlank()
-                            ? n.getAccessibleText()
-                            : n instanceof Labeled l && l.getText() != null ? l.getText() : "");
-            assertFalse(name.isBlank(), where + ": " + n + " has no name for a screen reader");
-        }
     }
 
     @Test

@@ -263,7 +263,11 @@ class BriefReaderTest {
                         "keep one"),
                 of(SHORT, "mua_per_cm = 0.1", "▶mua_tolerance = 0.1", "without mua_per_cm"),
                 of(SHORT, "mua_per_cm = 0.1", "mua_per_cm = 0.1\n▶weight = 0", "above 0"),
-                of(SHORT, "mua_per_cm = 0.1", "▶mua_per_mm = 0.1", "Perhaps mua_per_cm is meant"),
+                of(
+                        SHORT,
+                        "mua_per_cm = 0.1",
+                        "▶mua_per_mm = 0.1",
+                        "Perhaps mua_per_cm is meant: 10 times the number per mm"),
                 of(SHORT, "wavelength_nm = 690", "▶wavelength_nm = 0.69", "between 100 and 20000"),
                 of(
                                 SHORT,
@@ -280,7 +284,11 @@ class BriefReaderTest {
                         "[shelf]\nuse = [\"a\"]\navoid = [\"b\", ▶\"a\"]\n[[target]]",
                         "in use and in avoid"),
                 of(SHORT, "[[target]]", "▶[balance]\ncapacity_g = 0.001\n[[target]]", "not above its smallest load"),
-                of(SHORT, "[[target]]", "[balance]\n▶readability_mg = 1\n[[target]]", "Perhaps readability_g is meant"),
+                of(
+                        SHORT,
+                        "[[target]]",
+                        "[balance]\n▶readability_mg = 1\n[[target]]",
+                        "Perhaps readability_g is meant: a thousandth"),
                 of(SHORT, "[[target]]", "▶[[phantom]]\nname = \"A\"\n[[target]]", "use the command series"),
                 of(TISSUE, "[690, 760, 830]", "[690, ▶690]", "stands twice"),
                 of(TISSUE, "[690, 760, 830]", "[690, ▶0.8]", "between 100 and 20000"),

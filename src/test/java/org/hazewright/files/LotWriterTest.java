@@ -65,6 +65,27 @@ class LotWriterTest {
     }
 
     @Test
+    void aLotThatDriftsSaysSoWhenItIsReadAgain() throws IOException {
+        Path shelf = shelf();
+        Ingredient ink = ShelfReader.read(shelf).require("ink-demo");
+        Lot lot = new Lot(
+                "ink-demo", "K9", Optional.empty(), Optional.empty(), Optional.of(java.time.LocalDate.of(2026, 2, 1)));
+        Factors after = new Factors(
+                List.of(Factor.of(ink, Quantity.ABSORPTION), Factor.of(ink, Quantity.SCATTERING)),
+                new double[] {1.02, 1},
+                new double[][] {{0.0001, 0}, {0, 0.0004}});
+        Source source = new Source(Source.Basis.MEASURED, "learned in a test");
+        String drift = "absorption of \"it\" drifts: 3 % up.";
+        LotWriter.write(
+                shelf,
+                new NewLot(LotWriter.id("ink-demo", "K9"), lot.drifting(drift), source).learned(ink, after),
+                List.of());
+        Lot read = ShelfReader.read(shelf).require("ink-demo-lot-K9").lot().orElseThrow();
+        assertEquals(Optional.of(drift), read.drift());
+        assertEquals(lot.expires(), read.expires());
+    }
+
+    @Test
     void aMagnitudeOfAbsorptionWithoutParticlesIsRefusedAtItsLine() throws IOException {
         Path shelf = shelf();
         Path file = shelf.resolve("dye-red-demo.toml");

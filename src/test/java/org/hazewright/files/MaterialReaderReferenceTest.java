@@ -84,6 +84,23 @@ class MaterialReaderReferenceTest {
         }
     }
 
+    /** Vegetable oil loses 0.0038 of its index when it is warmed by ten degrees (refractometry, common practice, from memory). */
+    @Test
+    void anIndexMovesWithTemperatureAsItsFileSays() {
+        String oil = "form = \"constant\"\nn = 1.4735\nk = 0.001\nfrom_nm = 400\nto_nm = 900\n";
+        RefractiveIndex warmed =
+                material(oil + "dn_dt_per_c = -3.8e-4\nat_c = 20").index();
+        assertEquals(1.4735, warmed.at(600, 20).n(), 1e-15);
+        assertEquals(1.4697, warmed.at(600, 30).n(), 1e-12);
+        assertEquals(0.001, warmed.at(600, 30).k());
+        assertEquals(400, warmed.fromNm());
+        assertEquals(900, warmed.toNm());
+        assertEquals(1.4735, material(oil).index().at(600, 30).n(), 0, "without a coefficient it stays");
+        assertThrows(Refusal.class, () -> material(oil + "dn_dt_per_c = -3.8e-4"));
+        assertThrows(Refusal.class, () -> material(oil + "dn_dt_per_c = -3.8\nat_c = 20"));
+        assertThrows(Refusal.class, () -> material("form = \"iapws-water\"\ndn_dt_per_c = -1e-4\nat_c = 20"));
+    }
+
     @Test
     void aRangeThatAFileNarrowsIsKeptTo() {
         RefractiveIndex water =

@@ -16,7 +16,7 @@ import java.util.concurrent.CountDownLatch;
 import java.util.concurrent.FutureTask;
 import javafx.application.Platform;
 import javafx.stage.Stage;
-import org.hazewright.bench.Batch;
+import org.hazewright.batch.Batch;
 import org.hazewright.brief.Point;
 import org.hazewright.cli.OneLine;
 import org.hazewright.desk.Window;

@@ -7,6 +7,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
+import org.junit.jupiter.params.provider.ValueSource;
 
 /**
  * Populations and crowding against figures computed once from the published formulas in 40-digit arithmetic, by two codes that are
@@ -68,23 +69,40 @@ class PopulationReferenceTest {
     }
 
     /**
-     * Lipid emulsion in the tissue range: µs' falls behind the straight line by at most 2 % (Di Ninni, Martelli & Zaccanti, Biomed.
-     * Opt. Express 2, 2265, 2011), here at 2.3 % of oil by volume, µs' near 22 /cm; their own uncertainty of 1 % is allowed on top.
+     * Spheres far smaller than the wavelength: every direction sees S(0), so µs and µs' lose the same factor (1 − φ)⁴/(1 + 2φ)², the packing
+     * factor of Twersky, J. Opt. Soc. Am. 65, 524 (1975), for spheres. At q d ≤ 0.04 the next term of S, of order (q d)², is below 1e-3.
      */
+    @ParameterizedTest
+    @ValueSource(doubles = {0.01, 0.1, 0.25, 0.45})
+    void smallSpheresLoseThePackingFactor(double phi) {
+        Population tiny = new Population(new SizeDistribution.Single(4));
+        ParticleOptics alone = tiny.perVolumeFraction(Index.real(1.47), 1.33, 800);
+        ParticleOptics crowded = tiny.perVolumeFraction(Index.real(1.47), 1.33, 800, phi, new Crowding.PercusYevick());
+        double packing = Math.pow(1 - phi, 4) / Math.pow(1 + 2 * phi, 2);
+        assertEquals(packing, crowded.muspPerCm() / alone.muspPerCm(), 1e-3 * packing);
+        assertEquals(packing, crowded.musPerCm() / alone.musPerCm(), 1e-3 * packing);
+    }
+
+    /** A suspension of two sizes: each sees S of its own diameter at the whole volume fraction (Pedersen 1994), so its terms add. */
     @Test
-    void emulsionFallsBehindByNoMoreThanPublished() {
-        Population droplets = new Population(new SizeDistribution.LogNormal(195, 1.465));
-        Index oil = Index.real(1.451 + 1.154e4 / (751.0 * 751) - 1.132e9 / Math.pow(751, 4));
-        double alone = droplets.perVolumeFraction(oil, water(751), 751).muspPerCm();
-        double before = 1;
-        for (double phi : new double[] {0.002, 0.005, 0.01, 0.023}) {
-            double ratio = droplets.perVolumeFraction(oil, water(751), 751, phi, new Crowding.PercusYevick())
-                            .muspPerCm()
-                    / alone;
-            assertTrue(ratio < before, "the more, the less each scatters");
-            assertTrue(ratio > 1 - 0.03, "at " + phi + " it is " + ratio);
-            before = ratio;
-        }
+    void eachSizeSeesItsOwnNeighbours() {
+        double phi = 0.2;
+        SizeDistribution both =
+                new SizeDistribution.Histogram(new double[] {199.9, 200.1, 399.9, 400.1}, new double[] {2, 0, 1});
+        double expected = 0;
+        double volumes = 2 * Math.pow(200, 3) + Math.pow(400, 3);
+        for (double d : new double[] {200, 400})
+            expected += (d == 200 ? 2 : 1)
+                    * Math.pow(d, 3)
+                    / volumes
+                    * new Population(new SizeDistribution.Single(d))
+                            .perVolumeFraction(
+                                    Index.real(POLYSTYRENE_633), water(633), 633, phi, new Crowding.PercusYevick())
+                            .muspPerCm();
+        double found = new Population(both)
+                .perVolumeFraction(Index.real(POLYSTYRENE_633), water(633), 633, phi, new Crowding.PercusYevick())
+                .muspPerCm();
+        assertEquals(expected, found, 1e-5 * expected, "bins of 0.2 nm are as good as one size");
     }
 
     /** What the host takes from the contrast, the particles lose: µs' in the Rayleigh–Gans limit goes with (n_p − n_h)². */
@@ -111,6 +129,18 @@ class PopulationReferenceTest {
         Refusal refusal = assertThrows(
                 Refusal.class,
                 () -> population.perVolumeFraction(Index.real(1.58), 1.33, 633, 0.5, new Crowding.PercusYevick()));
-        assertTrue(refusal.getMessage().contains("0.45"), refusal.getMessage());
+        assertTrue(refusal.getMessage().contains("above 0.45, the limit of the Percus–Yevick"), refusal.getMessage());
+        population.perVolumeFraction(Index.real(1.58), 1.33, 633, 0.45, new Crowding.PercusYevick());
+        Crowding measured = new Crowding.Polynomial(new double[] {-1.2}, 0.03);
+        Refusal above = assertThrows(
+                Refusal.class, () -> population.perVolumeFraction(Index.real(1.58), 1.33, 633, 0.031, measured));
+        assertTrue(above.getMessage().contains("above 0.03, the largest that the measured"), above.getMessage());
+        double alone = population.perVolumeFraction(Index.real(1.58), 1.33, 633).muspPerCm();
+        assertEquals(
+                (1 - 1.2 * 0.03) * alone,
+                population
+                        .perVolumeFraction(Index.real(1.58), 1.33, 633, 0.03, measured)
+                        .muspPerCm(),
+                1e-12 * alone);
     }
 }

@@ -14,7 +14,7 @@ import org.junit.jupiter.params.provider.ValueSource;
  */
 class RefractiveIndexReferenceTest {
 
-    static final SellmeierIndex FUSED_SILICA = new SellmeierIndex(
+    static final ResonanceIndex FUSED_SILICA = ResonanceIndex.sellmeier(
             "fused silica",
             1,
             new double[] {0.6961663, 0.4079426, 0.8974794},
@@ -22,14 +22,14 @@ class RefractiveIndexReferenceTest {
             210,
             6700);
 
-    static final SellmeierIndex POLYSTYRENE =
-            new SellmeierIndex("polystyrene", 1, new double[] {1.4435}, new double[] {0.020216}, 436.8, 1052);
+    static final ResonanceIndex POLYSTYRENE =
+            ResonanceIndex.sellmeier("polystyrene", 1, new double[] {1.4435}, new double[] {0.020216}, 436.8, 1052);
 
-    static final PoleIndex RUTILE_O =
-            new PoleIndex("rutile, ordinary", 5.913, new double[] {0.2441}, new double[] {0.0803}, 430, 1530);
+    static final ResonanceIndex RUTILE_O =
+            ResonanceIndex.pole("rutile, ordinary", 5.913, new double[] {0.2441}, new double[] {0.0803}, 430, 1530);
 
-    static final PoleIndex RUTILE_E =
-            new PoleIndex("rutile, extraordinary", 7.197, new double[] {0.3322}, new double[] {0.0843}, 430, 1530);
+    static final ResonanceIndex RUTILE_E = ResonanceIndex.pole(
+            "rutile, extraordinary", 7.197, new double[] {0.3322}, new double[] {0.0843}, 430, 1530);
 
     /** Michels et al., Opt. Express 16, 5907, 2008. */
     static final CauchyIndex WATER_MICHELS = new CauchyIndex("water", 1.311, 1.154e4, -1.132e9, 350, 1100);
@@ -62,7 +62,7 @@ class RefractiveIndexReferenceTest {
     @ParameterizedTest
     @ValueSource(doubles = {400, 450, 500, 589.3, 632.8, 700, 800, 900, 1000, 1100})
     void waterMeasuredElsewhere(double nm) {
-        SellmeierIndex measured = new SellmeierIndex(
+        ResonanceIndex measured = ResonanceIndex.sellmeier(
                 "water",
                 1,
                 new double[] {0.5684027565, 0.1726177391, 0.02086189578, 0.1130748688},
@@ -127,7 +127,8 @@ class RefractiveIndexReferenceTest {
     @Test
     void poleInsideTheRangeIsRefused() {
         Refusal refusal = assertThrows(
-                Refusal.class, () -> new SellmeierIndex("glass", 1, new double[] {1}, new double[] {0.25}, 400, 700));
+                Refusal.class,
+                () -> ResonanceIndex.sellmeier("glass", 1, new double[] {1}, new double[] {0.25}, 400, 700));
         assertTrue(refusal.getMessage().contains("500 nm"), refusal.getMessage());
     }
 

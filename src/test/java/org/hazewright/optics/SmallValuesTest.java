@@ -101,20 +101,20 @@ class SmallValuesTest {
         double[] c = {0.01};
         for (List<RefractiveIndex> three : List.of(
                 List.<RefractiveIndex>of(
-                        new PoleIndex("a", 2, b, c, 300, 900),
-                        new PoleIndex("a", 2, b, c, 300, 900),
-                        new PoleIndex("a", 2.1, b, c, 300, 900),
-                        new PoleIndex("a", 2, new double[] {1.1}, c, 300, 900),
-                        new PoleIndex("a", 2, b, new double[] {0.02}, 300, 900),
-                        new PoleIndex("b", 2, b, c, 300, 900),
+                        ResonanceIndex.pole("a", 2, b, c, 300, 900),
+                        ResonanceIndex.pole("a", 2, b, c, 300, 900),
+                        ResonanceIndex.pole("a", 2.1, b, c, 300, 900),
+                        ResonanceIndex.pole("a", 2, new double[] {1.1}, c, 300, 900),
+                        ResonanceIndex.pole("a", 2, b, new double[] {0.02}, 300, 900),
+                        ResonanceIndex.pole("b", 2, b, c, 300, 900),
                         new ConstantIndex("a", 1.5, 0, 300, 900)),
                 List.<RefractiveIndex>of(
-                        new SellmeierIndex("a", 2, b, c, 300, 900),
-                        new SellmeierIndex("a", 2, b, c, 300, 900),
-                        new SellmeierIndex("a", 2.1, b, c, 300, 900),
-                        new SellmeierIndex("a", 2, new double[] {1.1}, c, 300, 900),
-                        new SellmeierIndex("a", 2, b, new double[] {0.02}, 300, 900),
-                        new SellmeierIndex("b", 2, b, c, 300, 900),
+                        ResonanceIndex.sellmeier("a", 2, b, c, 300, 900),
+                        ResonanceIndex.sellmeier("a", 2, b, c, 300, 900),
+                        ResonanceIndex.sellmeier("a", 2.1, b, c, 300, 900),
+                        ResonanceIndex.sellmeier("a", 2, new double[] {1.1}, c, 300, 900),
+                        ResonanceIndex.sellmeier("a", 2, b, new double[] {0.02}, 300, 900),
+                        ResonanceIndex.sellmeier("b", 2, b, c, 300, 900),
                         new ConstantIndex("a", 1.5, 0, 300, 900)))) {
             assertEquals(three.get(0), three.get(1));
             assertEquals(three.get(0).hashCode(), three.get(1).hashCode());
@@ -128,17 +128,17 @@ class SmallValuesTest {
         // By hand at 500 nm: λ² = 0.25 µm²; 2 + 1/0.24 and 2 + 0.25/0.24.
         assertEquals(
                 Math.sqrt(2 + 1 / 0.24),
-                new PoleIndex("a", 2, b, c, 300, 900).at(500, 20).n(),
+                ResonanceIndex.pole("a", 2, b, c, 300, 900).at(500, 20).n(),
                 1e-14);
         assertEquals(
                 Math.sqrt(2 + 0.25 / 0.24),
-                new SellmeierIndex("a", 2, b, c, 300, 900).at(500, 20).n(),
+                ResonanceIndex.sellmeier("a", 2, b, c, 300, 900).at(500, 20).n(),
                 1e-14);
-        refused(() -> new PoleIndex("a", 2, b, new double[] {0.01, 0.02}, 300, 900));
-        refused(() -> new PoleIndex("a", 2, new double[] {Double.NaN}, c, 300, 900));
-        refused(() -> new PoleIndex("a", -9, b, c, 300, 900).at(800, 20));
+        refused(() -> ResonanceIndex.pole("a", 2, b, new double[] {0.01, 0.02}, 300, 900));
+        refused(() -> ResonanceIndex.pole("a", 2, new double[] {Double.NaN}, c, 300, 900));
+        refused(() -> ResonanceIndex.pole("a", -9, b, c, 300, 900).at(800, 20));
         refused(() -> new ConstantIndex("a", 1.5, 0, 900, 300));
-        new PoleIndex("a", 2, new double[] {0}, new double[] {0.25}, 300, 900); // no pole without a strength
+        ResonanceIndex.pole("a", 2, new double[] {0}, new double[] {0.25}, 300, 900); // no pole without a strength
     }
 
     @Test

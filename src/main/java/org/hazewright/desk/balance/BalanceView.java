@@ -2,7 +2,6 @@ package org.hazewright.desk.balance;
 
 import java.util.List;
 import java.util.Optional;
-import java.util.stream.Collectors;
 import javafx.application.Platform;
 import javafx.geometry.Pos;
 import javafx.scene.Node;
@@ -55,6 +54,7 @@ public final class BalanceView extends BorderPane {
         this.finish = finish;
         getStyleClass().add("balance-view");
         Label reading = Say.label("reads", "reads-label");
+        grams.setMinWidth(USE_PREF_SIZE);
         reads.getStyleClass().setAll("text-input", "text-field", "reads");
         StillCaret.in(reads);
         reads.setAccessibleText("grams that the balance shows");
@@ -246,12 +246,7 @@ public final class BalanceView extends BorderPane {
         if (o == null) return;
         String words = o.meets()
                 ? "Chance to land inside every tolerance: " + Words.times(o.chance()) + " in 100"
-                : "✕ "
-                        + o.predicted().stream()
-                                .filter(p -> !p.inside())
-                                .map(p -> Words.of(p.point()) + (p.miss() > 0 ? " lands high" : " lands low"))
-                                .collect(Collectors.joining(", "))
-                        + ", outside its tolerance.";
+                : "✕ " + Words.outside(o.predicted());
         words += weighing.moreBaseProperty()
                 .get()
                 .map(g -> " " + Words.grams(g, weighing.balance()) + " g more "

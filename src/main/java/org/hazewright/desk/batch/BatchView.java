@@ -3,6 +3,7 @@ package org.hazewright.desk.batch;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.Set;
 import javafx.geometry.Pos;
 import javafx.scene.Node;
 import javafx.scene.control.Button;
@@ -17,19 +18,21 @@ import javafx.scene.layout.HBox;
 import javafx.scene.layout.Priority;
 import javafx.scene.layout.Region;
 import javafx.scene.layout.VBox;
-import org.hazewright.bench.Batch;
-import org.hazewright.bench.Correction;
+import org.hazewright.batch.Batch;
+import org.hazewright.batch.Correction;
 import org.hazewright.bench.Weighing;
 import org.hazewright.desk.model.MadeBatch;
 import org.hazewright.desk.model.Words;
 import org.hazewright.desk.parts.Chooser;
 import org.hazewright.desk.parts.ErrorLine;
 import org.hazewright.desk.parts.Field;
+import org.hazewright.desk.parts.Room;
 import org.hazewright.desk.parts.Say;
 import org.hazewright.desk.parts.Word;
 import org.hazewright.mixture.Item;
 import org.hazewright.mixture.Stock;
 import org.hazewright.optics.Figures;
+import org.hazewright.shelf.Ingredient;
 
 /** The view of a batch: weighed on the left, landing and measured values in the middle, what they say on the right. */
 public final class BatchView extends BorderPane {
@@ -52,11 +55,13 @@ public final class BatchView extends BorderPane {
                 made.batchProperty().get().plan().base().making().meltC().isPresent();
         Node heating = heating();
         Say.show(heating, heated);
-        setLeft(column("batch-left", "side-left", Say.place("Weighed"), weighed, heating, who()));
+        BorderPane columns = new BorderPane();
+        setCenter(new Room(columns, 99, 30));
+        columns.setLeft(column("batch-left", "side-left", Say.place("Weighed"), weighed, heating, who()));
         VBox middle = new VBox(Say.place("Landing and measured values"), table, complaint);
         middle.getStyleClass().addAll("place", "gap-m");
-        setCenter(scrolled(middle));
-        setRight(column("batch-right", "side-right", Say.place("What it says"), says, puts, teaches));
+        columns.setCenter(scrolled(middle));
+        columns.setRight(column("batch-right", "side-right", Say.place("What it says"), says, puts, teaches));
         made.batchProperty().addListener((p, before, now) -> show());
         made.seenProperty().addListener((p, before, now) -> show());
         made.correctionProperty().addListener((p, before, now) -> puts());
@@ -190,7 +195,7 @@ public final class BatchView extends BorderPane {
                 .ifPresentOrElse(
                         v -> {
                             says.getChildren().add(Say.heading("Measured against predicted"));
-                            says.getChildren().add(Say.wrapped(v.sentence()));
+                            says.getChildren().add(Say.wrapped(Words.spoken(v.sentence(), bottles())));
                         },
                         () -> says.getChildren()
                                 .add(Say.wrapped(
@@ -215,17 +220,25 @@ public final class BatchView extends BorderPane {
         }
     }
 
+    private Set<Ingredient> bottles() {
+        return made.batchProperty().get().asMade().massesG().keySet();
+    }
+
     /** Asks for a lot's number to keep a bottle's new figures under. */
     private Node keep(String ingredient) {
+        String bottle = bottles().stream()
+                .filter(i -> i.id().equals(ingredient))
+                .map(Words::inSentence)
+                .findFirst()
+                .orElse(ingredient);
         Field number = new Field(
                         () -> "", text -> text.isBlank() ? Optional.empty() : made.learn(ingredient, text), false)
-                .named("keep what was learned of " + ingredient + " as a lot: its number")
+                .named("keep what was learned of " + bottle + " as a lot: its number")
                 .styled("boxed")
                 .columns(7);
         number.setPromptText("lot number");
-        FlowPane line = new FlowPane(Say.quiet("keep as a lot of " + ingredient + ":"), number);
-        line.getStyleClass().add("flow");
-        return new VBox(line, new ErrorLine(number));
+        number.setMaxWidth(USE_PREF_SIZE);
+        return new VBox(Say.wrapped("keep as a lot of " + bottle + ":", "quiet"), number, new ErrorLine(number));
     }
 
     private Node heating() {
@@ -290,7 +303,7 @@ public final class BatchView extends BorderPane {
         }
         Correction c = made.correctionProperty().get().get();
         Batch b = made.batchProperty().get();
-        puts.getChildren().add(Say.wrapped(c.reason()));
+        puts.getChildren().add(Say.wrapped(Words.spoken(c.reason(), bottles())));
         for (Stock s : c.stocks())
             puts.getChildren()
                     .add(Say.wrapped("First make a stock: " + Words.grams(s.ingredientG(), b.balance()) + " g "
@@ -304,7 +317,7 @@ public final class BatchView extends BorderPane {
             row.setAlignment(Pos.BASELINE_LEFT);
             puts.getChildren().add(row);
         }
-        c.notes().forEach(n -> puts.getChildren().add(Say.wrapped("Mind: " + n, "quiet")));
+        c.notes().forEach(n -> puts.getChildren().add(Say.wrapped("Mind: " + Words.spoken(n, bottles()), "quiet")));
         if (c.outcome() == Correction.Outcome.ADD) {
             puts.getChildren()
                     .add(Say.wrapped(

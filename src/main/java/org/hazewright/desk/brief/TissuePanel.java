@@ -6,9 +6,12 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.stream.Collectors;
+import javafx.geometry.Pos;
 import javafx.scene.control.Button;
 import javafx.scene.control.Label;
 import javafx.scene.layout.GridPane;
+import javafx.scene.layout.HBox;
+import javafx.scene.layout.Priority;
 import javafx.scene.layout.VBox;
 import org.hazewright.brief.Tissue;
 import org.hazewright.desk.model.Desk;
@@ -58,18 +61,21 @@ final class TissuePanel extends VBox {
         Field field = new Field(() -> texts.get(what), text -> typed(what, text), true)
                 .named(what + (unit.isEmpty() ? "" : " in " + unit))
                 .styled("boxed")
-                .columns(what.equals("wavelengths") ? 11 : 5);
+                .columns(5);
         fields.put(what, field);
         int at = grid.getRowCount();
         Label name = Say.quiet(what);
         Label of = Say.label(unit, "quiet", "small");
         name.setMinWidth(USE_PREF_SIZE);
         of.setMinWidth(USE_PREF_SIZE);
-        grid.addRow(at, name, field);
-        if (what.equals("wavelengths")) {
+        if (what.equals("wavelengths")) { // a list needs the whole width
             name.setText("at, nm");
-            GridPane.setColumnSpan(field, 2);
-        } else grid.add(of, 2, at);
+            HBox line = new HBox(name, field);
+            line.setAlignment(Pos.BASELINE_LEFT);
+            line.getStyleClass().add("gap-s");
+            HBox.setHgrow(field, Priority.ALWAYS);
+            grid.add(line, 0, at, 3, 1);
+        } else grid.addRow(at, name, field, of);
         grid.add(new ErrorLine(field), 0, at + 1, 3, 1);
     }
 

@@ -5,6 +5,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.function.Consumer;
 import javafx.geometry.Pos;
+import javafx.geometry.VPos;
 import javafx.scene.Node;
 import javafx.scene.control.Label;
 import javafx.scene.control.ScrollPane;
@@ -100,7 +101,8 @@ public final class LogbookView extends BorderPane {
                     whole(l.who()),
                     whole(l.state()),
                     whole(l.landing(), "logbook-landing"),
-                    Say.wrapped(l.verdict()));
+                    Say.wrapped(room.spoken(l.verdict())));
+        grid.getChildren().forEach(n -> GridPane.setValignment(n, VPos.BASELINE));
         box.getChildren().add(grid);
         return box;
     }

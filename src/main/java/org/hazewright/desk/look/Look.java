@@ -10,6 +10,7 @@ import javafx.beans.property.SimpleDoubleProperty;
 import javafx.beans.property.SimpleObjectProperty;
 import javafx.scene.Parent;
 import javafx.scene.Scene;
+import javafx.scene.layout.Region;
 
 /**
  * The look that a scene follows: its palette and the size of its letters, from which every other size is taken.
@@ -50,6 +51,20 @@ public final class Look {
     public void larger(boolean yes) {
         double next = scale.get() * (yes ? 1.1 : 1 / 1.1);
         scale.set(Math.max(0.8, Math.min(2, Math.rint(next * 100) / 100)));
+    }
+
+    /** Gives a view the largest letters, up to those of the window, at which it is so many of them wide and high. */
+    public void fit(Region view, double wideEm, double highEm) {
+        view.styleProperty()
+                .bind(Bindings.createStringBinding(
+                        () -> {
+                            double room = Math.min(view.getWidth() / wideEm, view.getHeight() / highEm);
+                            double px = room > 0 ? Math.min(em.get(), room) : em.get();
+                            return String.format(Locale.ROOT, "-fx-font-size:%.1fpx;", Math.floor(2 * px) / 2);
+                        },
+                        view.widthProperty(),
+                        view.heightProperty(),
+                        em));
     }
 
     /** Dresses a scene and keeps it dressed. */

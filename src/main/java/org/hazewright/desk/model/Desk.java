@@ -11,7 +11,7 @@ import java.util.function.Consumer;
 import java.util.function.Function;
 import javafx.beans.property.ReadOnlyObjectProperty;
 import javafx.beans.property.ReadOnlyObjectWrapper;
-import org.hazewright.bench.Batch;
+import org.hazewright.batch.Batch;
 import org.hazewright.brief.Balance;
 import org.hazewright.brief.Brief;
 import org.hazewright.brief.SearchLimits;
@@ -60,7 +60,7 @@ public final class Desk {
         shelving = work.lane(Work.Haste.INTERRUPT);
         preparing = work.lane(Work.Haste.FINISH);
         shelf = new ReadOnlyObjectWrapper<>(ShelfState.reading(shelfFolder));
-        solving = new Solving(work);
+        solving = new Solving(work, this::spectra);
         papers = new Papers(work, edits, remembered, notices, () -> shelf.get().folder());
         edits.nowProperty().addListener((p, before, now) -> solve());
         foreseeing = new Foreseeing(this);

@@ -3,7 +3,7 @@ package org.hazewright.desk.model;
 import java.nio.file.Path;
 import java.util.Locale;
 import java.util.Optional;
-import org.hazewright.bench.Batch;
+import org.hazewright.batch.Batch;
 import org.hazewright.files.BatchWriter;
 import org.hazewright.files.CoefficientTable;
 import org.hazewright.files.RecipeReader;

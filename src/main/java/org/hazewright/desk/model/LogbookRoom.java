@@ -12,6 +12,7 @@ import java.util.Optional;
 import javafx.beans.property.ReadOnlyObjectProperty;
 import javafx.beans.property.ReadOnlyObjectWrapper;
 import org.hazewright.sheet.Logbook;
+import org.hazewright.shelf.Shelf;
 
 /** What the logbooks hold that a person may want to see again: that of the brief's folder, and those of files used last. */
 public final class LogbookRoom {
@@ -115,6 +116,13 @@ public final class LogbookRoom {
     private static String text(Map<String, Object> row, String column) {
         Object cell = row.get(column);
         return cell == null ? "" : cell.toString();
+    }
+
+    /** A sentence of the logbook with the names of ingredients in place of their ids. */
+    public String spoken(String sentence) {
+        return Words.spoken(
+                sentence,
+                desk.shelfProperty().get().shelf().map(Shelf::ingredients).orElse(List.of()));
     }
 
     /** Turns to a batch. */

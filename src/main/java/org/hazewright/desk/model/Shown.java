@@ -2,6 +2,7 @@ package org.hazewright.desk.model;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import java.util.TreeSet;
 import org.hazewright.bench.Answer;
 import org.hazewright.bench.Outlook;
@@ -12,9 +13,10 @@ import org.hazewright.mixture.Recipe;
  * The recipe on the desk and what it gives.
  *
  * @param answer the search behind it; while following, that of the brief before it began to move
+ * @param blood what it comes to as blood, for a tissue-like brief; while following, that of the brief before
  * @param following whether the amounts follow a brief that is being changed, with the search yet to come
  */
-public record Shown(Outlook outlook, Answer answer, boolean following) {
+public record Shown(Outlook outlook, Answer answer, Optional<AsBlood> blood, boolean following) {
 
     /** Another way that may be chosen. */
     public record Card(

@@ -3,6 +3,7 @@ package org.hazewright.desk.model;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.function.Supplier;
 import javafx.beans.property.ReadOnlyBooleanProperty;
 import javafx.beans.property.ReadOnlyDoubleProperty;
 import javafx.beans.property.ReadOnlyObjectProperty;
@@ -13,6 +14,7 @@ import org.hazewright.bench.Following;
 import org.hazewright.bench.Outlook;
 import org.hazewright.brief.Brief;
 import org.hazewright.brief.SearchLimits;
+import org.hazewright.brief.Tissue;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.optics.Refusal;
 import org.hazewright.shelf.Shelf;
@@ -41,9 +43,12 @@ public final class Solving {
     private final ReadOnlyObjectWrapper<Optional<String>> problem = new ReadOnlyObjectWrapper<>(Optional.empty());
     private final ReadOnlyObjectWrapper<Optional<Throwable>> fault = new ReadOnlyObjectWrapper<>(Optional.empty());
 
+    private final Supplier<Tissue.Spectra> spectra;
     private Following follower;
 
-    public Solving(Work work) {
+    /** {@code spectra} says how tissue and blood absorb; asked on any thread. */
+    public Solving(Work work, Supplier<Tissue.Spectra> spectra) {
+        this.spectra = spectra;
         following = work.lane(Work.Haste.FINISH);
         search = work.lane(Work.Haste.INTERRUPT);
         ways = work.lane(Work.Haste.INTERRUPT);
@@ -104,7 +109,7 @@ public final class Solving {
         problem.set(Optional.empty());
     }
 
-    private record Solved(Answer answer, Outlook outlook, Following follower) {}
+    private record Solved(Shown shown, Following follower) {}
 
     private record Followed(Outlook outlook, Optional<Curves> curves) {}
 
@@ -120,14 +125,16 @@ public final class Solving {
                     Brief asked = chosen.map(key -> keeping(brief, key)).orElse(brief);
                     Answer a = Answering.to(asked, shelf, 0, stop, progress);
                     Outlook outlook = new Outlook(brief, a.recipe(), a.predicted(), a.budget(), a.chance());
-                    return stop.getAsBoolean() ? null : new Solved(a, outlook, new Following(brief, a.recipe(), shelf));
+                    if (stop.getAsBoolean()) return null;
+                    Shown found = new Shown(outlook, a, AsBlood.of(a, spectra), false);
+                    return new Solved(found, new Following(brief, a.recipe(), shelf));
                 },
                 solved -> {
                     following.stop();
                     follower = solved.follower();
                     problem.set(Optional.empty());
-                    shown.set(new Shown(solved.outlook(), solved.answer(), false));
-                    curve(solved.outlook());
+                    shown.set(solved.shown());
+                    curve(solved.shown().outlook());
                     lookForWays(brief, shelf);
                 },
                 this::failed);
@@ -155,7 +162,8 @@ public final class Solving {
                     curving.stop();
                     followed.curves().ifPresent(curves::set);
                     problem.set(Optional.empty());
-                    shown.set(new Shown(followed.outlook(), shown.get().answer(), true));
+                    Shown last = shown.get();
+                    shown.set(new Shown(followed.outlook(), last.answer(), last.blood(), true));
                 },
                 failure -> {
                     if (!(failure instanceof Refusal)) fault.set(Optional.of(failure));

@@ -8,7 +8,7 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Properties;
-import org.hazewright.bench.Batch;
+import org.hazewright.batch.Batch;
 import org.hazewright.files.BatchReader;
 import org.hazewright.files.BatchWriter;
 import org.hazewright.files.SafeFile;

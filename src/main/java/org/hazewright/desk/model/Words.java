@@ -1,7 +1,14 @@
 package org.hazewright.desk.model;
 
+import java.util.ArrayList;
+import java.util.Collection;
+import java.util.Comparator;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
+import java.util.Map;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 import org.hazewright.bench.Answer;
 import org.hazewright.bench.Outlook;
 import org.hazewright.brief.Balance;
@@ -113,6 +120,21 @@ public final class Words {
                 Figures.decimalsFor(Math.min(p.point().tolerancePerCm(), p.uPerCm() > 0 ? p.uPerCm() : 1e9)));
     }
 
+    /** "µs′ at 690 and 730 nm lands high, µa at 830 nm lands low." – what lands outside its tolerance. */
+    public static String outside(List<Answer.Predicted> predicted) {
+        Map<String, List<String>> wavelengths = new LinkedHashMap<>();
+        for (Answer.Predicted p : predicted)
+            if (!p.inside())
+                wavelengths
+                        .computeIfAbsent(
+                                sign(p.point().quantity()) + " at %s nm lands too " + (p.miss() > 0 ? "high" : "low"),
+                                s -> new ArrayList<>())
+                        .add(Figures.plain(p.point().wavelengthNm()));
+        List<String> parts = new ArrayList<>();
+        wavelengths.forEach((words, nm) -> parts.add(words.replace("%s", join(nm))));
+        return join(parts) + ".";
+    }
+
     /** "0.4 half-widths high, inside" – a landing said in words. */
     public static String landing(double miss) {
         String side = Math.abs(miss) < 0.05
@@ -131,6 +153,22 @@ public final class Words {
         return sentence.isEmpty()
                 ? sentence
                 : sentence.substring(0, 1).toUpperCase(Locale.ROOT) + sentence.substring(1);
+    }
+
+    /**
+     * A sentence as the window says it: names in place of the ids that files and commands use, and the prime of µs′ as it is drawn. An id that
+     * is a plain word stays as it is.
+     */
+    public static String spoken(String sentence, Collection<Ingredient> known) {
+        String said = sentence.replace("µs'", "µs′");
+        List<Ingredient> longestFirst = known.stream()
+                .filter(i -> i.id().contains("-") && sentence.contains(i.id()))
+                .sorted(Comparator.comparing((Ingredient i) -> -i.id().length()))
+                .toList();
+        for (Ingredient i : longestFirst)
+            said = said.replaceAll(
+                    "(?<![\\w.-])" + Pattern.quote(i.id()) + "(?![\\w-])", Matcher.quoteReplacement(inSentence(i)));
+        return said;
     }
 
     /** A cause's name with the ingredient's name in place of its id. */

@@ -35,6 +35,7 @@ public final class ReadingsPlace extends VBox {
     private final Label distancesSaid = Say.wrapped("", "small");
     private final Label pulseSaid = Say.wrapped("", "small");
     private final Label slabSaid = Say.wrapped("", "small");
+    private final Label slabInWords = Say.wrapped(" ", "small");
     private final Label saturation = Say.label("", "reads-as");
     private final Label saturationSaid = Say.wrapped("", "small");
     private final Label wanted = Say.label("", "wanted", "small");
@@ -67,7 +68,7 @@ public final class ReadingsPlace extends VBox {
                         card(Say.label("slab", "strong"), slab, slabSaid),
                         readsAs());
         body.getStyleClass().add("gap-xs");
-        body.getChildren().addAll(new ErrorLine(nm, mm, thick), trouble, cards);
+        body.getChildren().addAll(new ErrorLine(nm, mm, thick), trouble, cards, slabInWords);
         getChildren().addAll(head, body);
         foreseeing.openProperty().addListener((p, was, is) -> {
             opener.setText(is ? "close" : "open");
@@ -205,11 +206,16 @@ public final class ReadingsPlace extends VBox {
         if (f.slab().isEmpty()) {
             slab.show((pen, w, h) -> {});
             slabSaid.setText("–");
+            slabInWords.setText(" ");
             return;
         }
         Foreseen.Slab s = f.slab().get();
         slabSaid.setText(
                 Figures.plain(f.asked().thicknessMm()) + " mm thick, through " + percent(s.through(), s.uThrough()));
+        slabInWords.setText("Slab of " + Figures.plain(f.asked().thicknessMm()) + " mm: "
+                + Figures.significant(100 * s.reflected(), 2) + " % back, "
+                + Figures.significant(100 * s.absorbed(), 2) + " % absorbed, " + percent(s.through(), s.uThrough())
+                + " through");
         slab.show((pen, w, h) -> slab(pen, w, h, s));
         slab.setAccessibleText("slab, reflected " + percent(s.reflected(), s.uReflected()) + ", " + slabSaid.getText());
     }
@@ -259,13 +265,17 @@ public final class ReadingsPlace extends VBox {
         wanted.setText(
                 Double.isNaN(b.wanted()) ? "" : "wanted " + Figures.plain(Math.rint(1000 * b.wanted()) / 10) + " %");
         Say.show(wanted, !wanted.getText().isEmpty());
-        bloodSaid.setText("Hb " + Figures.significant(b.umolPerL(), 3) + " µM");
+        bloodSaid.setText("Hb " + Figures.significant(b.umolPerL(), 3) + " µmol/L");
         saturation.setTooltip(new Tooltip("What an oximeter would believe that reads µa at the targets' wavelengths."));
     }
 
-    /** Leaves the slab out where there is no room for four pictures. */
+    /** Says the slab in words where there is no room for four pictures. */
     public void narrowWhen(ReadOnlyDoubleProperty width) {
-        Runnable fit = () -> Say.show(cards.getChildren().get(2), width.get() > 48 * look.em());
+        Runnable fit = () -> {
+            boolean room = width.get() > 48 * look.em();
+            Say.show(cards.getChildren().get(2), room);
+            Say.show(slabInWords, !room);
+        };
         width.addListener((p, was, is) -> fit.run());
         look.emProperty().addListener((p, was, is) -> fit.run());
         fit.run();

@@ -29,6 +29,8 @@ import org.hazewright.desk.parts.Gauge;
 import org.hazewright.desk.parts.Say;
 import org.hazewright.desk.parts.Word;
 import org.hazewright.mixture.Recipe;
+import org.hazewright.shelf.Ingredient;
+import org.hazewright.shelf.Shelf;
 
 /** The place Recipe. */
 public final class RecipePlace extends VBox {
@@ -40,6 +42,7 @@ public final class RecipePlace extends VBox {
     private final Desk desk;
     private final Label verdict = Say.wrapped("", "headline");
     private final WeighRows weighing = new WeighRows();
+    private final VBox blood = new VBox();
     private final VBox causes = new VBox();
     private final VBox limits = new VBox();
     private final VBox ways = new VBox();
@@ -49,7 +52,7 @@ public final class RecipePlace extends VBox {
     public RecipePlace(Desk desk, Runnable print, Runnable saveSheet, Runnable copyGrams) {
         this.desk = desk;
         getStyleClass().addAll("place", "side-right");
-        VBox all = new VBox(verdict, weighing, causes, limits, ways, mind);
+        VBox all = new VBox(verdict, weighing, blood, causes, limits, ways, mind);
         all.getStyleClass().add("gap-l");
         ScrollPane scroll = new ScrollPane(all);
         scroll.setFitToWidth(true);
@@ -65,7 +68,8 @@ public final class RecipePlace extends VBox {
         foot.setAlignment(Pos.BASELINE_LEFT);
         getStyleClass().add("gap-m");
         getChildren().addAll(Say.place("Recipe"), scroll, foot);
-        List.of(causes, limits, ways, mind).forEach(box -> box.getStyleClass().add("gap-s"));
+        List.of(blood, causes, limits, ways, mind)
+                .forEach(box -> box.getStyleClass().add("gap-s"));
 
         desk.solving().shownProperty().addListener((p, before, now) -> show(now));
         desk.solving().cardsProperty().addListener((p, before, now) -> ways());
@@ -75,12 +79,12 @@ public final class RecipePlace extends VBox {
     }
 
     private void say(String words, String tone) {
-        verdict.setText(words);
+        verdict.setText(words.replace(" times in 100", "\u00A0times\u00A0in\u00A0100"));
         if (!verdict.getStyleClass().contains(tone)) verdict.getStyleClass().setAll("label", "headline", tone);
     }
 
     private void showAll(boolean yes) {
-        List.of(weighing, causes, limits, ways, mind).forEach(box -> Say.show(box, yes));
+        List.of(weighing, blood, causes, limits, ways, mind).forEach(box -> Say.show(box, yes));
     }
 
     private void problem() {
@@ -105,6 +109,7 @@ public final class RecipePlace extends VBox {
         weighing.show(shown);
         if (shown.following() && following) return; // the rest follows when the hand rests
         following = shown.following();
+        blood.setDisable(following);
         if (following) {
             limits.getChildren()
                     .setAll(
@@ -112,10 +117,18 @@ public final class RecipePlace extends VBox {
                             Say.wrapped("The amounts follow; the search goes on when you rest.", "quiet"));
             return;
         }
+        blood(shown);
         causes(o);
         limits(shown);
         ways();
         mind(o.recipe());
+    }
+
+    private void blood(Shown shown) {
+        shown.blood()
+                .ifPresent(b ->
+                        blood.getChildren().setAll(Say.heading("As blood"), Say.wrapped(b.sentence(), "as-blood")));
+        Say.show(blood, shown.blood().isPresent());
     }
 
     private void mind(Recipe recipe) {
@@ -160,7 +173,9 @@ public final class RecipePlace extends VBox {
         List<String> said = new ArrayList<>(shown.answer().limits());
         said.addAll(shown.answer().notes());
         if (said.isEmpty()) said.add("Nothing: every target lands close to its middle.");
-        said.forEach(s -> sentences.add(Say.wrapped(s)));
+        List<Ingredient> known =
+                desk.shelfProperty().get().shelf().map(Shelf::ingredients).orElse(List.of());
+        said.forEach(s -> sentences.add(Say.wrapped(Words.spoken(s, known))));
         limits.getChildren().setAll(sentences);
         Say.show(limits, true);
     }

@@ -87,32 +87,64 @@ final class ComparePlot {
         }
         pen.unclip();
         List<double[]> taken = new ArrayList<>();
-        for (Label label : labels) name(pen, label, left, right, top, bottom, taken);
+        for (Label label : labels) name(pen, label, labels, left, right, top, bottom, taken);
     }
 
     /** A line's name, waiting for a place. */
-    private record Label(String name, String colour, double[] x, double[] y, int count) {}
+    private record Label(String name, String colour, double[] x, double[] y, int count) {
 
-    /** Writes a name along its line where no other name stands; left out when there is no such place. */
-    private void name(Pen pen, Label l, double left, double right, double top, double bottom, List<double[]> taken) {
+        /** How many of the line's points, and middles between them, lie in a box. */
+        long within(double[] box) {
+            long in = 0;
+            for (int k = 0; k < count; k++) {
+                if (inside(x[k], y[k], box)) in++;
+                if (k > 0 && inside((x[k - 1] + x[k]) / 2, (y[k - 1] + y[k]) / 2, box)) in++;
+            }
+            return in;
+        }
+
+        private static boolean inside(double x, double y, double[] box) {
+            return x > box[0] && x < box[2] && y > box[1] && y < box[3];
+        }
+    }
+
+    /** Writes a name by its line where no other name stands and the fewest lines pass; left out when there is no such place. */
+    private void name(
+            Pen pen,
+            Label l,
+            List<Label> all,
+            double left,
+            double right,
+            double top,
+            double bottom,
+            List<double[]> taken) {
         double size = 0.92 * em;
         double wide = pen.width(l.name(), size, false);
-        for (double share = 0.04; share < 1; share += 0.06) {
+        double[] best = null;
+        long fewest = Long.MAX_VALUE;
+        for (double share = 0.04; share < 1 && fewest > 0; share += 0.04) {
             int at = (int) (l.count() * share);
-            for (double up : new double[] {-0.6 * em, 1.4 * em}) {
-                double nx = l.x()[at];
-                double ny = l.y()[at] + up;
-                double[] box = {nx - 3, ny - 0.9 * em, nx + wide + 3, ny + 0.35 * em};
-                if (box[2] > right - 4 || box[1] < top + 1.9 * em || box[3] > bottom - 2 || box[0] < left + 2) continue;
-                boolean free =
-                        taken.stream().noneMatch(t -> box[0] < t[2] && t[0] < box[2] && box[1] < t[3] && t[1] < box[3]);
-                if (!free) continue;
-                taken.add(box);
-                pen.box(box[0], box[1], box[2] - box[0], box[3] - box[1], 3, palette.paper(), 0.8, null, 0);
-                pen.text(l.name(), nx, ny, size, false, l.colour(), Pen.Align.LEFT);
-                return;
+            for (double back : new double[] {0, wide / 2, wide}) {
+                for (double up : new double[] {-0.6 * em, 1.3 * em}) {
+                    double nx = l.x()[at] - back;
+                    double ny = l.y()[at] + up;
+                    double[] box = {nx - 3, ny - 0.9 * em, nx + wide + 3, ny + 0.3 * em};
+                    if (box[2] > right - 4 || box[1] < top + 1.9 * em || box[3] > bottom - 2 || box[0] < left + 2)
+                        continue;
+                    if (taken.stream().anyMatch(t -> box[0] < t[2] && t[0] < box[2] && box[1] < t[3] && t[1] < box[3]))
+                        continue;
+                    long passing = all.stream().mapToLong(o -> o.within(box)).sum();
+                    if (passing >= fewest) continue;
+                    fewest = passing;
+                    best = box;
+                }
             }
         }
+        if (best == null) return;
+        taken.add(best);
+        if (fewest > 0)
+            pen.box(best[0], best[1], best[2] - best[0], best[3] - best[1], 3, palette.paper(), 0.8, null, 0);
+        pen.text(l.name(), best[0] + 3, best[3] - 0.3 * em, size, false, l.colour(), Pen.Align.LEFT);
     }
 
     private void wavelengths(Pen pen, double left, double right, double bottom) {

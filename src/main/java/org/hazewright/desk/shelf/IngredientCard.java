@@ -22,6 +22,7 @@ import org.hazewright.shelf.Inspection;
 final class IngredientCard extends VBox {
     private final ShelfRoom room;
     private final LotForm lot;
+    private Node favourite = this;
 
     IngredientCard(ShelfRoom room, LotForm lot) {
         this.room = room;
@@ -61,7 +62,9 @@ final class IngredientCard extends VBox {
         Word star = new Word(room.favourite(i.id()) ? "★ favourite" : "☆ make it a favourite", () -> {
             room.favourite(i.id(), !room.favourite(i.id()));
             show();
+            favourite.requestFocus();
         });
+        favourite = star;
         all.add(star);
         Field hand = new Field(() -> room.inHand(i.id()), text -> room.inHand(i.id(), text), false)
                 .named("grams in hand")
@@ -82,8 +85,8 @@ final class IngredientCard extends VBox {
         } else {
             all.add(Say.heading("What it is mixed of"));
             i.blend()
-                    .forEach(p -> all.add(Say.wrapped(
-                            Figures.plain(Math.round(1e4 * p.massFraction()) / 100.0) + " % " + p.ingredient())));
+                    .forEach(p -> all.add(Say.wrapped(Figures.plain(Math.round(1e4 * p.massFraction()) / 100.0) + " % "
+                            + named(p.ingredient()))));
         }
         i.maxGPerMl()
                 .ifPresent(v -> all.add(Say.wrapped("at most " + Figures.plain(v) + " g in a mL of phantom", "quiet")));
@@ -96,10 +99,22 @@ final class IngredientCard extends VBox {
         section(
                 all,
                 "Not with",
-                i.conflicts().stream().map(c -> c.with() + ": " + c.why()).toList());
+                i.conflicts().stream()
+                        .map(c -> named(c.with()) + ": " + c.why())
+                        .toList());
         lot.of(i);
         all.add(lot);
         getChildren().setAll(all);
+    }
+
+    /** The name of what goes by an id on this shelf; another word, such as that of a kind, stays. */
+    private String named(String id) {
+        return room.shelfProperty()
+                .get()
+                .shelf()
+                .flatMap(s -> s.find(id))
+                .map(Words::inSentence)
+                .orElse(id);
     }
 
     private static String percent(double share) {

@@ -55,8 +55,8 @@ final class IngredientForm extends VBox {
             id.refresh();
         });
         choice(grid, "it is", Part.values(), part, p -> part = p);
-        HBox into = new HBox();
-        into.getStyleClass().add("gap-m");
+        FlowPane into = new FlowPane();
+        into.getStyleClass().add("flow");
         for (Family f : Family.values()) {
             CheckBox box = new CheckBox(f.word());
             box.setSelected(families.contains(f));
@@ -66,7 +66,7 @@ final class IngredientForm extends VBox {
             });
             into.getChildren().add(box);
         }
-        grid.addRow(grid.getRowCount(), Say.quiet("mixes into"), into);
+        grid.addRow(grid.getRowCount(), called("mixes into"), into);
         choice(grid, "form", Form.values(), form, f -> form = f);
         ask(grid, "density, g/mL", "1.02", 8);
         ask(grid, "price per g", "may stay empty", 8);
@@ -84,7 +84,7 @@ final class IngredientForm extends VBox {
         HBox file = new HBox(choose, tableSaid);
         file.getStyleClass().add("gap-s");
         file.setAlignment(Pos.BASELINE_LEFT);
-        grid.addRow(grid.getRowCount(), Say.quiet("absorption"), file);
+        grid.addRow(grid.getRowCount(), called("absorption"), file);
         choice(grid, "its values are", IngredientWriter.Basis.values(), tableBasis, b -> tableBasis = b);
         ask(grid, "of it scattering", "0 %", 8);
         ask(grid, "known to", "3 %", 8);
@@ -124,8 +124,15 @@ final class IngredientForm extends VBox {
                 .styled("boxed")
                 .columns(columns);
         f.setPromptText(prompt);
-        grid.addRow(grid.getRowCount(), Say.quiet(what), f);
+        grid.addRow(grid.getRowCount(), called(what), f);
         return f;
+    }
+
+    /** What a row asks for; the fields give way to it. */
+    private static Label called(String what) {
+        Label label = Say.quiet(what);
+        label.setMinWidth(USE_PREF_SIZE);
+        return label;
     }
 
     private static <T extends Enum<T>> void choice(
@@ -141,7 +148,7 @@ final class IngredientForm extends VBox {
             b.setOnAction(e -> take.accept(t));
             line.getChildren().add(b);
         }
-        grid.addRow(grid.getRowCount(), Say.quiet(what), (Node) line);
+        grid.addRow(grid.getRowCount(), called(what), (Node) line);
     }
 
     private static String word(Enum<?> t) {

@@ -23,6 +23,7 @@ import org.hazewright.desk.model.ShelfState;
 import org.hazewright.desk.model.Words;
 import org.hazewright.desk.parts.Chooser;
 import org.hazewright.desk.parts.Field;
+import org.hazewright.desk.parts.Room;
 import org.hazewright.desk.parts.Say;
 import org.hazewright.desk.parts.Word;
 import org.hazewright.desk.pen.CanvasPen;
@@ -40,6 +41,7 @@ public final class ShelfView extends BorderPane {
     private final Plot scattering = new Plot(true);
     private final VBox right = new VBox();
     private final IngredientCard card;
+    private Optional<Ingredient> pressed = Optional.empty();
     private final Label place = Say.quiet("");
     private final Label checked = Say.wrapped("", "quiet", "small");
 
@@ -51,17 +53,19 @@ public final class ShelfView extends BorderPane {
         getStyleClass().add("balance-view");
         card = new IngredientCard(room, new LotForm(adding, chooser));
         setTop(head(leave));
-        setLeft(left());
+        BorderPane columns = new BorderPane();
+        setCenter(new Room(columns, 95, 40));
+        columns.setLeft(left());
         VBox middle = new VBox(Say.place("Side by side"), absorption, scattering);
         middle.getStyleClass().addAll("place", "gap-s");
         VBox.setVgrow(absorption, Priority.ALWAYS);
         VBox.setVgrow(scattering, Priority.ALWAYS);
-        setCenter(middle);
+        columns.setCenter(middle);
         ScrollPane scroll = scrolled(right);
         VBox.setVgrow(scroll, Priority.ALWAYS);
         VBox side = new VBox(scroll);
         side.getStyleClass().addAll("place", "recipe-width", "side-right");
-        setRight(side);
+        columns.setRight(side);
         right.getChildren().setAll(card);
         room.findProperty().addListener((p, before, now) -> list());
         room.shelfProperty().addListener((p, before, now) -> list());
@@ -152,6 +156,7 @@ public final class ShelfView extends BorderPane {
         }
         if (all.isEmpty()) all.add(Say.wrapped("Nothing on this shelf is called that.", "quiet"));
         list.getChildren().setAll(all);
+        pressed = Optional.empty();
     }
 
     private Node row(Ingredient i) {
@@ -162,6 +167,7 @@ public final class ShelfView extends BorderPane {
         tick.setOnAction(e -> room.compare(i.id(), tick.isSelected()));
         boolean chosen = room.chosenProperty().get().filter(i::equals).isPresent();
         Word name = new Word((room.favourite(i.id()) ? "★ " : "") + Words.shortName(i), () -> {
+            pressed = Optional.of(i);
             room.choose(i);
         });
         name.setMinWidth(0);
@@ -174,6 +180,9 @@ public final class ShelfView extends BorderPane {
         grams.setMinWidth(Region.USE_PREF_SIZE);
         HBox row = new HBox(tick, name, grams);
         row.setAlignment(Pos.CENTER_LEFT);
+        if (pressed.filter(i::equals)
+                .isPresent()) // the list is made anew; whoever walks through it by keys stays where they are
+        javafx.application.Platform.runLater(name::requestFocus);
         return row;
     }
 

@@ -33,7 +33,8 @@ public final class SpectraPlace extends VBox {
     private double pointerNm = Double.NaN;
     private Optional<SpectraPlot.Grip> held = Optional.empty();
     private Optional<SpectraPlot.Ends> hold = Optional.empty();
-    private double grabbedAt;
+    private double handAtY;
+    private double pulledPerCm;
     private boolean dragging;
     private SpectraPlot plot;
 
@@ -223,7 +224,8 @@ public final class SpectraPlace extends VBox {
                 plot.boxes().stream()
                         .filter(b -> b.nm() == g.nm() && b.quantity() == g.quantity())
                         .findFirst()
-                        .ifPresent(b -> grabbedAt = e.getY() - plot.yOf(b.quantity(), b.wanted()));
+                        .ifPresent(b -> pulledPerCm = b.wanted());
+                handAtY = e.getScreenY();
                 desk.editing().settle();
                 point(g.nm());
             });
@@ -232,7 +234,11 @@ public final class SpectraPlace extends VBox {
         private void dragged(MouseEvent e) {
             if (!dragging || held.isEmpty()) return;
             SpectraPlot.Grip g = held.get();
-            desk.editing().drag(g.nm(), g.quantity(), plot.valueAt(g.quantity(), e.getY() - grabbedAt));
+            // by how far the hand went, not by where the plot now lies: what is around the plot may grow meanwhile
+            double perPx = plot.valueAt(g.quantity(), 1) - plot.valueAt(g.quantity(), 0);
+            pulledPerCm += perPx * (e.getScreenY() - handAtY);
+            handAtY = e.getScreenY();
+            desk.editing().drag(g.nm(), g.quantity(), Math.max(0, pulledPerCm));
         }
 
         private void released(MouseEvent e) {

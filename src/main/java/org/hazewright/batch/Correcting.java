@@ -1,4 +1,4 @@
-package org.hazewright.bench;
+package org.hazewright.batch;
 
 import java.util.ArrayList;
 import java.util.LinkedHashSet;
@@ -6,6 +6,10 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
+import org.hazewright.bench.Additions;
+import org.hazewright.bench.Grams;
+import org.hazewright.bench.Outlook;
+import org.hazewright.bench.Weighing;
 import org.hazewright.brief.Brief;
 import org.hazewright.brief.Point;
 import org.hazewright.mixture.Item;

@@ -1,4 +1,4 @@
-package org.hazewright.bench;
+package org.hazewright.batch;
 
 import java.util.List;
 import org.hazewright.mixture.Item;

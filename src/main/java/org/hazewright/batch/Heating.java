@@ -1,5 +1,6 @@
-package org.hazewright.bench;
+package org.hazewright.batch;
 
+import org.hazewright.bench.Grams;
 import org.hazewright.optics.Refusal;
 
 /**

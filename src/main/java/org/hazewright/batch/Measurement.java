@@ -1,7 +1,8 @@
-package org.hazewright.bench;
+package org.hazewright.batch;
 
 import java.time.LocalDate;
 import java.util.List;
+import org.hazewright.bench.Grams;
 import org.hazewright.learning.MeasuredValue;
 import org.hazewright.learning.Method;
 import org.hazewright.optics.Refusal;

@@ -1,4 +1,4 @@
-package org.hazewright.bench;
+package org.hazewright.batch;
 
 import java.time.LocalDate;
 import java.util.ArrayList;
@@ -6,6 +6,8 @@ import java.util.Collections;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import org.hazewright.bench.Grams;
+import org.hazewright.bench.Weighing;
 import org.hazewright.brief.Balance;
 import org.hazewright.brief.Brief;
 import org.hazewright.brief.SearchLimits;
@@ -107,6 +109,16 @@ public record Batch(
                 balance,
                 Optional.empty(),
                 plan.briefSha256()));
+    }
+
+    /** Corrections of which something is weighed. */
+    public int correctionsBegun() {
+        int begun = 0;
+        List<Weighing> all = weighings();
+        for (int n = 0; n < all.size(); n++)
+            if (weighed(n) && all.get(n).role() == Weighing.Role.ITEM)
+                begun = Math.max(begun, corrections.get(all.get(n).place()));
+        return begun;
     }
 
     public List<Weighing> weighings() {
@@ -261,9 +273,20 @@ public record Batch(
         return with(plan, weighedG, corrections, Optional.of(h), measured, notes);
     }
 
+    /**
+     * With measured values. They count for what was in the vessel: a correction of which nothing is weighed is not in it yet. Refused
+     * before anything is weighed.
+     */
     public Batch withMeasured(Measurement m) {
+        if (weighedCount() == 0)
+            throw new Refusal("Nothing of the batch " + id
+                    + " is weighed yet, so there is nothing that measured values could be set against. Record its grams first,"
+                    + " typed or from the filled-in sheet, then what was measured.");
         List<Measurement> all = new ArrayList<>(measured);
-        all.add(m);
+        all.add(
+                m.correction() <= correctionsBegun()
+                        ? m
+                        : new Measurement(m.on(), m.method(), m.instrument(), correctionsBegun(), m.values()));
         return with(plan, weighedG, corrections, heating, all, notes);
     }
 

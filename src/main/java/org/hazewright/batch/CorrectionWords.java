@@ -1,7 +1,10 @@
-package org.hazewright.bench;
+package org.hazewright.batch;
 
 import java.util.ArrayList;
 import java.util.List;
+import org.hazewright.bench.Answer;
+import org.hazewright.bench.Grams;
+import org.hazewright.bench.Leftover;
 import org.hazewright.mixture.Item;
 import org.hazewright.mixture.Recipe;
 import org.hazewright.optics.Figures;

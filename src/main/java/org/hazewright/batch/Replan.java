@@ -1,4 +1,4 @@
-package org.hazewright.bench;
+package org.hazewright.batch;
 
 import java.util.ArrayList;
 import java.util.Arrays;
@@ -7,6 +7,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import org.hazewright.bench.Weighing;
 import org.hazewright.brief.Balance;
 import org.hazewright.brief.Brief;
 import org.hazewright.brief.Point;

@@ -1,4 +1,4 @@
-package org.hazewright.bench;
+package org.hazewright.batch;
 
 import java.util.ArrayList;
 import java.util.HashMap;
@@ -12,6 +12,7 @@ import org.apache.commons.math3.linear.EigenDecomposition;
 import org.apache.commons.math3.linear.LUDecomposition;
 import org.apache.commons.math3.linear.RealMatrix;
 import org.apache.commons.math3.linear.RealVector;
+import org.hazewright.bench.Answer;
 import org.hazewright.brief.Point;
 import org.hazewright.learning.MeasuredValue;
 import org.hazewright.learning.Method;
