@@ -17,9 +17,7 @@ import java.util.Optional;
 import java.util.stream.Stream;
 import org.apache.poi.ss.usermodel.Cell;
 import org.apache.poi.ss.usermodel.CellType;
-import org.apache.poi.ss.util.AreaReference;
 import org.apache.poi.ss.util.CellReference;
-import org.apache.poi.xssf.usermodel.XSSFName;
 import org.apache.poi.xssf.usermodel.XSSFSheet;
 import org.apache.poi.xssf.usermodel.XSSFWorkbook;
 import org.hazewright.batch.Batch;
@@ -175,7 +173,7 @@ public final class Logbook {
     }
 
     static void requireFormat(XSSFWorkbook workbook, Path file) {
-        CellReference at = at(workbook, LogbookPages.FORMAT_NAME);
+        CellReference at = Names.cell(workbook, LogbookPages.FORMAT_NAME);
         XSSFSheet sheet = at == null ? null : workbook.getSheet(at.getSheetName());
         Cell cell = sheet == null || sheet.getRow(at.getRow()) == null
                 ? null
@@ -190,14 +188,8 @@ public final class Logbook {
                             + LogbookPages.FORMAT + "; another version of the program made it.");
     }
 
-    private static CellReference at(XSSFWorkbook workbook, String name) {
-        XSSFName found = workbook.getName(name);
-        if (found == null || found.isDeleted() || found.getRefersToFormula().contains("#REF")) return null;
-        return new AreaReference(found.getRefersToFormula(), workbook.getSpreadsheetVersion()).getFirstCell();
-    }
-
     static XSSFSheet sheetOf(XSSFWorkbook workbook, String name) {
-        CellReference at = at(workbook, name);
+        CellReference at = Names.cell(workbook, name);
         return at == null ? null : workbook.getSheet(at.getSheetName());
     }
 

@@ -12,9 +12,7 @@ import org.apache.poi.ss.usermodel.CellStyle;
 import org.apache.poi.ss.usermodel.CellType;
 import org.apache.poi.ss.usermodel.DateUtil;
 import org.apache.poi.ss.usermodel.Row;
-import org.apache.poi.ss.util.AreaReference;
 import org.apache.poi.ss.util.CellReference;
-import org.apache.poi.xssf.usermodel.XSSFName;
 import org.apache.poi.xssf.usermodel.XSSFSheet;
 import org.apache.poi.xssf.usermodel.XSSFWorkbook;
 
@@ -43,15 +41,13 @@ final class LogbookTable {
     }
 
     static LogbookTable find(XSSFWorkbook workbook, Path file, String name, List<String> names, String key) {
-        XSSFName found = workbook.getName(name);
-        if (found == null || found.isDeleted() || found.getRefersToFormula().contains("#REF"))
+        CellReference at = Names.cell(workbook, name);
+        XSSFSheet sheet = at == null ? null : workbook.getSheet(at.getSheetName());
+        if (sheet == null)
             throw SafeWorkbook.refusal(
                     file,
                     "This is not a logbook, or a page of it was deleted: the named cell " + name
                             + " is missing. Name another file with --logbook, or take back the previous version beside it.");
-        CellReference at =
-                new AreaReference(found.getRefersToFormula(), workbook.getSpreadsheetVersion()).getFirstCell();
-        XSSFSheet sheet = workbook.getSheet(at.getSheetName());
         LogbookTable t = new LogbookTable(workbook, sheet, at.getRow(), key);
         t.read(file, names);
         return t;

@@ -1,5 +1,7 @@
 package org.hazewright.sheet;
 
+import org.apache.poi.ss.util.AreaReference;
+import org.apache.poi.ss.util.CellReference;
 import org.apache.poi.xssf.usermodel.XSSFName;
 import org.apache.poi.xssf.usermodel.XSSFWorkbook;
 
@@ -32,5 +34,12 @@ final class Names {
         XSSFName made = workbook.createName();
         made.setNameName(name);
         made.setRefersToFormula(address);
+    }
+
+    /** The cell of this name, the first one of a range; null when the name, or the page it stood for, is gone. */
+    static CellReference cell(XSSFWorkbook workbook, String name) {
+        XSSFName found = workbook.getName(name);
+        if (found == null || found.isDeleted() || found.getRefersToFormula().contains("#REF")) return null;
+        return new AreaReference(found.getRefersToFormula(), workbook.getSpreadsheetVersion()).getFirstCell();
     }
 }

@@ -51,6 +51,10 @@ final class SafeWorkbook {
         check(file, mostUnpacked);
         try (InputStream in = Files.newInputStream(file)) {
             XSSFWorkbook workbook = new XSSFWorkbook(OPCPackage.open(in));
+            // A page whose part is not found is passed over in silence, and would be gone when the workbook is written.
+            if (workbook.getNumberOfSheets()
+                    < workbook.getCTWorkbook().getSheets().sizeOfSheetArray())
+                throw new IOException("a page is missing");
             readEveryCell(workbook);
             return workbook;
         } catch (IOException | InvalidFormatException | RuntimeException e) {

@@ -2,6 +2,7 @@ package org.hazewright.hard;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertNotEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 import static org.junit.jupiter.api.Assumptions.assumeTrue;
@@ -19,6 +20,7 @@ import java.util.zip.ZipOutputStream;
 import org.hazewright.cli.OneLine;
 import org.hazewright.optics.Refusal;
 import org.hazewright.sheet.FirstPage;
+import org.hazewright.sheet.Logbook;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -266,5 +268,24 @@ class HostileFilesTest {
                 RELS.formatted("worksheet", "worksheets/sheet1.xml").getBytes(StandardCharsets.UTF_8));
         parts.put("xl/worksheets/sheet1.xml", sheet.getBytes(set));
         return parts;
+    }
+
+    /** A page that the workbook names and does not hold: refused, where going on would write a logbook without it. */
+    @Test
+    void aLogbookWithoutOneOfItsPages() throws IOException {
+        Seeds.lay(folder);
+        Path whole = folder.resolve("logbook.xlsx");
+        String part = "xl/_rels/workbook.xml.rels";
+        String links = new String(Parts.of(whole).get(part), StandardCharsets.UTF_8);
+        for (int page = 1; page <= 5; page++) {
+            String without = links.replace("sheet" + page + ".xml", "sheet9.xml")
+                    .replaceAll("<Relationship [^>]*sheet9[^>]*/>", "");
+            assertNotEquals(links, without);
+            Path book = Files.write(
+                    folder.resolve("book.xlsx"),
+                    Parts.replaced(whole, (part + "\n" + without).getBytes(StandardCharsets.UTF_8)));
+            Refusal refusal = assertThrows(Refusal.class, () -> Logbook.batches(book));
+            Promise.wellSaid(refusal.getMessage(), "");
+        }
     }
 }

@@ -188,6 +188,7 @@ final class MovesInSteps extends FileSystem {
         }
 
         @Override
+        @SuppressWarnings("StreamResourceLeak") // whoever asked for it closes it
         public DirectoryStream<Path> newDirectoryStream(Path folder, DirectoryStream.Filter<? super Path> filter)
                 throws IOException {
             DirectoryStream<Path> all = Files.newDirectoryStream(under(folder), p -> filter.accept(over(p)));
