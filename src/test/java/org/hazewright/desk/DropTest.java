@@ -78,8 +78,8 @@ class DropTest {
 
     private Batch made() {
         Stagehand.until("the batch", () -> window.desk().madeProperty().get().isPresent());
-        return Stagehand.onUi(
-                () -> window.desk().madeProperty().get().orElseThrow().batchProperty().get());
+        return Stagehand.onUi(() ->
+                window.desk().madeProperty().get().orElseThrow().batchProperty().get());
     }
 
     @Test
@@ -92,8 +92,7 @@ class DropTest {
                 TissueSpectra.of(null),
                 SafeFile.Overwrite.NEVER);
         drop(other);
-        Stagehand.until(
-                "the brief", () -> window.desk().edits().now().name().equals("slab"));
+        Stagehand.until("the brief", () -> window.desk().edits().now().name().equals("slab"));
         Stagehand.untilSettled(window);
         assertEquals(
                 BriefReader.readShipped("bench-slab").title(),
@@ -158,8 +157,8 @@ class DropTest {
         int filled = 0;
         try (InputStream in = Files.newInputStream(sheet);
                 XSSFWorkbook workbook = new XSSFWorkbook(in)) {
-            AreaReference area =
-                    new AreaReference(workbook.getName("weighed_g").getRefersToFormula(), workbook.getSpreadsheetVersion());
+            AreaReference area = new AreaReference(
+                    workbook.getName("weighed_g").getRefersToFormula(), workbook.getSpreadsheetVersion());
             for (CellReference ref : area.getAllReferencedCells()) {
                 Row row = workbook.getSheet(ref.getSheetName()).getRow(ref.getRow());
                 Cell plan = row == null ? null : row.getCell(ref.getCol() - 1);
@@ -186,7 +185,8 @@ class DropTest {
         int filled = fill(sheet);
         drop(sheet);
         Batch batch = made();
-        assertEquals(filled, batch.weighedG().stream().filter(g -> g.isPresent()).count());
+        assertEquals(
+                filled, batch.weighedG().stream().filter(g -> g.isPresent()).count());
         for (int k = 0; k < batch.weighings().size(); k++)
             assertEquals(
                     batch.weighings().get(k).massG() * 1.005,
@@ -209,8 +209,7 @@ class DropTest {
                 TissueSpectra.of(null),
                 SafeFile.Overwrite.NEVER);
         drop(other);
-        Stagehand.until(
-                "the brief", () -> window.desk().edits().now().name().equals("slab"));
+        Stagehand.until("the brief", () -> window.desk().edits().now().name().equals("slab"));
         Stagehand.untilSettled(window);
         drop(sheet);
         String words = told("open");
@@ -231,8 +230,8 @@ class DropTest {
         assertTrue(words.contains(name) && words.contains(".brief.toml"), words);
         assertEquals(
                 before,
-                Stagehand.onUi(() ->
-                        window.desk().solving().shownProperty().get().recipe()));
+                Stagehand.onUi(
+                        () -> window.desk().solving().shownProperty().get().recipe()));
     }
 
     /** Names that promise one of ours, with something else inside. */

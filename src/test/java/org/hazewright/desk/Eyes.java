@@ -42,7 +42,9 @@ final class Eyes {
 
     /** Whether a text stands in the window, alone or within another. */
     boolean reads(String text) {
-        return !all(n -> n instanceof Labeled l && l.getText() != null && l.getText().contains(text))
+        return !all(n -> n instanceof Labeled l
+                        && l.getText() != null
+                        && l.getText().contains(text))
                 .isEmpty();
     }
 

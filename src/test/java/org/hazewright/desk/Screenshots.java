@@ -9,9 +9,9 @@ import java.util.List;
 import java.util.Optional;
 import javafx.application.Platform;
 import javafx.geometry.Rectangle2D;
+import javafx.scene.Node;
 import javafx.scene.Scene;
 import javafx.scene.SnapshotParameters;
-import javafx.scene.Node;
 import javafx.scene.control.ScrollPane;
 import javafx.scene.image.PixelFormat;
 import javafx.scene.image.WritableImage;
@@ -231,8 +231,7 @@ public final class Screenshots {
         Files.writeString(empty.resolve("dye.toml"), "format = 1\nid = \"dye\"\nnmae = \"Dye\"\n");
         Stagehand.ui(() -> window.desk().readShelfAgain());
         Stagehand.until(
-                "words",
-                () -> !window.desk().shelfProperty().get().refused().isEmpty());
+                "words", () -> !window.desk().shelfProperty().get().refused().isEmpty());
         shoot(window, "shelf-broken");
         close(window);
     }
@@ -267,8 +266,7 @@ public final class Screenshots {
         for (Palette p : new Palette[] {Palette.LIGHT, Palette.DARK}) {
             Stagehand.ui(() -> window.look().paletteProperty().set(p));
             Stagehand.pulse();
-            BufferedImage picture =
-                    new BufferedImage((int) size.w(), (int) size.h(), BufferedImage.TYPE_INT_RGB);
+            BufferedImage picture = new BufferedImage((int) size.w(), (int) size.h(), BufferedImage.TYPE_INT_RGB);
             for (int y = 0; y < size.h(); y += STRIP) {
                 int from = y;
                 Stagehand.ui(() -> strip(window.stage().getScene(), from, picture));

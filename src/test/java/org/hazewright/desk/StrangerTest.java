@@ -90,11 +90,22 @@ class StrangerTest {
         hand.click(eyes.button("look for the least addition"));
         Stagehand.until(
                 "a correction",
-                () -> window.desk().madeProperty().get().get().correctionProperty().get().isPresent());
+                () -> window.desk()
+                        .madeProperty()
+                        .get()
+                        .get()
+                        .correctionProperty()
+                        .get()
+                        .isPresent());
         picture("correction");
-        hand.click(eyes.button("Weigh it in"));
+        assertEquals(
+                "Weigh it in ⏎",
+                Stagehand.onUi(() -> Eyes.name(window.stage().getScene().getFocusOwner())),
+                "whoever asked for it goes on with Enter");
+        hand.press(KeyCode.ENTER);
         Stagehand.until(
-                "the balance again", () -> window.desk().weighingProperty().get().isPresent());
+                "the balance again",
+                () -> window.desk().weighingProperty().get().isPresent());
         Stagehand.pulse();
         picture("correcting");
         weighTheRest();
@@ -104,8 +115,8 @@ class StrangerTest {
                 "what it says",
                 () -> window.desk().madeProperty().get().get().seenProperty().get() != null);
         picture("corrected");
-        Batch made = Stagehand.onUi(
-                () -> window.desk().madeProperty().get().orElseThrow().batchProperty().get());
+        Batch made = Stagehand.onUi(() ->
+                window.desk().madeProperty().get().orElseThrow().batchProperty().get());
         assertEquals(1, made.correctionCount());
         assertTrue(made.weighedG().stream().allMatch(g -> g.isPresent()), "something was not weighed");
     }
@@ -125,8 +136,8 @@ class StrangerTest {
     }
 
     private double wanted() {
-        return Stagehand.onUi(
-                () -> window.desk().edits().now().row(690).orElseThrow().muaPerCm().orElseThrow());
+        return Stagehand.onUi(() ->
+                window.desk().edits().now().row(690).orElseThrow().muaPerCm().orElseThrow());
     }
 
     /** Types what the screen asks for, as a balance would; of the emulsion four per cent too much. */
@@ -180,7 +191,8 @@ class StrangerTest {
     private void measure() {
         List<Point> points = Stagehand.onUi(
                 () -> window.desk().madeProperty().get().orElseThrow().points());
-        Node first = eyes.all(n -> n.getAccessibleText() != null && n.getAccessibleText().startsWith("measured µa"))
+        Node first = eyes.all(n ->
+                        n.getAccessibleText() != null && n.getAccessibleText().startsWith("measured µa"))
                 .get(0);
         hand.click(first);
         for (Point p : points) {
@@ -190,14 +202,16 @@ class StrangerTest {
             hand.press(KeyCode.TAB);
         }
         hand.click(eyes.button("Take these values"));
-        Stagehand.until("a verdict", () -> window.desk()
-                .madeProperty()
-                .get()
-                .orElseThrow()
-                .seenProperty()
-                .get()
-                .verdict()
-                .isPresent());
+        Stagehand.until(
+                "a verdict",
+                () -> window.desk()
+                        .madeProperty()
+                        .get()
+                        .orElseThrow()
+                        .seenProperty()
+                        .get()
+                        .verdict()
+                        .isPresent());
         Stagehand.pulse();
     }
 
@@ -210,14 +224,16 @@ class StrangerTest {
     }
 
     private String text(String styleClass) {
-        return Stagehand.onUi(() ->
-                ((Labeled) eyes.all(n -> n.getStyleClass().contains(styleClass)).get(0)).getText().replace('\u00A0', ' '));
+        return Stagehand.onUi(() -> ((Labeled)
+                        eyes.all(n -> n.getStyleClass().contains(styleClass)).get(0))
+                .getText()
+                .replace('\u00A0', ' '));
     }
 
     private void picture(String name) throws Exception {
+        Stagehand.pulse(); // what is looked at is laid out, with a picture of it or without
         String to = System.getProperty("walk.pictures");
         if (to == null) return;
-        Stagehand.pulse();
         byte[] png = Stagehand.onUi(() -> {
             WritableImage image = window.stage().getScene().snapshot(null);
             return Pictures.bytes(image);

@@ -197,7 +197,9 @@ class WindowTest {
         Stagehand.ui(() -> window.desk().notices().tell(Notice.told("test", "something to be told")));
         Stagehand.pulse();
         assertTrue(
-                Stagehand.onUi(() -> window.spectra().surface().localToScreen(0, 0).getY()) > top + 10,
+                Stagehand.onUi(() ->
+                                window.spectra().surface().localToScreen(0, 0).getY())
+                        > top + 10,
                 "the notice did not move the plot");
         hand.moveBy(0, 2);
         hand.moveBy(0, -2);

@@ -68,7 +68,8 @@ public final class RecipePlace extends VBox {
         foot.setAlignment(Pos.BASELINE_LEFT);
         getStyleClass().add("gap-m");
         getChildren().addAll(Say.place("Recipe"), scroll, foot);
-        List.of(blood, causes, limits, ways, mind).forEach(box -> box.getStyleClass().add("gap-s"));
+        List.of(blood, causes, limits, ways, mind)
+                .forEach(box -> box.getStyleClass().add("gap-s"));
 
         desk.solving().shownProperty().addListener((p, before, now) -> show(now));
         desk.solving().cardsProperty().addListener((p, before, now) -> ways());
@@ -172,7 +173,8 @@ public final class RecipePlace extends VBox {
         List<String> said = new ArrayList<>(shown.answer().limits());
         said.addAll(shown.answer().notes());
         if (said.isEmpty()) said.add("Nothing: every target lands close to its middle.");
-        List<Ingredient> known = desk.shelfProperty().get().shelf().map(Shelf::ingredients).orElse(List.of());
+        List<Ingredient> known =
+                desk.shelfProperty().get().shelf().map(Shelf::ingredients).orElse(List.of());
         said.forEach(s -> sentences.add(Say.wrapped(Words.spoken(s, known))));
         limits.getChildren().setAll(sentences);
         Say.show(limits, true);

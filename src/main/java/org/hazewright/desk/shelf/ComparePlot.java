@@ -110,7 +110,14 @@ final class ComparePlot {
 
     /** Writes a name by its line where no other name stands and the fewest lines pass; left out when there is no such place. */
     private void name(
-            Pen pen, Label l, List<Label> all, double left, double right, double top, double bottom, List<double[]> taken) {
+            Pen pen,
+            Label l,
+            List<Label> all,
+            double left,
+            double right,
+            double top,
+            double bottom,
+            List<double[]> taken) {
         double size = 0.92 * em;
         double wide = pen.width(l.name(), size, false);
         double[] best = null;
@@ -124,8 +131,8 @@ final class ComparePlot {
                     double[] box = {nx - 3, ny - 0.9 * em, nx + wide + 3, ny + 0.3 * em};
                     if (box[2] > right - 4 || box[1] < top + 1.9 * em || box[3] > bottom - 2 || box[0] < left + 2)
                         continue;
-                    if (taken.stream()
-                            .anyMatch(t -> box[0] < t[2] && t[0] < box[2] && box[1] < t[3] && t[1] < box[3])) continue;
+                    if (taken.stream().anyMatch(t -> box[0] < t[2] && t[0] < box[2] && box[1] < t[3] && t[1] < box[3]))
+                        continue;
                     long passing = all.stream().mapToLong(o -> o.within(box)).sum();
                     if (passing >= fewest) continue;
                     fewest = passing;

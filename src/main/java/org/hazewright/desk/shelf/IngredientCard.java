@@ -85,8 +85,8 @@ final class IngredientCard extends VBox {
         } else {
             all.add(Say.heading("What it is mixed of"));
             i.blend()
-                    .forEach(p -> all.add(Say.wrapped(
-                            Figures.plain(Math.round(1e4 * p.massFraction()) / 100.0) + " % " + named(p.ingredient()))));
+                    .forEach(p -> all.add(Say.wrapped(Figures.plain(Math.round(1e4 * p.massFraction()) / 100.0) + " % "
+                            + named(p.ingredient()))));
         }
         i.maxGPerMl()
                 .ifPresent(v -> all.add(Say.wrapped("at most " + Figures.plain(v) + " g in a mL of phantom", "quiet")));
@@ -99,7 +99,9 @@ final class IngredientCard extends VBox {
         section(
                 all,
                 "Not with",
-                i.conflicts().stream().map(c -> named(c.with()) + ": " + c.why()).toList());
+                i.conflicts().stream()
+                        .map(c -> named(c.with()) + ": " + c.why())
+                        .toList());
         lot.of(i);
         all.add(lot);
         getChildren().setAll(all);

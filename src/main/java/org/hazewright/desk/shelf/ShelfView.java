@@ -180,8 +180,9 @@ public final class ShelfView extends BorderPane {
         grams.setMinWidth(Region.USE_PREF_SIZE);
         HBox row = new HBox(tick, name, grams);
         row.setAlignment(Pos.CENTER_LEFT);
-        if (pressed.filter(i::equals).isPresent()) // the list is made anew; whoever walks through it by keys stays where they are
-            javafx.application.Platform.runLater(name::requestFocus);
+        if (pressed.filter(i::equals)
+                .isPresent()) // the list is made anew; whoever walks through it by keys stays where they are
+        javafx.application.Platform.runLater(name::requestFocus);
         return row;
     }
 
