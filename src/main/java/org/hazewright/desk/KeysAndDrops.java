@@ -3,6 +3,7 @@ package org.hazewright.desk;
 import java.io.File;
 import java.util.List;
 import java.util.Optional;
+import java.util.function.Predicate;
 import javafx.scene.Node;
 import javafx.scene.Parent;
 import javafx.scene.Scene;
@@ -93,15 +94,16 @@ final class KeysAndDrops {
         Node next = order.get(Math.floorMod(at < 0 ? 0 : at + by, order.size()));
         if (next == window.brief()) window.brief().focusFirst();
         else if (next.isFocusTraversable()) next.requestFocus();
-        else first(next).ifPresent(Node::requestFocus);
+        else first(next, n -> true).ifPresent(Node::requestFocus);
     }
 
-    private static Optional<Node> first(Node in) {
-        if (in.isFocusTraversable() && in.isVisible() && !in.isDisabled() && !(in instanceof ScrollPane))
-            return Optional.of(in);
+    /** The first of some kind that takes the focus. */
+    static Optional<Node> first(Node in, Predicate<Node> which) {
+        boolean takes = in.isFocusTraversable() && in.isVisible() && !in.isDisabled() && !(in instanceof ScrollPane);
+        if (takes && which.test(in)) return Optional.of(in);
         if (!(in instanceof Parent p) || !in.isVisible()) return Optional.empty();
         for (Node child : p.getChildrenUnmodifiable()) {
-            Optional<Node> found = first(child);
+            Optional<Node> found = first(child, which);
             if (found.isPresent()) return found;
         }
         return Optional.empty();

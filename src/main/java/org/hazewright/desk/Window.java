@@ -6,6 +6,7 @@ import java.util.Optional;
 import java.util.function.Consumer;
 import javafx.scene.Node;
 import javafx.scene.Scene;
+import javafx.scene.control.TextField;
 import javafx.scene.layout.BorderPane;
 import javafx.scene.layout.Priority;
 import javafx.scene.layout.StackPane;
@@ -183,21 +184,21 @@ public final class Window {
         } else if (desk.madeProperty().get().isPresent()) {
             batch = new BatchView(desk.madeProperty().get().get(), chooser, desk::leaveBatch);
             center(batch, false);
-            batch.requestFocus();
+            begin(batch);
         } else if (shelfOpen) {
             if (shelfView == null)
                 shelfView = new ShelfView(desk.shelfRoom(), desk.adding(), look, chooser, () -> shelf(false));
             center(shelfView, false);
-            shelfView.requestFocus();
+            begin(shelfView);
         } else if (logbookOpen) {
             if (logbookView == null)
                 logbookView = new LogbookView(desk.logbookRoom(), desk.logbookRoom()::open, () -> logbook(false));
             center(logbookView, false);
-            logbookView.requestFocus();
+            begin(logbookView);
         } else if (keysOpen) {
             KeysView view = new KeysView(() -> keys(false));
             center(view, false);
-            view.requestFocus();
+            begin(view);
         } else center(atDesk, true);
     }
 
@@ -225,6 +226,13 @@ public final class Window {
         places.setCenter(view);
         Say.show(this.head, head);
         if (head && scene != null) comeBack();
+    }
+
+    /** Puts the focus where the work of a view begins: its first field, or what comes first. */
+    private static void begin(Node view) {
+        KeysAndDrops.first(view, n -> n instanceof TextField)
+                .or(() -> KeysAndDrops.first(view, n -> true))
+                .ifPresent(Node::requestFocus);
     }
 
     /** Puts the focus where it stood when the desk was left. */

@@ -162,10 +162,6 @@ public final class Screenshots {
     private void forms() throws IOException {
         Window window = open(Optional.empty());
         Eyes eyes = new Eyes(window);
-        Path own = Files.createTempDirectory("shelf").resolve("own");
-        Stagehand.ui(() -> window.desk().adding().makeOwn(own));
-        Stagehand.until("a shelf of one's own", () -> window.desk().adding().own());
-        Stagehand.untilSettled(window);
         Stagehand.ui(() -> {
             var room = window.desk().shelfRoom();
             for (String id :
@@ -179,6 +175,19 @@ public final class Screenshots {
         Stagehand.until(
                 "spectra", () -> window.desk().shelfRoom().linesProperty().get().size() == 5);
         shoot(window, "shelf");
+        Path own = Files.createTempDirectory("shelf").resolve("own");
+        Stagehand.ui(() -> window.desk().adding().makeOwn(own));
+        Stagehand.until("a shelf of one's own", () -> window.desk().adding().own());
+        Stagehand.untilSettled(window);
+        Stagehand.ui(() -> window.desk()
+                .shelfRoom()
+                .choose(window.desk()
+                        .shelfProperty()
+                        .get()
+                        .shelf()
+                        .orElseThrow()
+                        .require("lipid-emulsion-20")));
+        Stagehand.pulse();
         Stagehand.ui(() -> eyes.button("add a lot of it").fire());
         Stagehand.pulse();
         scroll(window, 1);

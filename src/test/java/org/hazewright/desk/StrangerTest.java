@@ -98,7 +98,11 @@ class StrangerTest {
                         .get()
                         .isPresent());
         picture("correction");
-        hand.click(eyes.button("Weigh it in"));
+        assertEquals(
+                "Weigh it in ⏎",
+                Stagehand.onUi(() -> Eyes.name(window.stage().getScene().getFocusOwner())),
+                "whoever asked for it goes on with Enter");
+        hand.press(KeyCode.ENTER);
         Stagehand.until(
                 "the balance again",
                 () -> window.desk().weighingProperty().get().isPresent());
@@ -227,9 +231,9 @@ class StrangerTest {
     }
 
     private void picture(String name) throws Exception {
+        Stagehand.pulse(); // what is looked at is laid out, with a picture of it or without
         String to = System.getProperty("walk.pictures");
         if (to == null) return;
-        Stagehand.pulse();
         byte[] png = Stagehand.onUi(() -> {
             WritableImage image = window.stage().getScene().snapshot(null);
             return Pictures.bytes(image);

@@ -43,6 +43,7 @@ public final class BatchView extends BorderPane {
     private final VBox teaches = new VBox();
     private final Label complaint = Say.wrapped("", "error-line");
     private final MeasuredTable table;
+    private boolean asked;
 
     /** @param leave goes back to the desk */
     public BatchView(MadeBatch made, Chooser chooser, Runnable leave) {
@@ -286,7 +287,23 @@ public final class BatchView extends BorderPane {
         return f;
     }
 
+    /** Made anew, and the focus with it: whoever asked for a correction goes on to weigh it. */
     private void puts() {
+        Node focused = getScene() == null ? null : getScene().getFocusOwner();
+        boolean within = asked;
+        for (Node n = focused; n != null; n = n.getParent()) within |= n == puts;
+        fillPuts();
+        asked = within && made.correctingProperty().get();
+        if (!within) return;
+        if (asked) requestFocus();
+        else
+            puts.getChildren().stream()
+                    .filter(Node::isFocusTraversable)
+                    .findFirst()
+                    .ifPresent(Node::requestFocus);
+    }
+
+    private void fillPuts() {
         puts.getChildren().clear();
         if (made.points().isEmpty()) return;
         HBox head = new HBox(Say.heading("What would put it right"));

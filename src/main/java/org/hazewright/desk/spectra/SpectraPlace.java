@@ -150,6 +150,7 @@ public final class SpectraPlace extends VBox {
 
         Surface() {
             getChildren().add(drawing);
+            getStyleClass().add("plots");
             setFocusTraversable(true);
             setAccessibleRole(AccessibleRole.IMAGE_VIEW);
             setAccessibleRoleDescription("plots; left and right choose a target, up and down move what is wanted");

@@ -60,6 +60,41 @@ class DeskTest {
         return r.items().stream().map(i -> i.label() + " " + i.massG()).toList();
     }
 
+    /**
+     * Only a tissue-like brief is said as blood. The demo's µa is allowed 12 %; what lands inside that is blood within 12 % of the amount
+     * asked for, as µa less water and fat is proportional to it (Beer and Lambert).
+     */
+    @Test
+    void aTissueLikeRecipeIsSaidAsBlood() {
+        assertTrue(shown().blood().isEmpty(), "a bath without a composition has no blood");
+        desk.beginAgain();
+        Path file = folder.resolve("block.brief.toml");
+        BriefWriter.write(
+                file,
+                BriefReader.readShipped("forearm-block"),
+                List.of(),
+                TissueSpectra.of(null),
+                SafeFile.Overwrite.NEVER);
+        desk.open(file);
+        AsBlood blood = shown().blood().orElseThrow();
+        assertEquals(60, blood.asked().haemoglobinUmolPerL());
+        assertEquals(60, blood.is().umolPerL(), 0.12 * 60);
+        assertEquals(0.7, blood.is().saturation(), 0.12);
+        String words = blood.sentence();
+        assertTrue(words.contains(" µmol/L of haemoglobin, ") && words.endsWith("Asked for: 60 µmol/L, 70 %."), words);
+        desk.editing().remove(760);
+        assertTrue(shown().blood().isEmpty(), "a composition whose wavelengths are targets no more says nothing");
+    }
+
+    @Test
+    void sentencesNameWhatFilesCallById() {
+        var shelf = ShelfReader.readShipped().ingredients();
+        assertEquals(
+                "The nearest, lipid emulsion, 20 % soybean oil absorption, at µs′; water stays.",
+                Words.spoken("The nearest, lipid-emulsion-20 absorption, at µs'; water stays.", shelf));
+        assertEquals("my-lipid-emulsion-20-b", Words.spoken("my-lipid-emulsion-20-b", shelf), "part of a longer id");
+    }
+
     @Test
     void followingLandsWhereTheSearchLands() {
         Random random = new Random(11);
