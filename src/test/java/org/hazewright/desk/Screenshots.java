@@ -181,7 +181,12 @@ public final class Screenshots {
         Stagehand.untilSettled(window);
         Stagehand.ui(() -> window.desk()
                 .shelfRoom()
-                .choose(window.desk().shelfProperty().get().shelf().orElseThrow().require("lipid-emulsion-20")));
+                .choose(window.desk()
+                        .shelfProperty()
+                        .get()
+                        .shelf()
+                        .orElseThrow()
+                        .require("lipid-emulsion-20")));
         Stagehand.pulse();
         Stagehand.ui(() -> eyes.button("add a lot of it").fire());
         Stagehand.pulse();
