@@ -101,8 +101,6 @@ final class KeysAndDrops {
     static Optional<Node> first(Node in, Predicate<Node> which) {
         boolean takes = in.isFocusTraversable() && in.isVisible() && !in.isDisabled() && !(in instanceof ScrollPane);
         if (takes && which.test(in)) return Optional.of(in);
-        if (in instanceof ScrollPane scroll)
-            return first(scroll.getContent(), which); // its children come with its first layout
         if (!(in instanceof Parent p) || !in.isVisible()) return Optional.empty();
         for (Node child : p.getChildrenUnmodifiable()) {
             Optional<Node> found = first(child, which);

@@ -230,6 +230,7 @@ public final class Window {
 
     /** Puts the focus where the work of a view begins: its first field, or what comes first. */
     private static void begin(Node view) {
+        view.applyCss(); // what lies in scroll panes is part of the scene only now
         KeysAndDrops.first(view, n -> n instanceof TextField)
                 .or(() -> KeysAndDrops.first(view, n -> true))
                 .ifPresent(Node::requestFocus);

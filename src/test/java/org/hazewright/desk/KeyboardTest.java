@@ -246,6 +246,7 @@ class KeyboardTest {
         List<String> hidden = new ArrayList<>();
         Node before = focused();
         assertTrue(before != null && before.isVisible(), "the view opens without the focus anywhere");
+        assertFalse(Eyes.name(before).startsWith("put this away"), view + " opens with the focus on a notice");
         Node first = before;
         int steps = 0;
         do {
