@@ -44,6 +44,7 @@ public final class BatchView extends BorderPane {
     private final Label complaint = Say.wrapped("", "error-line");
     private final MeasuredTable table;
     private boolean asked;
+    private List<Object> put = List.of();
 
     /** @param leave goes back to the desk */
     public BatchView(MadeBatch made, Chooser chooser, Runnable leave) {
@@ -289,6 +290,12 @@ public final class BatchView extends BorderPane {
 
     /** Made anew, and the focus with it: whoever asked for a correction goes on to weigh it. */
     private void puts() {
+        List<Object> now = List.of(
+                made.batchProperty().get(),
+                made.correctingProperty().get(),
+                made.correctionProperty().get());
+        if (now.equals(put)) return; // a button that is being pressed stays
+        put = now;
         Node focused = getScene() == null ? null : getScene().getFocusOwner();
         boolean within = asked;
         for (Node n = focused; n != null; n = n.getParent()) within |= n == puts;
